@@ -1,0 +1,89 @@
+/**
+ * @module The Series: what a series file says, exactly, and nothing more.
+ *
+ * R = additive + factor · Σ_{n>=0} c_n x^(n + firstPower),  x = coupling / divisor.
+ */
+import type { Exact } from '../numerics/exact.js';
+import type { Rational } from '../numerics/rational.js';
+
+/** A number with an (asymmetric) one-standard-deviation error; `text` is what the file says. */
+export interface Uncertain {
+  readonly value: Exact;
+  /** Both non-negative. Absent: no error was quoted. */
+  readonly error?: { readonly plus: Rational; readonly minus: Rational };
+  readonly text: string;
+}
+
+export interface Coefficient extends Uncertain {
+  readonly status: 'computed' | 'estimated';
+  /** Significant digits of a plain decimal as written ("1.000" has 4); absent for fractions, integers and expressions. */
+  readonly significantDigits?: number;
+}
+
+/** Divisor of the coupling: the series is in α/divisor. */
+export type Divisor = '1' | 'pi' | '2*pi' | '4*pi';
+
+export interface Coupling {
+  readonly name: string;
+  readonly divisor: Divisor;
+  /** True when the variable is just a variable x: no α_s, no u plane, no Λ. */
+  readonly plain: boolean;
+}
+
+export type SingularityKind = 'infrared' | 'ultraviolet' | 'other';
+
+/** A Borel singularity (1 − t/t*)^(−exponent) that the file states. One of u, t, dimension is present. */
+export interface KnownSingularity {
+  readonly u?: Exact;
+  /** Position in the Borel variable conjugate to the file's own expansion variable x. */
+  readonly t?: Exact;
+  /** Operator dimension d: position u = d/2. */
+  readonly dimension?: Rational;
+  /** γ of (1 − t/t*)^(−γ); growth c_n ~ Γ(n + γ). */
+  readonly exponent?: Exact;
+  /** One-loop anomalous dimension term subtracted from the exponent that follows from the dimension. */
+  readonly anomalousDimension?: Exact;
+  readonly strength?: Uncertain;
+  readonly kind: SingularityKind;
+}
+
+export interface Condensate {
+  readonly dimension: Rational;
+  readonly name: string;
+  /** C_d of R ∋ C_d ⟨O_d⟩ / Q^d. */
+  readonly wilson?: Exact;
+  readonly value?: Uncertain;
+  readonly unit?: string;
+  readonly source?: string;
+}
+
+export interface Scale {
+  readonly value: Exact;
+  readonly unit: 'GeV' | 'MeV';
+  readonly text: string;
+}
+
+export interface Series {
+  /** Catalogue id or file name, for messages. */
+  readonly id: string;
+  readonly title: string;
+  readonly quantity?: string;
+  readonly sources: readonly string[];
+  readonly notes: readonly string[];
+  readonly invented: boolean;
+  readonly coupling: Coupling;
+  readonly firstPower: number;
+  readonly scheme?: string;
+  readonly flavours?: number;
+  /** μ/Q. */
+  readonly scaleRatio?: Exact;
+  readonly hardScale?: Scale;
+  readonly factor: Exact;
+  readonly additive: Exact;
+  readonly coefficients: readonly Coefficient[];
+  /** Correlation matrix of the coefficient errors. */
+  readonly correlation?: readonly (readonly Rational[])[];
+  readonly singularities: readonly KnownSingularity[];
+  readonly condensates: readonly Condensate[];
+  readonly measurement?: Uncertain & { readonly unit?: string; readonly source?: string };
+}
