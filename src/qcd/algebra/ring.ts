@@ -1,0 +1,103 @@
+/**
+ * @module The arithmetic that series algebra needs, so that one text of a formula serves rationals, balls and doubles.
+ * Purpose  coefficients that are rational stay exact; the others are enclosed to the precision asked.
+ * Method   `liftExact` runs the same formula twice: once over rationals-or-unknown, which keeps every output that
+ *          depends on rational inputs only; once over balls for the rest, when somebody asks for their digits.
+ */
+import * as B from '../../numerics/ball/real.js';
+import type { Ball } from '../../numerics/ball/real.js';
+import { exact, exactReal, type Exact } from '../../numerics/exact.js';
+import { Rational } from '../../numerics/rational.js';
+
+export interface Ring<T> {
+  readonly zero: T;
+  readonly one: T;
+  fromRational(q: Rational): T;
+  add(a: T, b: T): T;
+  sub(a: T, b: T): T;
+  mul(a: T, b: T): T;
+  /** Quotient; the caller sees to it that b is not zero. */
+  div(a: T, b: T): T;
+}
+
+export const doubles: Ring<number> = {
+  zero: 0,
+  one: 1,
+  fromRational: (q) => q.toNumber(),
+  add: (a, b) => a + b,
+  sub: (a, b) => a - b,
+  mul: (a, b) => a * b,
+  div: (a, b) => a / b,
+};
+
+export const rationals: Ring<Rational> = {
+  zero: Rational.ZERO,
+  one: Rational.ONE,
+  fromRational: (q) => q,
+  add: (a, b) => a.add(b),
+  sub: (a, b) => a.sub(b),
+  mul: (a, b) => a.mul(b),
+  div: (a, b) => a.div(b),
+};
+
+export const balls = (prec: number): Ring<Ball> => ({
+  zero: B.ZERO,
+  one: B.ONE,
+  fromRational: (q) => B.fromRational(q, prec),
+  add: (a, b) => B.add(a, b, prec),
+  sub: (a, b) => B.sub(a, b, prec),
+  mul: (a, b) => B.mul(a, b, prec),
+  div: (a, b) => B.div(a, b, prec),
+});
+
+const UNKNOWN = 'some real number';
+/** A rational, or no more than that it is some real number. (Not undefined: missing entries of arrays mean zero.) */
+type Known = Rational | typeof UNKNOWN;
+
+const isKnownZero = (a: Known): boolean => a !== UNKNOWN && a.isZero();
+
+const knownRationals: Ring<Known> = {
+  zero: Rational.ZERO,
+  one: Rational.ONE,
+  fromRational: (q) => q,
+  add: (a, b) => (a === UNKNOWN || b === UNKNOWN ? UNKNOWN : a.add(b)),
+  sub: (a, b) => (a === UNKNOWN || b === UNKNOWN ? UNKNOWN : a.sub(b)),
+  mul(a, b) {
+    if (isKnownZero(a) || isKnownZero(b)) return Rational.ZERO;
+    return a === UNKNOWN || b === UNKNOWN ? UNKNOWN : a.mul(b);
+  },
+  div(a, b) {
+    if (isKnownZero(a)) return Rational.ZERO;
+    return a === UNKNOWN || b === UNKNOWN ? UNKNOWN : a.div(b);
+  },
+};
+
+/** A formula over any ring: numbers in, numbers out. The length of the result must not depend on the ring. */
+export type RingFormula = <T>(ring: Ring<T>, inputs: readonly T[]) => T[];
+
+/** Guard bits of the ball evaluation of a formula; callers who need more ask for more. */
+const GUARD = 64;
+
+/**
+ * Applies a formula to exact numbers. Outputs that depend only on rational inputs come back rational; the others
+ * enclose. Throws RangeError when the formula divides by a rational zero.
+ */
+export function liftExact(inputs: readonly Exact[], formula: RingFormula): Exact[] {
+  const known = formula<Known>(
+    knownRationals,
+    inputs.map((x) => x.rational ?? UNKNOWN),
+  );
+  let last: { readonly prec: number; readonly values: readonly Ball[] } | undefined;
+  const at = (prec: number): readonly Ball[] => {
+    if (last === undefined || last.prec < prec) {
+      const work = prec + GUARD;
+      const values = formula<Ball>(
+        balls(work),
+        inputs.map((x) => x.ball(work)),
+      );
+      last = { prec, values };
+    }
+    return last.values;
+  };
+  return known.map((q, i) => (q !== UNKNOWN ? exact(q) : exactReal((prec) => at(prec)[i] ?? B.INDETERMINATE)));
+}

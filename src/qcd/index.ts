@@ -1,0 +1,19 @@
+/** @module Public face of the QCD room: coupling, masses, scales, schemes, expected singularities. */
+export {
+  MAX_FLAVOURS,
+  MAX_LOOPS,
+  betaCoefficients,
+  betaNumbers,
+  massDimensionCoefficients,
+  massDimensionNumbers,
+  type Loops,
+} from './beta-function.js';
+export { divisorSize, overFourPi, overFourPiNumber, type CouplingDivisor } from './divisor.js';
+export {
+  anomalousTerm,
+  expectedSingularity,
+  uPerT,
+  type ExpectedSingularity,
+  type ExpectedSingularityInput,
+  type WilsonCoefficient,
+} from './expected.js';
