@@ -1,0 +1,9 @@
+/** @module The public face of the numerics room: import from here, not from the files behind it. */
+export { Rational, gcdBigInt, PARSE_LIMITS } from './rational.js';
+export * from './exact.js';
+export type { Ball } from './ball/real.js';
+export type { Complex } from './ball/complex.js';
+export * as R from './ball/real.js';
+export * as C from './ball/complex.js';
+export type { Field } from './field.js';
+export { rationalField, doubleField, ballField } from './field.js';
