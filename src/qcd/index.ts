@@ -17,3 +17,7 @@ export {
   type ExpectedSingularityInput,
   type WilsonCoefficient,
 } from './expected.js';
+export { isRefusal, refuse, type Refusal } from './refusal.js';
+export { evolveAlpha, evolveLog, type Evolution } from './running/evolve.js';
+export { flowOf, logOverLambda, type Flow } from './running/flow.js';
+export { LAMBDA_DEFINITIONS, alphaOfLambda, lambdaOf, type LambdaDefinition } from './lambda.js';
