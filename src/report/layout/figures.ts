@@ -1,0 +1,39 @@
+/** @module How single numbers look in a report. The digits are those of the result, fewer of them at times. */
+import { parseDecimal, roundToDigits, shorten, writeDecimal } from '../decimal.js';
+import { roundPdg, writeParentheses } from '../pdg.js';
+
+/** Errors are shown to two digits: more would pretend to know the error of the error. */
+const ERROR_DIGITS = 2;
+
+/** An error or any other size that is read for its magnitude, without sign word. */
+export const rough = (text: string): string => shorten(text, ERROR_DIGITS, 'half-up');
+
+/** "± 0.0012"; empty for an absent one. */
+export const plusMinus = (text: string | undefined): string => {
+  if (text === undefined) return '';
+  const d = parseDecimal(text);
+  return d !== undefined && d.coefficient === 0n ? '0' : `± ${rough(text).replace(/^-/, '')}`;
+};
+
+/** "277(51)" with an error, "49.075700" without: at most `digits` digits. */
+export function withError(value: string, error: string | undefined, digits: number): string {
+  if (error === undefined) return shorten(value, digits);
+  const rounded = roundPdg(value, [error]);
+  if (rounded === undefined) return shorten(value, digits);
+  return writeParentheses(rounded) ?? `${shorten(value, digits)} ± ${rough(error)}`;
+}
+
+/** A complex number, or a pair of conjugates where `pair` is set. A real one when `im` is absent. */
+export function complex(re: string, im: string | undefined, digits: number, pair: boolean): string {
+  const real = shorten(re, digits);
+  if (im === undefined) return real;
+  const size = shorten(im.replace(/^[+-]/, ''), digits);
+  return `${real} ${pair ? '±' : im.startsWith('-') ? '-' : '+'} ${size}i`;
+}
+
+/** A ratio near 1 or below as per cent: "3.1 %". */
+export function percent(ratio: string): string {
+  const d = parseDecimal(ratio);
+  if (d === undefined) return ratio;
+  return `${writeDecimal(roundToDigits({ ...d, exponent: d.exponent + 2 }, ERROR_DIGITS, 'half-up'))} %`;
+}

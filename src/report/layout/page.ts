@@ -1,0 +1,87 @@
+/** @module The page that the sections write on: numbered heads, paragraphs, labelled facts, tables. */
+import type { Paint, Tone } from './paint.js';
+import type { Column } from './column.js';
+import type { TableNote, TableRow } from './table.js';
+import { table } from './table.js';
+import { fold, padEnd, width } from './text.js';
+
+const INDENT = 3;
+
+/** Narrowest and widest page. Beyond the widest, lines of prose get hard to follow. */
+export const PAGE_WIDTH = { least: 80, most: 100 } as const;
+
+/** From here on tables show all they have. */
+const ROOMY = 96;
+
+export interface Fact {
+  readonly label: string;
+  readonly text: string;
+  readonly tone?: Tone;
+}
+
+export class Page {
+  readonly width: number;
+  readonly paint: Paint;
+  /** Significant digits that a table shows. */
+  readonly digits: number;
+  /** Tables have to save columns. */
+  readonly narrow: boolean;
+  private readonly lines: string[] = [];
+  private section = 0;
+
+  constructor(columns: number, paint: Paint, digits: number | undefined) {
+    this.width = Math.min(PAGE_WIDTH.most, Math.max(PAGE_WIDTH.least, columns));
+    this.paint = paint;
+    this.narrow = this.width < ROOMY;
+    this.digits = digits ?? (this.narrow ? 6 : 8);
+  }
+
+  blank(): void {
+    if (this.lines.length > 0 && this.lines.at(-1) !== '') this.lines.push('');
+  }
+
+  /** The name of the whole, above all sections. */
+  title(text: string): void {
+    for (const line of fold(text, this.width)) this.lines.push(this.paint(line, 'strong'));
+    this.lines.push(this.paint('─'.repeat(this.width), 'faint'));
+  }
+
+  /** A numbered section head. */
+  head(text: string): void {
+    this.blank();
+    this.section += 1;
+    this.lines.push(`${this.paint(String(this.section), 'faint')}  ${this.paint(text, 'strong')}`, '');
+  }
+
+  /** A paragraph of plain words. */
+  say(text: string, tone: Tone = 'plain', hang = 0): void {
+    const lines = fold(text, this.width - INDENT - hang);
+    lines.forEach((line, i) => {
+      this.lines.push(' '.repeat(INDENT + (i === 0 ? 0 : hang)) + this.paint(line, tone));
+    });
+  }
+
+  /** Label and text side by side, the texts under each other. */
+  facts(facts: readonly Fact[], labelWidth = 0): void {
+    const column = Math.max(labelWidth, ...facts.map((f) => width(f.label)));
+    for (const { label, text, tone = 'plain' } of facts) {
+      fold(text, this.width - INDENT - column - 3).forEach((line, i) => {
+        const left = this.paint(padEnd(i === 0 ? label : '', column), 'faint');
+        this.lines.push(`${' '.repeat(INDENT)}${left}   ${this.paint(line, tone)}`.trimEnd());
+      });
+    }
+  }
+
+  table(columns: readonly Column[], rows: readonly (TableRow | TableNote)[]): void {
+    this.lines.push(...table(columns, rows, { width: this.width, indent: INDENT, paint: this.paint }));
+  }
+
+  /** Points of a list, each with a raised dot. */
+  points(texts: readonly string[], tone: Tone = 'plain'): void {
+    for (const text of texts) this.say(`· ${text}`, tone, 2);
+  }
+
+  text(): string {
+    return `${this.lines.join('\n').replace(/\n+$/, '')}\n`;
+  }
+}

@@ -1,0 +1,97 @@
+/** @module A table as a paper sets it: heads over one thin rule, decimals aligned, notes across all columns. */
+import { alignColumn, narrowed } from './column.js';
+import type { Column, SetColumn } from './column.js';
+import type { Paint, Tone } from './paint.js';
+import { fold, padEnd, padStart, printable } from './text.js';
+
+export interface TableRow {
+  readonly cells: readonly string[];
+  readonly tone?: Tone;
+}
+
+/** A line across the table: a group's name, or why a number is missing. */
+export interface TableNote {
+  readonly note: string;
+  readonly indent?: number;
+  readonly tone?: Tone;
+}
+
+export interface TableFrame {
+  /** Columns available, indent included. */
+  readonly width: number;
+  readonly indent: number;
+  readonly paint: Paint;
+}
+
+/** Blanks between columns, the widest that fit. */
+const GAPS = [3, 2, 1] as const;
+
+const isNote = (row: TableRow | TableNote): row is TableNote => 'note' in row;
+
+const sum = (numbers: readonly number[]): number => numbers.reduce((a, b) => a + b, 0);
+
+/** Lines of one row: a folded cell takes several. */
+function rowLines(texts: readonly (readonly string[])[], columns: readonly SetColumn[]): string[][] {
+  const height = Math.max(1, ...texts.map((lines) => lines.length));
+  return Array.from({ length: height }, (_, i) =>
+    columns.map(({ column, width }, j) => {
+      const text = texts[j]?.[i] ?? '';
+      return column.align === 'left' ? padEnd(text, width) : padStart(text, width);
+    }),
+  );
+}
+
+/** Sets a table. Columns whose cells are all empty are left out. */
+export function table(
+  columns: readonly Column[],
+  rows: readonly (TableRow | TableNote)[],
+  frame: TableFrame,
+): string[] {
+  const { indent, paint } = frame;
+  const filled = rows.filter((row): row is TableRow => !isNote(row));
+  const cellsOf = (j: number): string[] => filled.map((row) => printable(row.cells[j] ?? ''));
+  const natural = columns
+    .map((column, j) => alignColumn(column, cellsOf(j)))
+    .filter((set) => filled.length > 0 && set.cells.some((cell) => cell.trim() !== ''));
+  const room = frame.width - indent;
+  const spare = (gap: number): number => room - gap * (natural.length - 1);
+  const total = sum(natural.map((set) => set.width));
+  const gap = GAPS.find((g) => total <= spare(g)) ?? 2;
+  const set = narrowed(natural, spare(gap));
+
+  const margin = ' '.repeat(indent);
+  const between = ' '.repeat(gap);
+  const draw = (texts: readonly (readonly string[])[], tone: Tone | undefined): string[] =>
+    rowLines(texts, set).map((cells) => {
+      if (tone !== undefined) return margin + paint(cells.join(between).trimEnd(), tone);
+      return (margin + cells.map((cell, j) => paint(cell, set[j]?.column.tone ?? 'plain')).join(between)).trimEnd();
+    });
+  const drawNote = ({ note, indent: more = 0, tone = 'plain' }: TableNote): string[] =>
+    fold(note, room - more).map((text) => margin + ' '.repeat(more) + paint(text, tone));
+
+  const lines: string[] = [];
+  if (set.length > 0) {
+    const ruled = sum(set.map((c) => c.width)) + gap * (set.length - 1);
+    lines.push(
+      ...draw(
+        set.map((c) => c.head),
+        'faint',
+      ),
+      margin + paint('─'.repeat(ruled), 'faint'),
+    );
+  }
+  let at = 0;
+  for (const row of rows) {
+    if (isNote(row)) lines.push(...drawNote(row));
+    else {
+      lines.push(
+        ...draw(
+          set.map((c) => c.lines[at] ?? []),
+          row.tone,
+        ),
+      );
+      at++;
+    }
+  }
+  return lines;
+}

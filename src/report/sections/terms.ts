@@ -1,0 +1,67 @@
+/** @module Section 2: the terms, order by order, with the least one marked. */
+import type { Assessment, TermRow } from '../../studies/index.js';
+import { shorten } from '../decimal.js';
+import { withError } from '../layout/figures.js';
+import type { Page } from '../layout/page.js';
+import type { TableNote, TableRow } from '../layout/table.js';
+
+/** Longer lists are shown by their two ends; the JSON output has every row. */
+const SHOWN = { atMost: 40, head: 16, tail: 16 } as const;
+
+const RATIO_DIGITS = 5;
+
+function remark(row: TermRow, reached: boolean): string {
+  const words: string[] = [];
+  if (row.least === true) words.push(reached ? '← least term' : '← smallest so far');
+  if (row.estimated === true) words.push('estimated');
+  return words.join(', ');
+}
+
+function setRow(row: TermRow, page: Page, reached: boolean): TableRow {
+  const cells = [
+    String(row.order),
+    withError(row.coefficient, row.coefficientError, page.digits),
+    shorten(row.term, page.digits),
+    shorten(row.partialSum, page.digits),
+    row.ratio === undefined ? '' : shorten(row.ratio, RATIO_DIGITS),
+    remark(row, reached),
+  ];
+  return row.least === true && reached ? { cells, tone: 'mark' } : { cells };
+}
+
+function closing(rows: readonly TermRow[], status: Assessment['optimalTruncation']['status']): string {
+  const least = rows.find((row) => row.least === true);
+  if (status === 'reached' && least !== undefined) return `Least term: order ${least.order}.`;
+  if (status === 'not reached') return 'Least term: not reached. The terms still fall at the last known order.';
+  return 'Least term: there is none to look for in this series.';
+}
+
+export function termsSection(
+  page: Page,
+  { terms, optimalTruncation }: Pick<Assessment, 'terms' | 'optimalTruncation'>,
+): void {
+  page.head('The terms');
+  if (terms.length === 0) {
+    page.say('There are no terms.');
+    return;
+  }
+  const reached = optimalTruncation.status === 'reached';
+  const rows: (TableRow | TableNote)[] = terms.map((row) => setRow(row, page, reached));
+  if (rows.length > SHOWN.atMost) {
+    const hidden = rows.length - SHOWN.head - SHOWN.tail;
+    rows.splice(SHOWN.head, hidden, { note: `… ${hidden} orders between, all in the --json output …`, tone: 'faint' });
+  }
+  page.table(
+    [
+      { head: 'order', align: 'right' },
+      { head: 'coefficient', align: 'point' },
+      { head: 'term', align: 'point' },
+      { head: 'partial sum', align: 'point' },
+      { head: 'ratio', align: 'point' },
+      { head: '', align: 'left' },
+    ],
+    rows,
+  );
+  page.blank();
+  page.say(closing(terms, optimalTruncation.status));
+}

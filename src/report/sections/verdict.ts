@@ -1,0 +1,35 @@
+/** @module Section 8: the verdict, the rule that made it, and the cautions that go with it. */
+import type { Caution, VerdictReport } from '../../studies/index.js';
+import { shorten } from '../decimal.js';
+import { plusMinus } from '../layout/figures.js';
+import type { Fact, Page } from '../layout/page.js';
+import { prescriptionTitle } from '../words.js';
+
+function parts(verdict: VerdictReport, digits: number): Fact[] {
+  const facts: Fact[] = [];
+  if (verdict.prescription !== undefined) facts.push({ label: 'from', text: prescriptionTitle(verdict.prescription) });
+  if (verdict.value !== undefined) facts.push({ label: 'value', text: shorten(verdict.value, digits) });
+  if (verdict.truncation !== undefined) facts.push({ label: 'truncation', text: plusMinus(verdict.truncation) });
+  if (verdict.ambiguity !== undefined) facts.push({ label: 'ambiguity', text: plusMinus(verdict.ambiguity) });
+  if (verdict.input !== undefined) facts.push({ label: 'input', text: plusMinus(verdict.input) });
+  facts.push({ label: 'rule', text: verdict.rule }, { label: 'trust', text: verdict.standing });
+  return facts;
+}
+
+export function verdictSection(page: Page, verdict: VerdictReport, cautions: readonly Caution[]): void {
+  page.head('The verdict');
+  page.facts(parts(verdict, page.digits));
+  page.blank();
+  page.say(verdict.printed, 'mark');
+  cautionPoints(page, cautions);
+}
+
+export function cautionPoints(page: Page, cautions: readonly Caution[]): void {
+  if (cautions.length === 0) return;
+  page.blank();
+  page.say(cautions.length === 1 ? 'One caution:' : `${cautions.length} cautions:`, 'warn');
+  page.points(
+    cautions.map((caution) => caution.text),
+    'warn',
+  );
+}

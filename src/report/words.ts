@@ -1,0 +1,19 @@
+/** @module Plain words for the names that results use. */
+
+const PRESCRIPTIONS = new Map([
+  ['fixed-order', 'Fixed order'],
+  ['least-term', 'Least term'],
+  ['terminant', 'Least term with terminant'],
+  ['pade', 'Padé in the coupling'],
+  ['borel-pade', 'Borel–Padé, principal value'],
+  ['borel-leroy-pade', 'Borel–Leroy–Padé, principal value'],
+  ['singularity-model', 'Singularity model'],
+]);
+
+/** The name of a prescription as a heading; an unknown one in its own letters. */
+export function prescriptionTitle(name: string): string {
+  return PRESCRIPTIONS.get(name) ?? name.slice(0, 1).toUpperCase() + name.slice(1).replaceAll('-', ' ');
+}
+
+/** Names from files and results keep their letters; only pi gets its sign. */
+export const withPi = (text: string): string => text.replaceAll(/\bpi\b/g, 'π');
