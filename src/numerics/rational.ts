@@ -2,16 +2,10 @@
  * @module Exact rational numbers on BigInt. Always reduced, denominator positive.
  * Purpose: coefficients as the file states them, and every algorithm that must decide "is it zero".
  */
-
-function gcd(a: bigint, b: bigint): bigint {
-  if (a < 0n) a = -a;
-  if (b < 0n) b = -b;
-  while (b !== 0n) [a, b] = [b, a % b];
-  return a;
-}
+import { gcdBigInt } from './integer-gcd.js';
 
 /** Greatest common divisor of two integers, non-negative. */
-export { gcd as gcdBigInt };
+export { gcdBigInt };
 
 /** Longest run of digits and largest decimal exponent accepted by `Rational.parse`; a file that needs more is hostile. */
 export const PARSE_LIMITS = { digits: 20_000, exponent: 20_000 } as const;
@@ -40,8 +34,13 @@ export class Rational {
       d = -d;
     }
     if (d === 1n) return new Rational(n, 1n);
-    const g = gcd(n, d);
+    const g = gcdBigInt(n, d);
     return g === 1n ? new Rational(n, d) : new Rational(n / g, d / g);
+  }
+
+  /** num/den that the caller knows to be in lowest terms with den > 0; nothing is checked. */
+  static ofReduced(num: bigint, den: bigint): Rational {
+    return new Rational(num, den);
   }
 
   /** The exact value of a double. Throws RangeError for NaN and infinities. */
@@ -75,9 +74,16 @@ export class Rational {
     if (whole === '' && fraction === '') return undefined;
     const e = Number(exponent) - fraction.length;
     if (Math.abs(Number(exponent)) > PARSE_LIMITS.exponent) return undefined;
-    let n = BigInt(whole + fraction);
-    if (sign === '-') n = -n;
-    return e >= 0 ? new Rational(n * 10n ** BigInt(e), 1n) : Rational.of(n, 10n ** BigInt(-e));
+    const n = BigInt(whole + fraction);
+    return Rational.ofDecimal(sign === '-' ? -n : n, e);
+  }
+
+  /** n·10^e in lowest terms. Only factors 2 and 5 can cancel, which spares the general divisor of two long integers. */
+  static ofDecimal(n: bigint, e: number): Rational {
+    if (e >= 0 || n === 0n) return new Rational(e > 0 ? n * 10n ** BigInt(e) : n, 1n);
+    const [two, twos] = withoutFactor(n, 2n, -e);
+    const [rest, fives] = withoutFactor(two, 5n, -e);
+    return new Rational(rest, 2n ** BigInt(-e - twos) * 5n ** BigInt(-e - fives));
   }
 
   add(b: Rational): Rational {
