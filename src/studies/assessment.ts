@@ -177,6 +177,8 @@ export interface ValueEntry {
   /** How the shown digits are known. */
   readonly digits?: Standing;
   readonly notes?: readonly string[];
+  /** The family's own best member. */
+  readonly central?: boolean;
   readonly refused?: Refused;
 }
 

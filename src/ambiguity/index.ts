@@ -1,0 +1,3 @@
+export * from './conventions.js';
+export * from './optimal.js';
+export * from './power.js';

@@ -1,0 +1,40 @@
+/**
+ * @module Truncation error of a Padé-type sum from its neighbours in the table.
+ *
+ * (1) half the range over the entries of the same order, (2) the step from the central entry of the order before;
+ * combined in quadrature. (Coefficient noise is propagated apart, as the input error.)
+ * Reference: the recipes compared in D. Boito, P. Masjuan, F. Oliani, JHEP 08 (2018) 075, arXiv:1807.01567 (memory).
+ */
+import { R } from '../numerics/index.js';
+import type { Ball } from '../numerics/index.js';
+import type { Expansion } from '../series/index.js';
+import { prefactor } from './prescription.js';
+
+export interface NeighbourErrors {
+  readonly truncation?: number;
+  readonly central?: boolean;
+}
+
+/**
+ * @param values F values of the entries of one order, best first; undefined where the entry does not stand.
+ * @param before F value of the order before, if any.
+ * @returns errors of the i-th entry, in units of R; the first standing entry is marked central.
+ */
+export function combineErrors(e: Expansion, values: readonly (Ball | undefined)[], before: Ball | undefined): (i: number) => NeighbourErrors {
+  const scale = Math.abs(R.toNumber(prefactor(e, 64)));
+  const standing = values.filter((v): v is Ball => v !== undefined);
+  const centre = values.findIndex((v) => v !== undefined);
+  // Differences are taken on the balls: neighbours may agree far beyond double precision.
+  const range = standing.reduce((m, a) => Math.max(m, ...standing.map((b) => distance(a, b))), 0);
+  return (i) => {
+    const v = values[i];
+    if (v === undefined) return {};
+    const step = before === undefined ? undefined : distance(v, before);
+    if (step === undefined && standing.length < 2) return i === centre ? { central: true } : {};
+    return { truncation: scale * Math.hypot(range / 2, step ?? 0), ...(i === centre ? { central: true } : {}) };
+  };
+}
+
+function distance(a: Ball, b: Ball): number {
+  return Math.abs(R.toNumber(R.sub(a, b, 128)));
+}

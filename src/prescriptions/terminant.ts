@@ -1,0 +1,104 @@
+/**
+ * @module Least term with terminant: the optimally truncated sum plus the exact remainder of its leading singularity.
+ *
+ * After the first n terms of a series led by (1 − t/t*)^{−γ}, the remainder is
+ *   t* > 0:  T_n · ω F_{n+γ−1}(ω)  (principal value),  Im above = T_n π ω^{n+γ} e^{−ω}/Γ(n+γ),  ω = t*​/x,
+ *   t* < 0:  T_n · ω G_{n+γ−1}(ω),
+ * with T_n the first omitted term (the last one continued by (n−1+γ)/ω·sign when it is not known).
+ * Truncation error: the larger of the changes when the cut is moved by one term either way.
+ * Reference: R. B. Dingle (1973) ch. 21–22 (from memory); C. Ayala, X. Lobregat, A. Pineda, arXiv:1902.07736, 1909.01370
+ * (abstracts seen); DLMF 2.11(iii). Re-derived and checked to 35 digits.
+ */
+import { addExact, branchAlternating, branchSame, exact, R, toNumberExact } from '../numerics/index.js';
+import type { Ball } from '../numerics/index.js';
+import { branchImaginary } from '../borel/index.js';
+import type { Expansion, StatedSingularity } from '../series/index.js';
+import type { Outcome, Prescription } from './prescription.js';
+import { leastTerm, partialSums, refusal, terms, toDigits } from './prescription.js';
+
+interface Cut {
+  readonly value: Ball;
+  readonly im: Ball;
+}
+
+/** Partial sum of n terms plus the terminant of s. */
+function completed(e: Expansion, s: StatedSingularity, n: number, prec: number): Cut {
+  const gamma = addExact(s.exponent!, exact(n));
+  const x = e.x.ball(prec);
+  const t = s.t.ball(prec);
+  const w = R.div(R.abs(t), x, prec);
+  const all = terms(e, prec);
+  const g = gamma.ball(prec);
+  // T_N continued from T_{N−1} by the leading growth: T_n/T_{n−1} = (n−1+γ)/(±ω).
+  const step = R.div(R.sub(g, R.ONE, prec), R.isPositive(t) ? w : R.neg(w), prec);
+  const first = n < all.length ? all[n]! : R.mul(all[n - 1]!, step, prec);
+  const b = addExact(gamma, exact(-1));
+  const base = partialSums(e, prec)[n]!;
+  if (!R.isPositive(t)) {
+    const factor = R.mul(w, branchAlternating(b, w, prec), prec);
+    return { value: R.add(base, R.mul(first, factor, prec), prec), im: R.ZERO };
+  }
+  const factor = R.mul(w, branchSame(b, w, prec).pv, prec);
+  return {
+    value: R.add(base, R.mul(first, factor, prec), prec),
+    im: R.mul(first, branchImaginary(gamma, w, prec), prec),
+  };
+}
+
+/** Where to cut: x − b − 1/3 terms for the same-sign leader, the least term for the alternating one; within 1 … N. */
+function cutOf(e: Expansion, s: StatedSingularity): number {
+  const N = e.coefficients.length;
+  const w = Math.abs(toNumberExact(s.t)) / toNumberExact(e.x);
+  const best = toNumberExact(s.t) > 0 ? w - (toNumberExact(s.exponent!) - 1) - 1 / 3 : (leastTerm(terms(e, 160))?.index ?? N);
+  return Math.min(N, Math.max(1, Math.round(best)));
+}
+
+export const terminantSum: Prescription = {
+  name: 'terminant',
+  title: 'least term with terminant',
+  summary: 'optimal cut completed by the remainder of the leading singularity; needs its position and exponent',
+  family: 'truncation',
+  apply(e, growth, request): readonly Outcome[] {
+    const variant = 'leading singularity';
+    const s = e.stated[0];
+    const N = e.coefficients.length;
+    if (s === undefined || s.exponent === undefined)
+      return [
+        refusal(
+          variant,
+          s === undefined ? 'no position of a leading singularity is known' : 'the leading singularity has no known exponent',
+          'state it in the series file (singularities: u or dimension, with exponent)',
+        ),
+      ];
+    if (N < 2) return [refusal(variant, 'fewer than two terms', 'give more coefficients')];
+    if (growth.verdict === 'superfactorial' || growth.verdict === 'terminating' || growth.verdict === 'convergent' || growth.verdict === 'geometric')
+      return [refusal(variant, `the growth is ${growth.verdict}, not factorial`, 'use the fixed-order sum')];
+    const w = Math.abs(toNumberExact(s.t)) / toNumberExact(e.x);
+    if (toNumberExact(s.t) > 0 && w - (toNumberExact(s.exponent) - 1) - 1 / 3 < 0.5)
+      return [refusal(variant, 'the optimal cut lies before the first term: the coupling is too large', 'take a smaller coupling (a higher scale)')];
+    const n = request.only === undefined ? cutOf(e, s) : Number(request.only.split(' ')[0]);
+    const best = toDigits(request.digits, (prec) => completed(e, s, n, prec), (r) => r.value);
+    let truncation: number | undefined;
+    if (request.only === undefined) {
+      const moved = [n - 1, n + 1].filter((m) => m >= 1 && m <= N).map((m) => R.toNumber(completed(e, s, m, 96).value));
+      const here = R.toNumber(best.value);
+      truncation = Math.max(...moved.map((v) => Math.abs(v - here)));
+    }
+    return [
+      {
+        kind: 'sum',
+        variant: `${n} terms`,
+        value: best.value,
+        imaginary: best.im,
+        ...(truncation === undefined ? {} : { truncation }),
+        termsUsed: Math.min(N, n + 1),
+        trust: 'indicative',
+        notes: [
+          n < N ? 'terminant scaled by the first omitted term' : 'terminant scaled by the last term continued by the leading growth',
+          ...(e.stated.length > 1 ? ['only the nearest singularity is completed: the next one sets what remains'] : []),
+        ],
+        central: true,
+      },
+    ];
+  },
+};

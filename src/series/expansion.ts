@@ -1,0 +1,36 @@
+/**
+ * @module An Expansion: a series at a chosen value of its expansion variable, ready for any prescription.
+ *
+ *   R = additive + factor · x^power · F(x),   F(x) = Σ_{n=0}^{N−1} c_n x^n,   c_0 ≠ 0.
+ *
+ * Borel conventions: B(t) = Σ c_n t^n/n!,  F(x) = (1/x) ∫_0^∞ dt e^{−t/x} B(t); the upper lateral sum passes above the
+ * positive t axis. With power = 1 and x = α this is the usual R = ∫ dt e^{−t/α} B(t) of a QCD correction.
+ */
+import type { Exact } from '../numerics/index.js';
+
+/** A Borel singularity N (1 − t/t*)^(−γ) [1 + c₁(1 − t/t*) + c₂(1 − t/t*)² + …] taken as given. */
+export interface StatedSingularity {
+  readonly t: Exact;
+  /** Position in u, when the series has a β function. */
+  readonly u?: Exact;
+  readonly exponent?: Exact;
+  /** c₁, c₂, …; empty when unknown. */
+  readonly corrections: readonly Exact[];
+  readonly strength?: Exact;
+  readonly dimension?: Exact;
+  readonly kind: 'infrared' | 'ultraviolet' | 'other';
+  /** The series file, the operator product expansion, or the terms themselves. */
+  readonly origin: 'file' | 'operator product expansion' | 'terms';
+}
+
+export interface Expansion {
+  readonly x: Exact;
+  readonly power: number;
+  readonly factor: Exact;
+  readonly additive: Exact;
+  readonly coefficients: readonly Exact[];
+  /** Relative one-sigma error of each coefficient, quoted or implied by its digits; 0 when exact. */
+  readonly relativeErrors: readonly number[];
+  /** Known beforehand, nearest first. */
+  readonly stated: readonly StatedSingularity[];
+}

@@ -1,0 +1,181 @@
+/** @module Ambiguity, power correction and optimal truncation as the result states them. */
+import { condensateShift, conventions, inGeV, powerOf, predictOptimum } from '../ambiguity/index.js';
+import type { Convention, LateralSource } from '../ambiguity/index.js';
+import { R, toNumberExact } from '../numerics/index.js';
+import type { Growth } from '../growth/index.js';
+import { imaginaryPieces } from '../prescriptions/index.js';
+import type { Series } from '../series/index.js';
+import type { AmbiguityReport, OptimalTruncationReport, PowerCorrectionReport } from './assessment.js';
+import type { Expanded } from './expand.js';
+import { ballText, exactText, indicative } from './figures.js';
+import { hardScaleGeV, lambdaOverQ } from './summary.js';
+import type { TermTable } from './terms.js';
+import type { Evaluated } from './values.js';
+
+/** Prescriptions whose imaginary part states the ambiguity, most structured first. */
+const LATERAL_ORDER = ['singularity-model', 'borel-leroy-pade', 'borel-pade', 'borel-pade-2', 'terminant'];
+
+/** The lateral sums that the ambiguity is read from: a converged sum first, then the order above. */
+export function lateralSource(values: readonly Evaluated[]): LateralSource | undefined {
+  const candidates = values.flatMap((v) =>
+    v.outcome.kind === 'sum' && v.outcome.central === true && v.outcome.imaginary !== undefined ? [{ v, im: v.outcome.imaginary, trust: v.outcome.trust }] : [],
+  );
+  const rank = (name: string): number => LATERAL_ORDER.indexOf(name);
+  candidates.sort((a, b) => Number(b.trust === 'converged') - Number(a.trust === 'converged') || rank(a.v.prescription.name) - rank(b.v.prescription.name));
+  const best = candidates[0];
+  return best === undefined ? undefined : { im: Math.abs(R.toNumber(best.im)), origin: `${best.v.prescription.name} ${best.v.outcome.variant}` };
+}
+
+export interface AmbiguityFound {
+  readonly report: AmbiguityReport;
+  readonly list: readonly Convention[];
+  /** |Im|/π, or the least term where no lateral sums stand; undefined when there is none to state. */
+  readonly chosen?: Convention;
+  readonly dimension?: number;
+}
+
+/** Has the growth an ambiguity at all? */
+const DIVERGENT = new Set(['factorial', 'superfactorial', 'undecided', 'subfactorial']);
+
+export function ambiguityReport(series: Series, expanded: Expanded, growth: Growth, table: TermTable, values: readonly Evaluated[], at: number): AmbiguityFound {
+  const none = (statement: string): AmbiguityFound => ({ report: { conventions: [], statement }, list: [] });
+  if (!DIVERGENT.has(growth.verdict)) return none(`the growth is ${growth.verdict}: there is no ambiguity to quote`);
+  if (growth.flags.some((f) => f.code === 'errors-exceed-values')) return none('the coefficient errors exceed the coefficients: no ambiguity can be stated');
+  const lateral = lateralSource(values);
+  const numbers = table.terms.map(R.toNumber);
+  const sums = table.sums.slice(1).map(R.toNumber);
+  const powers = numbers.map((_, n) => n + expanded.expansion.power);
+  const reached = table.least?.reached === true;
+  const summable = lateral !== undefined && lateral.im === 0;
+  const list = conventions(numbers, sums, powers, reached, lateral);
+  if (list.length === 0) return none('no lateral sums stand and the least term is not reached: no ambiguity can be stated from these terms');
+  const dimension = leadingDimension(expanded);
+  const Q = hardScaleGeV(series);
+  const value = Math.abs(sums[sums.length - 1] ?? 0);
+  const chosen = list.find((c) => c.name === '|Im|/pi') ?? list[0]!;
+  const statement = summable
+    ? 'no singularity on the positive axis shows: the Borel sum is unique as far as these terms tell; least-term rows measure the truncation, not an ambiguity'
+    : 'conventions differ by factors of 2 and pi; compare numbers only within one row. The meaning of |Im|/pi as an error is a convention, not a theorem';
+  void at;
+  return {
+    report: {
+      conventions: list.map((c) => ({
+        name: c.name,
+        value: indicative(c.value, 6),
+        ...(value > 0 ? { relative: indicative(c.value / value, 3) } : {}),
+        ...(Q === undefined || dimension === undefined ? {} : { GeV: indicative(inGeV(c.value, Q, dimension), 4) }),
+        standing: 'indicative' as const,
+        origin: c.origin,
+      })),
+      statement,
+      chosen: chosen.name,
+    },
+    list,
+    chosen,
+    ...(dimension === undefined ? {} : { dimension }),
+  };
+}
+
+/** d = 2u of the nearest stated infrared singularity. */
+function leadingDimension(expanded: Expanded): number | undefined {
+  const s = expanded.expansion.stated.find((one) => toNumberExact(one.t) > 0);
+  return s?.dimension === undefined ? undefined : toNumberExact(s.dimension);
+}
+
+export function powerReport(series: Series, expanded: Expanded, found: AmbiguityFound, at: number): PowerCorrectionReport {
+  const d = found.dimension;
+  const lambda = lambdaOverQ(series, { ball: () => R.fromNumber(at) });
+  const Q = hardScaleGeV(series);
+  const A = found.chosen?.value;
+  if (d === undefined || A === undefined)
+    return { condensates: [], statement: d === undefined ? 'the operator dimension is not known: no power of Lambda/Q can be assigned' : 'no ambiguity is stated, so none is to be absorbed' };
+  const power = lambda === undefined ? undefined : powerOf(lambda, d);
+  const pieces = imaginaryPieces(expanded.expansion);
+  const condensates = series.condensates.map((c) => {
+    const dim = c.dimension.toNumber();
+    const t = expanded.expansion.stated.find((s) => s.dimension !== undefined && toNumberExact(s.dimension) === dim)?.t;
+    const own = t === undefined ? undefined : pieces.find((p) => Math.abs(p.t - toNumberExact(t)) < 1e-9 * Math.abs(p.t));
+    const im = own !== undefined ? Math.abs(own.im) : dim === d && found.chosen?.name === '|Im|/pi' ? A * Math.PI : undefined;
+    const wilson = c.wilson === undefined ? undefined : toNumberExact(c.wilson);
+    const shift = (amount: number): number | undefined => (Q === undefined || wilson === undefined || wilson === 0 ? undefined : condensateShift(amount, Q, dim, wilson));
+    const both = im === undefined ? undefined : { pi: shift(im / Math.PI), full: shift(im) };
+    const fileValue = c.value === undefined ? undefined : Math.abs(toNumberExact(c.value.value));
+    return {
+      name: c.name,
+      dimension: String(dim),
+      ...(c.wilson === undefined ? {} : { wilson: exactText(c.wilson, 8) }),
+      ...(c.value === undefined ? {} : { fileValue: c.value.text }),
+      ...(c.unit === undefined ? {} : { unit: c.unit }),
+      ...(both?.pi === undefined ? {} : { shift: indicative(both.pi), shiftIm: indicative(both.full!) }),
+      ...(both?.pi === undefined || fileValue === undefined || fileValue === 0 ? {} : { shiftOverValue: indicative(both.pi / fileValue, 3) }),
+    };
+  });
+  const missing = [
+    ...(Q === undefined ? ['the hard scale Q'] : []),
+    ...(lambda === undefined ? ['Lambda (needs alpha_s and n_f)'] : []),
+  ];
+  return {
+    dimension: String(d),
+    ...(power === undefined ? {} : { power: indicative(power), lambdaOverQ: indicative(lambda!), inPowerUnits: indicative(A / power) }),
+    ...(Q === undefined ? {} : { GeV: { value: indicative(inGeV(A, Q, d)), power: String(d) } }),
+    condensates,
+    statement:
+      missing.length === 0
+        ? `the ambiguity (${found.chosen!.name}) is a power correction of dimension ${d}; a condensate defined with the principal value shifts by the amount shown when the prescription changes`
+        : `not known: ${missing.join(', ')}`,
+  };
+}
+
+export function optimalReport(expanded: Expanded, growth: Growth, table: TermTable, digits: number): OptimalTruncationReport {
+  const e = expanded.expansion;
+  if (!DIVERGENT.has(growth.verdict))
+    return { status: 'not applicable', statement: `the growth is ${growth.verdict}: more terms only help`, standing: growth.standing };
+  const least = table.least;
+  const predicted = prediction(expanded, growth);
+  const observed =
+    least === undefined || !least.reached
+      ? undefined
+      : {
+          power: least.index + e.power,
+          ...(least.tiedWith === undefined ? {} : { tiedWith: least.tiedWith + e.power }),
+          term: ballText(table.terms[least.index]!, Math.min(digits, 8)),
+          sumThrough: ballText(table.sums[least.index + 1]!, digits),
+          sumBefore: ballText(table.sums[least.index]!, digits),
+        };
+  const competing = growth.flags.some((f) => f.code === 'competing-singularities');
+  return {
+    ...(observed === undefined ? {} : { observed }),
+    status: observed === undefined ? 'not reached' : 'reached',
+    ...(predicted === undefined ? {} : { predicted }),
+    ...(observed === undefined ? {} : { errorOfStopping: indicative(Math.abs(R.toNumber(table.terms[least!.index]!)), 3) }),
+    statement:
+      (observed === undefined
+        ? 'the terms still fall at the last known order: the series has not begun to diverge at this coupling'
+        : `the term of order ${observed.power} is the smallest; stopping there leaves an error of its size`) +
+      (competing ? '; singularities of both signs compete, so the smallest term alone does not mark the best cut' : ''),
+    standing: 'indicative',
+  };
+}
+
+/** From the stated leading singularity, or from the one that the terms show. */
+function prediction(expanded: Expanded, growth: Growth): OptimalTruncationReport['predicted'] {
+  const e = expanded.expansion;
+  const s = e.stated[0];
+  const x = toNumberExact(e.x);
+  const found = growth.nearest;
+  const source =
+    s?.exponent !== undefined
+      ? { t: toNumberExact(s.t), b: toNumberExact(s.exponent) - 1, origin: s.origin }
+      : found?.exponent !== undefined && found.kind !== 'complex pair'
+        ? { t: found.t.value, b: found.exponent.value - 1, origin: 'the position and exponent found in the terms' }
+        : undefined;
+  if (source === undefined || !(x > 0)) return undefined;
+  const p = predictOptimum(source.t, source.b, x);
+  return {
+    leastTermAt: indicative(p.leastTermAt, 3),
+    principalValueAt: indicative(p.principalValueAt, 3),
+    x: indicative(p.omega, 5),
+    b: indicative(p.b, 5),
+    origin: source.origin,
+  };
+}

@@ -1,0 +1,96 @@
+/**
+ * @module assess: from a series and a coupling to everything a referee asks for, as one plain object.
+ */
+import { diagnoseGrowth } from '../growth/index.js';
+import type { Growth } from '../growth/index.js';
+import { toNumberExact } from '../numerics/index.js';
+import { PRESCRIPTIONS } from '../prescriptions/index.js';
+import type { Prescription } from '../prescriptions/index.js';
+import type { Series, Uncertain } from '../series/index.js';
+import { ambiguityReport, optimalReport, powerReport } from './ambiguity-report.js';
+import type { Assessment, ValueEntry } from './assessment.js';
+import { cautions } from './cautions.js';
+import { expand } from './expand.js';
+import type { Expanded } from './expand.js';
+import { growthReport } from './growth-report.js';
+import { planeReport } from './plane-report.js';
+import { couplingSummary, relativeCouplingError, seriesSummary } from './summary.js';
+import { termTable } from './terms.js';
+import { evaluateAll, valueEntry } from './values.js';
+import type { Evaluated, Inputs } from './values.js';
+import { verdict } from './verdict.js';
+import { VERSION } from './version.js';
+
+export interface AssessOptions {
+  /** Use only the first `order` coefficients. */
+  readonly order?: number;
+  /** Certified decimal digits of each value; 15 is the usual choice. */
+  readonly digits: number;
+  /** Names of the prescriptions to run; all when absent. */
+  readonly by?: readonly string[];
+  /** What was asked, repeated in the result. */
+  readonly request: Assessment['request'];
+  /** How the coupling was reached, one line a step. */
+  readonly path?: readonly string[];
+}
+
+/** Input errors of an expanded series. */
+function inputsOf(series: Series, expanded: Expanded, at: Uncertain): Inputs {
+  const kept = expanded.expansion.coefficients.length;
+  const correlation = series.correlation
+    ?.slice(expanded.leadingZeros, expanded.leadingZeros + kept)
+    .map((row) => row.slice(expanded.leadingZeros, expanded.leadingZeros + kept).map((q) => q.toNumber()));
+  return {
+    xError: relativeCouplingError(at),
+    coefficientErrors: expanded.errors,
+    ...(correlation === undefined ? {} : { correlation }),
+  };
+}
+
+/** The prescriptions of that name, all when `by` is absent. Throws RangeError naming the known ones. */
+export function prescriptionsNamed(by: readonly string[] | undefined): readonly Prescription[] {
+  if (by === undefined) return PRESCRIPTIONS;
+  return by.map((name) => {
+    const found = PRESCRIPTIONS.find((p) => p.name === name);
+    if (found === undefined) throw new RangeError(`no prescription "${name}"; known: ${PRESCRIPTIONS.map((p) => p.name).join(', ')}`);
+    return found;
+  });
+}
+
+export interface Summed {
+  readonly expanded: Expanded;
+  readonly growth: Growth;
+  readonly values: readonly Evaluated[];
+}
+
+/** Expands, diagnoses and runs the prescriptions: what `assess` and `sum` share. */
+export function sumUp(series: Series, at: Uncertain, options: Pick<AssessOptions, 'order' | 'digits' | 'by'>): Summed {
+  const expanded = expand(series, at.value, options.order);
+  const growth = diagnoseGrowth(expanded.growthInput);
+  const values = evaluateAll(expanded.expansion, growth, prescriptionsNamed(options.by), options.digits, inputsOf(series, expanded, at));
+  return { expanded, growth, values };
+}
+
+/** The whole assessment of a series at the coupling value `at`. */
+export function assess(series: Series, at: Uncertain, options: AssessOptions): Assessment {
+  const { expanded, growth, values } = sumUp(series, at, options);
+  const alpha = toNumberExact(at.value);
+  const table = termTable(series, expanded, options.digits);
+  const ambiguity = ambiguityReport(series, expanded, growth, table, values, alpha);
+  const rows: ValueEntry[] = values.map((v) => valueEntry(v, options.digits));
+  return {
+    leastterm: VERSION,
+    request: options.request,
+    series: seriesSummary(series, expanded),
+    coupling: couplingSummary(series, at, expanded, options.digits, options.path),
+    terms: table.rows,
+    growth: growthReport(growth, expanded),
+    borelPlane: planeReport(expanded, growth, options.digits),
+    values: rows,
+    ambiguity: ambiguity.report,
+    powerCorrection: powerReport(series, expanded, ambiguity, alpha),
+    optimalTruncation: optimalReport(expanded, growth, table, options.digits),
+    verdict: verdict(values, growth, expanded.expansion.coefficients.length, ambiguity.chosen),
+    cautions: cautions(series, expanded, growth, table, values, alpha),
+  };
+}

@@ -1,0 +1,140 @@
+/**
+ * @module From a Series and a coupling to an Expansion: where the bookkeeping of files ends and numerics begins.
+ */
+import type { Expansion, Series, StatedSingularity, Uncertain } from '../series/index.js';
+import { addExact, divExact, exact, isZeroExact, R, Rational, signExact, subExact, toNumberExact } from '../numerics/index.js';
+import type { Exact } from '../numerics/index.js';
+import { divisorSize, expectedSingularity, uPerT } from '../qcd/index.js';
+import type { GrowthInput, GrowthTerm } from '../growth/index.js';
+
+export interface Expanded {
+  readonly expansion: Expansion;
+  /** u per unit of t, for a QCD coupling with known n_f. */
+  readonly uPerT?: Exact;
+  /** Exactly zero coefficients taken off the front; the power of the first remaining one has grown by as many. */
+  readonly leadingZeros: number;
+  /** Quoted one-sigma errors of the coefficients kept (half the sum of an asymmetric pair). */
+  readonly errors: readonly number[];
+  readonly growthInput: GrowthInput;
+}
+
+const TWO = Rational.of(2);
+
+/** Digits fewer than this are taken as "written short" (0.5, 1.25), not as rounded; heuristic. */
+const ROUNDED_DIGITS = 3;
+
+/** Expands the first `order` coefficients of the series at the coupling value `at`. */
+export function expand(series: Series, at: Exact, order?: number): Expanded {
+  const kept = order === undefined ? series.coefficients : series.coefficients.slice(0, order);
+  const values = kept.map((c) => c.value);
+  const firstNonZero = values.findIndex((v) => !isZeroExact(v));
+  const leadingZeros = firstNonZero < 0 ? 0 : firstNonZero;
+  const coefficients = values.slice(leadingZeros);
+  const relativeErrors = kept.slice(leadingZeros).map(relativeError);
+  const scale = series.coupling.plain || series.flavours === undefined ? undefined : uPerT(series.flavours, series.coupling.divisor);
+  const stated = statedSingularities(series, leadingZeros, scale);
+  const expansion: Expansion = {
+    x: divExact(at, series.coupling.plain ? exact(1) : divisorSize(series.coupling.divisor)),
+    power: series.firstPower + leadingZeros,
+    factor: series.factor,
+    additive: series.additive,
+    coefficients,
+    relativeErrors,
+    stated,
+  };
+  const growthInput: GrowthInput = {
+    terms: coefficients.map((c, n) => growthTerm(c, relativeErrors[n]!, kept[n + leadingZeros]!.status === 'estimated')),
+    expected: stated.map((s) => ({
+      t: toNumberExact(s.t),
+      ...(s.exponent === undefined ? {} : { exponent: toNumberExact(s.exponent) }),
+      kind: s.kind,
+    })),
+  };
+  return {
+    expansion,
+    ...(scale === undefined ? {} : { uPerT: scale }),
+    leadingZeros,
+    errors: kept.slice(leadingZeros).map(quotedError),
+    growthInput,
+  };
+}
+
+function quotedError(c: Uncertain): number {
+  return c.error === undefined ? 0 : (c.error.plus.toNumber() + c.error.minus.toNumber()) / 2;
+}
+
+/** Quoted error over value, or the rounding implied by the digits of a plain decimal (uniform within half a unit). */
+function relativeError(c: Series['coefficients'][number]): number {
+  const logAbs = logAbsOf(c.value);
+  if (c.error !== undefined) {
+    const e = quotedError(c);
+    return e === 0 ? 0 : Math.exp(Math.log(e) - logAbs);
+  }
+  if (c.significantDigits === undefined || c.significantDigits < ROUNDED_DIGITS || logAbs === -Infinity) return 0;
+  const decade = Math.floor(logAbs / Math.LN10 + 1e-12);
+  return (0.5 / Math.sqrt(3)) * Math.exp((decade - c.significantDigits + 1) * Math.LN10 - logAbs);
+}
+
+/** ln|c|, for any size; −Infinity for zero. */
+export function logAbsOf(c: Exact): number {
+  if (isZeroExact(c)) return -Infinity;
+  const b = c.ball(96);
+  if (b.mid === 0n) return -Infinity;
+  const bits = R.upperBits(R.exactMid(b));
+  return Math.log(Math.abs(R.toNumber(R.mul2exp(R.exactMid(b), -bits)))) + bits * Math.LN2;
+}
+
+function growthTerm(c: Exact, relativeErrorOf: number, estimated: boolean): GrowthTerm {
+  return { logAbs: logAbsOf(c), sign: signExact(c), relativeError: relativeErrorOf, estimated };
+}
+
+/** File statements first; a condensate or an operator dimension alone brings the expectation of the OPE and the β function. */
+function statedSingularities(series: Series, leadingZeros: number, scale: Exact | undefined): StatedSingularity[] {
+  const shift = series.firstPower - 1 + leadingZeros;
+  const list: StatedSingularity[] = [];
+  for (const s of series.singularities) {
+    const u = s.u ?? (s.dimension === undefined ? undefined : exact(s.dimension.div(TWO)));
+    const t = s.t ?? (u !== undefined && scale !== undefined ? divExact(u, scale) : undefined);
+    if (t === undefined || signExact(t) === 0) continue;
+    const expected = s.exponent === undefined ? expectation(series, u, s.anomalousDimension) : undefined;
+    // A stated exponent refers to c_n with n counted from the file's first coefficient.
+    const exponent = s.exponent !== undefined ? addExact(s.exponent, exact(leadingZeros)) : expected && addExact(expected.exponent, exact(shift));
+    const dimension = s.dimension !== undefined ? exact(s.dimension) : u !== undefined && signExact(u) > 0 ? addExact(u, u) : undefined;
+    list.push({
+      t,
+      ...(u === undefined ? {} : { u }),
+      ...(exponent === undefined ? {} : { exponent }),
+      corrections: shift === 0 && expected !== undefined ? expected.corrections : [],
+      ...(s.strength === undefined ? {} : { strength: s.strength.value }),
+      ...(dimension === undefined ? {} : { dimension }),
+      kind: s.kind,
+      origin: expected === undefined ? 'file' : 'operator product expansion',
+    });
+  }
+  for (const c of series.condensates) {
+    if (scale === undefined || list.some((s) => s.dimension !== undefined && isZeroExact(subExact(s.dimension, exact(c.dimension))))) continue;
+    const expected = expectation(series, exact(c.dimension.div(TWO)), undefined);
+    if (expected === undefined) continue;
+    list.push({
+      t: expected.t,
+      u: exact(expected.u),
+      exponent: addExact(expected.exponent, exact(shift)),
+      corrections: shift === 0 ? expected.corrections : [],
+      dimension: exact(c.dimension),
+      kind: 'infrared',
+      origin: 'operator product expansion',
+    });
+  }
+  return list.sort((a, b) => Math.abs(toNumberExact(a.t)) - Math.abs(toNumberExact(b.t)));
+}
+
+/** Expected exponent for an infrared singularity at u > 0; ultraviolet ones need operators this room does not know. */
+function expectation(series: Series, u: Exact | undefined, anomalous: Exact | undefined): ReturnType<typeof expectedSingularity> | undefined {
+  if (u?.rational === undefined || u.rational.sign() <= 0 || series.flavours === undefined || series.coupling.plain) return undefined;
+  return expectedSingularity({
+    flavours: series.flavours,
+    dimension: u.rational.add(u.rational),
+    divisor: series.coupling.divisor,
+    ...(anomalous === undefined ? {} : { anomalousDimension: anomalous }),
+  });
+}

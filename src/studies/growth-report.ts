@@ -1,0 +1,107 @@
+/** @module The growth diagnosis as the result states it, in t and in u, beside what is expected. */
+import { toNumberExact } from '../numerics/index.js';
+import type { FoundSingularity, Growth } from '../growth/index.js';
+import type { StatedSingularity } from '../series/index.js';
+import type { ExpectedSingularity, GrowthReport, SingularityReport } from './assessment.js';
+import type { Expanded } from './expand.js';
+import { estimateText, exactText, indicative } from './figures.js';
+
+/** Digits of expected (exact) positions and exponents. */
+const EXPECTED_DIGITS = 10;
+const MARGIN = 1.5;
+
+export function growthReport(growth: Growth, expanded: Expanded): GrowthReport {
+  const stated = expanded.expansion.stated;
+  const agreement = compare(growth, stated);
+  const c = growth.comparison;
+  return {
+    verdict: growth.verdict,
+    ...(growth.order === undefined ? {} : { order: growth.order === Infinity ? 'infinite' : String(growth.order) }),
+    statement: growth.statement,
+    standing: growth.standing,
+    signPattern: growth.signPattern,
+    ...(growth.nearest === undefined ? {} : { nearest: singularityReport(growth.nearest, expanded) }),
+    expected: stated.map(expectedReport),
+    ...(agreement === undefined ? {} : { agreement }),
+    evidence: {
+      ratios: growth.ratios.map((r) => ({
+        n: r.n,
+        ratio: indicative(r.ratio, 6),
+        ...(r.linear === undefined ? {} : { linear: indicative(r.linear, 6) }),
+        ...(r.linearError === undefined ? {} : { linearError: indicative(r.linearError, 2) }),
+      })),
+      ...(c === undefined
+        ? {}
+        : {
+            comparison: {
+              points: c.points,
+              bayesFactor: indicative(c.bayesFactor, 3),
+              ...(c.deltaAICc === undefined ? {} : { deltaAICc: indicative(c.deltaAICc, 3) }),
+              ...(c.growthOrder === undefined
+                ? {}
+                : { growthOrder: indicative(c.growthOrder.value, 3), growthOrderError: indicative(c.growthOrder.error, 2) }),
+              inversePosition: indicative(c.inversePosition, 4),
+              wording: c.wording,
+            },
+          }),
+      predictions: growth.predictions.map((p) => ({ n: p.n, method: p.method, relativeMiss: indicative(p.relativeMiss, 3) })),
+      competition: growth.competition,
+    },
+    ...(growth.usableCoefficients === undefined ? {} : { usableCoefficients: growth.usableCoefficients }),
+    flags: growth.flags,
+  };
+}
+
+function singularityReport(s: FoundSingularity, expanded: Expanded): SingularityReport {
+  const t = estimateText(s.t.value, s.t.error);
+  const scale = expanded.uPerT === undefined ? undefined : toNumberExact(expanded.uPerT);
+  const u = scale === undefined ? undefined : estimateText(s.t.value * scale, s.t.error * Math.abs(scale));
+  const exponent = s.exponent && estimateText(s.exponent.value, s.exponent.error);
+  const strength = s.strength && estimateText(s.strength.value, s.strength.error);
+  const degrees = s.angle && estimateText((s.angle.value * 180) / Math.PI, (s.angle.error * 180) / Math.PI);
+  const kind =
+    s.kind === 'positive axis' ? 'infrared (positive axis)' : s.kind === 'negative axis' ? 'ultraviolet (negative axis)' : s.kind;
+  return {
+    t: t.value,
+    tError: t.error,
+    ...(u === undefined ? {} : { u: u.value, uError: u.error }),
+    ...(degrees === undefined ? {} : { angle: degrees.value }),
+    ...(exponent === undefined ? {} : { exponent: exponent.value, exponentError: exponent.error }),
+    ...(strength === undefined ? {} : { strength: strength.value, strengthError: strength.error }),
+    kind: scale === undefined ? s.kind : kind,
+    standing: 'indicative',
+  };
+}
+
+function expectedReport(s: StatedSingularity): ExpectedSingularity {
+  return {
+    t: exactText(s.t, EXPECTED_DIGITS),
+    ...(s.u === undefined ? {} : { u: exactText(s.u, EXPECTED_DIGITS) }),
+    ...(s.dimension === undefined ? {} : { dimension: exactText(s.dimension, EXPECTED_DIGITS) }),
+    ...(s.exponent === undefined ? {} : { exponent: exactText(s.exponent, EXPECTED_DIGITS) }),
+    ...(s.strength === undefined ? {} : { strength: exactText(s.strength, EXPECTED_DIGITS) }),
+    kind: s.kind,
+    origin: s.origin,
+  };
+}
+
+/** Observation against the nearest expected singularity on the same side. */
+function compare(growth: Growth, stated: readonly StatedSingularity[]): string | undefined {
+  const found = growth.nearest;
+  const first = stated[0];
+  if (first === undefined) return undefined;
+  if (found === undefined) return 'the terms alone do not fix a position; the expected one is not tested';
+  if (found.kind === 'complex pair') return 'the terms show a complex pair; the expected singularities lie on the real axis';
+  const t0 = toNumberExact(first.t);
+  const same = stated.find((s) => Math.sign(toNumberExact(s.t)) === Math.sign(found.t.value)) ?? first;
+  const t = toNumberExact(same.t);
+  const deviation = Math.abs(found.t.value - t);
+  const words =
+    deviation <= MARGIN * found.t.error
+      ? 'agrees with'
+      : deviation <= 0.15 * Math.abs(t)
+        ? 'lies within 15 % of'
+        : 'differs from';
+  const nearer = same !== first ? `; the nearest expected one, at t = ${indicative(t0)}, does not show in these terms yet` : '';
+  return `the position found ${words} the expected t = ${indicative(t)} (${same.kind}, ${same.origin})${nearer}`;
+}

@@ -1,0 +1,95 @@
+/**
+ * @module Every prescription on one expansion, with truncation, ambiguity and input errors; sums and refusals side by side.
+ */
+import { addExact, exact, mulExact, R, Rational } from '../numerics/index.js';
+import type { Exact } from '../numerics/index.js';
+import type { Growth } from '../growth/index.js';
+import type { Outcome, Prescription, Sum } from '../prescriptions/index.js';
+import type { Expansion } from '../series/index.js';
+import type { ValueEntry } from './assessment.js';
+import { ballText, indicative } from './figures.js';
+
+export interface Inputs {
+  /** One-sigma relative error of x. */
+  readonly xError: number;
+  /** Absolute one-sigma errors of the coefficients. */
+  readonly coefficientErrors: readonly number[];
+  /** Correlation matrix of the coefficient errors; identity when absent. */
+  readonly correlation?: readonly (readonly number[])[];
+}
+
+export interface Evaluated {
+  readonly prescription: Prescription;
+  readonly outcome: Outcome;
+  /** Error from coefficients and coupling, absolute. */
+  readonly input?: number;
+}
+
+/** Certified digits asked of the shifted evaluations: enough for a difference quotient. */
+const SHIFT_DIGITS = 12;
+
+/** Runs the prescriptions; the family's central member also gets its input error. */
+export function evaluateAll(e: Expansion, growth: Growth, prescriptions: readonly Prescription[], digits: number, inputs: Inputs): Evaluated[] {
+  return prescriptions.flatMap((prescription) =>
+    prescription.apply(e, growth, { digits }).map((outcome): Evaluated => {
+      if (outcome.kind === 'refusal' || outcome.central !== true) return { prescription, outcome };
+      const input = inputError(e, growth, prescription, outcome, inputs);
+      return { prescription, outcome, ...(input === undefined ? {} : { input }) };
+    }),
+  );
+}
+
+/** Linear propagation by central differences of half a standard deviation; √(J C Jᵀ). Undefined without any input error. */
+function inputError(e: Expansion, growth: Growth, p: Prescription, sum: Sum, inputs: Inputs): number | undefined {
+  const at = (shifted: Expansion): number | undefined => {
+    const found = p.apply(shifted, growth, { digits: SHIFT_DIGITS, only: sum.variant })[0];
+    return found?.kind === 'sum' ? R.toNumber(R.sub(found.value, sum.value, 160)) : undefined;
+  };
+  const slope = (up: Expansion, down: Expansion): number | undefined => {
+    const [a, b] = [at(up), at(down)];
+    return a === undefined || b === undefined ? undefined : a - b;
+  };
+  const fromX = inputs.xError > 0 ? slope({ ...e, x: scaledBy(e.x, 1 + inputs.xError / 2) }, { ...e, x: scaledBy(e.x, 1 - inputs.xError / 2) }) : 0;
+  const noisy = inputs.coefficientErrors.flatMap((s, n) => (s > 0 && n < e.coefficients.length ? [n] : []));
+  const fromC = noisy.map((n) => slope(shift(e, n, inputs.coefficientErrors[n]! / 2), shift(e, n, -inputs.coefficientErrors[n]! / 2)));
+  if (inputs.xError === 0 && noisy.length === 0) return undefined;
+  if (fromX === undefined || fromC.some((s) => s === undefined)) return undefined;
+  let variance = fromX * fromX;
+  noisy.forEach((n, i) =>
+    noisy.forEach((m, j) => {
+      const rho = i === j ? 1 : (inputs.correlation?.[n]?.[m] ?? 0);
+      variance += rho * fromC[i]! * fromC[j]!;
+    }),
+  );
+  return Math.sqrt(Math.max(0, variance));
+}
+
+function scaledBy(x: Exact, factor: number): Exact {
+  return mulExact(x, exact(Rational.fromNumber(factor)));
+}
+
+function shift(e: Expansion, n: number, by: number): Expansion {
+  return { ...e, coefficients: e.coefficients.map((c, k) => (k === n ? addExact(c, exact(Rational.fromNumber(by))) : c)) };
+}
+
+/** The plain row of the result. */
+export function valueEntry(v: Evaluated, digits: number): ValueEntry {
+  const { prescription, outcome } = v;
+  if (outcome.kind === 'refusal')
+    return { prescription: prescription.name, variant: outcome.variant, refused: { reason: outcome.reason, remedy: outcome.remedy } };
+  const im = outcome.imaginary;
+  const hasIm = im !== undefined;
+  return {
+    prescription: prescription.name,
+    variant: outcome.variant,
+    value: ballText(outcome.value, digits),
+    ...(outcome.truncation === undefined ? {} : { truncationError: indicative(outcome.truncation, 3) }),
+    ...(hasIm ? { ambiguity: indicative(Math.abs(R.toNumber(im)) / Math.PI, 6), imaginary: R.isExactZero(im) ? '0' : ballText(im, digits) } : {}),
+    ...(v.input === undefined ? {} : { inputError: indicative(v.input, 3) }),
+    termsUsed: outcome.termsUsed,
+    standing: outcome.trust,
+    digits: 'certified',
+    notes: outcome.notes,
+    ...(outcome.central === true ? { central: true } : {}),
+  };
+}

@@ -1,0 +1,95 @@
+/**
+ * @module The verdict and the rule that makes it.
+ *
+ * House rule "ladder": the first rung that stands gives the value,
+ *   0. coefficient errors above the coefficients, or growth beyond every (kn)!: no value;
+ *   1. growth terminating, convergent or geometric: the fixed-order sum;
+ *   2. fewer than four coefficients: the fixed-order sum (nothing pretends to resum);
+ *   3. a converged Borel–Padé sum (two orders agree to 1e−6), Leroy before plain, order 2 where the growth is (2n)!;
+ *   4. the singularity model, where positions and exponents are stated and its strengths do not cancel;
+ *   5. Borel–Leroy–Padé, then Borel–Padé (central entry);
+ *   6. least term with terminant; 7. least term; 8. fixed order.
+ * Truncation error: the prescription's own, never below the half-spread of rungs 4 and 5 where both stand.
+ * Ambiguity: |Im|/π of the chosen lateral sums, or the least term. Input: propagated. Nothing is averaged.
+ */
+import { R } from '../numerics/index.js';
+import type { Convention } from '../ambiguity/index.js';
+import type { Growth } from '../growth/index.js';
+import type { Standing, VerdictReport } from './assessment.js';
+import { ballText, indicative } from './figures.js';
+import { writeVerdict } from './rounding.js';
+import type { Evaluated } from './values.js';
+
+export const RULE_NAME = 'ladder';
+const SHORT = 4;
+const RUNGS = ['singularity-model', 'borel-leroy-pade', 'borel-pade', 'borel-pade-2', 'terminant', 'least-term', 'fixed-order'];
+const BOREL = ['borel-leroy-pade', 'borel-pade', 'borel-pade-2'];
+const DIGITS = 15;
+
+interface Choice {
+  readonly v: Evaluated;
+  readonly rung: string;
+}
+
+function central(values: readonly Evaluated[], name: string): Evaluated | undefined {
+  return values.find((v) => v.prescription.name === name && v.outcome.kind === 'sum' && v.outcome.central === true);
+}
+
+function choose(values: readonly Evaluated[], growth: Growth, count: number): Choice | string {
+  if (growth.flags.some((f) => f.code === 'errors-exceed-values')) return 'the coefficient errors exceed the coefficients';
+  if (growth.verdict === 'superfactorial' && growth.order !== 2) return 'the coefficients grow faster than any (kn)!: no sum is unique';
+  const fixed = central(values, 'fixed-order');
+  if (['terminating', 'convergent', 'geometric'].includes(growth.verdict)) return fixed === undefined ? 'there are no terms' : { v: fixed, rung: `growth ${growth.verdict}` };
+  if (count < SHORT) return fixed === undefined ? 'there are no terms' : { v: fixed, rung: `fewer than ${SHORT} coefficients` };
+  for (const name of BOREL) {
+    const v = central(values, name);
+    if (v?.outcome.kind === 'sum' && v.outcome.trust === 'converged') return { v, rung: 'converged Borel sum' };
+  }
+  for (const name of RUNGS) {
+    const v = central(values, name);
+    if (v === undefined || v.outcome.kind !== 'sum') continue;
+    if (name === 'singularity-model' && v.outcome.notes.some((n) => n.startsWith('large contributions cancel'))) continue;
+    return { v, rung: v.prescription.title };
+  }
+  return 'every prescription refused';
+}
+
+/** Half-spread of the model and the Borel–Padé sums that stand. */
+function spread(values: readonly Evaluated[], chosen: Evaluated): number {
+  const family = ['singularity-model', 'borel-leroy-pade', 'borel-pade'];
+  if (!family.includes(chosen.prescription.name)) return 0;
+  const numbers = family.flatMap((name) => {
+    const v = central(values, name);
+    return v?.outcome.kind === 'sum' ? [R.toNumber(v.outcome.value)] : [];
+  });
+  return numbers.length < 2 ? 0 : (Math.max(...numbers) - Math.min(...numbers)) / 2;
+}
+
+export function verdict(values: readonly Evaluated[], growth: Growth, count: number, ambiguity: Convention | undefined): VerdictReport {
+  const rule = `${RULE_NAME} (docs/verdict.md)`;
+  const picked = choose(values, growth, count);
+  if (typeof picked === 'string') return { printed: `no value: ${picked}`, rule, standing: 'indicative' };
+  const { v, rung } = picked;
+  const outcome = v.outcome;
+  if (outcome.kind !== 'sum') return { printed: 'no value', rule, standing: 'indicative' };
+  const truncation = outcome.truncation === undefined ? undefined : Math.max(outcome.truncation, outcome.trust === 'converged' ? 0 : spread(values, v));
+  const amount = ambiguity !== undefined && ambiguity.value > 0 && v.prescription.name !== 'fixed-order' ? ambiguity.value : undefined;
+  const parts = [
+    { label: 'truncation', error: truncation },
+    { label: 'ambiguity', error: amount },
+    { label: 'input', error: v.input },
+  ].flatMap((p) => (p.error !== undefined && p.error > 0 ? [{ label: p.label, error: p.error }] : []));
+  const exactSum = truncation === 0 && parts.length === 0;
+  const standing: Standing = exactSum ? 'certified' : outcome.trust;
+  const printed = writeVerdict(ballText(outcome.value, DIGITS), parts);
+  return {
+    value: ballText(outcome.value, DIGITS),
+    ...(truncation === undefined ? {} : { truncation: indicative(truncation, 3) }),
+    ...(amount === undefined ? {} : { ambiguity: indicative(amount, 3) }),
+    ...(v.input === undefined ? {} : { input: indicative(v.input, 3) }),
+    printed,
+    prescription: `${v.prescription.name}: ${outcome.variant}`,
+    rule: `${rule}; rung: ${rung}`,
+    standing,
+  };
+}
