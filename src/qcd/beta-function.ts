@@ -3,7 +3,7 @@
  * Convention  dx/d ln μ² = −Σ_k b_k x^(k+2),  b_k = β_k (divisor/4π)^(k+1);
  *             d ln m/d ln μ² = −Σ_k g_k x^(k+1), g_k = γ_k (divisor/4π)^(k+1).
  */
-import { exact, mulExact, toNumberExact, type Exact } from '../numerics/exact.js';
+import { exact, mulExact, toNumberExact, type Exact } from '../numerics/index.js';
 import { BETA } from './constants/beta.js';
 import { formalAt, type PublishedConstant } from './constants/constant.js';
 import { exactOfFormal } from './constants/formal-value.js';

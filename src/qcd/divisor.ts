@@ -2,8 +2,7 @@
  * @module Normalisations of the coupling: x = α_s/divisor.
  * Purpose  the beta function, anomalous dimensions and Borel variables in the variable of the series at hand.
  */
-import { divExact, exact, mulExact, toNumberExact, type Exact } from '../numerics/exact.js';
-import { Rational } from '../numerics/rational.js';
+import { Rational, divExact, exact, mulExact, toNumberExact, type Exact } from '../numerics/index.js';
 import { formalSymbol } from './constants/formal.js';
 import { exactOfFormal } from './constants/formal-value.js';
 

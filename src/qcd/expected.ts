@@ -13,8 +13,7 @@
  * Reference  M. Beneke, Phys. Rept. 317 (1999) 1; A. Pineda, JHEP 06 (2001) 022, hep-ph/0105008 (c_1, c_2 for d = 1);
  *            M. Beneke, M. Jamin, JHEP 09 (2008) 044, arXiv:0806.3156, section 5.
  */
-import { addExact, divExact, exact, mulExact, signExact, subExact, type Exact } from '../numerics/exact.js';
-import { Rational } from '../numerics/rational.js';
+import { Rational, addExact, divExact, exact, mulExact, signExact, subExact, type Exact } from '../numerics/index.js';
 import { integer, expSeries, mulSeries, reciprocal } from './algebra/truncated.js';
 import { liftExact, type Ring } from './algebra/ring.js';
 import { betaCoefficients } from './beta-function.js';

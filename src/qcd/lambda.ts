@@ -44,8 +44,7 @@ export function lambdaOf(alpha: number, scale: number, theory: Theory): number |
 
 /** α_s(scale) from Λ_MSbar, both in one unit. */
 export function alphaOfLambda(lambda: number, scale: number, theory: Theory): number | Refusal {
-  const bad =
-    checkTheory(theory.flavours, theory.loops) ?? checkScale('Λ', lambda) ?? checkScale('scale', scale);
+  const bad = checkTheory(theory.flavours, theory.loops) ?? checkScale('Λ', lambda) ?? checkScale('scale', scale);
   if (bad !== undefined) return bad;
   const flow = flowOf(theory.flavours, loopsOf(theory.loops));
   const log = 2 * Math.log(scale / lambda);

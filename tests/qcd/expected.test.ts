@@ -1,6 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { exact, toNumberExact, type Exact } from '../../src/numerics/exact.js';
-import { Rational } from '../../src/numerics/rational.js';
+import { Rational, exact, toNumberExact, type Exact } from '../../src/numerics/index.js';
 import { anomalousTerm, betaCoefficients, expectedSingularity, uPerT } from '../../src/qcd/index.js';
 
 const q = (text: string): Rational => Rational.parse(text) ?? Rational.ZERO;
@@ -17,7 +16,11 @@ describe('expected singularities', () => {
     expect(num(s.t)).toBeCloseTo((2 * Math.PI) / b0, 14);
     expect(num(s.corrections[0])).toBeCloseTo((b1 ** 2 / b0 - b2) / (4 * b * b0 ** 3), 13);
     const c2 =
-      (b1 ** 4 + 4 * b0 ** 3 * b1 * b2 - 2 * b0 * b1 ** 2 * b2 + b0 ** 2 * (-2 * b1 ** 3 + b2 ** 2) - 2 * b0 ** 4 * b3) /
+      (b1 ** 4 +
+        4 * b0 ** 3 * b1 * b2 -
+        2 * b0 * b1 ** 2 * b2 +
+        b0 ** 2 * (-2 * b1 ** 3 + b2 ** 2) -
+        2 * b0 ** 4 * b3) /
       (32 * b * (b - 1) * b0 ** 8);
     expect(num(s.corrections[1])).toBeCloseTo(c2, 12);
   });

@@ -4,51 +4,10 @@
  * Method   `liftExact` runs the same formula twice: once over rationals-or-unknown, which keeps every output that
  *          depends on rational inputs only; once over balls for the rest, when somebody asks for their digits.
  */
-import * as B from '../../numerics/ball/real.js';
-import type { Ball } from '../../numerics/ball/real.js';
-import { exact, exactReal, type Exact } from '../../numerics/exact.js';
-import { Rational } from '../../numerics/rational.js';
+import { R, Rational, ballField, exact, exactReal, type Ball, type Exact, type Field } from '../../numerics/index.js';
 
-export interface Ring<T> {
-  readonly zero: T;
-  readonly one: T;
-  fromRational(q: Rational): T;
-  add(a: T, b: T): T;
-  sub(a: T, b: T): T;
-  mul(a: T, b: T): T;
-  /** Quotient; the caller sees to it that b is not zero. */
-  div(a: T, b: T): T;
-}
-
-export const doubles: Ring<number> = {
-  zero: 0,
-  one: 1,
-  fromRational: (q) => q.toNumber(),
-  add: (a, b) => a + b,
-  sub: (a, b) => a - b,
-  mul: (a, b) => a * b,
-  div: (a, b) => a / b,
-};
-
-export const rationals: Ring<Rational> = {
-  zero: Rational.ZERO,
-  one: Rational.ONE,
-  fromRational: (q) => q,
-  add: (a, b) => a.add(b),
-  sub: (a, b) => a.sub(b),
-  mul: (a, b) => a.mul(b),
-  div: (a, b) => a.div(b),
-};
-
-export const balls = (prec: number): Ring<Ball> => ({
-  zero: B.ZERO,
-  one: B.ONE,
-  fromRational: (q) => B.fromRational(q, prec),
-  add: (a, b) => B.add(a, b, prec),
-  sub: (a, b) => B.sub(a, b, prec),
-  mul: (a, b) => B.mul(a, b, prec),
-  div: (a, b) => B.div(a, b, prec),
-});
+/** What a formula may use; every Field of the numerics room is one. */
+export type Ring<T> = Pick<Field<T>, 'zero' | 'one' | 'fromRational' | 'add' | 'sub' | 'mul' | 'div'>;
 
 const UNKNOWN = 'some real number';
 /** A rational, or no more than that it is some real number. (Not undefined: missing entries of arrays mean zero.) */
@@ -92,12 +51,12 @@ export function liftExact(inputs: readonly Exact[], formula: RingFormula): Exact
     if (last === undefined || last.prec < prec) {
       const work = prec + GUARD;
       const values = formula<Ball>(
-        balls(work),
+        ballField(work),
         inputs.map((x) => x.ball(work)),
       );
       last = { prec, values };
     }
     return last.values;
   };
-  return known.map((q, i) => (q !== UNKNOWN ? exact(q) : exactReal((prec) => at(prec)[i] ?? B.INDETERMINATE)));
+  return known.map((q, i) => (q !== UNKNOWN ? exact(q) : exactReal((prec) => at(prec)[i] ?? R.INDETERMINATE)));
 }

@@ -4,7 +4,7 @@
  *         [x^n] f^{-1} = (1/n) [x^(n−1)] (x/f)^n; exponential and logarithm by their differential equations.
  * Bound   exact in the ring.
  */
-import { Rational } from '../../numerics/rational.js';
+import { Rational } from '../../numerics/index.js';
 import type { Ring } from './ring.js';
 
 const at = <T>(ring: Ring<T>, a: readonly T[], k: number): T => a[k] ?? ring.zero;

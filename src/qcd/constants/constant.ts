@@ -1,5 +1,5 @@
 /** @module A published constant: its formula as text, where it stands, and how well it is confirmed. */
-import { Rational } from '../../numerics/rational.js';
+import { Rational } from '../../numerics/index.js';
 import { formalRational, substituteFormal, type Formal } from './formal.js';
 import { parseFormal } from './formal-parse.js';
 

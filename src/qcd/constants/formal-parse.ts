@@ -2,7 +2,7 @@
  * @module Reads constants in the notation of the papers: + − * / ^ ( ), integers, decimals and symbols.
  * Division only by rational numbers, powers only by non-negative integers: the result is always a polynomial.
  */
-import { Rational } from '../../numerics/rational.js';
+import { Rational } from '../../numerics/index.js';
 import {
   FORMAL_ZERO,
   addFormal,

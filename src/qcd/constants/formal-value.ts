@@ -3,9 +3,7 @@
  * Method  each symbol is an Exact (an enclosure procedure); the polynomial is evaluated in balls with guard bits.
  * Bound   the balls carry it.
  */
-import * as B from '../../numerics/ball/real.js';
-import type { Ball } from '../../numerics/ball/real.js';
-import { exact, exactReal, toNumberExact, type Exact } from '../../numerics/exact.js';
+import { R, exact, exactReal, toNumberExact, type Ball, type Exact } from '../../numerics/index.js';
 import { monomialsOf, rationalOfFormal, type Formal } from './formal.js';
 import { SYMBOLS } from './symbols.js';
 
@@ -20,11 +18,11 @@ function symbolBall(name: string, prec: number): Ball {
 
 function evaluate(a: Formal, prec: number): Ball {
   const work = prec + GUARD;
-  let sum: Ball = B.ZERO;
+  let sum: Ball = R.ZERO;
   for (const { powers, factor } of monomialsOf(a)) {
-    let term = B.fromRational(factor, work);
-    for (const [name, k] of powers) term = B.mul(term, B.powInt(symbolBall(name, work), k, work), work);
-    sum = B.add(sum, term, work);
+    let term = R.fromRational(factor, work);
+    for (const [name, k] of powers) term = R.mul(term, R.powInt(symbolBall(name, work), k, work), work);
+    sum = R.add(sum, term, work);
   }
   return sum;
 }

@@ -5,7 +5,7 @@
  * Method   a map from monomials to rational coefficients; zero coefficients are never stored.
  * Bound    exact.
  */
-import { Rational } from '../../numerics/rational.js';
+import { Rational } from '../../numerics/index.js';
 
 /** Powers of symbols, sorted by name: "nf^2*z3"; the empty string is the constant monomial. */
 type Monomial = string;
@@ -127,3 +127,18 @@ export function monomialsOf(
 ): readonly { readonly powers: ReadonlyMap<string, number>; readonly factor: Rational }[] {
   return [...a.terms].map(([m, factor]) => ({ powers: powersOf(m), factor }));
 }
+
+/** The polynomials as a ring; division only by rational numbers (RangeError otherwise: a mistake in the program). */
+export const formalRing = {
+  zero: FORMAL_ZERO,
+  one: FORMAL_ONE,
+  fromRational: formalRational,
+  add: addFormal,
+  sub: subFormal,
+  mul: mulFormal,
+  div(a: Formal, b: Formal): Formal {
+    const q = rationalOfFormal(b);
+    if (q === undefined) throw new RangeError('formalRing.div: the divisor holds symbols');
+    return scaleFormal(a, q.inv());
+  },
+};

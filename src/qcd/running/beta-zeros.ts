@@ -5,28 +5,7 @@
  *         at every number of loops, which a test checks.
  */
 
-export interface ComplexNumber {
-  readonly re: number;
-  readonly im: number;
-}
-
-const add = (a: ComplexNumber, b: ComplexNumber): ComplexNumber => ({ re: a.re + b.re, im: a.im + b.im });
-const sub = (a: ComplexNumber, b: ComplexNumber): ComplexNumber => ({ re: a.re - b.re, im: a.im - b.im });
-const mul = (a: ComplexNumber, b: ComplexNumber): ComplexNumber => ({
-  re: a.re * b.re - a.im * b.im,
-  im: a.re * b.im + a.im * b.re,
-});
-function div(a: ComplexNumber, b: ComplexNumber): ComplexNumber {
-  const n = b.re * b.re + b.im * b.im;
-  return { re: (a.re * b.re + a.im * b.im) / n, im: (a.im * b.re - a.re * b.im) / n };
-}
-
-/** Value of Σ s_k x^k. */
-export function polynomialAt(s: readonly number[], x: ComplexNumber): ComplexNumber {
-  let sum: ComplexNumber = { re: 0, im: 0 };
-  for (let k = s.length - 1; k >= 0; k--) sum = add(mul(sum, x), { re: s[k] ?? 0, im: 0 });
-  return sum;
-}
+import { cdiv, cmul, csub, polynomialAt, type ComplexNumber } from './complex-number.js';
 
 const SWEEPS = 200;
 /** Imaginary parts below this, relative to the size, are rounding: the zero is real. */
@@ -45,15 +24,15 @@ export function zerosOf(s: readonly number[]): ComplexNumber[] {
     z = z.map((zi, i) => {
       let denominator: ComplexNumber = { re: top, im: 0 };
       z.forEach((zj, j) => {
-        if (j !== i) denominator = mul(denominator, sub(zi, zj));
+        if (j !== i) denominator = cmul(denominator, csub(zi, zj));
       });
-      return sub(zi, div(polynomialAt(s, zi), denominator));
+      return csub(zi, cdiv(polynomialAt(s, zi), denominator));
     });
   }
   const slope = s.slice(1).map((c, k) => c * (k + 1));
   const polished = z.map((zi) => {
     let x = zi;
-    for (let k = 0; k < 3; k++) x = sub(x, div(polynomialAt(s, x), polynomialAt(slope, x)));
+    for (let k = 0; k < 3; k++) x = csub(x, cdiv(polynomialAt(s, x), polynomialAt(slope, x)));
     return x;
   });
   return conjugatePairs(polished);

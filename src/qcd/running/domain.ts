@@ -16,7 +16,10 @@ export function isLoops(n: number): n is Loops {
 /** Refusal for n_f outside 0…16 or a number of loops outside 1…5, undefined when both are fine. */
 export function checkTheory(flavours: number, loops: number): Refusal | undefined {
   if (!Number.isInteger(flavours)) {
-    return refuse(`n_f = ${flavours} is not an integer`, 'give the number of active flavours as an integer from 0 to 16');
+    return refuse(
+      `n_f = ${flavours} is not an integer`,
+      'give the number of active flavours as an integer from 0 to 16',
+    );
   }
   if (flavours < 0 || flavours > MAX_FLAVOURS) {
     return refuse(
@@ -25,7 +28,10 @@ export function checkTheory(flavours: number, loops: number): Refusal | undefine
     );
   }
   if (!isLoops(loops)) {
-    return refuse(`the beta function is known at 1 to ${MAX_LOOPS} loops, not ${loops}`, 'ask for 1, 2, 3, 4 or 5 loops');
+    return refuse(
+      `the beta function is known at 1 to ${MAX_LOOPS} loops, not ${loops}`,
+      'ask for 1, 2, 3, 4 or 5 loops',
+    );
   }
   return undefined;
 }

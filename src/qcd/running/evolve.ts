@@ -10,7 +10,7 @@
 import type { Loops } from '../beta-function.js';
 import type { Refusal } from '../refusal.js';
 import { LARGEST_COUPLING, belowLandau, checkCoupling, checkScale, checkTheory, isLoops } from './domain.js';
-import { bracketAt, flowOf, logOverLambda, type Flow } from './flow.js';
+import { bracketAt, flowOf, logOfInverse, logOverLambda, type Flow } from './flow.js';
 
 const MAX_STEPS = 200;
 
@@ -23,7 +23,7 @@ export function invertLog(flow: Flow, target: number, start: number): number | R
   if (!(y > low)) y = low > 0 ? low * 2 : 1;
   for (let step = 0; step < MAX_STEPS; step++) {
     const alpha = 1 / y;
-    const excess = logOverLambda(flow, alpha) - target;
+    const excess = logOfInverse(flow, y) - target;
     if (excess > 0) high = y;
     else low = y;
     const move = excess * flow.b0 * bracketAt(flow, alpha);

@@ -1,14 +1,27 @@
 /**
  * @module The solution of the truncated renormalisation-group equation in closed form, ready for evaluation in doubles.
  *
- * Method     With S(α) = 1 + (b_1/b_0)α + … = Π(1 − α/z_i), q = b_1/b_0, b_k = β_k/(4π)^(k+1), partial fractions give
- *            ln(μ²/Λ²) = (1/b_0) [1/α + q ln(b_0 α) − Σ_i A_i ln(1 − α/z_i)],  A_i = 1/(z_i² S′(z_i)),
- *            which is the exact Λ_MSbar definition; α(μ) is its inverse. No expansion anywhere.
+ * Method     With y = 1/α, S(α) = 1 + (b_1/b_0)α + … = Π(1 − α/z_i), w_i = 1/z_i, q = b_1/b_0, b_k = β_k/(4π)^(k+1),
+ *            partial fractions of the exact definition of Λ_MSbar collapse to
+ *            ln(μ²/Λ²) = (1/b_0) [y + q ln b_0 − Σ_i A_i ln(y − w_i)],  A_i = 1/(z_i² S′(z_i)),  Σ A_i = q.
+ *            The quark mass with d ln m/d ln μ² = −Σ g_k α^(k+1) follows the same way, G(α) = Σ g_k α^k:
+ *            ln m = const + (1/b_0) [Σ_i B_i ln((y − w_i)/y) − g_0 ln y],  B_i = G(z_i)/(z_i S′(z_i)).
+ *            No expansion anywhere.
  * Bound      a few units of 2^-53 of ln(μ²/Λ²).
  * Reference  definition of Λ: FLAG Review 2024, arXiv:2411.04268, Eq. (285); Bardeen, Buras, Duke, Muta 1978.
  */
-import { betaNumbers, type Loops } from '../beta-function.js';
-import { polynomialAt, zerosOf, type ComplexNumber } from './beta-zeros.js';
+import { betaNumbers, massDimensionNumbers, type Loops } from '../beta-function.js';
+import { zerosOf } from './beta-zeros.js';
+import { cdiv, cmul, polynomialAt, type ComplexNumber } from './complex-number.js';
+
+export interface FlowPole {
+  /** w = 1/z, z a zero of S. */
+  readonly w: ComplexNumber;
+  /** A: weight of ln(y − w) in the coupling. */
+  readonly coupling: ComplexNumber;
+  /** B: weight of ln((y − w)/y) in the mass. */
+  readonly mass: ComplexNumber;
+}
 
 export interface Flow {
   readonly flavours: number;
@@ -17,9 +30,11 @@ export interface Flow {
   readonly b0: number;
   /** Coefficients of S, ascending, s_0 = 1. */
   readonly s: readonly number[];
-  readonly zeros: readonly ComplexNumber[];
-  /** A_i belonging to the zeros. */
-  readonly residues: readonly ComplexNumber[];
+  /** g_0 of the mass anomalous dimension. */
+  readonly g0: number;
+  readonly poles: readonly FlowPole[];
+  /** q ln b_0. */
+  readonly constant: number;
   /** Smallest positive zero of S (an infrared fixed point that α never passes), Infinity when there is none. */
   readonly fixedPoint: number;
   /** ln(μ²/Λ²) at which α becomes infinite; -Infinity with a fixed point, where α exists at every scale. */
@@ -41,38 +56,24 @@ export function flowOf(flavours: number, loops: Loops): Flow {
 
 function createFlow(flavours: number, loops: Loops): Flow {
   const b = betaNumbers(flavours, loops, '1');
+  const g = massDimensionNumbers(flavours, loops, '1');
   const b0 = b[0] ?? NaN;
   const s = b.map((x) => x / b0);
-  const zeros = zerosOf(s);
   const slope = s.slice(1).map((c, k) => c * (k + 1));
-  const residues = zeros.map((z) => {
+  const one = { re: 1, im: 0 };
+  const poles = zerosOf(s).map((z): FlowPole => {
     const d = polynomialAt(slope, z);
-    const square = { re: z.re * z.re - z.im * z.im, im: 2 * z.re * z.im };
-    const p = { re: square.re * d.re - square.im * d.im, im: square.re * d.im + square.im * d.re };
-    const n = p.re * p.re + p.im * p.im;
-    return { re: p.re / n, im: -p.im / n };
+    return {
+      w: cdiv(one, z),
+      coupling: cdiv(one, cmul(cmul(z, z), d)),
+      mass: cdiv(polynomialAt(g, z), cmul(z, d)),
+    };
   });
-  const fixedPoint = Math.min(Infinity, ...zeros.filter((z) => z.im === 0 && z.re > 0).map((z) => z.re));
-  return {
-    flavours, loops, b0, s, zeros, residues, fixedPoint,
-    landauLog: fixedPoint < Infinity ? -Infinity : landauLog(b0, s, zeros, residues),
-  };
-}
-
-/** Limit α → ∞ of the closed form: q ln(b_0 α) and Σ A_i ln α cancel, since Σ A_i = q. */
-function landauLog(
-  b0: number,
-  s: readonly number[],
-  zeros: readonly ComplexNumber[],
-  residues: readonly ComplexNumber[],
-): number {
-  let sum = (s[1] ?? 0) * Math.log(b0);
-  zeros.forEach((z, i) => {
-    const a = residues[i] ?? { re: 0, im: 0 };
-    // ln(−α/z) for large α, real part of A ln(−1/z).
-    sum -= -a.re * Math.log(Math.hypot(z.re, z.im)) - a.im * Math.atan2(z.im, -z.re);
-  });
-  return sum / b0;
+  const positive = poles.filter(({ w }) => w.im === 0 && w.re > 0).map(({ w }) => w.re);
+  const fixedPoint = positive.length > 0 ? 1 / Math.max(...positive) : Infinity;
+  const constant = (s[1] ?? 0) * Math.log(b0);
+  const flow = { flavours, loops, b0, s, g0: g[0] ?? NaN, poles, constant, fixedPoint, landauLog: -Infinity };
+  return fixedPoint < Infinity ? flow : { ...flow, landauLog: logOfInverse(flow, 0) };
 }
 
 /** S(α) on the real axis. */
@@ -82,22 +83,29 @@ export function bracketAt(flow: Flow, alpha: number): number {
   return sum;
 }
 
+/** ln(μ²/Λ²) as a function of y = 1/α > 1/fixedPoint. */
+export function logOfInverse(flow: Flow, y: number): number {
+  let sum = y + flow.constant;
+  for (const { w, coupling } of flow.poles) {
+    const d = y - w.re;
+    if (w.im === 0) sum -= coupling.re * Math.log(d);
+    // The pair w, w̄ contributes twice the real part of A ln(y − w).
+    else if (w.im > 0) sum -= coupling.re * Math.log(d * d + w.im * w.im) - 2 * coupling.im * Math.atan2(-w.im, d);
+  }
+  return sum / flow.b0;
+}
+
 /** ln(μ²/Λ²) for 0 < α < fixedPoint: the exact definition of Λ_MSbar at the loop order of the flow. */
-export function logOverLambda(flow: Flow, alpha: number): number {
-  let sum = 1 / alpha + (flow.s[1] ?? 0) * Math.log(flow.b0 * alpha);
-  for (let i = 0; i < flow.zeros.length; i++) {
-    const z = flow.zeros[i];
-    const a = flow.residues[i];
-    if (z === undefined || a === undefined) continue;
-    if (z.im === 0) {
-      sum -= a.re * Math.log1p(-alpha / z.re);
-    } else if (z.im > 0) {
-      // The pair z, z̄ contributes twice the real part of A ln(1 − α/z).
-      const n = z.re * z.re + z.im * z.im;
-      const re = (-alpha * z.re) / n;
-      const im = (alpha * z.im) / n;
-      sum -= a.re * Math.log1p(re * (2 + re) + im * im) - 2 * a.im * Math.atan2(im, 1 + re);
-    }
+export const logOverLambda = (flow: Flow, alpha: number): number => logOfInverse(flow, 1 / alpha);
+
+/** Σ_i B_i ln((y − w_i)/y)/b_0 = Σ_i B_i ln(1 − α/z_i)/b_0: the mass beyond its one-loop power of α. */
+export function massLogBeyondOneLoop(flow: Flow, alpha: number): number {
+  let sum = 0;
+  for (const { w, mass } of flow.poles) {
+    const re = -alpha * w.re;
+    const im = -alpha * w.im;
+    if (w.im === 0) sum += mass.re * Math.log1p(re);
+    else if (w.im > 0) sum += mass.re * Math.log1p(re * (2 + re) + im * im) - 2 * mass.im * Math.atan2(im, 1 + re);
   }
   return sum / flow.b0;
 }

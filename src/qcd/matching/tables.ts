@@ -1,0 +1,102 @@
+/** @module Decoupling tables for a given number of light flavours: in doubles, exactly, or with every symbol kept. */
+import { Rational, doubleField, type Exact } from '../../numerics/index.js';
+import { liftExact, type Ring } from '../algebra/ring.js';
+import {
+  BETA,
+  DECOUPLING_ALPHA,
+  DECOUPLING_MASS,
+  MASS_DIMENSION,
+  POLE_OVER_MSBAR,
+  addFormal,
+  exactOfFormal,
+  formalOf,
+  formalRational,
+  formalRing,
+  formalSymbol,
+  numberOfFormal,
+  scaleFormal,
+  substituteFormal,
+  type Formal,
+  type PublishedConstant,
+} from '../constants/index.js';
+import { MATCHING_ORDER, matchingTable, type HeavyMass, type MatchingConstants, type MatchingTable } from './logs.js';
+
+export type MatchedQuantity = 'coupling' | 'mass';
+
+const LIST_LENGTH = 5;
+
+/** The ingredients as exact polynomials, nl a number or the symbol itself. */
+function ingredients(nl: Formal): MatchingConstants<Formal> {
+  const heavy = addFormal(nl, formalRational(Rational.ONE));
+  const inPi = (list: readonly PublishedConstant[], nf: Formal): Formal[] =>
+    list.map((c, k) => scaleFormal(substituteFormal(formalOf(c), { nf }), Rational.of(1, 4 ** (k + 1))));
+  const oneAnd = (list: readonly PublishedConstant[]): Formal[] => [
+    formalRing.one,
+    ...list.map((c) => substituteFormal(formalOf(c), { nl })),
+  ];
+  return {
+    betaHeavy: inPi(BETA, heavy),
+    betaLight: inPi(BETA, nl),
+    gammaHeavy: inPi(MASS_DIMENSION, heavy),
+    gammaLight: inPi(MASS_DIMENSION, nl),
+    coupling: oneAnd(DECOUPLING_ALPHA),
+    mass: oneAnd(DECOUPLING_MASS),
+    pole: oneAnd(POLE_OVER_MSBAR),
+  };
+}
+
+const NAMES = ['betaHeavy', 'betaLight', 'gammaHeavy', 'gammaLight', 'coupling', 'mass', 'pole'] as const;
+
+function mapped<T>(from: MatchingConstants<Formal>, f: (x: Formal) => T): MatchingConstants<T> {
+  const list = (name: (typeof NAMES)[number]): T[] => from[name].map(f);
+  return {
+    betaHeavy: list('betaHeavy'),
+    betaLight: list('betaLight'),
+    gammaHeavy: list('gammaHeavy'),
+    gammaLight: list('gammaLight'),
+    coupling: list('coupling'),
+    mass: list('mass'),
+    pole: list('pole'),
+  };
+}
+
+/** The table with nl, l and the constants as symbols: for comparison with the published forms. */
+export const formalTable = (quantity: MatchedQuantity, mass: HeavyMass): MatchingTable<Formal> =>
+  matchingTable(formalRing, ingredients(formalSymbol('nl')), quantity, mass);
+
+const doubles = new Map<string, MatchingTable<number>>();
+
+/** The table in doubles, computed once for each nl. */
+export function doubleTable(nl: number, quantity: MatchedQuantity, mass: HeavyMass): MatchingTable<number> {
+  const key = `${nl} ${quantity} ${mass}`;
+  let table = doubles.get(key);
+  if (table === undefined) {
+    const constants = mapped(ingredients(formalRational(Rational.of(nl))), numberOfFormal);
+    table = matchingTable(doubleField, constants, quantity, mass);
+    doubles.set(key, table);
+  }
+  return table;
+}
+
+/** The table in exact numbers: rational entries stay rational. */
+export function exactTable(nl: number, quantity: MatchedQuantity, mass: HeavyMass): MatchingTable<Exact> {
+  const formal = ingredients(formalRational(Rational.of(nl)));
+  const inputs = NAMES.flatMap((name) => formal[name].map(exactOfFormal));
+  // Row k has at most k + 1 powers of l; the flat list keeps the shape whatever the ring.
+  const flat = liftExact(inputs, <T>(ring: Ring<T>, x: readonly T[]): T[] => {
+    const list = (i: number): readonly T[] => x.slice(i * LIST_LENGTH, (i + 1) * LIST_LENGTH);
+    const constants = {
+      betaHeavy: list(0),
+      betaLight: list(1),
+      gammaHeavy: list(2),
+      gammaLight: list(3),
+      coupling: list(4),
+      mass: list(5),
+      pole: list(6),
+    };
+    const table = matchingTable(ring, constants, quantity, mass);
+    return table.flatMap((row, k) => Array.from({ length: k + 1 }, (_, j) => row[j] ?? ring.zero));
+  });
+  let at = 0;
+  return Array.from({ length: MATCHING_ORDER + 1 }, (_, k) => flat.slice(at, (at += k + 1)));
+}
