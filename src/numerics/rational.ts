@@ -12,6 +12,14 @@ export const PARSE_LIMITS = { digits: 20_000, exponent: 20_000 } as const;
 
 const DECIMAL = /^([+-]?)(\d*)(?:\.(\d*))?(?:[eE]([+-]?\d+))?$/;
 
+/** n without its factors p, at most `most` of them, and how many were removed; squaring p keeps the steps few. */
+function withoutFactor(n: bigint, p: bigint, most: number): [rest: bigint, removed: number] {
+  if (most <= 0 || n % p !== 0n) return [n, 0];
+  const [rest, squares] = withoutFactor(n / p, p * p, Math.floor((most - 1) / 2));
+  const removed = 1 + 2 * squares;
+  return removed < most && rest % p === 0n ? [rest / p, removed + 1] : [rest, removed];
+}
+
 export class Rational {
   readonly num: bigint;
   readonly den: bigint;
