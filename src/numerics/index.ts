@@ -7,3 +7,16 @@ export * as R from './ball/real.js';
 export * as C from './ball/complex.js';
 export type { Field } from './field.js';
 export { rationalField, doubleField, ballField } from './field.js';
+export type { Decimal, Tie } from './decimal/decimal.js';
+export {
+  leadingPlace,
+  parseDecimal,
+  roundToDigits,
+  roundToPlace,
+  shorten,
+  writeDecimal,
+  writePlain,
+  writeScientific,
+} from './decimal/decimal.js';
+export type { ErrorText, RoundedError, RoundedValue } from './decimal/pdg.js';
+export { pdgPlace, roundPdg, writeParentheses, writePlusMinus } from './decimal/pdg.js';

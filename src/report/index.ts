@@ -1,10 +1,7 @@
-export type { Decimal } from './decimal.js';
-export { parseDecimal, roundToDigits, roundToPlace, shorten, writeDecimal } from './decimal.js';
-export type { AssessmentKey } from './json.js';
-export { assessmentJson, plainJson } from './json.js';
+/** @module The public face of the report room: plain results in, text out. */
+export { catalogueText, plainSeries, seriesText } from './catalogue.js';
+export { plainJson, resultJson } from './json.js';
 export type { Paint, Tone } from './layout/paint.js';
 export { painter, unpainted } from './layout/paint.js';
-export type { ErrorText, RoundedError, RoundedValue } from './pdg.js';
-export { roundPdg, writeParentheses, writePlusMinus } from './pdg.js';
 export type { TerminalOptions } from './terminal.js';
-export { assessmentText, bareValues, growthText, planeText, sumText } from './terminal.js';
+export { assessmentText, bareValues, growthText, planeLines, planeText, sumText } from './terminal.js';

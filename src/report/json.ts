@@ -18,15 +18,10 @@ const KEYS = [
   'cautions',
 ] as const satisfies readonly (keyof Assessment)[];
 
-export type AssessmentKey = (typeof KEYS)[number];
+/** Any plain object, such as the list of the catalogue. */
+export const plainJson = (value: object): string => `${JSON.stringify(value, null, 2)}\n`;
 
-const write = (value: object): string => `${JSON.stringify(value, null, 2)}\n`;
-
-/** The whole assessment, or the named sections of it, always with version, request and series. */
-export function assessmentJson(assessment: Assessment, sections?: readonly AssessmentKey[]): string {
-  const wanted = sections === undefined ? KEYS : KEYS.filter((key, i) => i < 3 || sections.includes(key));
-  return write(Object.fromEntries(wanted.map((key) => [key, assessment[key]])));
+/** An assessment, or the part of one that a study returns. */
+export function resultJson(result: Partial<Assessment>): string {
+  return plainJson(Object.fromEntries(KEYS.filter((key) => key in result).map((key) => [key, result[key]])));
 }
-
-/** Any other plain object, such as the list of the catalogue. */
-export const plainJson = write;

@@ -6,7 +6,8 @@ import { unpainted } from './layout/paint.js';
 import { ambiguitySection } from './sections/ambiguity.js';
 import { growthSection } from './sections/growth.js';
 import { planeSection } from './sections/plane.js';
-import { readSection } from './sections/read.js';
+import { couplingFacts, readSection } from './sections/read.js';
+import { sumSection } from './sections/sum.js';
 import { termsSection } from './sections/terms.js';
 import { truncationSection } from './sections/truncation.js';
 import { valuesSection } from './sections/values.js';
@@ -66,13 +67,24 @@ export function sumText(
   options: TerminalOptions = {},
 ): string {
   const page = open(assessment, options);
-  readSection(page, assessment);
-  valuesSection(page, assessment.values);
+  page.blank();
+  page.facts(couplingFacts(assessment.series, assessment.coupling));
+  sumSection(page, assessment.values);
   cautionPoints(page, assessment.cautions);
   return page.text();
 }
 
-/** The bare values, one a line, for scripts. */
+/** The bare values, one a line, for scripts: those that the families choose themselves, or all where none does. */
 export function bareValues(values: readonly ValueEntry[]): string {
-  return values.flatMap((entry) => (entry.value === undefined ? [] : [`${entry.value}\n`])).join('');
+  const chosen = values.filter((entry) => entry.central === true);
+  return (chosen.length > 0 ? chosen : values)
+    .flatMap((entry) => (entry.value === undefined ? [] : [`${entry.value}\n`]))
+    .join('');
+}
+
+/** The bare poles, one a line: entry, real part, imaginary part, set off by tabs. */
+export function planeLines(plane: Assessment['borelPlane']): string {
+  return plane.entries
+    .flatMap((entry) => entry.poles.map((pole) => `${entry.label}\t${pole.re}\t${pole.im ?? '0'}\n`))
+    .join('');
 }

@@ -7,6 +7,7 @@ const PRESCRIPTIONS = new Map([
   ['pade', 'Padé in the coupling'],
   ['borel-pade', 'Borel–Padé, principal value'],
   ['borel-leroy-pade', 'Borel–Leroy–Padé, principal value'],
+  ['borel-pade-2', 'Borel–Padé of order two, principal value'],
   ['singularity-model', 'Singularity model'],
 ]);
 
@@ -17,3 +18,10 @@ export function prescriptionTitle(name: string): string {
 
 /** Names from files and results keep their letters; only pi gets its sign. */
 export const withPi = (text: string): string => text.replaceAll(/\bpi\b/g, 'π');
+
+/** "alpha_s/π", "a/(4π)". */
+export function over(name: string, divisor: string): string {
+  if (divisor === '1') return name;
+  const sign = withPi(divisor).replace('*', '');
+  return `${name}/${sign.length > 1 ? `(${sign})` : sign}`;
+}

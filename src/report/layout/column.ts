@@ -18,8 +18,12 @@ export interface SetColumn {
   readonly width: number;
 }
 
-/** Words are not folded into less than this. A habit of typography. */
-const NARROWEST = 11;
+/** Words are not folded into less than this, nor torn. A habit of typography. */
+const NARROWEST = 8;
+
+/** The longest piece that folding leaves whole. */
+const longestWord = (texts: readonly string[]): number =>
+  Math.max(0, ...texts.flatMap((text) => fold(text, 1_000_000)[0]?.split(' ') ?? []).map(width));
 
 const NUMBER = /^[±+-]?\s?\d/;
 
@@ -50,8 +54,7 @@ export function alignColumn(column: Column, texts: readonly string[]): SetColumn
 
 function withFoldedHead(set: SetColumn): SetColumn {
   const body = Math.max(0, ...set.cells.map(width));
-  const longestWord = Math.max(0, ...set.column.head.split(' ').map(width));
-  const columns = Math.max(body, longestWord);
+  const columns = Math.max(body, longestWord([set.column.head]));
   return columns >= set.width ? set : { ...set, head: fold(set.column.head, columns), width: columns };
 }
 
@@ -72,12 +75,16 @@ export function narrowed(columns: readonly SetColumn[], room: number): SetColumn
   for (;;) {
     const over = excess(sets);
     if (over <= 0) return sets;
-    const words = sets.filter((set) => set.column.align === 'left' && set.width > NARROWEST);
-    const widest = words.toSorted((a, b) => b.width - a.width)[0];
-    if (widest === undefined) return sets;
+    const words = sets
+      .map((set) => ({ set, least: Math.max(NARROWEST, longestWord([set.column.head, ...set.cells])) }))
+      .filter(({ set, least }) => set.column.align === 'left' && set.width > least)
+      .toSorted((a, b) => b.set.width - a.set.width);
+    const [first, second] = words;
+    if (first === undefined) return sets;
     // No further than the next widest: then the two share what is left.
-    const next = words.toSorted((a, b) => b.width - a.width)[1]?.width ?? NARROWEST;
-    const target = Math.max(NARROWEST, widest.width - over, Math.min(next, widest.width - 1));
+    const widest = first.set;
+    const shared = Math.min(second?.set.width ?? 0, widest.width - 1);
+    const target = Math.max(first.least, widest.width - over, shared);
     sets = sets.map((set) => (set === widest ? withFoldedWords(set, target) : set));
   }
 }

@@ -1,6 +1,12 @@
 /** @module How single numbers look in a report. The digits are those of the result, fewer of them at times. */
-import { parseDecimal, roundToDigits, shorten, writeDecimal } from '../decimal.js';
-import { roundPdg, writeParentheses } from '../pdg.js';
+import {
+  parseDecimal,
+  roundPdg,
+  roundToDigits,
+  shorten,
+  writeDecimal,
+  writeParentheses,
+} from '../../numerics/index.js';
 
 /** Errors are shown to two digits: more would pretend to know the error of the error. */
 const ERROR_DIGITS = 2;
@@ -8,12 +14,13 @@ const ERROR_DIGITS = 2;
 /** An error or any other size that is read for its magnitude, without sign word. */
 export const rough = (text: string): string => shorten(text, ERROR_DIGITS, 'half-up');
 
-/** "± 0.0012"; empty for an absent one. */
-export const plusMinus = (text: string | undefined): string => {
+/** "± 0.0012", or "+0.03 -0.02" as it stands; empty for an absent error. */
+export function plusMinus(text: string | undefined): string {
   if (text === undefined) return '';
   const d = parseDecimal(text);
-  return d !== undefined && d.coefficient === 0n ? '0' : `± ${rough(text).replace(/^-/, '')}`;
-};
+  if (d === undefined) return text;
+  return d.coefficient === 0n ? '0' : `± ${rough(text).replace(/^-/, '')}`;
+}
 
 /** "277(51)" with an error, "49.075700" without: at most `digits` digits. */
 export function withError(value: string, error: string | undefined, digits: number): string {

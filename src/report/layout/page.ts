@@ -67,7 +67,7 @@ export class Page {
     for (const { label, text, tone = 'plain' } of facts) {
       fold(text, this.width - INDENT - column - 3).forEach((line, i) => {
         const left = this.paint(padEnd(i === 0 ? label : '', column), 'faint');
-        this.lines.push(`${' '.repeat(INDENT)}${left}   ${this.paint(line, tone)}`.trimEnd());
+        this.lines.push(`${' '.repeat(INDENT)}${left}   ${this.paint(line, tone)}`);
       });
     }
   }

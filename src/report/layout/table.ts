@@ -63,8 +63,11 @@ export function table(
   const between = ' '.repeat(gap);
   const draw = (texts: readonly (readonly string[])[], tone: Tone | undefined): string[] =>
     rowLines(texts, set).map((cells) => {
-      if (tone !== undefined) return margin + paint(cells.join(between).trimEnd(), tone);
-      return (margin + cells.map((cell, j) => paint(cell, set[j]?.column.tone ?? 'plain')).join(between)).trimEnd();
+      // Nothing is painted behind the last word: blanks at the end of a line are noise.
+      const last = cells.findLastIndex((cell) => cell.trim() !== '');
+      const kept = cells.slice(0, last + 1).map((cell, j) => (j === last ? cell.trimEnd() : cell));
+      if (tone !== undefined) return margin + paint(kept.join(between), tone);
+      return margin + kept.map((cell, j) => paint(cell, set[j]?.column.tone ?? 'plain')).join(between);
     });
   const drawNote = ({ note, indent: more = 0, tone = 'plain' }: TableNote): string[] =>
     fold(note, room - more).map((text) => margin + ' '.repeat(more) + paint(text, tone));

@@ -1,6 +1,6 @@
 /** @module Section 6: the renormalon ambiguity under its named conventions, and the power correction it stands for. */
 import type { AmbiguityReport, Assessment, PowerCorrectionReport } from '../../studies/index.js';
-import { shorten } from '../decimal.js';
+import { shorten } from '../../numerics/index.js';
 import { percent, rough } from '../layout/figures.js';
 import type { Fact, Page } from '../layout/page.js';
 import type { TableNote, TableRow } from '../layout/table.js';

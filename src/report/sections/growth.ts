@@ -1,6 +1,6 @@
 /** @module Section 3: how the coefficients grow, on what evidence, and where the nearest Borel singularity sits. */
 import type { ExpectedSingularity, GrowthReport, SingularityReport } from '../../studies/index.js';
-import { shorten } from '../decimal.js';
+import { shorten } from '../../numerics/index.js';
 import { percent, plusMinus, withError } from '../layout/figures.js';
 import type { Fact, Page } from '../layout/page.js';
 import type { TableRow } from '../layout/table.js';

@@ -1,6 +1,6 @@
 /** @module Section 4: what the Padé approximants see in the Borel plane. */
 import type { BorelPlaneReport, PadeEntry, PoleReport } from '../../studies/index.js';
-import { parseDecimal } from '../decimal.js';
+import { parseDecimal } from '../../numerics/index.js';
 import { complex } from '../layout/figures.js';
 import type { Page } from '../layout/page.js';
 import type { TableNote, TableRow } from '../layout/table.js';

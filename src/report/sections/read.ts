@@ -1,16 +1,9 @@
 /** @module Section 1: what was read. */
 import type { Assessment, CouplingSummary, SeriesSummary } from '../../studies/index.js';
-import { shorten } from '../decimal.js';
+import { shorten } from '../../numerics/index.js';
 import { plusMinus } from '../layout/figures.js';
 import type { Fact, Page } from '../layout/page.js';
-import { withPi } from '../words.js';
-
-/** "alpha_s/π", "a/(4π)". */
-function over(name: string, divisor: string): string {
-  if (divisor === '1') return name;
-  const sign = withPi(divisor).replace('*', '');
-  return `${name}/${sign.length > 1 ? `(${sign})` : sign}`;
-}
+import { over } from '../words.js';
 
 const plural = (n: number, one: string, many = `${one}s`): string => `${n} ${n === 1 ? one : many}`;
 
@@ -64,7 +57,8 @@ export function seriesFacts(series: SeriesSummary): Fact[] {
   return facts.filter((fact) => fact.text !== '');
 }
 
-function couplingFacts(series: SeriesSummary, coupling: CouplingSummary): Fact[] {
+/** The coupling, Λ and the Borel variable. */
+export function couplingFacts(series: SeriesSummary, coupling: CouplingSummary): Fact[] {
   const facts: Fact[] = [{ label: 'coupling', text: couplingFact(series, coupling) }];
   if (coupling.lambda !== undefined) {
     const inGeV = coupling.lambda.GeV === undefined ? '' : ` = ${shorten(coupling.lambda.GeV, 4)} GeV`;

@@ -1,6 +1,6 @@
 /** @module Section 2: the terms, order by order, with the least one marked. */
 import type { Assessment, TermRow } from '../../studies/index.js';
-import { shorten } from '../decimal.js';
+import { shorten } from '../../numerics/index.js';
 import { withError } from '../layout/figures.js';
 import type { Page } from '../layout/page.js';
 import type { TableNote, TableRow } from '../layout/table.js';

@@ -1,6 +1,6 @@
 /** @module Section 7: where to stop, seen and predicted, and what stopping there costs. */
 import type { OptimalTruncationReport } from '../../studies/index.js';
-import { shorten } from '../decimal.js';
+import { shorten } from '../../numerics/index.js';
 import { plusMinus } from '../layout/figures.js';
 import type { Fact, Page } from '../layout/page.js';
 

@@ -1,6 +1,6 @@
 /** @module Section 5: one value a prescription, or the reason why there is none. */
 import type { Standing, ValueEntry } from '../../studies/index.js';
-import { shorten } from '../decimal.js';
+import { shorten } from '../../numerics/index.js';
 import { plusMinus } from '../layout/figures.js';
 import type { Page } from '../layout/page.js';
 import type { TableNote, TableRow } from '../layout/table.js';

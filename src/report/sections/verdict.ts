@@ -1,13 +1,19 @@
 /** @module Section 8: the verdict, the rule that made it, and the cautions that go with it. */
 import type { Caution, VerdictReport } from '../../studies/index.js';
-import { shorten } from '../decimal.js';
+import { shorten } from '../../numerics/index.js';
 import { plusMinus } from '../layout/figures.js';
 import type { Fact, Page } from '../layout/page.js';
 import { prescriptionTitle } from '../words.js';
 
+/** "borel-pade: [2/2]" in words. */
+function origin(prescription: string): string {
+  const [name = '', ...variant] = prescription.split(': ');
+  return [prescriptionTitle(name), ...variant].join(', ');
+}
+
 function parts(verdict: VerdictReport, digits: number): Fact[] {
   const facts: Fact[] = [];
-  if (verdict.prescription !== undefined) facts.push({ label: 'from', text: prescriptionTitle(verdict.prescription) });
+  if (verdict.prescription !== undefined) facts.push({ label: 'from', text: origin(verdict.prescription) });
   if (verdict.value !== undefined) facts.push({ label: 'value', text: shorten(verdict.value, digits) });
   if (verdict.truncation !== undefined) facts.push({ label: 'truncation', text: plusMinus(verdict.truncation) });
   if (verdict.ambiguity !== undefined) facts.push({ label: 'ambiguity', text: plusMinus(verdict.ambiguity) });

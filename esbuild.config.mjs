@@ -1,0 +1,55 @@
+/**
+ * Builds dist/: the program and the library as ESM, everything they need inside, rooms in chunks that are loaded when a
+ * command first needs them. `node esbuild.config.mjs [folder]` builds elsewhere.
+ */
+import { build } from 'esbuild';
+import { chmod, readFile, rm, writeFile } from 'node:fs/promises';
+import { join } from 'node:path';
+import { fileURLToPath, pathToFileURL } from 'node:url';
+
+const root = fileURLToPath(new URL('.', import.meta.url));
+
+/** Licence texts of the packages that the bundle holds: their licences ask for it. */
+async function notices(metafile) {
+  const packages = new Set();
+  for (const input of Object.keys(metafile.inputs)) {
+    const match = /^node_modules\/((?:@[^/]+\/)?[^/]+)\//.exec(input);
+    if (match !== null) packages.add(match[1]);
+  }
+  const parts = [];
+  for (const name of [...packages].sort()) {
+    const folder = join(root, 'node_modules', name);
+    const { version, license } = JSON.parse(await readFile(join(folder, 'package.json'), 'utf8'));
+    let text = '';
+    for (const file of ['LICENSE', 'LICENSE.md', 'LICENSE.txt', 'license', 'LICENCE.md', 'LICENSE-MIT.txt']) {
+      text ||= await readFile(join(folder, file), 'utf8').catch(() => '');
+    }
+    parts.push(`${name} ${version} (${license})\n\n${text.trim()}\n`);
+  }
+  return `Leastterm's bundle holds the following packages.\n\n${parts.join(`\n${'-'.repeat(80)}\n\n`)}`;
+}
+
+export async function bundle(outdir) {
+  await rm(outdir, { recursive: true, force: true });
+  const { metafile } = await build({
+    absWorkingDir: root,
+    entryPoints: { leastterm: 'src/cli/leastterm.ts', index: 'src/index.ts' },
+    outdir,
+    bundle: true,
+    splitting: true,
+    format: 'esm',
+    platform: 'node',
+    target: 'node20',
+    chunkNames: 'chunks/[name]-[hash]',
+    legalComments: 'none',
+    metafile: true,
+    logLevel: 'warning',
+  });
+  await writeFile(join(outdir, 'THIRD-PARTY-LICENSES.txt'), await notices(metafile));
+  await chmod(join(outdir, 'leastterm.js'), 0o755);
+  return metafile;
+}
+
+if (import.meta.url === pathToFileURL(process.argv[1] ?? '').href) {
+  await bundle(process.argv[2] ?? join(root, 'dist'));
+}

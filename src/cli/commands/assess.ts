@@ -1,0 +1,41 @@
+/** @module leastterm assess: the whole report on one series at one coupling. */
+import type { Call, Command } from '../command.js';
+import { EXIT } from '../faults.js';
+import { neededCoupling, readSeries, requestOf, USUAL_DIGITS } from '../input.js';
+import { deliver } from '../output.js';
+import { presentation } from '../present.js';
+
+async function run(call: Call): Promise<number> {
+  const [name = ''] = call.operands;
+  const { given } = call;
+  const at = await neededCoupling(call, assess.name);
+  const series = await readSeries(name, call);
+  const studies = await import('../../studies/index.js');
+  const report = await import('../../report/index.js');
+  const result = studies.assess(series, at, {
+    ...(given.order === undefined ? {} : { order: given.order }),
+    digits: given.digits ?? USUAL_DIGITS,
+    request: requestOf(assess.name, name, call),
+  });
+  if (given.json) deliver(report.resultJson(result), call);
+  else if (given.quiet) deliver(`${result.verdict.printed}\n`, call);
+  else deliver(report.assessmentText(result, await presentation(call)), call);
+  return result.values.every((entry) => entry.refused !== undefined) ? EXIT.allRefused : EXIT.done;
+}
+
+export const assess: Command = {
+  name: 'assess',
+  summary: 'the whole report: terms, growth, values, ambiguity, verdict',
+  about: [
+    'Reads a series and assesses it at one value of its coupling: what was read, the terms with the least one marked, the growth of the coefficients, the Borel plane, one value a prescription or the reason why there is none, the renormalon ambiguity, where to stop, and a verdict with its cautions.',
+    'Shells read parentheses themselves: put a value such as 0.3156(30) in quotes, or write 0.3156+-0.0030.',
+  ],
+  operands: [{ name: 'SERIES', help: 'a catalogue id, a series file, or - for standard input' }],
+  options: ['at', 'order', 'flavours', 'digits', 'json', 'output', 'quiet', 'no-color', 'help'],
+  examples: [
+    ["leastterm assess adler --at '0.3156(30)'", 'the Adler function of the catalogue at alpha_s = 0.3156 +- 0.0030'],
+    ['leastterm assess mine.yaml --at 0.25 --json -o mine.json', 'the same of your own file, as JSON, into a file'],
+    ['leastterm assess - --at 0.1 < list.txt', 'a bare list of coefficients from standard input'],
+  ],
+  run,
+};

@@ -1,0 +1,38 @@
+/** @module leastterm growth: how the coefficients grow, without a coupling. */
+import type { Call, Command } from '../command.js';
+import { EXIT } from '../faults.js';
+import { readCoupling, readSeries, requestOf, USUAL_DIGITS } from '../input.js';
+import { deliver } from '../output.js';
+import { presentation } from '../present.js';
+
+async function run(call: Call): Promise<number> {
+  const [name = ''] = call.operands;
+  if (call.given.at !== undefined) await readCoupling(call.given.at, growth.name);
+  const series = await readSeries(name, call);
+  const studies = await import('../../studies/index.js');
+  const result = studies.growthStudy(series, {
+    ...(call.given.order === undefined ? {} : { order: call.given.order }),
+    digits: call.given.digits ?? USUAL_DIGITS,
+    request: requestOf(growth.name, name, call),
+  });
+  const report = await import('../../report/index.js');
+  if (call.given.json) deliver(report.resultJson(result), call);
+  else if (call.given.quiet) deliver(`${result.growth.verdict}\n`, call);
+  else deliver(report.growthText(result, await presentation(call)), call);
+  return EXIT.done;
+}
+
+export const growth: Command = {
+  name: 'growth',
+  summary: 'do the coefficients grow factorially, and what says so',
+  about: [
+    'Tells factorial from geometric growth, or that these terms cannot tell, with the evidence: ratios and their extrapolants, model comparison, prediction of the last known coefficients from the ones before. Gives the nearest Borel singularity beside what the file or the operator product expansion expects. With --quiet only the one word: factorial, geometric, undecided and so on.',
+  ],
+  operands: [{ name: 'SERIES', help: 'a catalogue id, a series file, or - for standard input' }],
+  options: ['at', 'order', 'flavours', 'digits', 'json', 'output', 'quiet', 'no-color', 'help'],
+  examples: [
+    ['leastterm growth adler', 'the Adler function of the catalogue'],
+    ['leastterm growth mine.yaml --order 4', 'only its first four coefficients'],
+  ],
+  run,
+};

@@ -1,0 +1,68 @@
+/** @module leastterm sum: one prescription, as many digits as are wanted. */
+import { suggestion } from '../../series/index.js';
+import type { Call, Command } from '../command.js';
+import { EXIT, UsageError } from '../faults.js';
+import { neededCoupling, readSeries, requestOf, USUAL_DIGITS } from '../input.js';
+import { deliver } from '../output.js';
+import { presentation } from '../present.js';
+
+/** The prescription that --by names; a usage error with the known names otherwise. */
+async function prescriptionOf(by: string | undefined): Promise<string> {
+  const { PRESCRIPTIONS } = await import('../../prescriptions/index.js');
+  const names = PRESCRIPTIONS.map((p) => p.name);
+  if (by !== undefined && names.includes(by)) return by;
+  const known = `one of ${names.join(', ')}`;
+  if (by === undefined) throw new UsageError(`--by is missing: ${known}`, sum.name);
+  throw new UsageError(`--by: no prescription "${by}"${suggestion(by, names)}; wanted ${known}`, sum.name);
+}
+
+const plain = (variant: string): string => variant.replaceAll(' ', '').toLowerCase();
+
+async function run(call: Call): Promise<number> {
+  const [name = ''] = call.operands;
+  const { given } = call;
+  const by = await prescriptionOf(given.by);
+  const at = await neededCoupling(call, sum.name);
+  const series = await readSeries(name, call);
+  const studies = await import('../../studies/index.js');
+  const report = await import('../../report/index.js');
+  const result = studies.sumStudy(series, at, {
+    ...(given.order === undefined ? {} : { order: given.order }),
+    digits: given.digits ?? USUAL_DIGITS,
+    by: [by],
+    request: requestOf(sum.name, name, call),
+  });
+  const { variant } = given;
+  const values = result.values.filter((entry) => variant === undefined || plain(entry.variant) === plain(variant));
+  if (values.length === 0 && variant !== undefined) {
+    const known = result.values.map((entry) => `"${entry.variant}"`).join(', ');
+    throw new UsageError(`--variant: ${by} has no "${variant}" here; wanted one of ${known}`, sum.name);
+  }
+  const chosen = { ...result, values };
+  if (given.json) deliver(report.resultJson(chosen), call);
+  else deliver(given.quiet ? report.bareValues(values) : report.sumText(chosen, await presentation(call)), call);
+  return values.every((entry) => entry.refused !== undefined) ? EXIT.allRefused : EXIT.done;
+}
+
+export const sum: Command = {
+  name: 'sum',
+  summary: 'one prescription, to any number of digits',
+  about: [
+    'Sums the series by one prescription: every member of the family with its value, truncation error, ambiguity and trust, or a refusal with its reason and remedy. With --quiet only the value of the family’s own choice, for scripts.'.replace(
+      '’',
+      "'",
+    ),
+    'Prescriptions: fixed-order, least-term, terminant, pade, borel-pade, borel-leroy-pade, borel-pade-2, singularity-model.',
+  ],
+  operands: [{ name: 'SERIES', help: 'a catalogue id, a series file, or - for standard input' }],
+  options: ['by', 'variant', 'at', 'order', 'flavours', 'digits', 'json', 'output', 'quiet', 'no-color', 'help'],
+  examples: [
+    ['leastterm sum adler --by borel-pade --at 0.3156', 'the near-diagonal Borel-Pade table'],
+    [
+      "leastterm sum adler --by borel-pade --variant '[2/2]' --at 0.3156 --digits 50",
+      'one entry, fifty certified digits',
+    ],
+    ['leastterm sum adler --by fixed-order --at 0.3156 -q', 'the bare number, for a script'],
+  ],
+  run,
+};

@@ -1,0 +1,70 @@
+/** @module The help texts, made from the commands' own descriptions: examples first. */
+import type { Command } from './command.js';
+import { OPTIONS, optionLabel } from './options.js';
+import type { OptionName } from './options.js';
+
+const WIDTH = 80;
+
+/** Folds at blanks. Help is plain ASCII, so a character is a column. */
+function fold(text: string, columns: number): string[] {
+  const lines: string[] = [];
+  for (const word of text.split(' ')) {
+    const last = lines.at(-1);
+    if (last !== undefined && last.length + 1 + word.length <= columns) lines[lines.length - 1] = `${last} ${word}`;
+    else lines.push(word);
+  }
+  return lines;
+}
+
+/** Two columns: labels, and their explanations folded beside them. */
+function pairs(rows: readonly (readonly [label: string, text: string])[]): string {
+  const column = Math.max(...rows.map(([label]) => label.length));
+  return rows
+    .flatMap(([label, text]) =>
+      fold(text, WIDTH - column - 5).map((line, i) => `  ${(i === 0 ? label : '').padEnd(column)}   ${line}`),
+    )
+    .join('\n');
+}
+
+function examples(list: Command['examples']): string {
+  return list.map(([command, meaning]) => `  ${command}\n      ${meaning}`).join('\n');
+}
+
+const DOCS = 'docs/commands/ in the package, and docs/series-file.md for the input';
+
+/** leastterm --help. */
+export function generalHelp(commands: readonly Command[]): string {
+  const always: readonly OptionName[] = ['json', 'output', 'quiet', 'no-color', 'help', 'version'];
+  const first = commands.flatMap((command) => command.examples.slice(0, 1));
+  return [
+    'leastterm: what a truncated, divergent QCD series is worth, and how far to trust it',
+    `Examples\n${examples(first)}`,
+    `Commands\n${pairs(commands.map((command) => [command.name, command.summary]))}`,
+    `Options of every command\n${pairs(always.map((name) => [optionLabel(name), OPTIONS[name].help]))}`,
+    'Exit codes: 0 done; 1 every prescription refused; 2 wrong input or usage;\n3 a fault of leastterm; 130 interrupted.',
+    `More: leastterm help COMMAND\nManual: ${DOCS}`,
+  ]
+    .join('\n\n')
+    .concat('\n');
+}
+
+function usage(command: Command): string {
+  const operands = command.operands.map((operand) => (operand.optional === true ? `[${operand.name}]` : operand.name));
+  return ['leastterm', command.name, ...operands, '[options]'].join(' ');
+}
+
+/** leastterm COMMAND --help. */
+export function commandHelp(command: Command): string {
+  const parts = [
+    `leastterm ${command.name}: ${command.summary}`,
+    `Examples\n${examples(command.examples)}`,
+    `Usage\n  ${usage(command)}`,
+    ...command.about.map((paragraph) => fold(paragraph, WIDTH).join('\n')),
+  ];
+  if (command.operands.length > 0) {
+    parts.push(`Operands\n${pairs(command.operands.map((operand) => [operand.name, operand.help]))}`);
+  }
+  parts.push(`Options\n${pairs(command.options.map((name) => [optionLabel(name), OPTIONS[name].help]))}`);
+  parts.push(`Manual: docs/commands/${command.name}.md in the package`);
+  return `${parts.join('\n\n')}\n`;
+}

@@ -1,0 +1,46 @@
+/** @module From operands and options to a series, a coupling value, and the request that the result repeats. */
+import type { Call } from './command.js';
+import { UsageError } from './faults.js';
+import type { Series, Uncertain } from '../series/index.js';
+
+export type Request = Record<string, string | number | boolean>;
+
+/** Certified digits of each value when --digits is not given. */
+export const USUAL_DIGITS = 15;
+
+/** Loads the series that the first operand names: a catalogue id, a file, or - for standard input. */
+export async function readSeries(name: string, { given, surroundings }: Call): Promise<Series> {
+  const { loadSeries } = await import('../series/index.js');
+  if (name === '-' && surroundings.stdinIsTerminal && !given.quiet) {
+    surroundings.stderr.write('leastterm: reading the series from the terminal; Ctrl-D ends it\n');
+  }
+  const flavours = given.flavours === undefined ? {} : { flavours: given.flavours };
+  const stdin = surroundings.stdin === undefined ? {} : { stdin: surroundings.stdin };
+  return loadSeries(name, { ...flavours, ...stdin });
+}
+
+/** The value of --at. */
+export async function readCoupling(at: string, command: string): Promise<Uncertain> {
+  const { isNumberProblem, parseUncertain } = await import('../series/index.js');
+  const value = parseUncertain(at);
+  if (isNumberProblem(value)) throw new UsageError(`--at: ${value.problem}; wanted ${value.wanted}`, command);
+  return value;
+}
+
+/** The value of --at where the command cannot do without. */
+export async function neededCoupling({ given }: Call, command: string): Promise<Uncertain> {
+  if (given.at === undefined) {
+    throw new UsageError(`--at is missing: the value of the coupling or variable; write --at '0.3156(30)'`, command);
+  }
+  return readCoupling(given.at, command);
+}
+
+/** What was asked, for the result to repeat. Where the output goes is no part of it. */
+export function requestOf(command: string, series: string, { given }: Call): Request {
+  const { at, by, variant, order, flavours } = given;
+  const asked = { at, by, variant, order, flavours };
+  const request: Request = { command, series };
+  for (const [name, value] of Object.entries(asked)) if (value !== undefined) request[name] = value;
+  request['digits'] = given.digits ?? USUAL_DIGITS;
+  return request;
+}

@@ -1,0 +1,164 @@
+/** @module From words on the command line to checked values. Every complaint names the option and the remedy. */
+import { nearest } from '../series/index.js';
+import type { Command, Given } from './command.js';
+import { UsageError } from './faults.js';
+import { OPTION_NAMES, OPTIONS } from './options.js';
+import type { OptionName, OptionSpec } from './options.js';
+
+export interface Parsed {
+  readonly operands: readonly string[];
+  readonly given: Given;
+}
+
+const PARSER = {
+  'boolean-negation': false,
+  'camel-case-expansion': false,
+  'dot-notation': false,
+  'duplicate-arguments-array': false,
+  'parse-numbers': false,
+  'parse-positional-numbers': false,
+  'strip-aliased': true,
+} as const;
+
+/** Texts of the parser that reach a person are replaced by ours; this one is recognised by its beginning. */
+const MISSING_VALUE = 'Not enough arguments following: ';
+
+const isOption = (name: string): name is OptionName => OPTION_NAMES.some((known) => known === name);
+
+const byShort = (letter: string): OptionName | undefined =>
+  OPTION_NAMES.find((name) => name === letter || OPTIONS[name].short === letter);
+
+function missingValue(message: string, command: string): UsageError {
+  const key = message.slice(MISSING_VALUE.length);
+  const name = isOption(key) ? key : byShort(key);
+  const spec = name === undefined ? undefined : OPTIONS[name];
+  if (name === undefined || spec === undefined || spec.kind === 'flag') return new UsageError(message, command);
+  const dash = name === 'at' ? `; a value that begins with a dash is joined on: --at=-0.1` : '';
+  return new UsageError(`--${name}: no value given; write --${name} ${spec.example}${dash}`, command);
+}
+
+/** The raw result of the parser: option names to text or true, and the rest under "_". */
+async function rawParse(words: readonly string[], command: string): Promise<Map<string, unknown>> {
+  const { default: yargs } = await import('yargs');
+  const parser = yargs()
+    .locale('en')
+    .help(false)
+    .version(false)
+    .exitProcess(false)
+    .showHelpOnFail(false)
+    .parserConfiguration(PARSER)
+    .fail((message: string, error: Error | undefined) => {
+      if (message?.startsWith(MISSING_VALUE) === true) throw missingValue(message, command);
+      throw error ?? new UsageError(message, command);
+    });
+  for (const name of OPTION_NAMES) {
+    const spec = OPTIONS[name];
+    const alias = spec.short === undefined ? {} : { alias: spec.short };
+    if (spec.kind === 'flag') parser.option(name, { ...alias, type: 'boolean' });
+    else parser.option(name, { ...alias, type: 'string', nargs: 1 });
+  }
+  return new Map(Object.entries(parser.parseSync([...words])));
+}
+
+function unknownOption(key: string, command: Command): UsageError {
+  const written = key.length === 1 ? `-${key}` : `--${key}`;
+  const near = nearest(key, command.options);
+  const hint = near === undefined ? '' : `; did you mean --${near}?`;
+  return new UsageError(`${written}: no such option${hint}`, command.name);
+}
+
+/** "-digits" reads as -d -i -g -i -t -s; say so rather than complain about -d. */
+function singleDash(words: readonly string[], command: Command): void {
+  for (const word of words) {
+    if (word === '--') return;
+    const name = /^-([a-z][a-z-]+)/.exec(word)?.[1];
+    if (name !== undefined && isOption(name)) {
+      throw new UsageError(`${word}: long options have two dashes; write --${name}`, command.name);
+    }
+  }
+}
+
+function whole(name: OptionName, text: string, spec: OptionSpec & { kind: 'whole' }, command: string): number {
+  const n = /^\+?\d{1,9}$/.test(text) ? Number(text) : Number.NaN;
+  if (n >= spec.least && n <= spec.most) return n;
+  throw new UsageError(
+    `--${name}: "${text}" is not a whole number from ${spec.least} to ${spec.most}; write --${name} ${spec.example}`,
+    command,
+  );
+}
+
+function checkOperands(operands: readonly string[], command: Command): void {
+  const needed = command.operands.filter((operand) => operand.optional !== true);
+  const missing = needed[operands.length];
+  if (missing !== undefined) {
+    throw new UsageError(`${missing.name} is missing: ${missing.help}`, command.name);
+  }
+  const extra = operands[command.operands.length];
+  if (extra !== undefined) {
+    const most = command.operands.length;
+    const takes = most === 0 ? 'no operand' : most === 1 ? 'one operand' : `${most} operands`;
+    throw new UsageError(`"${extra}" is one operand too many: ${command.name} takes ${takes}`, command.name);
+  }
+}
+
+/** Parses the words after the command's name. */
+export async function parse(words: readonly string[], command: Command): Promise<Parsed> {
+  singleDash(words, command);
+  const raw = await rawParse(words, command.name);
+  const values = new Map<OptionName, string | number | boolean>();
+  for (const [key, value] of raw) {
+    if (key === '_' || key === '$0' || value === undefined) continue;
+    const name = isOption(key) ? key : byShort(key);
+    if (name === undefined) throw unknownOption(key, command);
+    if (!command.options.includes(name)) {
+      throw new UsageError(`--${name}: ${command.name} has no such option`, command.name);
+    }
+    const spec = OPTIONS[name];
+    if (spec.kind === 'flag') values.set(name, value === true);
+    else if (typeof value === 'string' && value !== '') {
+      values.set(name, spec.kind === 'whole' ? whole(name, value, spec, command.name) : value);
+    } else throw new UsageError(`--${name}: no value given; write --${name} ${spec.example}`, command.name);
+  }
+  const rest = raw.get('_');
+  const operands = Array.isArray(rest) ? rest.map(String) : [];
+  checkOperands(operands, command);
+  return { operands, given: collect(values) };
+}
+
+function collect(values: ReadonlyMap<OptionName, string | number | boolean>): Given {
+  const text = (name: OptionName): string | undefined => {
+    const value = values.get(name);
+    return typeof value === 'string' ? value : undefined;
+  };
+  const number = (name: OptionName): number | undefined => {
+    const value = values.get(name);
+    return typeof value === 'number' ? value : undefined;
+  };
+  const given = {
+    at: text('at'),
+    by: text('by'),
+    variant: text('variant'),
+    order: number('order'),
+    flavours: number('flavours'),
+    digits: number('digits'),
+    output: text('output'),
+  };
+  return {
+    ...present(given),
+    json: values.get('json') === true,
+    quiet: values.get('quiet') === true,
+    noColor: values.get('no-color') === true,
+  };
+}
+
+type Present<T> = { [K in keyof T]?: Exclude<T[K], undefined> };
+
+/** Leaves out what was not given. */
+function present<T extends object>(object: T): Present<T> {
+  const kept: Present<T> = {};
+  for (const key in object) {
+    const value = object[key];
+    if (value !== undefined) Object.assign(kept, { [key]: value });
+  }
+  return kept;
+}

@@ -1,0 +1,33 @@
+/** @module What a command sees of the outside world: streams, environment, terminal. Tests put their own in its place. */
+
+export interface Sink {
+  write(text: string): void;
+  readonly isTerminal: boolean;
+  readonly columns?: number | undefined;
+}
+
+export interface Surroundings {
+  readonly stdout: Sink;
+  readonly stderr: Sink;
+  readonly stdinIsTerminal: boolean;
+  /** Standard input, when it is not the process's own. */
+  readonly stdin?: AsyncIterable<Uint8Array | string>;
+  readonly environment: Readonly<Record<string, string | undefined>>;
+}
+
+/** The process's own. */
+export function processSurroundings(): Surroundings {
+  const sink = (stream: NodeJS.WriteStream): Sink => ({
+    write: (text) => {
+      stream.write(text);
+    },
+    isTerminal: stream.isTTY === true,
+    columns: stream.isTTY === true ? stream.columns : undefined,
+  });
+  return {
+    stdout: sink(process.stdout),
+    stderr: sink(process.stderr),
+    stdinIsTerminal: process.stdin.isTTY === true,
+    environment: process.env,
+  };
+}
