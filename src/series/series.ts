@@ -3,8 +3,7 @@
  *
  * R = additive + factor · Σ_{n>=0} c_n x^(n + firstPower),  x = coupling / divisor.
  */
-import type { Exact } from '../numerics/exact.js';
-import type { Rational } from '../numerics/rational.js';
+import type { Exact, Rational } from '../numerics/index.js';
 
 /** A number with an (asymmetric) one-standard-deviation error; `text` is what the file says. */
 export interface Uncertain {
@@ -86,4 +85,19 @@ export interface Series {
   readonly singularities: readonly KnownSingularity[];
   readonly condensates: readonly Condensate[];
   readonly measurement?: Uncertain & { readonly unit?: string; readonly source?: string };
+  /** Named constants that the expressions of the file use. */
+  readonly constants?: readonly { readonly name: string; readonly text: string }[];
+  /** True when nf enters a coefficient: the same file then serves other numbers of flavours. */
+  readonly anyFlavours?: boolean;
+  /** Flavour numbers the series is meant for, when the file limits them. */
+  readonly flavourChoices?: readonly number[];
+  /** Published values that the coefficients must reproduce, first coefficient first. */
+  readonly checks?: readonly SeriesCheck[];
+}
+
+/** Decimal values of the first coefficients at a number of flavours, right to half a unit of their last digit. */
+export interface SeriesCheck {
+  readonly flavours?: number;
+  readonly values: readonly string[];
+  readonly source?: string;
 }

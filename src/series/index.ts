@@ -1,0 +1,29 @@
+/** @module The public face of the series room: file, catalogue, exact coefficients, expansions. */
+export type {
+  Coefficient,
+  Condensate,
+  Coupling,
+  Divisor,
+  KnownSingularity,
+  Scale,
+  Series,
+  SeriesCheck,
+  SingularityKind,
+  Uncertain,
+} from './series.js';
+export type { Expansion, StatedSingularity } from './expansion.js';
+export { InputError, describeProblem } from './input-error.js';
+export type { Problem } from './input-error.js';
+export { nearest, suggestion } from './nearest.js';
+export { NUMBER_FORMS, parseUncertain } from './uncertain.js';
+export type { ReadNumber } from './uncertain.js';
+export { isNumberProblem } from './number-text.js';
+export type { NumberProblem } from './number-text.js';
+export { textOf } from './written.js';
+export { loadSeries, parseSeries } from './load.js';
+export type { LoadOptions, ParseOptions, SeriesForm } from './load.js';
+export { writeSeries } from './write.js';
+export { checkSeries } from './check.js';
+export { catalogueFolder, catalogueIds, catalogueText, listCatalogue, nearestCatalogueId } from './catalogue.js';
+export type { CatalogueEntry } from './catalogue.js';
+export { LIMITS } from './limits.js';

@@ -1,0 +1,43 @@
+/**
+ * @module Exact numbers that remember how they were written, so that a series can be written again without loss.
+ */
+import { R, exact } from '../numerics/index.js';
+import type { Exact } from '../numerics/index.js';
+
+export interface Written extends Exact {
+  /** Reads back to the same value, given the same constants and flavours. */
+  readonly text: string;
+}
+
+/** `value` with its text. */
+export const written = (value: Exact, text: string): Written => ({
+  ...(value.rational && { rational: value.rational }),
+  ball: (prec) => value.ball(prec),
+  text,
+});
+
+/** Digits given for a value that has neither a rational form nor a text of its own. */
+const DIGITS = 60;
+
+/**
+ * Text that reads back to the value: the one it was written as, else p/q, else a decimal of 60 significant digits
+ * (which is the value only to that accuracy).
+ */
+export function textOf(value: Exact): string {
+  if ('text' in value && typeof value.text === 'string') return value.text;
+  if (value.rational !== undefined) return value.rational.toString();
+  return decimal(value);
+}
+
+function decimal(value: Exact): string {
+  const ball = value.ball(Math.ceil(DIGITS * Math.log2(10)) + 16);
+  const q = R.midpoint(ball);
+  if (q.isZero()) return '0';
+  const digits = (n: bigint): number => n.toString().length;
+  const up = DIGITS - (digits(q.abs().num) - digits(q.den));
+  const scale = 10n ** BigInt(Math.abs(up));
+  const n = q.mul(up >= 0 ? exact(scale).rational! : exact(scale).rational!.inv()).abs().floor();
+  const text = n.toString().slice(0, DIGITS);
+  const point = n.toString().length - up;
+  return `${q.sign() < 0 ? '-' : ''}${text[0]!}.${text.slice(1)}e${point - 1}`;
+}
