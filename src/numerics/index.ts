@@ -20,3 +20,7 @@ export {
 } from './decimal/decimal.js';
 export type { ErrorText, RoundedError, RoundedValue } from './decimal/pdg.js';
 export { pdgPlace, roundPdg, writeParentheses, writePlusMinus } from './decimal/pdg.js';
+export { pi, ln2, eulerGamma } from './ball/constants.js';
+export { exp, expm1, sinh, cosh, log, log1p, sinCos, sinCosPi, atan, atan2, pow } from './ball/elementary.js';
+export type { SinCos } from './ball/elementary.js';
+export { cexp, clog, cpow, csqrt, arg } from './ball/complex-elementary.js';

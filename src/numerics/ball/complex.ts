@@ -125,14 +125,10 @@ export function upperBits(a: Complex): number {
 /** Correct leading bits relative to the larger of the two parts: log2 of max|mid|/max rad. */
 export function accuracyBits(a: Complex): number {
   const size = Math.max(R.upperBits(R.exactMid(a.re)), R.upperBits(R.exactMid(a.im)));
-  const error = Math.max(radiusBits(a.re), radiusBits(a.im));
+  const error = Math.max(R.radiusBits(a.re), R.radiusBits(a.im));
   if (error === -Infinity) return Infinity;
   if (error === Infinity) return -Infinity;
   return size === -Infinity ? -Math.max(0, error) : size - 1 - error;
-}
-
-function radiusBits(x: Ball): number {
-  return x.rad === 0 ? -Infinity : x.exp + Math.log2(x.rad);
 }
 
 /** Both parts with their radius set to zero. */

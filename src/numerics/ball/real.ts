@@ -123,6 +123,13 @@ export function addError(a: Ball, r: number, e = 0): Ball {
   return rounded(a.mid, a.exp, r + scaleUp(a.rad, -d), Infinity, d);
 }
 
+/** a with its radius grown by |a|·d·2^e, for a relative error d >= 0. */
+export function addRelativeError(a: Ball, d: number, e = 0): Ball {
+  if (d === 0 || a.rad === Infinity) return a;
+  const cut = Math.max(0, bitLength(a.mid) - 60);
+  return addError(a, (absUp(a.mid, -cut) + scaleUp(a.rad, -cut)) * d, a.exp + cut + e);
+}
+
 /** Ball with the given midpoint and an added absolute radius |r| (upper bound taken). */
 export function widen(a: Ball, r: Ball): Ball {
   if (a.rad === Infinity || r.rad === Infinity) return INDETERMINATE;
@@ -217,7 +224,9 @@ export function mul(a: Ball, b: Ball, prec: number): Ball {
   const sa = Math.max(0, bitLength(a.mid) - 60);
   const sb = Math.max(0, bitLength(b.mid) - 60);
   const s = Math.max(b.rad > 0 ? sa : 0, a.rad > 0 ? sb : 0);
-  const rad = absUp(a.mid, -s) * b.rad + absUp(b.mid, -s) * a.rad + scaleUp(a.rad * b.rad, -s);
+  const ta = b.rad > 0 ? absUp(a.mid, -s) * b.rad : 0;
+  const tb = a.rad > 0 ? absUp(b.mid, -s) * a.rad : 0;
+  const rad = ta + tb + scaleUp(a.rad * b.rad, -s);
   return rounded(mid, exp, rad, prec, s);
 }
 
@@ -340,6 +349,11 @@ export function toNumber(a: Ball): number {
 /** Radius as a double, rounded up. */
 export function radiusToNumber(a: Ball): number {
   return scaleUp(a.rad * UP, a.exp);
+}
+
+/** log2 of the radius: -Infinity for an exact ball, Infinity for INDETERMINATE. */
+export function radiusBits(a: Ball): number {
+  return a.rad === 0 ? -Infinity : a.exp + Math.log2(a.rad);
 }
 
 /** The midpoint as an exact rational. */
