@@ -21,3 +21,32 @@ export { isRefusal, refuse, type Refusal } from './refusal.js';
 export { evolveAlpha, evolveLog, type Evolution } from './running/evolve.js';
 export { flowOf, logOverLambda, type Flow } from './running/flow.js';
 export { LAMBDA_DEFINITIONS, alphaOfLambda, lambdaOf, type LambdaDefinition } from './lambda.js';
+export { evolveAlongPath, evolveComplex } from './running/evolve-complex.js';
+export type { ComplexNumber } from './running/complex-number.js';
+export { expandedAlpha } from './running/expanded.js';
+export {
+  evolveMass,
+  invariantMass,
+  massAtItself,
+  type MassAtScale,
+  type MassEvolution,
+} from './running/evolve-mass.js';
+export {
+  evolvePath,
+  type PathOptions,
+  type PathQuestion,
+  type PathResult,
+  type PathStep,
+  type ScalePoint,
+} from './matching/path.js';
+export { massRatio, matchDown, matchUp, type Matching } from './matching/match.js';
+export { MATCHING_ORDER, type HeavyMass, type MatchingTable } from './matching/logs.js';
+export { exactTable, doubleTable, type MatchedQuantity } from './matching/tables.js';
+export {
+  DEFAULT_THRESHOLDS,
+  crossingScale,
+  flavoursAt,
+  scaledThresholds,
+  type Threshold,
+} from './matching/thresholds.js';
+export * from './constants/index.js';

@@ -38,7 +38,7 @@ export function checkTheory(flavours: number, loops: number): Refusal | undefine
 
 /** Refusal for a coupling at which the flow cannot start. */
 export function checkCoupling(flow: Flow, alpha: number): Refusal | undefined {
-  if (!Number.isFinite(alpha) || alpha <= 0) {
+  if (!(alpha > 0 && alpha < Infinity && 1 / alpha < Infinity)) {
     return refuse(`the coupling ${alpha} is not a positive number`, 'give α_s as a positive number, such as 0.118');
   }
   if (alpha >= flow.fixedPoint) {
