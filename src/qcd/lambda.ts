@@ -9,7 +9,7 @@
  */
 import type { Loops } from './beta-function.js';
 import { refuse, type Refusal } from './refusal.js';
-import { checkCoupling, checkScale, checkTheory, isLoops } from './running/domain.js';
+import { checkCoupling, checkScale, checkTheory, isLoops, logOfRatio } from './running/domain.js';
 import { invertLog } from './running/evolve.js';
 import { expandedAlpha, expandedLog } from './running/expanded.js';
 import { flowOf, logOverLambda } from './running/flow.js';
@@ -47,7 +47,7 @@ export function alphaOfLambda(lambda: number, scale: number, theory: Theory): nu
   const bad = checkTheory(theory.flavours, theory.loops) ?? checkScale('Λ', lambda) ?? checkScale('scale', scale);
   if (bad !== undefined) return bad;
   const flow = flowOf(theory.flavours, loopsOf(theory.loops));
-  const log = 2 * Math.log(scale / lambda);
+  const log = logOfRatio(lambda, scale);
   if (theory.definition !== 'asymptotic') return invertLog(flow, log, startFor(flow.b0, log));
   if (!(log > 1)) {
     return refuse(

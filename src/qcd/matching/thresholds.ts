@@ -4,7 +4,7 @@
  */
 import { INPUTS } from '../constants/index.js';
 import { refuse, type Refusal } from '../refusal.js';
-import { checkScale } from '../running/domain.js';
+import { checkScale, logOfRatio } from '../running/domain.js';
 import { checkMass } from '../running/evolve-mass.js';
 import type { HeavyMass } from './logs.js';
 
@@ -31,7 +31,7 @@ export const DEFAULT_THRESHOLDS: readonly Threshold[] = [
 export const crossingScale = (t: Threshold): number => t.scale ?? t.mass;
 
 /** ln(μ²/mass²) at the crossing. */
-export const crossingLog = (t: Threshold): number => 2 * Math.log(crossingScale(t) / t.mass);
+export const crossingLog = (t: Threshold): number => logOfRatio(t.mass, crossingScale(t));
 
 /** The thresholds with every crossing scale multiplied by a factor: 1/2, 1, 2 measure the matching spread. */
 export const scaledThresholds = (list: readonly Threshold[], factor: number): readonly Threshold[] =>

@@ -38,7 +38,7 @@ export function checkTheory(flavours: number, loops: number): Refusal | undefine
 
 /** Refusal for a coupling at which the flow cannot start. */
 export function checkCoupling(flow: Flow, alpha: number): Refusal | undefined {
-  if (!(alpha > 0 && alpha < Infinity && 1 / alpha < Infinity)) {
+  if (!(alpha > 0 && alpha < Infinity && 1 / alpha < 1e300)) {
     return refuse(`the coupling ${alpha} is not a positive number`, 'give α_s as a positive number, such as 0.118');
   }
   if (alpha >= flow.fixedPoint) {
@@ -62,6 +62,12 @@ export function checkScale(name: string, scale: number): Refusal | undefined {
   return Number.isFinite(scale) && scale > 0
     ? undefined
     : refuse(`${name} = ${scale} is not a positive scale`, 'give the scale as a positive number in GeV');
+}
+
+/** ln(to²/from²), also where the ratio leaves the range of doubles. */
+export function logOfRatio(from: number, to: number): number {
+  const ratio = to / from;
+  return ratio > 1e-290 && ratio < Infinity ? 2 * Math.log(ratio) : 2 * (Math.log(to) - Math.log(from));
 }
 
 export const belowLandau = (flow: Flow, logOverLambda: number): Refusal =>

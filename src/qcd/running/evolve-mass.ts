@@ -6,7 +6,7 @@
  * Reference  renormalisation-group invariant mass: FLAG Review 2024, arXiv:2411.04268 (convention with 2β_0).
  */
 import { refuse, type Refusal } from '../refusal.js';
-import { checkCoupling, checkScale, checkTheory, isLoops } from './domain.js';
+import { checkCoupling, checkScale, checkTheory, isLoops, logOfRatio } from './domain.js';
 import { evolveLog } from './evolve.js';
 import { flowOf, massLogBeyondOneLoop, type Flow } from './flow.js';
 
@@ -45,7 +45,7 @@ export function evolveMass(question: MassEvolution): MassAtScale | Refusal {
   const bad = checkTheory(flavours, loops) ?? checkScale('from', from) ?? checkScale('to', to) ?? checkMass(mass);
   if (bad !== undefined) return bad;
   const flow = flowOf(flavours, isLoops(loops) ? loops : 5);
-  const end = evolveLog(flow, alpha, 2 * Math.log(to / from));
+  const end = evolveLog(flow, alpha, logOfRatio(from, to));
   return typeof end === 'number' ? { mass: mass * Math.exp(massLogRatio(flow, end, alpha)), alpha: end } : end;
 }
 

@@ -9,7 +9,15 @@
  */
 import type { Loops } from '../beta-function.js';
 import type { Refusal } from '../refusal.js';
-import { LARGEST_COUPLING, belowLandau, checkCoupling, checkScale, checkTheory, isLoops } from './domain.js';
+import {
+  LARGEST_COUPLING,
+  belowLandau,
+  checkCoupling,
+  checkScale,
+  checkTheory,
+  isLoops,
+  logOfRatio,
+} from './domain.js';
 import { bracketAt, flowOf, logOfInverse, logOverLambda, type Flow } from './flow.js';
 
 const MAX_STEPS = 200;
@@ -77,5 +85,5 @@ export function evolveAlpha(question: Evolution): number | Refusal {
   const bad = checkTheory(flavours, loops) ?? checkScale('from', from) ?? checkScale('to', to);
   if (bad !== undefined) return bad;
   const order: Loops = isLoops(loops) ? loops : 5;
-  return evolveLog(flowOf(flavours, order), alpha, 2 * Math.log(to / from));
+  return evolveLog(flowOf(flavours, order), alpha, logOfRatio(from, to));
 }
