@@ -36,6 +36,8 @@ export interface Command {
   readonly about: readonly string[];
   readonly operands: readonly Operand[];
   readonly options: readonly OptionName[];
+  /** Those of the options that the command cannot do without. */
+  readonly needs?: readonly OptionName[];
   /** Command lines with what they do. */
   readonly examples: readonly (readonly [command: string, meaning: string])[];
   /** Carries the command out; the exit code comes back. */

@@ -37,7 +37,7 @@ export function generalHelp(commands: readonly Command[]): string {
   const always: readonly OptionName[] = ['json', 'output', 'quiet', 'no-color', 'help', 'version'];
   const first = commands.flatMap((command) => command.examples.slice(0, 1));
   return [
-    'leastterm: what a truncated, divergent QCD series is worth, and how far to trust it',
+    'leastterm: what a truncated, divergent QCD series is worth',
     `Examples\n${examples(first)}`,
     `Commands\n${pairs(commands.map((command) => [command.name, command.summary]))}`,
     `Options of every command\n${pairs(always.map((name) => [optionLabel(name), OPTIONS[name].help]))}`,
@@ -50,7 +50,8 @@ export function generalHelp(commands: readonly Command[]): string {
 
 function usage(command: Command): string {
   const operands = command.operands.map((operand) => (operand.optional === true ? `[${operand.name}]` : operand.name));
-  return ['leastterm', command.name, ...operands, '[options]'].join(' ');
+  const needed = (command.needs ?? []).map((name) => optionLabel(name).trim());
+  return ['leastterm', command.name, ...operands, ...needed, '[options]'].join(' ');
 }
 
 /** leastterm COMMAND --help. */

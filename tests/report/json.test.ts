@@ -1,4 +1,4 @@
-import Ajv from 'ajv';
+import { Ajv } from 'ajv';
 import { readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
 import { resultJson } from '../../src/report/json.js';

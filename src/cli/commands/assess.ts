@@ -32,6 +32,7 @@ export const assess: Command = {
   ],
   operands: [{ name: 'SERIES', help: 'a catalogue id, a series file, or - for standard input' }],
   options: ['at', 'order', 'flavours', 'digits', 'json', 'output', 'quiet', 'no-color', 'help'],
+  needs: ['at'],
   examples: [
     ["leastterm assess adler --at '0.3156(30)'", 'the Adler function of the catalogue at alpha_s = 0.3156 +- 0.0030'],
     ['leastterm assess mine.yaml --at 0.25 --json -o mine.json', 'the same of your own file, as JSON, into a file'],

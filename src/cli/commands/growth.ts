@@ -31,7 +31,7 @@ export const growth: Command = {
   operands: [{ name: 'SERIES', help: 'a catalogue id, a series file, or - for standard input' }],
   options: ['at', 'order', 'flavours', 'digits', 'json', 'output', 'quiet', 'no-color', 'help'],
   examples: [
-    ['leastterm growth adler', 'the Adler function of the catalogue'],
+    ['leastterm growth adler', 'do its coefficients grow factorially, and from which singularity?'],
     ['leastterm growth mine.yaml --order 4', 'only its first four coefficients'],
   ],
   run,

@@ -34,7 +34,7 @@ export const plane: Command = {
   operands: [{ name: 'SERIES', help: 'a catalogue id, a series file, or - for standard input' }],
   options: ['at', 'order', 'flavours', 'digits', 'json', 'output', 'quiet', 'no-color', 'help'],
   examples: [
-    ['leastterm plane adler', 'the Adler function of the catalogue'],
+    ['leastterm plane adler', 'the poles of its Borel transform, as Pade approximants see them'],
     ['leastterm plane mine.yaml --json', 'every pole with all its digits'],
   ],
   run,

@@ -48,16 +48,17 @@ export const sum: Command = {
   name: 'sum',
   summary: 'one prescription, to any number of digits',
   about: [
-    'Sums the series by one prescription: every member of the family with its value, truncation error, ambiguity and trust, or a refusal with its reason and remedy. With --quiet only the value of the family’s own choice, for scripts.'.replace(
-      '’',
-      "'",
-    ),
+    "Sums the series by one prescription: every member of the family with its value, truncation error, ambiguity and trust, or a refusal with its reason and remedy. With --quiet only the value of the family's own choice, for scripts.",
     'Prescriptions: fixed-order, least-term, terminant, pade, borel-pade, borel-leroy-pade, borel-pade-2, singularity-model.',
   ],
   operands: [{ name: 'SERIES', help: 'a catalogue id, a series file, or - for standard input' }],
   options: ['by', 'variant', 'at', 'order', 'flavours', 'digits', 'json', 'output', 'quiet', 'no-color', 'help'],
+  needs: ['by', 'at'],
   examples: [
-    ['leastterm sum adler --by borel-pade --at 0.3156', 'the near-diagonal Borel-Pade table'],
+    [
+      'leastterm sum adler --by borel-pade --at 0.3156',
+      'its Borel-Pade sums over the near-diagonal table, one after the other',
+    ],
     [
       "leastterm sum adler --by borel-pade --variant '[2/2]' --at 0.3156 --digits 50",
       'one entry, fifty certified digits',

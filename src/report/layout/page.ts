@@ -13,6 +13,9 @@ export const PAGE_WIDTH = { least: 80, most: 100 } as const;
 /** From here on tables show all they have. */
 const ROOMY = 96;
 
+/** More digits than these do not fit side by side; `sum` and the JSON output show all. */
+const MOST_DIGITS = 12;
+
 export interface Fact {
   readonly label: string;
   readonly text: string;
@@ -33,7 +36,7 @@ export class Page {
     this.width = Math.min(PAGE_WIDTH.most, Math.max(PAGE_WIDTH.least, columns));
     this.paint = paint;
     this.narrow = this.width < ROOMY;
-    this.digits = digits ?? (this.narrow ? 6 : 8);
+    this.digits = Math.min(digits ?? (this.narrow ? 6 : 8), MOST_DIGITS);
   }
 
   blank(): void {
