@@ -15,6 +15,7 @@ import {
   evaluateAt,
   log2Length,
   scaleCoefficients,
+  usefulBits,
   valueErrorBound,
   type ScaledCoefficients,
 } from './scaled-polynomial.js';
@@ -66,6 +67,11 @@ export class RootCloud {
     let s = this.scaled.get(e);
     if (s === undefined) this.scaled.set(e, (s = scaleCoefficients(this.coefficients, e, this.w)));
     return s;
+  }
+
+  /** Bits up to which the coefficients are known, seen from the scale that knows them best. */
+  usefulBits(): number {
+    return Math.max(...[...new Set(this.exp)].map((e) => usefulBits(this.coefficients, e)));
   }
 
   /** Is i the root that stands for itself and its conjugate? (every root while partners are unknown) */

@@ -18,6 +18,7 @@ import { log2Length } from './scaled-polynomial.js';
 const FIRST_BITS = 96;
 const SWEEPS = 50;
 const GUARD_BITS = 6;
+const SPARE_BITS = 64;
 const MAX_BITS = 1 << 16;
 const MAX_POLISH = 40;
 
@@ -73,7 +74,7 @@ function sharpen(cloud: RootCloud, first: Discs, prec: number): Isolation {
   for (let round = 0; round < MAX_POLISH && discs.accuracy < prec; round++) {
     if (discs.inputLimited) break;
     const loss = Math.ceil(discs.loss);
-    const goal = prec + loss + GUARD_BITS;
+    const goal = Math.min(prec + loss + GUARD_BITS, cloud.usefulBits() + SPARE_BITS);
     while (cloud.w < goal) {
       cloud.raise(Math.min(goal, Math.max(cloud.w + 32, 3 * known + loss)));
       sweepOnce(cloud);

@@ -16,7 +16,7 @@
  *            Stability of Numerical Algorithms", section 5.1 (running error bounds).
  */
 import { bitLength, shift } from '../bits.js';
-import { upperBits, type Ball } from '../ball/real.js';
+import { radiusBits, upperBits, type Ball } from '../ball/real.js';
 
 const SLACK = 1.01;
 const ROUND = 1.4143; // > √2: both parts of a complex number rounded down
@@ -58,6 +58,20 @@ export function scaleCoefficients(a: readonly Ball[], e: number, w: number): Sca
     weight[k]! += error[k]! * 2 ** -w;
   }
   return { w, unit, value, slope, weight, error, inputError };
+}
+
+/**
+ * Bits between the largest |a_k| 2^(ke) and the largest radius among them: more working bits than these and a few
+ * describe the error of the coefficients only. Infinity for exact coefficients.
+ */
+export function usefulBits(a: readonly Ball[], e: number): number {
+  let top = -Infinity;
+  let radius = -Infinity;
+  for (let k = 0; k < a.length; k++) {
+    top = Math.max(top, upperBits(a[k]!) + k * e);
+    radius = Math.max(radius, radiusBits(a[k]!) + k * e);
+  }
+  return radius === -Infinity ? Infinity : Math.max(0, Math.ceil(top - radius));
 }
 
 /** p(y) and p'(y) (derivative in y) as integers in units of 2^unit; slope parts are 0 when not asked for. */
