@@ -50,3 +50,4 @@ export {
   type Threshold,
 } from './matching/thresholds.js';
 export * from './constants/index.js';
+export * from './rewrite/index.js';

@@ -1,5 +1,6 @@
 /** @module Polynomials in one symbol over a ring, as a ring: a logarithm that stays a symbol while series are composed. */
 import type { Ring } from './ring.js';
+import { addSeries, mulSeries, scaleSeries, truncate } from './truncated.js';
 
 /** Ascending coefficients; missing ones are zero. */
 export type PolynomialOver<T> = readonly T[];
@@ -27,4 +28,52 @@ export function polynomialRing<T>(ring: Ring<T>): Ring<PolynomialOver<T>> {
     },
     div: (a, b) => a.map((x) => ring.div(x, at(b, 0))),
   };
+}
+
+/**
+ * A series whose coefficients are polynomials in a symbol, with a series put for the symbol:
+ * Σ_k a^k Σ_j c_kj v(a)^j, coefficients 0 … length−1.
+ */
+export function substituteSymbol<T>(
+  base: Ring<T>,
+  series: readonly PolynomialOver<T>[],
+  value: readonly PolynomialOver<T>[],
+  length: number,
+): PolynomialOver<T>[] {
+  const ring = polynomialRing(base);
+  let sum = truncate(ring, [], length);
+  series.slice(0, length).forEach((coefficient, k) => {
+    let power = truncate(ring, [ring.one], length - k);
+    for (const part of coefficient) {
+      const shifted = [...truncate(ring, [], k), ...scaleSeries(ring, power, [part])];
+      sum = addSeries(ring, sum, shifted, length);
+      power = mulSeries(ring, power, value, length - k);
+    }
+  });
+  return sum;
+}
+
+/**
+ * The symbol in terms of another one, s = s′ + δ(a, s) with δ of order a: a series in a with coefficients in s′.
+ * Each round of the iteration fixes one more power of a.
+ */
+export function solveSymbol<T>(
+  base: Ring<T>,
+  delta: readonly PolynomialOver<T>[],
+  length: number,
+): PolynomialOver<T>[] {
+  const ring = polynomialRing(base);
+  const symbol: PolynomialOver<T> = [base.zero, base.one];
+  let value = truncate(ring, [symbol], length);
+  for (let k = 0; k < length; k++) {
+    value = addSeries(ring, [symbol], substituteSymbol(base, delta, value, length), length);
+  }
+  return value;
+}
+
+/** The polynomial at a value of the symbol. */
+export function evaluatePolynomial<T>(ring: Ring<T>, a: PolynomialOver<T>, x: T): T {
+  let sum = ring.zero;
+  for (let k = a.length - 1; k >= 0; k--) sum = ring.add(ring.mul(sum, x), a[k] ?? ring.zero);
+  return sum;
 }

@@ -34,8 +34,30 @@ const knownRationals: Ring<Known> = {
 /** A formula over any ring: numbers in, numbers out. The length of the result must not depend on the ring. */
 export type RingFormula = <T>(ring: Ring<T>, inputs: readonly T[]) => T[];
 
-/** Guard bits of the ball evaluation of a formula; callers who need more ask for more. */
+/** Guard bits to begin with; formulas that cancel more get twice as many until their results are sharp. */
 const GUARD = 64;
+/** The working precision stops growing at this multiple of what was asked, or when it no longer helps. */
+const LARGEST_WORK = 16;
+
+/** Correct bits of a ball: relative or, for a number that may be zero, absolute. */
+function correctBits(x: Ball): number {
+  return x.rad === 0 ? Infinity : Math.max(R.accuracyBits(x), -(x.exp + Math.log2(x.rad)));
+}
+
+function evaluate(inputs: readonly Exact[], formula: RingFormula, prec: number): readonly Ball[] {
+  let reached = -Infinity;
+  for (let work = prec + GUARD; ; work *= 2) {
+    const values = formula<Ball>(
+      ballField(work),
+      inputs.map((x) => x.ball(work)),
+    );
+    const before = reached;
+    reached = values.reduce((least, x) => Math.min(least, correctBits(x)), Infinity);
+    // An input known to a few digits only sets the limit: more working bits change nothing then.
+    const stuck = before > -Infinity && reached <= before + 1;
+    if (reached >= prec || stuck || work > LARGEST_WORK * (prec + GUARD)) return values;
+  }
+}
 
 /**
  * Applies a formula to exact numbers. Outputs that depend only on rational inputs come back rational; the others
@@ -48,14 +70,7 @@ export function liftExact(inputs: readonly Exact[], formula: RingFormula): Exact
   );
   let last: { readonly prec: number; readonly values: readonly Ball[] } | undefined;
   const at = (prec: number): readonly Ball[] => {
-    if (last === undefined || last.prec < prec) {
-      const work = prec + GUARD;
-      const values = formula<Ball>(
-        ballField(work),
-        inputs.map((x) => x.ball(work)),
-      );
-      last = { prec, values };
-    }
+    if (last === undefined || last.prec < prec) last = { prec, values: evaluate(inputs, formula, prec) };
     return last.values;
   };
   return known.map((q, i) => (q !== UNKNOWN ? exact(q) : exactReal((prec) => at(prec)[i] ?? R.INDETERMINATE)));

@@ -10,10 +10,10 @@
  * Reference  K. Chetyrkin, B. Kniehl, M. Steinhauser, hep-ph/9708255; Y. Schröder, M. Steinhauser, hep-ph/0512058;
  *            K. Chetyrkin, J. Kühn, C. Sturm, hep-ph/0512060; T. Liu, M. Steinhauser, arXiv:1502.04719.
  */
-import { polynomialRing, type PolynomialOver } from '../algebra/polynomial-ring.js';
+import { polynomialRing, solveSymbol, substituteSymbol, type PolynomialOver } from '../algebra/polynomial-ring.js';
 import { shiftCoupling, shiftMass } from '../algebra/renormalisation.js';
 import type { Ring } from '../algebra/ring.js';
-import { addSeries, compose, integer, logSeries, mulSeries, scaleSeries, truncate } from '../algebra/truncated.js';
+import { compose, integer, logSeries, mulSeries, scaleSeries } from '../algebra/truncated.js';
 
 /**
  * Definition of the heavy mass in l: 'scale-invariant' μ_h = m(μ_h); 'running' m(μ) at the matching scale, MSbar with
@@ -85,25 +85,7 @@ export function matchingTable<T>(
     return scaleSeries(ring, logSeries(ring, ratio, LENGTH), integer(ring, -2));
   }
 
-  /** Puts a series in a for the symbol l of the coefficients. */
-  function substituteLog(series: readonly P[], value: readonly P[]): P[] {
-    let sum = truncate(ring, [], LENGTH);
-    series.forEach((coefficient, k) => {
-      let power = truncate(ring, [ring.one], LENGTH);
-      for (const part of coefficient) {
-        const shifted = [...truncate(ring, [], k), ...scaleSeries(ring, power, [part])];
-        sum = addSeries(ring, sum, shifted, LENGTH);
-        power = mulSeries(ring, power, value, LENGTH);
-      }
-    });
-    return sum;
-  }
-
   const ratio = quantity === 'coupling' ? couplingRatio() : massRatio();
   if (heavyMass === 'scale-invariant') return ratio;
-  // ln(μ²/μ_h²) = l + δ(a, ln(μ²/μ_h²)) with δ of order a: each round of the iteration fixes one more power of a.
-  const delta = massLog();
-  let value = truncate(ring, [log], LENGTH);
-  for (let k = 0; k < LENGTH; k++) value = addSeries(ring, [log], substituteLog(delta, value), LENGTH);
-  return substituteLog(ratio, value);
+  return substituteSymbol(base, ratio, solveSymbol(base, massLog(), LENGTH), LENGTH);
 }

@@ -1,5 +1,5 @@
 /** @module Decoupling tables for a given number of light flavours: in doubles, exactly, or with every symbol kept. */
-import { Rational, doubleField, type Exact } from '../../numerics/index.js';
+import { Rational, doubleField, toNumberExact, type Exact } from '../../numerics/index.js';
 import { liftExact, type Ring } from '../algebra/ring.js';
 import {
   BETA,
@@ -13,7 +13,6 @@ import {
   formalRational,
   formalRing,
   formalSymbol,
-  numberOfFormal,
   scaleFormal,
   substituteFormal,
   type Formal,
@@ -47,19 +46,6 @@ function ingredients(nl: Formal): MatchingConstants<Formal> {
 
 const NAMES = ['betaHeavy', 'betaLight', 'gammaHeavy', 'gammaLight', 'coupling', 'mass', 'pole'] as const;
 
-function mapped<T>(from: MatchingConstants<Formal>, f: (x: Formal) => T): MatchingConstants<T> {
-  const list = (name: (typeof NAMES)[number]): T[] => from[name].map(f);
-  return {
-    betaHeavy: list('betaHeavy'),
-    betaLight: list('betaLight'),
-    gammaHeavy: list('gammaHeavy'),
-    gammaLight: list('gammaLight'),
-    coupling: list('coupling'),
-    mass: list('mass'),
-    pole: list('pole'),
-  };
-}
-
 /** The table with nl, l and the constants as symbols: for comparison with the published forms. */
 export const formalTable = (quantity: MatchedQuantity, mass: HeavyMass): MatchingTable<Formal> =>
   matchingTable(formalRing, ingredients(formalSymbol('nl')), quantity, mass);
@@ -71,32 +57,42 @@ export function doubleTable(nl: number, quantity: MatchedQuantity, mass: HeavyMa
   const key = `${nl} ${quantity} ${mass}`;
   let table = doubles.get(key);
   if (table === undefined) {
-    const constants = mapped(ingredients(formalRational(Rational.of(nl))), numberOfFormal);
+    const constants = matchingConstants(matchingInputs(nl).map(toNumberExact));
     table = matchingTable(doubleField, constants, quantity, mass);
     doubles.set(key, table);
   }
   return table;
 }
 
+/** The ingredients as one flat list of exact numbers, for formulas over any ring. */
+export function matchingInputs(nl: number): readonly Exact[] {
+  const formal = ingredients(formalRational(Rational.of(nl)));
+  return NAMES.flatMap((name) => formal[name].map(exactOfFormal));
+}
+
+/** The same list put back into its parts. */
+export function matchingConstants<T>(flat: readonly T[]): MatchingConstants<T> {
+  const list = (name: (typeof NAMES)[number]): readonly T[] => {
+    const i = NAMES.indexOf(name);
+    return flat.slice(i * LIST_LENGTH, (i + 1) * LIST_LENGTH);
+  };
+  return {
+    betaHeavy: list('betaHeavy'),
+    betaLight: list('betaLight'),
+    gammaHeavy: list('gammaHeavy'),
+    gammaLight: list('gammaLight'),
+    coupling: list('coupling'),
+    mass: list('mass'),
+    pole: list('pole'),
+  };
+}
+
 /** The table in exact numbers: rational entries stay rational. */
 export function exactTable(nl: number, quantity: MatchedQuantity, mass: HeavyMass): MatchingTable<Exact> {
-  const formal = ingredients(formalRational(Rational.of(nl)));
-  const inputs = NAMES.flatMap((name) => formal[name].map(exactOfFormal));
   // Row k has at most k + 1 powers of l; the flat list keeps the shape whatever the ring.
-  const flat = liftExact(inputs, <T>(ring: Ring<T>, x: readonly T[]): T[] => {
-    const list = (i: number): readonly T[] => x.slice(i * LIST_LENGTH, (i + 1) * LIST_LENGTH);
-    const constants = {
-      betaHeavy: list(0),
-      betaLight: list(1),
-      gammaHeavy: list(2),
-      gammaLight: list(3),
-      coupling: list(4),
-      mass: list(5),
-      pole: list(6),
-    };
-    const table = matchingTable(ring, constants, quantity, mass);
+  const flat = liftExact(matchingInputs(nl), <T>(ring: Ring<T>, x: readonly T[]): T[] => {
+    const table = matchingTable(ring, matchingConstants(x), quantity, mass);
     return table.flatMap((row, k) => Array.from({ length: k + 1 }, (_, j) => row[j] ?? ring.zero));
   });
-  let at = 0;
-  return Array.from({ length: MATCHING_ORDER + 1 }, (_, k) => flat.slice(at, (at += k + 1)));
+  return Array.from({ length: MATCHING_ORDER + 1 }, (_, k) => flat.slice((k * (k + 1)) / 2, ((k + 1) * (k + 2)) / 2));
 }

@@ -1,0 +1,21 @@
+/** @module Exact re-expansion of series: other scales, couplings, numbers of flavours, masses. */
+export { multiplyCoefficients, powerOfCoefficients } from './algebra.js';
+export { decouplingMassFactor, decouplingRelation, inverseDecouplingRelation, type Decoupling } from './flavours.js';
+export { massRatioSeries, type MassDefinition, type MassRatioQuestion } from './mass.js';
+export {
+  chainRelations,
+  invertRelation,
+  mapMatrix,
+  substituteCoupling,
+  type CoefficientSeries,
+  type CouplingRelation,
+} from './relation.js';
+export { changeScale, massFactor, scaleLogTable, scaleRelation } from './scale.js';
+export {
+  betaInCoupling,
+  cSchemeBeta,
+  cSchemeRelation,
+  lambdaRatioExponent,
+  minimomRelation,
+  potentialRelation,
+} from './schemes.js';
