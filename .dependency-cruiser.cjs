@@ -4,7 +4,7 @@ const floors = [
   ['report'],
   ['studies'],
   ['prescriptions'],
-  ['ambiguity', 'growth', 'borel'],
+  ['ambiguity', 'growth', 'borel', 'sequences', 'truncation'],
   ['qcd'],
   ['series'],
   ['numerics'],
@@ -44,6 +44,13 @@ module.exports = {
       severity: 'error',
       from: { path: '^src/[^/]+/' },
       to: { path: '^src/index\\.ts$' },
+    },
+    {
+      name: 'every-room-has-a-floor',
+      severity: 'error',
+      comment: 'a new folder of src/ is entered in the list of floors above',
+      from: { path: '^src/[^/]+/', pathNot: inside(rooms) },
+      to: {},
     },
     { name: 'no-cycles', severity: 'error', from: {}, to: { circular: true } },
     {

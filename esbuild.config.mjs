@@ -17,7 +17,7 @@ async function notices(metafile) {
     if (match !== null) packages.add(match[1]);
   }
   const parts = [];
-  for (const name of [...packages].sort()) {
+  for (const name of [...packages].toSorted((a, b) => (a < b ? -1 : 1))) {
     const folder = join(root, 'node_modules', name);
     const { version, license } = JSON.parse(await readFile(join(folder, 'package.json'), 'utf8'));
     let text = '';

@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { tell, UsageError } from '../../src/cli/faults.js';
+import { run } from '../../src/cli/run.js';
 import { InputError } from '../../src/series/index.js';
 
 describe('what is told', () => {
@@ -40,4 +41,23 @@ describe('what is told', () => {
     expect(text).toContain('    at ');
     expect(text).not.toContain('LEASTTERM_DEBUG');
   });
+});
+
+test('a fault during a run is told and ends with 3', async () => {
+  let told = '';
+  const broken = {
+    write: (): never => {
+      throw new TypeError('the sink is broken');
+    },
+    isTerminal: false,
+  };
+  const listening = {
+    write: (text: string): void => {
+      told += text;
+    },
+    isTerminal: false,
+  };
+  const status = await run(['--help'], { stdout: broken, stderr: listening, stdinIsTerminal: false, environment: {} });
+  expect(status).toBe(3);
+  expect(told).toMatch(/^leastterm: internal fault: TypeError: the sink is broken\n/);
 });
