@@ -29,3 +29,5 @@ export { zeta } from './special/zeta.js';
 export { gamma, rgamma } from './special/gamma.js';
 export { logGamma, logGamma1p } from './special/log-gamma.js';
 export { digamma } from './special/digamma.js';
+export * from './polynomial/index.js';
+export * from './linear/index.js';

@@ -19,17 +19,24 @@ export interface EuclidRow {
 
 /** Row of Euclid's scheme for b modulo x^order with deg r <= degree. */
 export function euclidRow(b: IntPoly, order: number, degree: number): EuclidRow {
-  const first = trimInt(b.slice(0, order));
-  let previous: EuclidRow = { r: [...new Array<bigint>(order).fill(0n), 1n], t: [] };
-  let row: EuclidRow = { r: first, t: [1n] };
-  while (row.r.length - 1 > degree) [previous, row] = [row, remainderRow(previous, row)];
-  return row;
+  return euclidRows(b, order, [degree])[0]!;
+}
+
+/** The rows for several degrees, largest degree first: one run of the scheme serves a whole antidiagonal. */
+export function euclidRows(b: IntPoly, order: number, degrees: readonly number[]): EuclidRow[] {
+  let previous: EuclidRow = { r: [...Array.from({ length: order }, () => 0n), 1n], t: [] };
+  let row: EuclidRow = { r: trimInt(b.slice(0, order)), t: [1n] };
+  return degrees.map((degree) => {
+    while (row.r.length - 1 > degree) [previous, row] = [row, remainderRow(previous, row)];
+    return row;
+  });
 }
 
 /** The pair (r₀ − q r₁, t₀ − q t₁) times a constant that keeps it integer, made primitive. */
 function remainderRow(a: EuclidRow, b: EuclidRow): EuclidRow {
   const r = a.r.slice();
-  const t = [...a.t, ...new Array<bigint>(Math.max(0, a.r.length - b.r.length + b.t.length - a.t.length)).fill(0n)];
+  const growth = Math.max(0, a.r.length - b.r.length + b.t.length - a.t.length);
+  const t = [...a.t, ...Array.from({ length: growth }, () => 0n)];
   const n = b.r.length - 1;
   const lead = b.r[n]!;
   for (let k = a.r.length - 1 - n; k >= 0; k--) {

@@ -18,7 +18,7 @@ import type { PadeEntry } from './pade-types.js';
 import { toIntegers, trimPoly } from './rational-poly.js';
 
 /** Heuristic: below this order L+M Euclid in integers is quicker than the primes. */
-const EUCLID_ORDER = 20;
+export const EUCLID_ORDER = 20;
 
 /**
  * [L/M] of Σ b_n x^n from b_0..b_{L+M}; later coefficients, when given, only extend `contactOrder`.
@@ -39,7 +39,8 @@ export function checkOrders(length: number, L: number, M: number): void {
   if (length < L + M + 1) throw new RangeError(`[${L}/${M}] needs ${L + M + 1} coefficients, ${length} are given`);
 }
 
-function entryFromIntegers(b: IntPoly, content: Rational, known: number, L: number, M: number): PadeEntry {
+/** padeExact on b = content·integers (`known` coefficients of the series are given). */
+export function entryFromIntegers(b: IntPoly, content: Rational, known: number, L: number, M: number): PadeEntry {
   if (M > 0 && L + M >= EUCLID_ORDER) {
     const minors = toeplitzMinors(b, L, M);
     if (minors !== undefined) {

@@ -18,7 +18,7 @@ import type { PadeEntry, UndecidedEntry } from './pade-types.js';
 export function padeField<T>(field: Field<T>, b: readonly T[], L: number, M: number): PadeEntry<T> | UndecidedEntry {
   checkOrders(b.length, L, M);
   const at = (k: number): T => (k < 0 ? field.zero : b[k]!);
-  const matrix = Array.from({ length: M }, (_, i) => Array.from({ length: M }, (_, j) => at(L - j + i)));
+  const matrix = Array.from({ length: M }, (_r, i) => Array.from({ length: M }, (_c, j) => at(L - j + i)));
   const f = lu(field, matrix);
   if (f.kind !== 'regular') {
     return { exists: undefined, reason: `the Toeplitz matrix of [${L}/${M}] is singular or too close to it` };

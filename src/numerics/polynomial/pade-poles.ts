@@ -15,7 +15,7 @@ import * as R from '../ball/real.js';
 import type { Ball } from '../ball/real.js';
 import type { Exact } from '../exact.js';
 import { ballField } from '../field.js';
-import { Rational } from '../rational.js';
+import type { Rational } from '../rational.js';
 import { gcdMod, modWord, wordPrime } from './modular.js';
 import { padeNormal, type NormalEntry } from './pade-ball.js';
 import { checkOrders, padeExact } from './pade-exact.js';

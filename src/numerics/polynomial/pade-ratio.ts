@@ -46,12 +46,12 @@ export function recurrenceRatio({ alpha, beta }: JacobiCoefficients<Ball>): Newt
     let size1 = 0;
     for (let k = 0; k < size; k++) {
       const xr = ur - s.alpha[k]!;
-      const beta = k === 0 ? 0 : s.beta[k]!;
-      const er = xr * br - ui * bi - beta * ar;
-      const ei = xr * bi + ui * br - beta * ai;
-      const fr = br + xr * dr - ui * di - beta * cr;
-      const fi = bi + xr * di + ui * dr - beta * ci;
-      size1 = Math.hypot(xr, ui) * Math.hypot(br, bi) + Math.abs(beta) * Math.hypot(ar, ai);
+      const weight = k === 0 ? 0 : s.beta[k]!;
+      const er = xr * br - ui * bi - weight * ar;
+      const ei = xr * bi + ui * br - weight * ai;
+      const fr = br + xr * dr - ui * di - weight * cr;
+      const fi = bi + xr * di + ui * dr - weight * ci;
+      size1 = Math.hypot(xr, ui) * Math.hypot(br, bi) + Math.abs(weight) * Math.hypot(ar, ai);
       [ar, ai, br, bi] = [br, bi, er, ei];
       [cr, ci, dr, di] = [dr, di, fr, fi];
       if (Math.abs(dr) + Math.abs(di) > BIG) {
