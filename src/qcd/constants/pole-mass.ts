@@ -25,8 +25,7 @@ export const POLE_OVER_MSBAR: readonly PublishedConstant[] = [
   },
   {
     quantity: 'c_4',
-    formula:
-      '3567.60 - 745.721*nl + 43.3962*nl^2' + ' - (42979/1119744 + 317/2592*z3 + 89/3888*pi^2 + 71/25920*pi^4)*nl^3',
+    formula: '3567.60 - 745.721*nl + 43.3962*nl^2 - (42979/1119744 + 317/2592*z3 + 89/3888*pi^2 + 71/25920*pi^4)*nl^3',
     source:
       'Marquard, Smirnov, Smirnov, Steinhauser, Wellmann arXiv:1606.06754 (numerical); nl² and nl³: ' +
       'Lee, Marquard, Smirnov, Smirnov, Steinhauser arXiv:1301.6481',

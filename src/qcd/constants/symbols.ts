@@ -1,5 +1,5 @@
 /** @module The transcendental numbers that stand in the constants, by the names used in the formulas. */
-import { R, Rational, exactReal, type Ball, type Exact } from '../../numerics/index.js';
+import { R, Rational, eulerGamma, exactReal, ln2, pi, zeta, type Ball, type Exact } from '../../numerics/index.js';
 
 /** Enclosure of a number given by its decimals, half a unit of the last place as radius. */
 function decimal(text: string): Exact {
@@ -21,15 +21,15 @@ function polylogHalf(n: number, prec: number): Ball {
 }
 
 export const SYMBOLS: Readonly<Record<string, Exact>> = {
-  z2: decimal('1.64493406684822643647241516665'),
-  z3: decimal('1.20205690315959428539973816151'),
-  z4: decimal('1.08232323371113819151600369654'),
-  z5: decimal('1.03692775514336992633136548646'),
-  z6: decimal('1.01734306198444913971451792979'),
-  z7: decimal('1.00834927738192282683979754985'),
-  pi: decimal('3.14159265358979323846264338328'),
-  ln2: decimal('0.693147180559945309417232121458'),
-  gE: decimal('0.577215664901532860606512090082'),
+  z2: exactReal((prec) => zeta(2, prec)),
+  z3: exactReal((prec) => zeta(3, prec)),
+  z4: exactReal((prec) => zeta(4, prec)),
+  z5: exactReal((prec) => zeta(5, prec)),
+  z6: exactReal((prec) => zeta(6, prec)),
+  z7: exactReal((prec) => zeta(7, prec)),
+  pi: exactReal(pi),
+  ln2: exactReal(ln2),
+  gE: exactReal(eulerGamma),
   a4: exactReal((prec) => polylogHalf(4, prec)),
   a5: exactReal((prec) => polylogHalf(5, prec)),
   /**
