@@ -74,7 +74,10 @@ export async function readTextFile(path: string): Promise<string> {
 }
 
 /** Text of a stream of bytes; reading stops at the limit. */
-export async function readTextStream(stream: AsyncIterable<Uint8Array | string>, name = STANDARD_INPUT): Promise<string> {
+export async function readTextStream(
+  stream: AsyncIterable<Uint8Array | string>,
+  name = STANDARD_INPUT,
+): Promise<string> {
   const chunks: Uint8Array[] = [];
   let total = 0;
   for await (const chunk of stream) {

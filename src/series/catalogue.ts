@@ -30,10 +30,11 @@ const WITH_FLAVOURS = /^(.+)-n[fl](\d{1,2})$/;
 /** Could `name` be a catalogue id (rather than a path)? */
 export const isCatalogueName = (name: string): boolean => name.length <= 64 && ID.test(name);
 
-const exists = (path: string): Promise<boolean> => access(path).then(
-  () => true,
-  () => false,
-);
+const exists = (path: string): Promise<boolean> =>
+  access(path).then(
+    () => true,
+    () => false,
+  );
 
 let folder: Promise<string> | undefined;
 
@@ -54,11 +55,16 @@ async function find(start: string): Promise<string> {
 /** Ids of all files, sorted. */
 export async function catalogueIds(): Promise<readonly string[]> {
   const names = await readdir(await catalogueFolder());
-  return names.filter((name) => name.endsWith(ENDING)).map((name) => name.slice(0, -ENDING.length)).toSorted();
+  return names
+    .filter((name) => name.endsWith(ENDING))
+    .map((name) => name.slice(0, -ENDING.length))
+    .toSorted();
 }
 
 /** Text of a catalogue series, with the number of flavours that its id asks for; undefined for an unknown id. */
-export async function catalogueText(id: string): Promise<{ readonly text: string; readonly flavours?: number } | undefined> {
+export async function catalogueText(
+  id: string,
+): Promise<{ readonly text: string; readonly flavours?: number } | undefined> {
   const ids = await catalogueIds();
   const path = async (name: string): Promise<string> => readFile(join(await catalogueFolder(), name + ENDING), 'utf8');
   if (ids.includes(id)) return { text: await path(id) };
@@ -87,7 +93,8 @@ export async function listCatalogue(): Promise<readonly CatalogueEntry[]> {
 }
 
 function summary(id: string, entry: Entry | undefined): CatalogueEntry {
-  const field = (name: string): Entry | undefined => (entry?.kind === 'map' ? entry.fields.get(name)?.value : undefined);
+  const field = (name: string): Entry | undefined =>
+    entry?.kind === 'map' ? entry.fields.get(name)?.value : undefined;
   const text = (e: Entry | undefined): string | undefined => (e?.kind === 'text' ? e.text.trim() : undefined);
   const items = (name: string): readonly Entry[] => {
     const list = field(name);

@@ -9,18 +9,28 @@ export class Complaints {
   private readonly list: Problem[] = [];
   private omitted = 0;
 
-  constructor(file: string) {
+  /** `earlier`: complaints about the same file from a stage before, which come along. */
+  constructor(file: string, earlier?: Complaints) {
     this.file = file;
+    if (earlier !== undefined) {
+      this.list.push(...earlier.list);
+      this.omitted = earlier.omitted;
+    }
   }
 
   /** Notes a problem; always undefined, so that a reader can end with `return complaints.add(…)`. */
   add(at: Place | undefined, field: string, found: string, wanted: string): undefined {
-    if (this.list.length >= LIMITS.problems) this.omitted++;
+    if (this.full) this.omitted++;
     else this.list.push({ file: this.file, ...(at && { line: at.line, column: at.column }), field, found, wanted });
   }
 
   get any(): boolean {
     return this.list.length > 0;
+  }
+
+  /** True when further problems are only counted. */
+  get full(): boolean {
+    return this.list.length >= LIMITS.problems;
   }
 
   /** The problems as an error, in the order of the file. */

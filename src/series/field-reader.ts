@@ -32,12 +32,13 @@ export class FieldReader {
 
   /** Fields of a map; names outside `known` are complained about, with the nearest known one. */
   group(entry: Entry, field: string, known: readonly string[]): Group | undefined {
-    if (entry.kind !== 'map') return this.wrongKind(entry, field, `fields ${known.join(', ')}`);
+    if (entry.kind !== 'map') return this.wrongKind(entry, field, `the fields ${known.join(', ')}`);
     for (const [name, { key }] of entry.fields) {
       if (known.includes(name)) continue;
       const path = field === '' ? name : `${field}.${name}`;
-      const prefix = field === '' ? '' : ` of ${field}`;
-      this.complaints.add(key, path.slice(0, 80), `unknown field ${quote(name)}${suggestion(name, known)}`, `one of the fields${prefix}: ${known.join(', ')}`);
+      const hint = this.complaints.full ? '' : suggestion(name, known);
+      const wanted = hint !== '' && known.length > 10 ? 'a field of docs/series-file.md' : `one of ${known.join(', ')}`;
+      this.complaints.add(key, path.slice(0, 80), `unknown field ${quote(name)}${hint}`, wanted);
     }
     return { at: entry.at, get: (name) => entry.fields.get(name)?.value };
   }
@@ -52,7 +53,12 @@ export class FieldReader {
     const text = entry.text.trim();
     if (text === '') return this.complaints.add(entry.at, field, 'nothing', wanted);
     if (text.length > LIMITS.text) {
-      return this.complaints.add(entry.at, field, `a text of ${grouped(text.length)} characters`, `at most ${grouped(LIMITS.text)}`);
+      return this.complaints.add(
+        entry.at,
+        field,
+        `a text of ${grouped(text.length)} characters`,
+        `at most ${grouped(LIMITS.text)}`,
+      );
     }
     return text;
   }
@@ -70,7 +76,7 @@ export class FieldReader {
   }
 
   integer(entry: Entry | undefined, field: string, least: number, most: number): number | undefined {
-    const wanted = `an integer from ${least} to ${most}`;
+    const wanted = least === most ? `${least}` : `an integer from ${least} to ${most}`;
     if (entry === undefined) return undefined;
     if (entry.kind !== 'text') return this.wrongKind(entry, field, wanted);
     const text = plainSigns(entry.text);
@@ -80,7 +86,12 @@ export class FieldReader {
   }
 
   /** A plain decimal or fraction. */
-  rational(entry: Entry | undefined, field: string, wanted: string, accept: (q: Rational) => boolean): Rational | undefined {
+  rational(
+    entry: Entry | undefined,
+    field: string,
+    wanted: string,
+    accept: (q: Rational) => boolean,
+  ): Rational | undefined {
     if (entry === undefined) return undefined;
     if (entry.kind !== 'text') return this.wrongKind(entry, field, wanted);
     const q = entry.text.length > LIMITS.numberLength ? undefined : parsePlain(plainSigns(entry.text));
@@ -98,11 +109,20 @@ export class FieldReader {
     if (isNumberProblem(value)) return this.complaints.add(entry.at, field, value.problem, value.wanted);
     const s = sign === 'any' ? 1 : signExact(value);
     if (s > 0 || (s < 0 && sign === 'non-zero')) return value;
-    return this.complaints.add(entry.at, field, quote(entry.text.trim()), sign === 'positive' ? 'a positive number' : 'a number other than 0');
+    return this.complaints.add(
+      entry.at,
+      field,
+      quote(entry.text.trim()),
+      sign === 'positive' ? 'a positive number' : 'a number other than 0',
+    );
   }
 
   /** A number with an optional error: one text, or a group with the fields value and error (and others of the caller's). */
-  uncertain(entry: Entry | undefined, field: string, others: readonly string[] = []): (ReadNumber & { readonly group?: Group }) | undefined {
+  uncertain(
+    entry: Entry | undefined,
+    field: string,
+    others: readonly string[] = [],
+  ): (ReadNumber & { readonly group?: Group }) | undefined {
     if (entry === undefined) return undefined;
     if (entry.kind === 'text') return this.uncertainText(entry, field);
     const group = this.group(entry, field, ['value', 'error', ...others]);
@@ -114,7 +134,8 @@ export class FieldReader {
     const value = this.uncertainText(valueEntry, `${field}.value`);
     if (value === undefined || (errorEntry !== undefined && error === undefined)) return undefined;
     if (error === undefined) return { ...value, group };
-    if (value.error !== undefined) return this.complaints.add(errorEntry!.at, `${field}.error`, 'a second error', 'the error in one place only');
+    if (value.error !== undefined)
+      return this.complaints.add(errorEntry!.at, `${field}.error`, 'a second error', 'the error in one place only');
     return { value: value.value, error, text: `${value.text} ${spreadText(error)}`, group };
   }
 
@@ -157,11 +178,18 @@ export class FieldReader {
 
   wrongKind(entry: Entry, field: string, wanted: string): undefined {
     const found = entry.kind === 'text' ? quote(entry.text.trim()) : KIND_WORDS[entry.kind];
-    return this.complaints.add(entry.at, field, entry.kind === 'text' && entry.text.trim() === '' ? 'nothing' : found, wanted);
+    return this.complaints.add(
+      entry.at,
+      field,
+      entry.kind === 'text' && entry.text.trim() === '' ? 'nothing' : found,
+      wanted,
+    );
   }
 }
 
 /** ` +- 1/10` or `+1/10 -1/20`, in a form that reads back after a value. */
 export function spreadText(error: Spread): string {
-  return error.plus.equals(error.minus) ? `+- ${error.plus.toString()}` : `+${error.plus.toString()} -${error.minus.toString()}`;
+  return error.plus.equals(error.minus)
+    ? `+- ${error.plus.toString()}`
+    : `+${error.plus.toString()} -${error.minus.toString()}`;
 }

@@ -8,6 +8,8 @@ export const LIMITS = {
   coefficients: 5_000,
   /** Lines, and entries of lists and maps, of a whole file. */
   entries: 20_000,
+  /** Characters that mean something to YAML (quotes, brackets, colons, …), anywhere in a file. */
+  marks: 50_000,
   /** Lists and maps inside each other. */
   depth: 12,
   /** Characters of one number. */
@@ -30,6 +32,10 @@ export const LIMITS = {
   problems: 40,
   /** Exact arithmetic a file may ask for: sum of products of the lengths, in 19-digit words, of what is reduced. */
   work: 4_000_000,
+  /** The share of that allowance which the parser needs for one character of an expression. */
+  workPerCharacter: 40,
+  /** Named constants. */
+  constants: 200,
 } as const;
 
 /** 4194304 -> "4,194,304". */

@@ -44,13 +44,12 @@ export async function parseSeries(text: string, options: ParseOptions): Promise<
   const complaints = new Complaints(name);
   if (!weighed(text, complaints)) throw complaints.error();
   const entry = await entries(text, options.form ?? formOf(text, name), complaints);
-  complaints.throwIfAny();
   if (entry === undefined) throw complaints.error();
 
-  const first = reading(entry, options, undefined);
+  const first = reading(entry, options, complaints, undefined);
   if (!first.parserWanted) return first.result();
   const { parseExpression } = await import('./expression/mathjs-parser.js');
-  return reading(entry, options, parseExpression).result();
+  return reading(entry, options, complaints, parseExpression).result();
 }
 
 async function entries(text: string, form: SeriesForm, complaints: Complaints): Promise<Entry | undefined> {
@@ -60,8 +59,8 @@ async function entries(text: string, form: SeriesForm, complaints: Complaints): 
   return yamlEntries(text, complaints);
 }
 
-function reading(entry: Entry, options: ParseOptions, parse: ParseExpression | undefined) {
-  const complaints = new Complaints(options.name);
+function reading(entry: Entry, options: ParseOptions, earlier: Complaints, parse: ParseExpression | undefined) {
+  const complaints = new Complaints(options.name, earlier);
   const numbers = new Numbers(parse);
   const id = options.name.replace(/^.*[\\/]/, '').replace(/\.(?:ya?ml|json|csv|txt|dat)$/i, '');
   const series = readSeries(entry, id, new FieldReader(complaints, numbers), options.flavours);
@@ -87,7 +86,12 @@ export async function loadSeries(name: string, options: LoadOptions = {}): Promi
   if (!isCatalogueName(name)) return parseSeries(await readTextFile(name), { name, ...flavours });
   const found = await catalogueText(name);
   if (found === undefined) return parseSeries(await fileOrUnknownId(name), { name, ...flavours });
-  return parseSeries(found.text, { name, form: 'yaml', ...(found.flavours !== undefined && { flavours: found.flavours }), ...flavours });
+  return parseSeries(found.text, {
+    name,
+    form: 'yaml',
+    ...(found.flavours !== undefined && { flavours: found.flavours }),
+    ...flavours,
+  });
 }
 
 /** A file without dot or slash in its name; when there is none, the catalogue id was probably mistyped. */

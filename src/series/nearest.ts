@@ -9,7 +9,8 @@ export function editDistance(a: string, b: string): number {
     for (let j = 1; j <= b.length; j++) {
       const change = a[i - 1] === b[j - 1] ? 0 : 1;
       let best = Math.min(last[j]! + 1, row[j - 1]! + 1, last[j - 1]! + change);
-      if (i > 1 && j > 1 && a[i - 1] === b[j - 2] && a[i - 2] === b[j - 1]) best = Math.min(best, beforeLast[j - 2]! + 1);
+      if (i > 1 && j > 1 && a[i - 1] === b[j - 2] && a[i - 2] === b[j - 1])
+        best = Math.min(best, beforeLast[j - 2]! + 1);
       row.push(best);
     }
     beforeLast = last;
@@ -21,19 +22,29 @@ export function editDistance(a: string, b: string): number {
 /** Share of letters that may differ before a suggestion becomes a guess (heuristic). */
 const TOLERANCE = 0.4;
 
-/** The candidate nearest to `word`, or undefined when none is near. Capital letters do not count. */
+/** Letters at the beginning that make an abbreviation (heuristic). */
+const ABBREVIATION = 4;
+
+/** The candidate nearest to `word` (the longest of several), or undefined when none is near. Capital letters do not count. */
 export function nearest(word: string, candidates: Iterable<string>): string | undefined {
-  if (word.length > 64) return undefined;
+  if (word.length > 64 || word.length < 2) return undefined;
   let best: string | undefined;
   let bestDistance = Math.max(1, Math.floor(word.length * TOLERANCE)) + 1;
   for (const candidate of candidates) {
     const d = editDistance(word.toLowerCase(), candidate.toLowerCase());
-    if (d < bestDistance) [best, bestDistance] = [candidate, d];
+    const better = d < bestDistance || (d === bestDistance && best !== undefined && candidate.length > best.length);
+    if (better) [best, bestDistance] = [candidate, d];
   }
-  return best;
+  return best ?? abbreviated(word.toLowerCase(), candidates);
 }
 
-/** `; did you mean "x"?` in the form the messages use, or nothing. */
+function abbreviated(word: string, candidates: Iterable<string>): string | undefined {
+  const start = word.slice(0, ABBREVIATION);
+  if (start.length < ABBREVIATION) return undefined;
+  return [...candidates].find((candidate) => candidate.toLowerCase().startsWith(start));
+}
+
+/** ` (did you mean "x"?)`, or nothing. */
 export function suggestion(word: string, candidates: Iterable<string>): string {
   const near = nearest(word, candidates);
   return near === undefined ? '' : ` (did you mean "${near}"?)`;

@@ -26,7 +26,7 @@ export const plainSigns = (text: string): string => text.trim().replace(/[\u2212
 
 /** Words and habits that look like numbers but are not, with the reason. */
 const MISREADINGS: readonly (readonly [RegExp, string, string])[] = [
-  [/^[+-]?(?:nan|inf|infinity|\.nan|\.inf)$/i, 'is not a finite number', 'a finite number'],
+  [/^[+-]?(?:nan|inf|infinity|\.nan|\.inf)$/i, 'is not a finite number', 'a number'],
   [/^(?:null|nil|none|n\/a|na|~|-)$/i, 'is an empty entry', 'a number (0 for a coefficient that vanishes)'],
   [/^(?:true|false|yes|no|on|off)$/i, 'is a yes or no', 'a number'],
   [/^[+-]?\d{1,3}(?:,\d{3})+(?:\.\d*)?$/, 'has commas between its digits', 'digits without commas'],
@@ -60,14 +60,17 @@ export function tooLarge(text: string): NumberProblem | undefined {
   const most = LIMITS.exponent;
   for (const m of text.matchAll(/[eE]([+-]?\d+)/g)) {
     if (!(Math.abs(Number(m[1])) <= most)) {
-      return { problem: `${quote(text)} has the exponent ${quote(m[1]!).slice(1, -1)}`, wanted: `exponents from -${most} to ${most}` };
+      return {
+        problem: `${quote(text)} has the exponent ${quote(m[1]!).slice(1, -1)}`,
+        wanted: `exponents from -${most} to ${most}`,
+      };
     }
   }
   return undefined;
 }
 
 /**
- * Cost of turning `text` into a rational, in units of LIMITS.work: the length for a decimal, the product of the lengths
+ * Cost of turning `text` into a rational, in units of LIMITS.work: twice the length for a decimal, the product of the lengths
  * for a fraction (which is reduced).
  */
 export function numberCost(text: string): number {
@@ -75,7 +78,7 @@ export function numberCost(text: string): number {
     const exponent = Math.abs(Number(EXPONENT.exec(part.trim())?.[1] ?? 0));
     return 1 + (part.length + Math.min(exponent, LIMITS.exponent)) / 19;
   });
-  return words.length === 2 ? words[0]! * words[1]! : words[0]!;
+  return words.length === 2 ? words[0]! * words[1]! : 2 * words[0]!;
 }
 
 /** A decimal or a fraction, exactly; undefined when `text` has neither form. */
@@ -86,7 +89,8 @@ export function parsePlain(text: string): Rational | NumberProblem | undefined {
   if (large !== undefined) return large;
   if (fraction === null) return Rational.parse(text);
   const denominator = Rational.parse(fraction[2]!);
-  if (denominator?.isZero() === true) return { problem: `${quote(text)} divides by zero`, wanted: 'a denominator other than 0' };
+  if (denominator?.isZero() === true)
+    return { problem: `${quote(text)} divides by zero`, wanted: 'a denominator other than 0' };
   return denominator === undefined ? undefined : Rational.parse(fraction[1]!)?.div(denominator);
 }
 
@@ -96,6 +100,9 @@ export function parsePlain(text: string): Rational | NumberProblem | undefined {
  */
 export function significantDigits(text: string): number | undefined {
   if (!DECIMAL.test(text) || !text.includes('.')) return undefined;
-  const digits = text.replace(EXPONENT, '').replace(/[+\-.]/g, '').replace(/^0+/, '');
+  const digits = text
+    .replace(EXPONENT, '')
+    .replace(/[+\-.]/g, '')
+    .replace(/^0+/, '');
   return digits === '' ? undefined : digits.length;
 }

@@ -4,18 +4,18 @@
  */
 import { R, Rational, exact } from '../numerics/index.js';
 import type { Exact } from '../numerics/index.js';
-import { evaluate, sharpened } from './expression/evaluate.js';
+import { evaluate } from './expression/evaluate.js';
 import type { Scope } from './expression/evaluate.js';
 import { scanExpression } from './expression/scan.js';
 import { ExpressionProblem } from './expression/syntax.js';
 import type { ParseExpression } from './expression/syntax.js';
 import { LIMITS } from './limits.js';
-import { isNumberProblem, numberCost, parsePlain, plainSigns } from './number-text.js';
+import { isNumberProblem, numberCost, plainSigns } from './number-text.js';
 import type { NumberProblem } from './number-text.js';
 import { quote } from './quote.js';
 import { PLUS_MINUS, readNumber } from './uncertain.js';
 import type { ReadNumber } from './uncertain.js';
-import { written } from './written.js';
+import { textOf, written } from './written.js';
 import type { Written } from './written.js';
 
 /** Thrown in place of a value when an expression is met and the parser is not there yet. */
@@ -51,7 +51,8 @@ export class Numbers implements Scope {
     const read = this.number(text);
     if (read !== undefined) {
       if (isNumberProblem(read)) return read;
-      if (read.error !== undefined) return { problem: `${quote(text)} has an error`, wanted: 'a number without an error' };
+      if (read.error !== undefined)
+        return { problem: `${quote(text)} has an error`, wanted: 'a number without an error' };
       return written(read.value, read.text);
     }
     return this.expression(text.trim());
@@ -60,7 +61,8 @@ export class Numbers implements Scope {
   /** A number with an optional error; the value may be an expression, as in `11 - 2*nf/3 +- 0.1`. */
   uncertain(text: string): ReadNumber | NumberProblem {
     const read = this.number(text);
-    if (read !== undefined) return isNumberProblem(read) ? read : { ...read, value: written(read.value, textOfValue(read)) };
+    if (read !== undefined)
+      return isNumberProblem(read) ? read : { ...read, value: written(read.value, textOfValue(read)) };
     const sides = text.split(PLUS_MINUS).map((side) => side.trim());
     if (sides.length === 2) {
       const value = this.expression(sides[0]!);
@@ -77,7 +79,9 @@ export class Numbers implements Scope {
     const value = this.exact(text);
     if (isNumberProblem(value)) return value;
     const upper = value.rational ?? upperBound(value);
-    return upper.sign() < 0 ? { problem: `a negative error ${quote(text.trim())}`, wanted: 'an error of 0 or more' } : upper;
+    return upper.sign() < 0
+      ? { problem: `a negative error ${quote(text.trim())}`, wanted: 'an error of 0 or more' }
+      : upper;
   }
 
   private number(text: string): ReadNumber | NumberProblem | undefined {
@@ -92,49 +96,57 @@ export class Numbers implements Scope {
   private expression(raw: string): Written | NumberProblem {
     const text = plainSigns(raw);
     try {
-      scanExpression(text, new Set(this.constants.keys()));
+      this.spend(text.length * LIMITS.workPerCharacter);
+      scanExpression(text, this.constants);
       if (this.parse === undefined) {
         this.parserWanted = true;
         return PARSER_NEEDED;
       }
-      return written(sharpened(evaluate(this.parse(text), this)), text);
+      return written(evaluate(this.parse(text), this), text);
     } catch (problem) {
       return asNumberProblem(problem);
     }
   }
 
-  /** Value of a named constant, worked out now. */
+  /** Value of a named constant, worked out when it is first asked for. */
   constant(name: string): Exact | NumberProblem {
-    try {
-      return this.lookup(name);
-    } catch (problem) {
-      return asNumberProblem(problem);
-    }
-  }
-
-  lookup(name: string): Exact {
-    if (name === 'nf') {
-      this.flavoursUsed = true;
-      if (this.flavours === undefined) throw new ExpressionProblem('nf without a number of flavours', 'a field "flavours"');
-      return exact(this.flavours);
-    }
     const constant = this.constants.get(name);
-    if (constant === undefined) throw new ExpressionProblem(`unknown name ${quote(name)}`, 'a name from "constants"');
-    if (constant.state === 'in work') throw new ExpressionProblem(`a constant ${quote(name)} that refers to itself`, 'constants that can be worked out one by one');
+    if (constant === undefined) return { problem: `unknown name ${quote(name)}`, wanted: 'a name from "constants"' };
+    if (constant.state === 'in work')
+      return {
+        problem: `a constant ${quote(name)} that refers to itself`,
+        wanted: 'constants that can be worked out one by one',
+      };
     if (constant.state === 'untouched') {
       constant.state = 'in work';
       constant.value = this.exact(constant.text);
       constant.state = 'done';
     }
-    const value = constant.value!;
-    if (isNumberProblem(value)) throw new ExpressionProblem(value.problem, value.wanted);
-    return value;
+    return constant.value!;
+  }
+
+  lookup(name: string): Exact {
+    if (name === 'nf') {
+      this.flavoursUsed = true;
+      if (this.flavours === undefined)
+        throw new ExpressionProblem('nf without a number of flavours', 'a field "flavours"');
+      return exact(this.flavours);
+    }
+    const known = this.constants.get(name)?.state === 'done';
+    const value = this.constant(name);
+    if (!isNumberProblem(value)) return value;
+    if (known)
+      throw new ExpressionProblem(`the constant ${quote(name)}, which is wrong itself`, 'that constant mended');
+    throw new ExpressionProblem(value.problem, value.wanted);
   }
 
   spend(amount: number): void {
     this.work += amount;
     if (this.work > LIMITS.work) {
-      throw new ExpressionProblem('more exact arithmetic in this file than is allowed', 'shorter numbers (decimals of fewer digits)');
+      throw new ExpressionProblem(
+        'more exact arithmetic in this file than is allowed',
+        'shorter numbers (decimals of fewer digits)',
+      );
     }
   }
 }
@@ -144,11 +156,8 @@ function asNumberProblem(problem: unknown): NumberProblem {
   throw problem;
 }
 
-/** The value part of "0.25(3)" and its kin, as text. */
-function textOfValue(read: ReadNumber): string {
-  const plain = parsePlain(read.text);
-  return plain instanceof Rational ? read.text : read.value.rational!.toString();
-}
+/** The value without its error, as text. */
+const textOfValue = (read: ReadNumber): string => (read.error === undefined ? read.text : textOf(read.value));
 
 /** A rational with 20 digits just above a non-rational value. */
 function upperBound(value: Exact): Rational {

@@ -19,7 +19,12 @@ function condensate(entry: Entry, field: string, reader: FieldReader): Condensat
   for (const name of ['dimension', 'name']) {
     if (group.get(name) === undefined) complaints.add(group.at, field, `no ${name}`, `a field "${name}"`);
   }
-  const dimension = reader.rational(group.get('dimension'), `${field}.dimension`, 'a positive number', (q) => q.sign() > 0);
+  const dimension = reader.rational(
+    group.get('dimension'),
+    `${field}.dimension`,
+    'a positive number',
+    (q) => q.sign() > 0,
+  );
   const name = reader.text(group.get('name'), `${field}.name`);
   const wilson = reader.exact(group.get('wilson'), `${field}.wilson`, 'non-zero');
   const value = reader.uncertain(group.get('value'), `${field}.value`);
@@ -32,7 +37,12 @@ function condensate(entry: Entry, field: string, reader: FieldReader): Condensat
   }
   const energy = /^[GM]eV(?:\^(.+))?$/.exec(unit ?? '');
   if (energy !== null && (energy[1] ?? '1') !== dimension.toString()) {
-    complaints.add(group.get('unit')!.at, `${field}.unit`, `${quote(unit!)} for dimension ${dimension.toString()}`, 'a unit of that dimension');
+    complaints.add(
+      group.get('unit')!.at,
+      `${field}.unit`,
+      `${quote(unit!)} for dimension ${dimension.toString()}`,
+      'a unit of that dimension',
+    );
   }
   return {
     dimension,

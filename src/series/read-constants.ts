@@ -2,16 +2,29 @@
 import type { Entry } from './entry.js';
 import { CONSTANTS, FUNCTIONS } from './expression/syntax.js';
 import type { FieldReader } from './field-reader.js';
+import { LIMITS, grouped } from './limits.js';
 import { isNumberProblem } from './number-text.js';
 import { quote } from './quote.js';
 
 const NAME = /^[A-Za-z][A-Za-z0-9_]{0,31}$/;
 
 /** Defines the constants for the expressions that follow, and works each of them out, so that a wrong one is told once. */
-export function readConstants(entry: Entry | undefined, reader: FieldReader): readonly { name: string; text: string }[] {
+export function readConstants(
+  entry: Entry | undefined,
+  reader: FieldReader,
+): readonly { name: string; text: string }[] {
   if (entry === undefined) return [];
   if (entry.kind !== 'map') {
     reader.wrongKind(entry, 'constants', 'names with their values');
+    return [];
+  }
+  if (entry.fields.size > LIMITS.constants) {
+    reader.complaints.add(
+      entry.at,
+      'constants',
+      `${grouped(entry.fields.size)} constants`,
+      `at most ${LIMITS.constants}`,
+    );
     return [];
   }
   const list: { name: string; text: string }[] = [];
@@ -30,7 +43,8 @@ export function readConstants(entry: Entry | undefined, reader: FieldReader): re
   }
   for (const { name } of list) {
     const value = reader.numbers.constant(name);
-    if (isNumberProblem(value)) reader.complaints.add(entry.fields.get(name)!.value.at, `constants.${name}`, value.problem, value.wanted);
+    if (isNumberProblem(value))
+      reader.complaints.add(entry.fields.get(name)!.value.at, `constants.${name}`, value.problem, value.wanted);
   }
   return list;
 }

@@ -7,33 +7,56 @@ import { LIMITS } from './limits.js';
 /** Rounded entries can push a zero eigenvalue this far below zero (heuristic: four decimals). */
 const ROUNDING = 1e-4;
 
-export function readCorrelation(entry: Entry | undefined, size: number, reader: FieldReader): readonly (readonly Rational[])[] | undefined {
+export function readCorrelation(
+  entry: Entry | undefined,
+  size: number,
+  reader: FieldReader,
+): readonly (readonly Rational[])[] | undefined {
   if (entry === undefined) return undefined;
   const field = 'correlation';
   const { complaints } = reader;
   const rows = reader.list(entry, field, 'rows');
   if (rows === undefined) return undefined;
-  if (rows.length > LIMITS.correlation) return complaints.add(entry.at, field, `${rows.length} rows`, `at most ${LIMITS.correlation}`);
-  if (rows.length !== size) return complaints.add(entry.at, field, `${rows.length} rows`, `${size}, one for each coefficient`);
+  if (rows.length > LIMITS.correlation)
+    return complaints.add(entry.at, field, `${rows.length} rows`, `at most ${LIMITS.correlation}`);
+  if (rows.length !== size)
+    return complaints.add(entry.at, field, `${rows.length} rows`, `${size}, one for each coefficient`);
   const matrix: Rational[][] = [];
   for (const [i, row] of rows.entries()) {
     const items = reader.list(row, `${field}[${i}]`, 'numbers');
     if (items === undefined) return undefined;
-    if (items.length !== size) return complaints.add(row.at, `${field}[${i}]`, `${items.length} numbers`, `${size}, one for each coefficient`);
+    if (items.length !== size)
+      return complaints.add(row.at, `${field}[${i}]`, `${items.length} numbers`, `${size}, one for each coefficient`);
     const numbers: Rational[] = [];
     for (const [j, item] of items.entries()) {
-      const q = reader.rational(item, `${field}[${i}][${j}]`, 'a number from -1 to 1', (x) => x.abs().cmp(Rational.ONE) <= 0);
+      const q = reader.rational(
+        item,
+        `${field}[${i}][${j}]`,
+        'a number from -1 to 1',
+        (x) => x.abs().cmp(Rational.ONE) <= 0,
+      );
       if (q === undefined) return undefined;
-      if (i === j && !q.equals(Rational.ONE)) return complaints.add(item.at, `${field}[${i}][${j}]`, `${q.toNumber()} on the diagonal`, '1');
+      if (i === j && !q.equals(Rational.ONE))
+        return complaints.add(item.at, `${field}[${i}][${j}]`, `${q.toNumber()} on the diagonal`, '1');
       if (j < i && !q.equals(matrix[j]![i]!)) {
-        return complaints.add(item.at, `${field}[${i}][${j}]`, `${q.toNumber()}, but ${matrix[j]![i]!.toNumber()} across the diagonal`, 'a symmetric matrix');
+        return complaints.add(
+          item.at,
+          `${field}[${i}][${j}]`,
+          `${q.toNumber()}, but ${matrix[j]![i]!.toNumber()} across the diagonal`,
+          'a symmetric matrix',
+        );
       }
       numbers.push(q);
     }
     matrix.push(numbers);
   }
   if (!positiveSemidefinite(matrix.map((row) => row.map((q) => q.toNumber())))) {
-    return complaints.add(entry.at, field, 'a matrix with a negative eigenvalue', 'correlations that can occur together');
+    return complaints.add(
+      entry.at,
+      field,
+      'a matrix with a negative eigenvalue',
+      'correlations that can occur together',
+    );
   }
   return matrix;
 }

@@ -1,8 +1,7 @@
 /** @module The fields of a series file, checked, as a Series. */
 import { exact } from '../numerics/index.js';
 import type { Entry } from './entry.js';
-import { FieldReader } from './field-reader.js';
-import type { Group } from './field-reader.js';
+import type { FieldReader, Group } from './field-reader.js';
 import { plainSigns } from './number-text.js';
 import { quote } from './quote.js';
 import { readCoefficients } from './read-coefficients.js';
@@ -40,6 +39,8 @@ export function readSeries(entry: Entry, id: string, reader: FieldReader, flavou
     entry.kind === 'list'
       ? { kind: 'map', fields: new Map([['coefficients', { key: entry.at, value: entry }]]), at: entry.at }
       : entry;
+  if (whole.kind === 'text')
+    return reader.wrongKind(whole, '', 'a list of coefficients, or the fields of a series file');
   const group = reader.group(whole, '', FIELDS);
   if (group === undefined) return undefined;
   const { complaints } = reader;
@@ -98,9 +99,19 @@ export function readSeries(entry: Entry, id: string, reader: FieldReader, flavou
     if (!Number.isInteger(flavours) || flavours < 0 || flavours > MOST_FLAVOURS) {
       complaints.add(undefined, 'flavours', `${flavours} asked for`, `an integer from 0 to ${MOST_FLAVOURS}`);
     } else if (choices !== undefined && !choices.includes(flavours)) {
-      complaints.add(undefined, 'flavours', `${flavours} asked for`, `one of ${choices.join(', ')}, for which the series is meant`);
+      complaints.add(
+        undefined,
+        'flavours',
+        `${flavours} asked for`,
+        `one of ${choices.join(', ')}, for which the series is meant`,
+      );
     } else if (fileFlavours !== undefined && fileFlavours !== flavours && !anyFlavours) {
-      complaints.add(undefined, 'flavours', `${flavours} asked for, but the coefficients are fixed numbers`, `${fileFlavours}`);
+      complaints.add(
+        undefined,
+        'flavours',
+        `${flavours} asked for, but the coefficients are fixed numbers`,
+        `${fileFlavours}`,
+      );
     }
   }
 }

@@ -8,14 +8,23 @@ import type { Written } from './written.js';
 const FIELDS = ['u', 't', 'dimension', 'exponent', 'anomalous dimension', 'strength', 'kind'];
 const KINDS: readonly SingularityKind[] = ['infrared', 'ultraviolet', 'other'];
 
-export function readSingularities(entry: Entry | undefined, coupling: Coupling, reader: FieldReader): readonly KnownSingularity[] {
+export function readSingularities(
+  entry: Entry | undefined,
+  coupling: Coupling,
+  reader: FieldReader,
+): readonly KnownSingularity[] {
   if (entry === undefined) return [];
   const items = reader.list(entry, 'singularities', 'singularities') ?? [];
   const list = items.map((item, i) => singularity(item, `singularities[${i}]`, coupling, reader));
   return list.filter((s) => s !== undefined);
 }
 
-function singularity(entry: Entry, field: string, coupling: Coupling, reader: FieldReader): KnownSingularity | undefined {
+function singularity(
+  entry: Entry,
+  field: string,
+  coupling: Coupling,
+  reader: FieldReader,
+): KnownSingularity | undefined {
   const group = reader.group(entry, field, FIELDS);
   if (group === undefined) return undefined;
   const { complaints } = reader;
@@ -30,7 +39,12 @@ function singularity(entry: Entry, field: string, coupling: Coupling, reader: Fi
   }
   const u = reader.exact(group.get('u'), `${field}.u`, 'non-zero');
   const t = reader.exact(group.get('t'), `${field}.t`, 'non-zero');
-  const dimension = reader.rational(group.get('dimension'), `${field}.dimension`, 'a positive number', (q) => q.sign() > 0);
+  const dimension = reader.rational(
+    group.get('dimension'),
+    `${field}.dimension`,
+    'a positive number',
+    (q) => q.sign() > 0,
+  );
   const exponent = reader.exact(group.get('exponent'), `${field}.exponent`);
   const anomalousDimension = reader.exact(group.get('anomalous dimension'), `${field}.anomalous dimension`);
   const strength = reader.uncertain(group.get('strength'), `${field}.strength`);
@@ -42,19 +56,32 @@ function singularity(entry: Entry, field: string, coupling: Coupling, reader: Fi
     ...(dimension && { dimension }),
     ...(exponent && { exponent }),
     ...(anomalousDimension && { anomalousDimension }),
-    ...(strength && { strength: { value: strength.value, ...(strength.error && { error: strength.error }), text: strength.text } }),
+    ...(strength && {
+      strength: { value: strength.value, ...(strength.error && { error: strength.error }), text: strength.text },
+    }),
     kind: kind(group, field, u ?? t, coupling, reader),
   };
 }
 
 /** Stated, or else from the side of the axis: infrared on the positive one, ultraviolet on the negative one. */
-function kind(group: Group, field: string, position: Written | undefined, coupling: Coupling, reader: FieldReader): SingularityKind {
+function kind(
+  group: Group,
+  field: string,
+  position: Written | undefined,
+  coupling: Coupling,
+  reader: FieldReader,
+): SingularityKind {
   const side = position === undefined ? 1 : signExact(position);
   const stated = reader.choice(group.get('kind'), `${field}.kind`, KINDS);
   if (stated === undefined) return coupling.plain ? 'other' : side < 0 ? 'ultraviolet' : 'infrared';
   if ((stated === 'infrared' && side < 0) || (stated === 'ultraviolet' && side > 0)) {
     const where = side < 0 ? 'negative' : 'positive';
-    reader.complaints.add(group.get('kind')!.at, `${field}.kind`, `${stated} at a ${where} position`, side < 0 ? 'ultraviolet or other' : 'infrared or other');
+    reader.complaints.add(
+      group.get('kind')!.at,
+      `${field}.kind`,
+      `${stated} at a ${where} position`,
+      side < 0 ? 'ultraviolet or other' : 'infrared or other',
+    );
   }
   return stated;
 }

@@ -38,7 +38,11 @@ function cells(line: Line): Cell[] {
     if (c === '"') quoted = !quoted;
     if (i < line.text.length && (c !== ',' || quoted)) continue;
     const raw = line.text.slice(start, i);
-    const text = raw.trim().replace(/^"(.*)"$/, '$1').replaceAll('""', '"').trim();
+    const text = raw
+      .trim()
+      .replace(/^"(.*)"$/, '$1')
+      .replaceAll('""', '"')
+      .trim();
     const lead = raw.length - raw.trimStart().length;
     list.push({ kind: 'text', text, at: { line: line.number, column: start + lead + 1 } });
     start = i + 1;
@@ -57,7 +61,12 @@ function bare(coefficients: readonly Entry[], at: Place, firstPower?: Cell): Ent
 
 function tooMany(list: readonly Line[], complaints: Complaints): boolean {
   if (list.length <= LIMITS.coefficients + 1) return false;
-  complaints.add(undefined, 'coefficients', `${grouped(list.length)} lines of coefficients`, `at most ${grouped(LIMITS.coefficients)}`);
+  complaints.add(
+    undefined,
+    'coefficients',
+    `${grouped(list.length)} lines of coefficients`,
+    `at most ${grouped(LIMITS.coefficients)}`,
+  );
   return true;
 }
 
@@ -66,10 +75,13 @@ export function listEntries(text: string, complaints: Complaints): Entry | undef
   const list = lines(text);
   if (tooMany(list, complaints)) return undefined;
   const items = list.map((line): Entry => {
-    const lead = line.text.length - line.text.trimStart().length;
-    return { kind: 'text', text: line.text.trim().replace(/\s*,$/, ''), at: { line: line.number, column: lead + 1 } };
+    const column = line.text.length - line.text.trimStart().length + 1;
+    const item = line.text.trim();
+    const bareItem = item.endsWith(',') ? item.slice(0, -1).trimEnd() : item;
+    return { kind: 'text', text: bareItem, at: { line: line.number, column } };
   });
-  return bare(items, items[0]?.at ?? START);
+  if (items[0] === undefined) return complaints.add(START, '', 'an empty file', 'a series file');
+  return bare(items, items[0].at);
 }
 
 /** CSV with a header; the orders rise one by one, and the first is the power of the first coefficient. */
@@ -95,7 +107,13 @@ export function csvEntries(text: string, complaints: Complaints): Entry | undefi
     const entries = cells(row);
     const field = `coefficients[${i}]`;
     if (entries.length !== header.length) {
-      complaints.add({ line: row.number, column: 1 }, field, `${entries.length} cells`, `${header.length}, as in the header`);
+      complaints.add(
+        { line: row.number, column: 1 },
+        field,
+        `${entries.length} cells`,
+        `${header.length}, as in the header`,
+      );
+      items.push({ kind: 'text', text: '0', at: { line: row.number, column: 1 } });
       continue;
     }
     const orderCell = entries[order!];
@@ -103,7 +121,12 @@ export function csvEntries(text: string, complaints: Complaints): Entry | undefi
       first ??= orderCell;
       const wanted = Number(first.text) + i;
       if (/^[+-]?\d{1,6}$/.test(first.text) && orderCell.text !== first.text && Number(orderCell.text) !== wanted) {
-        complaints.add(orderCell.at, `${field}.order`, quote(orderCell.text), `${wanted}: orders rise one by one (write 0 for a coefficient that vanishes)`);
+        complaints.add(
+          orderCell.at,
+          `${field}.order`,
+          quote(orderCell.text),
+          `${wanted}: orders rise one by one (write 0 for a coefficient that vanishes)`,
+        );
       }
     }
     const valueCell = entries[value!]!;

@@ -3,7 +3,16 @@
  * Read exactly; the same reader serves the series file and the command line.
  */
 import { Rational, exact } from '../numerics/index.js';
-import { DECIMAL, MANTISSA, isNumberProblem, misreading, parsePlain, plainSigns, significantDigits, tooLarge } from './number-text.js';
+import {
+  DECIMAL,
+  MANTISSA,
+  isNumberProblem,
+  misreading,
+  parsePlain,
+  plainSigns,
+  significantDigits,
+  tooLarge,
+} from './number-text.js';
 import type { NumberProblem } from './number-text.js';
 import { quote } from './quote.js';
 import type { Uncertain } from './series.js';
@@ -67,7 +76,10 @@ function concise(t: string): Parts | NumberProblem | undefined {
   const plus = size(both?.[1] ?? swapped?.[2] ?? inside.trim());
   const minus = size(both?.[2] ?? swapped?.[1] ?? inside.trim());
   if (plus === undefined || minus === undefined) {
-    return { problem: `${quote(t)} has the error ${quote(inside)}`, wanted: 'digits in the parentheses, as in 0.25(3) or 0.25(+3-2)' };
+    return {
+      problem: `${quote(t)} has the error ${quote(inside)}`,
+      wanted: 'digits in the parentheses, as in 0.25(3) or 0.25(+3-2)',
+    };
   }
   const value = Rational.parse(`${sign}${mantissa}e${exponent}`);
   return value === undefined ? undefined : { value, error: { plus, minus } };
@@ -81,7 +93,8 @@ function symmetric(t: string): Parts | NumberProblem | undefined {
   if (value === undefined || isNumberProblem(value)) return value;
   if (sides.length > 2) return { problem: `${quote(t)} has several errors`, wanted: 'one error: combine them first' };
   const error = parsePlain(sides[1]!);
-  if (error === undefined) return { problem: `${quote(t)} has the error ${quote(sides[1]!)}`, wanted: 'a number after +-' };
+  if (error === undefined)
+    return { problem: `${quote(t)} has the error ${quote(sides[1]!)}`, wanted: 'a number after +-' };
   if (isNumberProblem(error)) return error;
   if (error.sign() < 0) return { problem: `${quote(t)} has a negative error`, wanted: 'an error of 0 or more' };
   return { value, error: { plus: error, minus: error } };
@@ -121,5 +134,8 @@ function scaled(t: string): Parts | NumberProblem | undefined {
   if (parts === undefined || isNumberProblem(parts)) return parts;
   const unit = Rational.parse(`1e${m[2]!}`);
   if (unit === undefined) return undefined;
-  return { value: parts.value.mul(unit), error: { plus: parts.error.plus.mul(unit), minus: parts.error.minus.mul(unit) } };
+  return {
+    value: parts.value.mul(unit),
+    error: { plus: parts.error.plus.mul(unit), minus: parts.error.minus.mul(unit) },
+  };
 }

@@ -20,7 +20,10 @@ function scalar(text: string): string {
 type Field = readonly [name: string, value: string | undefined];
 
 const flow = (fields: readonly Field[]): string =>
-  `{ ${fields.filter(([, value]) => value !== undefined).map(([name, value]) => `${name}: ${value!}`).join(', ')} }`;
+  `{ ${fields
+    .filter(([, value]) => value !== undefined)
+    .map(([name, value]) => `${name}: ${value!}`)
+    .join(', ')} }`;
 
 /** The texts of a value and its error; one text when it reads back to just this number. */
 function numberFields(n: Uncertain): { readonly text?: string; readonly fields: readonly Field[] } {
@@ -32,7 +35,12 @@ function numberFields(n: Uncertain): { readonly text?: string; readonly fields: 
   if (same) return { text: n.text, fields: [['value', scalar(n.text)]] };
   const value = textOf(n.value);
   if (n.error === undefined) return { text: value, fields: [['value', scalar(value)]] };
-  return { fields: [['value', scalar(value)], ['error', scalar(spreadText(n.error).replace(/^\+- /, ''))]] };
+  return {
+    fields: [
+      ['value', scalar(value)],
+      ['error', scalar(spreadText(n.error).replace(/^\+- /, ''))],
+    ],
+  };
 }
 
 function uncertain(n: Uncertain, others: readonly Field[] = []): string {
@@ -43,7 +51,8 @@ function uncertain(n: Uncertain, others: readonly Field[] = []): string {
 
 const text = (value: string | undefined): string | undefined => (value === undefined ? undefined : scalar(value));
 
-const coefficient = (c: Coefficient): string => uncertain(c, [['status', c.status === 'estimated' ? c.status : undefined]]);
+const coefficient = (c: Coefficient): string =>
+  uncertain(c, [['status', c.status === 'estimated' ? c.status : undefined]]);
 
 const singularity = (s: KnownSingularity): string =>
   flow([
@@ -93,7 +102,10 @@ export function writeSeries(s: Series): string {
   field('additive', scalar(textOf(s.additive)));
   if (s.constants !== undefined) lines.push('constants:', ...s.constants.map((c) => `  ${c.name}: ${scalar(c.text)}`));
   list('coefficients', s.coefficients.map(coefficient));
-  list('correlation', (s.correlation ?? []).map((row) => `[${row.map((q) => q.toString()).join(', ')}]`));
+  list(
+    'correlation',
+    (s.correlation ?? []).map((row) => `[${row.map((q) => q.toString()).join(', ')}]`),
+  );
   list('singularities', s.singularities.map(singularity));
   list('condensates', s.condensates.map(condensate));
   if (s.measurement) field('measurement', uncertain(s.measurement, [['unit', text(s.measurement.unit)], ['source', text(s.measurement.source)]])); // prettier-ignore

@@ -36,7 +36,10 @@ function decimal(value: Exact): string {
   const digits = (n: bigint): number => n.toString().length;
   const up = DIGITS - (digits(q.abs().num) - digits(q.den));
   const scale = 10n ** BigInt(Math.abs(up));
-  const n = q.mul(up >= 0 ? exact(scale).rational! : exact(scale).rational!.inv()).abs().floor();
+  const n = q
+    .mul(up >= 0 ? exact(scale).rational! : exact(scale).rational!.inv())
+    .abs()
+    .floor();
   const text = n.toString().slice(0, DIGITS);
   const point = n.toString().length - up;
   return `${q.sign() < 0 ? '-' : ''}${text[0]!}.${text.slice(1)}e${point - 1}`;

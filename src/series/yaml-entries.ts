@@ -16,7 +16,10 @@ interface Located {
   readonly tag?: string | undefined;
 }
 
-/** The entries of a text; undefined (with complaints) when it is no valid document. */
+/** Stands for what was refused, so that the rest can be read and its problems told too. */
+const REFUSED = '0';
+
+/** The entries of a text, with complaints about what is refused in it; undefined when it is no valid document. */
 export function yamlEntries(text: string, complaints: Complaints): Entry | undefined {
   const lineCounter = new LineCounter();
   // The uniqueness of keys is checked below in one pass; the library compares all pairs.
@@ -35,19 +38,21 @@ export function yamlEntries(text: string, complaints: Complaints): Entry | undef
   if (doc.contents === null) return complaints.add({ line: 1, column: 1 }, '', 'an empty file', 'a series file');
   return convert(doc.contents, '', { line: 1, column: 1 });
 
-  function convert(node: unknown, field: string, fallback: Place): Entry | undefined {
+  function convert(node: unknown, field: string, fallback: Place): Entry {
     const located = node as Located;
     const at = located.range ? place(located.range[0]) : fallback;
-    if (isAlias(node)) return complaints.add(at, field, `a reference *${node.source}`, 'the value written out');
-    if (located.anchor !== undefined) return complaints.add(at, field, `an anchor &${located.anchor}`, 'no anchors or references');
+    if (isAlias(node)) {
+      complaints.add(at, field, `a reference *${node.source.slice(0, 40)}`, 'the value written out');
+      return { kind: 'text', text: REFUSED, at };
+    }
+    if (located.anchor !== undefined)
+      complaints.add(at, field, `an anchor &${located.anchor.slice(0, 40)}`, 'no anchors or references');
     if (located.tag !== undefined && !/^tag:yaml.org,2002:(?:str|seq|map)$/.test(located.tag)) {
-      return complaints.add(at, field, `a tag ${quote(located.tag)}`, 'no tags');
+      complaints.add(at, field, `a tag ${quote(located.tag)}`, 'no tags');
     }
     if (isScalar(node)) return { kind: 'text', text: String(node.value ?? ''), at };
-    if (isSeq(node)) {
-      const items = node.items.map((item, i) => convert(item, `${field}[${i}]`, at));
-      return { kind: 'list', items: items.filter((item) => item !== undefined), at };
-    }
+    if (isSeq(node))
+      return { kind: 'list', items: node.items.map((item, i) => convert(item, `${field}[${i}]`, at)), at };
     if (!isMap(node)) return { kind: 'text', text: '', at };
     const fields = new Map<string, { key: Place; value: Entry }>();
     for (const { key, value } of node.items) {
@@ -57,10 +62,10 @@ export function yamlEntries(text: string, complaints: Complaints): Entry | undef
       }
       const name = String(key.value ?? '');
       const keyAt = key.range ? place(key.range[0]) : at;
-      const path = field === '' ? name : `${field}.${name}`;
-      if (fields.has(name)) complaints.add(keyAt, path, `the field ${quote(name)} for a second time`, 'each field once');
-      const entry = convert(value, path, keyAt);
-      if (entry !== undefined) fields.set(name, { key: keyAt, value: entry });
+      const path = field === '' ? name.slice(0, 80) : `${field}.${name.slice(0, 80)}`;
+      if (fields.has(name))
+        complaints.add(keyAt, path, `the field ${quote(name)} for a second time`, 'each field once');
+      fields.set(name, { key: keyAt, value: convert(value, path, keyAt) });
     }
     return { kind: 'map', fields, at };
   }

@@ -7,7 +7,21 @@
  * Bound      a sum may cancel leading digits: the value as a whole is evaluated again with more bits until its ball is as
  *            sharp as was asked for (six rounds; a value that is zero stays a ball around zero).
  */
-import { R, Rational, addExact, divExact, eulerGamma, exact, exactReal, log, mulExact, pi, signExact, subExact, zeta } from '../../numerics/index.js';
+import {
+  R,
+  Rational,
+  addExact,
+  divExact,
+  eulerGamma,
+  exact,
+  exactReal,
+  log,
+  mulExact,
+  pi,
+  signExact,
+  subExact,
+  zeta,
+} from '../../numerics/index.js';
 import type { Exact } from '../../numerics/index.js';
 import { LIMITS, grouped } from '../limits.js';
 import { isNumberProblem, parsePlain } from '../number-text.js';
@@ -35,21 +49,27 @@ const size = (q: Rational): number => bits(q.num) + bits(q.den);
 /** 19 digits are 63 bits. */
 const words = (q: Rational): number => 1 + size(q) / 63;
 
-/** Turns away values beyond LIMITS.bits, whatever the precision. */
+const excessive = (): ExpressionProblem =>
+  new ExpressionProblem(`a value of more than ${grouped(LIMITS.bits)} bits`, 'numbers of a moderate size');
+
+/** |log2 |x|| for an x that is not rational, about. */
+const magnitude = (x: Exact): number => Math.abs(R.upperBits(x.ball(64)));
+
+/** Turns away rationals of more than LIMITS.bits; others are looked at when they are raised to a power, and at the end. */
 function moderate(value: Exact): Exact {
-  const magnitude = value.rational === undefined ? Math.abs(R.upperBits(value.ball(64))) : size(value.rational);
-  if (magnitude <= LIMITS.bits) return value;
-  throw new ExpressionProblem(`a value of more than ${grouped(LIMITS.bits)} bits`, 'numbers of a moderate size');
+  if (value.rational !== undefined && size(value.rational) > LIMITS.bits) throw excessive();
+  return value;
 }
 
 /** Re-evaluates with more bits until a cancellation is made good. */
-export function sharpened(value: Exact): Exact {
+function sharpened(value: Exact): Exact {
   if (value.rational !== undefined) return value;
   return exactReal((prec) => {
     let work = prec + 16;
     let ball = value.ball(work);
     for (let round = 0; round < 6 && R.accuracyBits(ball) < prec; round++) {
-      work += round < 2 ? Math.max(16, Math.min(work, prec - R.accuracyBits(ball) + 16)) : work;
+      const missing = Math.ceil(prec - R.accuracyBits(ball)) + 16;
+      work += round < 2 ? Math.min(work, missing) : work;
       ball = value.ball(work);
     }
     return ball;
@@ -58,21 +78,26 @@ export function sharpened(value: Exact): Exact {
 
 function integer(value: Exact, what: string, least: number): number {
   const q = value.rational;
-  if (q === undefined || !q.isInteger()) throw new ExpressionProblem(`${what} is not an integer`, `an integer in ${what}`);
+  if (q === undefined || !q.isInteger()) throw new ExpressionProblem(`${what} is not an integer`, 'an integer');
   const n = Number(q.num);
   if (n >= least && n <= LIMITS.power) return n;
-  throw new ExpressionProblem(`${what} is ${quote(q.toString()).slice(1, -1)}`, `an integer from ${least} to ${grouped(LIMITS.power)}`);
+  throw new ExpressionProblem(
+    `${what} is ${quote(q.toString()).slice(1, -1)}`,
+    `an integer from ${least} to ${grouped(LIMITS.power)}`,
+  );
 }
 
 function power(base: Exact, exponent: Exact, scope: Scope): Exact {
   const n = integer(exponent, 'the power', -LIMITS.power);
   const q = base.rational;
   if (q === undefined) {
-    if (n < 0 && signExact(base) === 0) throw new ExpressionProblem('a division by what cannot be told from zero', 'a divisor other than 0');
+    if (n < 0 && signExact(base) === 0)
+      throw new ExpressionProblem('a division by what cannot be told from zero', 'a divisor other than 0');
+    if (Math.abs(n) > 1 && magnitude(base) * Math.abs(n) > LIMITS.bits) throw excessive();
     return exactReal((prec) => R.powInt(base.ball(prec + 16), n, prec + 8));
   }
   if (q.isZero() && n < 0) throw new ExpressionProblem('a negative power of zero', 'a base other than 0');
-  if (size(q) * Math.abs(n) > LIMITS.bits + 64) throw new ExpressionProblem(`a power of more than ${grouped(LIMITS.bits)} bits`, 'numbers of a moderate size');
+  if (size(q) * Math.abs(n) > LIMITS.bits) throw excessive();
   scope.spend((words(q) * Math.abs(n)) ** 2 / 16);
   return exact(q.pow(n));
 }
@@ -98,7 +123,11 @@ function rootOfSquare(n: bigint): bigint | undefined {
 function squareRoot(x: Exact): Exact {
   const sign = signExact(x);
   if (x.rational?.isZero() === true) return x;
-  if (sign <= 0) throw new ExpressionProblem(sign < 0 ? 'sqrt of a negative number' : 'sqrt of what cannot be told from zero', 'an argument of 0 or more');
+  if (sign <= 0)
+    throw new ExpressionProblem(
+      sign < 0 ? 'sqrt of a negative number' : 'sqrt of what cannot be told from zero',
+      'an argument of 0 or more',
+    );
   const q = x.rational;
   if (q !== undefined) {
     const num = rootOfSquare(q.num);
@@ -128,18 +157,24 @@ function number(text: string, scope: Scope): Exact {
   return exact(q);
 }
 
-/** Value of a tree; throws ExpressionProblem for divisions by zero, functions outside their range, and excessive sizes. */
+/** Value of an expression; throws ExpressionProblem for divisions by zero, functions outside their range, and excessive sizes. */
 export function evaluate(tree: SyntaxTree, scope: Scope): Exact {
+  const value = sharpened(walk(tree, scope));
+  if (value.rational === undefined && magnitude(value) > LIMITS.bits) throw excessive();
+  return value;
+}
+
+function walk(tree: SyntaxTree, scope: Scope): Exact {
   switch (tree.kind) {
     case 'number':
       return moderate(number(tree.text, scope));
     case 'name':
       return BUILT_IN.get(tree.name) ?? scope.lookup(tree.name);
     case 'negative':
-      return subExact(exact(0), evaluate(tree.of, scope));
+      return subExact(exact(0), walk(tree.of, scope));
     case 'call':
-      return moderate(call(tree.name, evaluate(tree.argument, scope)));
+      return moderate(call(tree.name, walk(tree.argument, scope)));
     case 'binary':
-      return moderate(combine(tree.operator, evaluate(tree.left, scope), evaluate(tree.right, scope), scope));
+      return moderate(combine(tree.operator, walk(tree.left, scope), walk(tree.right, scope), scope));
   }
 }

@@ -44,7 +44,8 @@ function copy(node: AnyNode): SyntaxTree {
     case 'ParenthesisNode':
       return node.content === undefined ? refuse(node) : copy(node.content);
     case 'FunctionNode':
-      if (typeof node.fn !== 'object' || typeof node.fn.name !== 'string' || first === undefined || args.length !== 1) break;
+      if (typeof node.fn !== 'object' || typeof node.fn.name !== 'string' || first === undefined || args.length !== 1)
+        break;
       return { kind: 'call', name: node.fn.name, argument: copy(first) };
     case 'OperatorNode':
       if (first === undefined || node.implicit === true) break;

@@ -15,6 +15,9 @@ interface Token {
 
 const TOKEN = /\s*(?:((?:\d+(?:\.\d*)?|\.\d+)(?:[eE][+-]?\d+)?)|([A-Za-z_][A-Za-z0-9_]*)|([-+*/^])|(\()|(\)))/y;
 
+/** The file's own constants. */
+type Names = ReadonlyMap<string, unknown>;
+
 /** Names people type for what is called otherwise here. */
 const OTHER_NAMES: ReadonlyMap<string, string> = new Map([
   ['ln', 'log'],
@@ -37,7 +40,7 @@ const OTHER_NAMES: ReadonlyMap<string, string> = new Map([
   ['a4', 'li4_half'],
 ]);
 
-function tokens(text: string, names: ReadonlySet<string>): Token[] {
+function tokens(text: string, names: Names): Token[] {
   const list: Token[] = [];
   TOKEN.lastIndex = 0;
   let end = 0;
@@ -51,16 +54,20 @@ function tokens(text: string, names: ReadonlySet<string>): Token[] {
   }
   const rest = text.slice(end).trimStart();
   if (rest !== '') {
-    throw new ExpressionProblem(`${quote(String.fromCodePoint(rest.codePointAt(0)!))} in ${quote(text)}`, EXPRESSION_FORMS);
+    throw new ExpressionProblem(
+      `${quote(String.fromCodePoint(rest.codePointAt(0)!))} in ${quote(text)}`,
+      EXPRESSION_FORMS,
+    );
   }
   return list;
 }
 
-function nameKind(name: string, names: ReadonlySet<string>): 'name' | 'function' {
+function nameKind(name: string, names: Names): 'name' | 'function' {
   if (FUNCTIONS.includes(name)) return 'function';
   if (CONSTANTS.includes(name) || names.has(name)) return 'name';
   const other = OTHER_NAMES.get(name);
-  const hint = other === undefined ? suggestion(name, [...FUNCTIONS, ...CONSTANTS, ...names]) : ` (write ${other})`;
+  const hint =
+    other === undefined ? suggestion(name, [...FUNCTIONS, ...CONSTANTS, ...names.keys()]) : ` (write ${other})`;
   throw new ExpressionProblem(`unknown name ${quote(name)}${hint}`, `${EXPRESSION_FORMS}, or a name from "constants"`);
 }
 
@@ -83,7 +90,7 @@ function neighbours(before: Token, after: Token): void {
 }
 
 /** Throws ExpressionProblem unless `text` consists of the words of the language in a plausible order. */
-export function scanExpression(text: string, names: ReadonlySet<string>): void {
+export function scanExpression(text: string, names: Names): void {
   if (text.length > LIMITS.expressionLength) {
     throw new ExpressionProblem(
       `an expression of ${grouped(text.length)} characters`,
@@ -104,6 +111,7 @@ export function scanExpression(text: string, names: ReadonlySet<string>): void {
   if (depth > 0) throw new ExpressionProblem(`a "(" without its ")" in ${quote(text)}`, 'balanced parentheses');
   const last = list.at(-1);
   if (last === undefined) throw new ExpressionProblem('nothing', 'an expression');
-  if (last.kind === 'sign') throw new ExpressionProblem(`nothing after the last ${quote(last.text)}`, 'a complete expression');
+  if (last.kind === 'sign')
+    throw new ExpressionProblem(`nothing after the last ${quote(last.text)}`, 'a complete expression');
   if (last.kind === 'function') neighbours(last, last);
 }

@@ -7,7 +7,12 @@ export type SyntaxTree =
   | { readonly kind: 'name'; readonly name: string }
   | { readonly kind: 'call'; readonly name: string; readonly argument: SyntaxTree }
   | { readonly kind: 'negative'; readonly of: SyntaxTree }
-  | { readonly kind: 'binary'; readonly operator: BinaryOperator; readonly left: SyntaxTree; readonly right: SyntaxTree };
+  | {
+      readonly kind: 'binary';
+      readonly operator: BinaryOperator;
+      readonly left: SyntaxTree;
+      readonly right: SyntaxTree;
+    };
 
 /** Turns checked text into a tree; throws ExpressionProblem. */
 export type ParseExpression = (text: string) => SyntaxTree;
@@ -26,4 +31,5 @@ export class ExpressionProblem extends Error {
 
 export const FUNCTIONS: readonly string[] = ['zeta', 'log', 'sqrt'];
 export const CONSTANTS: readonly string[] = ['pi', 'gamma_euler', 'li4_half', 'nf'];
-export const EXPRESSION_FORMS = 'numbers, + - * / ^, parentheses, pi, zeta(n), log(x), sqrt(x), gamma_euler, li4_half, nf';
+export const EXPRESSION_FORMS =
+  'numbers, + - * / ^, parentheses, pi, zeta(n), log(x), sqrt(x), gamma_euler, li4_half, nf';
