@@ -22,8 +22,10 @@ export interface Sum {
   /** Truncation error by the prescription's own recipe, absolute. */
   readonly truncation?: number;
   readonly termsUsed: number;
-  /** Trust in the number; its digits are certified by the enclosure. */
+  /** Trust in the number as an answer. */
   readonly trust: Trust;
+  /** Trust in the digits of `value`: certified by the enclosure unless said otherwise (quadrature: converged). */
+  readonly digitsTrust?: Trust;
   readonly notes: readonly string[];
   /** Marks the family's own best member. */
   readonly central?: boolean;
@@ -55,7 +57,12 @@ export interface Prescription {
   apply(expansion: Expansion, growth: Growth, request: Request): readonly Outcome[];
 }
 
-export const refusal = (variant: string, reason: string, remedy: string): Refusal => ({ kind: 'refusal', variant, reason, remedy });
+export const refusal = (variant: string, reason: string, remedy: string): Refusal => ({
+  kind: 'refusal',
+  variant,
+  reason,
+  remedy,
+});
 
 /** Working precision in bits for `digits` decimal digits. */
 export const workingBits = (digits: number): number => Math.ceil(digits * 3.33) + 40;
