@@ -51,3 +51,5 @@ export {
 } from './matching/thresholds.js';
 export * from './constants/index.js';
 export * from './rewrite/index.js';
+export { exactAlpha, exactLambda, exactMassRatio, type ExactEvolution } from './running/exact-alpha.js';
+export { complexAlpha, type ComplexEvolution } from './running/complex-ball.js';

@@ -48,7 +48,8 @@ function advance(flow: Flow, y: ComplexNumber, h: ComplexNumber): ComplexNumber 
   return undefined;
 }
 
-const inTheWay: Refusal = refuse(
+/** The answer to a path that meets the singularity. */
+export const pathBlocked: Refusal = refuse(
   'the path in the complex plane of μ² runs into the Landau singularity of the coupling',
   'use a larger radius, a higher scale or fewer loops',
 );
@@ -81,10 +82,10 @@ export function evolveAlongPath(
           break;
         }
         length /= 2;
-        if (length < SHORTEST_STEP) return inTheWay;
+        if (length < SHORTEST_STEP) return pathBlocked;
       }
       y = next;
-      if (!(cabs(y) * LARGEST_COUPLING > 1)) return inTheWay;
+      if (!(cabs(y) * LARGEST_COUPLING > 1)) return pathBlocked;
     }
     out.push(cdiv({ re: 1, im: 0 }, y));
   }
@@ -94,5 +95,5 @@ export function evolveAlongPath(
 /** α_s after ln μ² has moved by the complex `logRatio` along a straight line. */
 export function evolveComplex(flow: Flow, alpha: number, logRatio: ComplexNumber): ComplexNumber | Refusal {
   const values = evolveAlongPath(flow, alpha, [logRatio]);
-  return 'reason' in values ? values : (values[0] ?? inTheWay);
+  return 'reason' in values ? values : (values[0] ?? pathBlocked);
 }

@@ -10,9 +10,10 @@
  * Bound      a few units of 2^-53 of ln(μ²/Λ²).
  * Reference  definition of Λ: FLAG Review 2024, arXiv:2411.04268, Eq. (285); Bardeen, Buras, Duke, Muta 1978.
  */
-import { betaNumbers, massDimensionNumbers, type Loops } from '../beta-function.js';
-import { zerosOf } from './beta-zeros.js';
-import { cdiv, cmul, polynomialAt, type ComplexNumber } from './complex-number.js';
+import { C, R } from '../../numerics/index.js';
+import type { Loops } from '../beta-function.js';
+import type { ComplexNumber } from './complex-number.js';
+import { ballFlow } from './flow-ball.js';
 
 export interface FlowPole {
   /** w = 1/z, z a zero of S. */
@@ -41,6 +42,9 @@ export interface Flow {
   readonly landauLog: number;
 }
 
+/** Precision at which the constants of the flow are enclosed before they are rounded to doubles. */
+const DOUBLE_BITS = 80;
+
 const flows = new Map<number, Flow>();
 
 /** The flow for n_f flavours (an integer from 0 to 16) and 1–5 loops; computed once. */
@@ -55,24 +59,29 @@ export function flowOf(flavours: number, loops: Loops): Flow {
 }
 
 function createFlow(flavours: number, loops: Loops): Flow {
-  const b = betaNumbers(flavours, loops, '1');
-  const g = massDimensionNumbers(flavours, loops, '1');
-  const b0 = b[0] ?? NaN;
-  const s = b.map((x) => x / b0);
-  const slope = s.slice(1).map((c, k) => c * (k + 1));
-  const one = { re: 1, im: 0 };
-  const poles = zerosOf(s).map((z): FlowPole => {
-    const d = polynomialAt(slope, z);
-    return {
-      w: cdiv(one, z),
-      coupling: cdiv(one, cmul(cmul(z, z), d)),
-      mass: cdiv(polynomialAt(g, z), cmul(z, d)),
-    };
-  });
+  const flowBalls = ballFlow(flavours, loops, DOUBLE_BITS);
+  if (flowBalls === undefined) throw new RangeError(`the zeros of the ${loops}-loop beta function do not separate`);
+  const b0 = R.toNumber(flowBalls.b0);
+  const s = flowBalls.s.map(R.toNumber);
+  const poles = flowBalls.poles.map(({ w, coupling, mass }): FlowPole => ({
+    w: C.toNumbers(w),
+    coupling: C.toNumbers(coupling),
+    mass: C.toNumbers(mass),
+  }));
   const positive = poles.filter(({ w }) => w.im === 0 && w.re > 0).map(({ w }) => w.re);
   const fixedPoint = positive.length > 0 ? 1 / Math.max(...positive) : Infinity;
   const constant = (s[1] ?? 0) * Math.log(b0);
-  const flow = { flavours, loops, b0, s, g0: g[0] ?? NaN, poles, constant, fixedPoint, landauLog: -Infinity };
+  const flow = {
+    flavours,
+    loops,
+    b0,
+    s,
+    g0: R.toNumber(flowBalls.g0),
+    poles,
+    constant,
+    fixedPoint,
+    landauLog: -Infinity,
+  };
   return fixedPoint < Infinity ? flow : { ...flow, landauLog: logOfInverse(flow, 0) };
 }
 
