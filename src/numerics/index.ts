@@ -31,3 +31,6 @@ export { logGamma, logGamma1p } from './special/log-gamma.js';
 export { digamma } from './special/digamma.js';
 export * from './polynomial/index.js';
 export * from './linear/index.js';
+export { scaledE1, eiScaled } from './special/expint.js';
+export { branchSame, branchAlternating, branchCut } from './special/kernels.js';
+export type { BranchValue } from './special/kernels.js';
