@@ -1,4 +1,5 @@
-/** @module Plain result of the growth diagnosis. Numbers are doubles here; the studies print them with their errors. */
+/** @module Plain input and result of the growth diagnosis. Numbers are doubles here; the studies print them with their errors. */
+import type { Exact } from '../numerics/index.js';
 
 /**
  * What the terms say about the growth of c_n:
@@ -15,6 +16,10 @@ export interface GrowthInput {
   readonly terms: readonly GrowthTerm[];
   /** Positions known beforehand, in t; used to state competition, never to bias the fit. */
   readonly expected: readonly { readonly t: number; readonly exponent?: number; readonly kind: string }[];
+  /** The same coefficients exactly, one for each term: the ratio test then runs on enclosures and loses no digit. */
+  readonly exact?: readonly Exact[];
+  /** Zeros that stood before the first term and were cut off. */
+  readonly leadingZeros?: number;
 }
 
 export interface GrowthTerm {
@@ -35,28 +40,54 @@ export interface Estimate {
 export interface FoundSingularity {
   /** Position: real, or the upper member of a complex pair as modulus and argument. In t. */
   readonly t: Estimate;
+  /** Argument in radians, for a complex pair. */
   readonly angle?: Estimate;
-  /** γ of (1 − t/t*)^(−γ). */
+  /** γ of (1 − t/t*)^(−γ), for the series counted from its first non-zero coefficient. */
   readonly exponent?: Estimate;
-  /** A of A (1 − t/t*)^(−γ). */
+  /** A of A (1 − t/t*)^(−γ); absent where γ is 0, −1, −2, … (a logarithm) within its error. */
   readonly strength?: Estimate;
+  /** S of c_n → S Γ(n + γ) t*^(−n): finite for a logarithm too; A = S Γ(γ) otherwise. */
+  readonly stokes?: Estimate;
+  /** γ is 0, −1, −2, … within its error: the singular part is (1 − t/t*)^(−γ) ln(1 − t/t*). */
+  readonly logarithmic?: boolean;
+  /** ln|t*|: in range where the double t overflows or underflows. */
+  readonly logAbs: number;
   readonly kind: 'positive axis' | 'negative axis' | 'complex pair' | 'both axes';
+  /** converged: two different methods agree within their errors; indicative otherwise. */
+  readonly standing: 'converged' | 'indicative';
 }
 
 export interface GrowthFlag {
   readonly code:
-    | 'too-short' | 'terminating' | 'all-zero' | 'lacunary' | 'complex-pair' | 'competing-singularities' | 'noisy'
-    | 'few-digits' | 'errors-exceed-values' | 'outlier' | 'superfactorial' | 'subfactorial' | 'faster-than-any-factorial'
-    | 'essential-singularity' | 'convergent' | 'geometric' | 'pre-asymptotic' | 'estimated-input' | 'leading-zeros';
+    | 'too-short'
+    | 'terminating'
+    | 'all-zero'
+    | 'lacunary'
+    | 'complex-pair'
+    | 'competing-singularities'
+    | 'noisy'
+    | 'few-digits'
+    | 'errors-exceed-values'
+    | 'outlier'
+    | 'superfactorial'
+    | 'subfactorial'
+    | 'faster-than-any-factorial'
+    | 'essential-singularity'
+    | 'convergent'
+    | 'geometric'
+    | 'pre-asymptotic'
+    | 'estimated-input'
+    | 'leading-zeros';
   readonly text: string;
 }
 
 export interface RatioRow {
   readonly n: number;
-  /** D_n = c_n / (n c_{n−1}) → 1/t*. */
+  /** D_n = c_n / (n c_{n−1}) → 1/t*; for stride p: c_n / (n(n−1)…(n−p+1) c_{n−p}) → t*^(−p). */
   readonly ratio: number;
-  /** λ_n = n D_n − (n−1) D_{n−1}. */
+  /** λ_n = n D_n − (n−1) D_{n−1} (n counted in strides). */
   readonly linear?: number;
+  /** Propagated coefficient errors and the method error |λ_n − λ_{n−1}|/2, in quadrature. */
   readonly linearError?: number;
 }
 
@@ -74,6 +105,8 @@ export interface GrowthModelComparison {
   readonly growthOrder?: Estimate;
   /** Kass–Raftery wording. */
   readonly wording: string;
+  /** b of the Γ(n + 1 + b) in the factorial model: γ − 1 of the expected singularity, or 0. */
+  readonly shift: number;
 }
 
 export interface Prediction {
@@ -92,7 +125,16 @@ export interface Growth {
   readonly statement: string;
   readonly standing: 'certified' | 'converged' | 'indicative';
   readonly signPattern: 'same' | 'alternating' | 'quasi-periodic' | 'irregular' | 'lacunary' | 'none';
+  /** Nearest singularity of the plain Borel transform Σ c_n t^n/n!; only with factorial growth. */
   readonly nearest?: FoundSingularity;
+  /** A second one that the terms resolve. */
+  readonly second?: FoundSingularity;
+  /** For order 2: the singularity of Σ c_n t^(2n)/(2n)!, the Borel plane of √x. */
+  readonly rootPlane?: FoundSingularity;
+  /** Radius of convergence in x, for geometric growth. */
+  readonly radius?: Estimate;
+  /** Step between powers with a non-zero coefficient; 1 unless lacunary. */
+  readonly stride?: number;
   readonly ratios: readonly RatioRow[];
   readonly comparison?: GrowthModelComparison;
   readonly predictions: readonly Prediction[];
