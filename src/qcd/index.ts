@@ -53,3 +53,14 @@ export * from './constants/index.js';
 export * from './rewrite/index.js';
 export { exactAlpha, exactLambda, exactMassRatio, type ExactEvolution } from './running/exact-alpha.js';
 export { complexAlpha, type ComplexEvolution } from './running/complex-ball.js';
+export {
+  MAX_POLE_LOOPS,
+  msbarMass,
+  poleMass,
+  poleMassCoefficientError,
+  poleMassCoefficients,
+  type MsbarMass,
+  type MsbarMassQuestion,
+  type PoleMass,
+  type PoleMassQuestion,
+} from './pole-mass.js';
