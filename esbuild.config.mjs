@@ -40,6 +40,8 @@ export async function bundle(outdir) {
     format: 'esm',
     platform: 'node',
     target: 'node20',
+    // yaml's entry for Node is CommonJS and asks for `require`, which an ESM bundle has not; its other entry is plain ESM.
+    alias: { yaml: join(root, 'node_modules/yaml/browser/index.js') },
     chunkNames: 'chunks/[name]-[hash]',
     legalComments: 'none',
     metafile: true,

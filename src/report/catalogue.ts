@@ -14,7 +14,7 @@ const pageFor = (options: TerminalOptions): Page =>
 /** "3, or 3 to 6": the number of flavours, and those that the file also knows. */
 function flavourText({ flavours, flavourChoices: choices }: CatalogueEntry): string {
   const own = flavours === undefined ? '' : String(flavours);
-  if (choices.length === 0) return own;
+  if (choices.every((choice) => choice === flavours)) return own;
   const range = `${Math.min(...choices)} to ${Math.max(...choices)}`;
   return own === '' ? range : `${own} (${range})`;
 }
@@ -59,16 +59,14 @@ function facts(series: Series): Fact[] {
     { label: 'scale ratio', text: series.scaleRatio === undefined ? '' : `μ/Q = ${textOf(series.scaleRatio)}` },
     {
       label: 'hard scale',
-      text: series.hardScale === undefined ? '' : `${series.hardScale.text} ${series.hardScale.unit}`,
+      text: series.hardScale === undefined ? '' : series.hardScale.text,
     },
     { label: 'factor', text: textOf(series.factor) === '1' ? '' : textOf(series.factor) },
     { label: 'additive', text: textOf(series.additive) === '0' ? '' : textOf(series.additive) },
     ...series.singularities.map((s) => ({ label: 'singularity', text: singularityText(s) })),
     ...series.condensates.map((c) => ({
       label: 'condensate',
-      text: [`${c.name}, dimension ${c.dimension.toString()}`, c.value?.text ?? '', c.unit ?? '']
-        .filter((t) => t !== '')
-        .join(' '),
+      text: `${c.name}, dimension ${c.dimension.toString()}${c.value === undefined ? '' : `: ${c.value.text} ${c.unit ?? ''}`}`,
     })),
     ...(series.measurement === undefined
       ? []

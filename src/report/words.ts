@@ -16,6 +16,12 @@ export function prescriptionTitle(name: string): string {
   return PRESCRIPTIONS.get(name) ?? name.slice(0, 1).toUpperCase() + name.slice(1).replaceAll('-', ' ');
 }
 
+/** A statement as a sentence: a capital letter in front where a word begins it, a full stop behind. */
+export function sentence(text: string): string {
+  const begun = /^[a-z]{2,}(?=[\s,:-])/.test(text) ? text.slice(0, 1).toUpperCase() + text.slice(1) : text;
+  return /[.!?:]$/.test(begun) || begun === '' ? begun : `${begun}.`;
+}
+
 /** Names from files and results keep their letters; only pi gets its sign. */
 export const withPi = (text: string): string => text.replaceAll(/\bpi\b/g, 'π');
 

@@ -67,9 +67,13 @@ export class Page {
   /** Label and text side by side, the texts under each other. */
   facts(facts: readonly Fact[], labelWidth = 0): void {
     const column = Math.max(labelWidth, ...facts.map((f) => width(f.label)));
+    let above = '';
     for (const { label, text, tone = 'plain' } of facts) {
+      // A label that repeats is said once.
+      const shown = label === above ? '' : label;
+      above = label;
       fold(text, this.width - INDENT - column - 3).forEach((line, i) => {
-        const left = this.paint(padEnd(i === 0 ? label : '', column), 'faint');
+        const left = this.paint(padEnd(i === 0 ? shown : '', column), 'faint');
         this.lines.push(`${' '.repeat(INDENT)}${left}   ${this.paint(line, tone)}`);
       });
     }

@@ -4,7 +4,7 @@ import { shorten } from '../../numerics/index.js';
 import { percent, rough } from '../layout/figures.js';
 import type { Fact, Page } from '../layout/page.js';
 import type { TableNote, TableRow } from '../layout/table.js';
-import { withPi } from '../words.js';
+import { sentence, withPi } from '../words.js';
 
 const DIGITS = 4;
 
@@ -82,7 +82,7 @@ export function ambiguitySection(
 ): void {
   page.head('The ambiguity and the power correction');
   conventionTable(page, ambiguity);
-  page.say(ambiguity.statement);
+  page.say(sentence(ambiguity.statement));
   const facts = powerFacts(powerCorrection);
   if (facts.length > 0) {
     page.blank();
@@ -90,5 +90,5 @@ export function ambiguitySection(
   }
   condensateTable(page, powerCorrection);
   page.blank();
-  page.say(powerCorrection.statement);
+  page.say(sentence(powerCorrection.statement));
 }

@@ -4,6 +4,7 @@ import { shorten } from '../../numerics/index.js';
 import { percent, plusMinus, withError } from '../layout/figures.js';
 import type { Fact, Page } from '../layout/page.js';
 import type { TableRow } from '../layout/table.js';
+import { sentence } from '../words.js';
 
 const DIGITS = 6;
 
@@ -65,7 +66,7 @@ function singularities(page: Page, growth: GrowthReport): void {
   );
   if (growth.agreement !== undefined) {
     page.blank();
-    page.say(growth.agreement);
+    page.say(sentence(growth.agreement));
   }
 }
 
@@ -113,7 +114,7 @@ function predictionFacts(growth: GrowthReport): Fact[] {
 
 export function growthSection(page: Page, growth: GrowthReport): void {
   page.head('The growth');
-  page.say(growth.statement, 'strong');
+  page.say(sentence(growth.statement), 'strong');
   page.say(`Trust: ${growth.standing}.`, 'faint');
   page.blank();
   singularities(page, growth);
@@ -133,7 +134,7 @@ export function growthSection(page: Page, growth: GrowthReport): void {
   if (growth.flags.length > 0) {
     page.blank();
     page.points(
-      growth.flags.map((flag) => flag.text),
+      growth.flags.map((flag) => sentence(flag.text)),
       'warn',
     );
   }

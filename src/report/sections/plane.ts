@@ -4,6 +4,7 @@ import { parseDecimal } from '../../numerics/index.js';
 import { complex } from '../layout/figures.js';
 import type { Page } from '../layout/page.js';
 import type { TableNote, TableRow } from '../layout/table.js';
+import { sentence } from '../words.js';
 
 const DIGITS = { wide: 5, narrow: 4 } as const;
 
@@ -75,7 +76,7 @@ export function planeSection(page: Page, plane: BorelPlaneReport): void {
     page.table(
       [
         { head: 'Padé', align: 'left' },
-        { head: `pole in ${plane.variable}`, align: 'point' },
+        { head: `pole in ${plane.variable.replace(/ \(.*/, '')}`, align: 'point' },
         { head: 'in u', align: 'point' },
         { head: 'amplitude', align: 'point' },
         { head: '', align: 'left' },
@@ -90,5 +91,5 @@ export function planeSection(page: Page, plane: BorelPlaneReport): void {
       ? 'No Froissart doublet.'
       : `${plane.doublets} Froissart doublet${plane.doublets === 1 ? '' : 's'} named and set aside.`;
   page.say(`${doublets} Trust: ${plane.standing}.`);
-  page.points(plane.notes);
+  page.points(plane.notes.map((note) => sentence(note)));
 }

@@ -26,14 +26,18 @@ function frameFact(series: SeriesSummary): string {
   return series.additive === '0' ? sum : `${shorten(series.additive, 12)} plus ${sum}`;
 }
 
-/** Facts about the file, without those that it does not state. */
-export function seriesFacts(series: SeriesSummary): Fact[] {
+/** "1.77693 GeV", also where the value as written already names its unit. */
+const inUnit = ({ value, unit }: { readonly value: string; readonly unit: string }): string =>
+  value.endsWith(unit) ? value : `${shorten(value, 10)} ${unit}`;
+
+/** Facts about the file, without those that it does not state; in brief, without where they come from. */
+function seriesFacts(series: SeriesSummary, brief: boolean): Fact[] {
   const scheme = [series.scheme, series.flavours === undefined ? '' : plural(series.flavours, 'active flavour')]
     .filter((part) => part !== undefined && part !== '')
     .join(', ');
   const scales = [
     series.scaleRatio === undefined ? '' : `μ/Q = ${shorten(series.scaleRatio, 10)}`,
-    series.hardScale === undefined ? '' : `Q = ${shorten(series.hardScale.value, 10)} ${series.hardScale.unit}`,
+    series.hardScale === undefined ? '' : `Q = ${inUnit(series.hardScale)}`,
   ]
     .filter((part) => part !== '')
     .join(', ');
@@ -44,8 +48,8 @@ export function seriesFacts(series: SeriesSummary): Fact[] {
     { label: 'meaning', text: frameFact(series) },
     { label: 'scheme', text: scheme },
     { label: 'scales', text: scales },
-    ...series.sources.map((text) => ({ label: 'source', text })),
-    ...series.notes.map((text) => ({ label: 'note', text })),
+    ...(brief ? [] : series.sources.map((text) => ({ label: 'source', text }))),
+    ...(brief ? [] : series.notes.map((text) => ({ label: 'note', text }))),
   ];
   if (series.invented) {
     facts.push({
@@ -81,7 +85,7 @@ export function readSection(
   { series, coupling }: Pick<Assessment, 'series'> & Partial<Pick<Assessment, 'coupling'>>,
 ): void {
   page.head('What was read');
-  const facts = seriesFacts(series);
+  const facts = seriesFacts(series, coupling === undefined);
   if (coupling !== undefined) {
     const place = facts.findIndex((fact) => fact.label === 'known') + 1;
     facts.splice(place, 0, ...couplingFacts(series, coupling));

@@ -3,6 +3,7 @@ import type { OptimalTruncationReport } from '../../studies/index.js';
 import { shorten } from '../../numerics/index.js';
 import { plusMinus } from '../layout/figures.js';
 import type { Fact, Page } from '../layout/page.js';
+import { sentence } from '../words.js';
 
 function seen({ observed, status }: OptimalTruncationReport, digits: number): string {
   if (observed === undefined) return status;
@@ -26,5 +27,5 @@ export function truncationSection(page: Page, report: OptimalTruncationReport): 
   facts.push({ label: 'trust', text: report.standing });
   page.facts(facts);
   page.blank();
-  page.say(report.statement);
+  page.say(sentence(report.statement));
 }

@@ -3,7 +3,7 @@ import type { Caution, VerdictReport } from '../../studies/index.js';
 import { shorten } from '../../numerics/index.js';
 import { plusMinus } from '../layout/figures.js';
 import type { Fact, Page } from '../layout/page.js';
-import { prescriptionTitle } from '../words.js';
+import { prescriptionTitle, sentence } from '../words.js';
 
 /** "borel-pade: [2/2]" in words. */
 function origin(prescription: string): string {
@@ -35,7 +35,7 @@ export function cautionPoints(page: Page, cautions: readonly Caution[]): void {
   page.blank();
   page.say(cautions.length === 1 ? 'One caution:' : `${cautions.length} cautions:`, 'warn');
   page.points(
-    cautions.map((caution) => caution.text),
+    cautions.map((caution) => sentence(caution.text)),
     'warn',
   );
 }
