@@ -5,7 +5,7 @@
 import type { Complaints } from './complaints.js';
 import { LIMITS, grouped } from './limits.js';
 
-const MARKS = new Set([...'\n,[]{}"\'?&*!|>%@`:'].map((c) => c.charCodeAt(0)));
+const MARKS = new Set(Array.from('\n,[]{}"\'?&*!|>%@`:', (c) => c.charCodeAt(0)));
 
 /** Notes what is too much; true when the text may be parsed. */
 export function weighed(text: string, complaints: Complaints): boolean {

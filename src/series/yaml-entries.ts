@@ -19,6 +19,9 @@ interface Located {
 /** Stands for what was refused, so that the rest can be read and its problems told too. */
 const REFUSED = '0';
 
+/** The failsafe schema makes every scalar a string, and an empty one undefined or null. */
+const scalarText = (value: unknown): string => (typeof value === 'string' ? value : '');
+
 /** The entries of a text, with complaints about what is refused in it; undefined when it is no valid document. */
 export function yamlEntries(text: string, complaints: Complaints): Entry | undefined {
   const lineCounter = new LineCounter();
@@ -50,7 +53,7 @@ export function yamlEntries(text: string, complaints: Complaints): Entry | undef
     if (located.tag !== undefined && !/^tag:yaml.org,2002:(?:str|seq|map)$/.test(located.tag)) {
       complaints.add(at, field, `a tag ${quote(located.tag)}`, 'no tags');
     }
-    if (isScalar(node)) return { kind: 'text', text: String(node.value ?? ''), at };
+    if (isScalar(node)) return { kind: 'text', text: scalarText(node.value), at };
     if (isSeq(node))
       return { kind: 'list', items: node.items.map((item, i) => convert(item, `${field}[${i}]`, at)), at };
     if (!isMap(node)) return { kind: 'text', text: '', at };
@@ -60,7 +63,7 @@ export function yamlEntries(text: string, complaints: Complaints): Entry | undef
         complaints.add(at, field, 'a field name that is not a word', 'plain field names');
         continue;
       }
-      const name = String(key.value ?? '');
+      const name = scalarText(key.value);
       const keyAt = key.range ? place(key.range[0]) : at;
       const path = field === '' ? name.slice(0, 80) : `${field}.${name.slice(0, 80)}`;
       if (fields.has(name))

@@ -171,7 +171,7 @@ describe('hostile input', () => {
       expect(outcome?.message).toContain(message);
       expect(outcome?.ms).toBeLessThan(SECONDS * 1000);
       // Nothing that would act on a terminal.
-      expect([...outcome!.message].filter(actsOnTerminal)).toEqual([]);
+      expect(Array.from(outcome!.message).filter(actsOnTerminal)).toEqual([]);
     },
   );
 

@@ -18,6 +18,7 @@ import {
   log,
   mulExact,
   pi,
+  isZeroExact,
   signExact,
   subExact,
   zeta,
@@ -53,7 +54,10 @@ const excessive = (): ExpressionProblem =>
   new ExpressionProblem(`a value of more than ${grouped(LIMITS.bits)} bits`, 'numbers of a moderate size');
 
 /** |log2 |x|| for an x that is not rational, about. */
-const magnitude = (x: Exact): number => Math.abs(R.upperBits(x.ball(64)));
+function magnitude(x: Exact): number {
+  const ball = x.ball(64);
+  return R.isExactZero(ball) ? 0 : Math.abs(R.upperBits(ball));
+}
 
 /** Turns away rationals of more than LIMITS.bits; others are looked at when they are raised to a power, and at the end. */
 function moderate(value: Exact): Exact {
@@ -109,15 +113,17 @@ function combine(operator: BinaryOperator, a: Exact, b: Exact, scope: Scope): Ex
     throw new ExpressionProblem(`a division by ${what}`, 'a divisor other than 0');
   }
   if (a.rational !== undefined && b.rational !== undefined) scope.spend(words(a.rational) * words(b.rational));
+  // nf = 0 makes whole brackets vanish, and they must vanish exactly.
+  if ((operator === '*' || operator === '/') && (isZeroExact(a) || isZeroExact(b))) return exact(0);
   if (operator === '+') return addExact(a, b);
   if (operator === '-') return subExact(a, b);
   return operator === '*' ? mulExact(a, b) : divExact(a, b);
 }
 
-/** Integer square root when n is a perfect square. */
-function rootOfSquare(n: bigint): bigint | undefined {
-  const r = R.sqrt(R.fromNumber(n), bits(n) + 4);
-  return r.rad === 0 && r.exp >= 0 ? r.mid << BigInt(r.exp) : undefined;
+/** Square root of an integer that is a perfect square. */
+function rootOfSquare(n: bigint): Rational | undefined {
+  const root = R.midpoint(R.sqrt(R.fromNumber(n), bits(n) + 4));
+  return root.mul(root).equals(Rational.of(n)) ? root : undefined;
 }
 
 function squareRoot(x: Exact): Exact {
@@ -132,7 +138,7 @@ function squareRoot(x: Exact): Exact {
   if (q !== undefined) {
     const num = rootOfSquare(q.num);
     const den = rootOfSquare(q.den);
-    if (num !== undefined && den !== undefined) return exact(Rational.of(num, den));
+    if (num !== undefined && den !== undefined) return exact(num.div(den));
   }
   return exactReal((prec) => R.sqrt(x.ball(prec + 8), prec + 8));
 }
