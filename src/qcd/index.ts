@@ -64,3 +64,10 @@ export {
   type PoleMass,
   type PoleMassQuestion,
 } from './pole-mass.js';
+export {
+  leadingNormalisation,
+  type Normalisation,
+  type NormalisationEstimate,
+  type NormalisationQuestion,
+} from './normalisation/normalisation.js';
+export { asymptoticRatio, borelFactor, sumRule } from './normalisation/estimates.js';

@@ -10,6 +10,7 @@ export {
   type CoefficientSeries,
   type CouplingRelation,
 } from './relation.js';
+export { positionPotential } from './potential.js';
 export { changeScale, massFactor, scaleLogTable, scaleRelation } from './scale.js';
 export {
   betaInCoupling,
