@@ -34,3 +34,5 @@ export * from './linear/index.js';
 export { scaledE1, eiScaled } from './special/expint.js';
 export { branchSame, branchAlternating, branchCut } from './special/kernels.js';
 export type { BranchValue } from './special/kernels.js';
+export type { DecimalText } from './enclose.js';
+export { certainDigits, raisePrecision, toDecimal } from './enclose.js';

@@ -11,7 +11,7 @@
  * Reference  F. Johansson, "Arb: efficient arbitrary-precision midpoint-radius interval arithmetic",
  *            IEEE Trans. Comput. 66 (2017) 1281 (the idea of a low-precision radius beside a long midpoint).
  */
-import { bitLength, isqrt, shift } from '../bits.js';
+import { bitLength, isqrt } from '../bits.js';
 import { Rational } from '../rational.js';
 
 export interface Ball {

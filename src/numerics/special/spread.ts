@@ -5,7 +5,9 @@
  * Bound      In x: y = G_b(w) solves y′ = (1 + b/w) y − 1/w, and S(x) = −G_b(−x ± i0), F_b = Re S, solves the same with the signs of
  *            b/x − 1 and +1/x; both are y′ = a y + c with |a| <= A = 1 + |b|/ρ, |c| <= 1/ρ for |w| >= ρ. By Gronwall's
  *            inequality |y| <= Y = (|y(m)| + r/ρ) e^(rA) within distance r, so |y″| <= A(AY + 1/ρ) + |b|Y/ρ² + 1/ρ² and
- *            |y(w) − y(m)| <= r |y′(m)| + r²/2·sup|y″|, with y′(m) from the equation itself.
+ *            |y(w) − y(m)| <= r |y′(m)| + r²/2·sup|y″|, with y′(m) from the equation itself. For large |w| a better bound of y″
+ *            comes from the integral, on the ray of asymptotic.ts: 2√e (b+2)^(3/2)/ρ³ for b >= −1, and, with
+ *            |1+v| <= e^|v| on the ray at 3π/4, 2/(ρ/√2 − p)³ for p = −1 − b > 0, ρ/√2 > p.
  *            In b: for −1 <= Re β the integrals are below e^(π|Im β|) √(e(Re β + 2))/|w| (asymptotic.ts, |arg(1+v)| < π). Cauchy's
  *            formula on |β − b| = 1/π gives |∂y/∂b| <= π e √(e(b + 1/π + 2))/|w| <= 14.1 √(b + 2.4)/|w| for b >= −0.68;
  *            below that through w y_(b−1) = 1 − b y_b and its derivative.
@@ -17,6 +19,7 @@ import {
   addMag,
   addMagLower,
   divMag,
+  leMag,
   mag,
   magBits,
   magLower,
@@ -67,6 +70,13 @@ export function radiusOf(z: Complex): Mag {
 function secondOrder(y: Mag, slope: Mag, low: Mag, r: Mag, b: number): Mag {
   if (r.m === 0) return r;
   if (low.m === 0) return UNBOUNDED;
+  const gronwall = curvatureByEquation(y, low, r, b);
+  const direct = curvatureByIntegral(low, b);
+  const second = leMag(gronwall, direct) ? gronwall : direct;
+  return addMag(mulMag(r, slope), mulMag(mag(0.5), mulMag(mulMag(r, r), second)));
+}
+
+function curvatureByEquation(y: Mag, low: Mag, r: Mag, b: number): Mag {
   const inverse = divMag(mag(1), low);
   const absB = mag(Math.abs(b) * (1 + 1e-12));
   const a = addMag(mag(1), mulMag(absB, inverse));
@@ -74,11 +84,19 @@ function secondOrder(y: Mag, slope: Mag, low: Mag, r: Mag, b: number): Mag {
   if (!(reach < 300)) return UNBOUNDED;
   const sup = mulMag(addMag(y, mulMag(r, inverse)), mag(Math.exp(reach) * (1 + 1e-12)));
   const first = addMag(mulMag(a, sup), inverse);
-  const second = addMag(
+  return addMag(
     addMag(mulMag(a, first), mulMag(absB, mulMag(inverse, mulMag(inverse, sup)))),
     mulMag(inverse, inverse),
   );
-  return addMag(mulMag(r, slope), mulMag(mag(0.5), mulMag(mulMag(r, r), second)));
+}
+
+function curvatureByIntegral(low: Mag, b: number): Mag {
+  const p = -1 - b;
+  if (p > 0 && !(magBits(low) > Math.log2(p) + 2)) return UNBOUNDED;
+  // for p > 0: ρ/√2 − p >= ρ (1/√2 − 1/4)
+  const inverse = divMag(mag(p > 0 ? 2.2 : 1), low);
+  const factor = p > 0 ? 2 : 3.2975 * (b + 2) ** 1.5 * (1 + 1e-12);
+  return mulMag(mag(factor), mulMag(inverse, mulMag(inverse, inverse)));
 }
 
 /** Effect of x's radius on F_b(x). */
