@@ -10,7 +10,7 @@ import { readNumber } from './uncertain.js';
 import { textOf } from './written.js';
 
 /** Words that YAML readers may take for something else than text, and the shapes that need no quotes. */
-const SAFE = /^[A-Za-z0-9][A-Za-z0-9 ()+*/^._-]*$/;
+const SAFE = /^-?[A-Za-z0-9(][A-Za-z0-9 ()+*/^._-]*$/;
 
 /** A scalar: plain where that is safe, in double quotes otherwise (JSON strings are YAML). */
 function scalar(text: string): string {
