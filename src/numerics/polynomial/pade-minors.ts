@@ -51,7 +51,7 @@ export function minorsModulo(b: IntPoly, L: number, M: number, p: number): Float
   const n = L + M + 1;
   const inverse = 1 / p;
   let r1 = new Float64Array(n);
-  const reduced = reduceInt(b, p);
+  const reduced = reduceInt(b.length > n ? b.slice(0, n) : b, p);
   if (reduced.length < n) return undefined;
   r1.set(reduced);
   let r0 = new Float64Array(n + 1);

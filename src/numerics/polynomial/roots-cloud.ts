@@ -24,6 +24,7 @@ import {
 const CLOSE = 2 ** -22;
 /** Longest integer that is turned into a double in one step. */
 const DOUBLE_BITS = 900;
+const FAR = 500;
 
 export class RootCloud {
   readonly coefficients: readonly Ball[];
@@ -77,12 +78,20 @@ export class RootCloud {
   /** Is i the root that stands for itself and its conjugate? (every root while partners are unknown) */
   leads(i: number): boolean {
     const j = this.partner[i]!;
-    return j < 0 || j === i || this.im[i]! > 0n;
+    return j < 0 || i <= j;
   }
 
-  /** z_i − z_j in units of 2^exp[i] as doubles, relative error below 2^-29; 0 only when equal to 2^-900. */
+  /**
+   * z_i − z_j in units of 2^exp[i] as doubles, relative error below 2^-29; 0 only when equal to 2^-900, Infinity when z_j
+   * is larger by 2^FAR or more.
+   */
   difference(i: number, j: number, out: Float64Array): void {
     const d = this.exp[j]! - this.exp[i]!;
+    if (d > FAR) {
+      out[0] = Infinity;
+      out[1] = 0;
+      return;
+    }
     const scale = d === 0 ? 1 : 2 ** d;
     out[0] = this.x[i]! - this.x[j]! * scale;
     out[1] = this.y[i]! - this.y[j]! * scale;
@@ -94,6 +103,20 @@ export class RootCloud {
       out[0] = this.toDouble(re) * 2 ** fine;
       out[1] = this.toDouble(im) * 2 ** fine;
     }
+  }
+
+  /** log2|z_i − z_j|, to 2^-28; −Infinity when they agree to 2^-900. */
+  logDistance(i: number, j: number, scratch: Float64Array): number {
+    // The farther one decides when the scales differ by more than the error allowed.
+    if (this.exp[j]! - this.exp[i]! > 64) return Math.log2(Math.hypot(this.x[j]!, this.y[j]!)) + this.exp[j]!;
+    this.difference(i, j, scratch);
+    return Math.log2(Math.hypot(scratch[0]!, scratch[1]!)) + this.exp[i]!;
+  }
+
+  /** Moves root i off the real axis by 2^log (log absolute): iterations that start on the axis never leave it. */
+  lift(i: number, log: number): void {
+    const k = Math.floor(log) - this.exp[i]! + this.w;
+    if (k >= 0 && k < this.w) this.place(i, this.re[i]!, this.im[i]! + (i % 2 === 0 ? 1n : -1n) * (1n << BigInt(k)));
   }
 
   toDouble(v: bigint): number {

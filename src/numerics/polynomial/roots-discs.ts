@@ -26,7 +26,9 @@ const BOX = 0.5 + 2 ** -6;
 export interface Discs {
   /** log2 of the radius. */
   readonly radius: Float64Array;
-  /** True when all boxes around the discs are disjoint. */
+  /** crowded[i] = 1 when the box around disc i may meet another one. */
+  readonly crowded: Uint8Array;
+  /** True when no box is crowded. */
   readonly disjoint: boolean;
   /** Smallest log2(|z_i|/r_i). */
   readonly accuracy: number;
@@ -51,8 +53,7 @@ export function smithDiscs(cloud: RootCloud): Discs {
     let product = 0;
     for (let j = 0; j < n; j++) {
       if (j === i) continue;
-      cloud.difference(i, j, d);
-      const log = Math.log2(Math.hypot(d[0]!, d[1]!)) + cloud.exp[i]!;
+      const log = cloud.logDistance(i, j, d);
       logs[i * n + j] = log;
       product += log;
     }
@@ -73,7 +74,8 @@ export function smithDiscs(cloud: RootCloud): Discs {
     const partner = cloud.partner[i]!;
     if (partner >= 0) radius[partner] = radius[i]!;
   }
-  return { radius, disjoint: allDisjoint(cloud, radius, logs), accuracy, loss, inputLimited };
+  const crowded = crowdedDiscs(cloud, radius, logs);
+  return { radius, crowded, disjoint: !crowded.includes(1), accuracy, loss, inputLimited };
 }
 
 /** log2 of a lower bound of |a|, −Infinity when the ball may hold zero. */
@@ -84,18 +86,21 @@ function lowerLog2(a: Ball): number {
   return size > 0 ? Math.log2(size) + drop + a.exp : -Infinity;
 }
 
-function allDisjoint(cloud: RootCloud, radius: Float64Array, logs: Float64Array): boolean {
+function crowdedDiscs(cloud: RootCloud, radius: Float64Array, logs: Float64Array): Uint8Array {
   const { n } = cloud;
+  const crowded = new Uint8Array(n);
   for (let i = 0; i < n; i++) {
     if (!cloud.leads(i)) continue;
     for (let j = 0; j < n; j++) {
       if (j === i) continue;
       const a = Math.max(radius[i]!, radius[j]!);
       const sum = a + Math.log2(1 + 2 ** (Math.min(radius[i]!, radius[j]!) - a));
-      if (!(logs[i * n + j]! > sum + BOX)) return false;
+      if (logs[i * n + j]! > sum + BOX) continue;
+      crowded[i] = 1;
+      crowded[j] = 1;
     }
   }
-  return true;
+  return crowded;
 }
 
 /**
@@ -126,7 +131,7 @@ export function symmetrise(cloud: RootCloud, radius: Float64Array): boolean {
   cloud.partner.set(partner);
   for (let i = 0; i < n; i++) {
     if (partner[i] === i) cloud.place(i, cloud.re[i]!, 0n);
-    else if (cloud.im[i]! > 0n) cloud.place(i, cloud.re[i]!, cloud.im[i]!);
+    else if (cloud.leads(i)) cloud.place(i, cloud.re[i]!, cloud.im[i]!);
   }
   return true;
 }

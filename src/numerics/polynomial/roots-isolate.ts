@@ -43,6 +43,7 @@ export function isolateRoots(a: readonly Ball[], prec: number, ratio?: NewtonRat
     if (rough.inputLimited) return { failed: 'roots cannot be told apart within the error of the coefficients' };
     if (cloud.w * 2 > MAX_BITS) return { failed: `roots cannot be told apart with ${cloud.w} bits` };
     cloud.raise(cloud.w * 2);
+    rough.crowded.forEach((flag, i) => flag === 1 && cloud.lift(i, rough.radius[i]! - 1));
   }
 }
 

@@ -23,6 +23,8 @@ export type NewtonRatio = (re: number, im: number, exp: number, out: Float64Arra
 const MAX_SWEEPS = 60;
 const SMALL_STEP = 2 ** -50;
 const START_ANGLE = 0.7;
+/** Points larger by more than 2^FAR do not move a point. */
+const FAR = 500;
 
 /** Start radii on the Newton polygon: log2 of |a_k| (−Infinity for zero), degree n >= 1, a_0 and a_n non-zero. */
 export function startingPoints(logs: ArrayLike<number>): Points {
@@ -117,7 +119,7 @@ export function aberthSum(points: Points, i: number, out: Float64Array): void {
   let sr = 0;
   let si = 0;
   for (let j = 0; j < n; j++) {
-    if (j === i) continue;
+    if (j === i || exp[j]! - e > FAR) continue;
     const scale = exp[j] === e ? 1 : 2 ** (exp[j]! - e);
     const dr = x - re[j]! * scale;
     const di = y - im[j]! * scale;

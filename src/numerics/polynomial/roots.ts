@@ -35,6 +35,8 @@ export type RootsResult = { readonly roots: readonly CertifiedRoot[] } | { reado
 const SEPARATION_TRIES = 6;
 /** Bits kept in a centre beyond its radius. */
 const CENTRE_BITS = 10;
+/** Difference of log2|z| below which two moduli count as equal in the order of the list. */
+const TIE = 2 ** -40;
 
 /**
  * Roots of Σ p_k x^k (ascending coefficients), nearest to the origin first, conjugate pairs adjacent with the upper
@@ -99,7 +101,8 @@ function boxes(cloud: RootCloud, discs: Discs, multiplicity: number): CertifiedR
     const half = drop > 0 ? 1n << BigInt(drop - 1) : 0n;
     const part = (v: bigint): Ball => R.ball(shift(v + half, -drop), unit + drop, rad);
     const real = cloud.partner[i] === i;
-    const value: Complex = { re: part(cloud.re[i]!), im: real ? R.ZERO : part(cloud.im[i]!) };
+    const im = cloud.im[i]! < 0n ? -cloud.im[i]! : cloud.im[i]!;
+    const value: Complex = { re: part(cloud.re[i]!), im: real ? R.ZERO : part(im) };
     out.push({ value, multiplicity, real });
     if (!real) out.push({ value: C.conj(value), multiplicity, real });
   }
@@ -120,8 +123,14 @@ const modulus = ({ re, im }: Complex): number => {
   return log2Length(shift(re.mid, re.exp - exp), shift(im.mid, im.exp - exp)) + exp;
 };
 
+/** Nearest first; equal moduli (to TIE) by falling real part; members of a pair stay together. */
 function sorted(roots: CertifiedRoot[]): CertifiedRoot[] {
-  const keyed = roots.map((root, index) => ({ root, index, size: modulus(root.value) }));
-  keyed.sort((a, b) => (a.size === b.size ? a.index - b.index : a.size - b.size));
+  const keyed = roots.map((root, index) => ({
+    root,
+    index,
+    size: Math.round(modulus(root.value) / TIE),
+    re: R.toNumber(root.value.re),
+  }));
+  keyed.sort((a, b) => (a.size === b.size ? b.re - a.re || a.index - b.index : a.size - b.size));
   return keyed.map(({ root }) => root);
 }

@@ -44,7 +44,9 @@ export class TaylorEnclosure {
   private readonly scaled = new Map<string, ScaledCoefficients>();
 
   constructor(coefficients: readonly Ball[]) {
-    this.rows = [coefficients];
+    let n = coefficients.length;
+    while (n > 0 && R.isExactZero(coefficients[n - 1]!)) n--;
+    this.rows = [coefficients.slice(0, n)];
   }
 
   /** f^(k)/k! for every point of the box, evaluated with w bits. */
