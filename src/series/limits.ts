@@ -31,9 +31,9 @@ export const LIMITS = {
   /** Problems listed for one file. */
   problems: 40,
   /** Exact arithmetic a file may ask for: sum of products of the lengths, in 19-digit words, of what is reduced. */
-  work: 4_000_000,
+  work: 2_000_000,
   /** The share of that allowance which the parser needs for one character of an expression. */
-  workPerCharacter: 40,
+  workPerCharacter: 20,
   /** Named constants. */
   constants: 200,
 } as const;

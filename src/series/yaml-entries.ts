@@ -52,6 +52,7 @@ export function yamlEntries(text: string, complaints: Complaints): Entry | undef
       complaints.add(at, field, `an anchor &${located.anchor.slice(0, 40)}`, 'no anchors or references');
     if (located.tag !== undefined && !/^tag:yaml.org,2002:(?:str|seq|map)$/.test(located.tag)) {
       complaints.add(at, field, `a tag ${quote(located.tag)}`, 'no tags');
+      if (isScalar(node)) return { kind: 'text', text: REFUSED, at };
     }
     if (isScalar(node)) return { kind: 'text', text: scalarText(node.value), at };
     if (isSeq(node))

@@ -149,7 +149,7 @@ beforeAll(async () => {
   };
   outcomes = new Map(result.outcomes.map((o) => [o.name, o]));
   memory = result.memory;
-}, 60_000);
+}, 240_000);
 
 afterAll(() => rmSync(folder, { recursive: true, force: true }));
 
