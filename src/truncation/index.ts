@@ -1,0 +1,8 @@
+/** @module The truncation-error room: how far a truncated sum may lie from the truth, by every model that has a name. */
+export { TRUNCATION_MODELS } from './models.js';
+export { LEVELS } from './model.js';
+export type { Band, Estimate, Fact, Level, Nature, Question, TruncationModel, TruncationRefusal } from './model.js';
+export { nextOrder, type Known } from './known.js';
+export { PRIORS, USUAL_PRIORS, isPriorProblem, priorNames, readPriors } from './priors.js';
+export type { PriorName, PriorProblem, Priors } from './priors.js';
+export { questionOf, restricted, type Setting } from './question.js';
