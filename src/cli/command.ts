@@ -7,6 +7,8 @@ export interface Given {
   readonly at?: string;
   readonly by?: string;
   readonly variant?: string;
+  readonly byOrder?: boolean;
+  readonly prior?: string;
   readonly order?: number;
   readonly flavours?: number;
   readonly digits?: number;

@@ -6,7 +6,8 @@ import { growth } from './commands/growth.js';
 import { helpCommand } from './commands/help.js';
 import { plane } from './commands/plane.js';
 import { sum } from './commands/sum.js';
+import { truncation } from './commands/truncation.js';
 
-const STUDIES: readonly Command[] = [assess, growth, plane, sum, catalogue];
+const STUDIES: readonly Command[] = [assess, growth, plane, sum, truncation, catalogue];
 
 export const COMMANDS: readonly Command[] = [...STUDIES, helpCommand(STUDIES)];

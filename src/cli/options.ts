@@ -4,6 +4,8 @@ export type OptionName =
   | 'at'
   | 'by'
   | 'variant'
+  | 'by-order'
+  | 'prior'
   | 'order'
   | 'flavours'
   | 'digits'
@@ -62,6 +64,13 @@ export const OPTIONS: Readonly<Record<OptionName, OptionSpec>> = {
     placeholder: 'NAME',
     example: "'[2/2]'",
     help: "only this member of the family, such as '[2/2]'",
+  },
+  'by-order': { kind: 'flag', help: 'also at every lower order, with whether the next known term fell inside' },
+  prior: {
+    kind: 'text',
+    placeholder: 'LIST',
+    example: 'abc.xi=3,geometric.omega=2',
+    help: 'priors by name, such as abc.xi=3,geometric.omega=2',
   },
   order: {
     kind: 'whole',

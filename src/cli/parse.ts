@@ -138,6 +138,8 @@ function collect(values: ReadonlyMap<OptionName, string | number | boolean>): Gi
     at: text('at'),
     by: text('by'),
     variant: text('variant'),
+    prior: text('prior'),
+    byOrder: values.get('by-order') === true ? true : undefined,
     order: number('order'),
     flavours: number('flavours'),
     digits: number('digits'),

@@ -4,4 +4,5 @@ export { plainJson, resultJson } from './json.js';
 export type { Paint, Tone } from './layout/paint.js';
 export { painter, unpainted } from './layout/paint.js';
 export type { TerminalOptions } from './terminal.js';
+export { truncationLines, truncationObject, truncationText } from './truncation.js';
 export { assessmentText, bareValues, growthText, planeLines, planeText, sumText } from './terminal.js';
