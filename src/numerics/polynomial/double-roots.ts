@@ -13,6 +13,8 @@
 const MAX_SWEEPS = 80;
 const SMALL_STEP = 2 ** -51;
 const START_ANGLE = 0.7;
+/** Rounding of a complex Horner step, relative to the sum of moduli. */
+const NOISE = 2 ** -51;
 
 /** Workspace for polynomials up to a degree; `re[i] + i·im[i]`, i < count, after `find`. */
 export class DoubleRoots {
@@ -176,7 +178,7 @@ export class DoubleRoots {
     const g = gr * gr + gi * gi;
     this.nr = (hr * gr + hi * gi) / g;
     this.ni = (hi * gr - hr * gi) / g;
-    return Math.abs(pr) + Math.abs(pi) <= bound * n * 2 ** -53;
+    return Math.abs(pr) + Math.abs(pi) <= bound * n * NOISE;
   }
 
   /** Makes the set symmetric: pairs become exact conjugates, real roots real; upper member of a pair first. */

@@ -23,6 +23,8 @@ export type NewtonRatio = (re: number, im: number, exp: number, out: Float64Arra
 const MAX_SWEEPS = 60;
 const SMALL_STEP = 2 ** -50;
 const START_ANGLE = 0.7;
+/** Rounding of a complex Horner step, relative to the sum of moduli. */
+const NOISE = 2 ** -51;
 /** Points larger by more than 2^FAR do not move a point. */
 const FAR = 500;
 
@@ -90,7 +92,7 @@ export function polynomialRatio(logs: ArrayLike<number>, signs: ArrayLike<number
       size = size * modulus + Math.abs(c[k]!);
     }
     quotient(pr, pi, dr, di, out);
-    return Math.abs(pr) + Math.abs(pi) <= size * n * 2 ** -53;
+    return Math.abs(pr) + Math.abs(pi) <= size * n * NOISE;
   };
 }
 
