@@ -47,20 +47,22 @@ export function inverseMapSeries(cuts: Cuts, length: number, prec: number): Ball
   return [R.ZERO, ...below.slice(0, length - 1).map((c) => R.mul2exp(c, 2))];
 }
 
-/** The four square-root values and w at a point off the cuts. */
+/** w and the square roots at a point off the cuts. */
 interface Mapped {
   readonly w: Complex;
-  /** 1 + t/a and 1 − t/b. */
-  readonly leftBase: Complex;
-  readonly rightBase: Complex;
+  /** √(1 + t/a), √(1 − t/b) and their sum: 1 + w = 2 left/sum, 1 − w = 2 right/sum. All have a positive real part. */
+  readonly left: Complex;
+  readonly right: Complex;
+  readonly sum: Complex;
 }
 
-function mapPoint(t: Complex, { left, right }: { left: Ball; right: Ball }, prec: number): Mapped {
-  const leftBase = C.add(C.ONE, C.mulReal(t, left, prec), prec);
-  const rightBase = C.sub(C.ONE, C.mulReal(t, right, prec), prec);
-  const p = R.isExactZero(left) ? C.ONE : csqrt(leftBase, prec);
-  const q = R.isExactZero(right) ? C.ONE : csqrt(rightBase, prec);
-  return { w: C.div(C.sub(p, q, prec), C.add(p, q, prec), prec), leftBase, rightBase };
+function mapPoint(t: Complex, inverse: { left: Ball; right: Ball }, prec: number): Mapped {
+  const root = (slope: Ball): Complex =>
+    R.isExactZero(slope) ? C.ONE : csqrt(C.add(C.ONE, C.mulReal(t, slope, prec), prec), prec);
+  const left = root(inverse.left);
+  const right = root(R.neg(inverse.right));
+  const sum = C.add(left, right, prec);
+  return { w: C.div(C.sub(left, right, prec), sum, prec), left, right, sum };
 }
 
 /** w(t), t off the cuts. */
@@ -105,13 +107,9 @@ export function remappedValues(
 ): readonly { readonly full: Complex; readonly shorter: Complex }[] {
   const point = mapPoint(t, inverses(cuts, prec), prec);
   const powers = powersOf(point.w, Math.max(...list.map((r) => r.coefficients.length)), prec);
-  const prefactors = new Map<Softening, Complex>();
+  const prefactors = softeningFactors(new Set(list.map((r) => r.softening)), cuts, point, prec);
   return list.map(({ softening, coefficients }) => {
-    let factor = prefactors.get(softening);
-    if (factor === undefined) {
-      factor = prefactor(cuts, softening, point, prec);
-      prefactors.set(softening, factor);
-    }
+    const factor = prefactors.get(softening) ?? C.ONE;
     const terms = coefficients.map((c, n) => C.mulReal(powers[n]!, c, prec));
     const shorter = terms.slice(0, -1).reduce((sum, term) => C.add(sum, term, prec), C.ZERO);
     const full = C.add(shorter, terms[terms.length - 1] ?? C.ZERO, prec);
@@ -125,19 +123,28 @@ function powersOf(w: Complex, count: number, prec: number): Complex[] {
   return list;
 }
 
-/** The softening factor at the point. */
-function prefactor(cuts: Cuts, softening: Softening, point: Mapped, prec: number): Complex {
-  if (softening === 'none') return C.ONE;
-  const inW = softening === 'in w';
-  let exponent = C.ZERO;
-  const ends: readonly [CutEnd | undefined, Complex][] = [
-    [cuts.left, inW ? C.add(C.ONE, point.w, prec) : point.leftBase],
-    [cuts.right, inW ? C.sub(C.ONE, point.w, prec) : point.rightBase],
-  ];
-  for (const [end, base] of ends) {
-    if (end?.exponent === undefined) continue;
-    const gamma = end.exponent.ball(prec);
-    exponent = C.add(exponent, C.mulReal(clog(base, prec), inW ? R.mul2exp(gamma, 1) : gamma, prec), prec);
+/**
+ * The softening factors at the point, from the logarithms of the square roots:
+ * in t exp(−2γ₁ ln left − 2γ₂ ln right), in w the same times (sum/2)^{2γ₁+2γ₂}.
+ */
+function softeningFactors(
+  wanted: ReadonlySet<Softening>,
+  cuts: Cuts,
+  point: Mapped,
+  prec: number,
+): Map<Softening, Complex> {
+  const factors = new Map<Softening, Complex>();
+  if (!wanted.has('in w') && !wanted.has('in t')) return factors;
+  const gammas = [cuts.left, cuts.right].map((end) => end?.exponent?.ball(prec) ?? R.ZERO);
+  const inT = [point.left, point.right].reduce((acc, root, i) => {
+    if (R.isExactZero(gammas[i]!)) return acc;
+    return C.sub(acc, C.mulReal(clog(root, prec), R.mul2exp(gammas[i]!, 1), prec), prec);
+  }, C.ZERO);
+  if (wanted.has('in t')) factors.set('in t', cexp(inT, prec));
+  if (wanted.has('in w')) {
+    const both = R.mul2exp(R.add(gammas[0]!, gammas[1]!, prec), 1);
+    const half = clog(C.mul2exp(point.sum, -1), prec);
+    factors.set('in w', cexp(C.add(inT, C.mulReal(half, both, prec), prec), prec));
   }
-  return cexp(C.neg(exponent), prec);
+  return factors;
 }

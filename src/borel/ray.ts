@@ -3,11 +3,12 @@
  *
  * Purpose    S₊ = ∫_0^{∞e^{iθ}} e^{−s} B(x s) ds for Borel transforms without a closed-form sum: the contour passes above the
  *            singularities on the positive axis and below all others.
- * Method     double-exponential rule (ray-nodes.ts) at a step h and at h/2, refined until two levels agree to the digits
- *            wanted. Where the imaginary part is small (the first singularity is far, ω = t*​/x ≫ 1) it is computed from a ray
- *            that starts at a point p < ω of the axis: ∫_0^p is real and drops out, and e^{−p} is a factor.
- * Bound      none that is proved: the radius is the difference of the last two levels plus the rounding errors. Such digits
- *            are converged, not certified.
+ * Method     double-exponential rule (ray-nodes.ts) at steps h, h/2, h/4, …. The error of the trapezoidal rule is C q^{1/h}:
+ *            two differences d₁, d₂ of successive levels fix C and q, and the newest level is off by about d₂³/d₁².
+ *            Where the imaginary part is small (the first singularity is far, ω = t*​/x ≫ 1) it is computed from a ray that
+ *            starts at a point p < ω of the axis: ∫_0^p is real and drops out, and e^{−p} is a factor.
+ * Bound      none that is proved: the radius is SAFETY times the larger of d₂³/d₁² and d₂²/|I| (or d₂ itself, where that is
+ *            small enough), plus the rounding errors. Such digits are converged, not certified.
  * Reference  M. Mori, M. Sugihara, J. Comput. Appl. Math. 127 (2001) 287 (from memory).
  */
 import { C, exp, R } from '../numerics/index.js';
@@ -22,7 +23,9 @@ export type RayIntegrand = (s: Complex, prec: number) => readonly Complex[];
 /** Digits of an imaginary part that is computed apart. */
 const IMAGINARY_DIGITS = 12;
 /** Refinements of the step after the first level. */
-const LEVELS = 4;
+const LEVELS = 6;
+/** Bits added to the estimated error of a level. Heuristic. */
+const SAFETY = 10;
 /** Nodes in a row that must be negligible before a side of the sum ends. */
 const QUIET = 3;
 /** |v| beyond which no node is used: r = e^{−50} or e^{12}. */
@@ -30,15 +33,36 @@ const LOW = -6;
 const HIGH = 12;
 /** Spare bits of the working precision. */
 const SPARE = 24;
-/** Fraction of the smallest argument of an off-axis singularity that the ray may use. Heuristic. */
-const CLEARANCE = 0.7;
+/** Share of the angle to the next singularity above, and multiple of the one below, that a ray must respect. Heuristic. */
+const BELOW_NEXT = 0.7;
+const ABOVE_LAST = 1.6;
 
-/** The steepest offered ray that keeps clear of singularities with arguments >= `smallestArgument` (0 < arg < π). */
-export function rayBelow(smallestArgument: number): Ray | undefined {
-  return RAYS.find((ray) => ray.angle <= CLEARANCE * smallestArgument);
+export interface RayChoice {
+  readonly ray: Ray;
+  /** Complex singularities under the ray: the contour is lifted over them. */
+  readonly lifted: number;
 }
 
-/** Number of integrals from a first probe; one level of the trapezoidal sum, nodes j/steps with j odd only when `odd`. */
+/**
+ * The steepest offered ray that keeps clear of singularities with the given arguments (0 < arg <= π): below all of them, or,
+ * with `liftUpTo`, above those with smaller arguments than that.
+ */
+export function chooseRay(args: readonly number[], liftUpTo = 0): RayChoice | undefined {
+  const choices = RAYS.map((ray) => ({
+    ray,
+    under: args.filter((a) => a < ray.angle),
+    over: args.filter((a) => a >= ray.angle),
+  }))
+    .filter(
+      ({ ray, under, over }) =>
+        over.every((a) => ray.angle <= BELOW_NEXT * a) &&
+        under.every((a) => a < liftUpTo && ray.angle >= ABOVE_LAST * a),
+    )
+    .map(({ ray, under }) => ({ ray, lifted: under.length }));
+  return choices.find((c) => c.lifted === 0) ?? choices[0];
+}
+
+/** One level of the trapezoidal sum over the nodes j/steps, j odd only when `odd`; undefined when it does not converge. */
 function level(
   f: RayIntegrand,
   ray: Ray,
@@ -89,7 +113,7 @@ function level(
 
 /**
  * ∫ e^{−s} f(s + origin) ds along the ray, to `digits` digits of the larger of the two parts, one result for each
- * component of f. Undefined when f cannot be evaluated, the integral does not converge, or the levels do not agree.
+ * component of f. Undefined when f cannot be evaluated, the integral does not converge, or the levels do not settle.
  */
 export function rayIntegral(
   f: RayIntegrand,
@@ -99,19 +123,22 @@ export function rayIntegral(
 ): readonly Complex[] | undefined {
   const bits = digits * 3.33;
   const prec = 32 * Math.ceil((bits + SPARE) / 32);
-  let steps = stepsFor(ray, bits);
+  let steps = Math.max(2, Math.ceil(stepsFor(ray, bits) / 4));
   let raw = level(f, ray, origin, steps, false, prec);
   if (raw === undefined) return undefined;
   let current = raw.map((sum) => overSteps(sum, steps, prec));
+  let before = current.map(() => Infinity);
   for (let refinement = 0; refinement < LEVELS; refinement++) {
     const between = level(f, ray, origin, 2 * steps, true, prec);
     if (between === undefined) return undefined;
     steps *= 2;
     raw = raw.map((sum, i) => C.add(sum, between[i]!, prec));
     const next = raw.map((sum) => overSteps(sum, steps, prec));
-    const settled = next.map((value, i) => withDifference(value, current[i]!, prec));
+    const differences = next.map((value, i) => C.upperBits(C.exactMid(C.sub(value, current[i]!, prec))));
+    const settled = next.map((value, i) => withError(value, errorBits(value, before[i]!, differences[i]!, bits)));
     if (settled.every((value) => C.accuracyBits(value) >= bits)) return settled;
     current = next;
+    before = differences;
   }
   return undefined;
 }
@@ -119,35 +146,37 @@ export function rayIntegral(
 const overSteps = (sum: Complex, steps: number, prec: number): Complex =>
   C.mulReal(sum, R.div(R.ONE, R.fromNumber(steps), prec), prec);
 
-/** `value` with the difference from the level before in its radius. */
-function withDifference(value: Complex, before: Complex, prec: number): Complex {
-  return {
-    re: R.widen(value.re, R.abs(R.sub(value.re, before.re, prec))),
-    im: R.widen(value.im, R.abs(R.sub(value.im, before.im, prec))),
-  };
+/** log2 of the error of the newest level from the last two differences (as exponents of two), see the header. */
+function errorBits(value: Complex, first: number, second: number, wanted: number): number {
+  const size = C.upperBits(value);
+  if (second === -Infinity || size - second > wanted + 1 || !(second < first)) return second;
+  return Math.min(second, SAFETY + Math.max(3 * second - 2 * first, 2 * second - size));
 }
 
-/** Where the integrand is singular, in units of x. */
-export interface Landscape {
-  /** First singularity on the positive axis; absent when there is none. */
+function withError(value: Complex, bits: number): Complex {
+  if (bits === -Infinity) return value;
+  if (!(bits < Infinity)) return C.INDETERMINATE;
+  return { re: R.addError(value.re, 1, Math.ceil(bits)), im: R.addError(value.im, 1, Math.ceil(bits)) };
+}
+
+/** How the contour runs. */
+export interface Contour {
+  readonly ray: Ray;
+  /** First singularity on (or lifted over next to) the positive axis, over x; absent when the sum is real. */
   readonly first?: number;
-  /** Smallest argument of a singularity off the real axis in the right half plane (0 < arg < π); π when there is none. */
-  readonly smallestArgument: number;
 }
 
-/** Lateral sums of several Borel transforms with one landscape; undefined when no ray serves or the levels do not agree. */
-export function lateralSums(f: RayIntegrand, where: Landscape, digits: number): readonly LaplaceSum[] | undefined {
-  if (where.first === undefined && where.smallestArgument > Math.PI / 2) {
-    return rayIntegral(f, AXIS, digits)?.map((v) => ({ pv: v.re, im: R.ZERO }));
-  }
-  const ray = rayBelow(where.smallestArgument);
-  if (ray === undefined) return undefined;
-  const direct = rayIntegral(f, ray, digits);
+/** The positive axis, for transforms without singularities near it. */
+export const STRAIGHT: Contour = { ray: AXIS };
+
+/** Lateral sums of several Borel transforms with one contour; undefined when the levels do not settle. */
+export function lateralSums(f: RayIntegrand, contour: Contour, digits: number): readonly LaplaceSum[] | undefined {
+  const direct = rayIntegral(f, contour.ray, digits);
   if (direct === undefined) return undefined;
-  if (where.first === undefined) return direct.map((v) => ({ pv: v.re, im: R.ZERO }));
+  if (contour.first === undefined) return direct.map((v) => ({ pv: v.re, im: R.ZERO }));
   const sharp = direct.every((v) => R.accuracyBits(v.im) >= IMAGINARY_DIGITS * 3.33);
   if (sharp) return direct.map((v) => ({ pv: v.re, im: v.im }));
-  const apart = imaginaryParts(f, ray, where.first);
+  const apart = imaginaryParts(f, contour.ray, contour.first);
   return direct.map((v, i) => ({ pv: v.re, im: apart?.[i] ?? v.im }));
 }
 

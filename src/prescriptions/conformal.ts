@@ -8,8 +8,8 @@
  */
 import { C, R, signExact, toNumberExact } from '../numerics/index.js';
 import type { Ball } from '../numerics/index.js';
-import { borelTransform, lateralSums, remap, remappedValues } from '../borel/index.js';
-import type { CutEnd, Cuts, LaplaceSum, Softening } from '../borel/index.js';
+import { borelTransform, lateralSums, RAYS, remap, remappedValues, STRAIGHT } from '../borel/index.js';
+import type { Contour, CutEnd, Cuts, LaplaceSum, Softening } from '../borel/index.js';
 import type { Growth } from '../growth/index.js';
 import type { Expansion } from '../series/index.js';
 import { cleanPart, growthObjection, inputObjection, trustOf } from './eligibility.js';
@@ -84,11 +84,14 @@ function evaluate(e: Expansion, cuts: Cuts, softenings: readonly Softening[], di
   const prec = Math.ceil(digits * 3.33) + 64 + BITS_LOST * N;
   const b = borelTransform(e.coefficients).map((c) => c.ball(prec));
   const list = softenings.map((softening) => remap(b, cuts, softening, prec));
-  const first = cuts.right === undefined ? {} : { first: toNumberExact(cuts.right.distance) / toNumberExact(e.x) };
+  const contour: Contour =
+    cuts.right === undefined
+      ? STRAIGHT
+      : { ray: RAYS[0]!, first: toNumberExact(cuts.right.distance) / toNumberExact(e.x) };
   const sums = lateralSums(
     (s, p) =>
       remappedValues(list, cuts, C.mulReal(s, e.x.ball(p), p), p).flatMap(({ full, shorter }) => [full, shorter]),
-    { ...first, smallestArgument: Math.PI },
+    contour,
     digits,
   );
   return sums && softenings.map((softening, i) => ({ softening, full: sums[2 * i]!, shorter: sums[2 * i + 1]! }));

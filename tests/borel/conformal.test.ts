@@ -9,7 +9,8 @@ import type { Ball, Exact } from '../../src/numerics/index.js';
 import { inverseMapSeries, mapTo, remap, remappedValues } from '../../src/borel/conformal.js';
 import type { Cuts, Softening } from '../../src/borel/conformal.js';
 import { borelTransform } from '../../src/borel/transform.js';
-import { lateralSums } from '../../src/borel/ray.js';
+import { lateralSums, STRAIGHT } from '../../src/borel/ray.js';
+import { RAYS } from '../../src/borel/ray-nodes.js';
 import { expectNear, rational } from '../support/check-value.js';
 
 const q = (s: string): Exact => exact(rational(s));
@@ -51,10 +52,9 @@ function sum(c: readonly Exact[], cuts: Cuts, softening: Softening, g: Exact, di
   const right = cuts.right;
   const found = lateralSums(
     (s, p) => [remappedValues(list, cuts, C.mulReal(s, g.ball(p), p), p)[0]!.full],
-    {
-      smallestArgument: Math.PI,
-      ...(right === undefined ? {} : { first: R.toNumber(right.distance.ball(60)) / R.toNumber(g.ball(60)) }),
-    },
+    right === undefined
+      ? STRAIGHT
+      : { ray: RAYS[0]!, first: R.toNumber(right.distance.ball(60)) / R.toNumber(g.ball(60)) },
     digits,
   );
   return found![0]!;

@@ -1,0 +1,145 @@
+/**
+ * @module A family of Borel-plane approximants summed along a rotated ray: what d-log, partial and quadratic share.
+ *
+ * Each candidate gives its value at t = x s and says where it is singular. The ray passes above the positive axis and below
+ * the complex singularities; where a pair next to the axis leaves no room for that, the ray passes above the pair (which then
+ * mimics a singularity on the axis), unless the terms themselves show a complex pair. Where no ray keeps clear of all
+ * singularities the candidate is refused, not guessed at.
+ * Truncation error: neighbours and the step from the order before (neighbours.ts).
+ */
+import { C, R } from '../numerics/index.js';
+import type { Ball, Complex } from '../numerics/index.js';
+import { chooseRay, lateralSums, NEAR_AXIS_ANGLE, STRAIGHT } from '../borel/index.js';
+import type { Contour, LaplaceSum } from '../borel/index.js';
+import type { Growth } from '../growth/index.js';
+import type { Expansion } from '../series/index.js';
+import { trustOf } from './eligibility.js';
+import { combineErrors } from './neighbours.js';
+import type { Outcome, Request } from './prescription.js';
+import { dressed, refusal, scaled } from './prescription.js';
+
+/** One approximant, ready to be integrated. */
+export interface Candidate {
+  readonly label: string;
+  /** Singular points in t: real ones, and the upper members of pairs. */
+  readonly singular: readonly Complex[];
+  /** Value of the approximated Borel transform at t = x s. */
+  readonly value: (s: Complex, prec: number) => Complex;
+  readonly notes: readonly string[];
+  /** Why the approximant may not be believed. */
+  readonly suspicion?: string;
+}
+
+export type Attempt = Candidate | { readonly label: string; readonly reason: string };
+
+/** Digits of the evaluations that only serve an error estimate. */
+const ERROR_DIGITS = 12;
+const LIFTED = 'a complex pair near the positive axis is lifted over';
+const REMEDY = 'read the neighbouring approximants';
+
+/** Bits with which a family should know its approximants for sums of `digits` digits. */
+export const familyBits = (digits: number): number => Math.ceil(digits * 3.33) + 80;
+
+interface Placed {
+  readonly contour: Contour;
+  readonly lifted: number;
+}
+
+/** Where the contour runs for these singularities; a string when there is no room for it. */
+function place(e: Expansion, growth: Growth, singular: readonly Complex[]): Placed | string {
+  const x = R.toNumber(e.x.ball(64));
+  const points = singular.map((z) => ({ ...C.toNumbers(z), real: R.isExactZero(z.im) }));
+  const args = points.filter((z) => !z.real && z.re > 0).map((z) => Math.abs(Math.atan2(z.im, z.re)));
+  const onAxis = points.filter((z) => z.real && z.re > 0).map((z) => z.re / x);
+  if (onAxis.length === 0 && args.length === 0) return { contour: STRAIGHT, lifted: 0 };
+  const mayLift = growth.nearest?.kind !== 'complex pair' && growth.signPattern !== 'quasi-periodic';
+  const choice = chooseRay(args, mayLift ? NEAR_AXIS_ANGLE : 0);
+  if (choice === undefined) {
+    const degrees = ((Math.min(...args) * 180) / Math.PI).toFixed(1);
+    return `a complex singularity at ${degrees}° from the positive axis leaves no room for the contour`;
+  }
+  const under = points.filter((z) => !z.real && z.re > 0 && Math.abs(Math.atan2(z.im, z.re)) < choice.ray.angle);
+  const first = Math.min(...onAxis, ...under.map((z) => z.re / x));
+  return { contour: { ray: choice.ray, ...(first < Infinity ? { first } : {}) }, lifted: under.length };
+}
+
+interface Summed extends LaplaceSum {
+  readonly lifted: number;
+}
+
+function sumOf(e: Expansion, growth: Growth, c: Candidate, digits: number): Summed | string {
+  const placed = place(e, growth, c.singular);
+  if (typeof placed === 'string') return placed;
+  const found = lateralSums((s, prec) => [c.value(s, prec)], placed.contour, digits)?.[0];
+  return found === undefined
+    ? 'the integral along the ray does not settle: the approximant grows too fast, or a singularity is too near'
+    : { ...found, lifted: placed.lifted };
+}
+
+/**
+ * Outcomes of a family. `build` makes the candidates of an expansion, best first; it is called again with one coefficient
+ * fewer for the error.
+ */
+export function rayFamily(
+  e: Expansion,
+  growth: Growth,
+  request: Request,
+  build: (e: Expansion, bits: number) => readonly Attempt[],
+): readonly Outcome[] {
+  const attempts = build(e, familyBits(request.digits));
+  const wanted = request.only === undefined ? attempts : attempts.filter((a) => a.label === request.only);
+  if (wanted.length === 0)
+    return [refusal(request.only ?? 'approximants', 'not a member of the family', 'choose another')];
+  const found = wanted.map((a) => ({ attempt: a, result: standing(e, growth, a, request.digits) }));
+  const values = found.map(({ result }) => (typeof result === 'string' ? undefined : result.pv));
+  const before = request.only === undefined ? valueBefore(e, growth, build) : undefined;
+  const errors = combineErrors(e, values, before);
+  const prec = Math.max(128, request.digits * 4 + 64);
+  return found.map(({ attempt, result }, i): Outcome => {
+    if (typeof result === 'string' || 'reason' in attempt)
+      return refusal(attempt.label, typeof result === 'string' ? result : '', REMEDY);
+    const value = dressed(e, result.pv, prec);
+    const error = request.only === undefined ? errors(i) : {};
+    return {
+      kind: 'sum',
+      variant: attempt.label,
+      value,
+      imaginary: scaled(e, result.im, prec),
+      ...error,
+      termsUsed: e.coefficients.length,
+      trust: trustOf(value, error.truncation),
+      digitsTrust: 'converged',
+      notes: result.lifted > 0 ? [...attempt.notes, LIFTED] : attempt.notes,
+    };
+  });
+}
+
+function standing(e: Expansion, growth: Growth, a: Attempt, digits: number): Summed | string {
+  if ('reason' in a) return a.reason;
+  return a.suspicion ?? sumOf(e, growth, a, digits);
+}
+
+/** Principal value of the first standing candidate with one coefficient fewer. */
+function valueBefore(
+  e: Expansion,
+  growth: Growth,
+  build: (e: Expansion, bits: number) => readonly Attempt[],
+): Ball | undefined {
+  if (e.coefficients.length < 2) return undefined;
+  const shorter: Expansion = { ...e, coefficients: e.coefficients.slice(0, -1) };
+  for (const a of build(shorter, familyBits(ERROR_DIGITS))) {
+    const result = standing(shorter, growth, a, ERROR_DIGITS);
+    if (typeof result !== 'string') return result.pv;
+  }
+  return undefined;
+}
+
+/** Distance of the nearest singularity, stated or found; undefined when neither. */
+export function nearestDistance(
+  e: Expansion,
+  found: { readonly t: { readonly value: number } } | undefined,
+): number | undefined {
+  const stated = e.stated[0];
+  if (stated !== undefined) return Math.abs(R.toNumber(stated.t.ball(64)));
+  return found === undefined ? undefined : Math.abs(found.t.value);
+}
