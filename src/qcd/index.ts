@@ -71,3 +71,4 @@ export {
   type NormalisationQuestion,
 } from './normalisation/normalisation.js';
 export { asymptoticRatio, borelFactor, sumRule } from './normalisation/estimates.js';
+export { exactPath, type ExactPathQuestion, type ExactPathResult } from './matching/exact-path.js';

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { C, R, Rational, exact, type Ball, type Exact } from '../../src/numerics/index.js';
+import { C, R, Rational, exact, toNumberExact, type Ball, type Exact } from '../../src/numerics/index.js';
 import {
   complexAlpha,
   evolveAlpha,
@@ -8,6 +8,8 @@ import {
   exactAlpha,
   exactLambda,
   exactMassRatio,
+  exactPath,
+  evolvePath,
   flowOf,
   isRefusal,
   lambdaOf,
@@ -106,5 +108,55 @@ describe('certified coupling at complex scales', () => {
     expect(isRefusal(complexAlpha({ ...question, log: { re: q('-5'), im: q('0') } }, 80))).toBe(true);
     expect(isRefusal(complexAlpha({ ...question, flavours: -1 }, 80))).toBe(true);
     expect(isRefusal(complexAlpha({ ...question, alpha: q('0') }, 80))).toBe(true);
+  });
+});
+
+describe('certified paths over thresholds', () => {
+  const thresholds = [
+    { name: 'c', flavours: 4, mass: 1.2729 },
+    { name: 'b', flavours: 5, mass: 4.186 },
+    { name: 't', flavours: 6, mass: 162.5 },
+  ];
+  // Check values computed with mpmath 1.3.0 (15 digits): α_s(M_Z) = 0.1180, thresholds at m(m).
+  it.each([
+    [4, '1.77693', 3, 0.313798695216788],
+    [5, '1.77693', 3, 0.313894712825042],
+    [5, '1000', 6, 0.08851277191694],
+  ])('%i loops to %s GeV', (loops, scale, flavours, value) => {
+    const from = { scale: q('91.1879'), flavours: 5 };
+    const to = { scale: q(scale), flavours };
+    const end = granted(exactPath({ alpha: q('0.1180'), mass: q('0.1'), from, to, options: { loops, thresholds } }));
+    const ball = end.alpha.ball(56);
+    expect(R.accuracyBits(ball)).toBeGreaterThan(50);
+    expect(Math.abs(R.toNumber(ball) / value - 1)).toBeLessThan(3e-14);
+    const doubles = granted(
+      evolvePath({
+        alpha: 0.118,
+        mass: 0.1,
+        from: { scale: 91.1879, flavours: 5 },
+        to: { scale: Number(scale), flavours },
+        options: { loops, thresholds },
+      }),
+    );
+    expect(Math.abs(R.toNumber(ball) / doubles.alpha - 1)).toBeLessThan(1e-14);
+    expect(Math.abs(toNumberExact(end.mass ?? q('0')) / (doubles.mass ?? NaN) - 1)).toBeLessThan(1e-14);
+    // And back: the enclosure holds the start.
+    const back = granted(exactPath({ alpha: end.alpha, from: to, to: from, options: { loops, thresholds } }));
+    expect(R.containsRational(back.alpha.ball(56), Rational.of(118, 1000))).toBe(true);
+  });
+
+  it('has as many digits as the constants: all of them at three-loop matching', () => {
+    const question = {
+      alpha: q('0.1180'),
+      from: { scale: q('91.1879'), flavours: 5 },
+      to: { scale: q('2'), flavours: 4 },
+    };
+    const all = granted(exactPath({ ...question, options: { loops: 4, thresholds } })).alpha.ball(170);
+    expect(R.accuracyBits(all)).toBeGreaterThan(165);
+    // One master integral of the four-loop constant is known to 17 digits.
+    const some = granted(exactPath({ ...question, options: { loops: 5, thresholds } })).alpha.ball(170);
+    expect(R.accuracyBits(some)).toBeGreaterThan(55);
+    expect(R.accuracyBits(some)).toBeLessThan(90);
+    expect(isRefusal(exactPath({ ...question, to: { scale: q('2'), flavours: 1 } }))).toBe(true);
   });
 });

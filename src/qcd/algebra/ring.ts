@@ -44,7 +44,14 @@ function correctBits(x: Ball): number {
   return x.rad === 0 ? Infinity : Math.max(R.accuracyBits(x), -(x.exp + Math.log2(x.rad)));
 }
 
-function evaluate(inputs: readonly Exact[], formula: RingFormula, prec: number): readonly Ball[] {
+interface Evaluation {
+  readonly prec: number;
+  readonly values: readonly Ball[];
+  /** An input is known to a few digits only: more working bits change nothing. */
+  readonly limited: boolean;
+}
+
+function evaluate(inputs: readonly Exact[], formula: RingFormula, prec: number): Evaluation {
   let reached = -Infinity;
   for (let work = prec + GUARD; ; work *= 2) {
     const values = formula<Ball>(
@@ -53,9 +60,8 @@ function evaluate(inputs: readonly Exact[], formula: RingFormula, prec: number):
     );
     const before = reached;
     reached = values.reduce((least, x) => Math.min(least, correctBits(x)), Infinity);
-    // An input known to a few digits only sets the limit: more working bits change nothing then.
-    const stuck = before > -Infinity && reached <= before + 1;
-    if (reached >= prec || stuck || work > LARGEST_WORK * (prec + GUARD)) return values;
+    const limited = before > -Infinity && reached <= before + 1;
+    if (reached >= prec || limited || work > LARGEST_WORK * (prec + GUARD)) return { prec, values, limited };
   }
 }
 
@@ -68,9 +74,9 @@ export function liftExact(inputs: readonly Exact[], formula: RingFormula): Exact
     knownRationals,
     inputs.map((x) => x.rational ?? UNKNOWN),
   );
-  let last: { readonly prec: number; readonly values: readonly Ball[] } | undefined;
+  let last: Evaluation | undefined;
   const at = (prec: number): readonly Ball[] => {
-    if (last === undefined || last.prec < prec) last = { prec, values: evaluate(inputs, formula, prec) };
+    if (last === undefined || (last.prec < prec && !last.limited)) last = evaluate(inputs, formula, prec);
     return last.values;
   };
   return known.map((q, i) => (q !== UNKNOWN ? exact(q) : exactReal((prec) => at(prec)[i] ?? R.INDETERMINATE)));

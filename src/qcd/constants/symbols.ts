@@ -14,7 +14,8 @@ function polylogHalf(n: number, prec: number): Ball {
   const last = prec + 4;
   let sum: Ball = R.ZERO;
   for (let k = 1; k <= last; k++) {
-    const term = R.fromRational(Rational.of(1n, BigInt(k) ** BigInt(n)), prec + 8);
+    const bits = Math.max(prec + 8 - k, 8);
+    const term = R.div(R.ONE, R.fromNumber(BigInt(k) ** BigInt(n)), bits);
     sum = R.add(sum, R.mul2exp(term, -k), prec + 8);
   }
   return R.widen(sum, R.mul2exp(R.ONE, -last));

@@ -87,12 +87,24 @@ export function matchingConstants<T>(flat: readonly T[]): MatchingConstants<T> {
   };
 }
 
-/** The table in exact numbers: rational entries stay rational. */
+const exactTables = new Map<string, MatchingTable<Exact>>();
+
+/** The table in exact numbers, kept: rational entries stay rational. */
 export function exactTable(nl: number, quantity: MatchedQuantity, mass: HeavyMass): MatchingTable<Exact> {
+  const key = `${nl} ${quantity} ${mass}`;
+  let table = exactTables.get(key);
+  if (table === undefined) {
+    table = createExactTable(nl, quantity, mass);
+    exactTables.set(key, table);
+  }
+  return table;
+}
+
+function createExactTable(nl: number, quantity: MatchedQuantity, mass: HeavyMass): MatchingTable<Exact> {
   // Row k has at most k + 1 powers of l; the flat list keeps the shape whatever the ring.
   const flat = liftExact(matchingInputs(nl), <T>(ring: Ring<T>, x: readonly T[]): T[] => {
-    const table = matchingTable(ring, matchingConstants(x), quantity, mass);
-    return table.flatMap((row, k) => Array.from({ length: k + 1 }, (_, j) => row[j] ?? ring.zero));
+    const parts = matchingTable(ring, matchingConstants(x), quantity, mass);
+    return parts.flatMap((row, k) => Array.from({ length: k + 1 }, (_, j) => row[j] ?? ring.zero));
   });
   return Array.from({ length: MATCHING_ORDER + 1 }, (_, k) => flat.slice((k * (k + 1)) / 2, ((k + 1) * (k + 2)) / 2));
 }

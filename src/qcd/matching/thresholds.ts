@@ -19,13 +19,28 @@ export interface Threshold {
   readonly kind?: HeavyMass;
   /** Crossing scale in GeV; default: the mass. */
   readonly scale?: number;
+  /** One standard deviation of the mass. */
+  readonly error?: number;
 }
+
+/** Standard deviations of a 90 per cent interval. */
+const NINETY_PER_CENT = 1.645;
 
 /** c, b, t with the masses of the 2026 tables of the Particle Data Group. */
 export const DEFAULT_THRESHOLDS: readonly Threshold[] = [
-  { name: 'c', flavours: 4, mass: Number(INPUTS.mCharm.value) },
-  { name: 'b', flavours: 5, mass: Number(INPUTS.mBottom.value) },
-  { name: 't', flavours: 6, mass: Number(INPUTS.mTop.value) },
+  {
+    name: 'c',
+    flavours: 4,
+    mass: Number(INPUTS.mCharm.value),
+    error: Number(INPUTS.mCharm.error[0]) / NINETY_PER_CENT,
+  },
+  {
+    name: 'b',
+    flavours: 5,
+    mass: Number(INPUTS.mBottom.value),
+    error: Number(INPUTS.mBottom.error[0]) / NINETY_PER_CENT,
+  },
+  { name: 't', flavours: 6, mass: Number(INPUTS.mTop.value), error: Number(INPUTS.mTop.error[0]) },
 ];
 
 export const crossingScale = (t: Threshold): number => t.scale ?? t.mass;

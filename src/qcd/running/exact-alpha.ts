@@ -55,15 +55,16 @@ export interface ExactEvolution {
   readonly loops: number;
 }
 
-/** Growing working precision until the enclosure has `prec` correct bits (or the input allows no more). */
+/** Growing working precision until the enclosure has `prec` correct bits, or the input allows no more. */
 function sharpened(evaluate: (work: number) => Ball): Exact {
   return exactReal((prec) => {
     let best: Ball = R.INDETERMINATE;
-    for (let work = prec + 20; work <= 8 * prec + 400; work = 2 * work) {
+    for (let work = prec + 20; work <= 8 * prec + 400; work *= 2) {
       const value = evaluate(work);
-      const gained = R.accuracyBits(value) > R.accuracyBits(best);
-      if (gained) best = value;
-      if (R.accuracyBits(best) >= prec || (!gained && best !== R.INDETERMINATE)) break;
+      const gain = R.accuracyBits(value) - R.accuracyBits(best);
+      if (gain > 0) best = value;
+      // A full bit or nothing: what remains is the uncertainty of the input.
+      if (R.accuracyBits(best) >= prec || gain < 1) break;
     }
     return best;
   });
