@@ -10,6 +10,7 @@ import type { Ball } from '../ball/real.js';
 import type { Exact } from '../exact.js';
 import { Rational } from '../rational.js';
 import { asymptoticLength, asymptoticReal } from './asymptotic.js';
+import { columnSumCost, fractionCost, productCost } from './cost.js';
 import { readExponent } from './exponent.js';
 import type { Exponent } from './exponent.js';
 import { exponentialSum, exponentialTerms } from './exponential-sum.js';
@@ -19,8 +20,8 @@ import { spreadCut, spreadExponent } from './spread.js';
 import { fractionReal, fractionTerms, planFraction } from './stieltjes-fraction.js';
 
 const ROUNDS = 6;
-/** Cost of a term of the fraction in terms of the series, at equal precision (measured; heuristic). */
-const FRACTION_COST = 2;
+/** The logarithm and exponential beside the series, in products (heuristic). */
+const ELEMENTARY_STEPS = 100;
 
 /**
  * G_b(x) = ∫_0^∞ e^{−xv} (1+v)^{−1−b} dv for x > 0 and real b, near and at the integers too.
@@ -55,8 +56,9 @@ function exactAlternating(b: Exponent, x: Ball, prec: number): Ball {
 function near(b: Exponent, x: Ball, size: number, bits: number): Ball {
   const seriesBits = bits + Math.ceil(2 * size * Math.LOG2E);
   const steps = Math.max(0, Math.floor(-b.approx));
-  const cost = FRACTION_COST * (fractionTerms(size, 0, bits) + steps) * bits;
-  if (cost < exponentialTerms(size, seriesBits) * seriesBits) {
+  const cost = fractionCost(fractionTerms(size, 0, bits) + 2 * steps, bits, false);
+  const other = columnSumCost(exponentialTerms(size, seriesBits), seriesBits, false);
+  if (cost < other + ELEMENTARY_STEPS * productCost(seriesBits)) {
     const value = byFraction(b, steps, x, size, bits);
     if (value !== undefined) return value;
   }

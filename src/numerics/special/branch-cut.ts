@@ -20,6 +20,7 @@ import type { Exact } from '../exact.js';
 import { Rational } from '../rational.js';
 import { branchAlternating } from './branch-alternating.js';
 import { asymptoticComplex, asymptoticLength } from './asymptotic.js';
+import { columnSumCost, fractionCost, productCost } from './cost.js';
 import { readExponent } from './exponent.js';
 import type { Exponent } from './exponent.js';
 import { exponentialSumComplex, exponentialTerms } from './exponential-sum.js';
@@ -29,8 +30,8 @@ import { modulusLower, spreadCut, spreadE1, spreadExponent } from './spread.js';
 import { fractionComplex, fractionTerms, planFraction } from './stieltjes-fraction.js';
 
 const ROUNDS = 6;
-/** Cost of a term of the fraction in terms of the series, at equal precision (measured; heuristic). */
-const FRACTION_COST = 3;
+/** The logarithm and exponential beside the series, in products (heuristic). */
+const ELEMENTARY_STEPS = 200;
 
 /** Does the rectangle certainly avoid the cut (−∞, 0]? */
 function offCut(w: Complex): boolean {
@@ -84,8 +85,11 @@ function near(b: Exponent, w: Complex, re: number, im: number, size: number, bit
   const seriesBits = bits + Math.max(0, boost);
   if (re > 0 || (re === 0 && size > 1)) {
     const steps = Math.max(0, Math.floor(-b.approx));
-    const cost = FRACTION_COST * (fractionTerms(re, im, bits) + steps) * bits;
-    if (cost < exponentialTerms(size, seriesBits) * seriesBits) {
+    const cost = fractionCost(fractionTerms(re, im, bits) + 2 * steps, bits, true);
+    if (
+      cost <
+      columnSumCost(exponentialTerms(size, seriesBits), seriesBits, true) + ELEMENTARY_STEPS * productCost(seriesBits)
+    ) {
       const value = byFraction(b, steps, w, re, im, bits);
       if (value !== undefined) return value;
     }

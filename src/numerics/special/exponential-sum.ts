@@ -68,6 +68,33 @@ function denominators(b: Exponent, f: number): { p: bigint; q: bigint; up: bigin
   return { p: (num << BigInt(s)) / den, q: 1n << BigInt(s), up: BigInt(s) };
 }
 
+/** z^n, n >= 1. */
+function power(z: bigint, n: number, w: bigint): bigint {
+  if (n === 1) return z;
+  const h = power(z, n >> 1, w);
+  const x = (h * h) >> w;
+  return n & 1 ? (x * z) >> w : x;
+}
+
+function powerComplex(re: bigint, im: bigint, n: number, w: bigint): [bigint, bigint] {
+  if (n === 1) return [re, im];
+  const [hr, hi] = powerComplex(re, im, n >> 1, w);
+  const xr = ((hr + hi) * (hr - hi)) >> w;
+  const xi = (hr * hi) >> (w - 1n);
+  return n & 1 ? times(xr, xi, re, im, w) : [xr, xi];
+}
+
+/** From here on three products and five sums beat four products (heuristic, bits). */
+const THREE_PRODUCTS = 700n;
+
+/** (a + ib)(c + id), each part floored once (off by at most 1 unit). */
+function times(a: bigint, b: bigint, c: bigint, d: bigint, w: bigint): [bigint, bigint] {
+  if (w < THREE_PRODUCTS) return [(a * c - b * d) >> w, (a * d + b * c) >> w];
+  const ac = a * c;
+  const bd = b * d;
+  return [(ac - bd) >> w, ((a + b) * (c + d) - ac - bd) >> w];
+}
+
 /** Σ_{k≠m} z^k/(k!(k−b)) for an exact real z with |z| <= absZ; absolute error about 2^-bits·e^|z|. */
 export function exponentialSum(z: Ball, absZ: number, b: Exponent, bits: number): Ball {
   const { columns, f, stop, from, errorBits } = plan(absZ, bits, b);
@@ -75,8 +102,7 @@ export function exponentialSum(z: Ball, absZ: number, b: Exponent, bits: number)
   const { p, q, up } = denominators(b, f);
   const scale = up === 0n ? bitLength(q) - 1 : 0;
   const zf = shift(z.mid, z.exp + f);
-  let x = zf;
-  for (let j = 1; j < columns; j++) x = (x * zf) >> w;
+  const x = power(zf, columns, w);
   const sums = new Array<bigint>(columns).fill(0n);
   let t = (up === 0n ? q : 1n) << w;
   let d = -p;
@@ -103,9 +129,7 @@ export function exponentialSumComplex(z: Complex, absZ: number, b: Exponent, bit
   const scale = up === 0n ? bitLength(q) - 1 : 0;
   const zr = shift(z.re.mid, z.re.exp + f);
   const zi = shift(z.im.mid, z.im.exp + f);
-  let xr = zr;
-  let xi = zi;
-  for (let j = 1; j < columns; j++) [xr, xi] = [(xr * zr - xi * zi) >> w, (xr * zi + xi * zr) >> w];
+  const [xr, xi] = powerComplex(zr, zi, columns, w);
   const re = new Array<bigint>(columns).fill(0n);
   const im = new Array<bigint>(columns).fill(0n);
   let tr = (up === 0n ? q : 1n) << w;
@@ -122,7 +146,7 @@ export function exponentialSumComplex(z: Complex, absZ: number, b: Exponent, bit
       tr /= n;
       ti /= n;
     }
-    [tr, ti] = [(tr * xr - ti * xi) >> w, (tr * xi + ti * xr) >> w];
+    [tr, ti] = times(tr, ti, xr, xi, w);
     const size = Math.max(bitLength(tr), bitLength(ti));
     if (k >= from && size < stop + scale) break;
     if (size <= 1) break;
@@ -130,7 +154,9 @@ export function exponentialSumComplex(z: Complex, absZ: number, b: Exponent, bit
   let sr = re[columns - 1]!;
   let si = im[columns - 1]!;
   for (let j = columns - 2; j >= 0; j--) {
-    [sr, si] = [((sr * zr - si * zi) >> w) + re[j]!, ((sr * zi + si * zr) >> w) + im[j]!];
+    [sr, si] = times(sr, si, zr, zi, w);
+    sr += re[j]!;
+    si += im[j]!;
   }
   return { re: R.addError(R.ball(sr, -f), 1, errorBits - f), im: R.addError(R.ball(si, -f), 1, errorBits - f) };
 }
