@@ -4,7 +4,7 @@
  * Assumption  none that could be tested; the exact answer does not depend on the scale, so the change is of the size of the
  *             first missing term, up to an unknown factor.
  * Method      μ from μ_0/F to F μ_0 at 21 points even in ln μ: coupling by exact running, coefficients by exact
- *             re-expansion; the band runs from the lowest to the highest sum, asymmetric as it is.
+ *             re-expansion; extremes inside are refined; the band runs from the lowest to the highest sum, asymmetric as it is.
  * Fails       where the coupling gets large, and where the sum is flat by accident.
  * Reference   common practice; the re-expansion follows from the renormalisation group.
  */
@@ -15,6 +15,8 @@ import { movedTerms } from './moved-terms.js';
 const POINTS = 21;
 /** Couplings above this are no ground for a truncated series. A heuristic. */
 const LARGE_COUPLING = 0.5;
+/** Parabolas drawn for an extremum: each brings it several times nearer. */
+const VERTEX_ROUNDS = 4;
 
 export interface ScalePoint {
   /** μ/μ_0. */
@@ -24,18 +26,53 @@ export interface ScalePoint {
   readonly sum: number;
 }
 
+/** The truncated sum at one scale. */
+function pointAt(question: Question, logMu: number): ScalePoint | TruncationRefusal {
+  const moved = question.atScale(2 * logMu);
+  if (moved.kind === 'refusal') return moved;
+  const sum = movedTerms(question, moved).reduce((a, b) => a + b, 0);
+  return { ratio: Math.exp(logMu), alpha: moved.alpha, sum };
+}
+
 /** The truncated sum at 21 scales. */
 export function scaleScan(question: Question): ScalePoint[] | TruncationRefusal {
   const factor = question.priors['scale.factor'];
   const points: ScalePoint[] = [];
   for (let k = 0; k < POINTS; k++) {
-    const logMu = Math.log(factor) * ((2 * k) / (POINTS - 1) - 1);
-    const moved = question.atScale(2 * logMu);
-    if (moved.kind === 'refusal') return moved;
-    const sum = movedTerms(question, moved).reduce((a, b) => a + b, 0);
-    points.push({ ratio: Math.exp(logMu), alpha: moved.alpha, sum });
+    const point = pointAt(question, Math.log(factor) * ((2 * k) / (POINTS - 1) - 1));
+    if ('kind' in point) return point;
+    points.push(point);
   }
   return points;
+}
+
+/** The extremum between neighbours of the scan: vertex of the parabola through three points, a few times. */
+function vertex(question: Question, before: ScalePoint, at: ScalePoint, after: ScalePoint): ScalePoint {
+  let [a, b, c] = [before, at, after];
+  for (let round = 0; round < VERTEX_ROUNDS; round++) {
+    const [x, y, z] = [Math.log(a.ratio), Math.log(b.ratio), Math.log(c.ratio)];
+    const [left, right] = [(b.sum - a.sum) / (y - x), (c.sum - b.sum) / (z - y)];
+    const top = (x + y) / 2 - (left * (z - x)) / (2 * (right - left));
+    if (!(top > x && top < z) || top === y) return b;
+    const point = pointAt(question, top);
+    if ('kind' in point) return b;
+    // A maximum has b above a, a minimum below; the more extreme of the two inner points stays in the middle.
+    const better = (point.sum - b.sum) * (b.sum - a.sum) > 0;
+    if (better) [a, b, c] = top < y ? [a, point, b] : [b, point, c];
+    else if (top < y) a = point;
+    else c = point;
+  }
+  return b;
+}
+
+/** The points, with the extremes between them added. */
+function withExtremes(question: Question, points: readonly ScalePoint[]): ScalePoint[] {
+  const found = points.flatMap((at, k) => {
+    const [before, after] = [points[k - 1], points[k + 1]];
+    if (before === undefined || after === undefined) return [];
+    return (at.sum - before.sum) * (after.sum - at.sum) < 0 ? [vertex(question, before, at, after)] : [];
+  });
+  return [...points, ...found];
 }
 
 const extremes = (points: readonly ScalePoint[]): Band => {
@@ -81,7 +118,8 @@ export const scaleEnvelope: TruncationModel = {
       );
     const points = scaleScan(question);
     if ('kind' in points) return points;
-    const all = extremes(points);
+    const scanned = withExtremes(question, points);
+    const all = extremes(scanned);
     const three = extremes(points.filter((_, k) => k % ((POINTS - 1) / 2) === 0));
     const centre = points[(POINTS - 1) / 2]?.sum ?? Number.NaN;
     const band = (widen: number): Band => ({ low: widen * (all.low - centre), high: widen * (all.high - centre) });
@@ -93,7 +131,7 @@ export const scaleEnvelope: TruncationModel = {
         { name: 'coupling at the lower end', value: points[0]?.alpha ?? Number.NaN },
         { name: 'coupling at the upper end', value: points.at(-1)?.alpha ?? Number.NaN },
       ],
-      notes: remarks(points, three, all, Math.abs(all.high - all.low)),
+      notes: remarks(scanned, three, all, Math.abs(all.high - all.low)),
     };
   },
 };
