@@ -99,22 +99,25 @@ export function evolvePath(question: PathQuestion): PathResult | Refusal {
     const crossing = thresholdTo(up ? at.flavours + 1 : at.flavours, thresholds);
     if (isRefusal(crossing)) return crossing;
     const there = run(at, crossingScale(crossing), loops);
-    if (!go(there)) return there;
+    if (there !== at && !go(there)) return there;
     const matched = match(at, crossing, up, matchingLoops);
     if (!go(matched)) return matched;
   }
   const end = run(at, to.scale, loops);
-  if (!go(end)) return end;
+  if (end !== at && !go(end)) return end;
   return { alpha: at.alpha, steps, ...(at.mass === undefined ? {} : { mass: at.mass }) };
 }
 
+/** One leg at fixed n_f; no step when the scale is the same (the coupling is checked all the same). */
 function run(at: PathStep, scale: number, loops: number): PathStep | Refusal {
   const common = { alpha: at.alpha, from: at.scale, to: scale, flavours: at.flavours, loops };
   if (at.mass === undefined) {
     const alpha = evolveAlpha(common);
+    if (alpha === at.alpha && scale === at.scale) return at;
     return typeof alpha === 'number' ? { action: 'run', scale, flavours: at.flavours, alpha } : alpha;
   }
   const both = evolveMass({ ...common, mass: at.mass });
+  if (!isRefusal(both) && scale === at.scale) return at;
   return isRefusal(both) ? both : { action: 'run', scale, flavours: at.flavours, ...both };
 }
 
