@@ -10,7 +10,6 @@
  *            their own (doublets may be as weak as 2^-200).
  * Reference  see pade-exact.ts, pade-ball.ts, roots.ts, partial-fractions.ts.
  */
-import * as C from '../ball/complex.js';
 import * as R from '../ball/real.js';
 import type { Ball } from '../ball/real.js';
 import type { Exact } from '../exact.js';
@@ -23,9 +22,11 @@ import { padeField } from './pade-field.js';
 import { minorsModulo } from './pade-minors.js';
 import { recurrenceRatio } from './pade-ratio.js';
 import type { MissingEntry, PadeFraction, UndecidedEntry } from './pade-types.js';
-import { partialFractions, type PartialFractions, type Pole } from './partial-fractions.js';
+import type { PartialFractions } from './partial-fractions.js';
+import { sharpFractions, type Shortage } from './sharp-fractions.js';
 import { divmodPoly, toIntegers } from './rational-poly.js';
-import { ballRoots, rationalRoots, type CertifiedRoot } from './roots.js';
+import { ballRoots, rationalRoots } from './roots.js';
+import { usefulBits } from './scaled-polynomial.js';
 
 export interface PadePoles extends PartialFractions {
   readonly exists: true;
@@ -34,11 +35,10 @@ export interface PadePoles extends PartialFractions {
 
 /** Heuristics: highest order L+M done exactly from the start, bits lost per order M at first guess, guard, most bits. */
 const EXACT_ORDER = 16;
-const LOSS_PER_ORDER = 13;
+const LOSS_PER_ORDER = 14;
 const GUARD_BITS = 16;
 const MAX_BITS = 50_000;
-/** Certain bits of an amplitude however weak its pole is. */
-const WEAK_BITS = 64;
+const ATTEMPTS = 10;
 /** Heuristic: a series that is not exact is given up when this multiple of the first guess decides nothing. */
 const PATIENCE = 8;
 
@@ -61,15 +61,17 @@ export function padePoles(
   const guess = prec + LOSS_PER_ORDER * M + 2 * GUARD_BITS;
   let proved = false;
   let reason = '';
-  for (let work = guess, roots = prec + GUARD_BITS; work <= MAX_BITS;) {
+  let work = guess;
+  let rootBits = prec + GUARD_BITS;
+  for (let attempt = 0; attempt < ATTEMPTS && work <= MAX_BITS; attempt++) {
     const balls = used.map((c) => c.ball(work));
-    const attempt = ballPoles(balls, L, M, prec, work, roots);
-    if ('exists' in attempt) return attempt;
-    reason = attempt.reason;
-    if (attempt.missing !== undefined) {
-      const more = Math.ceil(attempt.missing) + GUARD_BITS;
+    const found = ballPoles(balls, L, M, prec, work, rootBits);
+    if ('exists' in found) return found;
+    reason = found.reason;
+    if (found.missing !== undefined) {
+      const more = Math.ceil(found.missing) + GUARD_BITS;
       work += more;
-      roots += more;
+      if (found.of === 'poles') rootBits += more;
       continue;
     }
     if (rational !== undefined && !proved) {
@@ -80,12 +82,6 @@ export function padePoles(
     if (rational === undefined && work > PATIENCE * guess) break;
   }
   return rational === undefined ? { exists: undefined, reason } : exactPoles(rational, L, M, prec);
-}
-
-/** What kept balls from an answer: bits missing, or (missing undefined) nothing decided. */
-interface Shortage {
-  readonly reason: string;
-  readonly missing?: number;
 }
 
 function ballPoles(
@@ -99,51 +95,24 @@ function ballPoles(
   const found = padeNormal(b, L, M, work) ?? pivoted(b, L, M, work);
   if (found === undefined) return { reason: `a determinant of [${L}/${M}] cannot be told from zero` };
   const { entry, jacobi } = found;
+  // Roots lose a bit or two per order against the coefficients: no search where these are too coarse already.
+  const missing = prec + GUARD_BITS + M - usefulBits(entry.denominator, meanSize(entry.denominator));
+  if (missing > 0) return { reason: `the coefficients of [${L}/${M}] need more bits`, missing, of: 'coefficients' };
   const result = ballRoots(entry.denominator, rootBits, jacobi === undefined ? undefined : recurrenceRatio(jacobi));
   if ('failed' in result) return { reason: `poles of [${L}/${M}]: ${result.failed}` };
-  return sharpFractions(entry, entry.numerator, entry.denominator, result.roots, prec, work);
+  const sharp = sharpFractions(entry.numerator, entry.denominator, result.roots, prec, work);
+  return 'reason' in sharp ? sharp : { exists: true, entry, ...sharp };
+}
+
+/** Nearest integer to the mean of log2|z| over the roots; 0 where the leading coefficient does not tell. */
+function meanSize(q: readonly Ball[]): number {
+  const last = q[q.length - 1]!;
+  return last.mid === 0n ? 0 : Math.round(-R.upperBits(R.exactMid(last)) / Math.max(1, q.length - 1));
 }
 
 function pivoted(b: readonly Ball[], L: number, M: number, work: number): NormalEntry | undefined {
   const entry = padeField(ballField(work), b, L, M);
   return entry.exists === true ? { entry } : undefined;
-}
-
-/** Partial fractions evaluated with as many bits as the accuracy needs, `most` at the utmost. */
-function sharpFractions(
-  entry: PadePoles['entry'],
-  p: readonly Ball[],
-  q: readonly Ball[],
-  roots: readonly CertifiedRoot[],
-  prec: number,
-  most: number,
-): PadePoles | Shortage {
-  let bits = Math.min(most, prec + 2 * GUARD_BITS + q.length);
-  for (;;) {
-    const fractions = partialFractions(p, q, roots, bits);
-    const strongest = Math.max(...fractions.poles.map((pole) => C.upperBits(pole.amplitude)));
-    const missing = Math.max(0, ...fractions.poles.map((pole) => missingBits(pole, prec, strongest)));
-    if (missing === 0) return { exists: true, entry, ...fractions };
-    if (bits >= most) return { reason: 'residues need more bits', missing: Math.min(missing, most) };
-    bits = Math.min(most, bits + Math.ceil(Math.min(missing, most)) + GUARD_BITS);
-  }
-}
-
-/**
- * Bits that a pole falls short of: `prec` for its position; for its amplitude A `prec` relative to the strongest amplitude
- * 2^strongest and WEAK_BITS relative to |A|; for other terms of a principal part `prec` relative to A. 0 when none.
- */
-function missingBits({ position, amplitude, principal }: Pole, prec: number, strongest: number): number {
-  const size = C.upperBits(position);
-  const weakness = Math.max(0, strongest - C.upperBits(amplitude));
-  const wanted = Math.max(prec - weakness, Math.min(prec, WEAK_BITS));
-  let missing = Math.max(prec - C.accuracyBits(position), wanted - C.accuracyBits(amplitude));
-  const scale = C.upperBits(principal[principal.length - 1]!) - principal.length * size;
-  for (let j = 0; j < principal.length - 1; j++) {
-    const radius = Math.max(R.radiusBits(principal[j]!.re), R.radiusBits(principal[j]!.im)) - (j + 1) * size;
-    missing = Math.max(missing, radius - scale + wanted);
-  }
-  return missing > 0 ? missing : 0;
 }
 
 /** True when one prime shows that [L/M] exists, is reduced and has simple poles. */
@@ -174,10 +143,10 @@ function exactPoles(
     const result = rationalRoots(integers, prec + extra);
     if ('failed' in result) return { exists: undefined, reason: `poles of [${L}/${M}]: ${result.failed}` };
     const balls = (a: readonly Rational[]): Ball[] => a.map((c) => R.fromRational(c, work));
-    const attempt = sharpFractions(entry, balls(entry.numerator), balls(entry.denominator), result.roots, prec, work);
-    if ('exists' in attempt) return { ...attempt, polynomial: balls(quotient) };
-    reason = attempt.reason;
-    extra += Math.ceil(attempt.missing ?? extra) + GUARD_BITS;
+    const sharp = sharpFractions(balls(entry.numerator), balls(entry.denominator), result.roots, prec, work);
+    if (!('reason' in sharp)) return { exists: true, entry, ...sharp, polynomial: balls(quotient) };
+    reason = sharp.reason;
+    extra += Math.ceil(sharp.missing ?? extra) + GUARD_BITS;
   }
   return { exists: undefined, reason };
 }

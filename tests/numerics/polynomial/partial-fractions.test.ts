@@ -5,7 +5,7 @@ import type { Complex } from '../../../src/numerics/ball/complex.js';
 import { pi } from '../../../src/numerics/ball/constants.js';
 import * as R from '../../../src/numerics/ball/real.js';
 import { exact, exactReal } from '../../../src/numerics/exact.js';
-import { Rational } from '../../../src/numerics/rational.js';
+import type { Rational } from '../../../src/numerics/rational.js';
 import {
   certifiedRoots,
   degreePoly,

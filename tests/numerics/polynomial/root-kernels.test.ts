@@ -163,7 +163,7 @@ describe('discs', () => {
       ),
     );
     expect(bad.disjoint).toBe(false);
-    expect([...bad.crowded.slice(0, 2)]).toEqual([1, 1]);
+    expect(Array.from(bad.crowded.slice(0, 2))).toEqual([1, 1]);
   });
 
   test('two equal points, or a pair that collapsed onto the axis, are never accepted', () => {
@@ -233,7 +233,7 @@ describe('starting points', () => {
   test('radii on the Newton polygon for separated roots', () => {
     // (x − 2^-100)(x − 1)(x − 2^300), to leading order
     const points = startingPoints([200, 300, 300, 0]);
-    expect([...points.exp].sort((a, b) => a - b)).toEqual([-100, 0, 300]);
+    expect(Array.from(points.exp).sort((a, b) => a - b)).toEqual([-100, 0, 300]);
   });
 
   test('doubles alone find well-conditioned roots to 14 digits', () => {
