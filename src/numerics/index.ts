@@ -27,6 +27,7 @@ export { cexp, clog, cpow, csqrt, arg } from './ball/complex-elementary.js';
 export { bernoulli } from './special/bernoulli.js';
 export { zeta } from './special/zeta.js';
 export { gamma, rgamma } from './special/gamma.js';
+export { gammaComplex, rgammaComplex } from './special/gamma-complex.js';
 export { logGamma, logGamma1p } from './special/log-gamma.js';
 export { digamma } from './special/digamma.js';
 export * from './polynomial/index.js';
@@ -36,3 +37,13 @@ export { branchSame, branchAlternating, branchCut } from './special/kernels.js';
 export type { BranchValue } from './special/kernels.js';
 export type { DecimalText } from './enclose.js';
 export { certainDigits, raisePrecision, toDecimal } from './enclose.js';
+export {
+  gammaDouble,
+  rgammaDouble,
+  logGammaDouble,
+  digammaDouble,
+  branchSameDouble,
+  branchAlternatingDouble,
+  scaledE1Double,
+} from './special/double.js';
+export type { BranchDouble, ComplexDouble } from './special/double.js';
