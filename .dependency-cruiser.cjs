@@ -40,6 +40,13 @@ module.exports = {
       to: { path: '^src/[^/]+/', pathNot: ['^src/$1/', '^src/[^/]+/index\\.ts$'] },
     },
     {
+      name: 'cli-loads-rooms-when-needed',
+      severity: 'error',
+      comment: 'a static import here loads a whole room for every --help; import types, or import() inside run',
+      from: { path: '^src/cli/' },
+      to: { path: '^src/[^/]+/index', pathNot: '^src/cli/', dynamic: false, dependencyTypesNot: ['type-only'] },
+    },
+    {
       name: 'rooms-do-not-import-the-public-face',
       severity: 'error',
       from: { path: '^src/[^/]+/' },

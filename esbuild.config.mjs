@@ -29,6 +29,19 @@ async function notices(metafile) {
   return `Leastterm's bundle holds the following packages.\n\n${parts.join(`\n${'-'.repeat(80)}\n\n`)}`;
 }
 
+/**
+ * yargs/helpers re-exports the word parser beside helpers that load the rest of yargs. Nothing of that rest acts when it is
+ * loaded, which its package does not say: said here, it stays out of the bundle.
+ */
+const parserOnly = {
+  name: 'yargs-parser-only',
+  setup({ onResolve }) {
+    onResolve({ filter: /^\.\.\/(build|lib)\// }, ({ path, resolveDir }) =>
+      resolveDir.endsWith('/yargs/helpers') ? { path: join(resolveDir, path), sideEffects: false } : undefined,
+    );
+  },
+};
+
 export async function bundle(outdir) {
   await rm(outdir, { recursive: true, force: true });
   const { metafile } = await build({
@@ -44,6 +57,7 @@ export async function bundle(outdir) {
     alias: { yaml: join(root, 'node_modules/yaml/browser/index.js') },
     chunkNames: 'chunks/[name]-[hash]',
     legalComments: 'none',
+    plugins: [parserOnly],
     metafile: true,
     logLevel: 'warning',
   });

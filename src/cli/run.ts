@@ -1,5 +1,4 @@
 /** @module One run of the program: words in, exit code out; texts go to the surroundings. */
-import { VERSION } from '../studies/index.js';
 import { COMMANDS } from './commands.js';
 import { EXIT, tell, UsageError } from './faults.js';
 import { commandHelp, generalHelp } from './help.js';
@@ -7,6 +6,7 @@ import { OPTION_NAMES, OPTIONS } from './options.js';
 import { parse } from './parse.js';
 import type { Surroundings } from './surroundings.js';
 import { unknownCommand } from './unknown.js';
+import { VERSION } from './version.js';
 
 interface Words {
   /** The first word that is no option. */
@@ -54,7 +54,7 @@ async function dispatch(argv: readonly string[], surroundings: Surroundings): Pr
     return EXIT.done;
   }
   const command = COMMANDS.find((c) => c.name === name);
-  if (name !== undefined && command === undefined) throw new UsageError(unknownCommand(name, COMMANDS));
+  if (name !== undefined && command === undefined) throw new UsageError(await unknownCommand(name, COMMANDS));
   if (command === undefined) {
     const [stray] = rest.filter((word) => word !== '-h' && word !== '--help' && word !== '--');
     if (stray !== undefined) {

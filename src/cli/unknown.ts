@@ -1,8 +1,8 @@
 /** @module The message for a word that is no command. */
-import { nearest } from '../series/index.js';
 import type { Command } from './command.js';
 
-export function unknownCommand(word: string, commands: readonly Command[]): string {
+export async function unknownCommand(word: string, commands: readonly Command[]): Promise<string> {
+  const { nearest } = await import('../series/index.js');
   const names = commands.map((command) => command.name);
   const near = nearest(word, names);
   const hint = near === undefined ? `wanted one of ${names.join(', ')}` : `did you mean ${near}?`;

@@ -1,4 +1,5 @@
 import { describe, expect, test } from 'vitest';
+import { COMMANDS } from '../../src/cli/commands.js';
 import { leastterm, words } from './harness.js';
 
 const HELP = ['', '--help', '-h', 'help', '--json'] as const;
@@ -11,7 +12,7 @@ describe('help', () => {
     await expect(stdout).toMatchFileSnapshot('golden/help.txt');
   });
 
-  test.each(['assess', 'growth', 'plane', 'sum', 'catalogue', 'help'])('of %s, by three ways', async (command) => {
+  test.each(COMMANDS.map((command) => command.name))('of %s, by three ways', async (command) => {
     const ways = [`help ${command}`, `${command} --help`, `${command} -h`];
     const texts = await Promise.all(ways.map(async (line) => leastterm(words(line))));
     for (const { status, stdout, stderr } of texts) {
@@ -23,7 +24,7 @@ describe('help', () => {
   });
 
   test('is at most 80 columns of plain ASCII', async () => {
-    for (const topic of ['', 'assess', 'growth', 'plane', 'sum', 'catalogue', 'help']) {
+    for (const topic of ['', ...COMMANDS.map((command) => command.name)]) {
       const { stdout } = await leastterm(words(`help ${topic}`));
       for (const line of stdout.split('\n')) expect(line.length, line).toBeLessThanOrEqual(80);
       expect(stdout).toMatch(/^[\n -~]*$/);
@@ -42,7 +43,7 @@ test('--version is one line, wherever it stands', async () => {
   }
 });
 
-const USUAL = ['assess', 'growth', 'plane', 'sum', 'catalogue', 'help'].join(', ');
+const USUAL = COMMANDS.map((command) => command.name).join(', ');
 
 /** Command line, and what standard error says after "leastterm: ", without the last line that points to the help. */
 const MISTAKES: readonly (readonly [line: string, message: string])[] = [

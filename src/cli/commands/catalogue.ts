@@ -1,5 +1,4 @@
 /** @module leastterm catalogue: the series that come with the program. */
-import { suggestion } from '../../series/index.js';
 import type { Call, Command } from '../command.js';
 import { EXIT, UsageError } from '../faults.js';
 import { readSeries } from '../input.js';
@@ -34,6 +33,7 @@ async function run(call: Call): Promise<number> {
   } else if (action === 'list') {
     throw new UsageError(`"${id}" is one operand too many; write leastterm catalogue show ${id}`, catalogue.name);
   } else {
+    const { suggestion } = await import('../../series/index.js');
     const hint = suggestion(action, ['list', 'show']);
     throw new UsageError(`"${action}" is no action of the catalogue${hint}; wanted list or show ID`, catalogue.name);
   }

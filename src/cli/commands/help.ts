@@ -17,7 +17,7 @@ export function helpCommand(others: readonly Command[]): Command {
       const all = [...others, help];
       const [topic] = operands;
       const command = all.find((c) => c.name === topic);
-      if (topic !== undefined && command === undefined) throw new UsageError(unknownCommand(topic, all));
+      if (topic !== undefined && command === undefined) throw new UsageError(await unknownCommand(topic, all));
       surroundings.stdout.write(command === undefined ? generalHelp(all) : commandHelp(command));
       return EXIT.done;
     },

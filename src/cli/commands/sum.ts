@@ -1,5 +1,4 @@
 /** @module leastterm sum: one prescription, as many digits as are wanted. */
-import { suggestion } from '../../series/index.js';
 import type { Call, Command } from '../command.js';
 import { EXIT, UsageError } from '../faults.js';
 import { neededCoupling, readSeries, requestOf, USUAL_DIGITS } from '../input.js';
@@ -13,6 +12,7 @@ async function prescriptionOf(by: string | undefined): Promise<string> {
   if (by !== undefined && names.includes(by)) return by;
   const known = `one of ${names.join(', ')}`;
   if (by === undefined) throw new UsageError(`--by is missing: ${known}`, sum.name);
+  const { suggestion } = await import('../../series/index.js');
   throw new UsageError(`--by: no prescription "${by}"${suggestion(by, names)}; wanted ${known}`, sum.name);
 }
 

@@ -10,7 +10,7 @@ const DIGITS = 4;
 
 const few = (text: string | undefined): string => (text === undefined ? '' : shorten(text, DIGITS));
 
-function conventionTable(page: Page, ambiguity: AmbiguityReport): void {
+function conventionTable(page: Page, ambiguity: AmbiguityReport, unit: string): void {
   const rows = ambiguity.conventions.flatMap((c): (TableRow | TableNote)[] => {
     const name = c.name === ambiguity.chosen ? `${withPi(c.name)} (used in the verdict)` : withPi(c.name);
     const cells = [name, few(c.value), c.relative === undefined ? '' : percent(c.relative), few(c.GeV), c.standing];
@@ -22,13 +22,17 @@ function conventionTable(page: Page, ambiguity: AmbiguityReport): void {
       { head: 'convention', align: 'left' },
       { head: 'ambiguity', align: 'point' },
       { head: 'relative', align: 'point' },
-      { head: 'in GeV', align: 'point' },
+      { head: `in ${unit}`, align: 'point' },
       { head: 'trust', align: 'left' },
     ],
     rows,
   );
   page.blank();
 }
+
+/** "GeV", "GeV^4". */
+const unitOf = ({ GeV }: PowerCorrectionReport): string =>
+  GeV === undefined || GeV.power === '1' ? 'GeV' : `GeV^${GeV.power}`;
 
 function powerFacts(power: PowerCorrectionReport): Fact[] {
   const d = power.dimension ?? 'd';
@@ -39,8 +43,7 @@ function powerFacts(power: PowerCorrectionReport): Fact[] {
     facts.push({ label: 'ambiguity', text: `${few(power.inPowerUnits)} times (Λ/Q)^${d}` });
   }
   if (power.GeV !== undefined) {
-    const unit = power.GeV.power === '1' ? 'GeV' : `GeV^${power.GeV.power}`;
-    facts.push({ label: 'in GeV', text: `${few(power.GeV.value)} ${unit}` });
+    facts.push({ label: 'as energy', text: `${few(power.GeV.value)} ${unitOf(power)}` });
   }
   return facts;
 }
@@ -81,7 +84,7 @@ export function ambiguitySection(
   { ambiguity, powerCorrection }: Pick<Assessment, 'ambiguity' | 'powerCorrection'>,
 ): void {
   page.head('The ambiguity and the power correction');
-  conventionTable(page, ambiguity);
+  conventionTable(page, ambiguity, unitOf(powerCorrection));
   page.say(sentence(ambiguity.statement));
   const facts = powerFacts(powerCorrection);
   if (facts.length > 0) {

@@ -64,4 +64,5 @@ export function termsSection(
   );
   page.blank();
   page.say(closing(terms, optimalTruncation.status));
+  page.say('The digits of terms and sums are certified for these coefficients and this coupling.', 'faint');
 }

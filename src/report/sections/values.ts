@@ -47,6 +47,10 @@ function familyNotes(entries: readonly ValueEntry[]): TableNote[] {
 function lateralNotes(entries: readonly ValueEntry[]): TableNote[] {
   const lateral = entries.filter((entry) => entry.imaginary !== undefined && entry.value !== undefined);
   if (lateral.length === 0) return [];
+  const [only] = lateral;
+  if (lateral.length === 1 && only !== undefined) {
+    return [{ note: `lateral sums: value ± i times ${shorten(only.imaginary ?? '', 4)}`, indent: 4, tone: 'faint' }];
+  }
   const list = lateral.map((entry) => `${entry.variant} ${shorten(entry.imaginary ?? '', 4)}`).join(', ');
   return [{ note: `lateral sums: value ± i times ${list}`, indent: 4, tone: 'faint' }];
 }
