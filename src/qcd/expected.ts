@@ -127,6 +127,21 @@ export function expectedSingularity(input: ExpectedSingularityInput): ExpectedSi
   };
 }
 
+/**
+ * The first ultraviolet singularity, u = −1, that every series of a short-distance quantity has beside its infrared ones:
+ * operators of dimension six in the Lagrangian, d = −2. For correlators of quark currents its coefficient function starts at
+ * 1/x, which makes the double pole of the large-β_0 limit (γ = 2 − β_1/β_0², the default); `doublePole: false` for
+ * quantities with a simple one. Anomalous dimensions of the operators are left out.
+ */
+export function ultravioletPartner(input: {
+  readonly flavours: number;
+  readonly divisor: CouplingDivisor;
+  readonly doublePole?: boolean;
+}): ExpectedSingularity {
+  const { flavours, divisor, doublePole = true } = input;
+  return expectedSingularity({ flavours, divisor, dimension: -2, wilson: { power: doublePole ? -1 : 0 } });
+}
+
 /** How many c_j exist: c_j has the factor 1/(p(p−1)…(p−j+1)). */
 function usableCorrections(p: Exact): number {
   for (let j = 0; j < CORRECTIONS; j++) {

@@ -12,6 +12,7 @@ export { divisorSize, overFourPi, overFourPiNumber, type CouplingDivisor } from 
 export {
   anomalousTerm,
   expectedSingularity,
+  ultravioletPartner,
   uPerT,
   type ExpectedSingularity,
   type ExpectedSingularityInput,
@@ -72,3 +73,6 @@ export {
 } from './normalisation/normalisation.js';
 export { asymptoticRatio, borelFactor, sumRule } from './normalisation/estimates.js';
 export { exactPath, type ExactPathQuestion, type ExactPathResult } from './matching/exact-path.js';
+export { liftExact, type Ring, type RingFormula } from './algebra/ring.js';
+export * from './algebra/truncated.js';
+export { shiftCoupling } from './algebra/renormalisation.js';

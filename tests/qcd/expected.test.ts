@@ -1,6 +1,12 @@
 import { describe, expect, it } from 'vitest';
 import { Rational, exact, toNumberExact, type Exact } from '../../src/numerics/index.js';
-import { anomalousTerm, betaCoefficients, expectedSingularity, uPerT } from '../../src/qcd/index.js';
+import {
+  anomalousTerm,
+  betaCoefficients,
+  expectedSingularity,
+  uPerT,
+  ultravioletPartner,
+} from '../../src/qcd/index.js';
 
 const q = (text: string): Rational => Rational.parse(text) ?? Rational.ZERO;
 const num = (x: Exact | undefined): number => (x === undefined ? NaN : toNumberExact(x));
@@ -60,6 +66,12 @@ describe('expected singularities', () => {
     expect(num(uv.corrections[0])).toBeCloseTo(-1.23348, 5);
     expect(num(uv.corrections[1])).toBeCloseTo(-3.03754, 5);
     expect(uv.kind).toBe('ultraviolet');
+    const partner = ultravioletPartner({ flavours: 3, divisor: 'pi' });
+    expect(partner.exponent.rational?.toString()).toBe(uv.exponent.rational?.toString());
+    expect(num(partner.corrections[1])).toBe(num(uv.corrections[1]));
+    const simple = ultravioletPartner({ flavours: 3, divisor: 'pi', doublePole: false });
+    expect(simple.exponent.rational?.toString()).toBe('17/81');
+    expect(simple.u.toString()).toBe('-1');
     const gluon = expectedSingularity({
       flavours: 3,
       dimension: 4,

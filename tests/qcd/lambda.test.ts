@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { alphaOfLambda, evolveAlpha, isRefusal, lambdaOf } from '../../src/qcd/index.js';
+import { alphaOfLambda, evolveAlpha, expandedAlpha, flowOf, isRefusal, lambdaOf } from '../../src/qcd/index.js';
 
 const number = (x: unknown): number => (typeof x === 'number' ? x : NaN);
 const close = (x: unknown, y: number, relative: number): void =>
@@ -57,5 +57,20 @@ describe('Λ_MSbar', () => {
     expect(isRefusal(alphaOfLambda(0.3, 0.3, { flavours: 3, loops: 4 }))).toBe(true);
     expect(isRefusal(alphaOfLambda(0.3, 0.3, { flavours: 3, loops: 4, definition: 'asymptotic' }))).toBe(true);
     expect(isRefusal(alphaOfLambda(0.3, 0, { flavours: 3, loops: 4 }))).toBe(true);
+  });
+
+  it('the expansion in 1/ln(μ²/Λ²) misses terms of the next order only', () => {
+    for (const flavours of [3, 5]) {
+      for (const loops of [2, 3, 4, 5] as const) {
+        const flow = flowOf(flavours, loops);
+        const gap = (log: number): number => {
+          const exact = number(alphaOfLambda(1, Math.exp(log / 2), { flavours, loops }));
+          return Math.abs(expandedAlpha(flow, log) - exact) / (Math.log(log) ** loops / (flow.b0 * log) ** (loops + 1));
+        };
+        // The ratio to ln^n L/L^(n+1) stays bounded as L grows.
+        expect(gap(300)).toBeLessThan(20);
+        expect(gap(1200) / gap(300)).toBeLessThan(4);
+      }
+    }
   });
 });

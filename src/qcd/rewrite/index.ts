@@ -7,6 +7,7 @@ export {
   invertRelation,
   mapMatrix,
   substituteCoupling,
+  substituteOver,
   type CoefficientSeries,
   type CouplingRelation,
 } from './relation.js';
@@ -19,4 +20,5 @@ export {
   lambdaRatioExponent,
   minimomRelation,
   potentialRelation,
+  relationOfBetas,
 } from './schemes.js';
