@@ -173,7 +173,7 @@ function remote(a: Ball, digits: number): DecimalText {
   const near = R.mul(R.mul2exp(a, -e), exp(power, prec), prec);
   const text = toDecimal(near, digits);
   if (text.certainDigits === 0) return bound(a);
-  const [mantissa = '', own = ''] = toExponent(text.text);
+  const [mantissa, own] = toExponent(text.text);
   return { text: `${mantissa}e${Number(own) + d}`, certainDigits: text.certainDigits };
 }
 

@@ -40,6 +40,8 @@ const HUGE_BITS = 1 << 16;
 /** A reduced argument this many bits below 1 makes the reduction start again with more bits. */
 const NEAR_ZERO = 12;
 const UNIT: Ball = { mid: 0n, exp: 0, rad: 1 };
+/** [−π, π] and a little. */
+const ANY_ANGLE: Ball = { mid: 0n, exp: 0, rad: Math.PI * (1 + 1e-12) };
 
 /** sin and cos of t·2^-wp for t off by `ulps`, turned by n quarter turns; 0 <= t <= π/4. */
 function assemble(t: bigint, wp: number, n: number, swap: boolean, ulps: number, prec: number): SinCos {
@@ -190,15 +192,15 @@ export function atan2(y: Ball, x: Ball, prec: number): Ball {
   const onAxis = R.isExactZero(y);
   if (onAxis && R.isPositive(x)) return R.ZERO;
   if (onAxis && R.isNegative(x)) return pi(prec);
-  if (x.rad === Infinity || y.rad === Infinity) return R.ball(0n, 0, 3.1416);
+  if (x.rad === Infinity || y.rad === Infinity) return ANY_ANGLE;
   const cutFree = R.isPositive(x) || !R.containsZero(y);
-  if (!cutFree) return R.ball(0n, 0, 3.1416);
+  if (!cutFree) return ANY_ANGLE;
   const mid = firstQuadrant(R.exactMid(R.abs(y)), R.exactMid(R.abs(x)), prec + 2);
   let angle = x.mid < 0n ? R.sub(pi(prec + 4), mid, prec) : R.round(mid, prec);
   if (y.mid < 0n) angle = R.neg(angle);
   if (x.rad === 0 && y.rad === 0) return angle;
   const bound = angleError(y, x);
-  return magBits(bound) < 2 ? widenMag(angle, bound) : R.ball(0n, 0, 3.1416);
+  return magBits(bound) < 2 ? widenMag(angle, bound) : ANY_ANGLE;
 }
 
 /** Bound (|x| ry + |y| rx)/min(x² + y²) over the rectangle. */
@@ -211,6 +213,6 @@ function angleError(y: Ball, x: Ball): Mag {
 
 /** artan x in (−π/2, π/2). */
 export function atan(x: Ball, prec: number): Ball {
-  if (x.rad === Infinity) return R.ball(0n, 0, 1.5708);
+  if (x.rad === Infinity) return { mid: 0n, exp: -1, rad: ANY_ANGLE.rad };
   return atan2(x, R.ONE, prec);
 }

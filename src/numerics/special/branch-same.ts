@@ -101,8 +101,8 @@ function convergent(b: Exponent, x: Ball, size: number, bits: number): BranchVal
   if (b.m < 0) {
     // b = m + ε with ε exact: sin πb and cos πb keep their relative accuracy next to the integers.
     const { sin, cos } = sinCosPi(R.fromRational(b.eps, bits + 8), bits);
-    const size = R.mul(gammaTerm(b, logX, bits), e, bits);
-    const u = b.m % 2 === 0 ? size : R.neg(size);
+    const product = R.mul(gammaTerm(b, logX, bits), e, bits);
+    const u = b.m % 2 === 0 ? product : R.neg(product);
     return { pv: R.sub(R.mul(sum, e, bits), R.mul(u, cos, bits), bits), im: R.neg(R.mul(u, sin, bits)) };
   }
   const part = pvPart(b, logX, bits);

@@ -19,7 +19,7 @@ import { bitLength, shift } from '../bits.js';
 import type { Complex } from '../ball/complex.js';
 import * as R from '../ball/real.js';
 import type { Ball } from '../ball/real.js';
-import { Rational } from '../rational.js';
+import type { Rational } from '../rational.js';
 import type { Exponent } from './exponent.js';
 
 /** Longest fraction tried (heuristic); the caller then falls back on the series. */
