@@ -1,5 +1,5 @@
 /** @module One model's answer as a plain result: bands in decimal, of any size, or a refusal. */
-import type { Band, Estimate, Level, Question, TruncationModel } from '../truncation/index.js';
+import type { Band, Estimate, Question, TruncationModel } from '../truncation/index.js';
 import type { Refused } from './assessment.js';
 import { indicative } from './figures.js';
 
@@ -30,18 +30,8 @@ export const bandText = (band: Band, unit: number, digits: number): BandText => 
   high: scaledText(band.high, unit, digits),
 });
 
-/** Finite bands in their order, the wider one around the narrower in content. */
-const sound = (bands: Readonly<Record<Level, Band>>): boolean =>
-  [bands[68], bands[95]].every(({ low, high }) => Number.isFinite(low) && Number.isFinite(high) && low <= high);
-
-const OUT_OF_RANGE: Refused = {
-  reason: 'the numbers leave the range in which they can be worked out',
-  remedy: 'bring the priors nearer to their usual values',
-};
-
 /** One model's answer; never throws for what a model cannot do. */
 export function ask(model: TruncationModel, question: Question): Estimate | Refused {
   const answer = model.estimate(question);
-  if (answer.kind === 'refusal') return { reason: answer.reason, remedy: answer.remedy };
-  return sound(answer.bands) ? answer : OUT_OF_RANGE;
+  return answer.kind === 'refusal' ? { reason: answer.reason, remedy: answer.remedy } : answer;
 }

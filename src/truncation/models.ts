@@ -10,6 +10,7 @@ import { lastRatio } from './conventional/last-ratio.js';
 import { lastTerm } from './conventional/last-term.js';
 import { leastTerm } from './conventional/least-term.js';
 import { padeNext } from './conventional/pade-next.js';
+import { guarded } from './guard.js';
 import type { TruncationModel } from './model.js';
 import { scaleAveraged, scaleMarginalised } from './scale/average.js';
 import { scaleEnvelope } from './scale/envelope.js';
@@ -29,4 +30,4 @@ export const TRUNCATION_MODELS: readonly TruncationModel[] = [
   abc,
   scaleMarginalised,
   scaleAveraged,
-];
+].map(guarded);

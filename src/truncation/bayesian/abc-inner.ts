@@ -41,11 +41,16 @@ export function abcInner(n: number, lo: number, hi: number, logScale: number, sh
   const s = n + 1 + shape.epsilon;
   const polygon = polygonOf(lo, hi, shape.eta * Math.exp(-logScale), shape.xi, s);
   const { area, first } = moments(polygon);
-  const bare = { polygon, norm: s / (2 * (s + 1) * area), lo: lo / polygon.lowest, hi: hi / polygon.lowest };
-  const edge = outside(bare, bare.lo, -1);
+  const norm = s / (2 * (s + 1) * area);
+  const bottom = lo / polygon.lowest;
+  const edge = outside({ polygon, norm }, bottom, -1);
   const logUnit = logScale + Math.log(polygon.lowest);
+  // Written out field by field: this object is made a thousand times for one answer.
   return {
-    ...bare,
+    polygon,
+    norm,
+    lo: bottom,
+    hi: hi / polygon.lowest,
     logWeight: Math.log(area / s) + (1 - s) * logUnit,
     logUnit,
     meanBias: first / area,

@@ -122,21 +122,20 @@ export function abcPosterior(
   const all = panels.flatMap((p) => p.nodes);
   const top = Math.max(...all.map((node) => node.logWeight));
   const total = all.reduce((sum, node) => sum + node.kronrod * Math.exp(node.logWeight - top), 0);
-  const kept = all
-    .map((node) => ({
-      ...node,
-      weight: (node.kronrod * Math.exp(node.logWeight - top)) / total,
-      gaussWeight: (node.gauss * Math.exp(node.logWeight - top)) / total,
-    }))
-    .filter((node) => node.weight > NO_WEIGHT);
+  const kept = all.filter((node) => node.kronrod * Math.exp(node.logWeight - top) > NO_WEIGHT * total);
+  const share = (node: RatioNode, rule: number): number => (rule * Math.exp(node.logWeight - top)) / total;
 
   // y = z a^n: the unit of a node in y, as a logarithm; the posterior mean of these is the unit of the answer.
   const logSize = (node: RatioNode): number => node.inner.logUnit + n * Math.log(Math.abs(node.ratio));
-  const logUnit = kept.reduce((sum, node) => sum + node.weight * logSize(node), 0);
-  const spots = kept.map((node) => {
-    const size = Math.exp(logSize(node) - logUnit);
-    return { ...node, size, flip: node.ratio < 0 && n % 2 === 1 };
-  });
+  const logUnit = kept.reduce((sum, node) => sum + share(node, node.kronrod) * logSize(node), 0);
+  const spots = kept.map((node) => ({
+    inner: node.inner,
+    ratio: node.ratio,
+    weight: share(node, node.kronrod),
+    gaussWeight: share(node, node.gauss),
+    size: Math.exp(logSize(node) - logUnit),
+    flip: node.ratio < 0 && n % 2 === 1,
+  }));
   const scratch = { tail: 0, pdf: 0 };
   const mixture = (y: number, by: 'weight' | 'gaussWeight'): { cdf: number; pdf: number } => {
     let cdf = 0;
