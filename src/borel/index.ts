@@ -28,4 +28,6 @@ export type { Contour, RayChoice, RayIntegrand } from './ray.js';
 export { RAYS } from './ray-nodes.js';
 export type { Ray } from './ray-nodes.js';
 export { nearDiagonal, padeOf } from './table.js';
+export { fitStrengths, hyperasymptoticSum, lateCoefficient, terminant } from './terminants.js';
+export type { Leader } from './terminants.js';
 export { borelTransform, borelTransformOrder2 } from './transform.js';
