@@ -3,8 +3,8 @@
  *
  * Purpose    a gcd of two integers of 100,000 bits costs more than the determinant they come from; a hundred of them
  *            over the same denominator cost little more than one.
- * Method     gcd(Π nums mod den, den) holds every prime of den that divides any numerator. The part G of den made of
- *            those primes is usually short, and gcd(num, den) = gcd(num, G).
+ * Method     G = gcd(Π nums mod den, den) is a multiple of gcd(num, den) for every numerator that is no multiple of den, and
+ *            usually short: gcd(num, den) = gcd(num, G).
  * Bound      exact.
  * Reference  D. J. Bernstein, "Factoring into coprimes in essentially linear time", J. Algorithms 54 (2005) 1 (the idea).
  */
@@ -21,13 +21,7 @@ export function overCommonDenominator(nums: readonly bigint[], den: bigint): Rat
   const d = den * sign;
   let product = 1n;
   for (const c of nums) if (c !== 0n && c % d !== 0n) product = (product * (c % d)) % d;
-  let part = gcdBigInt(product, d);
-  for (let rest = d / part; ;) {
-    const g = gcdBigInt(rest % part, part);
-    if (g === 1n) break;
-    part *= g;
-    rest /= g;
-  }
+  const part = gcdBigInt(product, d);
   return nums.map((c) => {
     const g = gcdBigInt(c % part, part);
     // c = 0, or a multiple of d, makes g the whole part but leaves d/part: divide by the true gcd there.

@@ -83,6 +83,11 @@ describe('gcd', () => {
     expect(gcdInt(mulInt([p, 1n], [3n, 5n]), mulInt([0n, 1n, 1n], [3n, 5n]))).toEqual([3n, 5n]);
   });
 
+  test('a prime that divides a leading coefficient is passed over', () => {
+    const p = BigInt(wordPrime(0));
+    expect(gcdInt(mulInt([1n, p], [1n, 1n]), mulInt([1n, p], [2n, 1n]))).toEqual([1n, p]);
+  });
+
   test('degree 100 with a common factor of degree 40 and 60-digit coefficients', () => {
     const pseudo = (n: number, seed: bigint): bigint[] => {
       let s = seed;

@@ -63,6 +63,27 @@ describe('fixed-point evaluation', () => {
     );
   });
 
+  test('the bound holds where all roundings go one way: 200 equal terms at points of full width', () => {
+    const ones = poly(...Array.from({ length: 200 }, () => 1));
+    const w = 62;
+    const s = scaleCoefficients(exactBalls(ones), 0, w);
+    let seed = 11n;
+    for (let run = 0; run < 10; run++) {
+      seed = (seed * 6364136223846793005n + 1442695040888963407n) % 2n ** 64n;
+      const yr = 2n ** 62n - (seed >> 8n);
+      const yi = run % 2 === 0 ? 0n : seed >> 9n;
+      const v = evaluateAt(s, yr, yi, false);
+      const [re, im] = exactValue(ones, q(yr, 2n ** 62n), q(yi, 2n ** 62n));
+      const unit = two(s.unit);
+      const size = Math.hypot(Number(yr), Number(yi)) / 2 ** 62;
+      const error = Math.hypot(re.div(unit).sub(q(v.re)).toNumber(), im.div(unit).sub(q(v.im)).toNumber());
+      const bound = valueErrorBound(s, size * (1 + 1e-12), false);
+      expect(error).toBeLessThanOrEqual(bound);
+      // and it is no more than a few bits too wide
+      expect(error).toBeGreaterThan(bound / 40);
+    }
+  });
+
   test('the slope is the derivative', () => {
     const p = poly(3, -1, 4, 1, -5, 9, -2, 6);
     const s = scaleCoefficients(exactBalls(p), 1, 120);
