@@ -115,9 +115,8 @@ function average(marginal: boolean): TruncationModel['estimate'] {
     return {
       kind: 'estimate',
       terms: known.values.length,
-      next: result.mean - sum,
       bands: { 68: band(one), 95: band(two) },
-      facts: [],
+      facts: [{ name: 'mean over the scales, from the sum', value: result.mean - sum, scaled: true }],
       notes: [],
     };
   };
