@@ -8,19 +8,20 @@
  */
 import { axisFit } from './axis-fit.js';
 import { scaledBorel } from './borel-coefficients.js';
-import { classify, type Classified } from './classify.js';
-import { flagsOf, usableOf } from './flags.js';
+import { classify } from './classify.js';
+import { flagsOf } from './flags.js';
 import type { Estimate, FoundSingularity, Growth, GrowthInput } from './growth.js';
-import { competitionLines, locate, type Located } from './locate.js';
+import { locate, type Located } from './locate.js';
+import { usableOf } from './noise-flags.js';
 import { predictions } from './predictions.js';
 import { prepare, type Prepared } from './prepare.js';
-import { ratioRows } from './ratio-test.js';
+import { ratioRows, scaledRows } from './ratio-test.js';
 import { nonZero, readTerms, type Reading } from './reading.js';
+import { shortLines } from './short-lines.js';
 import { statementOf } from './statement.js';
 import { complexPair, recurrence } from './two-root.js';
+import type { Classified } from './verdict-rule.js';
 
-/** Up to this many coefficients the short-series competition lines are shown. */
-const SHORT_LINES = 12;
 /** Coefficients from which on a verdict may be called converged, and the error of the order it needs. */
 const CONVERGED = { coefficients: 20, order: 0.1 };
 /** Orders that growth laws have. */
@@ -33,11 +34,23 @@ function trivial(reading: Exclude<Reading, { kind: 'series' }>): Growth {
   switch (reading.kind) {
     case 'empty': {
       const text = 'no coefficients';
-      return { ...nothing, verdict: 'undecided', statement: `undecided: ${text}`, standing: 'certified', flags: [{ code: 'too-short', text }] };
+      return {
+        ...nothing,
+        verdict: 'undecided',
+        statement: `undecided: ${text}`,
+        standing: 'certified',
+        flags: [{ code: 'too-short', text }],
+      };
     }
     case 'all-zero': {
-      const text = `all ${reading.count} coefficients are zero: ratios are undefined and there is nothing to resum`;
-      return { ...nothing, verdict: 'terminating', statement: text, standing: 'certified', flags: [{ code: 'all-zero', text }] };
+      const text = `all ${reading.count} coefficients are zero: there are no ratios, and nothing to resum`;
+      return {
+        ...nothing,
+        verdict: 'terminating',
+        statement: text,
+        standing: 'certified',
+        flags: [{ code: 'all-zero', text }],
+      };
     }
     case 'terminating': {
       const { degree, zeros } = reading;
@@ -88,7 +101,7 @@ function orderOf(c: Classified): number | undefined {
   }
 }
 
-function radiusOf(p: Prepared, input: GrowthInput): Estimate | undefined {
+function radiusOf(p: Prepared): Estimate | undefined {
   const stride = p.sequence.stride;
   if (p.pattern.kind === 'irregular') {
     const { beta, scale } = scaledBorel(p.points, 0);
@@ -97,7 +110,7 @@ function radiusOf(p: Prepared, input: GrowthInput): Estimate | undefined {
     const value = Math.exp((Math.log(pair.modulus.value) - scale) / stride);
     return { value, error: (value * pair.modulus.error) / pair.modulus.value / stride };
   }
-  const fit = axisFit(p.tail, stride, 0, p.pattern.sign, input.exact);
+  const fit = axisFit(p.tail, stride, 0, p.pattern.sign, p.exact);
   if (fit === undefined) return undefined;
   const value = Math.exp(fit.logT / stride);
   return { value, error: (value * fit.relativeError) / stride };
@@ -127,15 +140,16 @@ export function diagnoseGrowth(input: GrowthInput): Growth {
   if (reading.kind !== 'series') return trivial(reading);
   const p = prepare(reading.sequence, input);
   const stride = p.sequence.stride;
-  const rows = ratioRows(p.nonZero, stride);
+  const { rows } = scaledRows(p.nonZero, stride);
   const c = classify(p, rows);
   const order = orderOf(c);
   const whole = order !== undefined && Number.isInteger(order) && order >= 1;
-  const located = whole ? locate(p, input, order * stride) : undefined;
-  const radius = c.verdict === 'geometric' ? radiusOf(p, input) : undefined;
-  const allRows = p.estimated.length === 0 ? rows : ratioRows([...p.nonZero, ...p.estimated], stride);
+  const located = whole ? locate(p, order * stride) : undefined;
+  const radius = c.verdict === 'geometric' ? radiusOf(p) : undefined;
+  const shownRows = ratioRows([...p.nonZero, ...p.estimated], stride);
   const usable = usableOf(p);
-  const flags = flagsOf(p, c, located, rows, input);
+  const shown = shortLines(p, input);
+  const flags = flagsOf(p, c, located, rows, input, shown.opposite);
   const tooShort = p.nonZero.length < 4;
   const nearest = located?.nearest;
   return {
@@ -148,14 +162,15 @@ export function diagnoseGrowth(input: GrowthInput): Growth {
     ...(located?.second === undefined || order !== 1 ? {} : { second: located.second }),
     ...(radius === undefined ? {} : { radius }),
     stride,
-    ratios: allRows,
+    ratios: shownRows,
     ...(p.comparisonAll === undefined ? {} : { comparison: p.comparisonAll }),
     predictions: predictions(
       p.tail.length >= 4 ? p.tail : p.nonZero,
       stride,
       p.pattern.kind === 'irregular' ? undefined : p.pattern.kind,
+      p.comparison?.shift ?? 0,
     ),
-    competition: [...(located?.competition ?? []), ...competitionLines(p, input, SHORT_LINES)],
+    competition: [...(located?.competition ?? []), ...shown.lines],
     ...(usable === undefined ? {} : { usableCoefficients: usable }),
     flags: tooShort ? [{ code: 'too-short', text: c.reason }, ...flags] : flags,
   };

@@ -38,7 +38,11 @@ export function essentialGrowth(points: readonly Point[], q: number): EssentialG
   const last = points[points.length - 1]!.k;
   if (points.length < MIN_POINTS) return undefined;
   const scale = points[points.length - 1]!.y - points[points.length - 2]!.y;
-  const d = ratios(points.map((p) => ({ ...p, sign: 1 })), q, scale);
+  const d = ratios(
+    points.map((p) => ({ ...p, sign: 1 })),
+    q,
+    scale,
+  );
   const g = (k: number): number => {
     const a = d[k - 1];
     const b = d[k];
@@ -59,7 +63,8 @@ export function essentialGrowth(points: readonly Point[], q: number): EssentialG
   const tried = KAPPAS.map((kappa) => ({ kappa, found: fit(columns(kappa)) }));
   const { kappa, found } = tried.reduce((u, v) => ((v.found?.rss ?? Infinity) < (u.found?.rss ?? Infinity) ? v : u));
   const full = leastSquares(columns(kappa), y);
-  if (power === undefined || full === undefined || found === undefined || !(found.rss < BETTER * power.rss)) return undefined;
+  if (power === undefined || full === undefined || found === undefined || !(found.rss < BETTER * power.rss))
+    return undefined;
   const value = -found.coefficients[1]!;
   const error = INFLATION * Math.abs(found.coefficients[1]! - full.coefficients[1]!);
   return { kappa, rate: found.coefficients[3]!, logT: { value, error } };

@@ -78,11 +78,7 @@ function freeOrder(points: readonly Point[]): Estimate | undefined {
   if (points.length < 4) return undefined;
   const k = points.map((p) => p.k);
   const fit = leastSquares(
-    [
-      k.map(() => 1),
-      k,
-      points.map((p) => logGamma(p.n + 1)),
-    ],
+    [k.map(() => 1), k, points.map((p) => logGamma(p.n + 1))],
     points.map((p) => p.y),
   );
   if (fit === undefined) return undefined;

@@ -1,75 +1,16 @@
 /** @module The flags: what a reader must know beside the verdict, in words with numbers. */
-import type { GrowthFlag, GrowthInput } from './growth.js';
+import type { GrowthFlag, GrowthInput, RatioRow } from './growth.js';
 import type { Located } from './locate.js';
-import { settling, type Classified } from './classify.js';
-import { usableCoefficients } from './noise.js';
+import { settling } from './classify-short.js';
+import type { Classified } from './verdict-rule.js';
+import { noiseFlags, usableOf } from './noise-flags.js';
 import type { Prepared } from './prepare.js';
-import type { RatioRow } from './growth.js';
 import { plural, plusMinus, short } from './words.js';
 
-/** Quoted errors that stay within this factor of each other, on most coefficients, come from a number of digits. */
-const UNIFORM = 40;
-/** … but not all equal: an error in per cent is an error, not a number of digits. */
-const EQUAL = 1.01;
-const MOST = 0.6;
-/** Decimal coefficients with at most this many digits count as rounded, when scatter is seen too. */
-const FEW_DIGITS = 8;
 /** Ratio test moving by more than this at the last order: pre-asymptotic. */
 const MOVING = 0.1;
 /** D_n and λ_n differing by more than this: pre-asymptotic. */
 const APART = 0.25;
-
-/** Number of leading coefficients that a rational approximant may use; undefined when that is all of them. */
-export function usableOf(p: Prepared): number | undefined {
-  const known = p.points.filter((x) => x.sign !== 0);
-  let errors = known.map((x) => (x.repaired === true ? Infinity : x.quoted));
-  if (p.sequence.unknownFrom !== undefined) errors = errors.slice(0, known.filter((x) => x.n < p.sequence.unknownFrom!).length);
-  const usable = usableCoefficients(errors);
-  return usable < known.length || p.sequence.unknownFrom !== undefined ? usable : undefined;
-}
-
-/** Largest number of significant decimal digits among the coefficients; undefined when one is not a decimal number. */
-function decimalDigits(input: GrowthInput): number | undefined {
-  let most = 0;
-  for (const e of input.exact ?? []) {
-    const q = e.rational;
-    if (q === undefined) return undefined;
-    let den = q.den;
-    while (den % 10n === 0n) den /= 10n;
-    while (den % 2n === 0n) den /= 2n;
-    while (den % 5n === 0n) den /= 5n;
-    if (den !== 1n) return undefined;
-    const digits = (q.num < 0n ? -q.num : q.num) * 5n ** BigInt(Math.max(0, q.den.toString(2).length - 1));
-    most = Math.max(most, digits.toString().replace(/0+$/, '').length);
-    if (most > FEW_DIGITS) return most;
-  }
-  return input.exact === undefined ? undefined : most;
-}
-
-function noiseFlags(p: Prepared, input: GrowthInput, usable: number | undefined): GrowthFlag[] {
-  const flags: GrowthFlag[] = [];
-  const advice = usable === undefined ? '' : `; a rational approximant may use the first ${usable}`;
-  if (p.noise !== undefined) {
-    const digits = decimalDigits(input);
-    if (digits !== undefined && digits <= FEW_DIGITS) {
-      flags.push({ code: 'few-digits', text: `the coefficients are rounded to ${digits} significant digits${advice}` });
-    }
-    flags.push({ code: 'noisy', text: `the coefficients scatter by a relative ${short(p.noise, 2)} about a smooth law${advice}` });
-    return flags;
-  }
-  const quoted = p.nonZero.filter((x) => x.repaired !== true && x.quoted > 0).map((x) => x.quoted);
-  if (quoted.length === 0) return flags;
-  const largest = Math.max(...quoted);
-  const spread = largest / Math.min(...quoted);
-  const digitLike = quoted.length >= MOST * p.nonZero.length && spread < UNIFORM && spread > EQUAL && largest < 0.01;
-  if (digitLike) {
-    const digits = Math.max(1, Math.round(-Math.log10(largest)));
-    flags.push({ code: 'few-digits', text: `the coefficients are known to about ${digits} significant digits${advice}` });
-  } else if (usable !== undefined && p.outliers.length === 0) {
-    flags.push({ code: 'noisy', text: `the coefficients have relative errors up to ${short(largest, 2)}${advice}` });
-  }
-  return flags;
-}
 
 function inputFlags(p: Prepared): GrowthFlag[] {
   const flags: GrowthFlag[] = [];
@@ -115,13 +56,25 @@ function inputFlags(p: Prepared): GrowthFlag[] {
   return flags;
 }
 
-function verdictFlags(p: Prepared, c: Classified, located: Located | undefined, rows: readonly RatioRow[]): GrowthFlag[] {
+function verdictFlags(
+  p: Prepared,
+  c: Classified,
+  located: Located | undefined,
+  rows: readonly RatioRow[],
+): GrowthFlag[] {
   const order = c.order === undefined ? '' : ` (fitted power of n!: ${plusMinus(c.order)})`;
   switch (c.verdict) {
     case 'geometric':
-      return [{ code: 'geometric', text: `geometric growth: the series converges, its Borel transform is entire${order}` }];
+      return [
+        { code: 'geometric', text: `geometric growth: the series converges, its Borel transform is entire${order}` },
+      ];
     case 'convergent':
-      return [{ code: 'convergent', text: `the coefficients fall faster than geometrically: infinite radius of convergence${order}` }];
+      return [
+        {
+          code: 'convergent',
+          text: `the coefficients fall faster than geometrically: infinite radius of convergence${order}`,
+        },
+      ];
     case 'subfactorial':
       return [{ code: 'subfactorial', text: `divergent, but slower than n!: the Borel transform is entire${order}` }];
     case 'superfactorial':
@@ -138,7 +91,8 @@ function verdictFlags(p: Prepared, c: Classified, located: Located | undefined, 
       const last = rows[rows.length - 1];
       const s = settling(rows);
       const apart = last?.linear === undefined ? 0 : Math.abs(1 - last.ratio / last.linear);
-      if (p.noise !== undefined || located?.quasiPeriodic === true || s === undefined || (s < MOVING && apart < APART)) return [];
+      if (p.noise !== undefined || located?.quasiPeriodic === true || s === undefined || (s < MOVING && apart < APART))
+        return [];
       return [
         {
           code: 'pre-asymptotic',
@@ -158,6 +112,7 @@ export function flagsOf(
   located: Located | undefined,
   rows: readonly RatioRow[],
   input: GrowthInput,
+  opposite: string | undefined,
 ): GrowthFlag[] {
   const flags = [...inputFlags(p), ...noiseFlags(p, input, usableOf(p)), ...verdictFlags(p, c, located, rows)];
   const s = located?.nearest;
@@ -174,8 +129,17 @@ export function flagsOf(
       text: `growth n! e^(${short(rate)} n^${short(kappa)}): no power exponent fits; the singularity is essential`,
     });
   }
+  if (located === undefined && opposite !== undefined) {
+    flags.push({
+      code: 'competing-singularities',
+      text: `${opposite}: no single singularity dominates at these orders`,
+    });
+  }
   if (located?.competing === true) {
-    flags.push({ code: 'competing-singularities', text: located.competition[0] ?? 'two singularities at similar distance' });
+    flags.push({
+      code: 'competing-singularities',
+      text: located.competition[0] ?? 'two singularities at similar distance',
+    });
   }
   return flags;
 }

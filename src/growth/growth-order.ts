@@ -14,6 +14,7 @@ import type { Estimate } from './growth.js';
 import { leastSquares } from './least-squares.js';
 import { logGamma } from './log-gamma.js';
 import type { Point } from './reading.js';
+import { weightedFit } from './weighted-fit.js';
 
 /** Points below this number allow no correction terms. */
 const LONG = 8;
@@ -26,6 +27,9 @@ const BEYOND_ORDER = 1.5;
 const BEYOND_GROWTH = 1.35;
 /** A dip farther than this many robust deviations below the line is weighted down. */
 const DIP = 1.5;
+/** Rounds of reweighting, and standard errors that the envelope fit is stated with. */
+const PASSES = 5;
+const ENVELOPE_ERRORS = 2;
 
 export interface OrderFit {
   /** Order per power of x. */
@@ -43,14 +47,13 @@ const columnsOf = (points: readonly Point[], terms: number): number[][] =>
     points.map((p) => 1 / (p.k + 1) ** 2),
   ].slice(0, terms);
 
-function fit(points: readonly Point[], terms: number, weights?: readonly number[]): (Estimate & { spread: number }) | undefined {
-  if (points.length <= terms) return undefined;
-  const smallest = Math.min(...points.map((p) => p.sigma));
-  const w = weights ?? points.map((p) => (smallest / p.sigma) ** 2);
-  const f = leastSquares(columnsOf(points, terms), points.map((p) => p.y), w);
-  if (f === undefined) return undefined;
-  const spread = Math.sqrt(Math.max(f.rss / (points.length - terms), smallest ** 2));
-  return { value: f.coefficients[2]!, error: spread * Math.sqrt(f.unitVariances[2]!), spread };
+function fit(points: readonly Point[], terms: number): Estimate | undefined {
+  const f = weightedFit(
+    columnsOf(points, terms),
+    points.map((p) => p.y),
+    points.map((p) => p.sigma),
+  );
+  return f && { value: f.coefficients[2]!, error: f.standardErrors[2]! };
 }
 
 /** Long regular series: the fit whose statistical error and change against the next simpler one are smallest together. */
@@ -66,13 +69,18 @@ function regularOrder(points: readonly Point[]): Estimate | undefined {
       }
       simpler = f;
     }
+    const plain = tail.length >= LONG ? shortOrder(tail) : undefined;
+    if (plain !== undefined) found.push(plain);
   }
-  const plain = shortOrder(points);
-  if (plain !== undefined) found.push(plain);
   found.sort((a, b) => a.error - b.error);
   const [best, next] = found;
   // The smallest of many errors is small by accident: it must cover the runner-up.
-  return best && { value: best.value, error: Math.max(best.error, next === undefined ? 0 : Math.abs(best.value - next.value)) };
+  return (
+    best && {
+      value: best.value,
+      error: Math.max(best.error, next === undefined ? 0 : Math.abs(best.value - next.value)),
+    }
+  );
 }
 
 /** Shift of the fitted order by an exponent γ that the three-term fit cannot see. */
@@ -88,18 +96,22 @@ function shortOrder(points: readonly Point[]): Estimate | undefined {
   return { value: f.value, error: Math.hypot(f.error, exponentBias(points)) };
 }
 
-/** Irregular signs: an envelope fit. */
+/** Irregular signs: an envelope fit, points far below the line weighted down. */
 function envelopeOrder(points: readonly Point[]): Estimate | undefined {
+  const y = points.map((p) => p.y);
+  const columns = columnsOf(points, 3);
+  if (points.length < 5) return undefined;
   let weights = points.map(() => 1);
-  let result = fit(points, 3, weights);
-  for (let pass = 0; pass < 4 && result !== undefined; pass++) {
-    const f = leastSquares(columnsOf(points, 3), points.map((p) => p.y), weights);
+  let best: Estimate | undefined;
+  for (let pass = 0; pass < PASSES; pass++) {
+    const f = leastSquares(columns, y, weights);
     if (f === undefined) break;
-    const size = [...f.residuals].map(Math.abs).sort((a, b) => a - b)[Math.floor(points.length / 2)]!;
+    const se = Math.sqrt((f.unitVariances[2]! * f.rss) / (points.length - 3));
+    best = { value: f.coefficients[2]!, error: Math.hypot(ENVELOPE_ERRORS * se, exponentBias(points)) };
+    const size = f.residuals.map(Math.abs).sort((a, b) => a - b)[Math.floor(points.length / 2)]!;
     weights = f.residuals.map((r) => (r < -DIP * size ? (DIP * size) / -r : 1) ** 2);
-    result = fit(points, 3, weights);
   }
-  return result === undefined ? undefined : { value: result.value, error: Math.hypot(2 * result.error, exponentBias(points)) };
+  return best;
 }
 
 /** k Δ²_h y/h² at the centre k of three points h apart. */
@@ -125,7 +137,11 @@ function beyondAll(points: readonly Point[]): boolean {
 export function growthOrder(points: readonly Point[], stride: number, regular: boolean): OrderFit | undefined {
   if (points.length < 4) return undefined;
   const perStep =
-    points.length < LONG ? shortOrder(points) : regular ? (regularOrder(points) ?? shortOrder(points)) : envelopeOrder(points);
+    points.length < LONG
+      ? shortOrder(points)
+      : regular
+        ? (regularOrder(points) ?? shortOrder(points))
+        : envelopeOrder(points);
   if (perStep === undefined) return undefined;
   return {
     order: { value: perStep.value / stride, error: perStep.error / stride },

@@ -17,15 +17,15 @@ export interface LocalOrder extends Estimate {
   readonly before?: number;
 }
 
-/** Per step k. points: consecutive, non-zero, regular signs; undefined below 4 of them. */
-export function localOrder(points: readonly Point[]): LocalOrder | undefined {
+/** Per power of x. points: consecutive, non-zero, regular signs; undefined below 4 of them. */
+export function localOrder(points: readonly Point[], stride: number): LocalOrder | undefined {
   const n = points.length;
   if (n < 4) return undefined;
   const rho = points.slice(1).map((p, i) => ({ k: p.k, v: p.y - points[i]!.y }));
   const at = (i: number): number => {
     const a = rho[i]!;
     const b = rho[i - 2]!;
-    return (a.v - b.v) / Math.log(a.k / b.k);
+    return (a.v - b.v) / Math.log(a.k / b.k) / stride;
   };
   const last = rho.length - 1;
   if (rho[last - 2]!.k < 1) return undefined;
@@ -36,6 +36,6 @@ export function localOrder(points: readonly Point[]): LocalOrder | undefined {
   const k = rho[last]!.k;
   // For k/(k+γ−1) the change per step, times k, is what is still missing.
   const drift = before === undefined ? 0 : k * (value - before);
-  const error = Math.hypot(drift, EXPONENT_ALLOWANCE / k, noise);
+  const error = Math.hypot(drift, EXPONENT_ALLOWANCE / k / stride, noise / stride);
   return before === undefined ? { value, error } : { value, error, before };
 }

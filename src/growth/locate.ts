@@ -7,16 +7,15 @@
  */
 import { axisFit, SHORT_TAIL } from './axis-fit.js';
 import { scaledBorel } from './borel-coefficients.js';
-import { alternation, alternationText, evenOddText, expectedText, recurrenceText } from './competition.js';
+import { alternation, alternationText } from './alternation.js';
 import { essentialGrowth, type EssentialGrowth } from './essential.js';
-import type { FoundSingularity, GrowthInput } from './growth.js';
+import type { FoundSingularity } from './growth.js';
 import type { Prepared } from './prepare.js';
-import { ratios } from './ratio-test.js';
 import type { Point } from './reading.js';
 import { secondSingularity } from './second.js';
 import { singularityOfAxis, singularityOfPair } from './singularity.js';
-import { complexPair, realPositions, recurrence, type RecurrenceRow } from './two-root.js';
-import { place, short } from './words.js';
+import { complexPair, realPositions, recurrence } from './two-root.js';
+import { place } from './words.js';
 
 export interface Located {
   readonly nearest?: FoundSingularity;
@@ -34,12 +33,12 @@ const PAIR_POINTS = 8;
 const PAIR_MODULUS = 0.3;
 const PAIR_COSINE = 0.2;
 const OFF_AXIS = 1;
-/** Two real roots are believed when they move less than this over the last three rows. */
-const STEADY_ROOTS = 0.15;
-/** Even and odd root ratios differing by more than this are worth a line. */
-const EVEN_ODD = 0.05;
+/** Two real roots are believed when the nearer and the farther move less than this over the last three rows. */
+const STEADY_ROOTS = [0.15, 0.5] as const;
 /** A second singularity within this factor of the first counts as competition. */
 const COMPETING = 2.5;
+/** A pattern that sets in at this coefficient or later speaks of a second singularity. */
+const LATE = 2;
 /** A position on one axis known worse than this gives way to two steady real roots. */
 const LOOSE = 0.3;
 /** A pair close to the axis is looked for in regular tails of this length, when it turns by this many radians over them. */
@@ -60,11 +59,6 @@ function pairOf(points: readonly Point[], q: number): FoundSingularity | undefin
   return sure ? singularityOfPair(pair, scale, q) : undefined;
 }
 
-function lastRows(points: readonly Point[], q: number): { rows: RecurrenceRow[]; scale: number } {
-  const { beta, scale } = scaledBorel(points, q);
-  return { rows: recurrence(beta).slice(-3), scale };
-}
-
 function realOf(t: number, error: number, scale: number, q: number): FoundSingularity {
   const logAbs = (Math.log(Math.abs(t)) - scale) / q;
   const value = Math.sign(t) * Math.exp(logAbs);
@@ -78,15 +72,19 @@ function realOf(t: number, error: number, scale: number, q: number): FoundSingul
 
 /** Two steady real roots of the recurrence, nearer first; only for q = 1, where T = t. */
 function steadyRoots(points: readonly Point[], q: number): readonly [FoundSingularity, FoundSingularity] | undefined {
-  const { rows, scale } = lastRows(points, q);
+  const { beta, scale } = scaledBorel(points, q);
+  const rows = recurrence(beta).slice(-3);
   const found = rows.map(realPositions);
   if (q !== 1 || rows.length < 3 || found.some((f) => f === undefined)) return undefined;
   const last = found[2]!;
   const spread = (i: 0 | 1): number => Math.max(...found.map((f) => Math.abs(f![i] / last[i] - 1)));
-  if (spread(0) > STEADY_ROOTS || spread(1) > STEADY_ROOTS) return undefined;
+  if (spread(0) > STEADY_ROOTS[0] || spread(1) > STEADY_ROOTS[1]) return undefined;
   // A branch point shifts the roots by O(1/k) beyond what the rows show.
   const bias = 2 / rows[2]!.k;
-  return [realOf(last[0], Math.hypot(2 * spread(0), bias), scale, q), realOf(last[1], Math.hypot(2 * spread(1), 2 * bias), scale, q)];
+  return [
+    realOf(last[0], Math.hypot(2 * spread(0), bias), scale, q),
+    realOf(last[1], Math.hypot(2 * spread(1), 2 * bias), scale, q),
+  ];
 }
 
 function compete(roots: readonly [FoundSingularity, FoundSingularity]): Located {
@@ -94,7 +92,7 @@ function compete(roots: readonly [FoundSingularity, FoundSingularity]): Located 
   return { nearest: roots[0], second: roots[1], competition: [text], quasiPeriodic: false, competing: true };
 }
 
-function locateRegular(p: Prepared, input: GrowthInput, q: number): Located {
+function locateRegular(p: Prepared, q: number): Located {
   const pattern = p.pattern.kind === 'alternating' ? 'alternating' : 'same';
   const lastOutlier = Math.max(-1, ...p.outliers.map((o) => o.k));
   const clean = p.tail.filter((x) => x.k > lastOutlier);
@@ -111,17 +109,21 @@ function locateRegular(p: Prepared, input: GrowthInput, q: number): Located {
     };
     return { nearest, competition: [], essential, quasiPeriodic: false, competing: false };
   }
-  const fit = axisFit(tail, p.sequence.stride, q, p.pattern.sign, input.exact);
+  const plain = axisFit(tail, p.sequence.stride, q, p.pattern.sign, p.exact);
+  const fit = plain && { ...plain, relativeError: Math.hypot(plain.relativeError, p.drift ?? 0) };
   if (fit === undefined || fit.relativeError > UNSETTLED) {
     const pair = tail.length >= LONG_TAIL && p.noise === undefined ? pairOf(p.points, q) : undefined;
     // Signs that stay regular for much longer than the phase allows are no pair.
     const phase = (pair?.angle?.value ?? 0) * q * tail.length;
-    if (pair !== undefined && phase > MIN_PHASE) return { nearest: pair, competition: [], quasiPeriodic: true, competing: false };
+    if (pair !== undefined && phase > MIN_PHASE)
+      return { nearest: pair, competition: [], quasiPeriodic: true, competing: false };
   }
   const nearest = fit === undefined ? undefined : singularityOfAxis(fit, pattern, q);
-  if (fit === undefined || fit.relativeError > LOOSE) {
+  const mixed = p.pattern.from >= LATE || p.nonZero.length >= SHORT_TAIL;
+  if (mixed && (fit === undefined || fit.relativeError > LOOSE)) {
     const roots = p.noise === undefined ? steadyRoots(p.points, q) : undefined;
-    if (roots !== undefined && roots[0].kind === (pattern === 'same' ? 'positive axis' : 'negative axis')) return compete(roots);
+    if (roots !== undefined && roots[0].kind === (pattern === 'same' ? 'positive axis' : 'negative axis'))
+      return compete(roots);
   }
   const competition: string[] = [];
   let competing = false;
@@ -130,8 +132,10 @@ function locateRegular(p: Prepared, input: GrowthInput, q: number): Located {
     competition.push(alternationText(alternating, pattern));
     competing = true;
   }
-  if (p.pattern.from > 1) {
-    competition.push(`the signs are regular only from n = ${p.tail[0]?.n ?? 0} on: another singularity contributes at low order`);
+  if (p.pattern.from >= LATE) {
+    competition.push(
+      `the signs are regular only from n = ${p.tail[0]?.n ?? 0} on: another singularity contributes at low order`,
+    );
   }
   const signT = pattern === 'alternating' ? -1 : 1;
   const found =
@@ -164,38 +168,12 @@ function locateIrregular(p: Prepared, q: number): Located {
   if (pair !== undefined) return { nearest: pair, competition: [], quasiPeriodic: true, competing: false };
   const roots = steadyRoots(p.points, q);
   if (roots !== undefined) return compete(roots);
-  const text = 'the signs follow no pattern yet: singularities on both axes, or a complex pair, contribute at these orders';
+  const text =
+    'the signs follow no pattern yet: singularities on both axes, or a complex pair, contribute at these orders';
   return { competition: [text], quasiPeriodic: false, competing: true };
 }
 
 /** q: growth order per step of the sequence. */
-export function locate(p: Prepared, input: GrowthInput, q: number): Located {
-  return p.pattern.kind === 'irregular' ? locateIrregular(p, q) : locateRegular(p, input, q);
-}
-
-/** Short-series diagnostics that need no verdict: even–odd ratios, two poles, expected strengths. */
-export function competitionLines(p: Prepared, input: GrowthInput, long: number): string[] {
-  const lines: string[] = [];
-  const stride = p.sequence.stride;
-  if (p.nonZero.length < 4 || p.nonZero.length > long || stride !== 1) return lines;
-  const evenOdd = evenOddText(ratios(p.nonZero, stride), EVEN_ODD);
-  if (evenOdd !== undefined) lines.push(evenOdd);
-  const { rows, scale } = lastRows(p.points, 1);
-  const row = rows[rows.length - 1];
-  if (row !== undefined) {
-    const real = realPositions(row);
-    const factor = Math.exp(-scale);
-    if (real !== undefined) lines.push(recurrenceText([real[0] * factor, real[1] * factor]));
-    else {
-      const modulus = factor / Math.sqrt(row.q);
-      const degrees = (Math.acos(row.p / (2 * Math.sqrt(row.q))) * 180) / Math.PI;
-      lines.push(
-        `two poles through the last four Borel coefficients would be a complex pair at |t| = ${short(modulus)}, ` +
-          `±${short(degrees)}° (a hint, not a fit)`,
-      );
-    }
-  }
-  const expected = expectedText(p.nonZero, input.expected);
-  if (expected !== undefined) lines.push(expected);
-  return lines;
+export function locate(p: Prepared, q: number): Located {
+  return p.pattern.kind === 'irregular' ? locateIrregular(p, q) : locateRegular(p, q);
 }

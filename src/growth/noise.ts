@@ -16,10 +16,10 @@ import type { Point } from './reading.js';
 
 /** Fewest consecutive points. */
 const MIN_POINTS = 16;
-/** Level of order j against that of order j − 1 that counts as a plateau. */
-const PLATEAU = 0.6;
+/** Level of order j against that of order j − 1 (and its square against order j − 2) that counts as a plateau. */
+const PLATEAU = 0.5;
 /** Largest ratio of the levels of the two halves. */
-const STATIONARY = 4;
+const STATIONARY = 6;
 /** A level must exceed the rounding of the logarithms by this factor. */
 const ABOVE_ROUNDING = 30;
 const HIGHEST = 6;
@@ -44,27 +44,33 @@ function detrended(points: readonly Point[]): number[] {
   return [...(leastSquares(columns, y)?.residuals ?? y)];
 }
 
-/** Relative scatter of consecutive points with regular signs; undefined when none is seen (or too few points). */
-export function scatter(points: readonly Point[]): number | undefined {
+export interface Roughness {
+  /** Upper bound of the independent relative scatter. */
+  readonly level: number;
+  /** The level is that of independent noise, not of a law that the differences have not yet removed. */
+  readonly noise: boolean;
+}
+
+/** Of consecutive points with regular signs; undefined with too few of them. */
+export function roughness(points: readonly Point[]): Roughness | undefined {
   if (points.length < MIN_POINTS) return undefined;
   let d = detrended(points);
   let binomial = 1;
   const top = Math.min(HIGHEST, Math.floor((points.length - 6) / 2));
-  let previous = Infinity;
-  let level = Infinity;
+  const levels = [Infinity, Infinity];
   for (let j = 1; j <= top; j++) {
     d = d.slice(2).map((v, i) => v - d[i]!);
-    binomial *= ((2 * j) * (2 * j - 1)) / (j * j);
-    previous = level;
-    level = robustDeviation(d) / Math.sqrt(binomial);
+    binomial *= (2 * j * (2 * j - 1)) / (j * j);
+    levels.push(robustDeviation(d) / Math.sqrt(binomial));
   }
+  const level = levels.at(-1)!;
   const half = Math.floor(d.length / 2);
   const early = robustDeviation(d.slice(0, half));
   const late = robustDeviation(d.slice(half));
-  const rounding = Math.max(...points.map((p) => Math.abs(p.y))) * 2 ** -53;
-  if (!(level > ABOVE_ROUNDING * Math.max(rounding, 2 ** -52)) || level < PLATEAU * previous) return undefined;
-  if (early > STATIONARY * late || late > STATIONARY * early) return undefined;
-  return level;
+  const rounding = Math.max(2 ** -52, ...points.map((p) => Math.abs(p.y) * 2 ** -53));
+  const plateau = level >= PLATEAU * levels.at(-2)! && level >= PLATEAU ** 2 * levels.at(-3)!;
+  const stationary = early <= STATIONARY * late && late <= STATIONARY * early;
+  return { level, noise: level > ABOVE_ROUNDING * rounding && plateau && stationary };
 }
 
 /** How much a rational approximant from n coefficients amplifies their relative errors: (1+√2)^(2n) for a cut on a half-line. */

@@ -19,8 +19,11 @@ const CONTRAST = 20;
 const MISMATCH = 0.1;
 /** Power of the index by which differences of a true series are taken to fall. */
 const ROUGHNESS = 2;
-/** Coefficients at either end that are never called outliers. */
-const EDGE = 2;
+/** Differences elsewhere from which on a second misprint is allowed for. */
+const LONG = 12;
+/** Coefficients at the start and at the end that are never called outliers. */
+const START = 3;
+const END = 2;
 /** Below this index a coefficient may be small by a natural cancellation: only an error this much clearer is named. */
 const EARLY = { k: 5, contrast: 200 };
 /** Most outliers looked for, as a part of the points. */
@@ -59,7 +62,7 @@ function sizeOutlier(points: readonly Point[]): Outlier | undefined {
   const w = template(j);
   let best: { i: number; amplitude: number } | undefined;
   f.forEach((v, i) => {
-    if (v === undefined || i < EDGE || i >= points.length - EDGE) return;
+    if (v === undefined || i < START || i >= points.length - END) return;
     if (best === undefined || Math.abs(v) > Math.abs(best.amplitude)) best = { i, amplitude: v };
   });
   if (best === undefined) return undefined;
@@ -74,7 +77,9 @@ function sizeOutlier(points: readonly Point[]): Outlier | undefined {
     v !== undefined && Math.abs(l - i) > j ? [Math.abs(v) * (points[l]!.k / points[i]!.k) ** ROUGHNESS] : [],
   );
   if (elsewhere.length < 3) return undefined;
-  const background = Math.max(...elsewhere);
+  elsewhere.sort((a, b) => b - a);
+  // In a long series a second misprint may stand elsewhere; its pattern has 2j + 1 members.
+  const background = elsewhere[elsewhere.length >= LONG ? 2 * j + 1 : 0]!;
   const contrast = points[i]!.k < EARLY.k ? EARLY.contrast : CONTRAST;
   if (Math.abs(amplitude) < contrast * background || mismatch > MISMATCH * Math.abs(amplitude)) return undefined;
   if (Math.abs(amplitude) < CONTRAST * points[i]!.sigma) return undefined;
@@ -105,7 +110,7 @@ export function findOutliers(points: readonly Point[], pattern: SignPattern): Se
   if (points.length < MIN_POINTS || !consecutive(points)) return { points, outliers };
   const allowed = Math.max(1, Math.floor(points.length * SHARE));
   let current = points;
-  const inner = pattern.breaks.filter((i) => i >= EDGE && i < points.length - EDGE);
+  const inner = pattern.breaks.filter((i) => i >= START && i < points.length - END);
   const isolated = inner.every((i) => !pattern.breaks.includes(i - 1) && !pattern.breaks.includes(i + 1));
   if (inner.length > 0 && inner.length === pattern.breaks.length && inner.length <= allowed && isolated) {
     const z = points.map((p) => p.y - logGamma(p.k + 1));

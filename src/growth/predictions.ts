@@ -8,22 +8,23 @@
  * Bound      the miss itself is the result.
  * Reference  M. A. Samuel, J. Ellis and M. Karliner, Phys. Rev. Lett. 74 (1995) 4380 (Padé prediction of coefficients).
  */
+import { PadeDouble } from '../numerics/index.js';
 import type { Prediction } from './growth.js';
 import { leastSquares } from './least-squares.js';
 import { logGamma } from './log-gamma.js';
 import type { Point } from './reading.js';
-import { smallPade } from './small-pade.js';
 
 /** Coefficients that the lines are fitted to, at most. */
 const WINDOW = 8;
 /** Coefficients that the Padé approximant is built from, at most. */
 const PADE_WINDOW = 9;
+/** An approximant with a smaller pivot than this, relative, sits in or near a block: a smaller one is taken. */
+const SINGULAR = 1e-11;
 /** Coefficients that must remain. */
 const MIN_LEFT = 3;
 
-function linePrediction(left: readonly Point[], target: Point, q: number, factorial: boolean): number | undefined {
+function linePrediction(left: readonly Point[], target: Point, part: (p: Point) => number): number | undefined {
   const used = left.slice(-WINDOW);
-  const part = (p: Point): number => (factorial ? logGamma(q * p.k + 1) : 0);
   const fit = leastSquares(
     [used.map(() => 1), used.map((p) => p.k)],
     used.map((p) => p.y - part(p)),
@@ -42,7 +43,11 @@ function scaledBorel(points: readonly Point[], q: number): number[] {
 }
 
 /** Predicted over known coefficient from the largest near-diagonal entry that exists. `hidden` points end the list. */
-function padePrediction(points: readonly Point[], hidden: number, q: number): { ratio: number; label: string } | undefined {
+function padePrediction(
+  points: readonly Point[],
+  hidden: number,
+  q: number,
+): { ratio: number; label: string } | undefined {
   const longest = Math.min(PADE_WINDOW, points.length - hidden);
   for (let length = longest; length >= MIN_LEFT; length--) {
     const used = points.slice(points.length - hidden - length);
@@ -50,18 +55,25 @@ function padePrediction(points: readonly Point[], hidden: number, q: number): { 
     const known = scaledBorel(used, q);
     const b = known.slice(0, length);
     const m = Math.floor((length - 1) / 2);
-    const pade = smallPade(b, length - 1 - m, m);
-    if (pade === undefined) continue;
+    const pade = new PadeDouble(length - 1 - m, m);
+    if (!pade.fit(b) || pade.pivotRatio < SINGULAR) continue;
     for (let n = length; n < used.length; n++) {
-      b.push(-pade.denominator.slice(1).reduce((s, v, j) => s + v * b[n - 1 - j]!, 0));
+      let next = 0;
+      for (let j = 1; j <= m; j++) next -= pade.denominator[j]! * b[n - j]!;
+      b.push(next);
     }
     return { ratio: b[used.length - 1]! / known[used.length - 1]!, label: `Borel–Padé [${length - 1 - m}/${m}]` };
   }
   return undefined;
 }
 
-/** Misses for the last coefficient with one and with two hidden. q: growth order per step of the factorial model. */
-export function predictions(points: readonly Point[], q: number, sign: 'same' | 'alternating' | undefined): Prediction[] {
+/** Misses for the last coefficient with one and with two hidden. The factorial model is Γ(qk + 1 + shift). */
+export function predictions(
+  points: readonly Point[],
+  q: number,
+  sign: 'same' | 'alternating' | undefined,
+  shift: number,
+): Prediction[] {
   const target = points[points.length - 1];
   if (target === undefined) return [];
   const out: Prediction[] = [];
@@ -77,7 +89,7 @@ export function predictions(points: readonly Point[], q: number, sign: 'same' | 
       }
     };
     for (const factorial of [true, false]) {
-      const log = linePrediction(left, target, q, factorial);
+      const log = linePrediction(left, target, (p) => (factorial ? logGamma(q * p.k + 1 + shift) : 0));
       push(
         factorial ? 'factorial fit' : 'geometric fit',
         log === undefined ? undefined : Math.exp(log) * expectedSign * target.sign,

@@ -1,22 +1,23 @@
 /**
  * @module Everything measured before the verdict: pattern, outliers, noise, growth order, model comparison.
  */
+import type { Exact } from '../numerics/index.js';
+import { errorModel } from './errors.js';
 import { compareModels } from './evidence.js';
 import { growthOrder, type OrderFit } from './growth-order.js';
 import type { GrowthInput, GrowthModelComparison } from './growth.js';
 import { localOrder, type LocalOrder } from './local-order.js';
-import { scatter } from './noise.js';
 import { findOutliers, type Outlier } from './outliers.js';
 import { nonZero, type Point, type Sequence } from './reading.js';
 import { signPattern, type SignPattern } from './sign-pattern.js';
 
 /** Error of the order beyond which the tail of a late pattern is not trusted alone. */
 const WAVY = 0.2;
-/** A scatter seen in the coefficients counts beside a quoted error when it is larger than this many times the error. */
-const UNQUOTED = 3;
 
 export interface Prepared {
   readonly sequence: Sequence;
+  /** The coefficients themselves, from the first non-zero one on. */
+  readonly exact?: readonly Exact[];
   /** Computed coefficients after repair of outliers, with the errors that apply; zeros included. */
   readonly points: readonly Point[];
   /** The non-zero ones. */
@@ -27,6 +28,8 @@ export interface Prepared {
   readonly outliers: readonly Outlier[];
   /** Scatter seen in the coefficients beyond their quoted errors. */
   readonly noise?: number;
+  /** Relative error of T per step from errors common to neighbouring coefficients. */
+  readonly drift?: number;
   /** Estimated coefficients, left out of everything above. */
   readonly estimated: readonly Point[];
   readonly order?: OrderFit;
@@ -57,7 +60,12 @@ export function modelShift(expected: GrowthInput['expected'], pattern: SignPatte
 }
 
 /** A tail too short or too wavy for a good order falls back on the envelope of all coefficients, if that is known better. */
-function orderOf(all: readonly Point[], tail: readonly Point[], stride: number, regular: boolean): OrderFit | undefined {
+function orderOf(
+  all: readonly Point[],
+  tail: readonly Point[],
+  stride: number,
+  regular: boolean,
+): OrderFit | undefined {
   const envelope = (): OrderFit | undefined => growthOrder(all, stride, false);
   const fit = regular ? growthOrder(tail, stride, true) : envelope();
   if (!regular || tail.length === all.length || fit === undefined || fit.beyond || fit.order.error < WAVY) return fit;
@@ -73,27 +81,26 @@ export function prepare(sequence: Sequence, input: GrowthInput): Prepared {
   const pattern = signPattern(repaired.points);
   const regular = pattern.kind !== 'irregular';
   const tail0 = regularTail(repaired.points, pattern);
-  const seen = regular ? scatter(tail0) : undefined;
-  const quoted = tail0.map((p) => p.quoted).sort((a, b) => a - b)[Math.floor(tail0.length / 2)] ?? 0;
-  const noise = seen !== undefined && seen > UNQUOTED * quoted ? seen : undefined;
-  const withNoise = (p: Point): Point =>
-    noise === undefined ? p : { ...p, sigma: Math.hypot(p.sigma, noise), quoted: Math.hypot(p.quoted, noise) };
-  const used = repaired.points.map(withNoise);
+  const errors = errorModel(tail0, regular);
+  const used = repaired.points.map(errors.apply);
   const byK = new Map(used.map((p) => [p.k, p]));
-  const tail = tail0.map(withNoise);
+  const tail = tail0.map(errors.apply);
   const order = orderOf(used, tail, sequence.stride, regular);
-  const local = regular ? localOrder(tail) : undefined;
+  const local = regular ? localOrder(tail, sequence.stride) : undefined;
   const shift = modelShift(input.expected, pattern);
   const comparison = compareModels(used, sequence.stride, shift);
-  const comparisonAll = estimated.length === 0 ? comparison : compareModels([...used, ...estimated], sequence.stride, shift);
+  const comparisonAll =
+    estimated.length === 0 ? comparison : compareModels([...used, ...estimated], sequence.stride, shift);
   return {
     sequence,
+    ...(input.exact === undefined ? {} : { exact: input.exact.slice(sequence.cut) }),
     points: computed.map((p) => byK.get(p.k) ?? p),
     nonZero: used,
     pattern,
     tail,
     outliers: repaired.outliers,
-    ...(noise === undefined ? {} : { noise }),
+    ...(errors.noise === undefined ? {} : { noise: errors.noise }),
+    ...(errors.drift === undefined ? {} : { drift: errors.drift }),
     estimated,
     ...(order === undefined ? {} : { order }),
     ...(local === undefined ? {} : { local }),

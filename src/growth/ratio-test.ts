@@ -40,9 +40,19 @@ export function linearSigma(k: number, d: number, dPrevious: number, s: readonly
   return Math.hypot(a * s[0], (a + b) * s[1], b * s[2]);
 }
 
+export interface ScaledRows {
+  /** Rows with e^{scale·stride} taken out: of moderate size for any coefficients. */
+  readonly rows: readonly RatioRow[];
+  readonly scale: number;
+}
+
 /** One row for every coefficient with a known predecessor. n counts powers of x; order q = stride (factorial growth). */
-export function ratioRows(points: readonly Point[], stride: number): RatioRow[] {
-  const d = ratios(points, stride);
+export function scaledRows(points: readonly Point[], stride: number): ScaledRows {
+  const last = points.at(-1);
+  const before = points.at(-2);
+  if (last === undefined || before === undefined) return { rows: [], scale: 0 };
+  const scale = (last.y - before.y) / (last.k - before.k) - Math.log(fallingStep(last.k, stride));
+  const d = ratios(points, stride, scale);
   const byK = new Map(points.map((p) => [p.k, p]));
   const rows: RatioRow[] = [];
   let previous: { k: number; linear: number } | undefined;
@@ -58,8 +68,22 @@ export function ratioRows(points: readonly Point[], stride: number): RatioRow[] 
     const linear = k * dk - (k - 1) * dp;
     const s = linearSigma(k, dk, dp, [byK.get(k)!.quoted, byK.get(k - 1)!.quoted, byK.get(k - 2)!.quoted]);
     const method = previous?.k === k - 1 ? Math.abs(linear - previous.linear) / 2 : undefined;
-    rows.push(method === undefined && s === 0 ? { ...row, linear } : { ...row, linear, linearError: Math.hypot(s, method ?? 0) });
+    const known = method !== undefined || s > 0;
+    rows.push(known ? { ...row, linear, linearError: Math.hypot(s, method ?? 0) } : { ...row, linear });
     previous = { k, linear };
   }
-  return rows;
+  return { rows, scale };
+}
+
+/** The rows in the units of the series; beyond the range of doubles the ratio is ±Infinity or 0 and stands alone. */
+export function ratioRows(points: readonly Point[], stride: number): RatioRow[] {
+  const { rows, scale } = scaledRows(points, stride);
+  const factor = Math.exp(scale);
+  if (!(factor > 0 && factor < Infinity)) return rows.map((r) => ({ n: r.n, ratio: r.ratio * factor }));
+  return rows.map((r) => ({
+    n: r.n,
+    ratio: r.ratio * factor,
+    ...(r.linear === undefined ? {} : { linear: r.linear * factor }),
+    ...(r.linearError === undefined ? {} : { linearError: r.linearError * factor }),
+  }));
 }

@@ -42,6 +42,8 @@ export interface Sequence {
   readonly unknown: number;
   /** Zeros cut off in front of the first non-zero coefficient. */
   readonly leadingZeros: number;
+  /** Terms of the input in front of it. */
+  readonly cut: number;
 }
 
 export type Reading =
@@ -86,12 +88,12 @@ export function readTerms(input: GrowthInput): Reading {
   let end = terms.length - 1;
   while (isExactZero(terms[end]!)) end--;
   const zeros = terms.length - 1 - end;
-  const sequence = toSequence(terms, end, first + (input.leadingZeros ?? 0));
+  const sequence = toSequence(terms, end, first, input.leadingZeros ?? 0);
   if (terminates(zeros, longestGap(terms, end))) return { kind: 'terminating', degree: end, zeros, sequence };
   return { kind: 'series', sequence };
 }
 
-function toSequence(terms: readonly GrowthTerm[], end: number, leadingZeros: number): Sequence {
+function toSequence(terms: readonly GrowthTerm[], end: number, cut: number, cutBefore: number): Sequence {
   let step = 0;
   let nonZero = 0;
   for (let n = 0; n <= end; n++) {
@@ -123,7 +125,7 @@ function toSequence(terms: readonly GrowthTerm[], end: number, leadingZeros: num
       estimated: t.estimated,
     });
   }
-  const base = { stride, points, unknown, leadingZeros };
+  const base = { stride, points, unknown, cut, leadingZeros: cut + cutBefore };
   return unknownFrom === undefined ? base : { ...base, unknownFrom };
 }
 

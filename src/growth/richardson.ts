@@ -6,12 +6,12 @@
  *            Σ_k (−1)^{k+m} (n−m+k)^m s_{n−m+k}/(k!(m−k)!). The order is raised only while |T_m − T_{m−1}| falls
  *            (PATIENCE rises in a row are passed over): an oscillating admixture or noise makes it grow again.
  * Bound      none is proved. The error is that last difference, continued as a geometric tail where it falls slowly, or the
- *            step |T_m(n) − T_m(n−1)| if larger, in quadrature with the propagated errors of the coefficients; the caller
- *            inflates it by a stated factor.
+ *            step |T_m(n) − T_m(n−1)| if larger, and the propagated errors of the coefficients beside it (measured.ts).
  * Reference  L. F. Richardson and J. A. Gaunt, Phil. Trans. R. Soc. A 226 (1927) 299; C. M. Bender and S. A. Orszag,
  *            "Advanced Mathematical Methods for Scientists and Engineers", 1978, section 8.1.
  */
 import { R, type Ball } from '../numerics/index.js';
+import { statedError, type Measured } from './measured.js';
 
 /** What the table needs of its numbers; run on doubles for noisy input, on enclosures for exact input. */
 export interface Arithmetic<T> {
@@ -43,11 +43,8 @@ export function ballArithmetic(prec: number): Arithmetic<Ball> {
 
 export interface Extrapolated<T> {
   readonly top: T;
-  readonly value: number;
-  /** Last difference (and step) of the table, not inflated. */
-  readonly error: number;
-  /** Propagated input error, included in `error`. */
-  readonly noise: number;
+  /** value; method: last difference (and step) of the table; noise: propagated input error. */
+  readonly limit: Measured;
   readonly order: number;
 }
 
@@ -103,13 +100,11 @@ export function extrapolate<T>(
     const propagated = noise(m) + arithmetic.radius(top);
     // Differences falling by a factor r each leave a tail of r/(1 − r) of the last one.
     const r = difference / previous;
-    const tail = r < SLOW ? Math.max(1, r / (1 - r)) : SLOW / (1 - SLOW);
-    const error = Math.hypot(Math.max(difference * (m === 1 ? 1 : tail), step), propagated);
+    const tail = m === 1 ? 1 : r < SLOW ? Math.max(1, r / (1 - r)) : SLOW / (1 - SLOW);
+    const limit = { value: arithmetic.toNumber(top), method: Math.max(difference * tail, step), noise: propagated };
     previous = difference;
-    if (!(error < Infinity)) break;
-    if (best === undefined || error < best.error) {
-      best = { top, value: arithmetic.toNumber(top), error, noise: propagated, order: m };
-    }
+    if (!(statedError(limit) < Infinity)) break;
+    if (best === undefined || statedError(limit) < statedError(best.limit)) best = { top, limit, order: m };
     rises = difference < smallest ? 0 : rises + 1;
     if (rises > PATIENCE) break;
     smallest = Math.min(smallest, difference);

@@ -54,7 +54,12 @@ function candidate(a: readonly number[], k0: number, m: number, rounding: number
 }
 
 /** points: consecutive ones from the first k on; logT and sign of T per step; q growth order per step. */
-export function secondSingularity(points: readonly Point[], q: number, logT: number, signT: number): Second | undefined {
+export function secondSingularity(
+  points: readonly Point[],
+  q: number,
+  logT: number,
+  signT: number,
+): Second | undefined {
   if (points.length < 12) return undefined;
   const used = points.slice(0, 60);
   const base = used[Math.floor(used.length / 2)]!;

@@ -38,7 +38,8 @@ function tryPattern(points: readonly Point[], alternating: boolean): Omit<SignPa
 export function signPattern(points: readonly Point[]): SignPattern {
   const same = tryPattern(points, false);
   const alternating = tryPattern(points, true);
-  const better = same.breaks.length <= alternating.breaks.length ? same : alternating;
+  const fewer = same.breaks.length - alternating.breaks.length || same.from - alternating.from;
+  const better = fewer <= 0 ? same : alternating;
   const kind = better === same ? 'same' : 'alternating';
   const run = points.length - better.from;
   const regular = run >= REGULAR_RUN && run >= REGULAR_SHARE * points.length;

@@ -36,13 +36,18 @@ type Kind = FoundSingularity['kind'];
 
 /** Where the roots of T lie, as seen from the positive axis. */
 function placeOf(pattern: 'same' | 'alternating', q: number): { kind: Kind; angle: number } {
-  if (pattern === 'same') return { kind: q === 1 ? 'positive axis' : q % 2 === 0 ? 'both axes' : 'positive axis', angle: 0 };
+  if (pattern === 'same')
+    return { kind: q === 1 ? 'positive axis' : q % 2 === 0 ? 'both axes' : 'positive axis', angle: 0 };
   if (q === 1) return { kind: 'negative axis', angle: Math.PI };
   return { kind: 'complex pair', angle: Math.PI / q };
 }
 
 /** Undefined when the error leaves the position open. */
-export function singularityOfAxis(fit: AxisFit, pattern: 'same' | 'alternating', q: number): FoundSingularity | undefined {
+export function singularityOfAxis(
+  fit: AxisFit,
+  pattern: 'same' | 'alternating',
+  q: number,
+): FoundSingularity | undefined {
   if (fit.relativeError > MAX_RELATIVE) return undefined;
   const { kind, angle } = placeOf(pattern, q);
   const logAbs = fit.logT / q;

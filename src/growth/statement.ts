@@ -1,5 +1,5 @@
 /** @module The verdict as one sentence for people. */
-import type { Classified } from './classify.js';
+import { MIDDLE, type Classified } from './verdict-rule.js';
 import type { Estimate } from './growth.js';
 import type { Located } from './locate.js';
 import type { Prepared } from './prepare.js';
@@ -11,7 +11,8 @@ const SQUARE_EXPONENT = { value: 1.5, within: 0.1 };
 function evidenceOf(p: Prepared): string {
   const k = p.comparison?.bayesFactor;
   const n = p.nonZero.length;
-  const factor = k === undefined ? '' : ` (Bayes factor ${k > 1e6 ? 'above 1000000' : short(k)} against geometric growth)`;
+  const factor =
+    k === undefined ? '' : ` (Bayes factor ${k > 1e6 ? 'above 1000000' : short(k)} against geometric growth)`;
   return `${plural(n, 'coefficient')}${factor}`;
 }
 
@@ -30,16 +31,29 @@ function factorialText(p: Prepared, located: Located | undefined): string {
   if (located?.nearest === undefined) {
     return `${head}; the position of the nearest singularity is not resolved because ${located?.competition[0] ?? 'the ratios do not settle'}`;
   }
-  const so = located.competing && located.nearest.standing === 'indicative' ? 'so far the terms point to' : 'the nearest Borel singularity is at';
+  const so =
+    located.competing && located.nearest.standing === 'indicative'
+      ? 'so far the terms point to'
+      : 'the nearest Borel singularity is at';
   return `${head}; ${so} ${place(located.nearest)}${exponentText(located)}`;
 }
 
 function superText(p: Prepared, c: Classified, located: Located | undefined, order: number | undefined): string {
-  if (c.beyond) return `growth faster than any (kn)! in ${plural(p.nonZero.length, 'coefficient')}: no Borel method of finite order applies`;
+  if (c.beyond)
+    return `growth faster than any (kn)! in ${plural(p.nonZero.length, 'coefficient')}: no Borel method of finite order applies`;
   const gamma = located?.nearest?.exponent;
   const square =
-    gamma !== undefined && gamma.error < SQUARE_EXPONENT.within && Math.abs(gamma.value - SQUARE_EXPONENT.value) < SQUARE_EXPONENT.within;
-  const name = order === 2 ? (square ? '(n!)^2' : '(2n)!') : order !== undefined && Number.isInteger(order) ? `(${order}n)!` : `(n!)^${short(order ?? 2)}`;
+    gamma !== undefined &&
+    gamma.error < SQUARE_EXPONENT.within &&
+    Math.abs(gamma.value - SQUARE_EXPONENT.value) < SQUARE_EXPONENT.within;
+  const name =
+    order === 2
+      ? square
+        ? '(n!)^2'
+        : '(2n)!'
+      : order !== undefined && Number.isInteger(order)
+        ? `(${order}n)!`
+        : `(n!)^${short(order ?? 2)}`;
   const where =
     located?.nearest === undefined
       ? ''
@@ -65,7 +79,7 @@ export function statementOf(
       return `divergent but slower than n!: |c_n| grows like (n!)^${short(order ?? c.order?.value ?? 0.5)}, and the Borel transform is entire`;
     case 'geometric':
       return (
-        `geometric growth: the series converges` +
+        `geometric growth${p.nonZero.length <= MIDDLE ? ' so far' : ''}: the series converges` +
         (radius === undefined ? '' : ` for |x| < ${plusMinus(radius)}`) +
         `, and there is no factorial growth to resum`
       );

@@ -99,8 +99,14 @@ export function complexPair(rows: readonly RecurrenceRow[]): PairFit | undefined
     return m !== undefined && Math.abs(m.cos) < 1 ? [{ k: r.k, b: m.b, cos: m.cos, w: r.weight ** 2 }] : [];
   });
   if (good.length < MIN_ROWS || good.length < AGREE * late.length) return undefined;
-  const b = intercept(good.map((r) => ({ k: r.k, v: r.b, w: r.w })), [1, 2]);
-  const c = intercept(good.map((r) => ({ k: r.k, v: r.cos, w: r.w })), [2, 3]);
+  const b = intercept(
+    good.map((r) => ({ k: r.k, v: r.b, w: r.w })),
+    [1, 2],
+  );
+  const c = intercept(
+    good.map((r) => ({ k: r.k, v: r.cos, w: r.w })),
+    [2, 3],
+  );
   if (b === undefined || c === undefined || !(b.value.value > 0)) return undefined;
   const inverse = b.value.value;
   const modulus = { value: 1 / inverse, error: b.value.error / inverse ** 2 };

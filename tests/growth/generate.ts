@@ -122,7 +122,16 @@ function pair(d: Dice): Case {
   const size = power(modulus, gamma, count);
   const b = size.map((v, n) => v * Math.cos(n * angle + phase));
   const text = `R=${modulus.toFixed(3)} angle=${angle.toFixed(3)} γ=${gamma.toFixed(2)} N=${count}`;
-  return { family: 'pair', text, input: input(fromBorel(b)), verdicts: ['factorial'], order: 1, t: modulus, angle, flag: 'complex-pair' };
+  return {
+    family: 'pair',
+    text,
+    input: input(fromBorel(b)),
+    verdicts: ['factorial'],
+    order: 1,
+    t: modulus,
+    angle,
+    flag: 'complex-pair',
+  };
 }
 
 /** Every p-th coefficient only. */
@@ -136,10 +145,18 @@ function lacunary(d: Dice): Case {
   for (let k = 0; k < count; k++) {
     const n = k * stride;
     terms.push(term(lnGamma(n + gamma) - n * Math.log(modulus), alternating && k % 2 === 1 ? -1 : 1));
-    for (let j = 1; j < stride && k + 1 < count; j++) terms.push(zero());
+    if (k + 1 < count) terms.push(...Array.from({ length: stride - 1 }, zero));
   }
   const text = `stride ${stride} ${alternating ? 'alternating' : 'same'} R=${modulus.toFixed(3)} γ=${gamma.toFixed(2)} K=${count}`;
-  return { family: 'lacunary', text, input: input(terms), verdicts: ['factorial'], order: 1, t: modulus, flag: 'lacunary' };
+  return {
+    family: 'lacunary',
+    text,
+    input: input(terms),
+    verdicts: ['factorial'],
+    order: 1,
+    t: modulus,
+    flag: 'lacunary',
+  };
 }
 
 /** Γ(s n + γ) A^n for s away from 1. */
@@ -171,8 +188,8 @@ function geometric(d: Dice): Case {
       : kind === 1
         ? add([1, power(r, p, count)], [d.normal(), power(-2 * r, 1, count)])
         : kind === 2
-          ? power(r, 1, count).map((v, n) => v / (n + 1) ** d.whole(1, 1))
-          : power(radius, 1, count).map((v, n) => v * Math.cos(n * d.between(1.1, 1.1) + 0.3));
+          ? power(r, 1, count).map((v, n) => v / (n + 1))
+          : power(radius, 1, count).map((v, n) => v * Math.cos(1.1 * n + 0.3));
   const terms = b.map((v) => term(Math.log(Math.abs(v)), v));
   const text = `kind ${kind} R=${radius.toFixed(3)} p=${p.toFixed(2)} N=${count}`;
   return { family: 'geometric', text, input: input(terms), verdicts: ['geometric'], order: 0, flag: 'geometric' };
@@ -201,10 +218,17 @@ function logNormal(d: Dice): Case {
   const q = d.between(1.3, 4);
   const alternating = d.next() < 0.5;
   const terms = Array.from({ length: count }, (_, n) =>
-    term(((n * (n - 1)) / 2) * Math.log(q) + d.between(0.3, 0.3) * n, alternating && n % 2 === 1 ? -1 : 1),
+    term(((n * (n - 1)) / 2) * Math.log(q) + 0.3 * n, alternating && n % 2 === 1 ? -1 : 1),
   );
   const text = `${q.toFixed(2)}^(n(n-1)/2) N=${count}`;
-  return { family: 'log-normal', text, input: input(terms), verdicts: ['superfactorial'], order: Infinity, flag: 'faster-than-any-factorial' };
+  return {
+    family: 'log-normal',
+    text,
+    input: input(terms),
+    verdicts: ['superfactorial'],
+    order: Infinity,
+    flag: 'faster-than-any-factorial',
+  };
 }
 
 /** A factorial series with independent relative noise that nobody quotes. */
@@ -237,7 +261,13 @@ function terminating(d: Dice): Case {
   const terms = Array.from({ length: degree + 1 }, () => term(d.between(-2, 4), d.sign()));
   const zeros = d.whole(3, 20);
   for (let i = 0; i < zeros; i++) terms.push(zero());
-  return { family: 'terminating', text: `degree ${degree}, ${zeros} zeros`, input: input(terms), verdicts: ['terminating'], flag: 'terminating' };
+  return {
+    family: 'terminating',
+    text: `degree ${degree}, ${zeros} zeros`,
+    input: input(terms),
+    verdicts: ['terminating'],
+    flag: 'terminating',
+  };
 }
 
 /** exp(a t/(1 − t/t*)): b_n from b' = a (1 − t/t*)^(−2) b. */
@@ -252,8 +282,20 @@ function essential(d: Dice): Case {
     for (let j = 0; j < n; j++) s += (n - j) * b[j]!;
     b.push((a * s) / n);
   }
-  const terms = fromBorel(b).map((x, n) => ({ ...x, logAbs: x.logAbs - n * Math.log(Math.abs(t)), sign: t < 0 && n % 2 === 1 ? (-x.sign as -1 | 0 | 1) : x.sign }));
-  return { family: 'essential', text: `a=${a.toFixed(2)} t=${t.toFixed(2)} N=${count}`, input: input(terms), verdicts: ['factorial'], order: 1, t, flag: 'essential-singularity' };
+  const terms = fromBorel(b).map((x, n) => ({
+    ...x,
+    logAbs: x.logAbs - n * Math.log(Math.abs(t)),
+    sign: t < 0 && n % 2 === 1 ? (-x.sign as -1 | 0 | 1) : x.sign,
+  }));
+  return {
+    family: 'essential',
+    text: `a=${a.toFixed(2)} t=${t.toFixed(2)} N=${count}`,
+    input: input(terms),
+    verdicts: ['factorial'],
+    order: 1,
+    t,
+    flag: 'essential-singularity',
+  };
 }
 
 /** Decimal coefficients cut to a few digits. */
@@ -267,15 +309,32 @@ function rounded(d: Dice): Case {
     const mantissa = Number(Math.exp(x.logAbs - decade * Math.LN10).toPrecision(digits));
     return { ...x, logAbs: Math.log(mantissa) + decade * Math.LN10 };
   });
-  return { family: 'rounded', text: `${digits} digits t=${t.toFixed(3)} γ=${gamma.toFixed(2)} N=${count}`, input: input(terms), verdicts: ['factorial'], order: 1, t, flag: 'noisy' };
+  return {
+    family: 'rounded',
+    text: `${digits} digits t=${t.toFixed(3)} γ=${gamma.toFixed(2)} N=${count}`,
+    input: input(terms),
+    verdicts: ['factorial'],
+    order: 1,
+    t,
+    flag: 'noisy',
+  };
 }
 
 /** Errors larger than the values from some order on. */
 function unknown(d: Dice): Case {
   const count = d.whole(8, 14);
   const from = d.whole(2, 5);
-  const terms = fromBorel(power(d.sign() * d.between(0.5, 2), 1, count)).map((x, n) => ({ ...x, relativeError: n < from ? 0.05 * n : 1.5 }));
-  return { family: 'unknown', text: `known ${from} of ${count}`, input: input(terms), verdicts: ['undecided'], flag: 'errors-exceed-values' };
+  const terms = fromBorel(power(d.sign() * d.between(0.5, 2), 1, count)).map((x, n) => ({
+    ...x,
+    relativeError: n < from ? 0.05 * n : 1.5,
+  }));
+  return {
+    family: 'unknown',
+    text: `known ${from} of ${count}`,
+    input: input(terms),
+    verdicts: ['undecided'],
+    flag: 'errors-exceed-values',
+  };
 }
 
 export const families: Readonly<Record<string, (d: Dice) => Case>> = {
