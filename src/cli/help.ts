@@ -57,7 +57,7 @@ function usage(command: Command): string {
 /** leastterm COMMAND --help. */
 export function commandHelp(command: Command): string {
   const parts = [
-    `leastterm ${command.name}: ${command.summary}`,
+    fold(`leastterm ${command.name}: ${command.summary}`, WIDTH).join('\n'),
     `Examples\n${examples(command.examples)}`,
     `Usage\n  ${usage(command)}`,
     ...command.about.map((paragraph) => fold(paragraph, WIDTH).join('\n')),

@@ -10,20 +10,20 @@ export const USUAL_DIGITS = 15;
 
 /** Loads the series that the first operand names: a catalogue id, a file, or - for standard input. */
 export async function readSeries(name: string, { given, surroundings }: Call): Promise<Series> {
-  const { loadSeries } = await import('../series/index.js');
+  const { series } = await import('./rooms.js');
   if (name === '-' && surroundings.stdinIsTerminal && !given.quiet) {
     surroundings.stderr.write('leastterm: reading the series from the terminal; Ctrl-D ends it\n');
   }
   const flavours = given.flavours === undefined ? {} : { flavours: given.flavours };
   const stdin = surroundings.stdin === undefined ? {} : { stdin: surroundings.stdin };
-  return loadSeries(name, { ...flavours, ...stdin });
+  return series.loadSeries(name, { ...flavours, ...stdin });
 }
 
 /** The value of --at. */
 export async function readCoupling(at: string, command: string): Promise<Uncertain> {
-  const { isNumberProblem, parseUncertain } = await import('../series/index.js');
-  const value = parseUncertain(at);
-  if (isNumberProblem(value)) throw new UsageError(`--at: ${value.problem}; wanted ${value.wanted}`, command);
+  const { series } = await import('./rooms.js');
+  const value = series.parseUncertain(at);
+  if (series.isNumberProblem(value)) throw new UsageError(`--at: ${value.problem}; wanted ${value.wanted}`, command);
   return value;
 }
 

@@ -65,9 +65,9 @@ function rawParse(words: readonly string[], command: string): Map<string, unknow
 }
 
 async function unknownOption(key: string, command: Command): Promise<UsageError> {
-  const { nearest } = await import('../series/index.js');
+  const { series } = await import('./rooms.js');
   const written = key.length === 1 ? `-${key}` : `--${key}`;
-  const near = nearest(key, command.options);
+  const near = series.nearest(key, command.options);
   const hint = near === undefined ? '' : `; did you mean --${near}?`;
   return new UsageError(`${written}: no such option${hint}`, command.name);
 }

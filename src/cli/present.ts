@@ -6,7 +6,7 @@ import type { TerminalOptions } from '../report/index.js';
 const UNKNOWN_TERMINAL = 100;
 
 export async function presentation({ given, surroundings }: Call): Promise<TerminalOptions> {
-  const { painter } = await import('../report/index.js');
+  const { report } = await import('./rooms.js');
   const toFile = given.output !== undefined && given.output !== '-';
   const level = colourLevel({
     refused: given.noColor,
@@ -16,7 +16,7 @@ export async function presentation({ given, surroundings }: Call): Promise<Termi
   const columns = toFile ? undefined : surroundings.stdout.columns;
   return {
     columns: columns ?? UNKNOWN_TERMINAL,
-    paint: await painter(level),
+    paint: await report.painter(level),
     ...(given.digits === undefined ? {} : { digits: given.digits }),
   };
 }

@@ -2,9 +2,9 @@
 import type { Command } from './command.js';
 
 export async function unknownCommand(word: string, commands: readonly Command[]): Promise<string> {
-  const { nearest } = await import('../series/index.js');
+  const { series } = await import('./rooms.js');
   const names = commands.map((command) => command.name);
-  const near = nearest(word, names);
+  const near = series.nearest(word, names);
   const hint = near === undefined ? `wanted one of ${names.join(', ')}` : `did you mean ${near}?`;
   return `"${word}" is no command; ${hint}`;
 }

@@ -10,8 +10,7 @@ async function run(call: Call): Promise<number> {
   const { given } = call;
   const at = await neededCoupling(call, assess.name);
   const series = await readSeries(name, call);
-  const studies = await import('../../studies/index.js');
-  const report = await import('../../report/index.js');
+  const { report, studies } = await import('../rooms.js');
   const result = studies.assess(series, at, {
     ...(given.order === undefined ? {} : { order: given.order }),
     digits: given.digits ?? USUAL_DIGITS,

@@ -6,22 +6,20 @@ import { deliver } from '../output.js';
 import { presentation } from '../present.js';
 
 async function list(call: Call): Promise<void> {
-  const { listCatalogue } = await import('../../series/index.js');
-  const report = await import('../../report/index.js');
-  const entries = await listCatalogue();
+  const { report, series } = await import('../rooms.js');
+  const entries = await series.listCatalogue();
   if (call.given.json) deliver(report.plainJson(entries), call);
   else if (call.given.quiet) deliver(entries.map((entry) => `${entry.id}\n`).join(''), call);
   else deliver(report.catalogueText(entries, await presentation(call)), call);
 }
 
 async function show(id: string, call: Call): Promise<void> {
-  const series = await readSeries(id, call);
-  const report = await import('../../report/index.js');
-  if (call.given.json) deliver(report.plainJson(report.plainSeries(series)), call);
+  const shown = await readSeries(id, call);
+  const { report, series } = await import('../rooms.js');
+  if (call.given.json) deliver(report.plainJson(report.plainSeries(shown)), call);
   else if (call.given.quiet) {
-    const { writeSeries } = await import('../../series/index.js');
-    deliver(writeSeries(series), call);
-  } else deliver(report.seriesText(series, await presentation(call)), call);
+    deliver(series.writeSeries(shown), call);
+  } else deliver(report.seriesText(shown, await presentation(call)), call);
 }
 
 async function run(call: Call): Promise<number> {
@@ -33,8 +31,8 @@ async function run(call: Call): Promise<number> {
   } else if (action === 'list') {
     throw new UsageError(`"${id}" is one operand too many; write leastterm catalogue show ${id}`, catalogue.name);
   } else {
-    const { suggestion } = await import('../../series/index.js');
-    const hint = suggestion(action, ['list', 'show']);
+    const { series } = await import('../rooms.js');
+    const hint = series.suggestion(action, ['list', 'show']);
     throw new UsageError(`"${action}" is no action of the catalogue${hint}; wanted list or show ID`, catalogue.name);
   }
   return EXIT.done;

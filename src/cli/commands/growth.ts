@@ -9,13 +9,12 @@ async function run(call: Call): Promise<number> {
   const [name = ''] = call.operands;
   if (call.given.at !== undefined) await readCoupling(call.given.at, growth.name);
   const series = await readSeries(name, call);
-  const studies = await import('../../studies/index.js');
+  const { report, studies } = await import('../rooms.js');
   const result = studies.growthStudy(series, {
     ...(call.given.order === undefined ? {} : { order: call.given.order }),
     digits: call.given.digits ?? USUAL_DIGITS,
     request: requestOf(growth.name, name, call),
   });
-  const report = await import('../../report/index.js');
   if (call.given.json) deliver(report.resultJson(result), call);
   else if (call.given.quiet) deliver(`${result.growth.verdict}\n`, call);
   else deliver(report.growthText(result, await presentation(call)), call);

@@ -7,13 +7,12 @@ import { presentation } from '../present.js';
 
 /** The prescription that --by names; a usage error with the known names otherwise. */
 async function prescriptionOf(by: string | undefined): Promise<string> {
-  const { PRESCRIPTIONS } = await import('../../prescriptions/index.js');
-  const names = PRESCRIPTIONS.map((p) => p.name);
+  const { prescriptions, series } = await import('../rooms.js');
+  const names = prescriptions.PRESCRIPTIONS.map((p) => p.name);
   if (by !== undefined && names.includes(by)) return by;
   const known = `one of ${names.join(', ')}`;
   if (by === undefined) throw new UsageError(`--by is missing: ${known}`, sum.name);
-  const { suggestion } = await import('../../series/index.js');
-  throw new UsageError(`--by: no prescription "${by}"${suggestion(by, names)}; wanted ${known}`, sum.name);
+  throw new UsageError(`--by: no prescription "${by}"${series.suggestion(by, names)}; wanted ${known}`, sum.name);
 }
 
 const plain = (variant: string): string => variant.replaceAll(' ', '').toLowerCase();
@@ -24,8 +23,7 @@ async function run(call: Call): Promise<number> {
   const by = await prescriptionOf(given.by);
   const at = await neededCoupling(call, sum.name);
   const series = await readSeries(name, call);
-  const studies = await import('../../studies/index.js');
-  const report = await import('../../report/index.js');
+  const { report, studies } = await import('../rooms.js');
   const result = studies.sumStudy(series, at, {
     ...(given.order === undefined ? {} : { order: given.order }),
     digits: given.digits ?? USUAL_DIGITS,

@@ -8,9 +8,9 @@ import type { Priors } from '../../truncation/index.js';
 
 async function priorsOf(text: string | undefined): Promise<Priors | undefined> {
   if (text === undefined) return undefined;
-  const { isPriorProblem, readPriors } = await import('../../truncation/index.js');
-  const priors = readPriors(text);
-  if (isPriorProblem(priors))
+  const { truncation: models } = await import('../rooms.js');
+  const priors = models.readPriors(text);
+  if (models.isPriorProblem(priors))
     throw new UsageError(`--prior: ${priors.problem}; wanted ${priors.wanted}`, truncation.name);
   return priors;
 }
@@ -21,8 +21,7 @@ async function run(call: Call): Promise<number> {
   const at = await neededCoupling(call, truncation.name);
   const priors = await priorsOf(given.prior);
   const series = await readSeries(name, call);
-  const studies = await import('../../studies/index.js');
-  const report = await import('../../report/index.js');
+  const { report, studies } = await import('../rooms.js');
   const result = studies.truncationStudy(series, at, {
     ...(given.order === undefined ? {} : { order: given.order }),
     ...(priors === undefined ? {} : { priors }),
@@ -42,7 +41,7 @@ async function run(call: Call): Promise<number> {
 
 export const truncation: Command = {
   name: 'truncation',
-  summary: 'the error of cutting the series, by every model that has a name',
+  summary: 'the truncation error by every model that has a name',
   about: [
     'Shows the truncation-error models side by side, each with its band at 68 and 95 %: conventional ones (last term, ratio, geometric tail, least term, Pade- and FAC-predicted next term, scale envelope), and credible intervals of Bayesian models with their priors (Cacciari-Houdeau and its modified form, geometric, asymmetric abc, the geometric one over the scales).',
     'With --by-order each model also sees the first terms alone, order by order, and the next known term shows whether its band was right. With --quiet one line a model: name, ends of the 68 % band, ends of the 95 % band, as distances from the sum.',
