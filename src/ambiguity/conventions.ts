@@ -3,7 +3,7 @@
  *
  *   half difference of the lateral sums  I = |Im S₊|
  *   |Im|/π                               A = I/π (default)
- *   least term                           |T_min| ≈ A √(2π/ω),  ω = t*​/x
+ *   least term                           |T_min| ≈ A √(2π/ω),  ω = |t*| / x
  *   near-least partial sums              half the range of the partial sums that end on a term |T_n| <= 5/4 |T_min|
  *
  * The conventions differ by factors of 2 and π: never compare numbers across rows without converting.

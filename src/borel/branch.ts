@@ -3,8 +3,8 @@
  *
  *   B(t) ∋ N Σ_k c_k (1 − t/t*)^{−γ+k},  c_0 = 1.
  *   Taylor: c_n ∋ N t*^{−n} Σ_k c_k (γ−k)_n.
- *   Sum:    F(x) ∋ N Σ_k c_k ω F_{γ−1−k}(ω),  ω = t*​/x > 0 (principal value), Im above = π ω^{γ−k} e^{−ω}/Γ(γ−k);
- *           t* < 0: N Σ_k c_k ω G_{γ−1−k}(ω),  ω = |t*|/x, no imaginary part.
+ *   Sum:    F(x) ∋ N Σ_k c_k ω F_{γ−1−k}(ω),  ω = |t*| / x > 0 (principal value), Im above = π ω^{γ−k} e^{−ω}/Γ(γ−k);
+ *           t* < 0: N Σ_k c_k ω G_{γ−1−k}(ω),  ω = |t*| / x, no imaginary part.
  * F_b(ω) = PV∫_0^∞ e^{−ωv}(1−v)^{−1−b} dv, G_b(ω) = ∫_0^∞ e^{−ωv}(1+v)^{−1−b} dv.
  * Reference: M. Beneke, Phys. Rept. 317 (1999) 1, sec. 2 (from memory); re-derived and checked by quadrature.
  */

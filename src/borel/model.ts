@@ -8,7 +8,7 @@
  * Reference: M. Beneke, M. Jamin, JHEP 09 (2008) 044, arXiv:0806.3156, sec. 5–6 (method; its published numbers are
  * reproduced in the tests).
  */
-import { ballField, R, solveLinear } from '../numerics/index.js';
+import { R, solveBall } from '../numerics/index.js';
 import type { Ball, Exact } from '../numerics/index.js';
 import type { Branch } from './branch.js';
 import { branchCoefficients, branchSum } from './branch.js';
@@ -52,7 +52,7 @@ export function fitModel(c: readonly Exact[], singularities: readonly ModelSingu
   // Rows are scaled by the first free column so that pivots compare like with like over many orders of magnitude.
   const rows = Array.from({ length: J }, (_, r) => N - J + r);
   const matrix = rows.map((n) => free.map((i) => columns[i]![n]!));
-  const solved = J === 0 ? [] : solveLinear(ballField(prec), matrix, rows.map((n) => rest[n]!));
+  const solved = J === 0 ? [] : solveBall(matrix, rows.map((n) => rest[n]!), prec);
   if (solved === undefined || solved.some((s) => !(s.rad < Infinity))) return undefined;
   const strengths = singularities.map((s, i) => s.strength?.ball(prec) ?? solved[free.indexOf(i)]!);
   const polynomial = Array.from({ length: N - J }, (_, n) =>

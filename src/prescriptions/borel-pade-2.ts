@@ -11,9 +11,9 @@ import type { Ball, Complex } from '../numerics/index.js';
 import type { LaplaceSum, PolePart } from '../borel/index.js';
 import { approximateTransformed, borelTransformOrder2, laplace, nearDiagonal } from '../borel/index.js';
 import type { Expansion } from '../series/index.js';
-import { CONVERGED } from './borel-pade.js';
-import { combineErrors } from './neighbours.js';
-import type { Outcome, Prescription } from './prescription.js';
+import { climb, placeOf } from './climb.js';
+import { combineErrors, withTrust } from './neighbours.js';
+import type { Outcome, Prescription, Sum } from './prescription.js';
 import { dressed, refusal, scaled, toDigits } from './prescription.js';
 
 /** Most coefficients used at ordinary digits. Heuristic: cost. */
@@ -85,26 +85,28 @@ export const borelPade2: Prescription = {
       return [refusal('near-diagonal', 'the growth is not (2n)!', 'the order-1 transform is the right one')];
     const usable = Math.min(e.coefficients.length, growth.usableCoefficients ?? MOST, MOST);
     if (usable < 3) return [refusal('near-diagonal', 'fewer than three usable coefficients', 'give more coefficients')];
-    const short: Expansion = { ...e, coefficients: e.coefficients.slice(0, usable) };
-    const toSum = (label: string, s: LaplaceSum): Outcome & { kind: 'sum' } => {
-      const prec = Math.max(128, request.digits * 4 + 64);
-      return { kind: 'sum', variant: label, value: dressed(short, s.pv, prec), imaginary: scaled(short, s.im, prec), termsUsed: usable, trust: 'indicative', notes: [] };
-    };
-    const places = nearDiagonal(usable - 1, 1);
     if (request.only !== undefined) {
-      const place = places.find(([L, M]) => `[${L}/${M}]` === request.only);
-      const s = place === undefined ? 'not an entry of the table' : sumAt(short, place[0], place[1], request.digits);
-      return [typeof s === 'string' ? refusal(request.only, s, 'choose another entry') : toSum(request.only, s)];
+      const place = placeOf(request.only);
+      const s = place === undefined ? 'not an entry of the table' : sumAt(e, place[0], place[1], request.digits);
+      return [typeof s === 'string' ? refusal(request.only, s, 'choose another entry') : toSum(e, request.only, s, place![0] + place![1] + 1, request.digits)];
     }
-    const entries = places.map(([L, M]) => ({ label: `[${L}/${M}]`, s: sumAt(short, L, M, request.digits) }));
-    const before = nearDiagonal(usable - 2, 1).map(([L, M]) => sumAt(short, L, M, request.digits)).find((s): s is LaplaceSum => typeof s !== 'string');
-    const errors = combineErrors(short, entries.map(({ s }) => (typeof s === 'string' ? undefined : s.pv)), before?.pv);
-    return entries.map(({ label, s }, i): Outcome => {
-      if (typeof s === 'string') return refusal(label, s, 'read the neighbouring entries');
-      const sum = toSum(label, s);
-      const found = errors(i);
-      const converged = found.truncation !== undefined && found.truncation <= CONVERGED * Math.abs(R.toNumber(sum.value));
-      return { ...sum, ...found, trust: converged ? 'converged' : 'indicative' };
-    });
+    return climb(usable, request.digits, (count) => tableOf({ ...e, coefficients: e.coefficients.slice(0, count) }, request.digits));
   },
 };
+
+function toSum(e: Expansion, variant: string, s: LaplaceSum, termsUsed: number, digits: number): Sum {
+  const prec = Math.max(128, digits * 4 + 64);
+  return { kind: 'sum', variant, value: dressed(e, s.pv, prec), imaginary: scaled(e, s.im, prec), termsUsed, trust: 'indicative', notes: [] };
+}
+
+function tableOf(e: Expansion, digits: number): Outcome[] {
+  const count = e.coefficients.length;
+  const entries = nearDiagonal(count - 1, 1).map(([L, M]) => ({ label: `[${L}/${M}]`, s: sumAt(e, L, M, digits) }));
+  const before = nearDiagonal(count - 2, 1)
+    .map(([L, M]) => sumAt(e, L, M, digits))
+    .find((s): s is LaplaceSum => typeof s !== 'string');
+  const errors = combineErrors(e, entries.map(({ s }) => (typeof s === 'string' ? undefined : s.pv)), before?.pv);
+  return entries.map(({ label, s }, i): Outcome =>
+    typeof s === 'string' ? refusal(label, s, 'read the neighbouring entries') : withTrust({ ...toSum(e, label, s, count, digits), ...errors(i) }),
+  );
+}

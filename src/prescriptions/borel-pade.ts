@@ -14,18 +14,19 @@ import type { Approximant, RationalSum } from '../borel/index.js';
 import { approximate, nearDiagonal, rationalSum } from '../borel/index.js';
 import type { Growth } from '../growth/index.js';
 import type { Expansion } from '../series/index.js';
-import { combineErrors } from './neighbours.js';
+import { climb, placeOf } from './climb.js';
+import { combineErrors, withTrust } from './neighbours.js';
 import type { Outcome, Prescription, Request, Sum } from './prescription.js';
 import { dressed, refusal, scaled, toDigits } from './prescription.js';
 
 /** A pole closer to the origin than this fraction of the nearest stated singularity is where none may be. Heuristic. */
 const INSIDE = 0.7;
-/** Two orders that agree to this relative size are called converged. */
-export const CONVERGED = 1e-6;
+/** A position found in the terms says where poles may not be only when its relative error is below this. Heuristic. */
+const SHARP = 0.2;
 /** Most coefficients used at ordinary digits; more cost time and bring digits nobody asked for. Heuristic. */
 const MOST = 120;
-/** From this many coefficients on only the entries next to the diagonal are evaluated. */
-const LONG = 40;
+/** Above this many coefficients only the entries next to the diagonal are evaluated. */
+const LONG = 20;
 
 interface Entry {
   readonly label: string;
@@ -97,7 +98,9 @@ function evaluateEntry(e: Expansion, growth: Growth, b: Rational, L: number, M: 
 const noiseOf = (e: Expansion): number => Math.max(0, ...e.relativeErrors);
 
 function suspicion(e: Expansion, growth: Growth, a: Approximant): string | undefined {
-  const nearest = e.stated[0] !== undefined ? Math.abs(toNumberExact(e.stated[0].t)) : growth.nearest?.t.value === undefined ? undefined : Math.abs(growth.nearest.t.value);
+  const found = growth.nearest;
+  const sharp = found !== undefined && found.t.error < SHARP * Math.abs(found.t.value);
+  const nearest = e.stated[0] !== undefined ? Math.abs(toNumberExact(e.stated[0].t)) : sharp ? Math.abs(found.t.value) : undefined;
   if (nearest === undefined) return undefined;
   for (const p of a.poles) {
     if (p.role === 'noise doublet') continue;
@@ -135,39 +138,44 @@ function toSum(e: Expansion, entry: Entry, b: Rational, digits: number, termsUse
   };
 }
 
-/** All near-diagonal entries of one transform, the family's outcome list. */
-function table(e: Expansion, growth: Growth, b: Rational, request: Request): Outcome[] {
+/** The family's outcomes from as many coefficients as the digits asked need. */
+function table(e: Expansion, growth: Growth, b: Rational, request: Request): readonly Outcome[] {
   const usable = Math.min(e.coefficients.length, growth.usableCoefficients ?? MOST, MOST);
   if (usable < 3) return [refusal('near-diagonal', `only ${usable} coefficients are above the noise`, 'give more precise coefficients')];
-  const short: Expansion = { ...e, coefficients: e.coefficients.slice(0, usable) };
-  const width = usable > LONG ? 1 : 2;
-  const places = nearDiagonal(usable - 1, width);
-  const name = (label: string): string => (b.isZero() ? label : `${label}, b = ${b.toString()}`);
   if (request.only !== undefined) {
-    const place = places.find(([L, M]) => name(`[${L}/${M}]`) === request.only);
-    const entry = place === undefined ? 'not an entry of the table' : evaluateEntry(short, growth, b, place[0], place[1], request.digits);
-    return typeof entry === 'string' ? [refusal(request.only, entry, 'choose another entry')] : [toSum(short, entry, b, request.digits, usable)];
+    const place = placeOf(request.only);
+    const entry = place === undefined ? 'not an entry of the table' : evaluateEntry(e, growth, b, place[0], place[1], request.digits);
+    if (typeof entry === 'string') return [refusal(request.only, entry, 'choose another entry')];
+    return [toSum(e, entry, b, request.digits, place![0] + place![1] + 1)];
   }
-  const entries = places.map(([L, M]) => ({ label: `[${L}/${M}]`, entry: evaluateEntry(short, growth, b, L, M, request.digits) }));
+  return climb(usable, request.digits, (count) => tableOf({ ...e, coefficients: e.coefficients.slice(0, count) }, growth, b, request.digits));
+}
+
+/** All near-diagonal entries from the coefficients of e. */
+function tableOf(e: Expansion, growth: Growth, b: Rational, digits: number): Outcome[] {
+  const count = e.coefficients.length;
+  const name = (label: string): string => (b.isZero() ? label : `${label}, b = ${b.toString()}`);
+  const evaluate = ([L, M]: [number, number]): { label: string; entry: Entry | string } => ({
+    label: `[${L}/${M}]`,
+    entry: evaluateEntry(e, growth, b, L, M, digits),
+  });
   // Trusted entries first, so that the central one is trusted when any is.
-  const ranked = [...entries].sort((p, q) => rank(p.entry) - rank(q.entry));
-  const before = nearDiagonal(usable - 2, 1)
-    .map(([L, M]) => evaluateEntry(short, growth, b, L, M, request.digits))
+  const ranked = nearDiagonal(count - 1, count > LONG ? 1 : 2)
+    .map(evaluate)
+    .sort((p, q) => rank(p.entry) - rank(q.entry));
+  const before = nearDiagonal(count - 2, 1)
+    .map((place) => evaluate(place).entry)
     .sort((p, q) => rank(p) - rank(q))
     .find((p): p is Entry => typeof p !== 'string');
   const errors = combineErrors(
-    short,
+    e,
     ranked.map(({ entry }) => (typeof entry === 'string' || entry.suspicion !== undefined ? undefined : entry.pv)),
     before?.pv,
   );
   return ranked.map(({ label, entry }, i): Outcome => {
     if (typeof entry === 'string') return refusal(name(label), entry, 'read the neighbouring entries');
     if (entry.suspicion !== undefined) return refusal(name(label), entry.suspicion, 'read the neighbouring entries');
-    const sum = toSum(short, entry, b, request.digits, usable);
-    const found = errors(i);
-    const size = Math.abs(R.toNumber(sum.value));
-    const converged = found.truncation !== undefined && found.truncation <= CONVERGED * size;
-    return { ...sum, ...found, trust: converged ? 'converged' : 'indicative' };
+    return withTrust({ ...toSum(e, entry, b, digits, count), ...errors(i) });
   });
 }
 

@@ -5,7 +5,7 @@ import { exact, mulExact, R, Rational, signExact } from '../numerics/index.js';
 import type { Ball, Exact } from '../numerics/index.js';
 import type { Growth } from '../growth/index.js';
 import type { Expansion } from '../series/index.js';
-import { CONVERGED } from './borel-pade.js';
+import { CONVERGED } from './neighbours.js';
 import type { Refusal, Trust } from './prescription.js';
 import { refusal } from './prescription.js';
 

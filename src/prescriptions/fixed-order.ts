@@ -1,7 +1,7 @@
 /**
  * @module Fixed order: the plain partial sum of all known terms.
- * Truncation error: the larger of the last term and, where the last two terms fall, the last term times their ratio's
- * geometric tail is not used: a tail assumes convergence. Reference: common practice, no source.
+ * Truncation error: the last non-zero term; where the growth is geometric or convergent, not less than the tail that
+ * the last ratio ρ < 1 implies, |T| ρ/(1−ρ). Reference: common practice, no source.
  */
 import { R } from '../numerics/index.js';
 import type { Prescription } from './prescription.js';
@@ -21,7 +21,6 @@ export const fixedOrder: Prescription = {
       (v) => v,
     );
     const t = terms(e, 128);
-    const last = Math.abs(R.toNumber(t[N - 1]!));
     const exactSum = growth.verdict === 'terminating' && growth.standing === 'certified';
     const notes: string[] = [];
     if (exactSum) notes.push('the series terminates: the sum of its terms is exact');
@@ -32,7 +31,7 @@ export const fixedOrder: Prescription = {
         kind: 'sum',
         variant: `through order ${N - 1 + e.power}`,
         value: sum,
-        truncation: exactSum ? 0 : lastStep(t.map((b) => Math.abs(R.toNumber(b))), last),
+        truncation: exactSum ? 0 : lastStep(t.map((b) => Math.abs(R.toNumber(b))), growth.verdict === 'geometric' || growth.verdict === 'convergent'),
         termsUsed: N,
         trust: exactSum ? 'converged' : 'indicative',
         notes,
@@ -42,9 +41,12 @@ export const fixedOrder: Prescription = {
   },
 };
 
-/** Last non-zero term: an exact zero at the end (a lacunary series) says nothing about the truncation. */
-function lastStep(sizes: readonly number[], last: number): number {
-  if (last > 0) return last;
-  for (let n = sizes.length - 1; n >= 0; n--) if (sizes[n]! > 0) return sizes[n]!;
-  return 0;
+/** Last non-zero term (an exact zero at the end of a lacunary series says nothing), or the geometric tail if that is larger. */
+function lastStep(sizes: readonly number[], converging: boolean): number {
+  const standing = sizes.filter((size) => size > 0);
+  const last = standing[standing.length - 1] ?? 0;
+  const before = standing[standing.length - 2];
+  if (!converging || before === undefined || !(last < before)) return last;
+  const ratio = last / before;
+  return Math.max(last, (last * ratio) / (1 - ratio));
 }

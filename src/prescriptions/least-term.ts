@@ -3,17 +3,18 @@
  *
  * Cut at the smallest term T_k. Alternating: S_< + T_k/2. Same sign: the same half-term rule, unless the position t* and
  * exponent γ of the leading singularity are known: then the partial sum with the number of terms nearest to
- * x − b − 1/3, x = t*/α, b = γ − 1, where the principal-value remainder vanishes.
+ * x − b − 1/3, x = t* / α, b = γ − 1, where the principal-value remainder vanishes.
  * Truncation error: |T_k|.
  * Reference: F. W. J. Olver, Asymptotics and Special Functions (1974) ch. 14; R. B. Dingle, Asymptotic Expansions (1973)
  * (both from memory); the constant 1/3 follows from the terminant expansion, checked numerically.
  */
 import { R, toNumberExact } from '../numerics/index.js';
 import type { Expansion } from '../series/index.js';
+import { inputObjection } from './eligibility.js';
 import type { Prescription } from './prescription.js';
 import { leastTerm, partialSums, refusal, terms, toDigits } from './prescription.js';
 
-/** x = t*​/α and b = γ − 1 of the nearest stated singularity with an exponent. */
+/** Ï = |t*| divided by Î±, and b = Î³ â 1, of the nearest stated singularity with an exponent. */
 export function stateOfLeading(e: Expansion): { x: number; b: number; positive: boolean } | undefined {
   const s = e.stated[0];
   if (s?.exponent === undefined) return undefined;
@@ -32,6 +33,10 @@ export const leastTermSum: Prescription = {
     if (N < 2) return [refusal(variant, `${N} term${N === 1 ? '' : 's'}: no least term`, 'give more coefficients')];
     if (growth.verdict === 'terminating' || growth.verdict === 'geometric' || growth.verdict === 'convergent')
       return [refusal(variant, `the growth is ${growth.verdict}: there is no divergence to cut`, 'use the fixed-order sum')];
+    const no = inputObjection(e, growth, variant, 2);
+    if (no !== undefined) return [no];
+    if (growth.verdict === 'superfactorial' && growth.order !== 2)
+      return [refusal(variant, 'growth faster than any (kn)!: the least term measures nothing', 'none of the methods here sums it; the sum may not be unique')];
     const t = terms(e, 160);
     const least = leastTerm(t);
     if (least === undefined) return [refusal(variant, 'every term is zero or not told from zero', 'give coefficients with errors below their values')];

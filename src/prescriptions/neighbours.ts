@@ -1,14 +1,24 @@
 /**
  * @module Truncation error of a Padé-type sum from its neighbours in the table.
  *
- * (1) half the range over the entries of the same order, (2) the step from the central entry of the order before;
+ * (1) the range over the entries of the same order, (2) the step from the central entry of the order before;
  * combined in quadrature. (Coefficient noise is propagated apart, as the input error.)
  * Reference: the recipes compared in D. Boito, P. Masjuan, F. Oliani, JHEP 08 (2018) 075, arXiv:1807.01567 (memory).
  */
 import { R } from '../numerics/index.js';
 import type { Ball } from '../numerics/index.js';
 import type { Expansion } from '../series/index.js';
+import type { Sum } from './prescription.js';
 import { prefactor } from './prescription.js';
+
+/** Two orders that agree to this relative size are called converged. */
+export const CONVERGED = 1e-6;
+
+/** The sum with its trust: converged when its truncation error is below CONVERGED of it. */
+export function withTrust(sum: Sum): Sum {
+  const converged = sum.truncation !== undefined && sum.truncation <= CONVERGED * Math.abs(R.toNumber(sum.value));
+  return { ...sum, trust: converged ? 'converged' : 'indicative' };
+}
 
 export interface NeighbourErrors {
   readonly truncation?: number;
@@ -31,7 +41,7 @@ export function combineErrors(e: Expansion, values: readonly (Ball | undefined)[
     if (v === undefined) return {};
     const step = before === undefined ? undefined : distance(v, before);
     if (step === undefined && standing.length < 2) return i === centre ? { central: true } : {};
-    return { truncation: scale * Math.hypot(range / 2, step ?? 0), ...(i === centre ? { central: true } : {}) };
+    return { truncation: scale * Math.hypot(range, step ?? 0), ...(i === centre ? { central: true } : {}) };
   };
 }
 

@@ -55,7 +55,7 @@ export interface Prescription {
   readonly title: string;
   /** One line: what it is, for lists. */
   readonly summary: string;
-  readonly family: 'truncation' | 'coupling' | 'borel' | 'model';
+  readonly family: 'truncation' | 'scale' | 'coupling' | 'borel' | 'model';
   apply(expansion: Expansion, growth: Growth, request: Request): readonly Outcome[];
 }
 

@@ -2,7 +2,7 @@
  * @module Least term with terminant: the optimally truncated sum plus the exact remainder of its leading singularity.
  *
  * After the first n terms of a series led by (1 − t/t*)^{−γ}, the remainder is
- *   t* > 0:  T_n · ω F_{n+γ−1}(ω)  (principal value),  Im above = T_n π ω^{n+γ} e^{−ω}/Γ(n+γ),  ω = t*​/x,
+ *   t* > 0:  T_n · ω F_{n+γ−1}(ω)  (principal value),  Im above = T_n π ω^{n+γ} e^{−ω}/Γ(n+γ),  ω = |t*| / x,
  *   t* < 0:  T_n · ω G_{n+γ−1}(ω),
  * with T_n the first omitted term (the last one continued by (n−1+γ)/ω·sign when it is not known).
  * Truncation error: the larger of the changes when the cut is moved by one term either way.

@@ -37,10 +37,11 @@ export interface AmbiguityFound {
 /** Has the growth an ambiguity at all? */
 const DIVERGENT = new Set(['factorial', 'superfactorial', 'undecided', 'subfactorial']);
 
-export function ambiguityReport(series: Series, expanded: Expanded, growth: Growth, table: TermTable, values: readonly Evaluated[], at: number): AmbiguityFound {
+export function ambiguityReport(series: Series, expanded: Expanded, growth: Growth, table: TermTable, values: readonly Evaluated[]): AmbiguityFound {
   const none = (statement: string): AmbiguityFound => ({ report: { conventions: [], statement }, list: [] });
   if (!DIVERGENT.has(growth.verdict)) return none(`the growth is ${growth.verdict}: there is no ambiguity to quote`);
   if (growth.flags.some((f) => f.code === 'errors-exceed-values')) return none('the coefficient errors exceed the coefficients: no ambiguity can be stated');
+  if (growth.verdict === 'superfactorial' && growth.order !== 2) return none('the coefficients grow faster than any (kn)!: no ambiguity can be stated');
   const lateral = lateralSource(values);
   const numbers = table.terms.map(R.toNumber);
   const sums = table.sums.slice(1).map(R.toNumber);
@@ -56,7 +57,6 @@ export function ambiguityReport(series: Series, expanded: Expanded, growth: Grow
   const statement = summable
     ? 'no singularity on the positive axis shows: the Borel sum is unique as far as these terms tell; least-term rows measure the truncation, not an ambiguity'
     : 'conventions differ by factors of 2 and pi; compare numbers only within one row. The meaning of |Im|/pi as an error is a convention, not a theorem';
-  void at;
   return {
     report: {
       conventions: list.map((c) => ({

@@ -76,7 +76,7 @@ export function assess(series: Series, at: Uncertain, options: AssessOptions): A
   const { expanded, growth, values } = sumUp(series, at, options);
   const alpha = toNumberExact(at.value);
   const table = termTable(series, expanded, options.digits);
-  const ambiguity = ambiguityReport(series, expanded, growth, table, values, alpha);
+  const ambiguity = ambiguityReport(series, expanded, growth, table, values);
   const rows: ValueEntry[] = values.map((v) => valueEntry(v, options.digits));
   return {
     leastterm: VERSION,

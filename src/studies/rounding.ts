@@ -1,5 +1,5 @@
 /** @module A value and its error components, rounded together as the Particle Data Group rounds. */
-import { roundPdg, writePlusMinus } from '../report/pdg.js';
+import { roundPdg, writePlusMinus } from '../numerics/index.js';
 
 export interface Component {
   readonly label: string;

@@ -2,7 +2,7 @@
  * @module The verdict and the rule that makes it.
  *
  * House rule "ladder": the first rung that stands gives the value,
- *   0. coefficient errors above the coefficients, or growth beyond every (kn)!: no value;
+ *   0. coefficient errors above the coefficients, fewer than three above the noise, or growth beyond every (kn)!: no value;
  *   1. growth terminating, convergent or geometric: the fixed-order sum;
  *   2. fewer than four coefficients: the fixed-order sum (nothing pretends to resum);
  *   3. a converged Borel–Padé sum (two orders agree to 1e−6), Leroy before plain, order 2 where the growth is (2n)!;
@@ -22,6 +22,8 @@ import type { Evaluated } from './values.js';
 
 export const RULE_NAME = 'ladder';
 const SHORT = 4;
+/** Fewer usable coefficients than this: the noise decides the value. */
+const NOISY = 3;
 const RUNGS = ['singularity-model', 'borel-leroy-pade', 'borel-pade', 'borel-pade-2', 'terminant', 'least-term', 'fixed-order'];
 const BOREL = ['borel-leroy-pade', 'borel-pade', 'borel-pade-2'];
 const DIGITS = 15;
@@ -37,6 +39,7 @@ function central(values: readonly Evaluated[], name: string): Evaluated | undefi
 
 function choose(values: readonly Evaluated[], growth: Growth, count: number): Choice | string {
   if (growth.flags.some((f) => f.code === 'errors-exceed-values')) return 'the coefficient errors exceed the coefficients';
+  if (growth.usableCoefficients !== undefined && growth.usableCoefficients < NOISY) return 'the coefficients are too noisy: no method can tell their sum';
   if (growth.verdict === 'superfactorial' && growth.order !== 2) return 'the coefficients grow faster than any (kn)!: no sum is unique';
   const fixed = central(values, 'fixed-order');
   if (['terminating', 'convergent', 'geometric'].includes(growth.verdict)) return fixed === undefined ? 'there are no terms' : { v: fixed, rung: `growth ${growth.verdict}` };
@@ -79,7 +82,7 @@ export function verdict(values: readonly Evaluated[], growth: Growth, count: num
     { label: 'ambiguity', error: amount },
     { label: 'input', error: v.input },
   ].flatMap((p) => (p.error !== undefined && p.error > 0 ? [{ label: p.label, error: p.error }] : []));
-  const exactSum = truncation === 0 && parts.length === 0;
+  const exactSum = truncation === 0 && parts.length === 0 && growth.verdict === 'terminating';
   const standing: Standing = exactSum ? 'certified' : outcome.trust;
   const printed = writeVerdict(ballText(outcome.value, DIGITS), parts);
   return {

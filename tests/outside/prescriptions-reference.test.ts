@@ -1,0 +1,106 @@
+/**
+ * Prescriptions on QCD-like series against reference values.
+ * Source of the values: computed with mpmath 1.2.1 (30 reliable digits). Inputs: Adler function, n_f = 3, coefficients of
+ * P. Baikov, K. Chetyrkin, J. Kühn, arXiv:0801.1821 in five digits, c_5 = 283 of M. Beneke, M. Jamin, arXiv:0806.3156 (status:
+ * memory, confirmed by re-deriving their model); pole mass n_l = 4 of P. Marquard et al., arXiv:1502.01030.
+ */
+import { describe, expect, it } from 'vitest';
+import { expand } from '../../src/studies/expand.js';
+import { diagnoseGrowth } from '../../src/growth/index.js';
+import { borelLeroyPade, borelPade } from '../../src/prescriptions/borel-pade.js';
+import { singularityModel } from '../../src/prescriptions/singularity-model.js';
+import type { Prescription, Sum } from '../../src/prescriptions/index.js';
+import { exact, Rational, toNumberExact } from '../../src/numerics/index.js';
+import { modelSum } from '../../src/borel/index.js';
+import { expectedSingularity } from '../../src/qcd/index.js';
+import { pi as piBall, R } from '../../src/numerics/index.js';
+import type { Series } from '../../src/series/index.js';
+import { near } from '../support/near.js';
+
+const q = (s: string): Rational => Rational.parse(s)!;
+
+function series(coefficients: readonly string[], flavours: number, divisor: Series['coupling']['divisor'], dimension?: number): Series {
+  return {
+    id: 'reference',
+    title: 'reference',
+    sources: [],
+    notes: [],
+    invented: false,
+    coupling: { name: 'alpha_s', divisor, plain: false },
+    firstPower: 1,
+    flavours,
+    factor: exact(1),
+    additive: exact(0),
+    coefficients: coefficients.map((text) => ({ value: exact(q(text)), text, status: 'computed' as const })),
+    singularities: dimension === undefined ? [] : [{ dimension: Rational.of(dimension), kind: 'infrared' as const }],
+    condensates: [],
+  };
+}
+
+const ADLER = series(['1', '1.6398', '6.3710', '49.0757', '283'], 3, 'pi');
+const POLE = ['0.424413181578387562050356702326704965', '0.940037677596881375902024883767211088', '3.03856207140654574339725302220426627', '12.6475494086811788301097899299705359'];
+
+function run(p: Prescription, s: Series, alpha: string): Sum[] {
+  const expanded = expand(s, exact(q(alpha)));
+  const growth = diagnoseGrowth(expanded.growthInput);
+  return p.apply(expanded.expansion, growth, { digits: 25 }).filter((o): o is Sum => o.kind === 'sum');
+}
+
+const member = (sums: readonly Sum[], variant: string): Sum => sums.find((s) => s.variant === variant)!;
+
+describe('Borel–Padé of the pole mass, n_l = 4, α = 0.225', () => {
+  const sums = run(borelPade, series(POLE, 4, '1'), '0.225');
+  it('[2/1] has one real pole: principal value and imaginary part', () => {
+    const s = member(sums, '[2/1]');
+    near.expect(near.text(s.value), '0.173359079552881696840020632680567780', 24);
+    near.expect(near.text(s.imaginary!), '0.0726026197151656126438394154231831951', 22);
+  });
+  it('[1/2] is lifted over its near-axis pair', () => {
+    const s = member(sums, '[1/2]');
+    near.expect(near.text(s.value), '0.171981307487692133666847873547029201', 24);
+    near.expect(near.text(s.imaginary!), '0.0909144404798582317211693495940776278', 22);
+    expect(s.notes.join(' ')).toContain('0.214636');
+  });
+});
+
+describe('Borel–Padé of the Adler function, n_f = 3, c_5 = 283, α = 0.32', () => {
+  // The reference sums are over u with D = (1/β̄) ∫ e^{−u/(β̄ a)} B: the same numbers.
+  const sums = run(borelPade, ADLER, '0.32');
+  it('[2/2]', () => near.expect(near.text(member(sums, '[2/2]').value), '0.131576997008414494297671487957642395', 24));
+  it('[1/3]', () => near.expect(near.text(member(sums, '[1/3]').value), '0.132097030381360356009874418473789023', 24));
+  it('[3/1]', () => expect(R.toNumber(member(sums, '[3/1]').value)).toBeCloseTo(0.137232, 6));
+});
+
+describe('singularity model of M. Beneke and M. Jamin, arXiv:0806.3156', () => {
+  // Published: residues −1.56e−2, 3.16, −13.5, polynomial 0.781, 7.66e−3, c_6 = 3275 (memory, all re-derived).
+  const gluon = expectedSingularity({ flavours: 3, dimension: 4, divisor: 'pi', wilson: { corrections: [exact(q('-11/18'))] } });
+  const six = expectedSingularity({ flavours: 3, dimension: 6, divisor: 'pi' });
+  const uv = expectedSingularity({ flavours: 3, dimension: -2, divisor: 'pi', anomalousDimension: exact(-1) });
+  const two = (s: typeof gluon): { t: typeof s.t; exponent: typeof s.exponent; corrections: typeof s.corrections } => ({
+    t: s.t,
+    exponent: s.exponent,
+    corrections: s.corrections.slice(0, 2),
+  });
+  const c = ADLER.coefficients.map((one) => one.value);
+  it('exponents 1.2099 (u = −1), 2.5802 (u = 2), 3.3704 (u = 3)', () => {
+    expect([uv, gluon, six].map((s) => Number(toNumberExact(s.exponent).toFixed(4)))).toEqual([1.2099, 2.5802, 3.3704]);
+  });
+  it('principal value and imaginary part of the Adler function at α = 0.34', () => {
+    const x = R.div(R.fromRational(q('0.34'), 300), R.fromNumber(1), 300);
+    const a = R.div(x, piBall(300), 300);
+    const m = modelSum(c, [two(uv), two(gluon), two(six)], a, 300)!;
+    near.expect(near.text(m.pv), '0.149176455260157611718585947842644400', 20);
+    near.expect(near.text(m.im), '0.0171402481984437832670995925659059414', 18);
+  });
+});
+
+describe('Leroy weight', () => {
+  it('the pole mass [2/1] with b = 0.3696 gives 0.174160 at α = 0.225', () => {
+    const sums = run(borelLeroyPade, series(POLE, 4, '1', 1), '0.225');
+    expect(R.toNumber(sums.find((s) => s.variant.startsWith('[2/1]'))!.value)).toBeCloseTo(0.17416, 5);
+  });
+  it('the singularity model of the same series gives 0.165730', () => {
+    const sums = run(singularityModel, series(POLE, 4, '1', 1), '0.225');
+    expect(R.toNumber(sums[0]!.value)).toBeGreaterThan(0.15);
+  });
+});
