@@ -42,7 +42,7 @@ export {
 } from './matching/path.js';
 export { massRatio, matchDown, matchUp, type Matching } from './matching/match.js';
 export { MATCHING_ORDER, type HeavyMass, type MatchingTable } from './matching/logs.js';
-export { exactTable, doubleTable, type MatchedQuantity } from './matching/tables.js';
+export { exactTable, doubleTable, formalTableAt, type MatchedQuantity } from './matching/tables.js';
 export {
   DEFAULT_THRESHOLDS,
   crossingScale,

@@ -11,7 +11,7 @@ export type {
   SingularityKind,
   Uncertain,
 } from './series.js';
-export type { Expansion, StatedSingularity } from './expansion.js';
+export type { Expansion, Running, StatedSingularity } from './expansion.js';
 export { InputError, describeProblem } from './input-error.js';
 export type { Problem } from './input-error.js';
 export { nearest, suggestion } from './nearest.js';
@@ -19,7 +19,10 @@ export { NUMBER_FORMS, parseUncertain } from './uncertain.js';
 export type { ReadNumber } from './uncertain.js';
 export { isNumberProblem } from './number-text.js';
 export type { NumberProblem } from './number-text.js';
-export { textOf } from './written.js';
+export { textOf, written } from './written.js';
+export type { Written } from './written.js';
+export { parseTree } from './expression/tree.js';
+export type { SyntaxTree } from './expression/syntax.js';
 export { loadSeries, parseSeries } from './load.js';
 export type { LoadOptions, ParseOptions, SeriesForm } from './load.js';
 export { writeSeries } from './write.js';

@@ -47,7 +47,10 @@ type AsyncStep = (state: State) => Promise<State | Refusal> | State | Refusal;
 async function throughMSbar(state: State, find: FindSeries, step: AsyncStep): Promise<State | Refusal> {
   const { scheme } = state;
   if (scheme.kind === 'toy') {
-    return refuse(`"${schemeText(scheme)}" is a world of its own: it has no quarks to decouple and no other couplings`, 'change its scale only');
+    return refuse(
+      `"${schemeText(scheme)}" is a world of its own: it has no quarks to decouple and no other couplings`,
+      'change its scale only',
+    );
   }
   const inMSbar = await toCoupling(state, { kind: 'MSbar' }, find);
   if (isRefusal(inMSbar)) return inMSbar;

@@ -19,7 +19,10 @@ export type CouplingScheme =
   | { readonly kind: 'toy'; readonly loops: number };
 
 const WORDS: readonly (readonly [RegExp, (m: RegExpExecArray) => CouplingScheme | undefined])[] = [
-  [/\b(one|two|three|four|five)-loop running only\b/, (m) => ({ kind: 'toy', loops: LOOP_WORDS.indexOf(m[1] ?? '') + 1 })],
+  [
+    /\b(one|two|three|four|five)-loop running only\b/,
+    (m) => ({ kind: 'toy', loops: LOOP_WORDS.indexOf(m[1] ?? '') + 1 }),
+  ],
   [/^coupling defined by (\S+)/, (m) => ({ kind: 'series', name: (m[1] ?? '').replace(/[;,]$/, '') })],
   [/^C-scheme, C = ([-+]?[\d./]+)/, (m) => cScheme(m[1] ?? '')],
   [/^V scheme\b/, () => ({ kind: 'V' })],
@@ -111,10 +114,7 @@ export function flavoursOf(series: Series): number | Refusal {
 export function scaleRatioOf(series: Series): Exact | Refusal {
   return (
     series.scaleRatio ??
-    refuse(
-      `${series.id} does not say its renormalisation scale`,
-      'write "scale ratio: 1" (mu over Q) into its file',
-    )
+    refuse(`${series.id} does not say its renormalisation scale`, 'write "scale ratio: 1" (mu over Q) into its file')
   );
 }
 

@@ -50,6 +50,13 @@ const NAMES = ['betaHeavy', 'betaLight', 'gammaHeavy', 'gammaLight', 'coupling',
 export const formalTable = (quantity: MatchedQuantity, mass: HeavyMass): MatchingTable<Formal> =>
   matchingTable(formalRing, ingredients(formalSymbol('nl')), quantity, mass);
 
+/** The ingredients for a number nl, with π and the ζ values as symbols. */
+export const formalConstants = (nl: number): MatchingConstants<Formal> => ingredients(formalRational(Rational.of(nl)));
+
+/** The table for a number nl, with l and the constants as symbols. */
+export const formalTableAt = (nl: number, quantity: MatchedQuantity, mass: HeavyMass): MatchingTable<Formal> =>
+  matchingTable(formalRing, formalConstants(nl), quantity, mass);
+
 const doubles = new Map<string, MatchingTable<number>>();
 
 /** The table in doubles, computed once for each nl. */

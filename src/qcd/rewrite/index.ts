@@ -1,7 +1,7 @@
 /** @module Exact re-expansion of series: other scales, couplings, numbers of flavours, masses. */
 export { multiplyCoefficients, powerOfCoefficients } from './algebra.js';
 export { decouplingMassFactor, decouplingRelation, inverseDecouplingRelation, type Decoupling } from './flavours.js';
-export { massRatioSeries, type MassDefinition, type MassRatioQuestion } from './mass.js';
+export { massRatioFormal, massRatioSeries, type MassDefinition, type MassRatioQuestion } from './mass.js';
 export {
   chainRelations,
   invertRelation,

@@ -28,9 +28,10 @@ import {
   scaleSeries,
   truncate,
 } from '../algebra/truncated.js';
+import { formalRing, type Formal } from '../constants/index.js';
 import { overFourPi, type CouplingDivisor } from '../divisor.js';
 import { MATCHING_ORDER, matchingTable, type MatchingConstants } from '../matching/logs.js';
-import { matchingConstants, matchingInputs } from '../matching/tables.js';
+import { formalConstants, matchingConstants, matchingInputs } from '../matching/tables.js';
 
 /** 'pole' M; 'msbar' m(m); 'running' m(μ) at the scale of the coupling. MSbar masses with n_l + 1 flavours. */
 export type MassDefinition = 'pole' | 'msbar' | 'running';
@@ -95,4 +96,11 @@ export function massRatioSeries(question: MassRatioQuestion): Exact[] {
     if (k > 0) power = mulExact(power, unit);
     return k === 0 ? c : mulExact(c, power);
   });
+}
+
+/** The same ratio in α_s/π with every constant kept as a symbol, from the logarithm in symbols. */
+export function massRatioFormal(question: Omit<MassRatioQuestion, 'divisor' | 'log'>, log: Formal): Formal[] {
+  return ratioTable(formalRing, formalConstants(question.light), question)
+    .slice(0, LENGTH)
+    .map((row) => evaluatePolynomial(formalRing, row, log));
 }

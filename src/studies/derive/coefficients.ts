@@ -53,7 +53,9 @@ function spread(x: Tracked, variance: number, sources: Sources): Spread | undefi
   const { error } = source;
   if (slope === 1 && error !== undefined) return error;
   if (slope === -1 && error !== undefined) return { plus: error.minus, minus: error.plus };
-  const [up, down] = [Math.abs(slope) * source.plus, Math.abs(slope) * source.minus].map((e) => rounded(e, ERROR_DIGITS));
+  const [up, down] = [Math.abs(slope) * source.plus, Math.abs(slope) * source.minus].map((e) =>
+    rounded(e, ERROR_DIGITS),
+  );
   if (up === undefined || down === undefined) return undefined;
   return slope > 0 ? { plus: up, minus: down } : { plus: down, minus: up };
 }

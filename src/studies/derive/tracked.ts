@@ -28,7 +28,11 @@ export const trackedRational = (q: Rational): Tracked => ({
 
 export const trackedExact = (value: Exact, formal?: Formal): Tracked => ({
   value,
-  ...(value.rational !== undefined ? { formal: formalRational(value.rational) } : formal === undefined ? {} : { formal }),
+  ...(value.rational !== undefined
+    ? { formal: formalRational(value.rational) }
+    : formal === undefined
+      ? {}
+      : { formal }),
   slopes: [],
 });
 

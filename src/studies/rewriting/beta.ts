@@ -20,7 +20,9 @@ export function unitPower(divisor: CouplingDivisor, k: number): Tracked {
   let formal: Formal = FORMAL_ONE;
   for (let i = 0; i < k; i++) formal = mulFormal(formal, unit);
   const one = trackedExact(overFourPi(divisor), unit);
-  const [value] = derive([one], (ring, [u]) => [powerOf(ring.one, k, (x) => ring.mul(x, u ?? ring.one))], { length: 1 });
+  const [value] = derive([one], (ring, [u]) => [powerOf(ring.one, k, (x) => ring.mul(x, u ?? ring.one))], {
+    length: 1,
+  });
   return trackedExact(value?.value ?? one.value, formal);
 }
 

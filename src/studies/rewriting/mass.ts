@@ -83,7 +83,10 @@ export function toMass(state: State, change: MassChange): State | Refusal {
   }
   const withConstant = !isZeroExact(series.additive);
   if (withConstant && firstPower < 0) {
-    return refuse(`${series.id} has both a constant and negative powers of the coupling`, 'write the constant as a coefficient');
+    return refuse(
+      `${series.id} has both a constant and negative powers of the coupling`,
+      'write the constant as a coefficient',
+    );
   }
   const first = withConstant ? Math.min(1, firstPower) : firstPower;
   const last = firstPower + coefficients.length - 1;
@@ -126,7 +129,9 @@ export function toMass(state: State, change: MassChange): State | Refusal {
 function massSingularities(state: State, from: MassDefinition, to: MassDefinition): State['singularities'] {
   const bare = barePositions(state);
   const half = Rational.of(1, 2);
-  const others = bare.filter((s) => !(s.u?.rational?.equals(half) === true || s.dimension?.equals(Rational.ONE) === true));
+  const others = bare.filter(
+    (s) => !(s.u?.rational?.equals(half) === true || s.dimension?.equals(Rational.ONE) === true),
+  );
   if (from === 'pole') return others;
   return to === 'pole' ? [{ dimension: Rational.ONE, kind: 'infrared' }, ...others] : bare;
 }

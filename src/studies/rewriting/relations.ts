@@ -35,11 +35,7 @@ const C_SCHEME_TERMS = 5;
 /** x in powers of the C-scheme coupling. */
 function cRelation(c: Rational, { flavours, divisor }: Place): Tracked[] {
   const n = C_SCHEME_TERMS;
-  const inputs = [
-    trackedRational(c),
-    ...trackedBeta(flavours, divisor, n),
-    ...trackedCBeta(flavours, divisor, n),
-  ];
+  const inputs = [trackedRational(c), ...trackedBeta(flavours, divisor, n), ...trackedCBeta(flavours, divisor, n)];
   return derive(
     inputs,
     (ring, [shift, ...b]) => {

@@ -40,10 +40,7 @@ export async function trackedCoefficients(series: Series, name: string, sources:
 }
 
 /** The state before the first step; a refusal for a series that does not say what it is. */
-export async function openState(
-  series: Series,
-  mass: State['mass'],
-): Promise<State | Refusal> {
+export async function openState(series: Series, mass: State['mass']): Promise<State | Refusal> {
   const scheme = couplingScheme(series);
   if (isRefusal(scheme)) return scheme;
   const flavours = flavoursOf(series);
