@@ -23,6 +23,17 @@ export interface StatedSingularity {
   readonly origin: 'file' | 'operator product expansion' | 'terms';
 }
 
+/** How the expansion variable runs, and where it stands: what scale setting needs. */
+export interface Running {
+  /** b_k of dx/d ln μ² = −Σ b_k x^(k+2), as many as are known. */
+  readonly beta: readonly Exact[];
+  /** μ/Q of x and of the coefficients. */
+  readonly scaleRatio: Exact;
+  readonly flavours?: number;
+  /** Entry [n][k] multiplies n_f^k in the coefficient c_n; present when the series is known for any n_f. */
+  readonly flavourPolynomials?: readonly (readonly Exact[])[];
+}
+
 export interface Expansion {
   readonly x: Exact;
   readonly power: number;
@@ -33,4 +44,6 @@ export interface Expansion {
   readonly relativeErrors: readonly number[];
   /** Known beforehand, nearest first. */
   readonly stated: readonly StatedSingularity[];
+  /** Absent for a variable that does not run. */
+  readonly running?: Running;
 }

@@ -1,10 +1,10 @@
 /**
  * @module From a Series and a coupling to an Expansion: where the bookkeeping of files ends and numerics begins.
  */
-import type { Expansion, Series, StatedSingularity, Uncertain } from '../series/index.js';
+import type { Expansion, KnownSingularity, Running, Series, StatedSingularity, Uncertain } from '../series/index.js';
 import { addExact, divExact, exact, isZeroExact, R, Rational, signExact, subExact, toNumberExact } from '../numerics/index.js';
 import type { Exact } from '../numerics/index.js';
-import { divisorSize, expectedSingularity, uPerT } from '../qcd/index.js';
+import { betaCoefficients, divisorSize, expectedSingularity, uPerT } from '../qcd/index.js';
 import type { GrowthInput, GrowthTerm } from '../growth/index.js';
 
 export interface Expanded {
@@ -41,6 +41,7 @@ export function expand(series: Series, at: Exact, order?: number): Expanded {
     coefficients,
     relativeErrors,
     stated,
+    ...(series.coupling.plain || series.flavours === undefined ? {} : { running: runningOf(series, series.flavours) }),
   };
   const growthInput: GrowthInput = {
     terms: coefficients.map((c, n) => growthTerm(c, relativeErrors[n]!, kept[n + leadingZeros]!.status === 'estimated')),
@@ -56,6 +57,15 @@ export function expand(series: Series, at: Exact, order?: number): Expanded {
     leadingZeros,
     errors: kept.slice(leadingZeros).map(quotedError),
     growthInput,
+  };
+}
+
+/** The β function in the series' own variable, and the scale it stands at. */
+function runningOf(series: Series, flavours: number): Running {
+  return {
+    beta: betaCoefficients(flavours, series.coupling.divisor),
+    scaleRatio: series.scaleRatio ?? exact(1),
+    flavours,
   };
 }
 
@@ -96,7 +106,7 @@ function statedSingularities(series: Series, leadingZeros: number, scale: Exact 
     const u = s.u ?? (s.dimension === undefined ? undefined : exact(s.dimension.div(TWO)));
     const t = s.t ?? (u !== undefined && scale !== undefined ? divExact(u, scale) : undefined);
     if (t === undefined || signExact(t) === 0) continue;
-    const expected = s.exponent === undefined ? expectation(series, u, s.anomalousDimension) : undefined;
+    const expected = s.exponent === undefined ? expectation(series, u, s) : undefined;
     // A stated exponent refers to c_n with n counted from the file's first coefficient.
     const exponent = s.exponent !== undefined ? addExact(s.exponent, exact(leadingZeros)) : expected && addExact(expected.exponent, exact(shift));
     const dimension = s.dimension !== undefined ? exact(s.dimension) : u !== undefined && signExact(u) > 0 ? addExact(u, u) : undefined;
@@ -113,7 +123,7 @@ function statedSingularities(series: Series, leadingZeros: number, scale: Exact 
   }
   for (const c of series.condensates) {
     if (scale === undefined || list.some((s) => s.dimension !== undefined && isZeroExact(subExact(s.dimension, exact(c.dimension))))) continue;
-    const expected = expectation(series, exact(c.dimension.div(TWO)), undefined);
+    const expected = expectation(series, exact(c.dimension.div(TWO)), {});
     if (expected === undefined) continue;
     list.push({
       t: expected.t,
@@ -128,13 +138,22 @@ function statedSingularities(series: Series, leadingZeros: number, scale: Exact 
   return list.sort((a, b) => Math.abs(toNumberExact(a.t)) - Math.abs(toNumberExact(b.t)));
 }
 
-/** Expected exponent for an infrared singularity at u > 0; ultraviolet ones need operators this room does not know. */
-function expectation(series: Series, u: Exact | undefined, anomalous: Exact | undefined): ReturnType<typeof expectedSingularity> | undefined {
-  if (u?.rational === undefined || u.rational.sign() <= 0 || series.flavours === undefined || series.coupling.plain) return undefined;
+/**
+ * Expected exponent and corrections: of an infrared singularity from its dimension; of an ultraviolet one only where the
+ * file states the anomalous term, since that needs operators which no rule in n_f alone fixes.
+ */
+function expectation(
+  series: Series,
+  u: Exact | undefined,
+  stated: Pick<KnownSingularity, 'anomalousDimension' | 'wilsonCorrections'>,
+): ReturnType<typeof expectedSingularity> | undefined {
+  if (u?.rational === undefined || series.flavours === undefined || series.coupling.plain) return undefined;
+  if (u.rational.sign() < 0 && stated.anomalousDimension === undefined) return undefined;
   return expectedSingularity({
     flavours: series.flavours,
     dimension: u.rational.add(u.rational),
     divisor: series.coupling.divisor,
-    ...(anomalous === undefined ? {} : { anomalousDimension: anomalous }),
+    ...(stated.anomalousDimension === undefined ? {} : { anomalousDimension: stated.anomalousDimension }),
+    ...(stated.wilsonCorrections === undefined ? {} : { wilson: { corrections: stated.wilsonCorrections } }),
   });
 }
