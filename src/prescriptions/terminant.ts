@@ -89,7 +89,8 @@ export const terminantSum: Prescription = {
         kind: 'sum',
         variant: `${n} terms`,
         value: best.value,
-        imaginary: best.im,
+        // An ultraviolet leader says nothing about the ambiguity: the infrared singularities behind it still have one.
+        ...(R.isExactZero(best.im) ? {} : { imaginary: best.im }),
         ...(truncation === undefined ? {} : { truncation }),
         termsUsed: Math.min(N, n + 1),
         trust: 'indicative',

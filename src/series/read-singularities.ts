@@ -1,11 +1,12 @@
 /** @module Borel singularities that are known beforehand. */
 import { signExact } from '../numerics/index.js';
+import type { Exact } from '../numerics/index.js';
 import type { Entry } from './entry.js';
 import type { FieldReader, Group } from './field-reader.js';
 import type { Coupling, KnownSingularity, SingularityKind } from './series.js';
 import type { Written } from './written.js';
 
-const FIELDS = ['u', 't', 'dimension', 'exponent', 'anomalous dimension', 'strength', 'kind'];
+const FIELDS = ['u', 't', 'dimension', 'exponent', 'anomalous dimension', 'wilson corrections', 'strength', 'kind'];
 const KINDS: readonly SingularityKind[] = ['infrared', 'ultraviolet', 'other'];
 
 export function readSingularities(
@@ -47,6 +48,7 @@ function singularity(
   );
   const exponent = reader.exact(group.get('exponent'), `${field}.exponent`);
   const anomalousDimension = reader.exact(group.get('anomalous dimension'), `${field}.anomalous dimension`);
+  const wilsonCorrections = corrections(group.get('wilson corrections'), `${field}.wilson corrections`, reader);
   const strength = reader.uncertain(group.get('strength'), `${field}.strength`);
   const position = u ?? t ?? dimension;
   if (position === undefined) return undefined;
@@ -56,11 +58,20 @@ function singularity(
     ...(dimension && { dimension }),
     ...(exponent && { exponent }),
     ...(anomalousDimension && { anomalousDimension }),
+    ...(wilsonCorrections && { wilsonCorrections }),
     ...(strength && {
       strength: { value: strength.value, ...(strength.error && { error: strength.error }), text: strength.text },
     }),
     kind: kind(group, field, u ?? t, coupling, reader),
   };
+}
+
+/** C_1, C_2, … of the coefficient function; a wrong entry is complained about and drops the list. */
+function corrections(entry: Entry | undefined, field: string, reader: FieldReader): readonly Exact[] | undefined {
+  if (entry === undefined) return undefined;
+  const items = reader.list(entry, field, 'numbers');
+  const values = items?.map((item, i) => reader.exact(item, `${field}[${i}]`));
+  return values?.every((v) => v !== undefined) ? values : undefined;
 }
 
 /** Stated, or else from the side of the axis: infrared on the positive one, ultraviolet on the negative one. */

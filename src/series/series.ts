@@ -42,6 +42,8 @@ export interface KnownSingularity {
   readonly exponent?: Exact;
   /** One-loop anomalous dimension term subtracted from the exponent that follows from the dimension. */
   readonly anomalousDimension?: Exact;
+  /** C_1, C_2, … of the operator's coefficient function C_0 (1 + C_1 x + C_2 x² + …), x the series' own variable. */
+  readonly wilsonCorrections?: readonly Exact[];
   readonly strength?: Uncertain;
   readonly kind: SingularityKind;
 }

@@ -4,8 +4,9 @@
 import type { Expansion, KnownSingularity, Running, Series, StatedSingularity, Uncertain } from '../series/index.js';
 import { addExact, divExact, exact, isZeroExact, R, Rational, signExact, subExact, toNumberExact } from '../numerics/index.js';
 import type { Exact } from '../numerics/index.js';
-import { betaCoefficients, divisorSize, expectedSingularity, uPerT } from '../qcd/index.js';
+import { betaCoefficients, divisorSize, expectedSingularity, isRefusal, uPerT } from '../qcd/index.js';
 import type { GrowthInput, GrowthTerm } from '../growth/index.js';
+import { couplingScheme, knownLoops, massDefinition } from './scheme.js';
 
 export interface Expanded {
   readonly expansion: Expansion;
@@ -41,7 +42,7 @@ export function expand(series: Series, at: Exact, order?: number): Expanded {
     coefficients,
     relativeErrors,
     stated,
-    ...(series.coupling.plain || series.flavours === undefined ? {} : { running: runningOf(series, series.flavours) }),
+    ...runningOf(series),
   };
   const growthInput: GrowthInput = {
     terms: coefficients.map((c, n) => growthTerm(c, relativeErrors[n]!, kept[n + leadingZeros]!.status === 'estimated')),
@@ -50,6 +51,8 @@ export function expand(series: Series, at: Exact, order?: number): Expanded {
       ...(s.exponent === undefined ? {} : { exponent: toNumberExact(s.exponent) }),
       kind: s.kind,
     })),
+    exact: coefficients,
+    leadingZeros,
   };
   return {
     expansion,
@@ -60,13 +63,17 @@ export function expand(series: Series, at: Exact, order?: number): Expanded {
   };
 }
 
-/** The β function in the series' own variable, and the scale it stands at. */
-function runningOf(series: Series, flavours: number): Running {
-  return {
-    beta: betaCoefficients(flavours, series.coupling.divisor),
-    scaleRatio: series.scaleRatio ?? exact(1),
-    flavours,
-  };
+/**
+ * The β function in the series' own variable, and the scale it stands at: where the file names MSbar (or a toy world of few
+ * loops). A quantity in units of a running mass has a second source of scale dependence and is left without.
+ */
+function runningOf(series: Series): { running?: Running } {
+  const scheme = couplingScheme(series);
+  const { flavours } = series;
+  if (flavours === undefined || isRefusal(scheme) || massDefinition(series) === 'running') return {};
+  if (scheme.kind !== 'MSbar' && scheme.kind !== 'toy') return {};
+  const beta = betaCoefficients(flavours, series.coupling.divisor).slice(0, knownLoops(scheme));
+  return { running: { beta, scaleRatio: series.scaleRatio ?? exact(1), flavours } };
 }
 
 function quotedError(c: Uncertain): number {

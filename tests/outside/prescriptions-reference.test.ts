@@ -14,6 +14,7 @@ import { exact, Rational, toNumberExact } from '../../src/numerics/index.js';
 import { modelSum } from '../../src/borel/index.js';
 import { expectedSingularity } from '../../src/qcd/index.js';
 import { pi as piBall, R } from '../../src/numerics/index.js';
+import { loadSeries } from '../../src/series/index.js';
 import type { Series } from '../../src/series/index.js';
 import { near } from '../support/near.js';
 
@@ -37,7 +38,12 @@ function series(coefficients: readonly string[], flavours: number, divisor: Seri
   };
 }
 
-const ADLER = series(['1', '1.6398', '6.3710', '49.0757', '283'], 3, 'pi');
+// Exact coefficients of the catalogue, evaluated to 40 digits, and c_5 = 283.
+const ADLER = await (async (): Promise<Series> => {
+  const adler = await loadSeries('adler');
+  const base = series(['283'], 3, 'pi');
+  return { ...base, coefficients: [...adler.coefficients, ...base.coefficients] };
+})();
 const POLE = ['0.424413181578387562050356702326704965', '0.940037677596881375902024883767211088', '3.03856207140654574339725302220426627', '12.6475494086811788301097899299705359'];
 
 function run(p: Prescription, s: Series, alpha: string): Sum[] {
@@ -86,11 +92,10 @@ describe('singularity model of M. Beneke and M. Jamin, arXiv:0806.3156', () => {
     expect([uv, gluon, six].map((s) => Number(toNumberExact(s.exponent).toFixed(4)))).toEqual([1.2099, 2.5802, 3.3704]);
   });
   it('principal value and imaginary part of the Adler function at α = 0.34', () => {
-    const x = R.div(R.fromRational(q('0.34'), 300), R.fromNumber(1), 300);
-    const a = R.div(x, piBall(300), 300);
+    const a = R.div(R.fromRational(q('0.34'), 300), piBall(300), 300);
     const m = modelSum(c, [two(uv), two(gluon), two(six)], a, 300)!;
-    near.expect(near.text(m.pv), '0.149176455260157611718585947842644400', 20);
-    near.expect(near.text(m.im), '0.0171402481984437832670995925659059414', 18);
+    near.expect(near.text(R.mul(m.pv, a, 300)), '0.149176455260157611718585947842644400', 20);
+    near.expect(near.text(R.mul(m.im, a, 300)), '0.0171402481984437832670995925659059414', 18);
   });
 });
 
