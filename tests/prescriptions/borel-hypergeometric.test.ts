@@ -14,7 +14,7 @@ import {
   readBench,
   refused,
   rescaled,
-} from '../support/bench.js';
+} from '../support/expansions.js';
 import { expectNear, rational } from '../support/check-value.js';
 
 describe('exact on its own class: six coefficients give every digit asked for', () => {

@@ -18,7 +18,7 @@ import {
   readBench,
   refused,
   rescaled,
-} from '../support/bench.js';
+} from '../support/expansions.js';
 import { expectNear, rational } from '../support/check-value.js';
 import type { StatedSingularity } from '../../src/series/index.js';
 

@@ -10,7 +10,7 @@ import { orderDependentMap } from '../../src/prescriptions/order-dependent-map.j
 import { mapScale } from '../../src/sequences/index.js';
 import type { StrongCoupling } from '../../src/sequences/index.js';
 import type { Expansion } from '../../src/series/index.js';
-import { benchExpansion, expansion, growthOf, readBench, refused, rescaled } from '../support/bench.js';
+import { benchExpansion, expansion, growthOf, readBench, refused, rescaled } from '../support/expansions.js';
 import { expectNear } from '../support/check-value.js';
 
 const OSCILLATOR: StrongCoupling = { power: Rational.of(1, 3), spacing: Rational.of(2, 3) };

@@ -20,7 +20,7 @@ import {
   readBench,
   refused,
   rescaled,
-} from '../support/bench.js';
+} from '../support/expansions.js';
 import { expectNear, rational } from '../support/check-value.js';
 
 const q = (s: string): Exact => exact(rational(s));

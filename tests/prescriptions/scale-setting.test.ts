@@ -16,7 +16,7 @@ import { pms } from '../../src/prescriptions/pms.js';
 import type { Outcome, Prescription, Sum } from '../../src/prescriptions/index.js';
 import { betaCoefficients } from '../../src/qcd/index.js';
 import type { Expansion, Running } from '../../src/series/index.js';
-import { central, expansion, growthOf, outcomes, refused, rescaled } from '../support/bench.js';
+import { central, expansion, growthOf, outcomes, refused, rescaled } from '../support/expansions.js';
 import { expectNear, rational } from '../support/check-value.js';
 
 const q = (s: string): Exact => exact(rational(s));

@@ -16,7 +16,7 @@ import {
   readBench,
   refused,
   rescaled,
-} from '../support/bench.js';
+} from '../support/expansions.js';
 import { expectNear } from '../support/check-value.js';
 
 const ALL = [wynnEpsilon, levin, wenigerDelta];
