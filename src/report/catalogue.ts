@@ -1,5 +1,5 @@
 /** @module The catalogue for people, and one series of it: what its file says, nothing evaluated. */
-import { toNumberExact } from '../numerics/index.js';
+import { parseDecimal, shorten, toDecimal } from '../numerics/index.js';
 import { textOf } from '../series/index.js';
 import type { CatalogueEntry, Series, Uncertain } from '../series/index.js';
 import type { Fact } from './layout/page.js';
@@ -45,8 +45,24 @@ export function catalogueText(entries: readonly CatalogueEntry[], options: Termi
   return page.text();
 }
 
-/** The number as the file writes it, or its decimal value and error. */
-const written = (n: Uncertain): string => n.text;
+/** Working precision for a handful of decimals. */
+const BITS = 128;
+
+/** The value in decimals: as the file writes it where it does, evaluated where it is an expression. */
+function valueText({ value, text }: Uncertain, digits: number): string {
+  return shorten(parseDecimal(text) === undefined ? toDecimal(value.ball(BITS), digits).text : text, digits);
+}
+
+/** Longest run of digits that is written out; --json and --quiet have all. */
+const LONG_FRACTION = 60;
+
+/** The text of the file, with the middle of a giant fraction left out. */
+function writtenText(text: string): string {
+  const parts = /^(-?)(\d+)\/(\d+)$/.exec(text);
+  if (parts === null || text.length <= LONG_FRACTION) return text;
+  const [, sign = '', top = '', bottom = ''] = parts;
+  return `a fraction: ${sign}${top.slice(0, 6)}… over ${bottom.slice(0, 6)}…, ${top.length} and ${bottom.length} digits`;
+}
 
 function facts(series: Series): Fact[] {
   const list: Fact[] = [
@@ -104,9 +120,9 @@ export function seriesText(series: Series, options: TerminalOptions = {}): strin
     series.coefficients.map((c, n) => ({
       cells: [
         String(n + series.firstPower),
-        String(Number(toNumberExact(c.value).toPrecision(page.digits))),
+        valueText(c, page.digits),
         c.status === 'estimated' ? 'estimated' : '',
-        written(c),
+        writtenText(c.text),
       ],
     })),
   );

@@ -18,7 +18,7 @@ export function prescriptionTitle(name: string): string {
 
 /** A statement as a sentence: a capital letter in front where a word begins it, a full stop behind. */
 export function sentence(text: string): string {
-  const begun = /^[a-z]{2,}(?=[\s,:-])/.test(text) ? text.slice(0, 1).toUpperCase() + text.slice(1) : text;
+  const begun = /^(a(?= [^=])|[a-z]{2,}(?=[\s,:-]))/.test(text) ? text.slice(0, 1).toUpperCase() + text.slice(1) : text;
   return /[.!?:]$/.test(begun) || begun === '' ? begun : `${begun}.`;
 }
 

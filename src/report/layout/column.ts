@@ -21,9 +21,12 @@ export interface SetColumn {
 /** Words are not folded into less than this, nor torn. A habit of typography. */
 const NARROWEST = 8;
 
+/** Longer words than this are torn when the page is narrow. A habit of typography. */
+const LONGEST_WHOLE = 24;
+
 /** The longest piece that folding leaves whole. */
 const longestWord = (texts: readonly string[]): number =>
-  Math.max(0, ...texts.flatMap((text) => fold(text, 1_000_000)[0]?.split(' ') ?? []).map(width));
+  Math.min(LONGEST_WHOLE, Math.max(0, ...texts.flatMap((text) => text.split(/[ \u00a0]+/)).map(width)));
 
 const NUMBER = /^[±+-]?\s?\d/;
 

@@ -30,12 +30,14 @@ export function withError(value: string, error: string | undefined, digits: numb
   return writeParentheses(rounded) ?? `${shorten(value, digits)} ± ${rough(error)}`;
 }
 
-/** A complex number, or a pair of conjugates where `pair` is set. A real one when `im` is absent. */
-export function complex(re: string, im: string | undefined, digits: number, pair: boolean): string {
+/**
+ * A real number, or a pair of complex conjugates: "0.72 ± 0.08i", and "0.33 ∓ 0.02i" where the part of the upper member is
+ * negative.
+ */
+export function conjugates(re: string, im: string | undefined, digits: number): string {
   const real = shorten(re, digits);
   if (im === undefined) return real;
-  const size = shorten(im.replace(/^[+-]/, ''), digits);
-  return `${real} ${pair ? '±' : im.startsWith('-') ? '-' : '+'} ${size}i`;
+  return `${real} ${im.startsWith('-') ? '∓' : '±'} ${shorten(im.replace(/^[+-]/, ''), digits)}i`;
 }
 
 /** A ratio near 1 or below as per cent: "3.1 %". */

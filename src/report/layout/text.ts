@@ -98,7 +98,9 @@ function* pieces(word: string, columns: number): Generator<string> {
 export function fold(text: string, columns: number): string[] {
   const lines: string[] = [];
   let line = '';
-  for (const word of printable(text).trim().replace(HELD, HOLD).split(/ +/)) {
+  const words = printable(text).trim().replace(HELD, HOLD).split(/ +/);
+  // What is held together is let go before a word is torn.
+  for (const word of words.flatMap((held) => (width(held) > columns ? held.split(HOLD) : [held]))) {
     for (const piece of pieces(word, Math.max(1, columns))) {
       if (line === '') line = piece;
       else if (width(line) + 1 + width(piece) <= columns) line += ` ${piece}`;

@@ -1,7 +1,7 @@
 /** @module Section 4: what the Padé approximants see in the Borel plane. */
 import type { BorelPlaneReport, PadeEntry, PoleReport } from '../../studies/index.js';
 import { parseDecimal } from '../../numerics/index.js';
-import { complex } from '../layout/figures.js';
+import { conjugates } from '../layout/figures.js';
 import type { Page } from '../layout/page.js';
 import type { TableNote, TableRow } from '../layout/table.js';
 import { sentence } from '../words.js';
@@ -20,24 +20,20 @@ function isLowerTwin(pole: PoleReport, all: readonly PoleReport[]): boolean {
   return all.some((other) => other.re === pole.re && other.im === im.slice(1));
 }
 
-const hasTwin = (pole: PoleReport, all: readonly PoleReport[]): boolean =>
-  pole.im !== undefined && all.some((other) => other.re === pole.re && other.im === `-${pole.im}`);
-
 function modulus({ re, im = '0' }: PoleReport): number {
   return Math.hypot(Number(re), Number(im));
 }
 
-function poleRow(pole: PoleReport, all: readonly PoleReport[], name: string, digits: number): TableRow {
-  const pair = hasTwin(pole, all);
+function poleRow(pole: PoleReport, name: string, digits: number): TableRow {
   const remarks = [
     pole.multiplicity > 1 ? `multiplicity ${pole.multiplicity}` : '',
     pole.note === undefined ? '' : REMARKS[pole.note],
   ].filter((text) => text !== '');
   const cells = [
     name,
-    complex(pole.re, pole.im, digits, pair),
-    pole.u === undefined ? '' : complex(pole.u.re, pole.u.im, digits, pair),
-    pole.amplitude === undefined ? '' : complex(pole.amplitude.re, pole.amplitude.im, digits, pair),
+    conjugates(pole.re, pole.im, digits),
+    pole.u === undefined ? '' : conjugates(pole.u.re, pole.u.im, digits),
+    pole.amplitude === undefined ? '' : conjugates(pole.amplitude.re, pole.amplitude.im, digits),
     remarks.join(', '),
   ];
   return pole.note === 'doublet' ? { cells, tone: 'faint' } : { cells };
@@ -61,7 +57,7 @@ function entryRows(entry: PadeEntry, digits: number): (TableRow | TableNote)[] {
   const drawn = entry.poles.filter((pole) => !isLowerTwin(pole, entry.poles)).sort((a, b) => modulus(a) - modulus(b));
   const rows: (TableRow | TableNote)[] = drawn
     .slice(0, POLES_SHOWN)
-    .map((pole, i) => poleRow(pole, entry.poles, i === 0 ? named(entry) : '', digits));
+    .map((pole, i) => poleRow(pole, i === 0 ? named(entry) : '', digits));
   const rest = drawn.length - POLES_SHOWN;
   const tail = [facts, rest > 0 ? `${rest} more, farther out` : ''].filter((text) => text !== '').join('; ');
   if (rows.length === 0) rows.push({ cells: [named(entry), 'no poles', '', '', ''] });
