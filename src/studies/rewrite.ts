@@ -2,8 +2,7 @@
  * @module rewrite: a series at another scale, in another coupling, with other flavours in the coupling, in another mass.
  * The result is a series that says where it came from; exact where the input is exact, errors and correlations carried.
  */
-import { Rational } from '../numerics/index.js';
-import type { Exact } from '../numerics/index.js';
+import type { Exact, Rational } from '../numerics/index.js';
 import { DEFAULT_THRESHOLDS, isRefusal, refuse } from '../qcd/index.js';
 import type { MassDefinition, Refusal, Threshold } from '../qcd/index.js';
 import { textOf } from '../series/index.js';
@@ -100,16 +99,7 @@ function roundingNote(series: Series): string[] {
 /** The series at the end of the way. */
 function closed(state: State, request: RewriteRequest): Series {
   const { series } = state;
-  const {
-    constants: _constants,
-    checks: _checks,
-    anyFlavours: _any,
-    flavourChoices: _choices,
-    correlation: _correlation,
-    measurement,
-    scaleRatio: _ratio,
-    ...rest
-  } = series;
+  const { correlation: _correlation, measurement, scaleRatio: _ratio, ...rest } = series;
   const { coefficients, correlation } = writtenList(state.coefficients, state.sources);
   const where = `Rewritten by leastterm ${VERSION} from ${series.id}.`;
   const notes = [...series.notes, where, ...state.notes, ...roundingNote(series)];
@@ -117,7 +107,7 @@ function closed(state: State, request: RewriteRequest): Series {
     ...rest,
     title: titleOf(series, state, request),
     notes: notes.filter((note, i) => notes.indexOf(note) === i),
-    scheme: schemeWords(series, state.scheme, state.mass),
+    scheme: schemeWords(state.scheme, state.mass),
     flavours: state.flavours,
     ...(state.scaleRatio === undefined ? {} : { scaleRatio: state.scaleRatio }),
     firstPower: state.firstPower,

@@ -96,10 +96,11 @@ export const MASS_WORDS: Readonly<Record<MassDefinition, string>> = {
 export const massDefinition = (series: Series): MassDefinition | undefined =>
   MASSES.find(([pattern]) => pattern.test(series.scheme ?? ''))?.[1];
 
-/** The file's words after a change of the coupling: the words about a mass stay. */
-export function schemeWords(series: Series, scheme: CouplingScheme, mass = massDefinition(series)): string {
-  const coupling = scheme.kind === 'MSbar' && mass !== undefined ? 'MSbar coupling' : schemeText(scheme);
-  return mass === undefined ? coupling : `${coupling}; ${MASS_WORDS[mass]}`;
+/** The file's words for a coupling and the mass, if any, that stands in front. */
+export function schemeWords(scheme: CouplingScheme, mass: MassDefinition | undefined): string {
+  if (mass === undefined) return schemeText(scheme);
+  const coupling = scheme.kind === 'MSbar' ? 'MSbar coupling' : schemeText(scheme);
+  return `${coupling}; ${MASS_WORDS[mass]}`;
 }
 
 /** Number of flavours; a refusal when the file does not say. */

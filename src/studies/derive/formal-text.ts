@@ -51,7 +51,7 @@ function termsOf(a: Formal): Term[] {
       const degree = list.reduce((sum, [, k]) => sum + Math.abs(k), 0);
       return { factor, above: product(above), below: below.map((p) => `/${product([p])}`).join(''), degree };
     })
-    .toSorted((a, b) => a.degree - b.degree || (a.above + a.below < b.above + b.below ? -1 : 1));
+    .toSorted((s, t) => s.degree - t.degree || (s.above + s.below < t.above + t.below ? -1 : 1));
 }
 
 /** The sum of its terms, lowest first; reads back to the same number. */

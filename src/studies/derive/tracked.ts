@@ -3,8 +3,8 @@
  * Method  one formula, three rings: enclosures for the value, polynomials in π, ζ(3), log(2) for the closed form, doubles
  *         with derivatives for the errors.
  */
-import { R, Rational, exact, toNumberExact } from '../../numerics/index.js';
-import type { Exact } from '../../numerics/index.js';
+import { R, exact, toNumberExact } from '../../numerics/index.js';
+import type { Exact, Rational } from '../../numerics/index.js';
 import { formalRational, formalRing, liftExact, rationalOfFormal } from '../../qcd/index.js';
 import type { Formal, RingFormula } from '../../qcd/index.js';
 import { dualRing } from './dual.js';

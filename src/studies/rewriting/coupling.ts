@@ -39,7 +39,11 @@ function lambdaFactor(state: State, oldInNew: readonly Tracked[]) {
   return exactReal((prec) => exp(exponent.ball(prec + 16), prec + 8));
 }
 
-async function oldInNew(state: State, scheme: CouplingScheme, find: FindSeries): Promise<readonly Tracked[] | Refusal> {
+async function relationTo(
+  state: State,
+  scheme: CouplingScheme,
+  find: FindSeries,
+): Promise<readonly Tracked[] | Refusal> {
   const { scheme: old, coefficients } = state;
   if (old.kind === 'C' && scheme.kind === 'C') return cToC(old.c, scheme.c, state, coefficients.length);
   const direction = scheme.kind === 'MSbar' ? 'new in MSbar' : 'MSbar in new';
@@ -56,7 +60,7 @@ export async function toCoupling(state: State, scheme: CouplingScheme, find: Fin
     const middle = await toCoupling(state, { kind: 'MSbar' }, find);
     return isRefusal(middle) ? middle : toCoupling(middle, scheme, find);
   }
-  const relation = await oldInNew(state, scheme, find);
+  const relation = await relationTo(state, scheme, find);
   if (isRefusal(relation)) return relation;
   const coefficients = substituted(state, relation);
   return {

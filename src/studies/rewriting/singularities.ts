@@ -43,13 +43,20 @@ export interface Move {
   readonly factor: Exact;
 }
 
-/** Strengths after a change of scale or coupling; everything else stays. */
+/** The first correction to the operator's coefficient stays when the operator has no anomalous dimension. */
+function corrections(s: KnownSingularity): Pick<KnownSingularity, 'wilsonCorrections'> {
+  const [first] = s.wilsonCorrections ?? [];
+  return first === undefined || s.anomalousDimension !== undefined ? {} : { wilsonCorrections: [first] };
+}
+
+/** Strengths after a change of scale or coupling; positions and exponents stay. */
 export function movedSingularities(state: State, { factor }: Move): KnownSingularity[] {
+  if (factor.rational?.equals(Rational.ONE) === true) return [...state.singularities];
   return state.singularities.map((s) => {
-    if (s.strength === undefined) return s;
-    const u = positionOf(s, state.flavours, state.divisor);
-    const { strength, ...rest } = s;
-    return u === undefined ? rest : { ...rest, strength: scaled(strength, power(factor, u)) };
+    const { strength, wilsonCorrections: _wilson, ...rest } = s;
+    const u = strength && positionOf(s, state.flavours, state.divisor);
+    const moved = strength === undefined || u === undefined ? {} : { strength: scaled(strength, power(factor, u)) };
+    return { ...rest, ...corrections(s), ...moved };
   });
 }
 

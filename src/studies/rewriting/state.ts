@@ -3,6 +3,7 @@ import type { Exact } from '../../numerics/index.js';
 import { isRefusal } from '../../qcd/index.js';
 import type { CouplingDivisor, Refusal } from '../../qcd/index.js';
 import type { KnownSingularity, Series } from '../../series/index.js';
+import { freestanding } from '../derive/freestanding.js';
 import { FormalReader } from '../derive/read-formal.js';
 import { Sources } from '../derive/sources.js';
 import { trackedExact } from '../derive/tracked.js';
@@ -46,8 +47,9 @@ export async function openState(series: Series, mass: State['mass']): Promise<St
   const flavours = flavoursOf(series);
   if (isRefusal(flavours)) return flavours;
   const sources = new Sources();
+  const bare = await freestanding(series);
   return {
-    series,
+    series: bare,
     scheme,
     flavours,
     divisor: series.coupling.divisor,
@@ -55,7 +57,7 @@ export async function openState(series: Series, mass: State['mass']): Promise<St
     firstPower: series.firstPower,
     coefficients: await trackedCoefficients(series, series.id, sources),
     sources,
-    singularities: series.singularities,
+    singularities: bare.singularities,
     mass,
     notes: [],
     otherQuantity: false,
