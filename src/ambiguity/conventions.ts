@@ -35,7 +35,10 @@ export interface LateralSource {
  * could still grow) or when there is no non-zero term.
  * @param terms terms T_0 … T_{N−1}; @param sums partial sums through each of them.
  */
-export function nearLeastHalfRange(terms: readonly number[], sums: readonly number[]): { value: number; first: number; last: number } | undefined {
+export function nearLeastHalfRange(
+  terms: readonly number[],
+  sums: readonly number[],
+): { value: number; first: number; last: number } | undefined {
   const sizes = terms.map(Math.abs);
   const least = Math.min(...sizes.filter((s) => s > 0));
   if (!Number.isFinite(least)) return undefined;
@@ -56,13 +59,21 @@ export function conventions(
 ): Convention[] {
   const list: Convention[] = [];
   if (lateral !== undefined) {
-    list.push({ name: '|Im|', value: lateral.im, origin: `half the difference of the lateral sums of ${lateral.origin}` });
+    list.push({
+      name: '|Im|',
+      value: lateral.im,
+      origin: `half the difference of the lateral sums of ${lateral.origin}`,
+    });
     list.push({ name: '|Im|/pi', value: lateral.im / Math.PI, origin: `the same, divided by pi` });
   }
   if (leastReached) {
     const sizes = terms.map(Math.abs);
     const least = Math.min(...sizes.filter((s) => s > 0));
-    list.push({ name: 'least term', value: least, origin: `size of the term of order ${powers[sizes.indexOf(least)]}` });
+    list.push({
+      name: 'least term',
+      value: least,
+      origin: `size of the term of order ${powers[sizes.indexOf(least)]}`,
+    });
     const near = nearLeastHalfRange(terms, sums);
     if (near !== undefined && near.last > near.first)
       list.push({

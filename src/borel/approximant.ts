@@ -10,8 +10,8 @@
  * Bound      positions and amplitudes are enclosures; roles are heuristics.
  * Reference  M. Froissart, CNRS RCP 25 (1969) (from memory); J. Gilewicz, B. Truong-Van (1988) (from memory).
  */
-import { C, certifiedRoots, padePoles, R, Rational } from '../numerics/index.js';
-import type { Ball, Complex, Exact } from '../numerics/index.js';
+import { C, certifiedRoots, padePoles, R } from '../numerics/index.js';
+import type { Ball, Complex, Exact, Rational } from '../numerics/index.js';
 import type { PolePart } from './laplace.js';
 import { borelTransform } from './transform.js';
 
@@ -44,19 +44,45 @@ export interface Approximant {
 }
 
 /** [L/M] of the Borel–Leroy transform with parameter b. @param noise relative one-sigma noise of the coefficients, 0 when exact. */
-export function approximate(c: readonly Exact[], b: Rational, L: number, M: number, prec: number, noise: number): Approximant {
+export function approximate(
+  c: readonly Exact[],
+  b: Rational,
+  L: number,
+  M: number,
+  prec: number,
+  noise: number,
+): Approximant {
   return approximateTransformed(borelTransform(c.slice(0, L + M + 1), b), L, M, prec, noise);
 }
 
 /** [L/M] of an already transformed coefficient list. */
-export function approximateTransformed(b: readonly Exact[], L: number, M: number, prec: number, noise: number): Approximant {
+export function approximateTransformed(
+  b: readonly Exact[],
+  L: number,
+  M: number,
+  prec: number,
+  noise: number,
+): Approximant {
   const label = `[${L}/${M}]`;
   const found = padePoles(b, L, M, prec);
   if (found.exists !== true)
-    return { label, exists: found.exists, reason: found.reason, deficiency: 0, polynomialPart: [], poles: [], positiveRealPoles: 0 };
+    return {
+      label,
+      exists: found.exists,
+      reason: found.reason,
+      deficiency: 0,
+      polynomialPart: [],
+      poles: [],
+      positiveRealPoles: 0,
+    };
   const poles = found.poles
     .filter((p) => p.real || !R.isNegative(p.position.im))
-    .map((p) => ({ z: p.position, real: p.real, multiplicity: p.multiplicity, amplitudes: amplitudes(p.position, p.principal, prec) }));
+    .map((p) => ({
+      z: p.position,
+      real: p.real,
+      multiplicity: p.multiplicity,
+      amplitudes: amplitudes(p.position, p.principal, prec),
+    }));
   const largest = Math.max(...b.slice(0, L + M + 1).map((e) => Math.abs(R.toNumber(e.ball(64)))));
   return {
     label,
@@ -105,9 +131,12 @@ function rate(poles: readonly Unrated[], zeros: readonly Point[], noise: number,
     const { re, im } = points[i]!;
     const modulus = Math.hypot(re, im);
     const rated = { ...p, modulus };
-    if (noise > 0 && sizes[i]! <= NOISE_FACTOR * noise * largest && isPaired(points[i]!, zeros)) return { ...rated, role: 'noise doublet' as const };
+    if (noise > 0 && sizes[i]! <= NOISE_FACTOR * noise * largest && isPaired(points[i]!, zeros))
+      return { ...rated, role: 'noise doublet' as const };
     if (p.real && (re > 0 ? strings.positive : strings.negative)) return rated;
-    return sizes[i]! < DOUBLET_SHARE * total && isPaired(points[i]!, zeros) ? { ...rated, role: 'doublet' as const } : rated;
+    return sizes[i]! < DOUBLET_SHARE * total && isPaired(points[i]!, zeros)
+      ? { ...rated, role: 'doublet' as const }
+      : rated;
   });
 }
 
@@ -115,4 +144,3 @@ function isPaired(z: Point, zeros: readonly Point[]): boolean {
   const modulus = Math.hypot(z.re, z.im);
   return zeros.some((w) => Math.hypot(z.re - w.re, z.im - w.im) < DOUBLET_DISTANCE * modulus);
 }
-

@@ -8,7 +8,20 @@
  * F_b(ω) = PV∫_0^∞ e^{−ωv}(1−v)^{−1−b} dv, G_b(ω) = ∫_0^∞ e^{−ωv}(1+v)^{−1−b} dv.
  * Reference: M. Beneke, Phys. Rept. 317 (1999) 1, sec. 2 (from memory); re-derived and checked by quadrature.
  */
-import { addExact, branchAlternating, branchSame, exact, exactReal, exp, mulExact, pi, pow, R, Rational, rgamma } from '../numerics/index.js';
+import {
+  addExact,
+  branchAlternating,
+  branchSame,
+  exact,
+  exactReal,
+  exp,
+  mulExact,
+  pi,
+  pow,
+  R,
+  Rational,
+  rgamma,
+} from '../numerics/index.js';
 import type { Ball, Exact } from '../numerics/index.js';
 import type { LaplaceSum } from './laplace.js';
 
@@ -66,7 +79,8 @@ export function branchSum(s: Branch, x: Ball, prec: number): LaplaceSum {
 
 /** π ω^γ e^{−ω}/Γ(γ): imaginary part of the upper lateral sum of (1 − t/t*)^{−γ}. Zero when γ is 0, −1, −2, … */
 export function branchImaginary(gamma: Exact, w: Ball, prec: number): Ball {
-  if (gamma.rational !== undefined && gamma.rational.isInteger() && gamma.rational.cmp(Rational.ZERO) <= 0) return R.ZERO;
+  if (gamma.rational !== undefined && gamma.rational.isInteger() && gamma.rational.cmp(Rational.ZERO) <= 0)
+    return R.ZERO;
   const g = gamma.ball(prec);
   const body = R.mul(pow(w, g, prec), exp(R.neg(w), prec), prec);
   return R.mul(R.mul(pi(prec), body, prec), rgamma(g, prec), prec);

@@ -41,7 +41,14 @@ export function residueWeight(w: Ball, b: Rational, prec: number): Ball {
 }
 
 /** Σ_j A_j J_j by the recurrence from J_0, J_1. */
-function contract(j0: Complex, j1: Complex, W: Complex, b: Ball, amplitudes: readonly Complex[], prec: number): Complex {
+function contract(
+  j0: Complex,
+  j1: Complex,
+  W: Complex,
+  b: Ball,
+  amplitudes: readonly Complex[],
+  prec: number,
+): Complex {
   let previous = j0;
   let current = j1;
   let sum = C.ZERO;

@@ -37,12 +37,17 @@ export interface ModelSum extends LaplaceSum {
  * Fits the strengths to the coefficients. Undefined when there are not more coefficients than unknown strengths, or the
  * linear system cannot be solved at this precision.
  */
-export function fitModel(c: readonly Exact[], singularities: readonly ModelSingularity[], prec: number): ModelFit | undefined {
+export function fitModel(
+  c: readonly Exact[],
+  singularities: readonly ModelSingularity[],
+  prec: number,
+): ModelFit | undefined {
   const N = c.length;
   const columns = singularities.map((s) => branchCoefficients(s, N).map((e) => e.ball(prec)));
   const rest = c.map((cn, n) =>
     singularities.reduce<Ball>(
-      (acc, s, i) => (s.strength === undefined ? acc : R.sub(acc, R.mul(s.strength.ball(prec), columns[i]![n]!, prec), prec)),
+      (acc, s, i) =>
+        s.strength === undefined ? acc : R.sub(acc, R.mul(s.strength.ball(prec), columns[i]![n]!, prec), prec),
       cn.ball(prec),
     ),
   );
@@ -52,7 +57,14 @@ export function fitModel(c: readonly Exact[], singularities: readonly ModelSingu
   // Rows are scaled by the first free column so that pivots compare like with like over many orders of magnitude.
   const rows = Array.from({ length: J }, (_, r) => N - J + r);
   const matrix = rows.map((n) => free.map((i) => columns[i]![n]!));
-  const solved = J === 0 ? [] : solveBall(matrix, rows.map((n) => rest[n]!), prec);
+  const solved =
+    J === 0
+      ? []
+      : solveBall(
+          matrix,
+          rows.map((n) => rest[n]!),
+          prec,
+        );
   if (solved === undefined || solved.some((s) => !(s.rad < Infinity))) return undefined;
   const strengths = singularities.map((s, i) => s.strength?.ball(prec) ?? solved[free.indexOf(i)]!);
   const polynomial = Array.from({ length: N - J }, (_, n) =>

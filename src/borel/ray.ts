@@ -5,7 +5,7 @@
  *            singularities on the positive axis and below all others.
  * Method     double-exponential rule (ray-nodes.ts) at steps h, h/2, h/4, …. The error of the trapezoidal rule is C q^{1/h}:
  *            two differences d₁, d₂ of successive levels fix C and q, and the newest level is off by about d₂³/d₁².
- *            Where the imaginary part is small (the first singularity is far, ω = t*​/x ≫ 1) it is computed from a ray that
+ *            Where the imaginary part is small (the first singularity is far, ω = t* / x ≫ 1) it is computed from a ray that
  *            starts at a point p < ω of the axis: ∫_0^p is real and drops out, and e^{−p} is a factor.
  * Bound      none that is proved: the radius is SAFETY times the larger of d₂³/d₁² and d₂²/|I| (or d₂ itself, where that is
  *            small enough), plus the rounding errors. Such digits are converged, not certified.

@@ -1,8 +1,8 @@
 /**
  * @module Entries of the Padé table near its diagonal, for exact or enclosed coefficients.
  */
-import { padeBall, padeExact, R, Rational } from '../numerics/index.js';
-import type { Ball, Exact } from '../numerics/index.js';
+import { padeBall, padeExact, R } from '../numerics/index.js';
+import type { Ball, Exact, Rational } from '../numerics/index.js';
 
 /**
  * [L/M] with L + M = order and |L − M| <= width, best first: the smallest |L − M|, and of two equals the one with
@@ -18,7 +18,13 @@ export function nearDiagonal(order: number, width: number): [number, number][] {
 }
 
 export type PadeOutcome =
-  | { readonly exists: true; readonly numerator: readonly Ball[]; readonly denominator: readonly Ball[]; readonly exact?: { numerator: readonly Rational[]; denominator: readonly Rational[] }; readonly deficiency: number }
+  | {
+      readonly exists: true;
+      readonly numerator: readonly Ball[];
+      readonly denominator: readonly Ball[];
+      readonly exact?: { numerator: readonly Rational[]; denominator: readonly Rational[] };
+      readonly deficiency: number;
+    }
   | { readonly exists: false | undefined; readonly reason: string };
 
 /** [L/M] of Σ c_n x^n: exactly when all coefficients are rational, else enclosed at `prec` bits. */
@@ -36,7 +42,12 @@ export function padeOf(c: readonly Exact[], L: number, M: number, prec: number):
       deficiency: p.deficiency,
     };
   }
-  const p = padeBall(used.map((e) => e.ball(prec)), L, M, prec);
+  const p = padeBall(
+    used.map((e) => e.ball(prec)),
+    L,
+    M,
+    prec,
+  );
   if (p.exists !== true) return { exists: p.exists, reason: p.reason };
   return { exists: true, numerator: p.numerator, denominator: p.denominator, deficiency: 0 };
 }

@@ -17,7 +17,8 @@ function over(c: Exact, d: Rational): Exact {
 
 /** Coefficients of B_b; b rational, b > −1 (throws RangeError otherwise: the weight t^b would not be integrable). */
 export function borelTransform(c: readonly Exact[], b: Rational = Rational.ZERO): Exact[] {
-  if (b.cmp(Rational.of(-1)) <= 0) throw new RangeError(`borelTransform: Leroy parameter ${b.toString()} is not above -1`);
+  if (b.cmp(Rational.of(-1)) <= 0)
+    throw new RangeError(`borelTransform: Leroy parameter ${b.toString()} is not above -1`);
   let weight = Rational.ONE;
   return c.map((cn, n) => {
     if (n > 0) weight = weight.mul(b.add(Rational.of(n)));

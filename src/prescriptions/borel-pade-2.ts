@@ -58,7 +58,9 @@ function sumAt(e: Expansion, L: number, M: number, digits: number): LaplaceSum |
         return undefined;
       }
       const x = e.x.ball(prec);
-      const poles = a.poles.filter((p) => p.role !== 'noise doublet').flatMap((p) => split(p.z, p.real, p.amplitudes[0]!, x, prec));
+      const poles = a.poles
+        .filter((p) => p.role !== 'noise doublet')
+        .flatMap((p) => split(p.z, p.real, p.amplitudes[0]!, x, prec));
       // ∫ e^{−σ} σ^{2k} dσ = (2k)!: the polynomial part in σ² at x.
       const polynomial: Ball[] = [];
       let power: Ball = R.ONE;
@@ -88,15 +90,29 @@ export const borelPade2: Prescription = {
     if (request.only !== undefined) {
       const place = placeOf(request.only);
       const s = place === undefined ? 'not an entry of the table' : sumAt(e, place[0], place[1], request.digits);
-      return [typeof s === 'string' ? refusal(request.only, s, 'choose another entry') : toSum(e, request.only, s, place![0] + place![1] + 1, request.digits)];
+      return [
+        typeof s === 'string'
+          ? refusal(request.only, s, 'choose another entry')
+          : toSum(e, request.only, s, place![0] + place![1] + 1, request.digits),
+      ];
     }
-    return climb(usable, request.digits, (count) => tableOf({ ...e, coefficients: e.coefficients.slice(0, count) }, request.digits));
+    return climb(usable, request.digits, (count) =>
+      tableOf({ ...e, coefficients: e.coefficients.slice(0, count) }, request.digits),
+    );
   },
 };
 
 function toSum(e: Expansion, variant: string, s: LaplaceSum, termsUsed: number, digits: number): Sum {
   const prec = Math.max(128, digits * 4 + 64);
-  return { kind: 'sum', variant, value: dressed(e, s.pv, prec), imaginary: scaled(e, s.im, prec), termsUsed, trust: 'indicative', notes: [] };
+  return {
+    kind: 'sum',
+    variant,
+    value: dressed(e, s.pv, prec),
+    imaginary: scaled(e, s.im, prec),
+    termsUsed,
+    trust: 'indicative',
+    notes: [],
+  };
 }
 
 function tableOf(e: Expansion, digits: number): Outcome[] {
@@ -105,8 +121,14 @@ function tableOf(e: Expansion, digits: number): Outcome[] {
   const before = nearDiagonal(count - 2, 1)
     .map(([L, M]) => sumAt(e, L, M, digits))
     .find((s): s is LaplaceSum => typeof s !== 'string');
-  const errors = combineErrors(e, entries.map(({ s }) => (typeof s === 'string' ? undefined : s.pv)), before?.pv);
+  const errors = combineErrors(
+    e,
+    entries.map(({ s }) => (typeof s === 'string' ? undefined : s.pv)),
+    before?.pv,
+  );
   return entries.map(({ label, s }, i): Outcome =>
-    typeof s === 'string' ? refusal(label, s, 'read the neighbouring entries') : withTrust({ ...toSum(e, label, s, count, digits), ...errors(i) }),
+    typeof s === 'string'
+      ? refusal(label, s, 'read the neighbouring entries')
+      : withTrust({ ...toSum(e, label, s, count, digits), ...errors(i) }),
   );
 }

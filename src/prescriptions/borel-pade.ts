@@ -41,7 +41,8 @@ interface Entry {
 /** Leroy parameter of the leading singularity: stated, or found with a small error; undefined when neither. */
 export function leroyParameter(e: Expansion, growth: Growth): Rational | undefined {
   const stated = e.stated[0]?.exponent;
-  if (stated !== undefined) return stated.rational?.sub(Rational.ONE) ?? Rational.of(Math.round((toNumberExact(stated) - 1) * 1e6), 1_000_000);
+  if (stated !== undefined)
+    return stated.rational?.sub(Rational.ONE) ?? Rational.of(Math.round((toNumberExact(stated) - 1) * 1e6), 1_000_000);
   const found = growth.nearest?.exponent;
   if (found === undefined || !(found.error < 0.1)) return undefined;
   // A found exponent is a decimal with an error: a short fraction inside the error serves as well.
@@ -60,18 +61,40 @@ function objection(e: Expansion, growth: Growth): { reason: string; remedy: stri
     return { reason: `the growth is ${growth.verdict}: nothing to resum`, remedy: 'use the fixed-order sum' };
   if (growth.verdict === 'superfactorial')
     return {
-      reason: growth.order === 2 ? 'growth like (2n)!: the order-1 Borel transform has zero radius of convergence' : 'growth faster than any (kn)!: no Borel method of finite order applies',
-      remedy: growth.order === 2 ? 'use the order-2 transform (borel-pade-2)' : 'none of the methods here sums it; the sum may not be unique',
+      reason:
+        growth.order === 2
+          ? 'growth like (2n)!: the order-1 Borel transform has zero radius of convergence'
+          : 'growth faster than any (kn)!: no Borel method of finite order applies',
+      remedy:
+        growth.order === 2
+          ? 'use the order-2 transform (borel-pade-2)'
+          : 'none of the methods here sums it; the sum may not be unique',
     };
-  if (code('errors-exceed-values')) return { reason: 'coefficient errors exceed the coefficients', remedy: 'give coefficients with smaller errors, or fewer of them (--order)' };
-  if (N < 3) return { reason: `${N} coefficient${N === 1 ? '' : 's'}: a rational approximant needs three`, remedy: 'give more coefficients' };
+  if (code('errors-exceed-values'))
+    return {
+      reason: 'coefficient errors exceed the coefficients',
+      remedy: 'give coefficients with smaller errors, or fewer of them (--order)',
+    };
+  if (N < 3)
+    return {
+      reason: `${N} coefficient${N === 1 ? '' : 's'}: a rational approximant needs three`,
+      remedy: 'give more coefficients',
+    };
   return undefined;
 }
 
 /** Does the diagnosis of the terms confirm a complex pair? Then its poles are real physics and the contour stays straight. */
-const pairConfirmed = (growth: Growth): boolean => growth.nearest?.kind === 'complex pair' || growth.signPattern === 'quasi-periodic';
+const pairConfirmed = (growth: Growth): boolean =>
+  growth.nearest?.kind === 'complex pair' || growth.signPattern === 'quasi-periodic';
 
-function evaluateEntry(e: Expansion, growth: Growth, b: Rational, L: number, M: number, digits: number): Entry | string {
+function evaluateEntry(
+  e: Expansion,
+  growth: Growth,
+  b: Rational,
+  L: number,
+  M: number,
+  digits: number,
+): Entry | string {
   let failure: string | undefined;
   const result = toDigits(
     digits,
@@ -88,10 +111,19 @@ function evaluateEntry(e: Expansion, growth: Growth, b: Rational, L: number, M: 
   if (result === undefined) return failure ?? 'the entry does not exist';
   const { approximant, sum } = result;
   if (!(sum.straight.pv.rad < Infinity)) return 'the closed-form sum could not be enclosed';
-  const lift = sum.lifted !== undefined && !pairConfirmed(growth) && approximant.deficiency === 0;
-  const used = lift ? sum.lifted! : sum.straight;
+  const lifted = pairConfirmed(growth) || approximant.deficiency > 0 ? undefined : sum.lifted;
+  const lift = lifted !== undefined;
+  const used = lifted ?? sum.straight;
   const reason = suspicion(e, growth, approximant);
-  return { label: `[${L}/${M}]`, approximant, sum, lift, pv: used.pv, im: used.im, ...(reason === undefined ? {} : { suspicion: reason }) };
+  return {
+    label: `[${L}/${M}]`,
+    approximant,
+    sum,
+    lift,
+    pv: used.pv,
+    im: used.im,
+    ...(reason === undefined ? {} : { suspicion: reason }),
+  };
 }
 
 /** Relative noise of the coefficients: the largest quoted or implied error. */
@@ -100,7 +132,8 @@ const noiseOf = (e: Expansion): number => Math.max(0, ...e.relativeErrors);
 function suspicion(e: Expansion, growth: Growth, a: Approximant): string | undefined {
   const found = growth.nearest;
   const sharp = found !== undefined && found.t.error < SHARP * Math.abs(found.t.value);
-  const nearest = e.stated[0] !== undefined ? Math.abs(toNumberExact(e.stated[0].t)) : sharp ? Math.abs(found.t.value) : undefined;
+  const nearest =
+    e.stated[0] !== undefined ? Math.abs(toNumberExact(e.stated[0].t)) : sharp ? Math.abs(found.t.value) : undefined;
   if (nearest === undefined) return undefined;
   for (const p of a.poles) {
     if (p.role === 'noise doublet') continue;
@@ -124,8 +157,10 @@ function toSum(e: Expansion, entry: Entry, b: Rational, digits: number, termsUse
         : `a complex pair near the positive axis is confirmed by the terms; lifted over it the value would be ${otherValue}`,
     );
   }
-  if (entry.approximant.deficiency > 0) notes.push('degenerate block: the transform is rational as far as the coefficients show');
-  if (entry.approximant.poles.some((p) => p.role === 'noise doublet')) notes.push('pole–zero doublets at the level of the coefficient noise are left out');
+  if (entry.approximant.deficiency > 0)
+    notes.push('degenerate block: the transform is rational as far as the coefficients show');
+  if (entry.approximant.poles.some((p) => p.role === 'noise doublet'))
+    notes.push('pole–zero doublets at the level of the coefficient noise are left out');
   if (entry.suspicion !== undefined) notes.push(entry.suspicion);
   return {
     kind: 'sum',
@@ -141,14 +176,22 @@ function toSum(e: Expansion, entry: Entry, b: Rational, digits: number, termsUse
 /** The family's outcomes from as many coefficients as the digits asked need. */
 function table(e: Expansion, growth: Growth, b: Rational, request: Request): readonly Outcome[] {
   const usable = Math.min(e.coefficients.length, growth.usableCoefficients ?? MOST, MOST);
-  if (usable < 3) return [refusal('near-diagonal', `only ${usable} coefficients are above the noise`, 'give more precise coefficients')];
+  if (usable < 3)
+    return [
+      refusal('near-diagonal', `only ${usable} coefficients are above the noise`, 'give more precise coefficients'),
+    ];
   if (request.only !== undefined) {
     const place = placeOf(request.only);
-    const entry = place === undefined ? 'not an entry of the table' : evaluateEntry(e, growth, b, place[0], place[1], request.digits);
+    const entry =
+      place === undefined
+        ? 'not an entry of the table'
+        : evaluateEntry(e, growth, b, place[0], place[1], request.digits);
     if (typeof entry === 'string') return [refusal(request.only, entry, 'choose another entry')];
     return [toSum(e, entry, b, request.digits, place![0] + place![1] + 1)];
   }
-  return climb(usable, request.digits, (count) => tableOf({ ...e, coefficients: e.coefficients.slice(0, count) }, growth, b, request.digits));
+  return climb(usable, request.digits, (count) =>
+    tableOf({ ...e, coefficients: e.coefficients.slice(0, count) }, growth, b, request.digits),
+  );
 }
 
 /** All near-diagonal entries from the coefficients of e. */
@@ -188,7 +231,9 @@ export const borelPade: Prescription = {
   family: 'borel',
   apply(e, growth, request) {
     const no = objection(e, growth);
-    return no === undefined ? table(e, growth, Rational.ZERO, request) : [refusal('near-diagonal', no.reason, no.remedy)];
+    return no === undefined
+      ? table(e, growth, Rational.ZERO, request)
+      : [refusal('near-diagonal', no.reason, no.remedy)];
   },
 };
 
@@ -202,10 +247,23 @@ export const borelLeroyPade: Prescription = {
     if (no !== undefined) return [refusal('near-diagonal', no.reason, no.remedy)];
     const b = leroyParameter(e, growth);
     if (b === undefined)
-      return [refusal('near-diagonal', 'the exponent of the leading singularity is not known', 'state it in the series file (singularities: exponent)')];
+      return [
+        refusal(
+          'near-diagonal',
+          'the exponent of the leading singularity is not known',
+          'state it in the series file (singularities: exponent)',
+        ),
+      ];
     if (b.cmp(Rational.of(-1)) <= 0)
-      return [refusal('near-diagonal', `the exponent asks for b = ${b.toString()}, and the weight t^b needs b > -1`, 'use the plain transform')];
-    if (b.isZero()) return [refusal('near-diagonal', 'the leading exponent is 1: b = 0 is the plain transform', 'see Borel–Padé')];
+      return [
+        refusal(
+          'near-diagonal',
+          `the exponent asks for b = ${b.toString()}, and the weight t^b needs b > -1`,
+          'use the plain transform',
+        ),
+      ];
+    if (b.isZero())
+      return [refusal('near-diagonal', 'the leading exponent is 1: b = 0 is the plain transform', 'see Borel–Padé')];
     return table(e, growth, b, request);
   },
 };

@@ -31,7 +31,12 @@ export const fixedOrder: Prescription = {
         kind: 'sum',
         variant: `through order ${N - 1 + e.power}`,
         value: sum,
-        truncation: exactSum ? 0 : lastStep(t.map((b) => Math.abs(R.toNumber(b))), growth.verdict === 'geometric' || growth.verdict === 'convergent'),
+        truncation: exactSum
+          ? 0
+          : lastStep(
+              t.map((b) => Math.abs(R.toNumber(b))),
+              growth.verdict === 'geometric' || growth.verdict === 'convergent',
+            ),
         termsUsed: N,
         trust: exactSum ? 'converged' : 'indicative',
         notes,

@@ -32,18 +32,39 @@ export const leastTermSum: Prescription = {
     const variant = 'cut at the least term';
     if (N < 2) return [refusal(variant, `${N} term${N === 1 ? '' : 's'}: no least term`, 'give more coefficients')];
     if (growth.verdict === 'terminating' || growth.verdict === 'geometric' || growth.verdict === 'convergent')
-      return [refusal(variant, `the growth is ${growth.verdict}: there is no divergence to cut`, 'use the fixed-order sum')];
+      return [
+        refusal(variant, `the growth is ${growth.verdict}: there is no divergence to cut`, 'use the fixed-order sum'),
+      ];
     const no = inputObjection(e, growth, variant, 2);
     if (no !== undefined) return [no];
     if (growth.verdict === 'superfactorial' && growth.order !== 2)
-      return [refusal(variant, 'growth faster than any (kn)!: the least term measures nothing', 'none of the methods here sums it; the sum may not be unique')];
+      return [
+        refusal(
+          variant,
+          'growth faster than any (kn)!: the least term measures nothing',
+          'none of the methods here sums it; the sum may not be unique',
+        ),
+      ];
     const t = terms(e, 160);
     const least = leastTerm(t);
-    if (least === undefined) return [refusal(variant, 'every term is zero or not told from zero', 'give coefficients with errors below their values')];
+    if (least === undefined)
+      return [
+        refusal(
+          variant,
+          'every term is zero or not told from zero',
+          'give coefficients with errors below their values',
+        ),
+      ];
     const k = least.index;
     const lastNonZero = t.reduce((m, b, n) => (R.isExactZero(b) ? m : n), -1);
     if (k === lastNonZero && least.tiedWith === undefined)
-      return [refusal(variant, 'the least term is not reached: the terms still fall at the last order', 'use the fixed-order sum, or a larger coupling')];
+      return [
+        refusal(
+          variant,
+          'the least term is not reached: the terms still fall at the last order',
+          'use the fixed-order sum, or a larger coupling',
+        ),
+      ];
     const leading = stateOfLeading(e);
     const count = leading?.positive === true ? Math.round(leading.x - leading.b - 1 / 3) : undefined;
     const useCount = growth.signPattern === 'same' && count !== undefined && count >= 1 && count <= N;

@@ -30,7 +30,11 @@ export interface NeighbourErrors {
  * @param before F value of the order before, if any.
  * @returns errors of the i-th entry, in units of R; the first standing entry is marked central.
  */
-export function combineErrors(e: Expansion, values: readonly (Ball | undefined)[], before: Ball | undefined): (i: number) => NeighbourErrors {
+export function combineErrors(
+  e: Expansion,
+  values: readonly (Ball | undefined)[],
+  before: Ball | undefined,
+): (i: number) => NeighbourErrors {
   const scale = Math.abs(R.toNumber(prefactor(e, 64)));
   const standing = values.filter((v): v is Ball => v !== undefined);
   const centre = values.findIndex((v) => v !== undefined);

@@ -46,14 +46,31 @@ export const pade: Prescription = {
   summary: 'rational approximants of the series itself',
   family: 'coupling',
   apply(e, growth, request): readonly Outcome[] {
-    if (growth.verdict === 'terminating') return [refusal('near-diagonal', 'the series terminates', 'use the fixed-order sum')];
+    if (growth.verdict === 'terminating')
+      return [refusal('near-diagonal', 'the series terminates', 'use the fixed-order sum')];
     const usable = Math.min(e.coefficients.length, growth.usableCoefficients ?? MOST, MOST);
-    if (usable < 3) return [refusal('near-diagonal', `${usable} usable coefficients: a rational approximant needs three`, 'give more coefficients')];
+    if (usable < 3)
+      return [
+        refusal(
+          'near-diagonal',
+          `${usable} usable coefficients: a rational approximant needs three`,
+          'give more coefficients',
+        ),
+      ];
     if (growth.flags.some((f) => f.code === 'errors-exceed-values'))
-      return [refusal('near-diagonal', 'coefficient errors exceed the coefficients', 'give coefficients with smaller errors, or fewer of them (--order)')];
+      return [
+        refusal(
+          'near-diagonal',
+          'coefficient errors exceed the coefficients',
+          'give coefficients with smaller errors, or fewer of them (--order)',
+        ),
+      ];
     const short: Expansion = { ...e, coefficients: e.coefficients.slice(0, usable) };
     const evaluate = (L: number, M: number, digits: number): Ball | undefined => valueAt(short, L, M, digits);
-    const notes = growth.signPattern === 'same' && growth.verdict !== 'geometric' ? ['same-sign series: the coupling lies on the cut, real approximants wander'] : [];
+    const notes =
+      growth.signPattern === 'same' && growth.verdict !== 'geometric'
+        ? ['same-sign series: the coupling lies on the cut, real approximants wander']
+        : [];
     const outcomes: Outcome[] = [];
     const order = nearDiagonal(usable - 1, 2);
     const lower = nearDiagonal(usable - 2, 1);
@@ -61,20 +78,35 @@ export const pade: Prescription = {
     if (request.only !== undefined) {
       const wanted = order.find(([L, M]) => label(L, M) === request.only);
       const v = wanted && evaluate(wanted[0], wanted[1], request.digits);
-      return v === undefined ? [refusal(request.only, 'the entry does not exist', 'choose another')] : [sumOf(short, request.only, v, usable, notes)];
+      return v === undefined
+        ? [refusal(request.only, 'the entry does not exist', 'choose another')]
+        : [sumOf(short, request.only, v, usable, notes)];
     }
     const values = order.map(([L, M]) => ({ label: label(L, M), value: evaluate(L, M, request.digits) }));
     const before = lower.map(([L, M]) => evaluate(L, M, 12)).find((v) => v !== undefined);
-    const errors = combineErrors(short, values.map((v) => v.value), before);
+    const errors = combineErrors(
+      short,
+      values.map((v) => v.value),
+      before,
+    );
     values.forEach((v, i) => {
-      if (v.value === undefined) outcomes.push(refusal(v.label, 'the entry does not exist, or has a pole at this coupling', 'read the neighbouring entries'));
+      if (v.value === undefined)
+        outcomes.push(
+          refusal(v.label, 'the entry does not exist, or has a pole at this coupling', 'read the neighbouring entries'),
+        );
       else outcomes.push({ ...sumOf(short, v.label, v.value, usable, notes), ...errors(i) });
     });
     return outcomes;
   },
 };
 
-function sumOf(e: Expansion, variant: string, f: Ball, termsUsed: number, notes: readonly string[]): Outcome & { kind: 'sum' } {
+function sumOf(
+  e: Expansion,
+  variant: string,
+  f: Ball,
+  termsUsed: number,
+  notes: readonly string[],
+): Outcome & { kind: 'sum' } {
   const prec = 64 + Math.max(64, R.accuracyBits(f) < Infinity ? Math.ceil(R.accuracyBits(f)) : 64);
   return { kind: 'sum', variant, value: dressed(e, f, prec), termsUsed, trust: 'indicative', notes };
 }

@@ -18,8 +18,21 @@ function modelOf(e: Expansion): ModelSingularity[] {
   return e.stated.flatMap((s) =>
     s.exponent === undefined
       ? []
-      : [{ t: s.t, exponent: s.exponent, corrections: s.corrections, ...(s.strength === undefined ? {} : { strength: s.strength }) }],
+      : [
+          {
+            t: s.t,
+            exponent: s.exponent,
+            corrections: s.corrections,
+            ...(s.strength === undefined ? {} : { strength: s.strength }),
+          },
+        ],
   );
+}
+
+/** The singularities that the model of this expansion keeps: each needs one coefficient, one is left over. */
+export function modelUsed(e: Expansion): readonly ModelSingularity[] {
+  const all = modelOf(e);
+  return all.slice(0, Math.max(1, Math.min(all.length, e.coefficients.length - 2)));
 }
 
 export const singularityModel: Prescription = {
@@ -29,14 +42,21 @@ export const singularityModel: Prescription = {
   family: 'model',
   apply(e, growth, request): readonly Outcome[] {
     const all = modelOf(e);
-    const variant = all.length === 0 ? 'stated singularities' : `${all.length} singularit${all.length === 1 ? 'y' : 'ies'}`;
+    const variant =
+      all.length === 0 ? 'stated singularities' : `${all.length} singularit${all.length === 1 ? 'y' : 'ies'}`;
     if (all.length === 0)
-      return [refusal(variant, 'no singularity with position and exponent is stated', 'state them in the series file, or the operator dimension and flavours')];
+      return [
+        refusal(
+          variant,
+          'no singularity with position and exponent is stated',
+          'state them in the series file, or the operator dimension and flavours',
+        ),
+      ];
     if (['superfactorial', 'terminating', 'convergent', 'geometric'].includes(growth.verdict))
       return [refusal(variant, `the growth is ${growth.verdict}, not factorial`, 'use the fixed-order sum')];
     // With few coefficients the farthest singularities are dropped first: each needs one coefficient, one is left over.
     const N = e.coefficients.length;
-    const model = all.slice(0, Math.max(1, Math.min(all.length, N - 2)));
+    const model = modelUsed(e);
     const x = e.x;
     const run = (count: number, singularities: readonly ModelSingularity[], digits: number): ModelSum | undefined =>
       toDigits(
@@ -46,7 +66,13 @@ export const singularityModel: Prescription = {
       );
     const best = run(N, model, request.digits);
     if (best === undefined)
-      return [refusal(variant, `${N} coefficient${N === 1 ? '' : 's'} cannot fix ${model.length} strength${model.length === 1 ? '' : 's'} and a polynomial`, 'give more coefficients or state fewer singularities')];
+      return [
+        refusal(
+          variant,
+          `${N} coefficient${N === 1 ? '' : 's'} cannot fix ${model.length} strength${model.length === 1 ? '' : 's'} and a polynomial`,
+          'give more coefficients or state fewer singularities',
+        ),
+      ];
     const prec = Math.max(96, request.digits * 4);
     const notes: string[] = [];
     let truncation: number | undefined;
@@ -60,8 +86,12 @@ export const singularityModel: Prescription = {
             `${(100 * best.fit.shares[i]!).toFixed(0)} % of the last coefficient`,
         );
       });
-      if (best.fit.shares.some((s) => Math.abs(s) > SUSPICIOUS_SHARE)) notes.push('large contributions cancel: the strengths are not to be trusted one by one');
-      if (model.length < all.length) notes.push(`only the nearest ${model.length} of ${all.length} stated singularities: too few coefficients for more`);
+      if (best.fit.shares.some((s) => Math.abs(s) > SUSPICIOUS_SHARE))
+        notes.push('large contributions cancel: the strengths are not to be trusted one by one');
+      if (model.length < all.length)
+        notes.push(
+          `only the nearest ${model.length} of ${all.length} stated singularities: too few coefficients for more`,
+        );
     }
     return [
       {

@@ -49,7 +49,8 @@ function completed(e: Expansion, s: StatedSingularity, n: number, prec: number):
 function cutOf(e: Expansion, s: StatedSingularity): number {
   const N = e.coefficients.length;
   const w = Math.abs(toNumberExact(s.t)) / toNumberExact(e.x);
-  const best = toNumberExact(s.t) > 0 ? w - (toNumberExact(s.exponent!) - 1) - 1 / 3 : (leastTerm(terms(e, 160))?.index ?? N);
+  const best =
+    toNumberExact(s.t) > 0 ? w - (toNumberExact(s.exponent!) - 1) - 1 / 3 : (leastTerm(terms(e, 160))?.index ?? N);
   return Math.min(N, Math.max(1, Math.round(best)));
 }
 
@@ -66,18 +67,35 @@ export const terminantSum: Prescription = {
       return [
         refusal(
           variant,
-          s === undefined ? 'no position of a leading singularity is known' : 'the leading singularity has no known exponent',
+          s === undefined
+            ? 'no position of a leading singularity is known'
+            : 'the leading singularity has no known exponent',
           'state it in the series file (singularities: u or dimension, with exponent)',
         ),
       ];
     if (N < 2) return [refusal(variant, 'fewer than two terms', 'give more coefficients')];
-    if (growth.verdict === 'superfactorial' || growth.verdict === 'terminating' || growth.verdict === 'convergent' || growth.verdict === 'geometric')
+    if (
+      growth.verdict === 'superfactorial' ||
+      growth.verdict === 'terminating' ||
+      growth.verdict === 'convergent' ||
+      growth.verdict === 'geometric'
+    )
       return [refusal(variant, `the growth is ${growth.verdict}, not factorial`, 'use the fixed-order sum')];
     const w = Math.abs(toNumberExact(s.t)) / toNumberExact(e.x);
     if (toNumberExact(s.t) > 0 && w - (toNumberExact(s.exponent) - 1) - 1 / 3 < 0.5)
-      return [refusal(variant, 'the optimal cut lies before the first term: the coupling is too large', 'take a smaller coupling (a higher scale)')];
+      return [
+        refusal(
+          variant,
+          'the optimal cut lies before the first term: the coupling is too large',
+          'take a smaller coupling (a higher scale)',
+        ),
+      ];
     const n = request.only === undefined ? cutOf(e, s) : Number(request.only.split(' ')[0]);
-    const best = toDigits(request.digits, (prec) => completed(e, s, n, prec), (r) => r.value);
+    const best = toDigits(
+      request.digits,
+      (prec) => completed(e, s, n, prec),
+      (r) => r.value,
+    );
     let truncation: number | undefined;
     if (request.only === undefined) {
       const moved = [n - 1, n + 1].filter((m) => m >= 1 && m <= N).map((m) => R.toNumber(completed(e, s, m, 96).value));
@@ -95,7 +113,9 @@ export const terminantSum: Prescription = {
         termsUsed: Math.min(N, n + 1),
         trust: 'indicative',
         notes: [
-          n < N ? 'terminant scaled by the first omitted term' : 'terminant scaled by the last term continued by the leading growth',
+          n < N
+            ? 'terminant scaled by the first omitted term'
+            : 'terminant scaled by the last term continued by the leading growth',
           ...(e.stated.length > 1 ? ['only the nearest singularity is completed: the next one sets what remains'] : []),
         ],
         central: true,

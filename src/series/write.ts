@@ -61,10 +61,7 @@ const singularity = (s: KnownSingularity): string =>
     ['dimension', s.dimension?.toString()],
     ['exponent', s.exponent && scalar(textOf(s.exponent))],
     ['anomalous dimension', s.anomalousDimension && scalar(textOf(s.anomalousDimension))],
-    [
-      'wilson corrections',
-      s.wilsonCorrections && `[${s.wilsonCorrections.map((c) => scalar(textOf(c))).join(', ')}]`,
-    ],
+    ['wilson corrections', s.wilsonCorrections && `[${s.wilsonCorrections.map((c) => scalar(textOf(c))).join(', ')}]`],
     ['strength', s.strength && uncertain(s.strength)],
     ['kind', s.kind],
   ]);

@@ -18,12 +18,20 @@ const LATERAL_ORDER = ['singularity-model', 'borel-leroy-pade', 'borel-pade', 'b
 /** The lateral sums that the ambiguity is read from: a converged sum first, then the order above. */
 export function lateralSource(values: readonly Evaluated[]): LateralSource | undefined {
   const candidates = values.flatMap((v) =>
-    v.outcome.kind === 'sum' && v.outcome.central === true && v.outcome.imaginary !== undefined ? [{ v, im: v.outcome.imaginary, trust: v.outcome.trust }] : [],
+    v.outcome.kind === 'sum' && v.outcome.central === true && v.outcome.imaginary !== undefined
+      ? [{ v, im: v.outcome.imaginary, trust: v.outcome.trust }]
+      : [],
   );
   const rank = (name: string): number => LATERAL_ORDER.indexOf(name);
-  candidates.sort((a, b) => Number(b.trust === 'converged') - Number(a.trust === 'converged') || rank(a.v.prescription.name) - rank(b.v.prescription.name));
+  candidates.sort(
+    (a, b) =>
+      Number(b.trust === 'converged') - Number(a.trust === 'converged') ||
+      rank(a.v.prescription.name) - rank(b.v.prescription.name),
+  );
   const best = candidates[0];
-  return best === undefined ? undefined : { im: Math.abs(R.toNumber(best.im)), origin: `${best.v.prescription.name} ${best.v.outcome.variant}` };
+  return best === undefined
+    ? undefined
+    : { im: Math.abs(R.toNumber(best.im)), origin: `${best.v.prescription.name} ${best.v.outcome.variant}` };
 }
 
 export interface AmbiguityFound {
@@ -37,19 +45,31 @@ export interface AmbiguityFound {
 /** Has the growth an ambiguity at all? */
 const DIVERGENT = new Set(['factorial', 'superfactorial', 'undecided', 'subfactorial']);
 
-export function ambiguityReport(series: Series, expanded: Expanded, growth: Growth, table: TermTable, values: readonly Evaluated[]): AmbiguityFound {
+export function ambiguityReport(
+  series: Series,
+  expanded: Expanded,
+  growth: Growth,
+  table: TermTable,
+  values: readonly Evaluated[],
+): AmbiguityFound {
   const none = (statement: string): AmbiguityFound => ({ report: { conventions: [], statement }, list: [] });
   if (!DIVERGENT.has(growth.verdict)) return none(`the growth is ${growth.verdict}: there is no ambiguity to quote`);
-  if (growth.flags.some((f) => f.code === 'errors-exceed-values')) return none('the coefficient errors exceed the coefficients: no ambiguity can be stated');
-  if (growth.verdict === 'superfactorial' && growth.order !== 2) return none('the coefficients grow faster than any (kn)!: no ambiguity can be stated');
-  const lateral = lateralSource(values);
+  if (growth.flags.some((f) => f.code === 'errors-exceed-values'))
+    return none('the coefficient errors exceed the coefficients: no ambiguity can be stated');
+  if (growth.verdict === 'superfactorial' && growth.order !== 2)
+    return none('the coefficients grow faster than any (kn)!: no ambiguity can be stated');
+  const found = lateralSource(values);
+  // An approximant without a positive pole proves nothing where neither the terms nor the file tell of a singularity.
+  const lateral =
+    found?.im === 0 && growth.verdict === 'undecided' && expanded.expansion.stated.length === 0 ? undefined : found;
   const numbers = table.terms.map(R.toNumber);
   const sums = table.sums.slice(1).map(R.toNumber);
   const powers = numbers.map((_, n) => n + expanded.expansion.power);
   const reached = table.least?.reached === true;
   const summable = lateral !== undefined && lateral.im === 0;
   const list = conventions(numbers, sums, powers, reached, lateral);
-  if (list.length === 0) return none('no lateral sums stand and the least term is not reached: no ambiguity can be stated from these terms');
+  if (list.length === 0)
+    return none('no lateral sums stand and the least term is not reached: no ambiguity can be stated from these terms');
   const dimension = leadingDimension(expanded);
   const Q = hardScaleGeV(series);
   const value = Math.abs(sums[sums.length - 1] ?? 0);
@@ -82,22 +102,36 @@ function leadingDimension(expanded: Expanded): number | undefined {
   return s?.dimension === undefined ? undefined : toNumberExact(s.dimension);
 }
 
-export function powerReport(series: Series, expanded: Expanded, found: AmbiguityFound, at: number): PowerCorrectionReport {
+export function powerReport(
+  series: Series,
+  expanded: Expanded,
+  found: AmbiguityFound,
+  at: number,
+): PowerCorrectionReport {
   const d = found.dimension;
   const lambda = lambdaOverQ(series, { ball: () => R.fromNumber(at) });
   const Q = hardScaleGeV(series);
   const A = found.chosen?.value;
   if (d === undefined || A === undefined)
-    return { condensates: [], statement: d === undefined ? 'the operator dimension is not known: no power of Lambda/Q can be assigned' : 'no ambiguity is stated, so none is to be absorbed' };
+    return {
+      condensates: [],
+      statement:
+        d === undefined
+          ? 'the operator dimension is not known: no power of Lambda/Q can be assigned'
+          : 'no ambiguity is stated, so none is to be absorbed',
+    };
   const power = lambda === undefined ? undefined : powerOf(lambda, d);
   const pieces = imaginaryPieces(expanded.expansion);
   const condensates = series.condensates.map((c) => {
     const dim = c.dimension.toNumber();
     const t = expanded.expansion.stated.find((s) => s.dimension !== undefined && toNumberExact(s.dimension) === dim)?.t;
-    const own = t === undefined ? undefined : pieces.find((p) => Math.abs(p.t - toNumberExact(t)) < 1e-9 * Math.abs(p.t));
-    const im = own !== undefined ? Math.abs(own.im) : dim === d && found.chosen?.name === '|Im|/pi' ? A * Math.PI : undefined;
+    const own =
+      t === undefined ? undefined : pieces.find((p) => Math.abs(p.t - toNumberExact(t)) < 1e-9 * Math.abs(p.t));
+    const im =
+      own !== undefined ? Math.abs(own.im) : dim === d && found.chosen?.name === '|Im|/pi' ? A * Math.PI : undefined;
     const wilson = c.wilson === undefined ? undefined : toNumberExact(c.wilson);
-    const shift = (amount: number): number | undefined => (Q === undefined || wilson === undefined || wilson === 0 ? undefined : condensateShift(amount, Q, dim, wilson));
+    const shift = (amount: number): number | undefined =>
+      Q === undefined || wilson === undefined || wilson === 0 ? undefined : condensateShift(amount, Q, dim, wilson);
     const both = im === undefined ? undefined : { pi: shift(im / Math.PI), full: shift(im) };
     const fileValue = c.value === undefined ? undefined : Math.abs(toNumberExact(c.value.value));
     return {
@@ -107,7 +141,9 @@ export function powerReport(series: Series, expanded: Expanded, found: Ambiguity
       ...(c.value === undefined ? {} : { fileValue: c.value.text }),
       ...(c.unit === undefined ? {} : { unit: c.unit }),
       ...(both?.pi === undefined ? {} : { shift: indicative(both.pi), shiftIm: indicative(both.full!) }),
-      ...(both?.pi === undefined || fileValue === undefined || fileValue === 0 ? {} : { shiftOverValue: indicative(both.pi / fileValue, 3) }),
+      ...(both?.pi === undefined || fileValue === undefined || fileValue === 0
+        ? {}
+        : { shiftOverValue: indicative(both.pi / fileValue, 3) }),
     };
   });
   const missing = [
@@ -116,7 +152,9 @@ export function powerReport(series: Series, expanded: Expanded, found: Ambiguity
   ];
   return {
     dimension: String(d),
-    ...(power === undefined ? {} : { power: indicative(power), lambdaOverQ: indicative(lambda!), inPowerUnits: indicative(A / power) }),
+    ...(power === undefined
+      ? {}
+      : { power: indicative(power), lambdaOverQ: indicative(lambda!), inPowerUnits: indicative(A / power) }),
     ...(Q === undefined ? {} : { GeV: { value: indicative(inGeV(A, Q, d)), power: String(d) } }),
     condensates,
     statement:
@@ -126,10 +164,19 @@ export function powerReport(series: Series, expanded: Expanded, found: Ambiguity
   };
 }
 
-export function optimalReport(expanded: Expanded, growth: Growth, table: TermTable, digits: number): OptimalTruncationReport {
+export function optimalReport(
+  expanded: Expanded,
+  growth: Growth,
+  table: TermTable,
+  digits: number,
+): OptimalTruncationReport {
   const e = expanded.expansion;
   if (!DIVERGENT.has(growth.verdict))
-    return { status: 'not applicable', statement: `the growth is ${growth.verdict}: more terms only help`, standing: growth.standing };
+    return {
+      status: 'not applicable',
+      statement: `the growth is ${growth.verdict}: more terms only help`,
+      standing: growth.standing,
+    };
   const least = table.least;
   const predicted = prediction(expanded, growth);
   const observed =
@@ -147,7 +194,9 @@ export function optimalReport(expanded: Expanded, growth: Growth, table: TermTab
     ...(observed === undefined ? {} : { observed }),
     status: observed === undefined ? 'not reached' : 'reached',
     ...(predicted === undefined ? {} : { predicted }),
-    ...(observed === undefined ? {} : { errorOfStopping: indicative(Math.abs(R.toNumber(table.terms[least!.index]!)), 3) }),
+    ...(observed === undefined
+      ? {}
+      : { errorOfStopping: indicative(Math.abs(R.toNumber(table.terms[least!.index]!)), 3) }),
     statement:
       (observed === undefined
         ? 'the terms still fall at the last known order: the series has not begun to diverge at this coupling'

@@ -5,10 +5,11 @@ import { diagnoseGrowth } from '../growth/index.js';
 import type { Growth } from '../growth/index.js';
 import { toNumberExact } from '../numerics/index.js';
 import { PRESCRIPTIONS } from '../prescriptions/index.js';
-import type { Prescription } from '../prescriptions/index.js';
+import type { Prescription, Sum } from '../prescriptions/index.js';
 import type { Series, Uncertain } from '../series/index.js';
 import { ambiguityReport, optimalReport, powerReport } from './ambiguity-report.js';
-import type { Assessment, ValueEntry } from './assessment.js';
+import type { Assessment, ValueEntry, ValueRecord } from './assessment.js';
+import { recordCautions, records } from './backtesting/record.js';
 import { cautions } from './cautions.js';
 import { expand } from './expand.js';
 import type { Expanded } from './expand.js';
@@ -19,6 +20,7 @@ import { termTable } from './terms.js';
 import { evaluateAll, valueEntry } from './values.js';
 import type { Evaluated, Inputs } from './values.js';
 import { verdict } from './verdict.js';
+import type { VerdictRule } from './verdict-rule.js';
 import { VERSION } from './version.js';
 
 export interface AssessOptions {
@@ -28,6 +30,8 @@ export interface AssessOptions {
   readonly digits: number;
   /** Names of the prescriptions to run; all when absent. */
   readonly by?: readonly string[];
+  /** The rule that makes the verdict; the ladder when absent. */
+  readonly verdictRule?: VerdictRule;
   /** What was asked, repeated in the result. */
   readonly request: Assessment['request'];
   /** How the coupling was reached, one line a step. */
@@ -52,7 +56,8 @@ export function prescriptionsNamed(by: readonly string[] | undefined): readonly 
   if (by === undefined) return PRESCRIPTIONS;
   return by.map((name) => {
     const found = PRESCRIPTIONS.find((p) => p.name === name);
-    if (found === undefined) throw new RangeError(`no prescription "${name}"; known: ${PRESCRIPTIONS.map((p) => p.name).join(', ')}`);
+    if (found === undefined)
+      throw new RangeError(`no prescription "${name}"; known: ${PRESCRIPTIONS.map((p) => p.name).join(', ')}`);
     return found;
   });
 }
@@ -67,8 +72,35 @@ export interface Summed {
 export function sumUp(series: Series, at: Uncertain, options: Pick<AssessOptions, 'order' | 'digits' | 'by'>): Summed {
   const expanded = expand(series, at.value, options.order);
   const growth = diagnoseGrowth(expanded.growthInput);
-  const values = evaluateAll(expanded.expansion, growth, prescriptionsNamed(options.by), options.digits, inputsOf(series, expanded, at));
+  const values = evaluateAll(
+    expanded.expansion,
+    growth,
+    prescriptionsNamed(options.by),
+    options.digits,
+    inputsOf(series, expanded, at),
+  );
   return { expanded, growth, values };
+}
+
+/** Numbers of coefficients for which one step back is both telling and cheap. */
+const SHORTEST = 5;
+const LONGEST = 12;
+
+const isShort = ({ expansion: { coefficients } }: Expanded): boolean =>
+  coefficients.length >= SHORTEST && coefficients.length <= LONGEST;
+
+/** The value that stands for each prescription. */
+export function centralSums(values: readonly Evaluated[]): Map<Prescription, Sum> {
+  const sums = new Map<Prescription, Sum>();
+  for (const { prescription, outcome } of values)
+    if (outcome.kind === 'sum' && (outcome.central === true || !sums.has(prescription)))
+      sums.set(prescription, outcome);
+  return sums;
+}
+
+function withRecord(entry: ValueEntry, list: ReadonlyMap<string, ValueRecord>): ValueEntry {
+  const record = entry.central === true ? list.get(entry.prescription) : undefined;
+  return record === undefined ? entry : { ...entry, record };
 }
 
 /** The whole assessment of a series at the coupling value `at`. */
@@ -77,7 +109,10 @@ export function assess(series: Series, at: Uncertain, options: AssessOptions): A
   const alpha = toNumberExact(at.value);
   const table = termTable(series, expanded, options.digits);
   const ambiguity = ambiguityReport(series, expanded, growth, table, values);
-  const rows: ValueEntry[] = values.map((v) => valueEntry(v, options.digits));
+  const record = isShort(expanded)
+    ? records(series, expanded, centralSums(values), { hide: 1 })
+    : new Map<string, ValueRecord>();
+  const rows: ValueEntry[] = values.map((v) => withRecord(valueEntry(v, options.digits), record));
   return {
     leastterm: VERSION,
     request: options.request,
@@ -90,7 +125,7 @@ export function assess(series: Series, at: Uncertain, options: AssessOptions): A
     ambiguity: ambiguity.report,
     powerCorrection: powerReport(series, expanded, ambiguity, alpha),
     optimalTruncation: optimalReport(expanded, growth, table, options.digits),
-    verdict: verdict(values, growth, expanded.expansion.coefficients.length, ambiguity.chosen),
-    cautions: cautions(series, expanded, growth, table, values, alpha),
+    verdict: verdict(values, growth, expanded.expansion.coefficients.length, ambiguity.chosen, options.verdictRule),
+    cautions: [...cautions(series, expanded, growth, table, values, alpha), ...recordCautions(record)],
   };
 }

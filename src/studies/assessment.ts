@@ -105,7 +105,12 @@ export interface GrowthReport {
   /** How observation and expectation compare, in words. */
   readonly agreement?: string;
   readonly evidence: {
-    readonly ratios: readonly { readonly n: number; readonly ratio: string; readonly linear?: string; readonly linearError?: string }[];
+    readonly ratios: readonly {
+      readonly n: number;
+      readonly ratio: string;
+      readonly linear?: string;
+      readonly linearError?: string;
+    }[];
     readonly comparison?: {
       readonly points: number;
       readonly bayesFactor: string;
@@ -159,6 +164,23 @@ export interface Refused {
   readonly remedy: string;
 }
 
+/** How a prescription did on this series with its last coefficients hidden; sizes in units of the target. */
+export interface ValueRecord {
+  /** What the predictions were held against. */
+  readonly against: 'exact' | 'measurement' | 'known sum' | 'own value';
+  readonly tested: number;
+  /** How many lay within the stated error. */
+  readonly inside: number;
+  /** Mean of (predicted − target)/|target|. */
+  readonly bias: string;
+  /** Mean stated error over |target|. */
+  readonly sharpness?: string;
+  /** Interval score at 68 %: small is good, 0 is perfect. */
+  readonly score: string;
+  /** good: all inside; bad: a miss beyond three stated errors; fair: in between. */
+  readonly verdict: 'good' | 'fair' | 'bad' | 'no error stated';
+}
+
 export interface ValueEntry {
   readonly prescription: string;
   /** Which member of the family: "[2/2]", "b=128/81", "through order 5". */
@@ -179,6 +201,8 @@ export interface ValueEntry {
   readonly notes?: readonly string[];
   /** The family's own best member. */
   readonly central?: boolean;
+  /** Of the family's own best member, one step back; only for short series. */
+  readonly record?: ValueRecord;
   readonly refused?: Refused;
 }
 
@@ -220,10 +244,22 @@ export interface PowerCorrectionReport {
 
 export interface OptimalTruncationReport {
   /** Power of the least term, seen; absent when not reached. */
-  readonly observed?: { readonly power: number; readonly tiedWith?: number; readonly term: string; readonly sumThrough: string; readonly sumBefore: string };
+  readonly observed?: {
+    readonly power: number;
+    readonly tiedWith?: number;
+    readonly term: string;
+    readonly sumThrough: string;
+    readonly sumBefore: string;
+  };
   readonly status: 'reached' | 'not reached' | 'not applicable';
   /** Number of terms x − b (least term) and x − b − 1/3 (principal value), from a known or found position and exponent. */
-  readonly predicted?: { readonly leastTermAt: string; readonly principalValueAt: string; readonly x: string; readonly b: string; readonly origin: string };
+  readonly predicted?: {
+    readonly leastTermAt: string;
+    readonly principalValueAt: string;
+    readonly x: string;
+    readonly b: string;
+    readonly origin: string;
+  };
   readonly errorOfStopping?: string;
   readonly statement: string;
   readonly standing: Standing;

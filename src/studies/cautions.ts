@@ -12,30 +12,60 @@ const LARGE_ALPHA = 0.5;
 /** A spread among central values above this multiple of the largest stated error is worth a word. Heuristic. */
 const SPREAD_FACTOR = 3;
 
-export function cautions(series: Series, expanded: Expanded, growth: Growth, table: TermTable | undefined, values: readonly Evaluated[], alpha?: number): Caution[] {
+export function cautions(
+  series: Series,
+  expanded: Expanded,
+  growth: Growth,
+  table: TermTable | undefined,
+  values: readonly Evaluated[],
+  alpha?: number,
+): Caution[] {
   const list: Caution[] = [];
-  if (series.invented) list.push({ code: 'invented', text: 'this series is invented for demonstration: quote nothing from it' });
+  if (series.invented)
+    list.push({ code: 'invented', text: 'this series is invented for demonstration: quote nothing from it' });
   if (expanded.leadingZeros > 0)
     list.push({
       code: 'leading-zeros',
       text: `the first ${expanded.leadingZeros} coefficient${expanded.leadingZeros === 1 ? ' is' : 's are'} zero: the transform starts at the first non-zero one, which shifts the apparent exponent by ${expanded.leadingZeros}`,
     });
   for (const f of growth.flags) list.push({ code: f.code, text: f.text });
-  if (series.coefficients.some((c) => c.status === 'estimated')) list.push({ code: 'estimated-input', text: 'at least one coefficient is an estimate, not a calculation' });
-  if (!series.coupling.plain && alpha !== undefined && alpha > LARGE_ALPHA) list.push({ code: 'large-coupling', text: `the coupling ${alpha} is large: truncated series and running are not reliable there` });
+  if (series.coefficients.some((c) => c.status === 'estimated'))
+    list.push({ code: 'estimated-input', text: 'at least one coefficient is an estimate, not a calculation' });
+  if (!series.coupling.plain && alpha !== undefined && alpha > LARGE_ALPHA)
+    list.push({
+      code: 'large-coupling',
+      text: `the coupling ${alpha} is large: truncated series and running are not reliable there`,
+    });
   if (!series.coupling.plain && series.flavours === undefined)
-    list.push({ code: 'no-flavours', text: 'the number of flavours is not stated: no u plane, no Lambda, no expectation from the operator product expansion' });
+    list.push({
+      code: 'no-flavours',
+      text: 'the number of flavours is not stated: no u plane, no Lambda, no expectation from the operator product expansion',
+    });
   if (table !== undefined && table.least?.reached === true && table.least.index < table.terms.length - 1)
-    list.push({ code: 'past-least-term', text: 'the known orders go past the least term: at this coupling the later terms make the fixed-order sum worse' });
+    list.push({
+      code: 'past-least-term',
+      text: 'the known orders go past the least term: at this coupling the later terms make the fixed-order sum worse',
+    });
   const rejected = values.filter((v) => v.outcome.kind === 'refusal' && v.prescription.family === 'borel').length;
   const stood = values.filter((v) => v.outcome.kind === 'sum' && v.prescription.family === 'borel').length;
-  if (stood > 0 && rejected > stood) list.push({ code: 'unstable-table', text: `${rejected} of ${rejected + stood} Borel–Padé entries do not stand: read the ones that do with care` });
+  if (stood > 0 && rejected > stood)
+    list.push({
+      code: 'unstable-table',
+      text: `${rejected} of ${rejected + stood} Borel–Padé entries do not stand: read the ones that do with care`,
+    });
   const spread = centralSpread(values);
   if (spread !== undefined) list.push(spread);
   if (expanded.expansion.stated.length > 0 && growth.nearest !== undefined) {
     const nearest = toNumberExact(expanded.expansion.stated[0]!.t);
-    if (Math.sign(nearest) !== Math.sign(growth.nearest.t.value) && growth.nearest.kind !== 'complex pair' && growth.nearest.kind !== 'both axes')
-      list.push({ code: 'hidden-singularity', text: 'the nearest expected singularity does not show in these terms yet: it takes over at higher orders' });
+    if (
+      Math.sign(nearest) !== Math.sign(growth.nearest.t.value) &&
+      growth.nearest.kind !== 'complex pair' &&
+      growth.nearest.kind !== 'both axes'
+    )
+      list.push({
+        code: 'hidden-singularity',
+        text: 'the nearest expected singularity does not show in these terms yet: it takes over at higher orders',
+      });
   }
   return dedupe(list);
 }
@@ -43,7 +73,11 @@ export function cautions(series: Series, expanded: Expanded, growth: Growth, tab
 /** Central values of the resumming prescriptions that differ far beyond their stated errors. */
 function centralSpread(values: readonly Evaluated[]): Caution | undefined {
   const rows = values.flatMap((v) =>
-    v.outcome.kind === 'sum' && v.outcome.central === true && v.prescription.family !== 'truncation' && v.prescription.family !== 'coupling' && v.outcome.truncation !== undefined
+    v.outcome.kind === 'sum' &&
+    v.outcome.central === true &&
+    v.prescription.family !== 'truncation' &&
+    v.prescription.family !== 'coupling' &&
+    v.outcome.truncation !== undefined
       ? [{ value: R.toNumber(v.outcome.value), error: v.outcome.truncation }]
       : [],
   );
@@ -51,7 +85,10 @@ function centralSpread(values: readonly Evaluated[]): Caution | undefined {
   const range = Math.max(...rows.map((r) => r.value)) - Math.min(...rows.map((r) => r.value));
   const error = Math.max(...rows.map((r) => r.error));
   return range > SPREAD_FACTOR * error && range > 0
-    ? { code: 'prescriptions-disagree', text: 'the resummed values differ by more than three times their own errors: the choice of prescription matters here' }
+    ? {
+        code: 'prescriptions-disagree',
+        text: 'the resummed values differ by more than three times their own errors: the choice of prescription matters here',
+      }
     : undefined;
 }
 

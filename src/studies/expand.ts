@@ -2,7 +2,17 @@
  * @module From a Series and a coupling to an Expansion: where the bookkeeping of files ends and numerics begins.
  */
 import type { Expansion, KnownSingularity, Running, Series, StatedSingularity, Uncertain } from '../series/index.js';
-import { addExact, divExact, exact, isZeroExact, R, Rational, signExact, subExact, toNumberExact } from '../numerics/index.js';
+import {
+  addExact,
+  divExact,
+  exact,
+  isZeroExact,
+  R,
+  Rational,
+  signExact,
+  subExact,
+  toNumberExact,
+} from '../numerics/index.js';
 import type { Exact } from '../numerics/index.js';
 import { betaCoefficients, divisorSize, expectedSingularity, isRefusal, uPerT } from '../qcd/index.js';
 import type { GrowthInput, GrowthTerm } from '../growth/index.js';
@@ -32,7 +42,10 @@ export function expand(series: Series, at: Exact, order?: number): Expanded {
   const leadingZeros = firstNonZero < 0 ? 0 : firstNonZero;
   const coefficients = values.slice(leadingZeros);
   const relativeErrors = kept.slice(leadingZeros).map(relativeError);
-  const scale = series.coupling.plain || series.flavours === undefined ? undefined : uPerT(series.flavours, series.coupling.divisor);
+  const scale =
+    series.coupling.plain || series.flavours === undefined
+      ? undefined
+      : uPerT(series.flavours, series.coupling.divisor);
   const stated = statedSingularities(series, leadingZeros, scale);
   const expansion: Expansion = {
     x: divExact(at, series.coupling.plain ? exact(1) : divisorSize(series.coupling.divisor)),
@@ -45,7 +58,9 @@ export function expand(series: Series, at: Exact, order?: number): Expanded {
     ...runningOf(series),
   };
   const growthInput: GrowthInput = {
-    terms: coefficients.map((c, n) => growthTerm(c, relativeErrors[n]!, kept[n + leadingZeros]!.status === 'estimated')),
+    terms: coefficients.map((c, n) =>
+      growthTerm(c, relativeErrors[n]!, kept[n + leadingZeros]!.status === 'estimated'),
+    ),
     expected: stated.map((s) => ({
       t: toNumberExact(s.t),
       ...(s.exponent === undefined ? {} : { exponent: toNumberExact(s.exponent) }),
@@ -115,8 +130,12 @@ function statedSingularities(series: Series, leadingZeros: number, scale: Exact 
     if (t === undefined || signExact(t) === 0) continue;
     const expected = s.exponent === undefined ? expectation(series, u, s) : undefined;
     // A stated exponent refers to c_n with n counted from the file's first coefficient.
-    const exponent = s.exponent !== undefined ? addExact(s.exponent, exact(leadingZeros)) : expected && addExact(expected.exponent, exact(shift));
-    const dimension = s.dimension !== undefined ? exact(s.dimension) : u !== undefined && signExact(u) > 0 ? addExact(u, u) : undefined;
+    const exponent =
+      s.exponent !== undefined
+        ? addExact(s.exponent, exact(leadingZeros))
+        : expected && addExact(expected.exponent, exact(shift));
+    const dimension =
+      s.dimension !== undefined ? exact(s.dimension) : u !== undefined && signExact(u) > 0 ? addExact(u, u) : undefined;
     list.push({
       t,
       ...(u === undefined ? {} : { u }),
@@ -129,7 +148,11 @@ function statedSingularities(series: Series, leadingZeros: number, scale: Exact 
     });
   }
   for (const c of series.condensates) {
-    if (scale === undefined || list.some((s) => s.dimension !== undefined && isZeroExact(subExact(s.dimension, exact(c.dimension))))) continue;
+    if (
+      scale === undefined ||
+      list.some((s) => s.dimension !== undefined && isZeroExact(subExact(s.dimension, exact(c.dimension))))
+    )
+      continue;
     const expected = expectation(series, exact(c.dimension.div(TWO)), {});
     if (expected === undefined) continue;
     list.push({

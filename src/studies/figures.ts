@@ -41,9 +41,13 @@ export function indicative(x: number, digits = INDICATIVE_DIGITS): string {
 export function estimateText(value: number, error: number): { value: string; error: string } {
   if (!(error > 0) || !Number.isFinite(error)) return { value: indicative(value, 12), error: '0' };
   const place = Math.floor(Math.log10(error)) - 1;
-  if (place < -14 || place > 6) return { value: indicative(value, 12), error: error.toExponential(1).replace('e+', 'e') };
+  if (place < -14 || place > 6)
+    return { value: indicative(value, 12), error: error.toExponential(1).replace('e+', 'e') };
   return place >= 0
-    ? { value: String(Math.round(value / 10 ** place) * 10 ** place), error: String(Math.round(error / 10 ** place) * 10 ** place) }
+    ? {
+        value: String(Math.round(value / 10 ** place) * 10 ** place),
+        error: String(Math.round(error / 10 ** place) * 10 ** place),
+      }
     : { value: value.toFixed(-place), error: error.toFixed(-place) };
 }
 

@@ -39,12 +39,19 @@ export function growthReport(growth: Growth, expanded: Expanded): GrowthReport {
               ...(c.deltaAICc === undefined ? {} : { deltaAICc: indicative(c.deltaAICc, 3) }),
               ...(c.growthOrder === undefined
                 ? {}
-                : { growthOrder: indicative(c.growthOrder.value, 3), growthOrderError: indicative(c.growthOrder.error, 2) }),
+                : {
+                    growthOrder: indicative(c.growthOrder.value, 3),
+                    growthOrderError: indicative(c.growthOrder.error, 2),
+                  }),
               inversePosition: indicative(c.inversePosition, 4),
               wording: c.wording,
             },
           }),
-      predictions: growth.predictions.map((p) => ({ n: p.n, method: p.method, relativeMiss: indicative(p.relativeMiss, 3) })),
+      predictions: growth.predictions.map((p) => ({
+        n: p.n,
+        method: p.method,
+        relativeMiss: indicative(p.relativeMiss, 3),
+      })),
       competition: growth.competition,
     },
     ...(growth.usableCoefficients === undefined ? {} : { usableCoefficients: growth.usableCoefficients }),
@@ -60,7 +67,11 @@ function singularityReport(s: FoundSingularity, expanded: Expanded): Singularity
   const strength = s.strength && estimateText(s.strength.value, s.strength.error);
   const degrees = s.angle && estimateText((s.angle.value * 180) / Math.PI, (s.angle.error * 180) / Math.PI);
   const kind =
-    s.kind === 'positive axis' ? 'infrared (positive axis)' : s.kind === 'negative axis' ? 'ultraviolet (negative axis)' : s.kind;
+    s.kind === 'positive axis'
+      ? 'infrared (positive axis)'
+      : s.kind === 'negative axis'
+        ? 'ultraviolet (negative axis)'
+        : s.kind;
   return {
     t: t.value,
     tError: t.error,
@@ -91,7 +102,8 @@ function compare(growth: Growth, stated: readonly StatedSingularity[]): string |
   const first = stated[0];
   if (first === undefined) return undefined;
   if (found === undefined) return 'the terms alone do not fix a position; the expected one is not tested';
-  if (found.kind === 'complex pair') return 'the terms show a complex pair; the expected singularities lie on the real axis';
+  if (found.kind === 'complex pair')
+    return 'the terms show a complex pair; the expected singularities lie on the real axis';
   const t0 = toNumberExact(first.t);
   const same = stated.find((s) => Math.sign(toNumberExact(s.t)) === Math.sign(found.t.value)) ?? first;
   const t = toNumberExact(same.t);
@@ -102,6 +114,7 @@ function compare(growth: Growth, stated: readonly StatedSingularity[]): string |
       : deviation <= 0.15 * Math.abs(t)
         ? 'lies within 15 % of'
         : 'differs from';
-  const nearer = same !== first ? `; the nearest expected one, at t = ${indicative(t0)}, does not show in these terms yet` : '';
+  const nearer =
+    same !== first ? `; the nearest expected one, at t = ${indicative(t0)}, does not show in these terms yet` : '';
   return `the position found ${words} the expected t = ${indicative(t)} (${same.kind}, ${same.origin})${nearer}`;
 }

@@ -19,12 +19,25 @@ export function planeReport(expanded: Expanded, growth: Growth, digits: number):
   const e = expanded.expansion;
   const usable = Math.min(e.coefficients.length, growth.usableCoefficients ?? MOST, MOST);
   const variable = expanded.uPerT === undefined ? 't' : 't (u = uPerT * t)';
-  const empty = (note: string): BorelPlaneReport => ({ variable, entries: [], doublets: 0, notes: [note], standing: 'certified' });
+  const empty = (note: string): BorelPlaneReport => ({
+    variable,
+    entries: [],
+    doublets: 0,
+    notes: [note],
+    standing: 'certified',
+  });
   if (growth.verdict === 'terminating') return empty('the series terminates: its Borel transform is a polynomial');
-  if (growth.verdict === 'superfactorial') return empty('growth faster than n!: the order-1 Borel transform has zero radius of convergence, there is no plane to show');
-  if (usable < 3) return empty(`${usable} usable coefficient${usable === 1 ? '' : 's'}: an approximant with a pole and a check needs three`);
+  if (growth.verdict === 'superfactorial')
+    return empty(
+      'growth faster than n!: the order-1 Borel transform has zero radius of convergence, there is no plane to show',
+    );
+  if (usable < 3)
+    return empty(
+      `${usable} usable coefficient${usable === 1 ? '' : 's'}: an approximant with a pole and a check needs three`,
+    );
   const b = leroyParameter(e, growth);
-  const transforms = b === undefined || b.isZero() || b.cmp(Rational.of(-1)) <= 0 ? [Rational.ZERO] : [Rational.ZERO, b];
+  const transforms =
+    b === undefined || b.isZero() || b.cmp(Rational.of(-1)) <= 0 ? [Rational.ZERO] : [Rational.ZERO, b];
   const noise = Math.max(0, ...e.relativeErrors.slice(0, usable));
   const shown = Math.min(digits, POLE_DIGITS);
   const scale = expanded.uPerT === undefined ? undefined : toNumberExact(expanded.uPerT);
@@ -37,7 +50,8 @@ export function planeReport(expanded: Expanded, growth: Growth, digits: number):
     }
   }
   const notes: string[] = [];
-  if (usable < e.coefficients.length) notes.push(`the plane is drawn from the first ${usable} of ${e.coefficients.length} coefficients`);
+  if (usable < e.coefficients.length)
+    notes.push(`the plane is drawn from the first ${usable} of ${e.coefficients.length} coefficients`);
   const missing = entries.filter((x) => !x.exists);
   if (missing.length > 0) notes.push(`not existing (degenerate block): ${missing.map((x) => labelOf(x)).join(', ')}`);
   if (entries.some((x) => x.poles.some((p) => p.note === 'near-axis')))
@@ -49,7 +63,14 @@ export function planeReport(expanded: Expanded, growth: Growth, digits: number):
 const labelOf = (x: PadeEntry): string => (x.leroy === '0' ? x.label : `${x.label} (b = ${x.leroy})`);
 
 function entryReport(a: Approximant, leroy: Rational, digits: number, scale: number | undefined): PadeEntry {
-  if (a.exists !== true) return { label: a.label, leroy: leroy.toString(), exists: false, ...(a.reason === undefined ? {} : { reason: a.reason }), poles: [] };
+  if (a.exists !== true)
+    return {
+      label: a.label,
+      leroy: leroy.toString(),
+      exists: false,
+      ...(a.reason === undefined ? {} : { reason: a.reason }),
+      poles: [],
+    };
   const near = new Set(nearAxisPoles(a.poles));
   return {
     label: a.label,

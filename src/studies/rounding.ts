@@ -15,8 +15,14 @@ export function writeVerdict(value: string, components: readonly Component[]): s
   const largest = Math.max(0, ...components.map((c) => c.error));
   const shown = components.filter((c) => c.error >= NEGLIGIBLE * largest);
   const hidden = components.filter((c) => c.error < NEGLIGIBLE * largest);
-  const rounded = roundPdg(value, shown.map((c) => c.error.toPrecision(6)));
+  const rounded = roundPdg(
+    value,
+    shown.map((c) => c.error.toPrecision(6)),
+  );
   if (rounded === undefined) return value;
-  const text = writePlusMinus(rounded, shown.map((c) => c.label));
+  const text = writePlusMinus(
+    rounded,
+    shown.map((c) => c.label),
+  );
   return hidden.length === 0 ? text : `${text}; ${hidden.map((c) => c.label).join(' and ')} negligible`;
 }

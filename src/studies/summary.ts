@@ -24,7 +24,9 @@ export function seriesSummary(series: Series, expanded: Expanded): SeriesSummary
     ...(series.scheme === undefined ? {} : { scheme: series.scheme }),
     ...(series.flavours === undefined ? {} : { flavours: series.flavours }),
     ...(series.scaleRatio === undefined ? {} : { scaleRatio: exactText(series.scaleRatio, INPUT_DIGITS) }),
-    ...(series.hardScale === undefined ? {} : { hardScale: { value: series.hardScale.text, unit: series.hardScale.unit } }),
+    ...(series.hardScale === undefined
+      ? {}
+      : { hardScale: { value: series.hardScale.text, unit: series.hardScale.unit } }),
     factor: exactText(series.factor, INPUT_DIGITS),
     additive: exactText(series.additive, INPUT_DIGITS),
     sources: series.sources,
@@ -54,7 +56,13 @@ export function lambdaOverQ(series: Series, at: Exact): number | undefined {
   return overMu * (series.scaleRatio === undefined ? 1 : toNumberExact(series.scaleRatio));
 }
 
-export function couplingSummary(series: Series, at: Uncertain, expanded: Expanded, digits: number, path?: readonly string[]): CouplingSummary {
+export function couplingSummary(
+  series: Series,
+  at: Uncertain,
+  expanded: Expanded,
+  digits: number,
+  path?: readonly string[],
+): CouplingSummary {
   const over = lambdaOverQ(series, at.value);
   const Q = hardScaleGeV(series);
   const ratio = series.scaleRatio === undefined ? 1 : toNumberExact(series.scaleRatio);
@@ -80,6 +88,7 @@ export function couplingSummary(series: Series, at: Uncertain, expanded: Expande
 
 function errorText(at: Uncertain): string {
   const { plus, minus } = at.error!;
-  return plus.equals(minus) ? indicative(plus.toNumber(), 6) : `+${indicative(plus.toNumber(), 6)} -${indicative(minus.toNumber(), 6)}`;
+  return plus.equals(minus)
+    ? indicative(plus.toNumber(), 6)
+    : `+${indicative(plus.toNumber(), 6)} -${indicative(minus.toNumber(), 6)}`;
 }
-

@@ -26,7 +26,10 @@ export function termTable(series: Series, expanded: Expanded, digits: number): T
   const sums = partialSums(e, prec);
   const found = leastTerm(t);
   const lastNonZero = t.reduce((m, b, n) => (R.isExactZero(b) ? m : n), -1);
-  const least = found === undefined ? undefined : { ...found, reached: found.index !== lastNonZero || found.tiedWith !== undefined };
+  const least =
+    found === undefined
+      ? undefined
+      : { ...found, reached: found.index !== lastNonZero || found.tiedWith !== undefined };
   const rows: TermRow[] = [];
   for (let k = 0; k < expanded.leadingZeros; k++)
     rows.push({ order: series.firstPower + k, coefficient: '0', term: '0', partialSum: ballText(sums[0]!, digits) });

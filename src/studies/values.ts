@@ -29,7 +29,13 @@ export interface Evaluated {
 const SHIFT_DIGITS = 12;
 
 /** Runs the prescriptions; the family's central member also gets its input error. */
-export function evaluateAll(e: Expansion, growth: Growth, prescriptions: readonly Prescription[], digits: number, inputs: Inputs): Evaluated[] {
+export function evaluateAll(
+  e: Expansion,
+  growth: Growth,
+  prescriptions: readonly Prescription[],
+  digits: number,
+  inputs: Inputs,
+): Evaluated[] {
   return prescriptions.flatMap((prescription) =>
     prescription.apply(e, growth, { digits }).map((outcome): Evaluated => {
       if (outcome.kind === 'refusal' || outcome.central !== true) return { prescription, outcome };
@@ -49,9 +55,14 @@ function inputError(e: Expansion, growth: Growth, p: Prescription, sum: Sum, inp
     const [a, b] = [at(up), at(down)];
     return a === undefined || b === undefined ? undefined : a - b;
   };
-  const fromX = inputs.xError > 0 ? slope({ ...e, x: scaledBy(e.x, 1 + inputs.xError / 2) }, { ...e, x: scaledBy(e.x, 1 - inputs.xError / 2) }) : 0;
+  const fromX =
+    inputs.xError > 0
+      ? slope({ ...e, x: scaledBy(e.x, 1 + inputs.xError / 2) }, { ...e, x: scaledBy(e.x, 1 - inputs.xError / 2) })
+      : 0;
   const noisy = inputs.coefficientErrors.flatMap((s, n) => (s > 0 && n < e.coefficients.length ? [n] : []));
-  const fromC = noisy.map((n) => slope(shift(e, n, inputs.coefficientErrors[n]! / 2), shift(e, n, -inputs.coefficientErrors[n]! / 2)));
+  const fromC = noisy.map((n) =>
+    slope(shift(e, n, inputs.coefficientErrors[n]! / 2), shift(e, n, -inputs.coefficientErrors[n]! / 2)),
+  );
   if (inputs.xError === 0 && noisy.length === 0) return undefined;
   if (fromX === undefined || fromC.some((s) => s === undefined)) return undefined;
   let variance = fromX * fromX;
@@ -69,14 +80,21 @@ function scaledBy(x: Exact, factor: number): Exact {
 }
 
 function shift(e: Expansion, n: number, by: number): Expansion {
-  return { ...e, coefficients: e.coefficients.map((c, k) => (k === n ? addExact(c, exact(Rational.fromNumber(by))) : c)) };
+  return {
+    ...e,
+    coefficients: e.coefficients.map((c, k) => (k === n ? addExact(c, exact(Rational.fromNumber(by))) : c)),
+  };
 }
 
 /** The plain row of the result. */
 export function valueEntry(v: Evaluated, digits: number): ValueEntry {
   const { prescription, outcome } = v;
   if (outcome.kind === 'refusal')
-    return { prescription: prescription.name, variant: outcome.variant, refused: { reason: outcome.reason, remedy: outcome.remedy } };
+    return {
+      prescription: prescription.name,
+      variant: outcome.variant,
+      refused: { reason: outcome.reason, remedy: outcome.remedy },
+    };
   const im = outcome.imaginary;
   const hasIm = im !== undefined;
   return {
@@ -84,7 +102,12 @@ export function valueEntry(v: Evaluated, digits: number): ValueEntry {
     variant: outcome.variant,
     value: ballText(outcome.value, digits),
     ...(outcome.truncation === undefined ? {} : { truncationError: indicative(outcome.truncation, 3) }),
-    ...(hasIm ? { ambiguity: indicative(Math.abs(R.toNumber(im)) / Math.PI, 6), imaginary: R.isExactZero(im) ? '0' : ballText(im, digits) } : {}),
+    ...(hasIm
+      ? {
+          ambiguity: indicative(Math.abs(R.toNumber(im)) / Math.PI, 6),
+          imaginary: R.isExactZero(im) ? '0' : ballText(im, digits),
+        }
+      : {}),
     ...(v.input === undefined ? {} : { inputError: indicative(v.input, 3) }),
     termsUsed: outcome.termsUsed,
     standing: outcome.trust,

@@ -4,13 +4,15 @@
  * House rule "ladder": the first rung that stands gives the value,
  *   0. coefficient errors above the coefficients, fewer than three above the noise, or growth beyond every (kn)!: no value;
  *   1. growth terminating, convergent or geometric: the fixed-order sum;
- *   2. fewer than four coefficients: the fixed-order sum (nothing pretends to resum);
+ *   2. fewer than four coefficients, or growth undecided with no singularity stated: the fixed-order sum (nothing
+ *      pretends to resum);
  *   3. a converged Borel–Padé sum (two orders agree to 1e−6), Leroy before plain, order 2 where the growth is (2n)!;
  *   4. the singularity model, where positions and exponents are stated and its strengths do not cancel;
  *   5. Borel–Leroy–Padé, then Borel–Padé (central entry);
  *   6. least term with terminant; 7. least term; 8. fixed order.
  * Truncation error: the prescription's own, never below the half-spread of rungs 4 and 5 where both stand.
  * Ambiguity: |Im|/π of the chosen lateral sums, or the least term. Input: propagated. Nothing is averaged.
+ * Other rules, chosen by name (verdict-rule.ts): fixed-order, least-term, prescription:NAME.
  */
 import { R } from '../numerics/index.js';
 import type { Convention } from '../ambiguity/index.js';
@@ -19,12 +21,21 @@ import type { Standing, VerdictReport } from './assessment.js';
 import { ballText, indicative } from './figures.js';
 import { writeVerdict } from './rounding.js';
 import type { Evaluated } from './values.js';
+import { LADDER, ruleName } from './verdict-rule.js';
+import type { VerdictRule } from './verdict-rule.js';
 
-export const RULE_NAME = 'ladder';
 const SHORT = 4;
 /** Fewer usable coefficients than this: the noise decides the value. */
 const NOISY = 3;
-const RUNGS = ['singularity-model', 'borel-leroy-pade', 'borel-pade', 'borel-pade-2', 'terminant', 'least-term', 'fixed-order'];
+const RUNGS = [
+  'singularity-model',
+  'borel-leroy-pade',
+  'borel-pade',
+  'borel-pade-2',
+  'terminant',
+  'least-term',
+  'fixed-order',
+];
 const BOREL = ['borel-leroy-pade', 'borel-pade', 'borel-pade-2'];
 const DIGITS = 15;
 
@@ -38,12 +49,22 @@ function central(values: readonly Evaluated[], name: string): Evaluated | undefi
 }
 
 function choose(values: readonly Evaluated[], growth: Growth, count: number): Choice | string {
-  if (growth.flags.some((f) => f.code === 'errors-exceed-values')) return 'the coefficient errors exceed the coefficients';
-  if (growth.usableCoefficients !== undefined && growth.usableCoefficients < NOISY) return 'the coefficients are too noisy: no method can tell their sum';
-  if (growth.verdict === 'superfactorial' && growth.order !== 2) return 'the coefficients grow faster than any (kn)!: no sum is unique';
+  if (growth.flags.some((f) => f.code === 'errors-exceed-values'))
+    return 'the coefficient errors exceed the coefficients';
+  if (growth.usableCoefficients !== undefined && growth.usableCoefficients < NOISY)
+    return 'the coefficients are too noisy: no method can tell their sum';
+  if (growth.verdict === 'superfactorial' && growth.order !== 2)
+    return 'the coefficients grow faster than any (kn)!: no sum is unique';
   const fixed = central(values, 'fixed-order');
-  if (['terminating', 'convergent', 'geometric'].includes(growth.verdict)) return fixed === undefined ? 'there are no terms' : { v: fixed, rung: `growth ${growth.verdict}` };
-  if (count < SHORT) return fixed === undefined ? 'there are no terms' : { v: fixed, rung: `fewer than ${SHORT} coefficients` };
+  if (['terminating', 'convergent', 'geometric'].includes(growth.verdict))
+    return fixed === undefined ? 'there are no terms' : { v: fixed, rung: `growth ${growth.verdict}` };
+  if (count < SHORT)
+    return fixed === undefined ? 'there are no terms' : { v: fixed, rung: `fewer than ${SHORT} coefficients` };
+  const structured = central(values, 'singularity-model') ?? central(values, 'terminant');
+  if (growth.verdict === 'undecided' && structured === undefined)
+    return fixed === undefined
+      ? 'there are no terms'
+      : { v: fixed, rung: 'growth undecided and no singularity stated' };
   for (const name of BOREL) {
     const v = central(values, name);
     if (v?.outcome.kind === 'sum' && v.outcome.trust === 'converged') return { v, rung: 'converged Borel sum' };
@@ -51,10 +72,40 @@ function choose(values: readonly Evaluated[], growth: Growth, count: number): Ch
   for (const name of RUNGS) {
     const v = central(values, name);
     if (v === undefined || v.outcome.kind !== 'sum') continue;
-    if (name === 'singularity-model' && v.outcome.notes.some((n) => n.startsWith('large contributions cancel'))) continue;
+    if (name === 'singularity-model' && v.outcome.notes.some((n) => n.startsWith('large contributions cancel')))
+      continue;
     return { v, rung: v.prescription.title };
   }
   return 'every prescription refused';
+}
+
+/** The value of a rule that names its prescription; why there is none otherwise. */
+function named(values: readonly Evaluated[], name: string): Choice | string {
+  const v = central(values, name);
+  if (v !== undefined) return { v, rung: v.prescription.title };
+  const refused = values.find((one) => one.prescription.name === name && one.outcome.kind === 'refusal');
+  return refused?.outcome.kind === 'refusal' ? `${name} refused: ${refused.outcome.reason}` : `${name} gave no value`;
+}
+
+/** The value that the rule picks. */
+function pick(values: readonly Evaluated[], growth: Growth, count: number, rule: VerdictRule): Choice | string {
+  switch (rule.kind) {
+    case 'ladder':
+      return choose(values, growth, count);
+    case 'fixed-order':
+      return named(values, 'fixed-order');
+    case 'least-term': {
+      // Where the terms still fall, the smallest known one is the last.
+      const least = central(values, 'least-term');
+      const fixed = central(values, 'fixed-order');
+      if (least !== undefined) return { v: least, rung: 'least term reached' };
+      return fixed === undefined
+        ? 'there are no terms'
+        : { v: fixed, rung: 'no least term to cut at: the sum of all terms' };
+    }
+    case 'prescription':
+      return named(values, rule.name);
+  }
 }
 
 /** Half-spread of the model and the Borel–Padé sums that stand. */
@@ -68,15 +119,27 @@ function spread(values: readonly Evaluated[], chosen: Evaluated): number {
   return numbers.length < 2 ? 0 : (Math.max(...numbers) - Math.min(...numbers)) / 2;
 }
 
-export function verdict(values: readonly Evaluated[], growth: Growth, count: number, ambiguity: Convention | undefined): VerdictReport {
-  const rule = `${RULE_NAME} (docs/verdict.md)`;
-  const picked = choose(values, growth, count);
+export function verdict(
+  values: readonly Evaluated[],
+  growth: Growth,
+  count: number,
+  ambiguity: Convention | undefined,
+  by: VerdictRule = LADDER,
+): VerdictReport {
+  const rule = `${ruleName(by)} (docs/verdict.md)`;
+  const picked = pick(values, growth, count, by);
   if (typeof picked === 'string') return { printed: `no value: ${picked}`, rule, standing: 'indicative' };
   const { v, rung } = picked;
   const outcome = v.outcome;
   if (outcome.kind !== 'sum') return { printed: 'no value', rule, standing: 'indicative' };
-  const truncation = outcome.truncation === undefined ? undefined : Math.max(outcome.truncation, outcome.trust === 'converged' ? 0 : spread(values, v));
-  const amount = ambiguity !== undefined && ambiguity.value > 0 && v.prescription.name !== 'fixed-order' ? ambiguity.value : undefined;
+  const truncation =
+    outcome.truncation === undefined
+      ? undefined
+      : Math.max(outcome.truncation, by.kind !== 'ladder' || outcome.trust === 'converged' ? 0 : spread(values, v));
+  const amount =
+    ambiguity !== undefined && ambiguity.value > 0 && v.prescription.name !== 'fixed-order'
+      ? ambiguity.value
+      : undefined;
   const parts = [
     { label: 'truncation', error: truncation },
     { label: 'ambiguity', error: amount },

@@ -11,7 +11,11 @@ import type { Assessment } from '../../src/studies/index.js';
 import { benchFile, benchSeries } from '../support/bench.js';
 
 function run(id: string, x: string, count?: number): Assessment {
-  return assess(benchSeries(benchFile(id), count), { value: exact(Rational.parse(x)!), text: x }, { digits: 15, request: {} });
+  return assess(
+    benchSeries(benchFile(id), count),
+    { value: exact(Rational.parse(x)!), text: x },
+    { digits: 15, request: {} },
+  );
 }
 
 /** [file, largest relative error of the verdict's value from 24 coefficients at the smallest reference coupling]. */
@@ -72,7 +76,14 @@ describe('verdict against the exact sum, 24 coefficients', () => {
 
 describe('the stated truncation error covers what happened', () => {
   // At the largest reference couplings, where sums from 24 coefficients have visible errors.
-  it.each(['s13_mass_like', 's25_airy_bi', 's34_fresnel_f', 's41_aho_quartic_negative', 's46_zerodim_phi4', 's47_zerodim_phi4_negative'])('%s', (id) => {
+  it.each([
+    's13_mass_like',
+    's25_airy_bi',
+    's34_fresnel_f',
+    's41_aho_quartic_negative',
+    's46_zerodim_phi4',
+    's47_zerodim_phi4_negative',
+  ])('%s', (id) => {
     const r = benchFile(id).references.at(-1)!;
     const a = run(id, r.x, 24);
     const miss = Math.abs(Number(a.verdict.value) - Number(r.pv));
@@ -81,7 +92,14 @@ describe('the stated truncation error covers what happened', () => {
 });
 
 describe('optimal truncation order as seen in the terms', () => {
-  it.each(['s01_euler_alternating', 's02_euler_nonalternating', 's10_uv1_ir2_branch', 's13_mass_like', 's24_airy_ai', 's40_aho_quartic'])('%s', (id) => {
+  it.each([
+    's01_euler_alternating',
+    's02_euler_nonalternating',
+    's10_uv1_ir2_branch',
+    's13_mass_like',
+    's24_airy_ai',
+    's40_aho_quartic',
+  ])('%s', (id) => {
     const file = benchFile(id);
     const o = file.optimal_truncation[2]!;
     const a = run(id, o.x, 60);

@@ -78,18 +78,30 @@ describe('Laplace integral of a rational function', () => {
     const b = q('0.3951');
     const G = R.fromRational(q('1/4'), 220);
     const run = (amplitudes: number[]): { pv: string; im: string } => {
-      const s = laplace([], [{ z: { re: R.ONE, im: R.ZERO }, real: true, amplitudes: amplitudes.map((x) => ({ re: R.fromNumber(x), im: R.ZERO })) }], G, b, 220);
+      const s = laplace(
+        [],
+        [
+          {
+            z: { re: R.ONE, im: R.ZERO },
+            real: true,
+            amplitudes: amplitudes.map((x) => ({ re: R.fromNumber(x), im: R.ZERO })),
+          },
+        ],
+        G,
+        b,
+        220,
+      );
       return { pv: near.text(R.mul(s.pv, G, 220)), im: near.text(R.mul(s.im, G, 220)) };
     };
     // 1/(t−1) = −1/(1−t); 1/(t−1)² = 1/(1−t)².
     const one = run([-1]);
     const two = run([0, 1]);
     const scale = 0.25 ** 0.3951 * gamma13951;
-    expect(value(one.pv) * scale).toBeCloseTo(-0.206013618863410686738948646056881635, 12);
-    expect(value(one.im) * scale).toBeCloseTo(-0.0575402765786508252554207807448297505, 12);
-    expect(value(two.pv) * scale).toBeCloseTo(0.229425164757994555775684797798811936, 12);
+    expect(value(one.pv) * scale).toBeCloseTo(-0.20601361886341069, 12);
+    expect(value(one.im) * scale).toBeCloseTo(-0.05754027657865083, 12);
+    expect(value(two.pv) * scale).toBeCloseTo(0.22942516475799456, 12);
   });
 });
 
 /** Γ(1.3951), mpmath 1.3.0. */
-const gamma13951 = 0.887541674937311758593;
+const gamma13951 = 0.8875416749373118;

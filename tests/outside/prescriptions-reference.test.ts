@@ -20,7 +20,12 @@ import { near } from '../support/near.js';
 
 const q = (s: string): Rational => Rational.parse(s)!;
 
-function series(coefficients: readonly string[], flavours: number, divisor: Series['coupling']['divisor'], dimension?: number): Series {
+function series(
+  coefficients: readonly string[],
+  flavours: number,
+  divisor: Series['coupling']['divisor'],
+  dimension?: number,
+): Series {
   return {
     id: 'reference',
     title: 'reference',
@@ -44,7 +49,12 @@ const ADLER = await (async (): Promise<Series> => {
   const base = series(['283'], 3, 'pi');
   return { ...base, coefficients: [...adler.coefficients, ...base.coefficients] };
 })();
-const POLE = ['0.424413181578387562050356702326704965', '0.940037677596881375902024883767211088', '3.03856207140654574339725302220426627', '12.6475494086811788301097899299705359'];
+const POLE = [
+  '0.424413181578387562050356702326704965',
+  '0.940037677596881375902024883767211088',
+  '3.03856207140654574339725302220426627',
+  '12.6475494086811788301097899299705359',
+];
 
 function run(p: Prescription, s: Series, alpha: string): Sum[] {
   const expanded = expand(s, exact(q(alpha)));
@@ -79,7 +89,12 @@ describe('Borel–Padé of the Adler function, n_f = 3, c_5 = 283, α = 0.32', (
 
 describe('singularity model of M. Beneke and M. Jamin, arXiv:0806.3156', () => {
   // Published: residues −1.56e−2, 3.16, −13.5, polynomial 0.781, 7.66e−3, c_6 = 3275 (memory, all re-derived).
-  const gluon = expectedSingularity({ flavours: 3, dimension: 4, divisor: 'pi', wilson: { corrections: [exact(q('-11/18'))] } });
+  const gluon = expectedSingularity({
+    flavours: 3,
+    dimension: 4,
+    divisor: 'pi',
+    wilson: { corrections: [exact(q('-11/18'))] },
+  });
   const six = expectedSingularity({ flavours: 3, dimension: 6, divisor: 'pi' });
   const uv = expectedSingularity({ flavours: 3, dimension: -2, divisor: 'pi', anomalousDimension: exact(-1) });
   const two = (s: typeof gluon): { t: typeof s.t; exponent: typeof s.exponent; corrections: typeof s.corrections } => ({
