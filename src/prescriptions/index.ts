@@ -23,3 +23,4 @@ export type { Outcome, Prescription, Refusal, Request, Sum, Trust } from './pres
 export { leastTerm, partialSums, prefactor, terms } from './prescription.js';
 export { leroyParameter } from './borel-pade.js';
 export { imaginaryPieces } from './singularity-model.js';
+export { nextCoefficient } from './next-coefficient.js';
