@@ -88,13 +88,13 @@ function evaluate(e: Expansion, cuts: Cuts, softenings: readonly Softening[], di
     cuts.right === undefined
       ? STRAIGHT
       : { ray: RAYS[0]!, first: toNumberExact(cuts.right.distance) / toNumberExact(e.x) };
-  const sums = lateralSums(
+  const found = lateralSums(
     (s, p) =>
       remappedValues(list, cuts, C.mulReal(s, e.x.ball(p), p), p).flatMap(({ full, shorter }) => [full, shorter]),
     contour,
     digits,
   );
-  return sums && softenings.map((softening, i) => ({ softening, full: sums[2 * i]!, shorter: sums[2 * i + 1]! }));
+  return found && softenings.map((softening, i) => ({ softening, full: found[2 * i]!, shorter: found[2 * i + 1]! }));
 }
 
 /** |N − (N−1)| of the member plus half the spread of all members, in units of R. */

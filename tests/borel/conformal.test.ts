@@ -120,10 +120,11 @@ describe('Adler function, n_f = 3, in u', () => {
 });
 
 describe('one cut', () => {
-  const euler = (N: number): Exact[] =>
-    Array.from({ length: N }, (_, n) =>
-      exact(Array.from({ length: n }, (_, k) => Rational.of(-(k + 1))).reduce((x, y) => x.mul(y), Rational.ONE)),
-    );
+  const euler = (N: number): Exact[] => {
+    const list = [Rational.ONE];
+    for (let n = 1; n < N; n++) list.push(list[n - 1]!.mul(Rational.of(-n)));
+    return list.map((c) => exact(c));
+  };
   const left: Cuts = { left: { distance: exact(1), exponent: exact(1) } };
   it('sums the Euler series at g = 1 as known', () => {
     const known: [number, string][] = [

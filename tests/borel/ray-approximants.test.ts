@@ -7,12 +7,8 @@ import { describe, expect, it } from 'vitest';
 import { addExact, C, exact, R, Rational } from '../../src/numerics/index.js';
 import type { Complex, Exact } from '../../src/numerics/index.js';
 import { dlogApproximant, dlogValue, logarithmicDerivative } from '../../src/borel/dlog.js';
-import {
-  quadraticApproximant,
-  quadraticDegrees,
-  quadraticPoles,
-  quadraticValue,
-} from '../../src/borel/hermite-pade.js';
+import { quadraticApproximant, quadraticPoles, quadraticValue } from '../../src/borel/hermite-pade.js';
+import { quadraticDegrees } from '../../src/borel/hermite-pade-vector.js';
 import { factorValue, withoutFactors } from '../../src/borel/partial.js';
 import { expectNear, rational } from '../support/check-value.js';
 

@@ -47,7 +47,7 @@ describe('elsewhere', () => {
     const s = central(borelHypergeometric, benchExpansion(b, '1', 9), 20);
     expectNear(s.value, '0.803815893577957088584343260238741196', 1e-14);
     expect(s.notes.join(' ')).toContain('stands apart');
-    expect(Math.abs(R.toNumber(s.value) - 0.803770651234273769)).toBeLessThan(s.truncation!);
+    expect(Math.abs(R.toNumber(s.value) - 0.8037706512342738)).toBeLessThan(s.truncation!);
   });
   it('a mass-like series: dominated by one cut, errors cover the miss', () => {
     const b = readBench('s13_mass_like');

@@ -110,8 +110,8 @@ describe('twelve terms', () => {
 
   it('runs in doubles to the accuracy that twelve terms leave', () => {
     const a = euler(12, Rational.ONE).map((q) => q.toNumber());
-    expect(last(wenigerDiagonal(doubleField, a))).toBeCloseTo(0.59634738734962854, 8);
-    expect(last(levinDiagonal(doubleField, a, 'u'))).toBeCloseTo(0.59634729411250006, 8);
+    expect(last(wenigerDiagonal(doubleField, a))).toBeCloseTo(0.5963473873, 8);
+    expect(last(levinDiagonal(doubleField, a, 'u'))).toBeCloseTo(0.5963472941, 8);
   });
 });
 
