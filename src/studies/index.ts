@@ -20,3 +20,21 @@ export { combineStudy } from './combine.js';
 export type { CombineRequest, Operand } from './combine.js';
 export { couplingScheme, schemeText } from './scheme.js';
 export type { CouplingScheme } from './scheme.js';
+export { backtest } from './backtest.js';
+export type { BacktestOptions } from './backtest.js';
+export { pool } from './backtesting/pool.js';
+export type {
+  BacktestEstimate,
+  BacktestMethod,
+  BacktestResult,
+  BacktestSummary,
+  BacktestTrial,
+  EstimateRecord,
+  PooledMethod,
+} from './backtesting/result.js';
+export { compare, SORTS } from './compare.js';
+export type { CompareOptions, ComparePoint, CompareResult, CompareRow, Sort, Spread } from './compare.js';
+export { isGridProblem, readGrid } from './grid.js';
+export type { GridProblem } from './grid.js';
+export { verdictRule, verdictRules } from './verdict-rule.js';
+export type { VerdictRule } from './verdict-rule.js';
