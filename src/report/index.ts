@@ -6,3 +6,5 @@ export { painter, unpainted } from './layout/paint.js';
 export type { TerminalOptions } from './terminal.js';
 export { truncationLines, truncationObject, truncationText } from './truncation.js';
 export { assessmentText, bareValues, growthText, planeLines, planeText, sumText } from './terminal.js';
+export { backtestCsv, backtestLines, backtestSummaryLines, backtestSummaryText, backtestText } from './backtest.js';
+export { compareCsv, compareLines, compareText } from './compare.js';
