@@ -17,8 +17,11 @@ import type { Point } from './reading.js';
 import { ballArithmetic, doubleArithmetic, extrapolate } from './richardson.js';
 import { shortFit } from './short-fit.js';
 
-/** The posterior width of the fit with priors counts as noise, this many times (its remainder is a guess). */
-const POSTERIOR = 1.2;
+/**
+ * The posterior width of the fit with priors counts as noise. At order three it is the broad prior that speaks; at
+ * seven and more the guessed remainder: the width counts `short` times there and `long` times here.
+ */
+const POSTERIOR = { short: 0.6, long: 1.2, from: 3, enough: 7 };
 /** Ratios needed before the first one of a late pattern may be left out, and how far it must be off the next one. */
 const LATE_RATIOS = 4;
 const ODD_RATIO = 0.5;
@@ -136,6 +139,9 @@ export function shortPart(points: readonly Point[], q: number): AxisPart | undef
   const late = points[0]!.k > 0 && ratios.length >= LATE_RATIOS && odd;
   const fit = shortFit(late ? ratios.slice(1) : ratios);
   if (fit === undefined || !(fit.limit.value > 0)) return undefined;
-  const posterior = (e: Estimate): Measured => ({ value: e.value, method: 0, noise: POSTERIOR * e.error });
+  const { short, long, from, enough } = POSTERIOR;
+  const part = Math.min(1, Math.max(0, (last.k - from) / (enough - from)));
+  const factor = short + (long - short) * part;
+  const posterior = (e: Estimate): Measured => ({ value: e.value, method: 0, noise: factor * e.error });
   return fromLimits(posterior(fit.limit), scale, posterior({ ...fit.exponent, value: fit.exponent.value - 1 }));
 }

@@ -148,7 +148,7 @@ export function diagnoseGrowth(input: GrowthInput): Growth {
   const radius = c.verdict === 'geometric' ? radiusOf(p) : undefined;
   const shownRows = ratioRows([...p.nonZero, ...p.estimated], stride);
   const usable = usableOf(p);
-  const shown = shortLines(p, input);
+  const shown = c.verdict === 'factorial' || c.verdict === 'undecided' ? shortLines(p, input) : { lines: [] };
   const flags = flagsOf(p, c, located, rows, input, shown.opposite);
   const tooShort = p.nonZero.length < 4;
   const nearest = located?.nearest;

@@ -21,6 +21,45 @@ export interface LinearFit {
   readonly unitVariances: readonly number[];
 }
 
+/** Applies the reflection I − 2uuᵀ/uu, u living in rows from…, to w. */
+function reflect(u: Float64Array, uu: number, from: number, w: Float64Array): void {
+  let dot = 0;
+  for (let i = from; i < w.length; i++) dot += u[i]! * w[i]!;
+  const f = (2 * dot) / uu;
+  for (let i = from; i < w.length; i++) w[i]! -= f * u[i]!;
+}
+
+/** Turns the columns a into R (in place, a[l][j] for j <= l) and b into Qᵀb; false when a column depends on others. */
+function triangularise(a: readonly Float64Array[], b: Float64Array): boolean {
+  const m = b.length;
+  for (let j = 0; j < a.length; j++) {
+    const v = a[j]!;
+    let norm = 0;
+    for (let i = j; i < m; i++) norm += v[i]! * v[i]!;
+    norm = Math.sqrt(norm);
+    if (!(norm > DEPENDENT)) return false;
+    const alpha = v[j]! > 0 ? -norm : norm;
+    // v becomes u; uu = |u|² = 2 norm (norm + |v_j|).
+    const uu = 2 * norm * (norm + Math.abs(v[j]!));
+    v[j]! -= alpha;
+    for (let l = j + 1; l < a.length; l++) reflect(v, uu, j, a[l]!);
+    reflect(v, uu, j, b);
+    v[j] = alpha;
+  }
+  return true;
+}
+
+/** Solves R x = rhs from the columns left by triangularise. */
+function backSubstitute(a: readonly Float64Array[], rhs: ArrayLike<number>): number[] {
+  const k = a.length;
+  const x = Array.from({ length: k }, (_, i) => rhs[i]!);
+  for (let j = k - 1; j >= 0; j--) {
+    for (let l = j + 1; l < k; l++) x[j]! -= a[l]![j]! * x[l]!;
+    x[j]! /= a[j]![j]!;
+  }
+  return x;
+}
+
 /** Minimises Σ w_i (y_i − Σ_j a_j x_ij)²; columns[j][i] = x_ij, weights 1 unless given. Undefined when not solvable. */
 export function leastSquares(
   columns: readonly (readonly number[])[],
@@ -30,47 +69,40 @@ export function leastSquares(
   const m = y.length;
   const k = columns.length;
   if (m < k || k === 0) return undefined;
-  const root = y.map((_, i) => Math.sqrt(weights?.[i] ?? 1));
-  const scale = columns.map((c) => Math.sqrt(c.reduce((s, v, i) => s + (v * root[i]!) ** 2, 0)));
-  if (scale.some((s) => !(s > 0) || !Number.isFinite(s))) return undefined;
-  const a = columns.map((c, j) => c.map((v, i) => (v * root[i]!) / scale[j]!));
-  const b = y.map((v, i) => v * root[i]!);
+  const root = new Float64Array(m);
+  for (let i = 0; i < m; i++) root[i] = weights === undefined ? 1 : Math.sqrt(weights[i]!);
+  const scale = new Float64Array(k);
+  const a: Float64Array[] = [];
   for (let j = 0; j < k; j++) {
-    const v = a[j]!;
-    let norm = 0;
-    for (let i = j; i < m; i++) norm += v[i]! ** 2;
-    norm = Math.sqrt(norm);
-    if (!(norm > DEPENDENT)) return undefined;
-    const alpha = v[j]! > 0 ? -norm : norm;
-    const u = v.map((x, i) => (i < j ? 0 : i === j ? x - alpha : x));
-    const uu = u.reduce((s, x) => s + x * x, 0);
-    const reflect = (w: number[]): void => {
-      let dot = 0;
-      for (let i = j; i < m; i++) dot += u[i]! * w[i]!;
-      const f = (2 * dot) / uu;
-      for (let i = j; i < m; i++) w[i]! -= f * u[i]!;
-    };
-    for (let l = j + 1; l < k; l++) reflect(a[l]!);
-    reflect(b);
-    for (let i = j; i < m; i++) v[i] = i === j ? alpha : 0;
-  }
-  // R is a[l][j], j <= l; solve R x = b and invert R for the variances.
-  const solve = (rhs: readonly number[]): number[] => {
-    const x = rhs.slice(0, k);
-    for (let j = k - 1; j >= 0; j--) {
-      for (let l = j + 1; l < k; l++) x[j]! -= a[l]![j]! * x[l]!;
-      x[j]! /= a[j]![j]!;
+    const c = columns[j]!;
+    const v = new Float64Array(m);
+    let sum = 0;
+    for (let i = 0; i < m; i++) {
+      v[i] = c[i]! * root[i]!;
+      sum += v[i]! * v[i]!;
     }
-    return x;
-  };
-  const x = solve(b);
+    scale[j] = Math.sqrt(sum);
+    if (!(sum > 0) || !Number.isFinite(sum)) return undefined;
+    for (let i = 0; i < m; i++) v[i]! /= scale[j]!;
+    a.push(v);
+  }
+  const b = new Float64Array(m);
+  for (let i = 0; i < m; i++) b[i] = y[i]! * root[i]!;
+  if (!triangularise(a, b)) return undefined;
+  const coefficients = backSubstitute(a, b).map((v, j) => v / scale[j]!);
   const unitVariances = Array.from({ length: k }, () => 0);
   for (let c = 0; c < k; c++) {
-    const e = solve(Array.from({ length: k }, (_, i) => (i === c ? 1 : 0)));
-    for (let j = 0; j < k; j++) unitVariances[j]! += (e[j]! / scale[j]!) ** 2;
+    const unit = new Float64Array(k);
+    unit[c] = 1;
+    backSubstitute(a, unit).forEach((v, j) => (unitVariances[j]! += (v / scale[j]!) ** 2));
   }
-  const coefficients = x.map((v, j) => v / scale[j]!);
-  const residuals = y.map((v, i) => v - columns.reduce((s, c, j) => s + c[i]! * coefficients[j]!, 0));
-  const rss = residuals.reduce((s, r, i) => s + (r * root[i]!) ** 2, 0);
+  const residuals: number[] = [];
+  let rss = 0;
+  for (let i = 0; i < m; i++) {
+    let r = y[i]!;
+    for (let j = 0; j < k; j++) r -= columns[j]![i]! * coefficients[j]!;
+    residuals.push(r);
+    rss += (r * root[i]!) ** 2;
+  }
   return { coefficients, rss, residuals, unitVariances };
 }

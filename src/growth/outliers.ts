@@ -121,7 +121,9 @@ export function findOutliers(points: readonly Point[], pattern: SignPattern): Se
       current = current.map((p, i) => (inner.includes(i) ? repair(p, { k: p.k, what: 'sign', offset: 0 }) : p));
     }
   }
-  for (let pass = 0; pass < allowed; pass++) {
+  // Sizes are judged only where the signs say that one singularity rules.
+  const ruled = pattern.kind !== 'irregular' || outliers.length > 0;
+  for (let pass = 0; ruled && pass < allowed; pass++) {
     const found = sizeOutlier(current);
     if (found === undefined) break;
     outliers.push(found);

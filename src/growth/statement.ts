@@ -8,6 +8,9 @@ import { place, plural, plusMinus, short } from './words.js';
 /** Exponents near 3/2 in the order-2 Borel plane belong to (n!)², near others to (2n)!. */
 const SQUARE_EXPONENT = { value: 1.5, within: 0.1 };
 
+/** A position known worse than this, relative, is only pointed to. */
+const VAGUE = 0.3;
+
 function evidenceOf(p: Prepared): string {
   const k = p.comparison?.bayesFactor;
   const n = p.nonZero.length;
@@ -31,10 +34,9 @@ function factorialText(p: Prepared, located: Located | undefined): string {
   if (located?.nearest === undefined) {
     return `${head}; the position of the nearest singularity is not resolved because ${located?.competition[0] ?? 'the ratios do not settle'}`;
   }
-  const so =
-    located.competing && located.nearest.standing === 'indicative'
-      ? 'so far the terms point to'
-      : 'the nearest Borel singularity is at';
+  const { t, standing } = located.nearest;
+  const vague = standing === 'indicative' && (located.competing || t.error > VAGUE * Math.abs(t.value));
+  const so = vague ? 'so far the terms point to' : 'the nearest Borel singularity is at';
   return `${head}; ${so} ${place(located.nearest)}${exponentText(located)}`;
 }
 

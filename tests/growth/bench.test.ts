@@ -140,7 +140,7 @@ const WANTED: Readonly<Record<string, Wanted>> = {
   s160_phi4_n0_eta: rough(-8 / 3),
   s161_phi4_n0_inv_nu: rough(-8 / 3),
   s162_phi4_n0_omega: rough(-8 / 3),
-  s163_phi4_n1_eta: { verdict: 'factorial', order: 1, pattern: 'alternating', flags: ['pre-asymptotic'] },
+  s163_phi4_n1_eta: rough(-3),
   s164_phi4_n1_inv_nu: rough(-3),
   s165_phi4_n1_omega: rough(-3),
   s170_phi4_n3_inv_nu: rough(-11 / 3),

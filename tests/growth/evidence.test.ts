@@ -31,71 +31,71 @@ const near = (actual: number | undefined, wanted: number): void => {
 describe('check values', () => {
   it('pole mass, b = 0.3696', () => {
     const c = compare(POLE, 0.3696);
-    near(c.rssGeometric, 0.100585215068788712558278698113562515);
-    near(c.rssFactorial, 0.018262364758141507156898447002145484);
-    near(c.inversePosition, 4.38256241636051857706618942355348904);
-    near(c.bayesFactor, 5.50778699258796838233835954115999489);
-    near(c.growthOrder?.value, 0.573258989851873457922203485964813106);
-    near(c.growthOrder?.error, 0.0147649874286204064953452540320926091);
+    near(c.rssGeometric, 0.10058521506878872);
+    near(c.rssFactorial, 0.018262364758141508);
+    near(c.inversePosition, 4.382562416360519);
+    near(c.bayesFactor, 5.5077869925879686);
+    near(c.growthOrder?.value, 0.5732589898518735);
+    near(c.growthOrder?.error, 0.014764987428620407);
     expect(c.wording).toBe('positive evidence for factorial growth');
     expect(c.deltaAICc).toBeUndefined();
   });
 
   it('Adler function, four coefficients', () => {
     const c = compare(ADLER);
-    near(c.rssGeometric, 0.599915440258614812999201527329661857);
-    near(c.rssFactorial, 0.0508698539170372973737709249786304132);
-    near(c.inversePosition, 2.00748934324471519624602928958475665);
-    near(c.bayesFactor, 11.7931425798274513207399091814217994);
-    near(c.growthOrder?.value, 1.39749908898773469170903202843422118);
-    near(c.growthOrder?.error, 0.0911241275510719285588821425674375879);
+    near(c.rssGeometric, 0.5999154402586148);
+    near(c.rssFactorial, 0.0508698539170373);
+    near(c.inversePosition, 2.0074893432447154);
+    near(c.bayesFactor, 11.793142579827451);
+    near(c.growthOrder?.value, 1.3974990889877348);
+    near(c.growthOrder?.error, 0.09112412755107192);
   });
 
   it('Adler function with the estimate 283 for the fifth', () => {
     const c = compare([...ADLER, '283']);
-    near(c.rssGeometric, 0.872961104360672737997846557122694779);
-    near(c.rssFactorial, 0.0691055036797690346753620283521811669);
-    near(c.inversePosition, 1.9235676995476871731642272267931914);
-    near(c.deltaAICc, 12.6812831260262524404066467356756034);
-    near(c.bayesFactor, 44.8976267861000191066769637768730597);
-    near(c.growthOrder?.value, 1.0444088507254695297324206530020265);
-    near(c.growthOrder?.error, 0.21404538517863625747736436224716916);
+    near(c.rssGeometric, 0.8729611043606728);
+    near(c.rssFactorial, 0.06910550367976903);
+    near(c.inversePosition, 1.9235676995476871);
+    near(c.deltaAICc, 12.681283126026253);
+    near(c.bayesFactor, 44.89762678610002);
+    near(c.growthOrder?.value, 1.0444088507254696);
+    near(c.growthOrder?.error, 0.21404538517863625);
     expect(c.wording).toBe('strong evidence for factorial growth');
   });
 
   it('n! 1.5^n (1 ± 0.1)', () => {
     const c = compare(FACTORIAL);
-    near(c.rssGeometric, 1.54251463855479013302951086903927239);
-    near(c.rssFactorial, 0.0552256841379612544023536255889180933);
-    near(c.inversePosition, 1.47442010418462544701263929087669167);
-    near(c.deltaAICc, 19.9784466507659109529901778734592707);
-    near(c.bayesFactor, 780.146885674549097248167466575343786);
-    near(c.growthOrder?.value, 1.01782389317292794928030513078525415);
-    near(c.growthOrder?.error, 0.112750096999636686472483696301475471);
+    near(c.rssGeometric, 1.54251463855479);
+    near(c.rssFactorial, 0.05522568413796126);
+    near(c.inversePosition, 1.4744201041846254);
+    near(c.deltaAICc, 19.97844665076591);
+    near(c.bayesFactor, 780.1468856745491);
+    near(c.growthOrder?.value, 1.017823893172928);
+    near(c.growthOrder?.error, 0.11275009699963669);
     expect(c.wording).toBe('very strong evidence for factorial growth');
   });
 
   it('2.2^n (1 ± 0.1)', () => {
     const c = compare(GEOMETRIC);
-    near(c.rssGeometric, 0.0552256841379612544023536255889180933);
-    near(c.rssFactorial, 1.44012739922368745959869664499180075);
-    near(c.inversePosition, 0.805361597200158838511463632965960222);
-    near(c.deltaAICc, -19.5663523375036498706240001203850149);
-    near(c.bayesFactor, 0.00147055198917552001582964458891955858);
-    near(c.growthOrder?.value, 0.0178238931729479302851307852541537068);
+    near(c.rssGeometric, 0.05522568413796126);
+    near(c.rssFactorial, 1.4401273992236874);
+    near(c.inversePosition, 0.8053615972001589);
+    near(c.deltaAICc, -19.56635233750365);
+    near(c.bayesFactor, 0.00147055198917552);
+    near(c.growthOrder?.value, 0.01782389317294793);
     expect(c.wording).toBe('very strong evidence for geometric growth');
   });
 
   it('the diagnosis takes b from an expected singularity whose side the signs show', () => {
     const pole = diagnoseGrowth(fromTexts(POLE, { expected: [{ t: 0.24, exponent: 1.3696, kind: 'infrared' }] }));
-    near(pole.comparison?.bayesFactor, 5.50778699258796838233835954115999489);
+    near(pole.comparison?.bayesFactor, 5.5077869925879686);
     expect(pole.comparison?.shift).toBeCloseTo(0.3696, 12);
     const expected = [
       { t: -0.444, exponent: 1.21, kind: 'ultraviolet' },
       { t: 0.889, exponent: 2.58, kind: 'infrared' },
     ];
     // Same signs: the nearest expected one, on the negative axis, is not what these terms show.
-    near(diagnoseGrowth(fromTexts(ADLER, { expected })).comparison?.bayesFactor, 11.7931425798274513207399091814217994);
+    near(diagnoseGrowth(fromTexts(ADLER, { expected })).comparison?.bayesFactor, 11.793142579827451);
   });
 });
 

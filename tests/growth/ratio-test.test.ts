@@ -34,16 +34,16 @@ function points(b: readonly number[]): readonly Point[] {
 describe('ratios and linear extrapolants', () => {
   it('are exact for a pure power', () => {
     const rows = ratioRows(points(power(0.5, GAMMA, 8)), 1);
-    const d = [2.7902, 2.3951, 2.2634, 2.19755, 2.15804, 2.1317, 2.11288571428571428571];
+    const d = [2.7902, 2.3951, 2.2634, 2.19755, 2.15804, 2.1317, 2.1128857142857145];
     rows.forEach((r, i) => expect(r.ratio).toBeCloseTo(d[i]!, 12));
     for (const r of rows.slice(1)) expect(r.linear).toBeCloseTo(2, 11);
     expect(5 * (rows[4]!.ratio / 2 - 1) + 1).toBeCloseTo(GAMMA, 11);
   });
 
   it.each([
-    [6, 2.11894228730820981688, 1.92153073690076922937, 1.12983675177746679003],
-    [12, 2.0695767642003641225, 1.99719084504024030053, 1.91818727790078308729],
-    [24, 2.03389867414216280241, 2.00048688804722846882, 1.99990723591039469535],
+    [6, 2.1189422873082098, 1.9215307369007693, 1.1298367517774668],
+    [12, 2.069576764200364, 1.9971908450402402, 1.9181872779007831],
+    [24, 2.0338986741421627, 2.0004868880472286, 1.9999072359103947],
   ])('mixed series, %i coefficients', (count, last, linear, quadratic) => {
     const rows = ratioRows(points(mixed(count)), 1);
     const [a, b] = [rows.at(-1)!, rows.at(-2)!];
@@ -58,8 +58,8 @@ describe('ratios and linear extrapolants', () => {
   it('propagates errors of the coefficients: b = 1, 2.7, 7.0(0.05), 17.5(0.6) gives 2.3148 ± 0.2726', () => {
     const d3 = 17.5 / 7;
     const d2 = 7 / 2.7;
-    expect(3 * d3 - 2 * d2).toBeCloseTo(2.31481481481481481481, 12);
-    expect(linearSigma(3, d3, d2, [0.6 / 17.5, 0.05 / 7, 0])).toBeCloseTo(0.272639584469152849539, 12);
+    expect(3 * d3 - 2 * d2).toBeCloseTo(2.314814814814815, 12);
+    expect(linearSigma(3, d3, d2, [0.6 / 17.5, 0.05 / 7, 0])).toBeCloseTo(0.2726395844691529, 12);
   });
 
   it('steps over the zeros of a lacunary series', () => {
@@ -77,12 +77,12 @@ describe('Richardson extrapolation', () => {
   const seq = ratios(points(mixed(24)), 1);
 
   it.each([
-    [1, 2.00008456598630643877],
-    [2, 2.01558637510967127843],
-    [3, 1.89138848624940737757],
-    [4, 2.59466976884919951225],
-    [5, -0.75440375074072381492],
-    [6, 13.2637229050790624219],
+    [1, 2.0000845659863065],
+    [2, 2.015586375109671],
+    [3, 1.8913884862494075],
+    [4, 2.5946697688491995],
+    [5, -0.7544037507407239],
+    [6, 13.263722905079062],
   ])('R_%i(12) of the mixed series', (m, wanted) => {
     const w = richardsonWeights(12 + m, m);
     const value = w.reduce((s, v, k) => s + v * seq[12 + k]!, 0);
@@ -108,8 +108,8 @@ describe('Richardson extrapolation', () => {
 describe('running strength', () => {
   it('N_n = b_n t*^n n!/(γ)_n tends to the strength 1 of the mixed series', () => {
     const wanted = [
-      1.9, 1.25699233029890330442, 1.15303782525837095347, 1.0568671098580978371, 1.0427975949700641398,
-      1.02390498836229535162, 1.02101908114549893258, 1.01603061769938523596,
+      1.9, 1.2569923302989032, 1.153037825258371, 1.0568671098580977, 1.042797594970064, 1.0239049883622953,
+      1.0210190811454989, 1.0160306176993852,
     ];
     const running = logStrengths(points(mixed(8)), 1, Math.log(0.5), GAMMA);
     const linear: number[] = [];
@@ -117,6 +117,6 @@ describe('running strength', () => {
       expect(Math.exp(value + lnGamma(GAMMA))).toBeCloseTo(wanted[i]!, 10);
       if (i > 0) linear.push(k * wanted[i]! - (k - 1) * wanted[i - 1]!);
     });
-    expect(linear.at(-1)).toBeCloseTo(0.986099837022703056189, 10);
+    expect(linear.at(-1)).toBeCloseTo(0.9860998370227031, 10);
   });
 });

@@ -19,8 +19,8 @@ describe('complex pair', () => {
 
   it('B_30 and cos θ_30', () => {
     const m = mercerRoberts(rows.find((r) => r.k === 30)!)!;
-    expect(m.b).toBeCloseTo(1.26226758995471766492, 9);
-    expect(m.cos).toBeCloseTo(0.621326893071826909086, 9);
+    expect(m.b).toBeCloseTo(1.2622675899547178, 9);
+    expect(m.cos).toBeCloseTo(0.6213268930718269, 9);
   });
 
   it('straight lines over k = 20 … 38', () => {
@@ -37,13 +37,13 @@ describe('complex pair', () => {
       at.map((r) => 1 / r.k),
       at.map((r) => mercerRoberts(r)!.b),
     );
-    expect(1 / c0).toBeCloseTo(0.800047374302392644186, 9);
-    expect(1 + c1 / c0).toBeCloseTo(1.30194838847121403726, 8);
+    expect(1 / c0).toBeCloseTo(0.8000473743023926, 9);
+    expect(1 + c1 / c0).toBeCloseTo(1.301948388471214, 8);
     const [cos] = line(
       at.map((r) => 1 / r.k ** 2),
       at.map((r) => mercerRoberts(r)!.cos),
     );
-    expect(cos).toBeCloseTo(0.621657508029245737043, 9);
+    expect(cos).toBeCloseTo(0.6216575080292457, 9);
   });
 
   it('the fit covers modulus, angle and exponent', () => {
@@ -74,8 +74,8 @@ describe('competing real singularities', () => {
 
   it('and strongly biased for branch points', () => {
     const [near, other] = realPositions(recurrence(branch).find((r) => r.k === 4)!)!;
-    expect(near).toBeCloseTo(1.45850364981011064313, 9);
-    expect(other).toBeCloseTo(-17.214372674668114284, 5);
+    expect(near).toBeCloseTo(1.4585036498101107, 9);
+    expect(other).toBeCloseTo(-17.214372674668116, 5);
   });
 
   it('with fixed positions and exponents the last two coefficients give the strengths', () => {
@@ -102,11 +102,11 @@ describe('D-log Padé', () => {
   );
 
   it.each([
-    [1, 1, 0.518461951331209624964, 1.26435176555657761628],
-    [1, 2, 0.4601923275977484969, 0.932637249005484071623],
-    [2, 2, 0.461750199510719092491, 0.942514696876228571856],
-    [2, 3, 0.459952426597077589618, 0.93167381914709322587],
-    [3, 3, 0.530482361186587654134, 3.34963068978667932515],
+    [1, 1, 0.5184619513312096, 1.2643517655565777],
+    [1, 2, 0.4601923275977485, 0.9326372490054841],
+    [2, 2, 0.4617501995107191, 0.9425146968762286],
+    [2, 3, 0.4599524265970776, 0.9316738191470932],
+    [3, 3, 0.5304823611865876, 3.349630689786679],
   ])('[%i/%i] of the mixed series, pole nearest 1/2', (L, M, position, exponent) => {
     const poles = dlogPoles(mixed, L, M)!;
     const pole = [...poles].sort((a, b) => Math.abs(a.position.re - 0.5) - Math.abs(b.position.re - 0.5))[0]!;

@@ -1,7 +1,7 @@
 /** @module Growth inputs for the tests: from decimal texts, from numbers, from the bench files. */
 import { readFileSync } from 'node:fs';
 import type { GrowthInput, GrowthTerm } from '../../src/growth/index.js';
-import { exact, R, Rational } from '../../src/numerics/index.js';
+import { exact, R, type Rational } from '../../src/numerics/index.js';
 import { rational } from '../support/check-value.js';
 
 /** ln|q| for any size; −Infinity for zero. */
