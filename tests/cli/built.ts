@@ -1,7 +1,8 @@
 /** @module The bundled program, built once for a test file, for what only a process can show. */
 import { spawn } from 'node:child_process';
 import { once } from 'node:events';
-import { join } from 'node:path';
+import { rmSync } from 'node:fs';
+import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 
 const ROOT = fileURLToPath(new URL('../..', import.meta.url));
@@ -12,15 +13,18 @@ interface Bundler {
 
 const isBundler = (module: object): module is Bundler => 'bundle' in module;
 
-/** Bundles into a folder of its own below node_modules, where the catalogue is found as in dist/. */
-export async function builtProgram(name: string): Promise<string> {
+/** Bundles into a folder of this process's own below node_modules, where the catalogue is found as in dist/. */
+export async function builtProgram(): Promise<string> {
   const path = new URL('../../esbuild.config.mjs', import.meta.url).href;
   const module: unknown = await import(path);
   if (typeof module !== 'object' || module === null || !isBundler(module)) throw new Error('no bundler');
-  const outdir = join(ROOT, 'node_modules', '.cache', 'leastterm', name);
+  const outdir = join(ROOT, 'node_modules', '.cache', 'leastterm', `test-${process.pid}`);
   await module.bundle(outdir);
   return join(outdir, 'leastterm.js');
 }
+
+/** Removes what builtProgram left. */
+export const removeProgram = (program: string): void => rmSync(dirname(program), { recursive: true, force: true });
 
 export interface Ended {
   readonly status: number | null;

@@ -1,14 +1,15 @@
 import { spawn } from 'node:child_process';
 import { once } from 'node:events';
-import { beforeAll, describe, expect, test } from 'vitest';
-import { bash, builtProgram } from './built.js';
+import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import { bash, builtProgram, removeProgram } from './built.js';
 import type { Ended } from './built.js';
 import { leastterm, words } from './harness.js';
 
 let program = '';
 beforeAll(async () => {
-  program = await builtProgram('process-test');
+  program = await builtProgram();
 });
+afterAll(() => removeProgram(program));
 const shell = async (line: string): Promise<Ended> => bash(program, line);
 
 describe('the bundled program', () => {
