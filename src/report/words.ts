@@ -9,6 +9,20 @@ const PRESCRIPTIONS = new Map([
   ['borel-leroy-pade', 'Borel–Leroy–Padé, principal value'],
   ['borel-pade-2', 'Borel–Padé of order two, principal value'],
   ['singularity-model', 'Singularity model'],
+  ['hyperasymptotic', 'Hyperasymptotic, level 1'],
+  ['fac', 'Fastest apparent convergence'],
+  ['pms', 'Minimal sensitivity'],
+  ['blm', 'BLM scale'],
+  ['wynn-epsilon', 'Wynn ε'],
+  ['levin', 'Levin'],
+  ['weniger-delta', 'Weniger δ'],
+  ['euler', 'Euler'],
+  ['order-dependent-map', 'Order-dependent mapping'],
+  ['borel-dlog', 'Borel, logarithmic-derivative Padé'],
+  ['borel-partial-pade', 'Borel, partial Padé'],
+  ['borel-quadratic', 'Borel, quadratic approximants'],
+  ['borel-conformal', 'Borel, conformal mapping'],
+  ['borel-hypergeometric', 'Borel, hypergeometric'],
 ]);
 
 /** The name of a prescription as a heading; an unknown one in its own letters. */

@@ -28,7 +28,7 @@ export interface AssessOptions {
   readonly order?: number;
   /** Certified decimal digits of each value; 15 is the usual choice. */
   readonly digits: number;
-  /** Names of the prescriptions to run; all when absent. */
+  /** Names of the prescriptions to run; CORE when absent. */
   readonly by?: readonly string[];
   /** The rule that makes the verdict; the ladder when absent. */
   readonly verdictRule?: VerdictRule;
@@ -37,6 +37,22 @@ export interface AssessOptions {
   /** How the coupling was reached, one line a step. */
   readonly path?: readonly string[];
 }
+
+/** What an assessment shows; `compare` runs all prescriptions, `sum` any of them. */
+export const CORE: readonly string[] = [
+  'fixed-order',
+  'least-term',
+  'terminant',
+  'pade',
+  'borel-pade',
+  'borel-leroy-pade',
+  'borel-pade-2',
+  'singularity-model',
+];
+
+/** The order-2 transform is worth a row only where the growth asks for it. */
+const worthARow = (v: Evaluated, growth: Growth): boolean =>
+  v.prescription.name !== 'borel-pade-2' || growth.verdict === 'superfactorial';
 
 /** Input errors of an expanded series. */
 function inputsOf(series: Series, expanded: Expanded, at: Uncertain): Inputs {
@@ -105,7 +121,8 @@ function withRecord(entry: ValueEntry, list: ReadonlyMap<string, ValueRecord>): 
 
 /** The whole assessment of a series at the coupling value `at`. */
 export function assess(series: Series, at: Uncertain, options: AssessOptions): Assessment {
-  const { expanded, growth, values } = sumUp(series, at, options);
+  const { expanded, growth, values: all } = sumUp(series, at, { ...options, by: options.by ?? CORE });
+  const values = options.by === undefined ? all.filter((v) => worthARow(v, growth)) : all;
   const alpha = toNumberExact(at.value);
   const table = termTable(series, expanded, options.digits);
   const ambiguity = ambiguityReport(series, expanded, growth, table, values);

@@ -111,7 +111,7 @@ export function valueEntry(v: Evaluated, digits: number): ValueEntry {
     ...(v.input === undefined ? {} : { inputError: indicative(v.input, 3) }),
     termsUsed: outcome.termsUsed,
     standing: outcome.trust,
-    digits: 'certified',
+    digits: outcome.digitsTrust ?? 'certified',
     notes: outcome.notes,
     ...(outcome.central === true ? { central: true } : {}),
   };
