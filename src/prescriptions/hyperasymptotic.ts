@@ -135,7 +135,8 @@ function sum(e: Expansion, s: Leading, request: Request): Outcome {
     kind: 'sum',
     variant,
     value,
-    imaginary: scaled(e, best.im, prec),
+    // An ultraviolet leader says nothing of the singularities on the positive axis.
+    ...(signExact(s.t) > 0 || e.stated.length === 1 ? { imaginary: scaled(e, best.im, prec) } : {}),
     ...(truncation === undefined ? {} : { truncation }),
     termsUsed: e.coefficients.length,
     trust: trustOf(value, truncation),

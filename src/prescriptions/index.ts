@@ -1,20 +1,48 @@
 /** @module All prescriptions, in the order in which they are shown. */
-import { borelLeroyPade, borelPade } from './borel-pade.js';
+import { blm } from './blm.js';
+import { borelDlog } from './borel-dlog.js';
+import { borelHypergeometric } from './borel-hypergeometric.js';
 import { borelPade2 } from './borel-pade-2.js';
+import { borelLeroyPade, borelPade } from './borel-pade.js';
+import { borelPartialPade } from './borel-partial-pade.js';
+import { borelQuadratic } from './borel-quadratic.js';
+import { conformalBorel } from './conformal.js';
+import { euler } from './euler.js';
+import { fac } from './fac.js';
 import { fixedOrder } from './fixed-order.js';
+import { hyperasymptotic } from './hyperasymptotic.js';
 import { leastTermSum } from './least-term.js';
+import { levin } from './levin.js';
+import { orderDependentMap } from './order-dependent-map.js';
 import { pade } from './pade.js';
+import { pms } from './pms.js';
 import type { Prescription } from './prescription.js';
 import { singularityModel } from './singularity-model.js';
 import { terminantSum } from './terminant.js';
+import { wenigerDelta } from './weniger-delta.js';
+import { wynnEpsilon } from './wynn-epsilon.js';
 
 export const PRESCRIPTIONS: readonly Prescription[] = [
   fixedOrder,
   leastTermSum,
   terminantSum,
+  hyperasymptotic,
+  fac,
+  pms,
+  blm,
   pade,
+  wynnEpsilon,
+  levin,
+  wenigerDelta,
+  euler,
+  orderDependentMap,
   borelPade,
   borelLeroyPade,
+  borelDlog,
+  borelPartialPade,
+  borelQuadratic,
+  conformalBorel,
+  borelHypergeometric,
   borelPade2,
   singularityModel,
 ];
@@ -22,5 +50,6 @@ export const PRESCRIPTIONS: readonly Prescription[] = [
 export type { Outcome, Prescription, Refusal, Request, Sum, Trust } from './prescription.js';
 export { leastTerm, partialSums, prefactor, terms } from './prescription.js';
 export { leroyParameter } from './borel-pade.js';
+export { flavourPolynomials } from './flavour-polynomials.js';
 export { imaginaryPieces } from './singularity-model.js';
 export { nextCoefficient } from './next-coefficient.js';

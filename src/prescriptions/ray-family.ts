@@ -90,7 +90,10 @@ export function rayFamily(
   const wanted = request.only === undefined ? attempts : attempts.filter((a) => a.label === request.only);
   if (wanted.length === 0)
     return [refusal(request.only ?? 'approximants', 'not a member of the family', 'choose another')];
-  const found = wanted.map((a) => ({ attempt: a, result: standing(e, growth, a, request.digits) }));
+  const found = wanted.map((a) => ({
+    attempt: a,
+    result: standing(e, growth, a, request.digits, request.only !== undefined),
+  }));
   const values = found.map(({ result }) => (typeof result === 'string' ? undefined : result.pv));
   const before = request.only === undefined ? valueBefore(e, growth, build) : undefined;
   const errors = combineErrors(e, values, before);
@@ -114,9 +117,10 @@ export function rayFamily(
   });
 }
 
-function standing(e: Expansion, growth: Growth, a: Attempt, digits: number): Summed | string {
+/** `trusting`: the member was asked for by name, its doubts are known. */
+function standing(e: Expansion, growth: Growth, a: Attempt, digits: number, trusting = false): Summed | string {
   if ('reason' in a) return a.reason;
-  return a.suspicion ?? sumOf(e, growth, a, digits);
+  return (trusting ? undefined : a.suspicion) ?? sumOf(e, growth, a, digits);
 }
 
 /** Principal value of the first standing candidate with one coefficient fewer. */
