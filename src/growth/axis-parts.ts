@@ -12,7 +12,7 @@ import type { Estimate } from './growth.js';
 import type { LogFit } from './log-fit.js';
 import type { Measured } from './measured.js';
 import { noiseOf } from './propagation.js';
-import { fallingStep } from './ratio-test.js';
+import { fallingStep, logFallingStep } from './ratio-test.js';
 import type { Point } from './reading.js';
 import { ballArithmetic, doubleArithmetic, extrapolate } from './richardson.js';
 import { shortFit } from './short-fit.js';
@@ -54,10 +54,10 @@ function fromLimits(d: Measured, scale: number, g: Measured): AxisPart {
 export function doublePart(points: readonly Point[], q: number): AxisPart | undefined {
   const last = points[points.length - 1]!;
   const before = points[points.length - 2]!;
-  const scale = last.y - before.y - Math.log(fallingStep(last.k, q));
+  const scale = last.y - before.y - logFallingStep(last.k, q);
   const d: number[] = [];
   for (let i = 1; i < points.length; i++) {
-    d.push(Math.exp(points[i]!.y - points[i - 1]!.y - scale) / fallingStep(points[i]!.k, q));
+    d.push(Math.exp(points[i]!.y - points[i - 1]!.y - scale - logFallingStep(points[i]!.k, q)));
   }
   const max = Math.min(MAX_ORDER, Math.floor(d.length / 2));
   const dOf = (k: number): number => d[k - points[1]!.k]!;
@@ -114,7 +114,7 @@ export function exactPart(
   const exponent = extrapolate(g, lastK, a, order, none);
   if (position === undefined || exponent === undefined || !(position.limit.value > 0)) return undefined;
   const last = tail[tail.length - 1]!;
-  const scale = last.y - tail[tail.length - 2]!.y - Math.log(fallingStep(lastK, q));
+  const scale = last.y - tail[tail.length - 2]!.y - logFallingStep(lastK, q);
   const part = fromLimits(position.limit, scale, exponent.limit);
   const direct = R.toNumber(R.mul(position.top, lastD, PREC));
   if (!(direct > SMALLEST && direct < 1 / SMALLEST)) return part;
@@ -129,9 +129,9 @@ export function logPart(fit: LogFit): AxisPart {
 /** Fit with priors to the plain ratios. */
 export function shortPart(points: readonly Point[], q: number): AxisPart | undefined {
   const last = points[points.length - 1]!;
-  const scale = last.y - points[points.length - 2]!.y - Math.log(fallingStep(last.k, q));
+  const scale = last.y - points[points.length - 2]!.y - logFallingStep(last.k, q);
   const ratios = points.slice(1).map((p, i) => {
-    const d = Math.exp(p.y - points[i]!.y - scale) / fallingStep(p.k, q);
+    const d = Math.exp(p.y - points[i]!.y - scale - logFallingStep(p.k, q));
     return { k: p.k, d, sigma: d * Math.hypot(p.sigma, points[i]!.sigma) };
   });
   // A pattern that sets in late does so at a coefficient made small by a cancellation: its ratio says nothing.

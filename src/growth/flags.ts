@@ -56,6 +56,19 @@ function inputFlags(p: Prepared): GrowthFlag[] {
   return flags;
 }
 
+/** The ratio test still moves, and not because of the errors of the coefficients. */
+function preAsymptotic(p: Prepared, rows: readonly RatioRow[]): GrowthFlag[] {
+  const last = rows.at(-1);
+  const moved = settling(rows);
+  if (last?.linear === undefined || moved === undefined) return [];
+  const apart = Math.abs(1 - last.ratio / last.linear);
+  const noisy = p.noise !== undefined || p.nonZero.slice(-3).some((x) => x.n * x.quoted > MOVING);
+  if (noisy || (moved < MOVING && apart < APART)) return [];
+  const [a, b] = [moved, apart].map((v) => short(100 * v, 2));
+  const text = `the ratio test has not settled: its last linear extrapolant moved by ${a} % and differs from the last ratio by ${b} %`;
+  return [{ code: 'pre-asymptotic', text }];
+}
+
 function verdictFlags(
   p: Prepared,
   c: Classified,
@@ -87,19 +100,8 @@ function verdictFlags(
             },
           ]
         : [{ code: 'superfactorial', text: `faster than n!: the order-1 Borel transform diverges everywhere${order}` }];
-    case 'factorial': {
-      const last = rows[rows.length - 1];
-      const s = settling(rows);
-      const apart = last?.linear === undefined ? 0 : Math.abs(1 - last.ratio / last.linear);
-      if (p.noise !== undefined || located?.quasiPeriodic === true || s === undefined || (s < MOVING && apart < APART))
-        return [];
-      return [
-        {
-          code: 'pre-asymptotic',
-          text: `the ratio test has not settled: its last linear extrapolant moved by ${short(100 * s, 2)} % and differs from the last ratio by ${short(100 * apart, 2)} %`,
-        },
-      ];
-    }
+    case 'factorial':
+      return located?.quasiPeriodic === true ? [] : preAsymptotic(p, rows);
     case 'terminating':
     case 'undecided':
       return [];

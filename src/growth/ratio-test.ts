@@ -9,13 +9,24 @@
  * Reference  C. Domb and M. F. Sykes, Proc. R. Soc. Lond. A 240 (1957) 214.
  */
 import type { RatioRow } from './growth.js';
+import { logGamma } from './log-gamma.js';
 import type { Point } from './reading.js';
 
+const SMALL_STEP = 8;
+
 /** Π_{j<q} (qk − j) = Γ(qk + 1)/Γ(q(k−1) + 1), the factorial part of the ratio of neighbours at growth order q per step. */
-export function fallingStep(k: number, q: number): number {
+export function fallingStep(k: number, q: number): bigint {
+  let p = 1n;
+  for (let j = 0; j < q; j++) p *= BigInt(q * k - j);
+  return p;
+}
+
+/** Its logarithm; the product of up to SMALL_STEP factors is a double without overflow. */
+export function logFallingStep(k: number, q: number): number {
+  if (q > SMALL_STEP) return logGamma(q * k + 1) - logGamma(q * (k - 1) + 1);
   let p = 1;
   for (let j = 0; j < q; j++) p *= q * k - j;
-  return p;
+  return Math.log(p);
 }
 
 /** c_k/c_{k−1} divided by the factorial step, for neighbours present; index = k. */
@@ -25,7 +36,7 @@ export function ratios(points: readonly Point[], q: number, scale = 0): (number 
     const a = points[i]!;
     const b = points[i - 1]!;
     if (a.k !== b.k + 1 || a.sign === 0 || b.sign === 0) continue;
-    out[a.k] = (a.sign * b.sign * Math.exp(a.y - b.y - scale)) / fallingStep(a.k, q);
+    out[a.k] = a.sign * b.sign * Math.exp(a.y - b.y - scale - logFallingStep(a.k, q));
   }
   return out;
 }
@@ -51,7 +62,7 @@ export function scaledRows(points: readonly Point[], stride: number): ScaledRows
   const last = points.at(-1);
   const before = points.at(-2);
   if (last === undefined || before === undefined) return { rows: [], scale: 0 };
-  const scale = (last.y - before.y) / (last.k - before.k) - Math.log(fallingStep(last.k, stride));
+  const scale = (last.y - before.y) / (last.k - before.k) - logFallingStep(last.k, stride);
   const d = ratios(points, stride, scale);
   const byK = new Map(points.map((p) => [p.k, p]));
   const rows: RatioRow[] = [];

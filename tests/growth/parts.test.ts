@@ -85,6 +85,18 @@ describe('reading', () => {
     expect(lacunary.kind === 'series' && lacunary.sequence.stride).toBe(3);
   });
 
+  it('a wide stride loses nothing: (100k)! x^(100k), exact and in doubles', () => {
+    const factorial = [1n];
+    for (let n = 1; n <= 1500; n++) factorial.push(factorial[n - 1]! * BigInt(n));
+    const texts = Array.from({ length: 1501 }, (_, n) => (n % 100 === 0 ? `${factorial[n]!}` : '0'));
+    for (const exact of [true, false]) {
+      const g = diagnoseGrowth(fromTexts(texts, { exact }));
+      expect(g.verdict, g.statement).toBe('factorial');
+      expect(g.stride).toBe(100);
+      expect(Math.abs(g.nearest!.t.value - 1)).toBeLessThanOrEqual(g.nearest!.t.error);
+    }
+  });
+
   it('a zero with an error is not an exact zero', () => {
     const vague = { ...zero(), relativeError: 1 };
     expect(readTerms(input([term(0, 1), term(1, 1), vague, vague, vague])).kind).toBe('series');

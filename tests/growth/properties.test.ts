@@ -2,7 +2,9 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { diagnoseGrowth, type Growth, type GrowthInput } from '../../src/growth/index.js';
+import { Rational } from '../../src/numerics/index.js';
 import { Dice, families } from './generate.js';
+import { fromRationals } from './terms.js';
 
 const RUNS = Math.max(10, Math.round(30 * Number(process.env['LEASTTERM_TEST_MULTIPLIER'] ?? '1')));
 const names = Object.keys(families);
@@ -119,6 +121,24 @@ describe('never throws', () => {
         }
       }),
       { numRuns: 5 * RUNS, seed: 14 },
+    );
+  });
+
+  it('on any list of exact numbers', () => {
+    const anyRational = fc
+      .tuple(fc.bigInt({ min: -(10n ** 40n), max: 10n ** 40n }), fc.bigInt({ min: 1n, max: 10n ** 20n }))
+      .map(([a, b]) => Rational.of(a, b));
+    const coefficient = fc.oneof(
+      { weight: 4, arbitrary: anyRational },
+      { weight: 1, arbitrary: fc.constant(Rational.ZERO) },
+    );
+    fc.assert(
+      fc.property(fc.array(coefficient, { maxLength: 30 }), (all) => {
+        const g = diagnoseGrowth(fromRationals(all));
+        expect(g.statement).not.toMatch(/NaN|undefined/);
+        if (all.length > 0 && all.every((q) => q.isZero())) expect(g.verdict).toBe('terminating');
+      }),
+      { numRuns: 5 * RUNS, seed: 15 },
     );
   });
 });
