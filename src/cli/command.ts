@@ -1,10 +1,41 @@
 /** @module What a command is: its words for the help, the options it knows, and what it does. */
-import type { OptionName } from './options.js';
+import type { OptionName, OptionWords } from './options.js';
 import type { Surroundings } from './surroundings.js';
 
 /** Option values after checking. Absent means not given. */
 export interface Given {
   readonly at?: string;
+  readonly alphaSMZ?: string;
+  readonly alphaS?: string;
+  readonly mass?: string;
+  readonly from?: string;
+  readonly fromFlavours?: number;
+  readonly to?: string;
+  readonly toFlavours?: number;
+  readonly loops?: number;
+  readonly threshold?: readonly string[];
+  readonly scale?: string;
+  readonly coupling?: string;
+  readonly massPower?: string;
+  readonly fromMass?: string;
+  readonly massOfScale?: string;
+  readonly heavyInCoupling?: boolean;
+  readonly with?: readonly string[];
+  readonly title?: string;
+  readonly quantity?: string;
+  readonly dimension?: string;
+  readonly invented?: boolean;
+  readonly published?: boolean;
+  readonly grid?: string;
+  readonly only?: readonly string[];
+  readonly except?: readonly string[];
+  readonly family?: readonly string[];
+  readonly sort?: string;
+  readonly hide?: number;
+  readonly exact?: string;
+  readonly catalogue?: boolean;
+  readonly csv?: boolean;
+  readonly verdictRule?: string;
   readonly by?: string;
   readonly variant?: string;
   readonly byOrder?: boolean;
@@ -22,6 +53,8 @@ export interface Operand {
   readonly name: string;
   readonly help: string;
   readonly optional?: boolean;
+  /** Any number of them may follow; only the last operand. */
+  readonly several?: boolean;
 }
 
 export interface Call {
@@ -38,6 +71,8 @@ export interface Command {
   readonly about: readonly string[];
   readonly operands: readonly Operand[];
   readonly options: readonly OptionName[];
+  /** Its own words for options that mean something else elsewhere. */
+  readonly words?: Partial<Record<OptionName, OptionWords>>;
   /** Those of the options that the command cannot do without. */
   readonly needs?: readonly OptionName[];
   /** Command lines with what they do. */

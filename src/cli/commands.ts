@@ -1,13 +1,30 @@
 /** @module All commands, in the order of the help. */
 import type { Command } from './command.js';
 import { assess } from './commands/assess.js';
+import { backtest } from './commands/backtest.js';
 import { catalogue } from './commands/catalogue.js';
+import { evolve } from './commands/evolve.js';
+import { compare } from './commands/compare.js';
+import { combine } from './commands/combine.js';
 import { growth } from './commands/growth.js';
 import { helpCommand } from './commands/help.js';
 import { plane } from './commands/plane.js';
+import { rewrite } from './commands/rewrite.js';
 import { sum } from './commands/sum.js';
 import { truncation } from './commands/truncation.js';
 
-const STUDIES: readonly Command[] = [assess, growth, plane, sum, truncation, catalogue];
+const STUDIES: readonly Command[] = [
+  assess,
+  growth,
+  plane,
+  sum,
+  compare,
+  truncation,
+  backtest,
+  evolve,
+  rewrite,
+  combine,
+  catalogue,
+];
 
 export const COMMANDS: readonly Command[] = [...STUDIES, helpCommand(STUDIES)];

@@ -1,6 +1,6 @@
 /** @module The help texts, made from the commands' own descriptions: examples first. */
 import type { Command } from './command.js';
-import { OPTIONS, optionLabel } from './options.js';
+import { OPTIONS, optionLabel, optionOf } from './options.js';
 import type { OptionName } from './options.js';
 
 const WIDTH = 80;
@@ -49,8 +49,11 @@ export function generalHelp(commands: readonly Command[]): string {
 }
 
 function usage(command: Command): string {
-  const operands = command.operands.map((operand) => (operand.optional === true ? `[${operand.name}]` : operand.name));
-  const needed = (command.needs ?? []).map((name) => optionLabel(name).trim());
+  const operands = command.operands.map((operand) => {
+    const name = operand.several === true ? `${operand.name}...` : operand.name;
+    return operand.optional === true ? `[${name}]` : name;
+  });
+  const needed = (command.needs ?? []).map((name) => optionLabel(name, command.words?.[name]).trim());
   return ['leastterm', command.name, ...operands, ...needed, '[options]'].join(' ');
 }
 
@@ -65,7 +68,11 @@ export function commandHelp(command: Command): string {
   if (command.operands.length > 0) {
     parts.push(`Operands\n${pairs(command.operands.map((operand) => [operand.name, operand.help]))}`);
   }
-  parts.push(`Options\n${pairs(command.options.map((name) => [optionLabel(name), OPTIONS[name].help]))}`);
+  const row = (name: OptionName): readonly [string, string] => {
+    const words = command.words?.[name];
+    return [optionLabel(name, words), optionOf(name, words).help];
+  };
+  parts.push(`Options\n${pairs(command.options.map(row))}`);
   parts.push(`Manual: docs/commands/${command.name}.md in the package`);
   return `${parts.join('\n\n')}\n`;
 }

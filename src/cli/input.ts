@@ -1,6 +1,8 @@
 /** @module From operands and options to a series, a coupling value, and the request that the result repeats. */
 import type { Call } from './command.js';
 import { UsageError } from './faults.js';
+import { couplingValue } from './quantities.js';
+import { accepted } from './refused.js';
 import type { Series, Uncertain } from '../series/index.js';
 
 export type Request = Record<string, string | number | boolean>;
@@ -35,10 +37,42 @@ export async function neededCoupling({ given }: Call, command: string): Promise<
   return readCoupling(given.at, command);
 }
 
+/** The coupling as the command line gives it: its value, or alpha_s(M_Z) that has to be evolved to the series. */
+export type WantedCoupling =
+  { readonly at: Uncertain; readonly mz?: undefined } | { readonly at?: undefined; readonly mz: Uncertain };
+
+/** --at or --alpha-s-mz, one of the two, read before the series is. */
+export async function wantedCoupling(call: Call, command: string): Promise<WantedCoupling> {
+  const { at, alphaSMZ } = call.given;
+  if (alphaSMZ === undefined) return { at: await neededCoupling(call, command) };
+  if (at !== undefined) throw new UsageError('--at and --alpha-s-mz exclude each other: give one of them', command);
+  return { mz: await couplingValue('alpha-s-mz', alphaSMZ, command) };
+}
+
+/** The coupling of the series, and how it was reached when it was evolved. */
+export async function couplingOf(
+  wanted: WantedCoupling,
+  series: Series,
+  command: string,
+): Promise<{ readonly at: Uncertain; readonly path?: readonly string[] }> {
+  if (wanted.at !== undefined) return { at: wanted.at };
+  const { studies } = await import('./rooms.js');
+  return accepted(studies.couplingFromMZ(series, wanted.mz), command);
+}
+
+/** The value of --exact. */
+export async function exactValue(text: string | undefined, command: string): Promise<Uncertain | undefined> {
+  if (text === undefined) return undefined;
+  const { series } = await import('./rooms.js');
+  const value = series.parseUncertain(text);
+  if (series.isNumberProblem(value)) throw new UsageError(`--exact: ${value.problem}; wanted ${value.wanted}`, command);
+  return value;
+}
+
 /** What was asked, for the result to repeat. Where the output goes is no part of it. */
 export function requestOf(command: string, series: string, { given }: Call): Request {
   const { at, by, variant, order, flavours } = given;
-  const asked = { at, by, variant, order, flavours };
+  const asked = { at, 'alpha-s-mz': given.alphaSMZ, by, variant, order, flavours };
   const request: Request = { command, series };
   for (const [name, value] of Object.entries(asked)) if (value !== undefined) request[name] = value;
   request['digits'] = given.digits ?? USUAL_DIGITS;

@@ -1,7 +1,14 @@
 /** @module Every option of the command line: its name, its value, its one line of help. */
+import type { OptionSpec, OptionWords } from './option-kinds.js';
+import { COMPARE_OPTIONS } from './options-compare.js';
+import { QCD_OPTIONS } from './options-qcd.js';
+
+export type { OptionSpec, OptionWords } from './option-kinds.js';
 
 export type OptionName =
   | 'at'
+  | keyof typeof QCD_OPTIONS
+  | keyof typeof COMPARE_OPTIONS
   | 'by'
   | 'variant'
   | 'by-order'
@@ -16,37 +23,12 @@ export type OptionName =
   | 'help'
   | 'version';
 
-interface Flag {
-  readonly kind: 'flag';
-  readonly short?: string;
-  readonly help: string;
-}
-
-interface Text {
-  readonly kind: 'text';
-  readonly short?: string;
-  /** Stands for the value in help and messages. */
-  readonly placeholder: string;
-  readonly example: string;
-  readonly help: string;
-}
-
-interface Whole {
-  readonly kind: 'whole';
-  readonly short?: string;
-  readonly placeholder: string;
-  readonly example: string;
-  readonly least: number;
-  readonly most: number;
-  readonly help: string;
-}
-
-export type OptionSpec = Flag | Text | Whole;
-
 /** Digits beyond this take minutes for long series. */
 const MOST_DIGITS = 2000;
 
 export const OPTIONS: Readonly<Record<OptionName, OptionSpec>> = {
+  ...QCD_OPTIONS,
+  ...COMPARE_OPTIONS,
   at: {
     kind: 'text',
     placeholder: 'VALUE',
@@ -112,9 +94,15 @@ export const OPTIONS: Readonly<Record<OptionName, OptionSpec>> = {
 
 export const OPTION_NAMES = Object.keys(OPTIONS).filter((name): name is OptionName => name in OPTIONS);
 
+/** The specification of an option in the words of a command. */
+export const optionOf = (name: OptionName, words: OptionWords | undefined): OptionSpec => ({
+  ...OPTIONS[name],
+  ...words,
+});
+
 /** "-o, --output FILE". */
-export function optionLabel(name: OptionName): string {
-  const spec = OPTIONS[name];
+export function optionLabel(name: OptionName, words?: OptionWords): string {
+  const spec = optionOf(name, words);
   const short = spec.short === undefined ? '    ' : `-${spec.short}, `;
   return `${short}--${name}${spec.kind === 'flag' ? '' : ` ${spec.placeholder}`}`;
 }

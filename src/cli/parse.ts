@@ -2,7 +2,7 @@
 import { Parser } from 'yargs/helpers';
 import type { Command, Given } from './command.js';
 import { UsageError } from './faults.js';
-import { OPTION_NAMES, OPTIONS } from './options.js';
+import { OPTION_NAMES, OPTIONS, optionOf } from './options.js';
 import type { OptionName, OptionSpec } from './options.js';
 
 export interface Parsed {
@@ -14,7 +14,7 @@ const PARSER = {
   'boolean-negation': false,
   'camel-case-expansion': false,
   'dot-notation': false,
-  'duplicate-arguments-array': false,
+  'duplicate-arguments-array': true,
   'parse-numbers': false,
   'parse-positional-numbers': false,
   'strip-aliased': true,
@@ -28,13 +28,13 @@ const isOption = (name: string): name is OptionName => OPTION_NAMES.some((known)
 const byShort = (letter: string): OptionName | undefined =>
   OPTION_NAMES.find((name) => name === letter || OPTIONS[name].short === letter);
 
-function missingValue(message: string, command: string): UsageError {
+function missingValue(message: string, command: Command): UsageError {
   const key = message.slice(MISSING_VALUE.length);
   const name = isOption(key) ? key : byShort(key);
-  const spec = name === undefined ? undefined : OPTIONS[name];
-  if (name === undefined || spec === undefined || spec.kind === 'flag') return new UsageError(message, command);
+  const spec = name === undefined ? undefined : optionOf(name, command.words?.[name]);
+  if (name === undefined || spec === undefined || spec.kind === 'flag') return new UsageError(message, command.name);
   const dash = name === 'at' ? `; a value that begins with a dash is joined on: --at=-0.1` : '';
-  return new UsageError(`--${name}: no value given; write --${name} ${spec.example}${dash}`, command);
+  return new UsageError(`--${name}: no value given; write --${name} ${spec.example}${dash}`, command.name);
 }
 
 const namesOf = (flags: boolean): OptionName[] =>
@@ -44,7 +44,7 @@ const namesOf = (flags: boolean): OptionName[] =>
  * The raw result of the parser: option names to text or true, and the rest under "_". Only the word parser of yargs is
  * used: its commands, help and checks speak their own language, and loading them costs half as much as starting Node.
  */
-function rawParse(words: readonly string[], command: string): Map<string, unknown> {
+function rawParse(words: readonly string[], command: Command): Map<string, unknown> {
   const shorts = OPTION_NAMES.flatMap((name) => {
     const { short } = OPTIONS[name];
     return short === undefined ? [] : [[name, short] as const];
@@ -59,7 +59,7 @@ function rawParse(words: readonly string[], command: string): Map<string, unknow
   if (error !== null) {
     throw error.message.startsWith(MISSING_VALUE)
       ? missingValue(error.message, command)
-      : new UsageError(error.message, command);
+      : new UsageError(error.message, command.name);
   }
   return new Map<string, unknown>(Object.entries(argv));
 }
@@ -99,7 +99,7 @@ function checkOperands(operands: readonly string[], command: Command): void {
     throw new UsageError(`${missing.name} is missing: ${missing.help}`, command.name);
   }
   const extra = operands[command.operands.length];
-  if (extra !== undefined) {
+  if (extra !== undefined && command.operands.at(-1)?.several !== true) {
     const most = command.operands.length;
     const takes = most === 0 ? 'no operand' : most === 1 ? 'one operand' : `${most} operands`;
     throw new UsageError(`"${extra}" is one operand too many: ${command.name} takes ${takes}`, command.name);
@@ -109,17 +109,20 @@ function checkOperands(operands: readonly string[], command: Command): void {
 /** Parses the words after the command's name. */
 export async function parse(words: readonly string[], command: Command): Promise<Parsed> {
   singleDash(words, command);
-  const raw = rawParse(words, command.name);
-  const values = new Map<OptionName, string | number | boolean>();
-  for (const [key, value] of raw) {
+  const raw = rawParse(words, command);
+  const values = new Map<OptionName, Value>();
+  for (const [key, found] of raw) {
+    // Given twice: the last one counts, except for options whose values add up.
+    const value: unknown = Array.isArray(found) && key !== '_' ? found.at(-1) : found;
     if (key === '_' || key === '$0' || value === undefined) continue;
     const name = isOption(key) ? key : byShort(key);
     if (name === undefined) throw await unknownOption(key, command);
     if (!command.options.includes(name)) {
       throw new UsageError(`--${name}: ${command.name} has no such option`, command.name);
     }
-    const spec = OPTIONS[name];
+    const spec = optionOf(name, command.words?.[name]);
     if (spec.kind === 'flag') values.set(name, value === true);
+    else if (spec.kind === 'list' && allTexts(found)) values.set(name, [found].flat());
     else if (typeof value === 'string' && value !== '') {
       values.set(name, spec.kind === 'whole' ? whole(name, value, spec, command.name) : value);
     } else throw new UsageError(`--${name}: no value given; write --${name} ${spec.example}`, command.name);
@@ -130,7 +133,13 @@ export async function parse(words: readonly string[], command: Command): Promise
   return { operands, given: collect(values) };
 }
 
-function collect(values: ReadonlyMap<OptionName, string | number | boolean>): Given {
+type Value = string | number | boolean | readonly string[];
+
+const isText = (value: unknown): value is string => typeof value === 'string' && value !== '';
+const allTexts = (value: unknown): value is string | string[] =>
+  Array.isArray(value) ? value.every(isText) : isText(value);
+
+function collect(values: ReadonlyMap<OptionName, Value>): Given {
   const text = (name: OptionName): string | undefined => {
     const value = values.get(name);
     return typeof value === 'string' ? value : undefined;
@@ -139,12 +148,48 @@ function collect(values: ReadonlyMap<OptionName, string | number | boolean>): Gi
     const value = values.get(name);
     return typeof value === 'number' ? value : undefined;
   };
+  const list = (name: OptionName): readonly string[] | undefined => {
+    const value = values.get(name);
+    return typeof value === 'object' ? value : undefined;
+  };
+  const flag = (name: OptionName): true | undefined => (values.get(name) === true ? true : undefined);
   const given = {
     at: text('at'),
+    alphaSMZ: text('alpha-s-mz'),
+    alphaS: text('alpha-s'),
+    mass: text('mass'),
+    from: text('from'),
+    fromFlavours: number('from-flavours'),
+    to: text('to'),
+    toFlavours: number('to-flavours'),
+    loops: number('loops'),
+    threshold: list('threshold'),
+    scale: text('scale'),
+    coupling: text('coupling'),
+    massPower: text('mass-power'),
+    fromMass: text('from-mass'),
+    massOfScale: text('mass-of-scale'),
+    heavyInCoupling: flag('heavy-in-coupling'),
+    with: list('with'),
+    title: text('title'),
+    quantity: text('quantity'),
+    dimension: text('dimension'),
+    invented: flag('invented'),
+    published: flag('published'),
+    grid: text('grid'),
+    only: list('only'),
+    except: list('except'),
+    family: list('family'),
+    sort: text('sort'),
+    hide: number('hide'),
+    exact: text('exact'),
+    catalogue: flag('catalogue'),
+    csv: flag('csv'),
+    verdictRule: text('verdict-rule'),
     by: text('by'),
     variant: text('variant'),
     prior: text('prior'),
-    byOrder: values.get('by-order') === true ? true : undefined,
+    byOrder: flag('by-order'),
     order: number('order'),
     flavours: number('flavours'),
     digits: number('digits'),

@@ -5,6 +5,7 @@
 import { readFile, readdir, access } from 'node:fs/promises';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
+import { Rational } from '../numerics/index.js';
 import { Complaints } from './complaints.js';
 import type { Entry } from './entry.js';
 import { nearest } from './nearest.js';
@@ -21,6 +22,10 @@ export interface CatalogueEntry {
   /** Ids of the same series at those numbers: `pole-msbar-nl3`, … */
   readonly variants: readonly string[];
   readonly invented: boolean;
+  /** nf stands in the coefficients: the file serves other numbers of flavours too. */
+  readonly anyFlavours: boolean;
+  /** Operator dimensions d of the singularities u = d/2 and the condensates that the file states; negative ultraviolet. */
+  readonly dimensions: readonly number[];
 }
 
 const ENDING = '.yaml';
@@ -112,5 +117,29 @@ function summary(id: string, entry: Entry | undefined): CatalogueEntry {
     flavourChoices,
     variants: flavourChoices.length > 1 ? flavourChoices.map((n) => `${id}-nl${n}`) : [],
     invented: text(field('invented')) === 'true',
+    anyFlavours: [field('coefficients'), field('constants')].some(mentionsFlavours),
+    dimensions: dimensionsOf([...items('singularities'), ...items('condensates')]),
   };
+}
+
+/** Dimensions of singularities and condensates, each once, rising. */
+function dimensionsOf(entries: readonly Entry[]): readonly number[] {
+  const found = entries.flatMap((entry) => {
+    const number = (name: string): number | undefined => {
+      const value = entry.kind === 'map' ? entry.fields.get(name)?.value : undefined;
+      return value?.kind === 'text' ? Rational.parse(value.text)?.toNumber() : undefined;
+    };
+    const u = number('u');
+    const d = number('dimension') ?? (u === undefined ? undefined : 2 * u);
+    return d === undefined ? [] : [d];
+  });
+  return [...new Set(found)].toSorted((a, b) => a - b);
+}
+
+/** Does nf stand in one of the texts below? */
+function mentionsFlavours(entry: Entry | undefined): boolean {
+  if (entry === undefined) return false;
+  if (entry.kind === 'text') return /\bnf\b/.test(entry.text);
+  if (entry.kind === 'list') return entry.items.some(mentionsFlavours);
+  return [...entry.fields.values()].some(({ value }) => mentionsFlavours(value));
 }

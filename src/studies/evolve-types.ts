@@ -45,6 +45,8 @@ export interface EvolveResult {
   readonly unit?: 'GeV';
   /** The value came back to the start when evolved the other way. */
   readonly digits: Standing;
+  /** Why the value has fewer digits than were asked for. */
+  readonly digitsNote?: string;
   /** From the errors of the input: the value itself, α_s behind a mass, the masses at the thresholds. */
   readonly errors: readonly EvolveError[];
   readonly oneLoopLess?: { readonly loops: number; readonly value: string; readonly shift: string };

@@ -1,20 +1,41 @@
 /** @module leastterm assess: the whole report on one series at one coupling. */
 import type { Call, Command } from '../command.js';
-import { EXIT } from '../faults.js';
-import { neededCoupling, readSeries, requestOf, USUAL_DIGITS } from '../input.js';
+import { EXIT, UsageError } from '../faults.js';
+import { couplingOf, readSeries, requestOf, USUAL_DIGITS, wantedCoupling } from '../input.js';
 import { deliver } from '../output.js';
 import { presentation } from '../present.js';
+import type { VerdictRule } from '../../studies/index.js';
+
+async function ruleOf(text: string | undefined): Promise<VerdictRule | undefined> {
+  if (text === undefined) return undefined;
+  const { series, studies } = await import('../rooms.js');
+  const rule = studies.verdictRule(text);
+  const known = studies.verdictRules();
+  if (rule === undefined)
+    throw new UsageError(
+      `--verdict-rule: no rule "${text}"${series.suggestion(text, known)}; wanted one of ${known.join(', ')}`,
+      assess.name,
+    );
+  return rule;
+}
 
 async function run(call: Call): Promise<number> {
   const [name = ''] = call.operands;
   const { given } = call;
-  const at = await neededCoupling(call, assess.name);
+  const wanted = await wantedCoupling(call, assess.name);
   const series = await readSeries(name, call);
+  const { at, path } = await couplingOf(wanted, series, assess.name);
   const { report, studies } = await import('../rooms.js');
+  const rule = await ruleOf(given.verdictRule);
   const result = studies.assess(series, at, {
     ...(given.order === undefined ? {} : { order: given.order }),
     digits: given.digits ?? USUAL_DIGITS,
-    request: requestOf(assess.name, name, call),
+    ...(path === undefined ? {} : { path }),
+    ...(rule === undefined ? {} : { verdictRule: rule }),
+    request: {
+      ...requestOf(assess.name, name, call),
+      ...(given.verdictRule === undefined ? {} : { 'verdict-rule': given.verdictRule }),
+    },
   });
   if (given.json) deliver(report.resultJson(result), call);
   else if (given.quiet) deliver(`${result.verdict.printed}\n`, call);
@@ -30,7 +51,19 @@ export const assess: Command = {
     'Shells read parentheses themselves: put a value such as 0.3156(30) in quotes, or write 0.3156+-0.0030.',
   ],
   operands: [{ name: 'SERIES', help: 'a catalogue id, a series file, or - for standard input' }],
-  options: ['at', 'order', 'flavours', 'digits', 'json', 'output', 'quiet', 'no-color', 'help'],
+  options: [
+    'at',
+    'alpha-s-mz',
+    'order',
+    'flavours',
+    'digits',
+    'verdict-rule',
+    'json',
+    'output',
+    'quiet',
+    'no-color',
+    'help',
+  ],
   needs: ['at'],
   examples: [
     ["leastterm assess adler --at '0.3156(30)'", 'the Adler function of the catalogue at alpha_s = 0.3156 +- 0.0030'],

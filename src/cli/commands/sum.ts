@@ -1,7 +1,7 @@
 /** @module leastterm sum: one prescription, as many digits as are wanted. */
 import type { Call, Command } from '../command.js';
 import { EXIT, UsageError } from '../faults.js';
-import { neededCoupling, readSeries, requestOf, USUAL_DIGITS } from '../input.js';
+import { couplingOf, readSeries, requestOf, USUAL_DIGITS, wantedCoupling } from '../input.js';
 import { deliver } from '../output.js';
 import { presentation } from '../present.js';
 
@@ -21,12 +21,14 @@ async function run(call: Call): Promise<number> {
   const [name = ''] = call.operands;
   const { given } = call;
   const by = await prescriptionOf(given.by);
-  const at = await neededCoupling(call, sum.name);
+  const wanted = await wantedCoupling(call, sum.name);
   const series = await readSeries(name, call);
+  const { at, path } = await couplingOf(wanted, series, sum.name);
   const { report, studies } = await import('../rooms.js');
   const result = studies.sumStudy(series, at, {
     ...(given.order === undefined ? {} : { order: given.order }),
     digits: given.digits ?? USUAL_DIGITS,
+    ...(path === undefined ? {} : { path }),
     by: [by],
     request: requestOf(sum.name, name, call),
   });
@@ -50,7 +52,20 @@ export const sum: Command = {
     'Prescriptions: fixed-order, least-term, terminant, pade, borel-pade, borel-leroy-pade, borel-pade-2, singularity-model.',
   ],
   operands: [{ name: 'SERIES', help: 'a catalogue id, a series file, or - for standard input' }],
-  options: ['by', 'variant', 'at', 'order', 'flavours', 'digits', 'json', 'output', 'quiet', 'no-color', 'help'],
+  options: [
+    'by',
+    'variant',
+    'at',
+    'alpha-s-mz',
+    'order',
+    'flavours',
+    'digits',
+    'json',
+    'output',
+    'quiet',
+    'no-color',
+    'help',
+  ],
   needs: ['by', 'at'],
   examples: [
     [

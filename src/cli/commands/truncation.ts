@@ -1,7 +1,7 @@
 /** @module leastterm truncation: every truncation-error model side by side. */
 import type { Call, Command } from '../command.js';
 import { EXIT, UsageError } from '../faults.js';
-import { neededCoupling, readSeries, requestOf, USUAL_DIGITS } from '../input.js';
+import { couplingOf, readSeries, requestOf, USUAL_DIGITS, wantedCoupling } from '../input.js';
 import { deliver } from '../output.js';
 import { presentation } from '../present.js';
 import type { Priors } from '../../truncation/index.js';
@@ -18,15 +18,17 @@ async function priorsOf(text: string | undefined): Promise<Priors | undefined> {
 async function run(call: Call): Promise<number> {
   const [name = ''] = call.operands;
   const { given } = call;
-  const at = await neededCoupling(call, truncation.name);
+  const wanted = await wantedCoupling(call, truncation.name);
   const priors = await priorsOf(given.prior);
   const series = await readSeries(name, call);
+  const { at, path } = await couplingOf(wanted, series, truncation.name);
   const { report, studies } = await import('../rooms.js');
   const result = studies.truncationStudy(series, at, {
     ...(given.order === undefined ? {} : { order: given.order }),
     ...(priors === undefined ? {} : { priors }),
     byOrder: given.byOrder === true,
     digits: given.digits ?? USUAL_DIGITS,
+    ...(path === undefined ? {} : { path }),
     request: {
       ...requestOf(truncation.name, name, call),
       ...(given.prior === undefined ? {} : { prior: given.prior }),
@@ -48,7 +50,20 @@ export const truncation: Command = {
     'Priors are set by name: --prior abc.xi=3,geometric.omega=2. docs/methods/truncation-error.md lists them.',
   ],
   operands: [{ name: 'SERIES', help: 'a catalogue id, a series file, or - for standard input' }],
-  options: ['at', 'by-order', 'prior', 'order', 'flavours', 'digits', 'json', 'output', 'quiet', 'no-color', 'help'],
+  options: [
+    'at',
+    'alpha-s-mz',
+    'by-order',
+    'prior',
+    'order',
+    'flavours',
+    'digits',
+    'json',
+    'output',
+    'quiet',
+    'no-color',
+    'help',
+  ],
   needs: ['at'],
   examples: [
     ['leastterm truncation adler --at 0.32', 'all models on the Adler function at alpha_s = 0.32'],

@@ -1,0 +1,117 @@
+/** @module The options of evolve, rewrite, combine and the catalogue, and --alpha-s-mz. */
+import type { OptionSpec } from './option-kinds.js';
+
+export const QCD_OPTIONS = {
+  'alpha-s-mz': {
+    kind: 'text',
+    placeholder: 'VALUE',
+    example: "'0.1180(9)'",
+    help: 'alpha_s(M_Z) with five flavours, evolved over the thresholds to the scale and flavours of the series; in place of --at',
+  },
+  'alpha-s': {
+    kind: 'text',
+    placeholder: 'VALUE',
+    example: "'0.1180(9)'",
+    help: 'the coupling alpha_s at the scale of --from, with its error if there is one',
+  },
+  mass: {
+    kind: 'text',
+    placeholder: 'VALUE',
+    example: "'4.186(6)GeV'",
+    help: 'an MSbar quark mass at the scale of --from, with its unit, and its error if there is one',
+  },
+  from: {
+    kind: 'text',
+    placeholder: 'SCALE',
+    example: '91.1879GeV',
+    help: 'where the value stands: a scale with its unit, GeV or MeV, or MZ, mtau',
+  },
+  'from-flavours': {
+    kind: 'whole',
+    placeholder: 'N',
+    example: '5',
+    least: 0,
+    most: 16,
+    help: 'active flavours there; needed where two numbers are in use',
+  },
+  to: {
+    kind: 'text',
+    placeholder: 'SCALE',
+    example: '1.77693GeV',
+    help: 'where it is wanted: a scale with its unit, or MZ, mtau; own for a mass at its own scale, m(m)',
+  },
+  'to-flavours': {
+    kind: 'whole',
+    placeholder: 'N',
+    example: '3',
+    least: 0,
+    most: 16,
+    help: 'active flavours there; needed where two numbers are in use',
+  },
+  loops: {
+    kind: 'whole',
+    placeholder: 'N',
+    example: '4',
+    least: 1,
+    most: 5,
+    help: 'loops of the running, 1 to 5 (default 5); decoupling has one less',
+  },
+  threshold: {
+    kind: 'list',
+    placeholder: 'QUARK=MASS',
+    example: 'b=4.18GeV',
+    help: 'MSbar mass m(m) of c, b or t, with its unit and, behind @, the scale at which it is crossed: b=4.18GeV@2.1GeV; may be repeated',
+  },
+  scale: {
+    kind: 'text',
+    placeholder: 'RATIO',
+    example: '2',
+    help: 'the new renormalisation scale: mu/Q as a number, or mu with its unit, such as 3GeV',
+  },
+  coupling: {
+    kind: 'text',
+    placeholder: 'NAME',
+    example: 'C:0',
+    help: 'the new coupling: MSbar, C:VALUE (C-scheme), V (static potential), mini-MOM, or a series whose value is the coupling',
+  },
+  'mass-power': {
+    kind: 'text',
+    placeholder: 'P',
+    example: '5',
+    help: 'the quantity is proportional to the mass to the power P, an integer or a fraction',
+  },
+  'from-mass': {
+    kind: 'text',
+    placeholder: 'NAME',
+    example: 'pole',
+    help: 'the mass that the series is in, where its scheme does not say: pole, msbar or running',
+  },
+  'mass-of-scale': {
+    kind: 'text',
+    placeholder: 'NAME',
+    example: 'pole',
+    help: 'the mass that Q of mu/Q stands for: msbar for m(m) (default), or pole',
+  },
+  'heavy-in-coupling': { kind: 'flag', help: 'the flavours of the series count the heavy quark' },
+  with: {
+    kind: 'list',
+    placeholder: 'NAME=SERIES',
+    example: 'width=b-to-u-pole',
+    help: 'what a name of the expression stands for: a catalogue id or a series file; once for each name',
+  },
+  title: { kind: 'text', placeholder: 'TEXT', example: "'Width in the MSbar mass'", help: 'title of the new series' },
+  quantity: {
+    kind: 'text',
+    placeholder: 'WORD',
+    example: 'mass',
+    help: 'only series with this word in their id, title or quantity',
+  },
+  dimension: {
+    kind: 'text',
+    placeholder: 'D',
+    example: '4',
+    help: 'only series with a singularity or condensate of this operator dimension (u = D/2)',
+  },
+  invented: { kind: 'flag', help: 'only invented series' },
+  published: { kind: 'flag', help: 'only published series' },
+} as const satisfies Readonly<Record<string, OptionSpec>>;
