@@ -7,7 +7,7 @@
  * Bound      indicative: size and growth at the last orders.
  * Reference  M. Beneke, Phys. Rept. 317 (1999) 1 (competition of ultraviolet and infrared renormalons; from memory).
  */
-import { logGamma } from './log-gamma.js';
+import { logGammaDouble } from '../numerics/index.js';
 import type { Point } from './reading.js';
 import { short } from './words.js';
 
@@ -29,7 +29,7 @@ export interface Alternation {
 /** (−1)^k part of ln|c_k| − ln Γ(qk+1) − smooth, by the filter (1, −4, 6, −4, 1)/16, which removes cubic polynomials. */
 export function alternation(points: readonly Point[], q: number): Alternation | undefined {
   if (points.length < STEADY + 4) return undefined;
-  const z = points.map((p) => p.y - logGamma(q * p.k + 1));
+  const z = points.map((p) => p.y - logGammaDouble(q * p.k + 1));
   const found: { k: number; v: number }[] = [];
   for (let i = 2; i + 2 < z.length; i++) {
     const c = points[i]!.k;

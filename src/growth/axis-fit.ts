@@ -9,11 +9,10 @@
  *            below the rounding of a double.
  * Reference  C. Domb and M. F. Sykes 1957; R. B. Dingle, "Asymptotic Expansions", 1973.
  */
-import type { Exact } from '../numerics/index.js';
+import { type Exact, logGammaDouble } from '../numerics/index.js';
 import { doublePart, exactPart, logPart, shortPart, type AxisPart } from './axis-parts.js';
 import type { Estimate } from './growth.js';
 import { logFit } from './log-fit.js';
-import { logGamma } from './log-gamma.js';
 import { plainError, statedError, type Measured } from './measured.js';
 import { noiseOf } from './propagation.js';
 import type { Point } from './reading.js';
@@ -62,7 +61,7 @@ export function logStrengths(
   gamma: number,
 ): { k: number; value: number }[] {
   return points.flatMap((p) =>
-    q * p.k + gamma > 0.5 ? [{ k: p.k, value: p.y + p.k * logT - logGamma(q * p.k + gamma) }] : [],
+    q * p.k + gamma > 0.5 ? [{ k: p.k, value: p.y + p.k * logT - logGammaDouble(q * p.k + gamma) }] : [],
   );
 }
 

@@ -84,7 +84,7 @@ function snapped(order: Estimate, familiarOnly: boolean): number | undefined {
   return familiarOnly ? undefined : Number(order.value.toPrecision(2));
 }
 
-function orderOf(c: Classified): number | undefined {
+function orderOf(c: Classified, p: Prepared): number | undefined {
   if (c.beyond) return Infinity;
   switch (c.verdict) {
     case 'factorial':
@@ -93,8 +93,10 @@ function orderOf(c: Classified): number | undefined {
       return 0;
     case 'superfactorial':
     case 'subfactorial':
+      return c.order && snapped(c.order, false);
     case 'convergent':
-      return c.order === undefined ? undefined : snapped(c.order, c.verdict === 'convergent');
+      // An envelope says no more than that the coefficients fall.
+      return p.pattern.kind === 'irregular' ? undefined : c.order && snapped(c.order, true);
     case 'terminating':
     case 'undecided':
       return undefined;
@@ -142,7 +144,7 @@ export function diagnoseGrowth(input: GrowthInput): Growth {
   const stride = p.sequence.stride;
   const { rows } = scaledRows(p.nonZero, stride);
   const c = classify(p, rows);
-  const order = orderOf(c);
+  const order = orderOf(c, p);
   const whole = order !== undefined && Number.isInteger(order) && order >= 1;
   const located = whole ? locate(p, order * stride) : undefined;
   const radius = c.verdict === 'geometric' ? radiusOf(p) : undefined;

@@ -10,7 +10,7 @@
  */
 import type { Estimate } from './growth.js';
 import { leastSquares, type LinearFit } from './least-squares.js';
-import { logGamma } from './log-gamma.js';
+import { logGammaDouble } from '../numerics/index.js';
 import { ratios } from './ratio-test.js';
 import type { Point } from './reading.js';
 
@@ -53,7 +53,7 @@ export function essentialGrowth(points: readonly Point[], q: number): EssentialG
   const late = Math.log(g0 / g1) / Math.log(at[0] / at[1]);
   const early = Math.log(g1 / g2) / Math.log(at[1] / at[2]);
   if (!(late > SLOPE.low && late < SLOPE.high && early - late < STEADY && Math.abs(g0) > 1)) return undefined;
-  const y = points.map((p) => p.y - logGamma(q * p.k + 1));
+  const y = points.map((p) => p.y - logGammaDouble(q * p.k + 1));
   const k = points.map((p) => p.k + 1);
   const common = [k.map(() => 1), k, k.map(Math.log)];
   const columns = (kappa: number): number[][] => [...common, k.map((v) => v ** kappa), k.map((v) => v ** (kappa - 1))];

@@ -12,7 +12,7 @@
  */
 import type { Estimate, GrowthModelComparison } from './growth.js';
 import { leastSquares } from './least-squares.js';
-import { logGamma } from './log-gamma.js';
+import { logGammaDouble } from '../numerics/index.js';
 import type { Point } from './reading.js';
 
 /** The first coefficient is left out when it lies farther than this many standardised residuals off the better line. */
@@ -42,7 +42,7 @@ function fitPair(points: readonly Point[], b: number, q: number): Pair | undefin
   const k = points.map((p) => p.k);
   const ones = k.map(() => 1);
   const y = points.map((p) => p.y);
-  const z = points.map((p) => p.y - logGamma(q * p.k + 1 + b) + logGamma(1 + b));
+  const z = points.map((p) => p.y - logGammaDouble(q * p.k + 1 + b) + logGammaDouble(1 + b));
   const plainG = leastSquares([ones, k], y);
   const plainF = leastSquares([ones, k], z);
   if (plainG === undefined || plainF === undefined) return undefined;
@@ -78,7 +78,7 @@ function freeOrder(points: readonly Point[]): Estimate | undefined {
   if (points.length < 4) return undefined;
   const k = points.map((p) => p.k);
   const fit = leastSquares(
-    [k.map(() => 1), k, points.map((p) => logGamma(p.n + 1))],
+    [k.map(() => 1), k, points.map((p) => logGammaDouble(p.n + 1))],
     points.map((p) => p.y),
   );
   if (fit === undefined) return undefined;

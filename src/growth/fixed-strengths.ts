@@ -7,7 +7,7 @@
  * Bound      exact for two pure powers; the condition number says how far anything else is amplified.
  * Reference  G. Darboux 1878; R. B. Dingle 1973 (the form of the coefficients).
  */
-import { logGamma } from './log-gamma.js';
+import { logGammaDouble } from '../numerics/index.js';
 import type { Point } from './reading.js';
 
 /** b_n = c_n/n! at a position t with exponent γ and unit strength: (γ)_n/(n! t^n), as logarithm and sign. */
@@ -43,7 +43,7 @@ export function fixedStrengths(
   const rows = last.map((p) => {
     const u = unit(a.t, a.exponent, p.n);
     const v = unit(b.t, b.exponent, p.n);
-    const scale = p.y - logGamma(p.n + 1);
+    const scale = p.y - logGammaDouble(p.n + 1);
     return { x: u.sign * Math.exp(u.log - scale), y: v.sign * Math.exp(v.log - scale), r: p.sign };
   });
   const [r1, r2] = [rows[0]!, rows[1]!];

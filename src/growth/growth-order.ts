@@ -12,7 +12,7 @@
  */
 import type { Estimate } from './growth.js';
 import { leastSquares } from './least-squares.js';
-import { logGamma } from './log-gamma.js';
+import { logGammaDouble } from '../numerics/index.js';
 import type { Point } from './reading.js';
 import { weightedFit } from './weighted-fit.js';
 
@@ -41,7 +41,7 @@ const columnsOf = (points: readonly Point[], terms: number): number[][] =>
   [
     points.map(() => 1),
     points.map((p) => p.k),
-    points.map((p) => logGamma(p.k + 1)),
+    points.map((p) => logGammaDouble(p.k + 1)),
     points.map((p) => Math.log(p.k + 1)),
     points.map((p) => 1 / (p.k + 1)),
     points.map((p) => 1 / (p.k + 1) ** 2),

@@ -8,7 +8,7 @@
  * Bound      heuristic: errors as in measured.ts, never below the distance to the runner-up.
  * Reference  G. Darboux, J. Math. Pures Appl. 4 (1878) 5; R. B. Dingle, "Asymptotic Expansions", 1973, chapter VII.
  */
-import { logGamma } from './log-gamma.js';
+import { logGammaDouble } from '../numerics/index.js';
 import { statedError, type Measured } from './measured.js';
 import type { Point } from './reading.js';
 import { weightedFit } from './weighted-fit.js';
@@ -40,7 +40,7 @@ function fitOne(points: readonly Point[], q: number, terms: number): Candidate |
   ].slice(0, terms);
   const fit = weightedFit(
     columns,
-    points.map((p) => p.y - logGamma(q * p.k + 1)),
+    points.map((p) => p.y - logGammaDouble(q * p.k + 1)),
     points.map((p) => p.sigma),
   );
   if (fit === undefined) return undefined;

@@ -11,7 +11,7 @@
  *            (from memory).
  */
 import { leastSquares } from './least-squares.js';
-import { logGamma } from './log-gamma.js';
+import { logGammaDouble } from '../numerics/index.js';
 import type { Point } from './reading.js';
 
 /** Fewest consecutive points. */
@@ -33,11 +33,11 @@ function median(values: readonly number[]): number {
 const robustDeviation = (values: readonly number[]): number => median(values.map(Math.abs)) / 0.6745;
 
 function detrended(points: readonly Point[]): number[] {
-  const y = points.map((p) => p.y - logGamma(p.k + 1));
+  const y = points.map((p) => p.y - logGammaDouble(p.k + 1));
   const columns = [
     points.map(() => 1),
     points.map((p) => p.k),
-    points.map((p) => logGamma(p.k + 1)),
+    points.map((p) => logGammaDouble(p.k + 1)),
     points.map((p) => Math.log(p.k + 1)),
     points.map((p) => 1 / (p.k + 1)),
   ];

@@ -7,7 +7,7 @@
  *            pattern is matched, and must rise far above the differences elsewhere.
  * Bound      heuristic constants below. The last two coefficients cannot be judged (nothing follows them).
  */
-import { logGamma } from './log-gamma.js';
+import { logGammaDouble } from '../numerics/index.js';
 import type { Point } from './reading.js';
 import type { SignPattern } from './sign-pattern.js';
 
@@ -57,7 +57,7 @@ function template(j: number): number[] {
 
 function sizeOutlier(points: readonly Point[]): Outlier | undefined {
   const j = points.length >= 11 ? 2 : 1;
-  const z = points.map((p) => p.y - logGamma(p.k + 1));
+  const z = points.map((p) => p.y - logGammaDouble(p.k + 1));
   const f = centred(z, j);
   const w = template(j);
   let best: { i: number; amplitude: number } | undefined;
@@ -113,7 +113,7 @@ export function findOutliers(points: readonly Point[], pattern: SignPattern): Se
   const inner = pattern.breaks.filter((i) => i >= START && i < points.length - END);
   const isolated = inner.every((i) => !pattern.breaks.includes(i - 1) && !pattern.breaks.includes(i + 1));
   if (inner.length > 0 && inner.length === pattern.breaks.length && inner.length <= allowed && isolated) {
-    const z = points.map((p) => p.y - logGamma(p.k + 1));
+    const z = points.map((p) => p.y - logGammaDouble(p.k + 1));
     const f = centred(z, 1);
     const smooth = inner.every((i) => Math.abs(f[i] ?? 0) < SIGN_SMOOTH);
     if (smooth) {

@@ -8,10 +8,9 @@
  * Bound      the miss itself is the result.
  * Reference  M. A. Samuel, J. Ellis and M. Karliner, Phys. Rev. Lett. 74 (1995) 4380 (Padé prediction of coefficients).
  */
-import { PadeDouble } from '../numerics/index.js';
+import { PadeDouble, logGammaDouble } from '../numerics/index.js';
 import type { Prediction } from './growth.js';
 import { leastSquares } from './least-squares.js';
-import { logGamma } from './log-gamma.js';
 import type { Point } from './reading.js';
 
 /** Coefficients that the lines are fitted to, at most. */
@@ -35,7 +34,7 @@ function linePrediction(left: readonly Point[], target: Point, part: (p: Point) 
 
 /** Known Borel coefficients, scaled to moderate size; the scale drops out of every ratio. */
 function scaledBorel(points: readonly Point[], q: number): number[] {
-  const log = (p: Point): number => p.y - logGamma(q * p.k + 1);
+  const log = (p: Point): number => p.y - logGammaDouble(q * p.k + 1);
   const first = points[0]!;
   const last = points[points.length - 1]!;
   const slope = (log(last) - log(first)) / (last.k - first.k);
@@ -89,7 +88,7 @@ export function predictions(
       }
     };
     for (const factorial of [true, false]) {
-      const log = linePrediction(left, target, (p) => (factorial ? logGamma(q * p.k + 1 + shift) : 0));
+      const log = linePrediction(left, target, (p) => (factorial ? logGammaDouble(q * p.k + 1 + shift) : 0));
       push(
         factorial ? 'factorial fit' : 'geometric fit',
         log === undefined ? undefined : Math.exp(log) * expectedSign * target.sign,

@@ -9,7 +9,7 @@
  * Reference  C. Domb and M. F. Sykes, Proc. R. Soc. Lond. A 240 (1957) 214.
  */
 import type { RatioRow } from './growth.js';
-import { logGamma } from './log-gamma.js';
+import { logGammaDouble } from '../numerics/index.js';
 import type { Point } from './reading.js';
 
 const SMALL_STEP = 8;
@@ -23,7 +23,7 @@ export function fallingStep(k: number, q: number): bigint {
 
 /** Its logarithm; the product of up to SMALL_STEP factors is a double without overflow. */
 export function logFallingStep(k: number, q: number): number {
-  if (q > SMALL_STEP) return logGamma(q * k + 1) - logGamma(q * (k - 1) + 1);
+  if (q > SMALL_STEP) return logGammaDouble(q * k + 1) - logGammaDouble(q * (k - 1) + 1);
   let p = 1;
   for (let j = 0; j < q; j++) p *= q * k - j;
   return Math.log(p);

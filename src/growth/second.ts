@@ -8,7 +8,7 @@
  * Bound      indicative; refused where the remainder comes near the rounding of the input, and where it still points at T.
  * Reference  re-expansion about the factored singularity: R. B. Dingle, "Asymptotic Expansions", 1973 (idea).
  */
-import { logGamma } from './log-gamma.js';
+import { logGammaDouble } from '../numerics/index.js';
 import type { Point } from './reading.js';
 
 const POWERS = [1, 2, 4, 6, 8, 10, 12];
@@ -63,7 +63,7 @@ export function secondSingularity(
   if (points.length < 12) return undefined;
   const used = points.slice(0, 60);
   const base = used[Math.floor(used.length / 2)]!;
-  const log = (p: Point): number => p.y - logGamma(q * p.k + 1) + p.k * logT;
+  const log = (p: Point): number => p.y - logGammaDouble(q * p.k + 1) + p.k * logT;
   const a = used.map((p) => p.sign * (signT < 0 && p.k % 2 === 1 ? -1 : 1) * Math.exp(log(p) - log(base)));
   const rounding = Math.max(...used.map((p) => p.sigma));
   let previous: Second | undefined;

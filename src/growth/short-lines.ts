@@ -20,6 +20,8 @@ import { short } from './words.js';
 
 /** Even and odd root ratios differing by more than this are worth a line. */
 const EVEN_ODD = 0.05;
+/** Relative determinant of the recurrence below which it has no solution to speak of. */
+const SINGULAR = 1e-9;
 /** Coefficients up to which these lines are shown. */
 const LONGEST = 12;
 /** D-log poles with exponents outside are doublets and noise, not singularities. */
@@ -47,7 +49,9 @@ function evenOdd(points: readonly Point[]): string | undefined {
 function twoPoles(points: readonly Point[]): { text: string; opposite: boolean } | undefined {
   const { beta, scale } = scaledBorel(points, 1);
   const row = recurrence(beta).at(-1);
-  if (row === undefined) return undefined;
+  const noise = Math.max(...points.slice(-4).map((p) => p.sigma));
+  // A single power solves the two equations twice over: what is left is rounding and noise.
+  if (row === undefined || row.weight < Math.max(SINGULAR, noise)) return undefined;
   const head = 'two poles through the last four Borel coefficients would';
   const factor = Math.exp(-scale);
   const real = realPositions(row);

@@ -7,7 +7,7 @@
  */
 import type { Estimate, FoundSingularity } from './growth.js';
 import type { AxisFit } from './axis-fit.js';
-import { logGamma } from './log-gamma.js';
+import { gammaDouble } from '../numerics/index.js';
 import type { PairFit } from './two-root.js';
 
 /** γ counts as 0, −1, −2, … when it is within this many stated errors of it … */
@@ -25,12 +25,6 @@ const OUTWARD = 3;
 /** Error of |t| = |1/T|^(−1/q) on its larger side: 1/T may be as small as (1 − relative) of its value. */
 const outwardError = (modulus: number, relative: number, q: number): number =>
   relative < 0.1 ? (modulus * relative) / q : modulus * Math.min(OUTWARD, Math.max(0, 1 - relative) ** (-1 / q) - 1);
-
-/** Γ(x) for any real x but the poles. */
-function gammaSigned(x: number): number {
-  if (x > 0) return Math.exp(logGamma(x));
-  return Math.PI / (Math.sin(Math.PI * x) * Math.exp(logGamma(1 - x)));
-}
 
 type Kind = FoundSingularity['kind'];
 
@@ -62,7 +56,7 @@ export function singularityOfAxis(
   const s = fit.stokes;
   const shown = s !== undefined && s.error < USEFUL * Math.abs(s.value);
   const stokes = shown ? { value: s.value / q, error: s.error / q } : undefined;
-  const factor = stokes === undefined || logarithmic ? undefined : gammaSigned(gamma.value);
+  const factor = stokes === undefined || logarithmic ? undefined : gammaDouble(gamma.value);
   const relative = shown ? s.error / Math.abs(s.value) : 0;
   return {
     t,
