@@ -3,7 +3,7 @@ import type { Call } from './command.js';
 import { UsageError } from './faults.js';
 import { couplingValue } from './quantities.js';
 import { accepted } from './refused.js';
-import type { Series, Uncertain } from '../series/index.js';
+import type { ReadNumber, Series, Uncertain } from '../series/index.js';
 
 export type Request = Record<string, string | number | boolean>;
 
@@ -61,7 +61,7 @@ export async function couplingOf(
 }
 
 /** The value of --exact. */
-export async function exactValue(text: string | undefined, command: string): Promise<Uncertain | undefined> {
+export async function exactValue(text: string | undefined, command: string): Promise<ReadNumber | undefined> {
   if (text === undefined) return undefined;
   const { series } = await import('./rooms.js');
   const value = series.parseUncertain(text);

@@ -155,7 +155,7 @@ function estimateTable(page: Page, result: BacktestResult): void {
 }
 
 const LEGEND =
-  'Bias (mean of predicted minus target), sharpness (mean stated error) and score are in units of the target. Score: interval score at 68 %, small is good. A handful of tests on one series proves no coverage.';
+  'Bias (mean of predicted minus target), sharpness (mean stated error) and score are in units of the target. Score: interval score at 68 %, small is good. Where the target has an error of its own, it is allowed for. A handful of tests on one series proves no coverage.';
 
 /** The back-test of one series. */
 export function backtestText(result: BacktestResult, options: TerminalOptions = {}): string {

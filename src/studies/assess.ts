@@ -50,6 +50,10 @@ export const CORE: readonly string[] = [
   'singularity-model',
 ];
 
+/** The core, and the prescription that the verdict's rule names. */
+const withNamed = (rule: VerdictRule | undefined): readonly string[] =>
+  rule?.kind !== 'prescription' || CORE.includes(rule.name) ? CORE : [...CORE, rule.name];
+
 /** The order-2 transform is worth a row only where the growth asks for it. */
 const worthARow = (v: Evaluated, growth: Growth): boolean =>
   v.prescription.name !== 'borel-pade-2' || growth.verdict === 'superfactorial';
@@ -99,7 +103,7 @@ export function sumUp(series: Series, at: Uncertain, options: Pick<AssessOptions
 }
 
 /** Numbers of coefficients for which one step back is both telling and cheap. */
-const SHORTEST = 5;
+const SHORTEST = 6;
 const LONGEST = 12;
 
 const isShort = ({ expansion: { coefficients } }: Expanded): boolean =>
@@ -121,7 +125,14 @@ function withRecord(entry: ValueEntry, list: ReadonlyMap<string, ValueRecord>): 
 
 /** The whole assessment of a series at the coupling value `at`. */
 export function assess(series: Series, at: Uncertain, options: AssessOptions): Assessment {
-  const { expanded, growth, values: all } = sumUp(series, at, { ...options, by: options.by ?? CORE });
+  const {
+    expanded,
+    growth,
+    values: all,
+  } = sumUp(series, at, {
+    ...options,
+    by: options.by ?? withNamed(options.verdictRule),
+  });
   const values = options.by === undefined ? all.filter((v) => worthARow(v, growth)) : all;
   const alpha = toNumberExact(at.value);
   const table = termTable(series, expanded, options.digits);

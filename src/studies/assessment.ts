@@ -169,7 +169,7 @@ export interface ValueRecord {
   /** What the predictions were held against. */
   readonly against: 'exact' | 'measurement' | 'known sum' | 'own value';
   readonly tested: number;
-  /** How many lay within the stated error. */
+  /** How many lay within the stated error, the target's own error allowed for. */
   readonly inside: number;
   /** Mean of (predicted − target)/|target|. */
   readonly bias: string;
@@ -177,7 +177,7 @@ export interface ValueRecord {
   readonly sharpness?: string;
   /** Interval score at 68 %: small is good, 0 is perfect. */
   readonly score: string;
-  /** good: all inside; bad: a miss beyond three stated errors; fair: in between. */
+  /** good: all inside; bad: a miss beyond three times the errors, stated and of the target; fair: in between. */
   readonly verdict: 'good' | 'fair' | 'bad' | 'no error stated';
 }
 

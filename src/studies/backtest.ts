@@ -6,7 +6,7 @@
 import { diagnoseGrowth } from '../growth/index.js';
 import { R } from '../numerics/index.js';
 import type { Prescription, Sum } from '../prescriptions/index.js';
-import type { Series, Uncertain } from '../series/index.js';
+import type { ReadNumber, Series, Uncertain } from '../series/index.js';
 import { questionOf, TRUNCATION_MODELS, USUAL_PRIORS } from '../truncation/index.js';
 import type { AssessOptions } from './assess.js';
 import { prescriptionsNamed } from './assess.js';
@@ -30,7 +30,7 @@ export interface BacktestOptions extends Omit<AssessOptions, 'verdictRule'> {
   /** Most coefficients hidden, one after the other. */
   readonly hide: number;
   /** The exact value of the sum, where it is known. */
-  readonly exact?: Uncertain;
+  readonly exact?: ReadNumber;
 }
 
 /** Digits of a relative miss. */

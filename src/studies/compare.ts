@@ -4,7 +4,7 @@
 import { R } from '../numerics/index.js';
 import type { Ball } from '../numerics/index.js';
 import type { Prescription, Sum } from '../prescriptions/index.js';
-import type { Series, Uncertain } from '../series/index.js';
+import type { ReadNumber, Series, Uncertain } from '../series/index.js';
 import type { AssessOptions } from './assess.js';
 import { centralSums, sumUp } from './assess.js';
 import type { Summed } from './assess.js';
@@ -71,7 +71,7 @@ export interface CompareOptions extends Omit<AssessOptions, 'verdictRule'> {
   readonly sort?: Sort;
   /** Most coefficients hidden in the back-test; 0 leaves it out. */
   readonly hide: number;
-  readonly exact?: Uncertain;
+  readonly exact?: ReadNumber;
 }
 
 interface Row {

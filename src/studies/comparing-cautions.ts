@@ -45,6 +45,9 @@ export function valueCautions(
   else if (sum.truncation > Math.abs(R.toNumber(sum.value)))
     list.push({ code: 'error above value', text: 'the truncation error exceeds the value' });
   if (record?.verdict === 'bad')
-    list.push({ code: 'bad record', text: 'with coefficients hidden it missed by more than three stated errors' });
+    list.push({
+      code: 'bad record',
+      text: 'with coefficients hidden it missed by more than three times its stated error, the target’s own error allowed for',
+    });
   return list;
 }

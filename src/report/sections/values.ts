@@ -1,7 +1,7 @@
 /** @module Section 5: one value a prescription, or the reason why there is none. */
 import type { Standing, ValueEntry } from '../../studies/index.js';
 import { shorten } from '../../numerics/index.js';
-import { plusMinus } from '../layout/figures.js';
+import { plusMinus, rough } from '../layout/figures.js';
 import type { Page } from '../layout/page.js';
 import type { TableNote, TableRow } from '../layout/table.js';
 import { prescriptionTitle } from '../words.js';
@@ -55,6 +55,23 @@ function lateralNotes(entries: readonly ValueEntry[]): TableNote[] {
   return [{ note: `lateral sums: value ± i times ${list}`, indent: 4, tone: 'faint' }];
 }
 
+/** How the family's own best member did one step back. */
+function recordNotes(entries: readonly ValueEntry[]): TableNote[] {
+  return entries.flatMap(({ record }) => {
+    if (record === undefined) return [];
+    const { against, inside, tested, sharpness, score, verdict } = record;
+    const target = against === 'own value' ? 'its own value with all terms' : `the ${against}`;
+    const stated = sharpness === undefined ? '' : `, stated error ${rough(sharpness)}`;
+    return [
+      {
+        note: `record one step back: ${verdict}; ${inside} of ${tested} inside against ${target}${stated}, score ${rough(score)}`,
+        indent: 4,
+        tone: verdict === 'bad' ? ('warn' as const) : ('faint' as const),
+      },
+    ];
+  });
+}
+
 function families(values: readonly ValueEntry[]): Map<string, ValueEntry[]> {
   const map = new Map<string, ValueEntry[]>();
   for (const entry of values) map.set(entry.prescription, [...(map.get(entry.prescription) ?? []), entry]);
@@ -78,6 +95,7 @@ export function valuesSection(page: Page, values: readonly ValueEntry[]): void {
       ...done.map((entry) => valueRow(entry, page.digits, common === undefined)),
       ...lateralNotes(done),
       ...familyNotes(done),
+      ...recordNotes(done),
       ...refusalNotes(entries),
     );
   }

@@ -2,7 +2,7 @@
  * @module The record of each prescription on one series, short enough to stand beside its value.
  */
 import type { Prescription, Sum } from '../../prescriptions/index.js';
-import type { Series, Uncertain } from '../../series/index.js';
+import type { ReadNumber, Series } from '../../series/index.js';
 import { diagnoseGrowth } from '../../growth/index.js';
 import type { Caution, ValueRecord } from '../assessment.js';
 import type { Expanded } from '../expand.js';
@@ -15,7 +15,7 @@ import type { Score } from './score.js';
 import { commonTargets } from './target.js';
 import type { Target, TargetKind } from './target.js';
 
-/** A miss beyond this many stated errors is a bad record. A heuristic: a normal error does it once in 370 times. */
+/** A miss beyond this many errors, stated and the target's own together, is a bad record. A heuristic: a normal error does it once in 370 times. */
 const BAD_PULL = 3;
 /** Digits of a score: it rests on one to three predictions. */
 const SCORE_DIGITS = 3;
@@ -23,7 +23,7 @@ const SCORE_DIGITS = 3;
 export interface RecordOptions {
   /** Most coefficients hidden. */
   readonly hide: number;
-  readonly exact?: Uncertain;
+  readonly exact?: ReadNumber;
 }
 
 /** One word for a score. */
@@ -85,7 +85,7 @@ export function recordCautions(list: ReadonlyMap<string, ValueRecord>): Caution[
     : [
         {
           code: 'bad-record',
-          text: `without the last known coefficients, ${bad.join(', ')} missed by more than ${BAD_PULL} stated errors on this series`,
+          text: `without the last known coefficients, ${bad.join(', ')} missed by more than ${BAD_PULL} times their stated errors on this series, the target's own error allowed for`,
         },
       ];
 }

@@ -3,9 +3,9 @@
  *
  * For value v ± s against a target T, all in units of |T|: miss m = (v − T)/|T|.
  *   bias       mean of m
- *   coverage   share of |m| <= s (s and the target's own error in quadrature)
+ *   coverage   share of |m| <= w, w = √(s² + the target's own error²)
  *   sharpness  mean of s
- *   score      mean of 2 s + (2/α) max(0, |m| − s), α = 0.32: the interval score at 68 %; small is good, 0 is perfect.
+ *   score      mean of 2 s + (2/α) max(0, |m| − w), α = 0.32: the interval score at 68 %; small is good, 0 is perfect.
  * The score is proper: on average it is least for the interval that one believes in; wide and wrong both cost.
  * Reference: T. Gneiting, A. E. Raftery, J. Am. Stat. Assoc. 102 (2007) 359, sec. 6.2 (from memory).
  */
@@ -34,7 +34,7 @@ export interface Score {
   /** Absent where an error is missing. */
   readonly sharpness?: number;
   readonly score: number;
-  /** Largest |m| in stated errors. */
+  /** Largest |m|/w. */
   readonly worst: number;
 }
 
@@ -59,12 +59,18 @@ const width = (m: Miss): number => Math.hypot(m.error ?? 0, m.targetError);
 
 export const isInside = (m: Miss): boolean => Math.abs(m.miss) <= width(m);
 
-/** |m| in stated errors. */
+/** |m|/w. */
 export const pull = (m: Miss): number => (m.miss === 0 ? 0 : Math.abs(m.miss) / width(m));
 
-/** Interval score of low … high (relative distances) for a truth at `at`. */
-export const intervalScore = (low: number, high: number, at: number, alpha: number): number =>
-  high - low + (2 / alpha) * (Math.max(0, low - at) + Math.max(0, at - high));
+/** How far `at` lies outside low … high, whose half-width is widened by `error` in quadrature. */
+export function outsideBy(low: number, high: number, at: number, error: number): number {
+  const half = (high - low) / 2;
+  return Math.max(0, Math.abs(at - (low + high) / 2) - (error === 0 ? half * (1 + 1e-12) : Math.hypot(half, error)));
+}
+
+/** Interval score of low … high (relative distances) for a truth at `at`, known to `error`. */
+export const intervalScore = (low: number, high: number, at: number, error: number, alpha: number): number =>
+  high - low + (2 / alpha) * outsideBy(low, high, at, error);
 
 const mean = (list: readonly number[]): number => list.reduce((a, b) => a + b, 0) / list.length;
 
