@@ -17,6 +17,7 @@ import * as C from '../ball/complex.js';
 import type { Complex } from '../ball/complex.js';
 import * as R from '../ball/real.js';
 import type { Ball } from '../ball/real.js';
+import type { Rational } from '../rational.js';
 import type { Exponent } from './exponent.js';
 
 interface Length {
@@ -26,7 +27,13 @@ interface Length {
 }
 
 /** Least N whose remainder is below 2^-bits relative to 1/|w|; undefined when the series cannot reach it. */
-export function asymptoticLength(size: number, rightHalf: boolean, b: number, bits: number): Length | undefined {
+export function asymptoticLength(
+  size: number,
+  rightHalf: boolean,
+  exponent: Exponent,
+  bits: number,
+): Length | undefined {
+  const b = exponent.approx;
   // The least term is about e^−|w| at n + b = |w|; leave early when that is hopeless.
   if (!(size * Math.LOG2E + 4 + Math.max(0, b) > bits) || !(Math.abs(b) < size)) return undefined;
   const l = Math.log2(size);
@@ -37,11 +44,18 @@ export function asymptoticLength(size: number, rightHalf: boolean, b: number, bi
       const error = term + (rightHalf ? 0 : 0.5 * Math.log2(Math.E * (s + 2))) + 1e-6;
       if (error < -bits) return { n, error };
     }
-    const factor = Math.abs(n + 1 + b);
-    if (factor === 0) return { n: n + 1, error: -Infinity }; // the series ends: a polynomial in 1/w
-    term += Math.log2(factor) - l + 1e-13 * Math.abs(l);
+    // At n + 1 = −m the factor is ε, which may be far below the rounding error of b.
+    const ends = n + 1 + exponent.m === 0;
+    if (ends && exponent.eps.isZero()) return { n: n + 1, error: -Infinity }; // a polynomial in 1/w
+    const factor = ends ? ratioBits(exponent.eps) : Math.log2(Math.abs(n + 1 + b));
+    term += factor - l + 1e-13 * Math.abs(l);
   }
   return undefined;
+}
+
+/** Upper bound of log2 |q|. */
+function ratioBits(q: Rational): number {
+  return bitLength(q.num) - bitLength(q.den) + 1;
 }
 
 /** Σ_{n<N} s^n (1+b)_n/x^(n+1) for exact x > 0, sign s = ±1, without the remainder; relative error below 2^-bits. */

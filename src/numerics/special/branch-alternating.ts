@@ -37,7 +37,7 @@ export function branchAlternating(b: Exact | Rational | Ball, x: Ball, prec: num
 
 function exactAlternating(b: Exponent, x: Ball, prec: number): Ball {
   const size = Math.min(Math.max(R.toNumber(x), 1e-300), 1e300);
-  const far = asymptoticLength(size * (1 - 1e-12), true, b.approx, prec + 10);
+  const far = asymptoticLength(size * (1 - 1e-12), true, b, prec + 10);
   if (far !== undefined) {
     const remainder = divMag(mag(1, Math.ceil(Math.max(far.error, -1e9))), magLower(x));
     return widenMag(asymptoticReal(x, b, -1, far, prec + 10), remainder);

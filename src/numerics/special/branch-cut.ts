@@ -63,7 +63,7 @@ function exactCut(b: Exponent, w: Complex, prec: number): Complex {
   const { re, im } = C.toNumbers(w);
   const size = Math.min(Math.max(Math.hypot(re, im), 1e-300), 1e300);
   const spare = 10 + Math.ceil(Math.log2(2 + Math.abs(b.approx)));
-  const far = asymptoticLength(size * (1 - 1e-12), re >= 0, b.approx, prec + 10);
+  const far = asymptoticLength(size * (1 - 1e-12), re >= 0, b, prec + 10);
   if (far !== undefined) {
     const series = asymptoticComplex(w, b, far, prec + 10);
     const remainder = divMag(mag(1, Math.ceil(Math.max(far.error, -1e9))), modulusLower(w));

@@ -11,6 +11,7 @@
  *            F_b is small. Radii of x and b: spread.ts.
  * Reference  R. B. Dingle, "Asymptotic Expansions" (1973), chapter 21 (basic terminants); DLMF 8.2, 8.7.3, 2.11(iii).
  */
+import { bitLength } from '../bits.js';
 import { pi } from '../ball/constants.js';
 import { exp, log, sinCosPi } from '../ball/elementary.js';
 import {
@@ -74,7 +75,7 @@ export function eiScaled(x: Ball, prec: number): Ball {
 function exactSame(b: Exponent, x: Ball, prec: number): BranchValue {
   const size = Math.min(Math.max(R.toNumber(x), 1e-300), 1e300);
   const spare = 12 + Math.ceil(Math.log2(1 + size + Math.abs(b.approx)));
-  const far = asymptoticLength(size * (1 - 1e-12), false, b.approx, prec + 12);
+  const far = asymptoticLength(size * (1 - 1e-12), false, b, prec + 12);
   if (far !== undefined) {
     const logX = log(x, prec + spare + 70);
     const e = exp(R.neg(x), prec + spare);
@@ -135,7 +136,9 @@ function pvPart(b: Exponent, logX: Ball, bits: number): BranchValue {
 /** π x^b e^−x/Γ(1+b). */
 function residue(b: Exponent, x: Ball, logX: Ball, e: Ball, bits: number): Ball {
   if (b.m >= 0) return R.mul(R.mul(powerOverFactorial(x, logX, b.m, bits), e, bits), pvPart(b, logX, bits).im, bits);
-  const r = rgamma(R.fromRational(b.value.add(Rational.ONE), bits + 20), bits);
+  // Next to a zero of 1/Γ the distance ε must keep its own accuracy.
+  const close = b.eps.isZero() ? 0 : Math.max(0, bitLength(b.eps.den) - bitLength(b.eps.num));
+  const r = rgamma(R.fromRational(b.value.add(Rational.ONE), bits + 20 + close), bits);
   if (R.isExactZero(r)) return R.ZERO;
   const power = exp(R.mul(R.fromRational(b.value, bits + 30), logX, bits + 30), bits);
   return R.mul(R.mul(pi(bits), power, bits), R.mul(e, r, bits), bits);

@@ -11,6 +11,7 @@ import { log, sinCosPi } from '../ball/elementary.js';
 import { addMag, divMag, mag, magLower, magRadius, mulMag, widenMag } from '../ball/mag.js';
 import * as R from '../ball/real.js';
 import type { Ball } from '../ball/real.js';
+import { digammaDouble } from './gamma-double.js';
 import { stepsToStirling } from './log-gamma.js';
 import { bernoulliSum, harmonicSum, stirlingTerms } from './stirling.js';
 
@@ -20,7 +21,7 @@ const ROUNDS = 6;
 /** ψ(x); INDETERMINATE on a ball that holds 0, −1, −2, … */
 export function digamma(x: Ball, prec: number): Ball {
   if (x.rad === Infinity) return R.INDETERMINATE;
-  let work = prec + 8;
+  let work = prec + 10 + smallness(x);
   let y = R.INDETERMINATE;
   for (let round = 0; round < ROUNDS; round++) {
     y = R.isPositive(x) ? positive(x, work) : reflected(x, work);
@@ -32,6 +33,12 @@ export function digamma(x: Ball, prec: number): Ball {
   return R.round(y, prec);
 }
 
+/** Bits by which ψ is small at x, from its double value. */
+function smallness(x: Ball): number {
+  const size = Math.abs(digammaDouble(R.toNumber(x)));
+  return size < 1 ? Math.min(60, Math.ceil(-Math.log2(size)) + 1) : 0;
+}
+
 function reflected(x: Ball, prec: number): Ball {
   const { sin, cos } = sinCosPi(x, prec);
   if (R.containsZero(sin)) return R.INDETERMINATE;
@@ -40,7 +47,9 @@ function reflected(x: Ball, prec: number): Ball {
   return R.isPositive(other) ? R.sub(positive(other, prec), cot, prec) : R.INDETERMINATE;
 }
 
-function positive(x: Ball, wp: number): Ball {
+function positive(x: Ball, prec: number): Ball {
+  // Stirling's series and the sum of reciprocals each lose a few ulp a term, prec/4 terms at most.
+  const wp = prec + Math.ceil(Math.log2(prec)) + 1;
   const mid = R.exactMid(x);
   const n = R.upperBits(mid) > 40 ? 0 : stepsToStirling(R.toNumber(mid), wp);
   const big = R.add(mid, R.fromNumber(n), 1e9);

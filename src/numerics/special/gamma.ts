@@ -29,7 +29,12 @@ export function gamma(x: Ball, prec: number): Ball {
 export function rgamma(x: Ball, prec: number): Ball {
   if (x.rad === Infinity) return R.INDETERMINATE;
   if (R.isPositive(x)) {
-    if (R.upperBits(x) > HUGE_BITS) return R.isPositive(R.sub(x, THREE, 64)) ? R.ball(1n, -1, 0.5) : R.INDETERMINATE;
+    if (R.upperBits(x) > HUGE_BITS) {
+      // x > 2^38 gives Γ(x) > 2^x: next to nothing.
+      return R.isPositive(R.sub(x, R.mul2exp(R.ONE, HUGE_BITS - 2), 64))
+        ? R.ball(0n, -(2 ** (HUGE_BITS - 2)), 1)
+        : R.INDETERMINATE;
+    }
     return R.div(R.ONE, positive(x, prec + 6), prec);
   }
   // 1/Γ(x) = Γ(1−x) sin(πx)/π
@@ -39,8 +44,6 @@ export function rgamma(x: Ball, prec: number): Ball {
   if (!R.isPositive(other)) return R.INDETERMINATE;
   return R.div(R.mul(positive(other, prec + 8), sin, prec + 6), pi(prec + 8), prec);
 }
-
-const THREE: Ball = { mid: 3n, exp: 0, rad: 0 };
 
 function positive(x: Ball, prec: number): Ball {
   if (R.upperBits(x) > HUGE_BITS) return R.INDETERMINATE;

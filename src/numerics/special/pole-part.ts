@@ -118,7 +118,10 @@ export function polePart(logX: Ball, eps: Rational, m: number, prec: number): Po
   const e = R.fromRational(eps, work);
   const a = R.add(R.mul(e, logX, work), poleLog(eps, m, work), work);
   const excess = expm1(a, work);
-  return { growth: R.add(R.ONE, excess, work), quotient: R.div(excess, e, prec) };
+  const sum = R.add(R.ONE, excess, work);
+  // 1 + (e^A − 1) cancels for A far below 0.
+  const growth = R.upperBits(sum) < -2 ? exp(a, work) : sum;
+  return { growth, quotient: R.div(excess, e, prec) };
 }
 
 /** (e^A − 1)/ε for complex w. */
