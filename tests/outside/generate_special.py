@@ -155,11 +155,11 @@ def cases():
             wi = mp.nstr(parse(size) * mp.sin(parse(angle)), 20, strip_zeros=False)
         w = lambda wr=wr, wi=wi: mpc(parse(wr), parse(wi))
         gw = f"({gp_number(wr)}*1. + I*{gp_number(wi)}*1.)"
-        yield ("scaledE1", {"re": wr, "im": wi}, lambda w=w: e1_mp(w()), f"E({gw})")
+        yield ("scaledE1", {"wr": wr, "wi": wi}, lambda w=w: e1_mp(w()), f"E({gw})")
         b = EXPONENTS[i % len(EXPONENTS)]
         isint = is_integer(b)
         gb = str(int(parse(b))) if isint else gp_number(b)
-        yield ("branchCut", {"b": b, "re": wr, "im": wi}, lambda b=b, w=w: g_mp(parse(b), w()), f"G({gb},{gw})")
+        yield ("branchCut", {"b": b, "wr": wr, "wi": wi}, lambda b=b, w=w: g_mp(parse(b), w()), f"G({gb},{gw})")
 
 
 def main():
