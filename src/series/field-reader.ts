@@ -10,6 +10,7 @@ import type { Numbers } from './numbers.js';
 import { quote } from './quote.js';
 import type { Uncertain } from './series.js';
 import type { ReadNumber } from './uncertain.js';
+import { decimalText } from './written.js';
 import type { Written } from './written.js';
 
 /** A map whose field names were checked. */
@@ -187,9 +188,8 @@ export class FieldReader {
   }
 }
 
-/** ` +- 1/10` or `+1/10 -1/20`, in a form that reads back after a value. */
+/** `+- 0.1` or `+0.1 -1/30`, in a form that reads back after a value. */
 export function spreadText(error: Spread): string {
-  return error.plus.equals(error.minus)
-    ? `+- ${error.plus.toString()}`
-    : `+${error.plus.toString()} -${error.minus.toString()}`;
+  const [plus, minus] = [error.plus, error.minus].map((q) => decimalText(q) ?? q.toString());
+  return plus === minus ? `+- ${plus}` : `+${plus} -${minus}`;
 }

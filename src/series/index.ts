@@ -19,7 +19,7 @@ export { NUMBER_FORMS, parseUncertain } from './uncertain.js';
 export type { ReadNumber } from './uncertain.js';
 export { isNumberProblem } from './number-text.js';
 export type { NumberProblem } from './number-text.js';
-export { textOf, written } from './written.js';
+export { decimalText, textOf, written } from './written.js';
 export type { Written } from './written.js';
 export { parseTree } from './expression/tree.js';
 export type { SyntaxTree } from './expression/syntax.js';

@@ -2,7 +2,7 @@
  * @module Exact numbers that remember how they were written, so that a series can be written again without loss.
  */
 import { R, exact } from '../numerics/index.js';
-import type { Exact } from '../numerics/index.js';
+import type { Exact, Rational } from '../numerics/index.js';
 
 export interface Written extends Exact {
   /** Reads back to the same value, given the same constants and flavours. */
@@ -43,4 +43,22 @@ function decimal(value: Exact): string {
   const text = n.toString().slice(0, DIGITS);
   const point = n.toString().length - up;
   return `${q.sign() < 0 ? '-' : ''}${text[0]!}.${text.slice(1)}e${point - 1}`;
+}
+
+/** A terminating decimal with up to so many digits is shorter to read than its fraction (habit). */
+const SHORT = 24;
+
+/** The decimal form of q when it ends, and soon. Reads back to q. */
+export function decimalText(q: Rational): string | undefined {
+  let rest = q.den;
+  let [twos, fives] = [0, 0];
+  for (; rest % 2n === 0n; twos++) rest /= 2n;
+  for (; rest % 5n === 0n; fives++) rest /= 5n;
+  const places = Math.max(twos, fives);
+  if (rest !== 1n || places > SHORT) return undefined;
+  const all = ((q.abs().num * 10n ** BigInt(places)) / q.den).toString().padStart(places + 1, '0');
+  if (all.length > SHORT) return undefined;
+  const point = all.length - places;
+  const text = places === 0 ? all : `${all.slice(0, point)}.${all.slice(point)}`;
+  return q.sign() < 0 ? `-${text}` : text;
 }

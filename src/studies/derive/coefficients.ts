@@ -1,10 +1,10 @@
 /** @module Tracked numbers as the coefficients of a series file: value in closed form, error, correlations. */
 import { R, Rational, toDecimal, toNumberExact } from '../../numerics/index.js';
 import type { Exact } from '../../numerics/index.js';
-import { LIMITS, written } from '../../series/index.js';
+import { LIMITS, decimalText, written } from '../../series/index.js';
 import type { Coefficient } from '../../series/index.js';
-import { decimalText, formalText, rationalText } from './formal-text.js';
-import type { Sources } from './sources.js';
+import { formalText, rationalText } from './formal-text.js';
+import type { Source, Sources } from './sources.js';
 import type { Tracked } from './tracked.js';
 
 /** Closed forms longer than this are written as decimals (habit). */
@@ -42,6 +42,15 @@ const rounded = (x: number, digits: number): Rational => Rational.parse(x.toPrec
 
 type Spread = NonNullable<Coefficient['error']>;
 
+/** An error of many digits (a square root, say) is rounded as every computed error is. */
+function short(source: Source): Pick<Source, 'error'> {
+  const { error } = source;
+  if (error === undefined) return {};
+  const brief = (q: Rational): Rational =>
+    q.num.toString().length > ERROR_DIGITS + 3 ? rounded(q.toNumber(), ERROR_DIGITS) : q;
+  return { error: { plus: brief(error.plus), minus: brief(error.minus) } };
+}
+
 function spread(x: Tracked, variance: number, sources: Sources): Spread | undefined {
   const only = sources.only(x.slopes);
   if (only === undefined) {
@@ -50,7 +59,7 @@ function spread(x: Tracked, variance: number, sources: Sources): Spread | undefi
     return sigma > 0 && size.sign() > 0 ? { plus: size, minus: size } : undefined;
   }
   const { source, slope } = only;
-  const { error } = source;
+  const { error } = short(source);
   if (slope === 1 && error !== undefined) return error;
   if (slope === -1 && error !== undefined) return { plus: error.minus, minus: error.plus };
   const [up, down] = [Math.abs(slope) * source.plus, Math.abs(slope) * source.minus].map((e) =>

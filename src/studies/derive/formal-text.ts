@@ -2,33 +2,14 @@
 import { Rational } from '../../numerics/index.js';
 import { monomialsOf } from '../../qcd/index.js';
 import type { Formal } from '../../qcd/index.js';
+import { decimalText } from '../../series/index.js';
 
 /** Denominators up to here stay fractions: 9/4 says more than 2.25 (habit). */
 const SMALL_DENOMINATOR = 1000n;
-/** Terminating decimals with up to so many digits are written as decimals (habit). */
-const SHORT = 24;
-
 /** q as p/q or, where that is shorter to read, as a terminating decimal. Reads back to q. */
 export function rationalText(q: Rational): string {
   if (q.den <= SMALL_DENOMINATOR) return q.toString();
   return decimalText(q) ?? q.toString();
-}
-
-/** The decimal form of q when it ends, and soon. */
-export function decimalText(q: Rational): string | undefined {
-  let rest = q.den;
-  let places = 0;
-  let twos = 0;
-  let fives = 0;
-  for (; rest % 2n === 0n; twos++) rest /= 2n;
-  for (; rest % 5n === 0n; fives++) rest /= 5n;
-  places = Math.max(twos, fives);
-  if (rest !== 1n || places > SHORT) return undefined;
-  const digits = (q.abs().num * 10n ** BigInt(places)) / q.den;
-  const all = digits.toString().padStart(places + 1, '0');
-  const point = all.length - places;
-  const text = places === 0 ? all : `${all.slice(0, point)}.${all.slice(point)}`;
-  return all.length > SHORT ? undefined : `${q.sign() < 0 ? '-' : ''}${text}`;
 }
 
 interface Term {
