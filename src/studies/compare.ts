@@ -69,8 +69,8 @@ export interface CompareResult {
 
 export interface CompareOptions extends Omit<AssessOptions, 'verdictRule'> {
   readonly sort?: Sort;
-  /** Most coefficients hidden in the back-test; 0 leaves it out. */
-  readonly hide: number;
+  /** Most coefficients hidden in the back-test; 0 leaves it out. Absent: 1, but 0 for a long series, where it costs as much as the comparison. */
+  readonly hide?: number;
   readonly exact?: ReadNumber;
 }
 
@@ -80,6 +80,8 @@ interface Row {
   readonly key: number;
 }
 
+/** Beyond so many coefficients the back-test runs only when it is asked for. A heuristic. */
+const LONG = 24;
 /** Digits of the ends of a spread. */
 const SPREAD_DIGITS = 8;
 
@@ -117,7 +119,9 @@ function keyOf(sum: Sum, record: ValueRecord | undefined, sort: Sort | undefined
 function pointRows(series: Series, summed: Summed, point: CouplingSummary, options: CompareOptions): Row[] {
   const { expanded, growth, values } = summed;
   const sums = centralSums(values);
-  const list = options.hide > 0 ? records(series, expanded, sums, options) : new Map<string, ValueRecord>();
+  const hide = options.hide ?? (expanded.expansion.coefficients.length > LONG ? 0 : 1);
+  const exact = options.exact === undefined ? {} : { exact: options.exact };
+  const list = hide > 0 ? records(series, expanded, sums, { hide, ...exact }) : new Map<string, ValueRecord>();
   const place = { at: point.value, x: point.x };
   const rowOf = (prescription: Prescription, own: readonly Evaluated[]): Row => {
     const { name, family } = prescription;

@@ -8,9 +8,6 @@ import { presentation } from '../present.js';
 import type { Sort } from '../../studies/index.js';
 import type { Uncertain } from '../../series/index.js';
 
-/** Coefficients hidden in the back-test when --hide is not given. */
-const USUAL_HIDE = 1;
-
 /** The couplings of --grid, exactly; undefined without one. */
 async function gridOf({ given }: Call): Promise<readonly Uncertain[] | undefined> {
   const { at, alphaSMZ, grid } = given;
@@ -53,7 +50,7 @@ async function run(call: Call): Promise<number> {
     ...(by === undefined ? {} : { by }),
     ...(sort === undefined ? {} : { sort }),
     ...(exact === undefined ? {} : { exact }),
-    hide: given.hide ?? USUAL_HIDE,
+    ...(given.hide === undefined ? {} : { hide: given.hide }),
     digits: given.digits ?? USUAL_DIGITS,
     request: {
       ...requestOf(compare.name, name, call),
@@ -61,7 +58,7 @@ async function run(call: Call): Promise<number> {
       ...choiceRequest(given),
       ...(sort === undefined ? {} : { sort }),
       ...(given.exact === undefined ? {} : { exact: given.exact }),
-      hide: given.hide ?? USUAL_HIDE,
+      ...(given.hide === undefined ? {} : { hide: given.hide }),
     },
   });
   if (given.json) deliver(report.plainJson(result), call);
@@ -75,7 +72,7 @@ export const compare: Command = {
   name: 'compare',
   summary: 'every prescription side by side, with its track record',
   about: [
-    'One row a prescription that accepts the series: value, truncation error, ambiguity, terms used, trust in the number, trust in its digits, score with the last coefficient hidden, cautions. Below, the spread of all values and of those without a caution, and who refused and why.',
+    'One row a prescription that accepts the series: value, truncation error, ambiguity, terms used, trust in the number, trust in its digits, score with the last coefficient hidden (--hide for more, or for series beyond 24 coefficients, where it is left out), cautions. Below, the spread of all values and of those without a caution, and who refused and why.',
     'With --grid at several couplings; --csv and --json write one row for each coupling and prescription. With --quiet a line a value: name, value, truncation error.',
   ],
   operands: [{ name: 'SERIES', help: 'a catalogue id, a series file, or - for standard input' }],
