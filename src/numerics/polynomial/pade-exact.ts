@@ -14,6 +14,7 @@ import { contentInt, mulInt, type IntPoly } from './integer.js';
 import { overCommonDenominator } from './lowest-terms.js';
 import { euclidRow } from './pade-euclid.js';
 import { toeplitzMinors } from './pade-minors.js';
+import { fromOwnUnit, inOwnUnit } from './pade-scale.js';
 import type { PadeEntry } from './pade-types.js';
 import { toIntegers, trimPoly } from './rational-poly.js';
 
@@ -27,8 +28,10 @@ export const EUCLID_ORDER = 20;
  */
 export function padeExact(b: readonly Rational[], L: number, M: number): PadeEntry {
   checkOrders(b.length, L, M);
-  const { integers, content } = toIntegers(b);
-  return entryFromIntegers(integers, content, b.length, L, M);
+  const own = inOwnUnit(b);
+  const { integers, content } = toIntegers(own?.coefficients ?? b);
+  const entry = entryFromIntegers(integers, content, b.length, L, M);
+  return own === undefined ? entry : fromOwnUnit(entry, own);
 }
 
 /** RangeError unless L, M >= 0 are integers and L+M+1 coefficients are there. */

@@ -2,10 +2,10 @@
  * @module From a series to the partial fractions of its [L/M] with a stated number of certain bits.
  *
  * Purpose    the one call behind Borel–Padé: entry, poles, residues, each as sharp as asked.
- * Method     exact series of low order: padeExact and exact multiplicities. Otherwise balls, the working precision raised
- *            by what poles or residues fall short of. Where balls decide nothing (a singular block, a multiple pole) one
- *            prime is asked: it proves that an exact series has the entry and simple poles, and more bits will do; or
- *            the series goes to padeExact.
+ * Method     exact series of low order: padeExact and exact multiplicities. Otherwise balls: poles are sharpened as far as
+ *            residues ask for and the coefficients allow, then the working precision is raised by what is missing.
+ *            Where balls decide nothing (a singular block, a multiple pole) one prime is asked: it proves that an exact
+ *            series has the entry and simple poles, and more bits will do; or the series goes to padeExact.
  * Bound      enclosures. Poles have relative accuracy 2^-prec, amplitudes 2^-prec of the strongest amplitude and 64 bits of
  *            their own (doublets may be as weak as 2^-200).
  * Reference  see pade-exact.ts, pade-ball.ts, roots.ts, partial-fractions.ts.
@@ -25,7 +25,7 @@ import type { MissingEntry, PadeFraction, UndecidedEntry } from './pade-types.js
 import type { PartialFractions } from './partial-fractions.js';
 import { sharpFractions, type Shortage } from './sharp-fractions.js';
 import { divmodPoly, toIntegers } from './rational-poly.js';
-import { ballRoots, rationalRoots } from './roots.js';
+import { rationalRoots, refinableRoots } from './roots.js';
 import { usefulBits } from './scaled-polynomial.js';
 
 export interface PadePoles extends PartialFractions {
@@ -71,7 +71,7 @@ export function padePoles(
     if (found.missing !== undefined) {
       const more = Math.ceil(found.missing) + GUARD_BITS;
       work += more;
-      if (found.of === 'poles') rootBits += more;
+      rootBits = Math.max(rootBits, Math.ceil(found.poleBits ?? 0) + GUARD_BITS);
       continue;
     }
     if (rational !== undefined && !proved) {
@@ -97,11 +97,18 @@ function ballPoles(
   const { entry, jacobi } = found;
   // Roots lose a bit or two per order against the coefficients: no search where these are too coarse already.
   const missing = prec + GUARD_BITS + M - usefulBits(entry.denominator, meanSize(entry.denominator));
-  if (missing > 0) return { reason: `the coefficients of [${L}/${M}] need more bits`, missing, of: 'coefficients' };
-  const result = ballRoots(entry.denominator, rootBits, jacobi === undefined ? undefined : recurrenceRatio(jacobi));
-  if ('failed' in result) return { reason: `poles of [${L}/${M}]: ${result.failed}` };
-  const sharp = sharpFractions(entry.numerator, entry.denominator, result.roots, prec, work);
-  return 'reason' in sharp ? sharp : { exists: true, entry, ...sharp };
+  if (missing > 0) return { reason: `the coefficients of [${L}/${M}] need more bits`, missing };
+  const rootsTo = refinableRoots(entry.denominator, jacobi === undefined ? undefined : recurrenceRatio(jacobi));
+  for (let bits = rootBits, last = Infinity; ;) {
+    const result = rootsTo(bits);
+    if ('failed' in result) return { reason: `poles of [${L}/${M}]: ${result.failed}` };
+    const sharp = sharpFractions(entry.numerator, entry.denominator, result.roots, prec, work);
+    if (!('reason' in sharp)) return { exists: true, entry, ...sharp };
+    // Sharper poles that leave half of the want or more: the coefficients hold it up.
+    if (sharp.missing === undefined || sharp.poleBits === undefined || sharp.missing > last / 2) return sharp;
+    last = sharp.missing;
+    bits = Math.max(bits, Math.ceil(sharp.poleBits) + GUARD_BITS);
+  }
 }
 
 /** Nearest integer to the mean of log2|z| over the roots; 0 where the leading coefficient does not tell. */
@@ -146,7 +153,7 @@ function exactPoles(
     const sharp = sharpFractions(balls(entry.numerator), balls(entry.denominator), result.roots, prec, work);
     if (!('reason' in sharp)) return { exists: true, entry, ...sharp, polynomial: balls(quotient) };
     reason = sharp.reason;
-    extra += Math.ceil(sharp.missing ?? extra) + GUARD_BITS;
+    extra = Math.max(extra + Math.ceil(sharp.missing ?? extra), Math.ceil(sharp.poleBits ?? 0) - prec) + GUARD_BITS;
   }
   return { exists: undefined, reason };
 }

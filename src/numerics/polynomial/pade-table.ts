@@ -9,6 +9,7 @@
 import type { Rational } from '../rational.js';
 import { EUCLID_ORDER, entryFromIntegers, finish } from './pade-exact.js';
 import { euclidRows } from './pade-euclid.js';
+import { fromOwnUnit, inOwnUnit } from './pade-scale.js';
 import type { PadeEntry } from './pade-types.js';
 import { toIntegers } from './rational-poly.js';
 
@@ -30,8 +31,12 @@ export interface TableRange {
 /** All [L/M] with L + M <= b.length − 1 in the range, by rising L + M, then falling L. */
 export function padeTable(b: readonly Rational[], range: TableRange = {}): TableEntry[] {
   const { maxL = Infinity, maxM = Infinity, band = 2, minOrder = 0 } = range;
-  const { integers, content } = toIntegers(b);
+  const own = inOwnUnit(b);
+  const { integers, content } = toIntegers(own?.coefficients ?? b);
   const out: TableEntry[] = [];
+  const add = (L: number, M: number, entry: PadeEntry): void => {
+    out.push({ L, M, entry: own === undefined ? entry : fromOwnUnit(entry, own) });
+  };
   for (let order = minOrder; order < b.length; order++) {
     const degrees: number[] = [];
     for (let L = order; L >= 0; L--) {
@@ -40,13 +45,13 @@ export function padeTable(b: readonly Rational[], range: TableRange = {}): Table
     }
     if (order >= EUCLID_ORDER) {
       for (const L of degrees) {
-        out.push({ L, M: order - L, entry: entryFromIntegers(integers, content, b.length, L, order - L) });
+        add(L, order - L, entryFromIntegers(integers, content, b.length, L, order - L));
       }
       continue;
     }
     euclidRows(integers, order + 1, degrees).forEach(({ r, t }, i) => {
       const L = degrees[i]!;
-      out.push({ L, M: order - L, entry: finish(r, t, integers, content, b.length, L, order - L) });
+      add(L, order - L, finish(r, t, integers, content, b.length, L, order - L));
     });
   }
   return out;

@@ -22,6 +22,8 @@ import { evaluateAt, inputErrorBound, log2Length, valueErrorBound } from './scal
 const MARGIN = 2 ** -12;
 /** Boxes are stored around the discs: √2, and the rounding of their centres. */
 const BOX = 0.5 + 2 ** -6;
+/** Heuristic: a resting point has |p| up to twice the bound of its error, hence three times that in its disc. */
+const LIMIT = 2;
 
 export interface Discs {
   /** log2 of the radius. */
@@ -69,7 +71,8 @@ export function smithDiscs(cloud: RootCloud): Discs {
     loss = Math.max(loss, w - (size - (Math.log2(error) + s.unit + base - product)));
     if (!(bits >= accuracy)) {
       accuracy = bits;
-      inputLimited = Math.log2(inputErrorBound(s, eta)) > upper - 1;
+      const input = inputErrorBound(s, eta);
+      inputLimited = input === Infinity || Math.log2(input) > upper - LIMIT;
     }
     const partner = cloud.partner[i]!;
     if (partner >= 0) radius[partner] = radius[i]!;

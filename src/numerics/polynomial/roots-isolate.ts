@@ -3,8 +3,9 @@
  *
  * Purpose    disjoint discs of a stated relative radius around every root of a real polynomial.
  * Method     doubles give the starting points. At a working precision of w bits the points are moved until they rest at
- *            the error of evaluation, then discs are formed; while they meet, w is doubled. Once they are disjoint the
- *            roots are known as real or paired, only half of them are moved, and w grows with the correct digits.
+ *            the error of evaluation, then discs are formed; while they meet, w is doubled, though never beyond the bits
+ *            to which the coefficients are known. Once they are disjoint the roots are known as real or paired, only half
+ *            of them are moved, and w grows with the correct digits.
  * Bound      the discs are Smith's (roots-discs.ts). `loss` bits between w and the accuracy are measured, not guessed.
  * Reference  D. A. Bini, L. Robol, J. Comput. Appl. Math. 272 (2014) 276 (secular roots, adaptive precision).
  */
@@ -21,8 +22,15 @@ const GUARD_BITS = 6;
 const SPARE_BITS = 64;
 const MAX_BITS = 1 << 16;
 const MAX_POLISH = 40;
+/** Heuristic: how often points are lifted and settled anew at a precision that cannot usefully be raised. */
+const LAST_TRIES = 3;
 
-export type Isolation = { readonly cloud: RootCloud; readonly discs: Discs } | { readonly failed: string };
+export interface Isolated {
+  readonly cloud: RootCloud;
+  readonly discs: Discs;
+}
+
+export type Isolation = Isolated | { readonly failed: string };
 
 /**
  * Disjoint discs with |z_i|/r_i >= 2^prec for the polynomial with coefficients a (ascending, degree >= 1, a_0 and a_n
@@ -32,7 +40,7 @@ export type Isolation = { readonly cloud: RootCloud; readonly discs: Discs } | {
 export function isolateRoots(a: readonly Ball[], prec: number, ratio?: NewtonRatio): Isolation {
   const n = a.length - 1;
   const cloud = new RootCloud(a, searchInDoubles(a, ratio), FIRST_BITS + Math.ceil(n / 2));
-  for (;;) {
+  for (let tries = 0; ;) {
     settle(cloud);
     const rough = smithDiscs(cloud);
     if (symmetrise(cloud, rough.radius)) {
@@ -40,11 +48,20 @@ export function isolateRoots(a: readonly Ball[], prec: number, ratio?: NewtonRat
       if (discs.disjoint) return sharpen(cloud, discs, prec);
       cloud.partner.fill(-1);
     }
-    if (rough.inputLimited) return { failed: 'roots cannot be told apart within the error of the coefficients' };
+    const most = cloud.usefulBits() + SPARE_BITS;
+    if (cloud.w >= most) tries++;
+    if (rough.inputLimited || tries >= LAST_TRIES) {
+      return { failed: 'roots cannot be told apart within the error of the coefficients' };
+    }
     if (cloud.w * 2 > MAX_BITS) return { failed: `roots cannot be told apart with ${cloud.w} bits` };
-    cloud.raise(cloud.w * 2);
+    cloud.raise(Math.max(cloud.w, Math.min(cloud.w * 2, most)));
     rough.crowded.forEach((flag, i) => flag === 1 && cloud.lift(i, rough.radius[i]! - 1));
   }
+}
+
+/** The same roots with |z_i|/r_i >= 2^prec, from where an earlier call left them; its cloud is changed in place. */
+export function refineRoots({ cloud, discs }: Isolated, prec: number): Isolation {
+  return sharpen(cloud, discs, prec);
 }
 
 /** Starting points from the midpoints of the coefficients. */

@@ -18,7 +18,7 @@ import type { IntPoly } from './integer.js';
 import { toIntegers } from './rational-poly.js';
 import type { RootCloud } from './roots-cloud.js';
 import type { Discs } from './roots-discs.js';
-import { isolateRoots } from './roots-isolate.js';
+import { isolateRoots, refineRoots, type Isolation } from './roots-isolate.js';
 import type { NewtonRatio } from './roots-start.js';
 import { log2Length } from './scaled-polynomial.js';
 import { squarefreeInt } from './squarefree.js';
@@ -74,6 +74,11 @@ export function rationalRoots(p: IntPoly, prec: number): RootsResult {
 
 /** Roots of a polynomial known by enclosures of its coefficients; `ratio` as in isolateRoots. */
 export function ballRoots(p: readonly Ball[], prec: number, ratio?: NewtonRatio): RootsResult {
+  return refinableRoots(p, ratio)(prec);
+}
+
+/** ballRoots as a search that can be gone on with: each call takes up the roots where the one before left them. */
+export function refinableRoots(p: readonly Ball[], ratio?: NewtonRatio): (prec: number) => RootsResult {
   let n = p.length;
   while (n > 0 && R.isExactZero(p[n - 1]!)) n--;
   if (n === 0) throw new RangeError('certifiedRoots: the zero polynomial');
@@ -82,13 +87,19 @@ export function ballRoots(p: readonly Ball[], prec: number, ratio?: NewtonRatio)
   const roots: CertifiedRoot[] = zeros > 0 ? [{ value: C.ZERO, multiplicity: zeros, real: true }] : [];
   const a = p.slice(zeros, n);
   if (R.containsZero(a[a.length - 1]!))
-    return { failed: 'the leading coefficient may be zero: the degree is uncertain' };
-  if (a.length === 1) return { roots };
-  if (R.containsZero(a[0]!)) return { failed: 'the constant coefficient may be zero: a root cannot be told from 0' };
-  const result = isolateRoots(a, prec, ratio);
-  if ('failed' in result) return result;
-  return { roots: sorted([...roots, ...boxes(result.cloud, result.discs, 1)]) };
+    return always({ failed: 'the leading coefficient may be zero: the degree is uncertain' });
+  if (a.length === 1) return always({ roots });
+  if (R.containsZero(a[0]!))
+    return always({ failed: 'the constant coefficient may be zero: a root cannot be told from 0' });
+  let result: Isolation | undefined;
+  return (prec) => {
+    result = result === undefined || 'failed' in result ? isolateRoots(a, prec, ratio) : refineRoots(result, prec);
+    if ('failed' in result) return result;
+    return { roots: sorted([...roots, ...boxes(result.cloud, result.discs, 1)]) };
+  };
 }
+
+const always = (result: RootsResult) => (): RootsResult => result;
 
 /** The discs as boxes of balls. */
 function boxes(cloud: RootCloud, discs: Discs, multiplicity: number): CertifiedRoot[] {

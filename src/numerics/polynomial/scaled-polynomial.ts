@@ -49,13 +49,15 @@ export function scaleCoefficients(a: readonly Ball[], e: number, w: number): Sca
   for (let k = 0; k < n; k++) {
     const { mid, exp, rad } = a[k]!;
     const s = exp + k * e - unit;
+    const rounding = s < 0 ? 1 : 0;
     const c = shift(mid, s);
     value.push(c);
     if (k > 0) slope.push(c * BigInt(k));
     weight[k] = c === 0n ? 0 : 2 ** (bitLength(c) - w);
     inputError[k] = rad === 0 ? 0 : rad * 2 ** Math.max(s, -1000) * SLACK;
-    error[k] = inputError[k]! + (s < 0 ? 1 : 0);
-    weight[k]! += error[k]! * 2 ** -w;
+    error[k] = inputError[k]! + rounding;
+    // Not from error[k]: that is Infinity where a radius is beyond 2^1024 units, and Infinity·2^-w would be NaN.
+    weight[k]! += (rad === 0 ? 0 : rad * 2 ** Math.max(s - w, -1000) * SLACK) + rounding * 2 ** -w;
   }
   return { w, unit, value, slope, weight, error, inputError };
 }

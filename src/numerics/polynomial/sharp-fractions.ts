@@ -17,11 +17,12 @@ const GUARD_BITS = 16;
 /** Certain bits of an amplitude however weak its pole is. */
 const WEAK_BITS = 64;
 
-/** What kept balls from an answer: bits missing of the coefficients or the poles, or (missing absent) nothing decided. */
+/** What kept balls from an answer: bits missing, or (missing absent) nothing decided. */
 export interface Shortage {
   readonly reason: string;
   readonly missing?: number;
-  readonly of?: 'coefficients' | 'poles';
+  /** Relative accuracy of the poles, in bits, that should do: that of the pole in want and what is missing there. */
+  readonly poleBits?: number;
 }
 
 /** Partial fractions evaluated with as many bits as the accuracy needs, `most` at the utmost. */
@@ -33,13 +34,21 @@ export function sharpFractions(
   most: number,
 ): PartialFractions | Shortage {
   let bits = Math.min(most, prec + 2 * GUARD_BITS + q.length);
-  for (;;) {
+  for (let last = Infinity; ;) {
     const fractions = partialFractions(p, q, roots, bits);
     const strongest = Math.max(...fractions.poles.map((pole) => C.upperBits(pole.amplitude)));
-    const missing = Math.max(0, ...fractions.poles.map((pole) => missingBits(pole, prec, strongest)));
+    const shortages = fractions.poles.map((pole) => Math.min(most, missingBits(pole, prec, strongest)));
+    const missing = Math.max(0, ...shortages);
     if (missing === 0) return fractions;
-    if (bits >= most) return { reason: 'residues need more bits', missing: Math.min(missing, most), of: 'poles' };
-    bits = Math.min(most, bits + Math.ceil(Math.min(missing, most)) + GUARD_BITS);
+    if (bits >= most) {
+      const poleBits = Math.max(
+        ...shortages.map((s, i) => (s > 0 ? s + C.accuracyBits(fractions.poles[i]!.position) : 0)),
+      );
+      return { reason: 'residues need more bits', missing, poleBits };
+    }
+    // Bits that leave half of the want or more are not what is missing: one evaluation with all of them settles that.
+    bits = missing > last / 2 ? most : Math.min(most, bits + Math.ceil(missing) + GUARD_BITS);
+    last = missing;
   }
 }
 
