@@ -16,10 +16,10 @@ import type { Exponent } from './exponent.js';
 import { exponentialSum, exponentialTerms } from './exponential-sum.js';
 import { gamma } from './gamma.js';
 import { polePart, powerOverFactorial } from './pole-part.js';
+import { refine } from './refine.js';
 import { spreadCut, spreadExponent } from './spread.js';
 import { fractionReal, fractionTerms, planFraction } from './stieltjes-fraction.js';
 
-const ROUNDS = 6;
 /** The logarithm and exponential beside the series, in products (heuristic). */
 const ELEMENTARY_STEPS = 100;
 
@@ -42,15 +42,8 @@ function exactAlternating(b: Exponent, x: Ball, prec: number): Ball {
     const remainder = divMag(mag(1, Math.ceil(Math.max(far.error, -1e9))), magLower(x));
     return widenMag(asymptoticReal(x, b, -1, far, prec + 10), remainder);
   }
-  let bits = prec + 10 + Math.ceil(Math.log2(2 + size + 2 * Math.abs(b.approx)));
-  let value = R.INDETERMINATE;
-  for (let round = 0; round < ROUNDS; round++) {
-    value = near(b, x, size, bits);
-    const lack = Math.ceil(prec + 2 - R.accuracyBits(value));
-    if (!(lack > 0) || bits > 6 * prec + 1000) break;
-    bits += Math.min(lack + 4, bits);
-  }
-  return value;
+  const start = prec + 10 + Math.ceil(Math.log2(2 + size + 2 * Math.abs(b.approx)));
+  return refine(prec, start, (bits) => near(b, x, size, bits), R.accuracyBits);
 }
 
 function near(b: Exponent, x: Ball, size: number, bits: number): Ball {

@@ -26,10 +26,10 @@ import type { Exponent } from './exponent.js';
 import { exponentialSumComplex, exponentialTerms } from './exponential-sum.js';
 import { gamma } from './gamma.js';
 import { powerOverFactorialComplex, polePartComplex } from './pole-part.js';
+import { refine } from './refine.js';
 import { modulusLower, spreadCut, spreadE1, spreadExponent } from './spread.js';
 import { fractionComplex, fractionTerms, planFraction } from './stieltjes-fraction.js';
 
-const ROUNDS = 6;
 /** The logarithm and exponential beside the series, in products (heuristic). */
 const ELEMENTARY_STEPS = 200;
 
@@ -69,15 +69,8 @@ function exactCut(b: Exponent, w: Complex, prec: number): Complex {
     const remainder = divMag(mag(1, Math.ceil(Math.max(far.error, -1e9))), modulusLower(w));
     return { re: widenMag(series.re, remainder), im: widenMag(series.im, remainder) };
   }
-  let bits = prec + spare + Math.ceil(Math.log2(1 + size + Math.abs(b.approx)));
-  let value: Complex = C.INDETERMINATE;
-  for (let round = 0; round < ROUNDS; round++) {
-    value = near(b, w, re, im, size, bits);
-    const lack = Math.ceil(prec + 2 - C.accuracyBits(value));
-    if (!(lack > 0) || bits > 6 * prec + 1000) break;
-    bits += Math.min(lack + 4, bits);
-  }
-  return value;
+  const start = prec + spare + Math.ceil(Math.log2(1 + size + Math.abs(b.approx)));
+  return refine(prec, start, (bits) => near(b, w, re, im, size, bits), C.accuracyBits);
 }
 
 function near(b: Exponent, w: Complex, re: number, im: number, size: number, bits: number): Complex {

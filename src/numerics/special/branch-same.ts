@@ -38,6 +38,7 @@ import { exponentialSum } from './exponential-sum.js';
 import { gamma, rgamma } from './gamma.js';
 import { psiBound } from './log-gamma.js';
 import { polePart, powerOverFactorial } from './pole-part.js';
+import { refine } from './refine.js';
 import { spreadExponent, spreadSame } from './spread.js';
 
 export interface BranchValue {
@@ -49,8 +50,6 @@ export interface BranchValue {
 
 const UNKNOWN: BranchValue = { pv: R.INDETERMINATE, im: R.INDETERMINATE };
 const HALF = Rational.of(1n, 2n);
-/** Rounds of raised precision next to a zero of F_b. */
-const ROUNDS = 6;
 
 /**
  * F_b(x) as {pv, im} for x > 0 and real b, near and at the integers too. Formula: header. Accuracy near prec bits relative to pv
@@ -84,15 +83,12 @@ function exactSame(b: Exponent, x: Ball, prec: number): BranchValue {
     const remainder = divMag(mag(1, Math.ceil(Math.max(far.error, -1e9))), magLower(x));
     return { pv: widenMag(series, remainder), im };
   }
-  let bits = prec + spare;
-  let value = UNKNOWN;
-  for (let round = 0; round < ROUNDS; round++) {
-    value = convergent(b, x, size * (1 + 1e-12), bits);
-    const lack = Math.ceil(prec + 2 - R.accuracyBits(value.pv));
-    if (!(lack > 0) || bits > 6 * prec + 1000) break;
-    bits += Math.min(lack + 4, bits);
-  }
-  return value;
+  return refine(
+    prec,
+    prec + spare,
+    (bits) => convergent(b, x, size * (1 + 1e-12), bits),
+    (value) => R.accuracyBits(value.pv),
+  );
 }
 
 function convergent(b: Exponent, x: Ball, size: number, bits: number): BranchValue {
