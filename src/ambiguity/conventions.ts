@@ -26,6 +26,8 @@ export interface Convention {
 export interface LateralSource {
   /** |Im| of the upper lateral sum. */
   readonly im: number;
+  /** |value| of the same sum, for relative numbers. */
+  readonly size: number;
   /** Which prescription it comes from. */
   readonly origin: string;
 }

@@ -49,7 +49,7 @@ function inputFlags(p: Prepared): GrowthFlag[] {
     flags.push({
       code: 'estimated-input',
       text:
-        `${plural(p.estimated.length, 'coefficient')} only estimated: left out of the verdict` +
+        `${plural(p.estimated.length, 'coefficient')} only estimated: left out of the growth diagnosis` +
         (k === undefined ? '' : ` (with ${p.estimated.length === 1 ? 'it' : 'them'} the Bayes factor is ${short(k)})`),
     });
   }

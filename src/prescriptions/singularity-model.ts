@@ -10,7 +10,7 @@ import type { Expansion } from '../series/index.js';
 import type { Outcome, Prescription } from './prescription.js';
 import { dressed, refusal, scaled, toDigits } from './prescription.js';
 
-/** A strength fitted to the last coefficients and making up more than this multiple of one is a cancellation: say so. Heuristic. */
+/** Contributions whose sizes add up to more than this multiple of the last coefficient cancel: say so. Heuristic. */
 const SUSPICIOUS_SHARE = 5;
 
 /** Stated singularities that enter the model: those with an exponent. */
@@ -86,8 +86,13 @@ export const singularityModel: Prescription = {
             `${(100 * best.fit.shares[i]!).toFixed(0)} % of the last coefficient`,
         );
       });
-      if (best.fit.shares.some((s) => Math.abs(s) > SUSPICIOUS_SHARE))
+      if (best.fit.shares.reduce((sum, s) => sum + Math.abs(s), 0) > SUSPICIOUS_SHARE)
         notes.push('large contributions cancel: the strengths are not to be trusted one by one');
+      const silent = e.stated.filter((s) => s.exponent === undefined);
+      if (silent.length > 0)
+        notes.push(
+          `left out, since no exponent is known: t = ${silent.map((s) => R.toNumber(s.t.ball(64)).toPrecision(4)).join(', ')}`,
+        );
       if (model.length < all.length)
         notes.push(
           `only the nearest ${model.length} of ${all.length} stated singularities: too few coefficients for more`,

@@ -45,13 +45,14 @@ function completed(e: Expansion, s: StatedSingularity, n: number, prec: number):
   };
 }
 
-/** Where to cut: x − b − 1/3 terms for the same-sign leader, the least term for the alternating one; within 1 … N. */
+/** Where to cut: x − b − 1/3 terms for the same-sign leader, the least term for the alternating one; within 1 … N − 1. */
 function cutOf(e: Expansion, s: StatedSingularity): number {
   const N = e.coefficients.length;
   const w = Math.abs(toNumberExact(s.t)) / toNumberExact(e.x);
   const best =
     toNumberExact(s.t) > 0 ? w - (toNumberExact(s.exponent!) - 1) - 1 / 3 : (leastTerm(terms(e, 160))?.index ?? N);
-  return Math.min(N, Math.max(1, Math.round(best)));
+  // Not beyond N − 1: the terminant is scaled by the first omitted term, which must be a known one.
+  return Math.min(N - 1, Math.max(1, Math.round(best)));
 }
 
 export const terminantSum: Prescription = {

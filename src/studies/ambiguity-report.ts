@@ -31,7 +31,11 @@ export function lateralSource(values: readonly Evaluated[]): LateralSource | und
   const best = candidates[0];
   return best === undefined
     ? undefined
-    : { im: Math.abs(R.toNumber(best.im)), origin: `${best.v.prescription.name} ${best.v.outcome.variant}` };
+    : {
+        im: Math.abs(R.toNumber(best.im)),
+        size: best.v.outcome.kind === 'sum' ? Math.abs(R.toNumber(best.v.outcome.value)) : 0,
+        origin: `${best.v.prescription.name} ${best.v.outcome.variant}`,
+      };
 }
 
 export interface AmbiguityFound {
@@ -72,7 +76,7 @@ export function ambiguityReport(
     return none('no lateral sums stand and the least term is not reached: no ambiguity can be stated from these terms');
   const dimension = leadingDimension(expanded);
   const Q = hardScaleGeV(series);
-  const value = Math.abs(sums[sums.length - 1] ?? 0);
+  const value = lateral?.size ?? Math.abs(sums[table.least?.index ?? sums.length - 1] ?? 0);
   const chosen = list.find((c) => c.name === '|Im|/pi') ?? list[0]!;
   const statement = summable
     ? 'no singularity on the positive axis shows: the Borel sum is unique as far as these terms tell; least-term rows measure the truncation, not an ambiguity'
@@ -201,7 +205,7 @@ export function optimalReport(
       (observed === undefined
         ? 'the terms still fall at the last known order: the series has not begun to diverge at this coupling'
         : `the term of order ${observed.power} is the smallest; stopping there leaves an error of its size`) +
-      (competing ? '; singularities of both signs compete, so the smallest term alone does not mark the best cut' : ''),
+      (competing ? '; singularities compete, so the smallest term alone does not mark the best cut' : ''),
     standing: 'indicative',
   };
 }
@@ -220,9 +224,10 @@ function prediction(expanded: Expanded, growth: Growth): OptimalTruncationReport
         : undefined;
   if (source === undefined || !(x > 0)) return undefined;
   const p = predictOptimum(source.t, source.b, x);
+  if (!(p.leastTermAt > 0)) return undefined;
   return {
     leastTermAt: indicative(p.leastTermAt, 3),
-    principalValueAt: indicative(p.principalValueAt, 3),
+    ...(source.t > 0 ? { principalValueAt: indicative(p.principalValueAt, 3) } : {}),
     x: indicative(p.omega, 5),
     b: indicative(p.b, 5),
     origin: source.origin,

@@ -11,6 +11,7 @@ import { ambiguityReport, optimalReport, powerReport } from './ambiguity-report.
 import type { Assessment, ValueEntry, ValueRecord } from './assessment.js';
 import { recordCautions, records } from './backtesting/record.js';
 import { cautions } from './cautions.js';
+import { checkCoupling } from './coupling-range.js';
 import { expand } from './expand.js';
 import type { Expanded } from './expand.js';
 import { growthReport } from './growth-report.js';
@@ -90,6 +91,7 @@ export interface Summed {
 
 /** Expands, diagnoses and runs the prescriptions: what `assess` and `sum` share. */
 export function sumUp(series: Series, at: Uncertain, options: Pick<AssessOptions, 'order' | 'digits' | 'by'>): Summed {
+  checkCoupling(series, at);
   const expanded = expand(series, at.value, options.order);
   const growth = diagnoseGrowth(expanded.growthInput);
   const values = evaluateAll(

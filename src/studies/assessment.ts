@@ -255,7 +255,7 @@ export interface OptimalTruncationReport {
   /** Number of terms x − b (least term) and x − b − 1/3 (principal value), from a known or found position and exponent. */
   readonly predicted?: {
     readonly leastTermAt: string;
-    readonly principalValueAt: string;
+    readonly principalValueAt?: string;
     readonly x: string;
     readonly b: string;
     readonly origin: string;

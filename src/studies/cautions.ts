@@ -30,11 +30,20 @@ export function cautions(
     });
   for (const f of growth.flags) list.push({ code: f.code, text: f.text });
   if (series.coefficients.some((c) => c.status === 'estimated'))
-    list.push({ code: 'estimated-input', text: 'at least one coefficient is an estimate, not a calculation' });
+    list.push({
+      code: 'rests-on-estimate',
+      text: 'the values use a coefficient that is an estimate, not a calculation',
+    });
   if (!series.coupling.plain && alpha !== undefined && alpha > LARGE_ALPHA)
     list.push({
       code: 'large-coupling',
       text: `the coupling ${alpha} is large: truncated series and running are not reliable there`,
+    });
+  const silent = expanded.expansion.stated[0];
+  if (silent !== undefined && silent.exponent === undefined)
+    list.push({
+      code: 'nearest-without-exponent',
+      text: 'the nearest stated singularity has no known exponent: the singularity model leaves it out',
     });
   if (!series.coupling.plain && series.flavours === undefined)
     list.push({

@@ -7,6 +7,7 @@ import {
   divExact,
   exact,
   isZeroExact,
+  mulExact,
   R,
   Rational,
   signExact,
@@ -16,7 +17,7 @@ import {
 import type { Exact } from '../numerics/index.js';
 import { betaCoefficients, divisorSize, expectedSingularity, isRefusal, uPerT } from '../qcd/index.js';
 import type { GrowthInput, GrowthTerm } from '../growth/index.js';
-import { couplingScheme, knownLoops, massDefinition } from './scheme.js';
+import { couplingScheme, isOtherCoupling, knownLoops, massDefinition } from './scheme.js';
 
 export interface Expanded {
   readonly expansion: Expansion;
@@ -37,7 +38,9 @@ const ROUNDED_DIGITS = 3;
 /** Expands the first `order` coefficients of the series at the coupling value `at`. */
 export function expand(series: Series, at: Exact, order?: number): Expanded {
   const kept = order === undefined ? series.coefficients : series.coefficients.slice(0, order);
-  const values = kept.map((c) => c.value);
+  // Σ c_n x^n at x < 0 is Σ (−1)^n c_n |x|^n: the sum is along the positive axis of the mirrored Borel plane.
+  const mirrored = series.coupling.plain && signExact(at) < 0;
+  const values = kept.map((c, n) => (mirrored && (n + series.firstPower) % 2 !== 0 ? negated(c.value) : c.value));
   const firstNonZero = values.findIndex((v) => !isZeroExact(v));
   const leadingZeros = firstNonZero < 0 ? 0 : firstNonZero;
   const coefficients = values.slice(leadingZeros);
@@ -46,9 +49,10 @@ export function expand(series: Series, at: Exact, order?: number): Expanded {
     series.coupling.plain || series.flavours === undefined
       ? undefined
       : uPerT(series.flavours, series.coupling.divisor);
-  const stated = statedSingularities(series, leadingZeros, scale);
+  const given = statedSingularities(series, leadingZeros, scale);
+  const stated = mirrored ? given.map((s) => ({ ...s, t: negated(s.t), kind: 'other' as const })) : given;
   const expansion: Expansion = {
-    x: divExact(at, series.coupling.plain ? exact(1) : divisorSize(series.coupling.divisor)),
+    x: divExact(mirrored ? negated(at) : at, series.coupling.plain ? exact(1) : divisorSize(series.coupling.divisor)),
     power: series.firstPower + leadingZeros,
     factor: series.factor,
     additive: series.additive,
@@ -90,6 +94,8 @@ function runningOf(series: Series): { running?: Running } {
   const beta = betaCoefficients(flavours, series.coupling.divisor).slice(0, knownLoops(scheme));
   return { running: { beta, scaleRatio: series.scaleRatio ?? exact(1), flavours } };
 }
+
+const negated = (e: Exact): Exact => mulExact(e, exact(-1));
 
 function quotedError(c: Uncertain): number {
   return c.error === undefined ? 0 : (c.error.plus.toNumber() + c.error.minus.toNumber()) / 2;
@@ -179,11 +185,13 @@ function expectation(
 ): ReturnType<typeof expectedSingularity> | undefined {
   if (u?.rational === undefined || series.flavours === undefined || series.coupling.plain) return undefined;
   if (u.rational.sign() < 0 && stated.anomalousDimension === undefined) return undefined;
-  return expectedSingularity({
+  const expected = expectedSingularity({
     flavours: series.flavours,
     dimension: u.rational.add(u.rational),
     divisor: series.coupling.divisor,
     ...(stated.anomalousDimension === undefined ? {} : { anomalousDimension: stated.anomalousDimension }),
     ...(stated.wilsonCorrections === undefined ? {} : { wilson: { corrections: stated.wilsonCorrections } }),
   });
+  // Position and exponent belong to the quantity; the corrections to the MSbar beta function.
+  return isOtherCoupling(series) ? { ...expected, corrections: [] } : expected;
 }

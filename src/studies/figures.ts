@@ -7,6 +7,9 @@ import type { Ball, Exact } from '../numerics/index.js';
 /** Significant digits of an indicative number without a quoted error. */
 const INDICATIVE_DIGITS = 4;
 
+/** Rounding of estimates that were computed in doubles. */
+const DOUBLE_ROUNDING = 1e-14;
+
 /** Certain digits of an enclosure, at most `digits`. */
 export function ballText(b: Ball, digits: number): string {
   return toDecimal(b, digits).text;
@@ -39,7 +42,10 @@ export function indicative(x: number, digits = INDICATIVE_DIGITS): string {
 
 /** Value and error of an estimate: the error to two significant digits, the value to the same place. */
 export function estimateText(value: number, error: number): { value: string; error: string } {
-  if (!(error > 0) || !Number.isFinite(error)) return { value: indicative(value, 12), error: '0' };
+  if (!Number.isFinite(error)) return { value: indicative(value, 12), error: 'unknown' };
+  // A double carries no more than fifteen digits, whatever the method claims.
+  error = Math.max(error, Math.abs(value) * DOUBLE_ROUNDING);
+  if (!(error > 0)) return { value: indicative(value, 12), error: '0' };
   const place = Math.floor(Math.log10(error)) - 1;
   if (place < -14 || place > 6)
     return { value: indicative(value, 12), error: error.toExponential(1).replace('e+', 'e') };

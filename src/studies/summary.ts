@@ -48,9 +48,12 @@ export function hardScaleGeV(series: Series): number | undefined {
   return series.hardScale.unit === 'MeV' ? v / 1000 : v;
 }
 
-/** Λ/Q of the series at this coupling: Λ/μ from α and n_f at the loops of the β function, times μ/Q. */
+/** Λ_MSbar and its β function belong to an MSbar coupling; a file that names no scheme is taken as MSbar. */
+const isMSbar = (series: Series): boolean => series.scheme === undefined || /^ms-?bar/i.test(series.scheme);
+
+/** Λ/Q of the series at this coupling: Λ/μ from α and n_f at the loops of the β function, times μ/Q. None outside MSbar. */
 export function lambdaOverQ(series: Series, at: Exact): number | undefined {
-  if (series.coupling.plain || series.flavours === undefined) return undefined;
+  if (series.coupling.plain || series.flavours === undefined || !isMSbar(series)) return undefined;
   const overMu = lambdaRatio(toNumberExact(at), series.flavours);
   if (overMu === undefined) return undefined;
   return overMu * (series.scaleRatio === undefined ? 1 : toNumberExact(series.scaleRatio));
@@ -79,7 +82,7 @@ export function couplingSummary(
           lambda: {
             overMu: indicative(over / ratio),
             ...(Q === undefined ? {} : { GeV: indicative(over * Q) }),
-            definition: `Lambda_MSbar, n_f = ${series.flavours}, exact four-loop definition`,
+            definition: `Lambda_MSbar, n_f = ${series.flavours}, exact four-loop definition${series.scheme === undefined ? ' (no scheme stated: taken as MSbar)' : ''}`,
           },
         }),
     ...(path === undefined ? {} : { path }),

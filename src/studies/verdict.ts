@@ -17,6 +17,7 @@
 import { R } from '../numerics/index.js';
 import type { Convention } from '../ambiguity/index.js';
 import type { Growth } from '../growth/index.js';
+import type { Sum } from '../prescriptions/index.js';
 import type { Standing, VerdictReport } from './assessment.js';
 import { ballText, indicative } from './figures.js';
 import { writeVerdict } from './rounding.js';
@@ -27,6 +28,8 @@ import type { VerdictRule } from './verdict-rule.js';
 const SHORT = 4;
 /** Fewer usable coefficients than this: the noise decides the value. */
 const NOISY = 3;
+/** Noise can be told from structure only in a series of at least this length. */
+const LONG = 8;
 const RUNGS = [
   'singularity-model',
   'borel-leroy-pade',
@@ -51,7 +54,9 @@ function central(values: readonly Evaluated[], name: string): Evaluated | undefi
 function choose(values: readonly Evaluated[], growth: Growth, count: number): Choice | string {
   if (growth.flags.some((f) => f.code === 'errors-exceed-values'))
     return 'the coefficient errors exceed the coefficients';
-  if (growth.usableCoefficients !== undefined && growth.usableCoefficients < NOISY)
+  // Noise that the data betray; errors that the file quotes are propagated instead.
+  const quoted = (central(values, 'fixed-order')?.input ?? 0) > 0;
+  if (!quoted && count >= LONG && growth.usableCoefficients !== undefined && growth.usableCoefficients < NOISY)
     return 'the coefficients are too noisy: no method can tell their sum';
   if (growth.verdict === 'superfactorial' && growth.order !== 2)
     return 'the coefficients grow faster than any (kn)!: no sum is unique';
@@ -74,9 +79,16 @@ function choose(values: readonly Evaluated[], growth: Growth, count: number): Ch
     if (v === undefined || v.outcome.kind !== 'sum') continue;
     if (name === 'singularity-model' && v.outcome.notes.some((n) => n.startsWith('large contributions cancel')))
       continue;
+    // A value below its own errors is no value while another rung stands.
+    if (name !== 'fixed-order' && exceeds(v, v.outcome)) continue;
     return { v, rung: v.prescription.title };
   }
   return 'every prescription refused';
+}
+
+/** Do truncation or input error exceed the value? */
+function exceeds(v: Evaluated, sum: Sum): boolean {
+  return Math.max(sum.truncation ?? 0, v.input ?? 0) > Math.abs(R.toNumber(sum.value));
 }
 
 /** The value of a rule that names its prescription; why there is none otherwise. */

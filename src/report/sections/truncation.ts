@@ -18,7 +18,7 @@ export function truncationSection(page: Page, report: OptimalTruncationReport): 
   if (predicted !== undefined) {
     facts.push({
       label: 'predicted',
-      text: `x − b = ${shorten(predicted.leastTermAt, 4)} terms to the least one; x − b − 1/3 = ${shorten(predicted.principalValueAt, 4)} terms to the principal value (x = ${shorten(predicted.x, 5)}, b = ${shorten(predicted.b, 5)}; ${predicted.origin})`,
+      text: `x − b = ${shorten(predicted.leastTermAt, 4)} terms to the least one; ${predicted.principalValueAt === undefined ? '' : `x − b − 1/3 = ${shorten(predicted.principalValueAt, 4)} terms to the principal value `}(x = ${shorten(predicted.x, 5)}, b = ${shorten(predicted.b, 5)}; ${predicted.origin})`,
     });
   }
   if (report.errorOfStopping !== undefined) {
