@@ -56,6 +56,8 @@ export async function bundle(outdir) {
     // yaml's entry for Node is CommonJS and asks for `require`, which an ESM bundle has not; its other entry is plain ESM.
     alias: { yaml: join(root, 'node_modules/yaml/browser/index.js') },
     chunkNames: 'chunks/[name]-[hash]',
+    // .mjs says what it is: for .js, Node looks for a package.json and into the source, which costs a tenth of a command.
+    outExtension: { '.js': '.mjs' },
     // Blanks cost a few per cent of the start; names stay, so that a stack can be read.
     minifyWhitespace: true,
     legalComments: 'none',
@@ -64,7 +66,7 @@ export async function bundle(outdir) {
     logLevel: 'warning',
   });
   await writeFile(join(outdir, 'THIRD-PARTY-LICENSES.txt'), await notices(metafile));
-  await chmod(join(outdir, 'leastterm.js'), 0o755);
+  await chmod(join(outdir, 'leastterm.mjs'), 0o755);
   return metafile;
 }
 

@@ -1,38 +1,17 @@
 /** @module Plain words for the names that results use. */
+import { PRESCRIPTIONS } from '../prescriptions/index.js';
 
-const PRESCRIPTIONS = new Map([
-  ['fixed-order', 'Fixed order'],
-  ['least-term', 'Least term'],
-  ['terminant', 'Least term with terminant'],
-  ['pade', 'Padé in the coupling'],
-  ['borel-pade', 'Borel–Padé, principal value'],
-  ['borel-leroy-pade', 'Borel–Leroy–Padé, principal value'],
-  ['borel-pade-2', 'Borel–Padé of order two, principal value'],
-  ['singularity-model', 'Singularity model'],
-  ['hyperasymptotic', 'Hyperasymptotic, level 1'],
-  ['fac', 'Fastest apparent convergence'],
-  ['pms', 'Minimal sensitivity'],
-  ['blm', 'BLM scale'],
-  ['wynn-epsilon', 'Wynn ε'],
-  ['levin', 'Levin'],
-  ['weniger-delta', 'Weniger δ'],
-  ['euler', 'Euler'],
-  ['order-dependent-map', 'Order-dependent mapping'],
-  ['borel-dlog', 'Borel, logarithmic-derivative Padé'],
-  ['borel-partial-pade', 'Borel, partial Padé'],
-  ['borel-quadratic', 'Borel, quadratic approximants'],
-  ['borel-conformal', 'Borel, conformal mapping'],
-  ['borel-hypergeometric', 'Borel, hypergeometric'],
-]);
+const capital = (text: string): string => text.slice(0, 1).toUpperCase() + text.slice(1);
 
-/** The name of a prescription as a heading; an unknown one in its own letters. */
+/** The title of a prescription as a heading; an unknown one in its own letters. */
 export function prescriptionTitle(name: string): string {
-  return PRESCRIPTIONS.get(name) ?? name.slice(0, 1).toUpperCase() + name.slice(1).replaceAll('-', ' ');
+  const known = PRESCRIPTIONS.find((prescription) => prescription.name === name);
+  return capital(known?.title ?? name.replaceAll('-', ' '));
 }
 
 /** A statement as a sentence: a capital letter in front where a word begins it, a full stop behind. */
 export function sentence(text: string): string {
-  const begun = /^(a(?= [^=])|[a-z]{2,}(?=[\s,:-]))/.test(text) ? text.slice(0, 1).toUpperCase() + text.slice(1) : text;
+  const begun = /^(a(?= [^=])|[a-z]{2,}(?=[\s,:-]))/.test(text) ? capital(text) : text;
   return /[.!?:]$/.test(begun) || begun === '' ? begun : `${begun}.`;
 }
 

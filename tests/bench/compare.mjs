@@ -13,7 +13,7 @@ const ROOT = fileURLToPath(new URL('../..', import.meta.url));
 const ROUNDS = Number(process.argv[2] ?? 5);
 const outdir = join(ROOT, 'node_modules', '.cache', 'leastterm', 'bench-compare');
 await bundle(outdir);
-const program = join(outdir, 'leastterm.js');
+const program = join(outdir, 'leastterm.mjs');
 const here = (name) => join(ROOT, 'tests', 'bench', name);
 
 const s13 = JSON.parse(readFileSync(join(ROOT, 'tests', 'data', 'bench', 's13_mass_like.json'), 'utf8'));

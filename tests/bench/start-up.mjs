@@ -12,7 +12,7 @@ const ROUNDS = Number(process.argv[2] ?? 15);
 
 const outdir = join(ROOT, 'node_modules', '.cache', 'leastterm', 'bench');
 await bundle(outdir);
-const program = join(outdir, 'leastterm.js');
+const program = join(outdir, 'leastterm.mjs');
 const file = (name) => join(ROOT, 'tests', 'bench', name);
 
 const CASES = [

@@ -20,7 +20,7 @@ export async function builtProgram(): Promise<string> {
   if (typeof module !== 'object' || module === null || !isBundler(module)) throw new Error('no bundler');
   const outdir = join(ROOT, 'node_modules', '.cache', 'leastterm', `test-${process.pid}`);
   await module.bundle(outdir);
-  return join(outdir, 'leastterm.js');
+  return join(outdir, 'leastterm.mjs');
 }
 
 /** Removes what builtProgram left. */

@@ -49,7 +49,7 @@ export const sum: Command = {
   summary: 'one prescription, to any number of digits',
   about: [
     "Sums the series by one prescription: every member of the family with its value, truncation error, ambiguity and trust, or a refusal with its reason and remedy. With --quiet only the value of the family's own choice, for scripts.",
-    'Prescriptions: fixed-order, least-term, terminant, pade, borel-pade, borel-leroy-pade, borel-pade-2, singularity-model.',
+    'Prescriptions: fixed-order, least-term, terminant, hyperasymptotic, fac, pms, blm, pade, wynn-epsilon, levin, weniger-delta, euler, order-dependent-map, borel-pade, borel-leroy-pade, borel-dlog, borel-partial-pade, borel-quadratic, borel-conformal, borel-hypergeometric, borel-pade-2, singularity-model.',
   ],
   operands: [{ name: 'SERIES', help: 'a catalogue id, a series file, or - for standard input' }],
   options: [

@@ -96,6 +96,8 @@ function* pieces(word: string, columns: number): Generator<string> {
 
 /** Folds a text at blanks into lines of at most `columns`; a no-break blank holds. At least one line comes back. */
 export function fold(text: string, columns: number): string[] {
+  // Most texts fit as they are.
+  if (text.length <= columns && ASCII.test(text) && !text.includes('  ')) return [text.trim()];
   const lines: string[] = [];
   let line = '';
   const words = printable(text).trim().replace(HELD, HOLD).split(/ +/);
