@@ -3,34 +3,42 @@
  *
  * Method     x > 0: ψ(x) = ψ(X) − Σ_{j<n} 1/(x+j), ψ(X) = log X − 1/(2X) − Σ B_2k/(2k X^2k) (DLMF 5.11.2).
  *            x < 0: ψ(x) = ψ(1−x) − π cot πx (DLMF 5.5.4).
- * Bound      Stirling: stirling.ts. A radius r on the positive axis: 0 < ψ′(x) < 1/x + 1/x².
+ * Bound      Stirling: stirling.ts. A radius: 0 < ψ′(x) < 1/x + 1/x² on the positive axis; on the negative one
+ *            0 < ψ′(x) = π²/sin² πx − ψ′(1−x) < π²/sin² πx.
  */
 import { shift } from '../bits.js';
 import { pi } from '../ball/constants.js';
 import { log, sinCosPi } from '../ball/elementary.js';
 import { addMag, divMag, mag, magLower, magRadius, mulMag, widenMag } from '../ball/mag.js';
+import type { Mag } from '../ball/mag.js';
 import * as R from '../ball/real.js';
 import type { Ball } from '../ball/real.js';
 import { digammaDouble } from './gamma-double.js';
 import { stepsToStirling } from './log-gamma.js';
+import { refine } from './refine.js';
 import { bernoulliSum, harmonicSum, stirlingTerms } from './stirling.js';
-
-/** Rounds of more working bits next to the zeros of ψ. */
-const ROUNDS = 6;
 
 /** ψ(x); INDETERMINATE on a ball that holds 0, −1, −2, … */
 export function digamma(x: Ball, prec: number): Ball {
   if (x.rad === Infinity) return R.INDETERMINATE;
-  let work = prec + 10 + smallness(x);
-  let y = R.INDETERMINATE;
-  for (let round = 0; round < ROUNDS; round++) {
-    y = R.isPositive(x) ? positive(x, work) : reflected(x, work);
-    const lack = prec - R.accuracyBits(y);
-    // Bits beyond the argument's own radius gain nothing.
-    if (!(lack > 2) || work + R.radiusBits(x) > 40 || work > 4 * prec + 400) break;
-    work += Math.ceil(Math.min(lack, work)) + 8;
+  const slope = slopeBound(x);
+  if (slope === undefined) return R.INDETERMINATE;
+  const mid = R.exactMid(x);
+  const start = prec + 6 + smallness(mid);
+  const y = refine(prec, start, (bits) => (mid.mid > 0n ? positive(mid, bits) : reflected(mid, bits)), R.accuracyBits);
+  return R.round(widenMag(y, mulMag(slope, magRadius(x))), prec);
+}
+
+/** Upper bound of ψ′ over the ball; undefined when it may hold a pole. */
+function slopeBound(x: Ball): Mag | undefined {
+  if (R.isPositive(x)) {
+    const inverse = divMag(mag(1), magLower(x));
+    return addMag(inverse, mulMag(inverse, inverse));
   }
-  return R.round(y, prec);
+  const low = magLower(sinCosPi(x, 60).sin);
+  if (low.m === 0) return undefined;
+  const ratio = divMag(mag(Math.PI * (1 + 1e-12)), low);
+  return mulMag(ratio, ratio);
 }
 
 /** Bits by which ψ is small at x, from its double value. */
@@ -41,18 +49,16 @@ function smallness(x: Ball): number {
 
 function reflected(x: Ball, prec: number): Ball {
   const { sin, cos } = sinCosPi(x, prec);
-  if (R.containsZero(sin)) return R.INDETERMINATE;
-  const other = R.sub(R.ONE, x, x.rad === 0 ? 1e9 : prec + 80);
   const cot = R.div(R.mul(pi(prec), cos, prec), sin, prec);
-  return R.isPositive(other) ? R.sub(positive(other, prec), cot, prec) : R.INDETERMINATE;
+  return R.sub(positive(R.sub(R.ONE, x, 1e9), prec), cot, prec);
 }
 
+/** ψ at exact x > 0, to an absolute error near 2^-prec (relative where ψ is large). */
 function positive(x: Ball, prec: number): Ball {
   // Stirling's series and the sum of reciprocals each lose a few ulp a term, prec/4 terms at most.
   const wp = prec + Math.ceil(Math.log2(prec)) + 1;
-  const mid = R.exactMid(x);
-  const n = R.upperBits(mid) > 40 ? 0 : stepsToStirling(R.toNumber(mid), wp);
-  const big = R.add(mid, R.fromNumber(n), 1e9);
+  const n = R.upperBits(x) > 40 ? 0 : stepsToStirling(R.toNumber(x), wp);
+  const big = R.add(x, R.fromNumber(n), 1e9);
   const bits = R.upperBits(big);
   const log2x = Math.log2(R.toNumber(R.mul2exp(big, -bits))) + bits - 1e-9;
   const { terms, remainder } = stirlingTerms(log2x, wp, false);
@@ -64,13 +70,10 @@ function positive(x: Ball, prec: number): Ball {
     s = R.sub(s, R.mul(tail, y, wp + 8), wp + 8);
   }
   s = R.addError(s, 1, Math.ceil(remainder));
-  if (n > 0) {
-    const fixed = shift(mid.mid, mid.exp + wp + 8);
-    if (n > 1) s = R.sub(s, R.ball(harmonicSum(fixed, wp + 8, 1, n), -wp - 8, 4 * n + 8), wp + 8);
-    s = R.sub(s, R.div(R.ONE, mid, wp + 8), wp + 8);
+  if (n === 0) return s;
+  if (n > 1) {
+    const fixed = shift(x.mid, x.exp + wp + 8);
+    s = R.sub(s, R.ball(harmonicSum(fixed, wp + 8, 1, n), -wp - 8, 4 * n + 8), wp + 8);
   }
-  if (x.rad === 0) return s;
-  const low = magLower(x);
-  const inv = divMag(mag(1), low);
-  return widenMag(s, mulMag(addMag(inv, mulMag(inv, inv)), magRadius(x)));
+  return R.sub(s, R.div(R.ONE, x, wp + 8), wp + 8);
 }
