@@ -4,7 +4,7 @@ import { leastterm, words } from './harness.js';
 const LIST = '1\n1.6398\n6.3710\n49.0757\n283(142)\n';
 const YAML = `format: 1
 title: Five numbers
-coupling: { name: x }
+variable: x
 coefficients: [1, 1, 2, 6, 24]
 `;
 
@@ -29,7 +29,7 @@ describe('standard input', () => {
   });
 
   test('that is no series ends with the places of all mistakes', async () => {
-    const wrong = YAML.replace('coupling', 'cuopling').replace('[1, 1, 2', '[1, one, 2');
+    const wrong = YAML.replace('variable', 'varaible').replace('[1, 1, 2', '[1, one, 2');
     const { status, stdout, stderr } = await leastterm(words('assess - --at 0.1'), { stdin: wrong });
     expect([status, stdout]).toEqual([2, '']);
     const lines = stderr.trimEnd().split('\n');

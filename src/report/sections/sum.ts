@@ -13,7 +13,11 @@ function facts(entry: ValueEntry): Fact[] {
     ];
   }
   const list: Fact[] = [
-    { label: 'value', text: entry.value ?? '', tone: entry.central === true ? 'mark' : 'plain' },
+    {
+      label: entry.imaginary === undefined ? 'value' : 'principal value',
+      text: entry.value ?? '',
+      tone: entry.central === true ? 'mark' : 'plain',
+    },
     { label: 'lateral sums', text: entry.imaginary === undefined ? '' : `value ± i times ${entry.imaginary}` },
     { label: 'truncation', text: plusMinus(entry.truncationError) },
     { label: 'ambiguity', text: entry.ambiguity === undefined ? '' : `${plusMinus(entry.ambiguity)}, |Im|/π` },
@@ -27,7 +31,7 @@ function facts(entry: ValueEntry): Fact[] {
 }
 
 /** Wide enough for the longest label, so that blocks stand under each other. */
-const LABELS = 12;
+const LABELS = 15;
 
 export function sumSection(page: Page, values: readonly ValueEntry[]): void {
   for (const entry of values) {

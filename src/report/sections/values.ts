@@ -49,10 +49,16 @@ function lateralNotes(entries: readonly ValueEntry[]): TableNote[] {
   if (lateral.length === 0) return [];
   const [only] = lateral;
   if (lateral.length === 1 && only !== undefined) {
-    return [{ note: `lateral sums: value ± i times ${shorten(only.imaginary ?? '', 4)}`, indent: 4, tone: 'faint' }];
+    return [
+      {
+        note: `principal value; lateral sums: value ± i times ${shorten(only.imaginary ?? '', 4)}`,
+        indent: 4,
+        tone: 'faint',
+      },
+    ];
   }
   const list = lateral.map((entry) => `${entry.variant} ${shorten(entry.imaginary ?? '', 4)}`).join(', ');
-  return [{ note: `lateral sums: value ± i times ${list}`, indent: 4, tone: 'faint' }];
+  return [{ note: `principal value; lateral sums: value ± i times ${list}`, indent: 4, tone: 'faint' }];
 }
 
 /** How the family's own best member did one step back. */
