@@ -98,12 +98,13 @@ export function remap(b: readonly Ball[], cuts: Cuts, softening: Softening, prec
   return { softening, coefficients: factors.reduce((acc, f) => multiplySeries(field, acc, f, N), inW) };
 }
 
-/** Values at t of several re-expansions with the same cuts: each with all its coefficients and with one fewer. */
+/** Values at t of several re-expansions with the same cuts: each with all its coefficients and with `fewer` less. */
 export function remappedValues(
   list: readonly Remapped[],
   cuts: Cuts,
   t: Complex,
   prec: number,
+  fewer = 1,
 ): readonly { readonly full: Complex; readonly shorter: Complex }[] {
   const point = mapPoint(t, inverses(cuts, prec), prec);
   const powers = powersOf(point.w, Math.max(...list.map((r) => r.coefficients.length)), prec);
@@ -111,8 +112,9 @@ export function remappedValues(
   return list.map(({ softening, coefficients }) => {
     const factor = prefactors.get(softening) ?? C.ONE;
     const terms = coefficients.map((c, n) => C.mulReal(powers[n]!, c, prec));
-    const shorter = terms.slice(0, -1).reduce((sum, term) => C.add(sum, term, prec), C.ZERO);
-    const full = C.add(shorter, terms[terms.length - 1] ?? C.ZERO, prec);
+    const add = (sum: Complex, term: Complex): Complex => C.add(sum, term, prec);
+    const shorter = terms.slice(0, -fewer).reduce(add, C.ZERO);
+    const full = terms.slice(-fewer).reduce(add, shorter);
     return { full: C.mul(full, factor, prec), shorter: C.mul(shorter, factor, prec) };
   });
 }

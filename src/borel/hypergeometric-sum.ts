@@ -28,8 +28,8 @@ const SPARE = 48;
 const SHIFT_SPARE = 24;
 /** Most terms of a residue series. */
 const MOST_TERMS = 20_000;
-/** Beyond this |y| an imaginary part e^{−|y|} is beneath notice and the divergent series is used. */
-export const LARGE = 700;
+/** Beyond this |y| the divergent series itself has the bits wanted, and an imaginary part e^{−|y|} is beneath them. */
+const large = (prec: number): number => Math.max(60, prec * Math.LN2 + 40);
 
 /** Does the difference of two parameters certainly-possibly equal an integer? */
 function mayDifferByInteger(a: Complex, b: Complex): boolean {
@@ -52,14 +52,14 @@ export function inverseCoupling(K: Ball, x: Ball): number {
 /** Precision of the parameters that a sum with `prec` bits needs: cancellation e^{2|y|}, coinciding parameters. */
 export function parameterBits(h: HypergeometricTransform, x: Ball, prec: number): number {
   const repeats = Math.max(0, ...ranks([C.ONE, ...h.upper]));
-  const y = Math.min(LARGE, inverseCoupling(h.K, x));
+  const y = Math.min(large(prec), inverseCoupling(h.K, x));
   return Math.ceil(prec + SPARE + 2.9 * y + repeats * (prec + SHIFT_SPARE) * 2);
 }
 
 /** Ψ(x); `h` must be known to parameterBits. Undefined when the parameters leave it undefined. */
 export function hypergeometricSum(h: HypergeometricTransform, x: Ball, prec: number): HypergeometricSum | undefined {
   const work = parameterBits(h, x, prec);
-  if (inverseCoupling(h.K, x) > LARGE) return divergentSeries(h, x, prec);
+  if (inverseCoupling(h.K, x) > large(prec)) return divergentSeries(h, x, prec);
   const all = [C.ONE, ...h.upper];
   const rank = ranks(all);
   if (rank.every((r) => r === 0)) {

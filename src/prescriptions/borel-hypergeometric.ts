@@ -21,6 +21,8 @@ const MOST = 12;
 const FAR = 2;
 /** Bits of the parameters that only decide whether the fit can be believed. */
 const ROUGH_BITS = 64;
+/** Parameters from 2^this on are refused: singular behaviour of one cut has exponents of order one. Heuristic. */
+const LARGEST_PARAMETER_BITS = 6;
 /** Digits of the evaluation that only serves the error. */
 const ERROR_DIGITS = 12;
 
@@ -62,6 +64,8 @@ function fitted(c: readonly Exact[]): Fitted | string {
     return 'a lower parameter is 0, −1, −2, …: the function is not defined';
   if (rough.upper.some(mayBeNonPositiveInteger))
     return 'an upper parameter is 0, −1, −2, …: the fitted series terminates';
+  if ([...rough.upper, ...rough.lower].some((z) => C.upperBits(z) > LARGEST_PARAMETER_BITS))
+    return 'parameters of absurd size: the ratios do not settle to those of one cut';
   const direction = signExact(used[0]!) * signExact(used[1]!);
   if (R.containsZero(rough.K) || (R.isPositive(rough.K) ? 1 : -1) !== direction)
     return 'the fitted ratios change sign at larger n: more than one singularity competes';
@@ -121,6 +125,14 @@ export const borelHypergeometric: Prescription = {
     const variant = `${N} coefficients`;
     const no = growthObjection(growth, variant) ?? inputObjection(e, growth, variant, 3);
     if (no !== undefined) return [no];
+    if (growth.verdict === 'subfactorial')
+      return [
+        refusal(
+          variant,
+          'growth slower than n!: the Borel transform has no singularity at finite distance',
+          'use Borel–Padé',
+        ),
+      ];
     const best = fitted(e.coefficients);
     if (typeof best === 'string')
       return [refusal(variant, best, 'use Borel–Padé or the conformal map, which bear several singularities')];

@@ -6,7 +6,7 @@
  * Truncation error: the step from one coefficient fewer plus half the spread of the members.
  * References: I. Caprini, J. Fischer, arXiv:hep-ph/9811367; arXiv:1106.5336 (abstracts seen); S. Ciulli, J. Fischer (1961).
  */
-import { C, R, signExact, toNumberExact } from '../numerics/index.js';
+import { C, isZeroExact, R, signExact, toNumberExact } from '../numerics/index.js';
 import type { Ball } from '../numerics/index.js';
 import { borelTransform, lateralSums, RAYS, remap, remappedValues, STRAIGHT } from '../borel/index.js';
 import type { Contour, CutEnd, Cuts, LaplaceSum, Softening } from '../borel/index.js';
@@ -84,13 +84,18 @@ function evaluate(e: Expansion, cuts: Cuts, softenings: readonly Softening[], di
   const prec = Math.ceil(digits * 3.33) + 64 + BITS_LOST * N;
   const b = borelTransform(e.coefficients).map((c) => c.ball(prec));
   const list = softenings.map((softening) => remap(b, cuts, softening, prec));
+  // Vanishing last coefficients are no step: the one before them is left out as well.
+  const fewer = e.coefficients.length - e.coefficients.findLastIndex((c) => !isZeroExact(c));
   const contour: Contour =
     cuts.right === undefined
       ? STRAIGHT
       : { ray: RAYS[0]!, first: toNumberExact(cuts.right.distance) / toNumberExact(e.x) };
   const found = lateralSums(
     (s, p) =>
-      remappedValues(list, cuts, C.mulReal(s, e.x.ball(p), p), p).flatMap(({ full, shorter }) => [full, shorter]),
+      remappedValues(list, cuts, C.mulReal(s, e.x.ball(p), p), p, fewer).flatMap(({ full, shorter }) => [
+        full,
+        shorter,
+      ]),
     contour,
     digits,
   );
@@ -149,7 +154,7 @@ export const conformalBorel: Prescription = {
     const e = cleanPart(full, growth, MOST);
     const cuts = cutsOf(e);
     const variant = 'mapped plane';
-    const no = growthObjection(growth, variant) ?? inputObjection(e, growth, variant, 2);
+    const no = growthObjection(growth, variant) ?? inputObjection(e, growth, variant, 3);
     if (no !== undefined) return [no];
     if (cuts.left === undefined && cuts.right === undefined)
       return [

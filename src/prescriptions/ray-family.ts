@@ -32,6 +32,9 @@ export interface Candidate {
 
 export type Attempt = Candidate | { readonly label: string; readonly reason: string };
 
+/** Candidates of an expansion, known to `bits` bits, best first. */
+export type Build = (e: Expansion, bits: number) => readonly Attempt[];
+
 /** Digits of the evaluations that only serve an error estimate. */
 const ERROR_DIGITS = 12;
 const LIFTED = 'a complex pair near the positive axis is lifted over';
@@ -80,12 +83,7 @@ function sumOf(e: Expansion, growth: Growth, c: Candidate, digits: number): Summ
  * Outcomes of a family. `build` makes the candidates of an expansion, best first; it is called again with one coefficient
  * fewer for the error.
  */
-export function rayFamily(
-  e: Expansion,
-  growth: Growth,
-  request: Request,
-  build: (e: Expansion, bits: number) => readonly Attempt[],
-): readonly Outcome[] {
+export function rayFamily(e: Expansion, growth: Growth, request: Request, build: Build): readonly Outcome[] {
   const attempts = build(e, familyBits(request.digits));
   const wanted = request.only === undefined ? attempts : attempts.filter((a) => a.label === request.only);
   if (wanted.length === 0)
@@ -95,8 +93,9 @@ export function rayFamily(
     result: standing(e, growth, a, request.digits, request.only !== undefined),
   }));
   const values = found.map(({ result }) => (typeof result === 'string' ? undefined : result.pv));
-  const before = request.only === undefined ? valueBefore(e, growth, build) : undefined;
-  const errors = combineErrors(e, values, before);
+  const centre = values.find((v) => v !== undefined);
+  const earlier = request.only === undefined && centre !== undefined ? before(e, growth, build, centre) : undefined;
+  const errors = combineErrors(e, values, earlier?.value);
   const prec = Math.max(128, request.digits * 4 + 64);
   return found.map(({ attempt, result }, i): Outcome => {
     if (typeof result === 'string' || 'reason' in attempt)
@@ -110,7 +109,7 @@ export function rayFamily(
       imaginary: scaled(e, result.im, prec),
       ...error,
       termsUsed: e.coefficients.length,
-      trust: trustOf(value, error.truncation),
+      trust: earlier?.confirmed === false ? 'indicative' : trustOf(value, error.truncation),
       digitsTrust: 'converged',
       notes: result.lifted > 0 ? [...attempt.notes, LIFTED] : attempt.notes,
     };
@@ -123,14 +122,31 @@ function standing(e: Expansion, growth: Growth, a: Attempt, digits: number, trus
   return (trusting ? undefined : a.suspicion) ?? sumOf(e, growth, a, digits);
 }
 
-/** Principal value of the first standing candidate with one coefficient fewer. */
-function valueBefore(
-  e: Expansion,
-  growth: Growth,
-  build: (e: Expansion, bits: number) => readonly Attempt[],
-): Ball | undefined {
-  if (e.coefficients.length < 2) return undefined;
-  const shorter: Expansion = { ...e, coefficients: e.coefficients.slice(0, -1) };
+/** Relative steps below this are looked at twice: a vanishing coefficient makes two orders agree by accident. */
+const SUSPICIOUSLY_SMALL = 1e-12;
+
+interface Before {
+  readonly value: Ball;
+  /** The order before that agrees as well, or there was no need to ask. */
+  readonly confirmed: boolean;
+}
+
+/** Principal value with one coefficient fewer, or with two where that differs more. */
+function before(e: Expansion, growth: Growth, build: Build, value: Ball): Before | undefined {
+  const one = valueOf(e, growth, build, 1);
+  if (one === undefined || size(value, one) > SUSPICIOUSLY_SMALL * size(value, R.ZERO))
+    return one && { value: one, confirmed: true };
+  const two = valueOf(e, growth, build, 2);
+  if (two === undefined) return { value: one, confirmed: false };
+  return { value: size(value, two) > size(value, one) ? two : one, confirmed: true };
+}
+
+const size = (a: Ball, b: Ball): number => Math.abs(R.toNumber(R.sub(a, b, 128)));
+
+/** Principal value of the first standing candidate with `fewer` coefficients less. */
+function valueOf(e: Expansion, growth: Growth, build: Build, fewer: number): Ball | undefined {
+  if (e.coefficients.length <= fewer) return undefined;
+  const shorter: Expansion = { ...e, coefficients: e.coefficients.slice(0, -fewer) };
   for (const a of build(shorter, familyBits(ERROR_DIGITS))) {
     const result = standing(shorter, growth, a, ERROR_DIGITS);
     if (typeof result !== 'string') return result.pv;
