@@ -102,10 +102,9 @@ function roundBoth(a: Ball, n: number): Digits | undefined {
   }
   // First digit's exponent from the upper end; a lower end that starts one place lower is the same string or none.
   let d = Math.floor((bitLength(high) + e) / LOG2_10) + 1;
-  let top = scaled(high, e, n - 1 - d);
-  const full = 10n ** BigInt(n - 1);
-  while (top < full) top = scaled(high, e, n - 1 - --d);
-  if (scaled(low, e, n - 1 - d) !== top) return undefined;
+  while (scaled(high, e, n - 1 - d, false) < 10n ** BigInt(n - 1)) d--;
+  const top = scaled(high, e, n - 1 - d, true);
+  if (scaled(low, e, n - 1 - d, true) !== top) return undefined;
   let text = top.toString();
   if (text.length > n) {
     text = text.slice(0, n); // 9.99 rounded up to 10.0
@@ -114,15 +113,15 @@ function roundBoth(a: Ball, n: number): Digits | undefined {
   return { negative, digits: text, exponent: d, exact: a.rad === 0 && isExact(mid, a.exp, text, d) };
 }
 
-/** m·2^e·10^p rounded to the nearest integer, ties up; m >= 0. */
-function scaled(m: bigint, e: number, p: number): bigint {
+/** m·2^e·10^p as an integer, to the nearest with ties up, or the floor; m >= 0. */
+function scaled(m: bigint, e: number, p: number, nearest: boolean): bigint {
   let num = m;
   let den = 1n;
   if (p >= 0) num *= 10n ** BigInt(p);
   else den = 10n ** BigInt(-p);
   if (e >= 0) num <<= BigInt(e);
   else den <<= BigInt(-e);
-  return (2n * num + den) / (2n * den);
+  return nearest ? (2n * num + den) / (2n * den) : num / den;
 }
 
 /** Is m·2^e = 0.d₁d₂…·10^(d+1) for the digit string? */

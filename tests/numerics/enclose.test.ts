@@ -27,6 +27,9 @@ describe('toDecimal', () => {
         // an exact number printed in full has no error at all; otherwise half a unit
         expect(error.cmp(unit)).toBeLessThanOrEqual(0);
         expect(n).toBeLessThanOrEqual(digits + 3);
+        // as many digits as the number says it has: the unit is 10^-n of the value, or an exact number ended sooner
+        const lead = value.abs().div(unit);
+        if (ball.rad > 0) expect(lead.cmp(Rational.of(10).pow(n - 1))).toBeGreaterThanOrEqual(0);
       }),
       cases(1000),
     );
@@ -59,6 +62,10 @@ describe('toDecimal', () => {
     ['exact and short', R.fromNumber(120000), 15, '120000'],
     ['1e-400', R.fromRational(Rational.parse('-1.25e-400')!, 200), 6, '-1.25000e-400'],
     ['zero', R.ZERO, 5, '0'],
+    ['below a power of ten, no carry', R.fromRational(Rational.parse('99.92')!, 200), 3, '99.9'],
+    ['below a power of ten, carry', R.fromRational(Rational.parse('99.96')!, 200), 3, '100'],
+    ['one digit', R.fromRational(Rational.parse('0.6')!, 200), 1, '0.6'],
+    ['one digit, carry', R.fromRational(Rational.parse('0.96')!, 200), 1, '1'],
   ] as const)('%s', (_, ball, digits, wanted) => {
     expect(text(ball, digits)).toBe(wanted);
   });

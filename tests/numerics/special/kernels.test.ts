@@ -154,6 +154,27 @@ describe('F_b', () => {
     );
   });
 
+  it('exponents of some thousands', () => {
+    for (const b of ['1500.3', '5000', '4999.9999999', '-3000.5', '-2000']) {
+      const e = Rational.parse(b)!;
+      const below = e.sub(Rational.ONE);
+      for (const x of [0.5, 40, 4900]) {
+        const q = R.fromNumber(x);
+        const f = branchSame(e, q, 100);
+        expect(R.accuracyBits(f.pv), `F ${b} ${x}`).toBeGreaterThan(98);
+        mustOverlap(R.mul(ball(e, 100), f.pv, 100), R.sub(R.mul(q, branchSame(below, q, 100).pv, 100), R.ONE, 100), {
+          b,
+          x,
+        });
+        const w: Complex = { re: R.fromNumber(x * 0.6), im: R.fromNumber(x * 0.8) };
+        const g = branchCut(e, w, 100);
+        expect(C.accuracyBits(g), `G ${b} ${x}`).toBeGreaterThan(97);
+        const right = C.sub(C.ONE, C.mul(w, branchCut(below, w, 100), 100), 100);
+        overlap(C.mulReal(g, ball(e, 100), 100), right, { b, x });
+      }
+    }
+  });
+
   it('refused arguments', () => {
     expect(branchSame(Rational.ZERO, R.ZERO, 53).pv).toBe(R.INDETERMINATE);
     expect(branchSame(Rational.ZERO, R.fromNumber(-1), 53).im).toBe(R.INDETERMINATE);
