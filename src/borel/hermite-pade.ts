@@ -31,11 +31,16 @@ export interface QuadraticApproximant {
   readonly used: number;
 }
 
-/** Most coefficients for which exact elimination is tried first. Heuristic: cost. */
+/** Most coefficients for which exact elimination is tried. Heuristic: cost. */
 const EXACT_UP_TO = 12;
+/** Degrees of the small relations that a longer rational series is tested for. */
+const SMALL: readonly Degrees[] = [
+  [2, 2, 2],
+  [3, 3, 3],
+];
 /** Bits lost per coefficient at the first guess, and how often the guess is doubled. Heuristics. */
 const LOSS = 10;
-const TRIES = 4;
+const TRIES = 3;
 /** Sizes of Q + √D and Q − √D closer than these many bits are a tie: both branches count as infinite. Heuristic. */
 const TIE = 20;
 /** Spare bits for the discriminant and its zeros. */
@@ -54,12 +59,16 @@ export function quadraticApproximant(
   const rows = p + q + r + 2;
   const used = f.slice(0, rows);
   const rationals = used.map((c) => c.rational).filter((x): x is Rational => x !== undefined);
-  const isRational = rationals.length === rows;
-  const exactly = (): QuadraticApproximant | string => {
-    const { vector } = nullVectorExact(columns(rationalField, rationals, degrees, rows));
-    return assemble(split(vector, degrees), rationals[0]!, rows, prec);
-  };
-  if (isRational && rows <= EXACT_UP_TO) return exactly();
+  if (rationals.length === rows) {
+    if (rows <= EXACT_UP_TO) return exactly(rationals, degrees, rows, prec);
+    // A relation of low degree makes the null space of higher ones large: it is looked for first.
+    for (const small of SMALL) {
+      const found = nullVectorExact(
+        columns(rationalField, rationals, small, small[0] + small[1] + small[2] + 2),
+      ).vector;
+      if (annihilates(found, small, rationals)) return assemble(split(found, small), rationals[0]!, rows, prec);
+    }
+  }
   let work = prec + LOSS * rows;
   for (let attempt = 0; attempt < TRIES; attempt++, work *= 2) {
     const balls = used.map((c) => c.ball(work));
@@ -68,7 +77,18 @@ export function quadraticApproximant(
       continue;
     return assembleBalls(split(vector, degrees), balls[0]!, rows, work);
   }
-  return isRational ? exactly() : 'the null vector cannot be fixed at this precision';
+  return 'the null vector cannot be fixed: a relation of lower degree, or too little precision';
+}
+
+function exactly(f: readonly Rational[], degrees: Degrees, rows: number, prec: number): QuadraticApproximant | string {
+  const { vector } = nullVectorExact(columns(rationalField, f, degrees, rows));
+  return assemble(split(vector, degrees), f[0]!, rows, prec);
+}
+
+/** Does P + Q f + R f² vanish to the order of all coefficients given? */
+function annihilates(vector: readonly Rational[], degrees: Degrees, f: readonly Rational[]): boolean {
+  const all = columns(rationalField, f, degrees, f.length);
+  return f.every((_, n) => all.reduce((s, column, k) => s.add(column[n]!.mul(vector[k]!)), Rational.ZERO).isZero());
 }
 
 function split<T>(vector: readonly T[], [p, q]: Degrees): [T[], T[], T[]] {
