@@ -8,5 +8,6 @@ export { painter, unpainted } from './layout/paint.js';
 export type { TerminalOptions } from './terminal.js';
 export { truncationLines, truncationObject, truncationText } from './truncation.js';
 export { assessmentText, bareValues, growthText, planeLines, planeText, sumText } from './terminal.js';
-export { backtestCsv, backtestLines, backtestSummaryLines, backtestSummaryText, backtestText } from './backtest.js';
+export { backtestCsv, backtestLines, backtestText } from './backtest.js';
+export { backtestSummaryLines, backtestSummaryText } from './backtest-summary.js';
 export { compareCsv, compareLines, compareText } from './compare.js';

@@ -88,14 +88,14 @@ const SPREAD_DIGITS = 8;
 function spreadOf(values: readonly Ball[]): Spread | undefined {
   const [first] = values;
   if (first === undefined) return undefined;
-  const compare = (a: Ball, b: Ball): number => R.compare(a, b, 200);
-  const low = values.reduce((a, b) => (compare(b, a) < 0 ? b : a), first);
-  const high = values.reduce((a, b) => (compare(b, a) > 0 ? b : a), first);
+  const order = (a: Ball, b: Ball): number => R.compare(a, b, 200);
+  const low = values.reduce((a, b) => (order(b, a) < 0 ? b : a), first);
+  const high = values.reduce((a, b) => (order(b, a) > 0 ? b : a), first);
   return {
     count: values.length,
     low: ballText(low, SPREAD_DIGITS),
     high: ballText(high, SPREAD_DIGITS),
-    width: compare(low, high) === 0 ? '0' : ballText(R.sub(high, low, 200), 3),
+    width: order(low, high) === 0 ? '0' : ballText(R.sub(high, low, 200), 3),
   };
 }
 
@@ -134,9 +134,9 @@ function pointRows(series: Series, summed: Summed, point: CouplingSummary, optio
     const { notes: _notes, central: _central, ...entry } = valueEntry(of, options.digits);
     if (sum === undefined) return { entry: { ...place, family, ...entry, cautions: [] }, key: Infinity };
     const record = list.get(name);
-    const own_ = valueCautions(expanded.expansion, growth, prescription, sum, record);
+    const flags = valueCautions(expanded.expansion, growth, prescription, sum, record);
     return {
-      entry: { ...place, family, ...entry, ...(record === undefined ? {} : { record }), cautions: own_ },
+      entry: { ...place, family, ...entry, ...(record === undefined ? {} : { record }), cautions: flags },
       value: sum.value,
       key: keyOf(sum, record, options.sort),
     };
