@@ -86,10 +86,10 @@ function readAsWritten(name: string, call: Call): Promise<Series> {
 async function run(call: Call): Promise<number> {
   const [name = ''] = call.operands;
   const { given } = call;
+  const massChange = await mass(given);
   if ([given.scale, given.coupling, given.flavours, given.mass].every((value) => value === undefined)) {
     throw fault('nothing to rewrite; wanted at least one of --scale, --coupling, --flavours, --mass');
   }
-  const massChange = await mass(given);
   const coupling = given.coupling === undefined ? undefined : await scheme(given.coupling);
   const thresholds = await thresholdsOf(given.threshold, rewrite.name);
   const series = await readAsWritten(name, call);
