@@ -89,9 +89,9 @@ describe('grids', () => {
 
 describe('the rule of the verdict', () => {
   const by = (rule: string) => {
-    const verdictRule_ = verdictRule(rule);
-    if (verdictRule_ === undefined) expect.fail(rule);
-    return assess(euler, number('0.1'), { ...options, verdictRule: verdictRule_ }).verdict;
+    const named = verdictRule(rule);
+    if (named === undefined) expect.fail(rule);
+    return assess(euler, number('0.1'), { ...options, verdictRule: named }).verdict;
   };
 
   test('names itself in the output', async () => {
