@@ -1,12 +1,12 @@
 /** @module Series as operands: one coupling, one divisor, every order from the constant on. */
-import { Rational, isZeroExact } from '../../numerics/index.js';
+import { isZeroExact } from '../../numerics/index.js';
 import { refuse } from '../../qcd/index.js';
 import type { CouplingDivisor, Refusal } from '../../qcd/index.js';
 import type { Series } from '../../series/index.js';
 import { FormalReader } from '../derive/read-formal.js';
 import type { Sources } from '../derive/sources.js';
-import { derive, trackedExact, trackedRational } from '../derive/tracked.js';
-import { unitPower } from '../rewriting/beta.js';
+import { derive, trackedExact } from '../derive/tracked.js';
+import { divisorQuotient } from '../rewriting/beta.js';
 import { trackedCoefficients } from '../rewriting/state.js';
 import type { PowerSeries } from './power-series.js';
 
@@ -37,16 +37,15 @@ export async function operandSeries(
   const list = await trackedCoefficients(series, from, sources);
   const constant = trackedExact(additive, await reader.read(additive));
   const front = trackedExact(factor, await reader.read(factor));
-  const steps = [unitPower(divisor, 1), unitPower(series.coupling.divisor, 1)];
-  const plain = series.coupling.plain || divisor === series.coupling.divisor;
+  const own = series.coupling.plain ? divisor : series.coupling.divisor;
+  const steps = [divisorQuotient(divisor, own), divisorQuotient(own, divisor)];
   const power = withConstant ? 0 : firstPower;
   const length = firstPower - power + list.length;
   const coefficients = derive(
-    [constant, front, ...(plain ? [trackedRational(Rational.ONE), trackedRational(Rational.ONE)] : steps), ...list],
-    (ring, [c, f, wanted, own, ...x]) => {
-      const step = ring.div(wanted ?? ring.one, own ?? ring.one);
-      // The quotient the other way round is asked for only when it is used: it may have no closed form.
-      const each = firstPower < 0 ? ring.div(own ?? ring.one, wanted ?? ring.one) : step;
+    [constant, front, ...steps, ...list],
+    (ring, [c, f, up, down, ...x]) => {
+      const step = up ?? ring.one;
+      const each = firstPower < 0 ? (down ?? ring.one) : step;
       let weight = f ?? ring.one;
       for (let k = 0; k < Math.abs(firstPower); k++) weight = ring.mul(weight, each);
       const out = Array.from({ length }, () => ring.zero);

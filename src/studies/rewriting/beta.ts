@@ -1,5 +1,5 @@
 /** @module The beta function of the coupling of a series, as tracked numbers. */
-import { Rational } from '../../numerics/index.js';
+import { Rational, divExact, exact } from '../../numerics/index.js';
 import {
   BETA,
   FORMAL_ONE,
@@ -24,6 +24,20 @@ export function unitPower(divisor: CouplingDivisor, k: number): Tracked {
     length: 1,
   });
   return trackedExact(value?.value ?? one.value, formal);
+}
+
+/** How many π a divisor holds, and the number beside it. */
+const PARTS = { '1': [0, 1], pi: [1, 1], '2*pi': [1, 2], '4*pi': [1, 4] } as const;
+
+/** over/under for two divisors of the coupling: the factor of x^n when a series in α/under is written in α/over. */
+export function divisorQuotient(over: CouplingDivisor, under: CouplingDivisor): Tracked {
+  const [[p, m], [q, n]] = [PARTS[over], PARTS[under]];
+  const name = p === q ? '' : p > q ? 'pi' : 'pi^-1';
+  const formal: Formal = { terms: new Map([[name, Rational.of(m, n)]]) };
+  // Equal divisors, or equal powers of π, leave a rational number.
+  return p === q
+    ? trackedExact(exact(Rational.of(m, n)))
+    : trackedExact(divExact(overFourPi(over), overFourPi(under)), formal);
 }
 
 function powerOf<T>(one: T, k: number, times: (x: T) => T): T {

@@ -22,7 +22,7 @@ import { derive, trackedExact, trackedRational } from '../derive/tracked.js';
 import type { Tracked } from '../derive/tracked.js';
 import { couplingScheme, schemeText } from '../scheme.js';
 import type { CouplingScheme } from '../scheme.js';
-import { trackedBeta, trackedCBeta, unitPower } from './beta.js';
+import { divisorQuotient, trackedBeta, trackedCBeta, unitPower } from './beta.js';
 import { trackedCoefficients } from './state.js';
 import type { State } from './state.js';
 
@@ -114,12 +114,11 @@ async function seriesRelation(relation: Series, place: Place): Promise<Tracked[]
   const bad = unfit(relation, place);
   if (bad !== undefined) return bad;
   const list = await trackedCoefficients(relation, relation.id, place.sources);
-  const [there, here] = [unitPower(relation.coupling.divisor, 1), unitPower(place.divisor, 1)];
+  // x_file = x (divisor/divisor_file).
   return derive(
-    [there, here, ...list],
-    (ring, [u, v, ...c]) => {
-      // x_file = x (divisor/divisor_file).
-      const step = ring.div(v ?? ring.one, u ?? ring.one);
+    [divisorQuotient(place.divisor, relation.coupling.divisor), ...list],
+    (ring, [quotient, ...c]) => {
+      const step = quotient ?? ring.one;
       let power = ring.one;
       return c.map((x, n) => {
         if (n > 0) power = ring.mul(power, step);
