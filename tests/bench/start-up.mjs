@@ -3,6 +3,7 @@
  * many interleaved rounds, so that a busy machine slows both alike. `npm run bench`; exit code 1 when a bar is missed.
  */
 import { spawnSync } from 'node:child_process';
+import { rmSync } from 'node:fs';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { bundle } from '../../esbuild.config.mjs';
@@ -10,7 +11,7 @@ import { bundle } from '../../esbuild.config.mjs';
 const ROOT = fileURLToPath(new URL('../..', import.meta.url));
 const ROUNDS = Number(process.argv[2] ?? 15);
 
-const outdir = join(ROOT, 'node_modules', '.cache', 'leastterm', 'bench');
+const outdir = join(ROOT, 'node_modules', '.cache', 'leastterm', `bench-${process.pid}`);
 await bundle(outdir);
 const program = join(outdir, 'leastterm.mjs');
 const file = (name) => join(ROOT, 'tests', 'bench', name);
@@ -54,3 +55,5 @@ CASES.forEach(({ name, bar }, i) => {
   if (missed) process.exitCode = 1;
   console.log(`| ${name} | ${least[i].toFixed(0)} | ${ratio.toFixed(2)} | ${bar ?? ''}${missed ? ' missed' : ''} |`);
 });
+
+rmSync(outdir, { recursive: true, force: true });
