@@ -11,9 +11,9 @@ import { Rational } from '../../numerics/index.js';
 import type { Ring } from './ring.js';
 import { addSeries, derivative, mulSeries, scaleSeries, truncate } from './truncated.js';
 
-/** β(a) as a series: index = power. */
+/** β(a) as a series: index = power. Not padded: zeros beyond the known loops would only be multiplied. */
 function betaSeries<T>(ring: Ring<T>, b: readonly T[], length: number): T[] {
-  return truncate(ring, [ring.zero, ring.zero, ...b.map((x) => ring.sub(ring.zero, x))], length);
+  return [ring.zero, ring.zero, ...b.map((x) => ring.sub(ring.zero, x))].slice(0, length);
 }
 
 /** Σ_k L^k f_k/k! for f_k = next(f_{k−1}), which must raise the lowest power at every step. */

@@ -40,12 +40,13 @@ export function derivative<T>(ring: Ring<T>, a: readonly T[]): T[] {
 
 /** outer(inner(x)); inner must start at x^1. */
 export function compose<T>(ring: Ring<T>, outer: readonly T[], inner: readonly T[], length: number): T[] {
-  let out = truncate(ring, [], length);
+  let out: T[] = [];
   for (let k = Math.min(outer.length, length) - 1; k >= 0; k--) {
-    out = mulSeries(ring, out, inner, length);
+    // k factors of the inner series are still to come, each at least x: higher terms would be cut.
+    out = mulSeries(ring, out, inner, length - k);
     out[0] = ring.add(at(ring, out, 0), at(ring, outer, k));
   }
-  return out;
+  return truncate(ring, out, length);
 }
 
 /** 1/a with a_0 invertible: b_n = −(1/a_0) Σ_{k≥1} a_k b_{n−k}. */
