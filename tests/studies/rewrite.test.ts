@@ -232,6 +232,17 @@ describe('what the new file says', () => {
 });
 
 describe('refused, with the remedy', () => {
+  test('the scale of a series in the running mass, unless the mass goes first', async () => {
+    const start = await seriesOf('[1, 2]', 'first power: 1\nadditive: 1');
+    const running = { ...start, scheme: 'MSbar coupling; running mass m(mu)' };
+    const refused = await rewriteRefused(running, { scale: q('2') });
+    expect(refused.reason).toContain('running mass m(mu)');
+    const both = await rewritten(running, { scale: q('2'), mass: { to: 'msbar', power: Rational.of(2) } });
+    // At μ = m(m) the running mass is m(m) itself: only the coupling moves.
+    const other = await rewritten({ ...start, scheme: 'MSbar coupling; MSbar mass m(m)' }, { scale: q('2') });
+    expect(both.coefficients.map((c) => c.text)).toEqual(other.coefficients.map((c) => c.text));
+  });
+
   const cases: readonly (readonly [string, string, Parameters<typeof rewriteRefused>[1], RegExp, RegExp])[] = [
     ['a plain variable', 'variable: x', { scale: q('2') }, /plain variable x/, /coupling: \{ name/],
     ['no scheme', 'coupling: { name: alpha_s }\nflavours: 3\nscale ratio: 1', { scale: q('2') }, /does not say its scheme/, /write scheme:/],

@@ -1,7 +1,7 @@
 /** @module The step to another renormalisation scale. */
 import { Rational, divExact, exact, mulExact } from '../../numerics/index.js';
 import type { Exact } from '../../numerics/index.js';
-import { isRefusal, scaleFormal, shiftCoupling, substituteOver } from '../../qcd/index.js';
+import { isRefusal, refuse, scaleFormal, shiftCoupling, substituteOver } from '../../qcd/index.js';
 import type { Formal, Refusal } from '../../qcd/index.js';
 import { textOf } from '../../series/index.js';
 import { exactLog, formalLog } from '../derive/symbols.js';
@@ -36,6 +36,12 @@ export const hasBeta = (scheme: CouplingScheme): boolean =>
 export function toScale(state: State, ratio: Exact): State | Refusal {
   const before = state.scaleRatio ?? scaleRatioOf(state.series);
   if (isRefusal(before)) return before;
+  if (state.mass === 'running') {
+    return refuse(
+      `${state.series.id} is in the running mass m(mu), which changes with the scale`,
+      'go to another mass first: --mass msbar --mass-power P (in one command with --scale)',
+    );
+  }
   const { coefficients, firstPower } = state;
   const n = coefficients.length;
   const factor = divExact(ratio, before);
