@@ -44,7 +44,7 @@ function placeOf(series: Series): { readonly flavours: number; readonly mu: Unce
       `${series.id} is in the coupling of "${schemeText(scheme)}", and α_s(M_Z) is MSbar`,
       scheme.kind === 'toy'
         ? 'give the coupling of that world: --at 0.1'
-        : `give --at, or leastterm rewrite ${series.id} --coupling MSbar first`,
+        : 'give --at, or bring it to MSbar first: leastterm rewrite SERIES --coupling MSbar',
     );
   }
   const flavours = flavoursOf(series);

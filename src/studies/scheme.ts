@@ -23,7 +23,7 @@ const WORDS: readonly (readonly [RegExp, (m: RegExpExecArray) => CouplingScheme 
     /\b(one|two|three|four|five)-loop running only\b/,
     (m) => ({ kind: 'toy', loops: LOOP_WORDS.indexOf(m[1] ?? '') + 1 }),
   ],
-  [/^coupling defined by (\S+)/, (m) => ({ kind: 'series', name: (m[1] ?? '').replace(/[;,]$/, '') })],
+  [/^coupling defined by ([^;]+)/, (m) => ({ kind: 'series', name: (m[1] ?? '').trim() })],
   [/^C-scheme, C = ([-+]?[\d./]+)/, (m) => cScheme(m[1] ?? '')],
   [/^V scheme\b/, () => ({ kind: 'V' })],
   [/^mini-MOM\b/i, () => ({ kind: 'mini-MOM' })],
