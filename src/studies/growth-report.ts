@@ -80,7 +80,7 @@ function singularityReport(s: FoundSingularity, expanded: Expanded): Singularity
     ...(exponent === undefined ? {} : { exponent: exponent.value, exponentError: exponent.error }),
     ...(strength === undefined ? {} : { strength: strength.value, strengthError: strength.error }),
     kind: scale === undefined ? s.kind : kind,
-    standing: 'indicative',
+    standing: s.standing,
   };
 }
 

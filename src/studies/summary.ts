@@ -26,7 +26,7 @@ export function seriesSummary(series: Series, expanded: Expanded): SeriesSummary
     ...(series.scaleRatio === undefined ? {} : { scaleRatio: exactText(series.scaleRatio, INPUT_DIGITS) }),
     ...(series.hardScale === undefined
       ? {}
-      : { hardScale: { value: series.hardScale.text, unit: series.hardScale.unit } }),
+      : { hardScale: { value: exactText(series.hardScale.value, INPUT_DIGITS), unit: series.hardScale.unit } }),
     factor: exactText(series.factor, INPUT_DIGITS),
     additive: exactText(series.additive, INPUT_DIGITS),
     sources: series.sources,
