@@ -3,7 +3,7 @@
  * command first needs them. `node esbuild.config.mjs [folder]` builds elsewhere.
  */
 import { build } from 'esbuild';
-import { chmod, readFile, rm, writeFile } from 'node:fs/promises';
+import { chmod, copyFile, mkdir, readFile, rm, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import { fileURLToPath, pathToFileURL } from 'node:url';
 
@@ -11,7 +11,7 @@ const root = fileURLToPath(new URL('.', import.meta.url));
 
 /** Licence texts of the packages that the bundle holds: their licences ask for it. */
 async function notices(metafile) {
-  const packages = new Set();
+  const packages = new Set(Object.values(ASSETS).map((path) => /^(?:@[^/]+\/)?[^/]+/.exec(path)[0]));
   for (const input of Object.keys(metafile.inputs)) {
     const match = /^node_modules\/((?:@[^/]+\/)?[^/]+)\//.exec(input);
     if (match !== null) packages.add(match[1]);
@@ -42,6 +42,13 @@ const parserOnly = {
   },
 };
 
+/** Files that pictures need beside the code; `src/pictures/assets.ts` finds them. */
+const ASSETS = {
+  'DejaVuSans.ttf': 'dejavu-fonts-ttf/ttf/DejaVuSans.ttf',
+  'DejaVuSans-Oblique.ttf': 'dejavu-fonts-ttf/ttf/DejaVuSans-Oblique.ttf',
+  'resvg.wasm': '@resvg/resvg-wasm/index_bg.wasm',
+};
+
 export async function bundle(outdir) {
   await rm(outdir, { recursive: true, force: true });
   const { metafile } = await build({
@@ -66,6 +73,9 @@ export async function bundle(outdir) {
     metafile: true,
     logLevel: 'warning',
   });
+  await mkdir(join(outdir, 'assets'), { recursive: true });
+  for (const [name, source] of Object.entries(ASSETS))
+    await copyFile(join(root, 'node_modules', source), join(outdir, 'assets', name));
   await writeFile(join(outdir, 'THIRD-PARTY-LICENSES.txt'), await notices(metafile));
   await chmod(join(outdir, 'leastterm.mjs'), 0o755);
   return metafile;
