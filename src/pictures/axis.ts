@@ -1,9 +1,10 @@
 /** @module Axes: from numbers to points, with ticks where a reader expects them. */
 import { scaleLinear, scaleLog } from 'd3-scale';
+import type { NameAxis, ValueAxis } from './chart.js';
 
 export interface Tick {
   readonly value: number;
-  /** In the notation of `typeset.ts`; empty for a tick without a number. */
+  /** In the notation of `vector/typeset.ts`; empty for a tick without a number. */
   readonly label: string;
 }
 
@@ -17,10 +18,10 @@ export interface Axis {
 }
 
 /** How many numbers an axis of this length carries: one in about so many sizes of its text. */
-const SPACING = { along: 6.5, up: 4 };
+const SPACING = { along: 6.5, up: 3 };
 
 const count = (length: number, text: number, direction: 'along' | 'up'): number =>
-  Math.max(2, Math.floor(length / (text * SPACING[direction])));
+  Math.max(3, Math.floor(length / (text * SPACING[direction])));
 
 export interface AxisPlace {
   /** Points where the axis starts and ends; they may fall (an upward axis). */
@@ -28,6 +29,27 @@ export interface AxisPlace {
   readonly end: number;
   readonly text: number;
   readonly direction: 'along' | 'up';
+}
+
+/** The axis of a wish; a whole one carries whole numbers only, as orders are. */
+export function axisOf(wish: ValueAxis, place: AxisPlace): Axis {
+  if (wish.kind === 'log') return logAxis(wish.low, wish.high, wish.label, place);
+  const axis = linearAxis(wish.low, wish.high, wish.label, place, wish.margin);
+  if (wish.kind === 'linear') return axis;
+  const whole = axis.ticks.filter(({ value }) => Number.isInteger(value));
+  return { ...axis, ticks: whole.map(({ value }) => ({ value, label: String(value).replace('-', '\u2212') })) };
+}
+
+/** An upward axis of names, the first at the top. */
+export function nameAxis({ names, label }: NameAxis, start: number, end: number): Axis {
+  const step = (end - start) / Math.max(1, names.length);
+  return {
+    from: names.length - 0.5,
+    to: -0.5,
+    label,
+    at: (value) => end - (value + 0.5) * step,
+    ticks: names.map((name, value) => ({ value, label: name })),
+  };
 }
 
 /** A linear axis over [low, high], widened by `margin` of its length at both ends. */
@@ -62,7 +84,7 @@ function writerFor(values: readonly number[]): (value: number) => string {
   return (value) => minus(value.toFixed(decimals));
 }
 
-/** A logarithmic axis over [low, high], both positive, out to the whole decades when `whole` asks for them. */
+/** A logarithmic axis over [low, high], both positive. */
 export function logAxis(low: number, high: number, label: string, place: AxisPlace): Axis {
   const pad = Math.max(1.12, (high / low) ** 0.05);
   const scale = scaleLog([low / pad, high * pad], [place.start, place.end]);

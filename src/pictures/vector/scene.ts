@@ -48,20 +48,9 @@ export type Mark = PathMark | TextMark;
 export interface Picture {
   readonly width: number;
   readonly height: number;
-  /** One line: what is shown, of what. */
   readonly title: string;
-  /** What a reader who cannot see it needs to know. */
   readonly description: string;
   readonly marks: readonly Mark[];
-  /** The plotted numbers, one table a layer: what --csv writes. */
-  readonly data: readonly Layer[];
-}
-
-/** Plotted numbers with the names of their columns. Numbers stay the texts of the result where it has them. */
-export interface Layer {
-  readonly name: string;
-  readonly columns: readonly string[];
-  readonly rows: readonly (readonly string[])[];
 }
 
 /** A number of points to a hundredth: finer than any printer, and the same text on every machine. */

@@ -16,9 +16,9 @@ export async function pngOf(picture: Picture, scale = 3): Promise<Uint8Array> {
     fitTo: { mode: 'width', value: Math.round(picture.width * scale) },
     font: { loadSystemFonts: false },
   });
-  try {
-    return drawing.render().asPng();
-  } finally {
-    drawing.free();
-  }
+  const image = drawing.render();
+  const bytes = image.asPng();
+  image.free();
+  drawing.free();
+  return bytes;
 }

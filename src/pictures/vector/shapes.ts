@@ -1,8 +1,18 @@
 /** @module Shapes as marks: lines, bands, and the markers that tell series apart without colour. */
+import type { LineStyle, MarkerShape, Point } from '../chart.js';
 import { pt } from './scene.js';
 import type { Box, PathMark, Stroke } from './scene.js';
 
-export type Point = readonly [x: number, y: number];
+const DASHES: Readonly<Record<Exclude<LineStyle, 'full'>, readonly number[]>> = {
+  dashed: [4, 2.2],
+  dotted: [1.1, 1.8],
+};
+
+/** Dashes grow with the width, so that they stay dashes. */
+export const strokeOf = (colour: string, width: number, style: LineStyle): Stroke =>
+  style === 'full'
+    ? { colour, width }
+    : { colour, width, dash: DASHES[style].map((length) => length * Math.max(1, width)) };
 
 const moves = (points: readonly Point[]): string =>
   points.map(([x, y], i) => `${i === 0 ? 'M' : 'L'}${pt(x)} ${pt(y)}`).join('');
@@ -56,8 +66,6 @@ export const circle = (
   r: number,
   look: { readonly stroke?: Stroke; readonly fill?: string; readonly opacity?: number; readonly clip?: Box },
 ): PathMark => ({ kind: 'path', d: circlePath(centre, r), ...look });
-
-export type MarkerShape = 'disc' | 'ring' | 'square' | 'diamond' | 'triangle' | 'cross' | 'bar';
 
 /** A marker of about the same weight whatever its shape; `r` is the radius of the disc. */
 export function marker(shape: MarkerShape, [x, y]: Point, r: number, colour: string, clip?: Box): PathMark {

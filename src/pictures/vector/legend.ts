@@ -1,0 +1,127 @@
+/** @module The legend of a panel: for each named layer a sample of it, and its name. */
+import type { Layer, Point } from '../chart.js';
+import { cutLine } from './clip.js';
+import type { Format } from './format.js';
+import type { Frame } from './frame.js';
+import { BAND, BAND_SECOND, FAINT, ink, PAPER, TEXT } from './palette.js';
+import type { Box, Mark } from './scene.js';
+import { line, marker, rectangle, strokeOf } from './shapes.js';
+import { typeset } from './typeset.js';
+
+type NamedLayer = Exclude<Layer, { kind: 'note' }>;
+
+const isNamed = (layer: Layer): layer is NamedLayer => layer.kind !== 'note' && layer.name !== undefined;
+
+/** A sample of a layer, `length` long, its middle line at y. */
+function sample(layer: NamedLayer, x: number, y: number, length: number, format: Format): Mark[] {
+  const across = [
+    [x, y],
+    [x + length, y],
+  ] as const;
+  const patch = (fill: string, opacity: number): Mark =>
+    rectangle({ x, y: y - format.text * 0.35, width: length, height: format.text * 0.7 }, { fill, opacity });
+  switch (layer.kind) {
+    case 'curve':
+      return [
+        ...(layer.line === undefined ? [] : [line(across, strokeOf(ink(layer.ink), format.line, layer.line))]),
+        ...(layer.marker === undefined
+          ? []
+          : [marker(layer.marker, [x + length / 2, y], format.marker, ink(layer.ink))]),
+      ];
+    case 'band':
+      return [patch(layer.tone === 'first' ? BAND : BAND_SECOND, 1)];
+    case 'rule':
+      return [line(across, strokeOf(layer.ink === 'faint' ? FAINT : ink(layer.ink), format.line * 0.8, layer.line))];
+    case 'intervals':
+      return [line(across, { colour: ink(layer.ink), width: format.line * (layer.weight === 'thick' ? 2.6 : 1) })];
+    case 'columns':
+      return [patch(ink(layer.ink), 0.55)];
+    case 'bars':
+      return [patch(ink(layer.ink), 0.8)];
+  }
+}
+
+/** Cells that curves and intervals pass through, near enough to each other to find a legend in their way. */
+function occupied(layers: readonly Layer[], { box, x, y }: Frame): Point[] {
+  const place = ([a, b]: Point): Point => [x.at(a), y.at(b)];
+  return layers.flatMap((layer): Point[] => {
+    switch (layer.kind) {
+      case 'curve': {
+        const points = layer.points.map(place);
+        if (layer.line === undefined) return points;
+        return cutLine(points, box).flatMap((piece) =>
+          piece.flatMap((point, i) => along(piece[i - 1] ?? point, point)),
+        );
+      }
+      case 'intervals':
+        return layer.items.flatMap((item) => {
+          const [dx, dy] = layer.along === 'x' ? [1, 0] : [0, 1];
+          return along(
+            place([item.x - dx * item.minus, item.y - dy * item.minus]),
+            place([item.x + dx * item.plus, item.y + dy * item.plus]),
+          );
+        });
+      case 'columns':
+        return layer.bins.map(({ from, to, height }) => place([(from + to) / 2, height]));
+      case 'bars':
+        return layer.items.flatMap((item) => along(place([item.from, item.y]), place([item.to, item.y])));
+      case 'note':
+        return [place(layer.at)];
+      case 'band':
+      case 'rule':
+        return [];
+    }
+  });
+}
+
+const STEPS = 24;
+const along = ([x0, y0]: Point, [x1, y1]: Point): Point[] =>
+  Array.from({ length: STEPS + 1 }, (_, i) => [x0 + ((x1 - x0) * i) / STEPS, y0 + ((y1 - y0) * i) / STEPS]);
+
+/** The place of a box of this size, in a corner or in the middle above or below, where it covers least. */
+function bestPlace(box: Box, width: number, height: number, text: number, taken: readonly Point[]): Box {
+  const across = [box.x + box.width - width - text * 0.7, box.x + text * 0.7, box.x + (box.width - width) / 2];
+  const up = [box.y + text * 0.7, box.y + box.height - height - text * 0.7];
+  const places = up.flatMap((y) => across.map((x): Box => ({ x, y, width, height })));
+  const covers = (place: Box): number =>
+    taken.filter(
+      ([x, y]) =>
+        x > place.x - text / 2 &&
+        x < place.x + width + text / 2 &&
+        y > place.y - text / 2 &&
+        y < place.y + height + text / 2,
+    ).length;
+  return places.reduce((best, place) => (covers(place) < covers(best) ? place : best));
+}
+
+/** The legend of a panel, on a ground of its own. */
+export function legendMarks(layers: readonly Layer[], frame: Frame, format: Format): Mark[] {
+  const named = layers.filter(isNamed);
+  if (named.length === 0) return [];
+  const { text } = format;
+  const size = text * 0.92;
+  const step = text * 1.4;
+  const length = text * 2;
+  const width = length + text * 1.2 + Math.max(...named.map((layer) => typeset(layer.name ?? '', size).width));
+  const height = step * named.length + text * 0.3;
+  const ground = bestPlace(frame.box, width, height, text, occupied(layers, frame));
+  const left = ground.x + text * 0.3;
+  return [
+    rectangle(ground, { fill: PAPER, opacity: 0.85 }),
+    ...named.flatMap((layer, i): Mark[] => {
+      const base = ground.y + step * i + text * 1.15;
+      return [
+        ...sample(layer, left, base - text * 0.33, length, format),
+        {
+          kind: 'text',
+          x: left + length + text * 0.6,
+          y: base,
+          text: layer.name ?? '',
+          size,
+          anchor: 'start',
+          colour: TEXT,
+        },
+      ];
+    }),
+  ];
+}
