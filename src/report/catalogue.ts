@@ -1,6 +1,6 @@
 /** @module The catalogue for people, and one series of it: what its file says, nothing evaluated. */
 import { parseDecimal, shorten, toDecimal } from '../numerics/index.js';
-import { textOf } from '../series/index.js';
+import { textOf, weightText } from '../series/index.js';
 import type { CatalogueEntry, Series, Uncertain } from '../series/index.js';
 import type { Fact } from './layout/page.js';
 import { Page } from './layout/page.js';
@@ -68,6 +68,7 @@ function facts(series: Series): Fact[] {
   const list: Fact[] = [
     { label: 'id', text: series.id },
     { label: 'quantity', text: series.quantity ?? '' },
+    { label: 'on a circle', text: series.contour === undefined ? '' : `weight w(x) = ${weightText(series.contour)}` },
     { label: 'variable', text: over(series.coupling.name, series.coupling.divisor) },
     { label: 'first power', text: String(series.firstPower) },
     { label: 'scheme', text: series.scheme ?? '' },
@@ -131,8 +132,18 @@ export function seriesText(series: Series, options: TerminalOptions = {}): strin
 
 /** The series as plain data, numbers as the file writes them. */
 export function plainSeries(series: Series): object {
-  const { scaleRatio, factor, additive, coefficients, singularities, condensates, measurement, correlation, ...rest } =
-    series;
+  const {
+    scaleRatio,
+    factor,
+    additive,
+    coefficients,
+    singularities,
+    condensates,
+    measurement,
+    correlation,
+    contour,
+    ...rest
+  } = series;
   const number = (n: Uncertain) => ({
     value: textOf(n.value),
     ...(n.error === undefined ? {} : { plus: n.error.plus.toString(), minus: n.error.minus.toString() }),
@@ -140,6 +151,7 @@ export function plainSeries(series: Series): object {
   });
   return {
     ...rest,
+    contour: contour && { name: contour.name, weight: contour.coefficients.map(String) },
     hardScale:
       series.hardScale === undefined ? undefined : { value: series.hardScale.text, unit: series.hardScale.unit },
     ...(scaleRatio === undefined ? {} : { scaleRatio: textOf(scaleRatio) }),

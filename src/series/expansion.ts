@@ -6,7 +6,8 @@
  * Borel conventions: B(t) = Σ c_n t^n/n!,  F(x) = (1/x) ∫_0^∞ dt e^{−t/x} B(t); the upper lateral sum passes above the
  * positive t axis. With power = 1 and x = α this is the usual R = ∫ dt e^{−t/α} B(t) of a QCD correction.
  */
-import type { Exact } from '../numerics/index.js';
+import type { Exact, Rational } from '../numerics/index.js';
+import type { Divisor } from './series.js';
 
 /** A Borel singularity N (1 − t/t*)^(−γ) [1 + c₁(1 − t/t*) + c₂(1 − t/t*)² + …] taken as given. */
 export interface StatedSingularity {
@@ -34,6 +35,28 @@ export interface Running {
   readonly flavourPolynomials?: readonly (readonly Exact[])[];
 }
 
+/**
+ * The quantity on a circle whose fixed-order expansion an Expansion is:
+ * R = additive + factor (1/2πi) ∮ ds/s W(s/s_0) D(s),  D = Σ c_n x(−s)^(n + power),  x(s_0) the expansion's own x.
+ */
+export interface ContourOrigin {
+  /** w_0, w_1, … of the weight w(x). */
+  readonly weight: readonly Rational[];
+  /** W_0, W_1, … of W(x) = 2 ∫_x^1 w(x′) dx′. */
+  readonly integral: readonly Rational[];
+  /** c_n of D, and the power of the first. */
+  readonly coefficients: readonly Exact[];
+  readonly power: number;
+  /** One-sigma errors of the c_n. */
+  readonly errors: readonly number[];
+  /** Borel singularities of D, nearest first. */
+  readonly stated: readonly StatedSingularity[];
+  readonly flavours: number;
+  /** Loops of the beta function on the circle. */
+  readonly loops: number;
+  readonly divisor: Divisor;
+}
+
 export interface Expansion {
   readonly x: Exact;
   readonly power: number;
@@ -46,4 +69,6 @@ export interface Expansion {
   readonly stated: readonly StatedSingularity[];
   /** Absent for a variable that does not run. */
   readonly running?: Running;
+  /** Present for the fixed-order expansion of a contour quantity. */
+  readonly contour?: ContourOrigin;
 }

@@ -2,6 +2,7 @@
 export type {
   Coefficient,
   Condensate,
+  ContourWeight,
   Coupling,
   Divisor,
   KnownSingularity,
@@ -11,7 +12,7 @@ export type {
   SingularityKind,
   Uncertain,
 } from './series.js';
-export type { Expansion, Running, StatedSingularity } from './expansion.js';
+export type { ContourOrigin, Expansion, Running, StatedSingularity } from './expansion.js';
 export { InputError, describeProblem } from './input-error.js';
 export type { Problem } from './input-error.js';
 export { nearest, suggestion } from './nearest.js';
@@ -30,3 +31,4 @@ export { checkSeries } from './check.js';
 export { catalogueFolder, catalogueIds, catalogueText, listCatalogue, nearestCatalogueId } from './catalogue.js';
 export type { CatalogueEntry } from './catalogue.js';
 export { LIMITS } from './limits.js';
+export { parseWeight, weightText } from './weights.js';

@@ -6,6 +6,8 @@ export const LIMITS = {
   /** Bytes of a file. */
   bytes: 4 * 1024 * 1024,
   coefficients: 5_000,
+  /** Coefficients of a contour quantity. */
+  contour: 200,
   /** Lines, and entries of lists and maps, of a whole file. */
   entries: 20_000,
   /** Characters that mean something to YAML (quotes, brackets, colons, …), anywhere in a file. */

@@ -6,6 +6,7 @@ import { plainSigns } from './number-text.js';
 import { quote } from './quote.js';
 import { readCoefficients } from './read-coefficients.js';
 import { readCondensates } from './read-condensates.js';
+import { readContour } from './read-contour.js';
 import { readConstants } from './read-constants.js';
 import { readCorrelation } from './read-correlation.js';
 import { readChecks } from './read-checks.js';
@@ -19,7 +20,7 @@ export const FORMAT = 1;
 /** Every field of a series file, in the order in which they are written. */
 export const FIELDS = [
   'format', 'title', 'quantity', 'sources', 'notes', 'invented', 'coupling', 'variable', 'first power', 'scheme', 'flavours',
-  'flavour choices', 'scale ratio', 'hard scale', 'factor', 'additive', 'constants', 'coefficients', 'correlation',
+  'kind', 'weight', 'flavour choices', 'scale ratio', 'hard scale', 'factor', 'additive', 'constants', 'coefficients', 'correlation',
   'singularities', 'condensates', 'measurement', 'checks',
 ] as const; // prettier-ignore
 
@@ -92,7 +93,8 @@ export function readSeries(entry: Entry, id: string, reader: FieldReader, flavou
     singularities: readSingularities(group.get('singularities'), coupling, reader),
     condensates: readCondensates(group.get('condensates'), reader),
   };
-  return complaints.any ? undefined : { ...series, ...present(optional) };
+  const contour = readContour(group, series, reader);
+  return complaints.any ? undefined : { ...series, ...present({ ...optional, contour }) };
 
   function checkFlavours(): void {
     if (flavours === undefined) return;

@@ -64,6 +64,12 @@ export interface Scale {
   readonly text: string;
 }
 
+/** The weight w(x) of a contour quantity: a polynomial in x = s/s_0, w_0 first, the last one not zero. */
+export interface ContourWeight {
+  readonly name?: string;
+  readonly coefficients: readonly Rational[];
+}
+
 export interface Series {
   /** Catalogue id or file name, for messages. */
   readonly id: string;
@@ -87,6 +93,13 @@ export interface Series {
   readonly singularities: readonly KnownSingularity[];
   readonly condensates: readonly Condensate[];
   readonly measurement?: Uncertain & { readonly unit?: string; readonly source?: string };
+  /**
+   * The coefficients are those of D = Σ c_n x^(n + firstPower), x at the scale −s, and the quantity is
+   * R = additive + factor · (1/2πi) ∮_{|s| = s_0} ds/s W(s/s_0) D(s),  W(x) = 2 ∫_x^1 w(x′) dx′.
+   */
+  readonly contour?: ContourWeight;
+  /** Of a contour quantity as one power series in the coupling at s_0: the series as its file has it. */
+  readonly expandedFrom?: Series;
   /** Named constants that the expressions of the file use. */
   readonly constants?: readonly { readonly name: string; readonly text: string }[];
   /** True when nf enters a coefficient: the same file then serves other numbers of flavours. */

@@ -94,6 +94,8 @@ export function writeSeries(s: Series): string {
   if (s.coupling.plain) field('variable', scalar(s.coupling.name));
   else field('coupling', flow([['name', scalar(s.coupling.name)], ['divisor', s.coupling.divisor]])); // prettier-ignore
   field('first power', String(s.firstPower));
+  if (s.contour !== undefined) field('kind', 'contour');
+  field('weight', s.contour && (s.contour.name ?? `[${s.contour.coefficients.join(', ')}]`));
   field('scheme', text(s.scheme));
   field('flavours', s.flavours?.toString());
   if (s.flavourChoices !== undefined) field('flavour choices', `[${s.flavourChoices.join(', ')}]`);
