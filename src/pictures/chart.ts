@@ -94,8 +94,8 @@ export interface Panel {
   readonly y: ValueAxis | NameAxis;
   /** Drawn in this order, the first at the bottom. */
   readonly layers: readonly Layer[];
-  /** A legend of the named layers, in the corner where it covers least. */
-  readonly legend?: boolean;
+  /** A legend of the named layers: inside, where it covers least, or below. */
+  readonly legend?: 'inside' | 'below';
   /** A unit of x is as long as a unit of y. */
   readonly square?: boolean;
 }

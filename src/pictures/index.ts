@@ -13,3 +13,6 @@ export { terminalChart } from './terminal/draw.js';
 export type { TerminalPage } from './terminal/draw.js';
 export { planeChart } from './kinds/plane.js';
 export { valuesChart } from './kinds/values.js';
+export { coverageChart } from './kinds/coverage.js';
+export { integrandChart } from './kinds/integrand.js';
+export { scaleChart } from './kinds/scale.js';

@@ -41,3 +41,7 @@ export type { VerdictRule } from './verdict-rule.js';
 export { unclearQuark } from './flavours-in-use.js';
 export { catalogueCheck } from './catalogue-check.js';
 export type { CheckedSeries } from './catalogue-check.js';
+export { scaleDependence } from './scale-dependence.js';
+export type { ScaleDependence, ScaleDependenceOptions, ScalePointReport } from './scale-dependence.js';
+export { laplaceIntegrand } from './laplace-integrand.js';
+export type { IntegrandSample, LaplaceIntegrand } from './laplace-integrand.js';

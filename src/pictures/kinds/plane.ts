@@ -89,7 +89,7 @@ export function planeChart(result: Plane): Chart {
         x: { kind: 'linear', low, high, label: `Re *${variable}*` },
         y: { kind: 'linear', low: -tall, high: tall, label: `Im *${variable}*` },
         layers,
-        legend: true,
+        legend: 'inside',
         square: true,
       },
     ],

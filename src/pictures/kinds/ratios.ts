@@ -60,7 +60,7 @@ export function ratiosChart(result: Assessment): Chart {
         x: { kind: 'linear', low: 0, high: 1, label: '1/*n*' },
         y: { kind: 'linear', low: Math.min(...values), high: Math.max(...values), label: 'ratio', margin: 0.08 },
         layers,
-        legend: true,
+        legend: 'inside',
       },
     ],
     data: [

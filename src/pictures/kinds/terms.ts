@@ -68,7 +68,7 @@ export function termsChart(result: Assessment): Chart {
     x: { ...along, label: '' },
     y: { kind: 'log', low: Math.min(...sizes), high: Math.max(...sizes), label: '| term |' },
     layers: termLayers(rows),
-    legend: true,
+    legend: 'inside',
   };
   const lower: Panel = {
     x: { ...along, label: 'order' },
@@ -96,7 +96,7 @@ export function termsChart(result: Assessment): Chart {
         name: 'partial sums',
       },
     ],
-    legend: true,
+    legend: 'inside',
   };
   return {
     title: `Terms and partial sums of ${nameOf(result)}, ${atCoupling(result)}`,

@@ -135,7 +135,7 @@ export function valuesChart(result: Assessment | CompareResult): Chart {
     panels: [
       {
         x: { kind: 'linear', low: Math.min(...view), high: Math.max(...view), label: 'value', margin: 0.05 },
-        y: { kind: 'names', names: rows.map((row) => titleOf(row.prescription)), label: '' },
+        y: { kind: 'names', names: rows.map((row) => row.prescription), label: '' },
         layers: [
           ...(band === undefined
             ? []
@@ -148,7 +148,7 @@ export function valuesChart(result: Assessment | CompareResult): Chart {
           points(false),
           points(true),
         ],
-        legend: true,
+        legend: 'below',
       },
     ],
     data: [

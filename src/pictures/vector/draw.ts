@@ -4,7 +4,7 @@ import { cutLine, held, inside } from './clip.js';
 import type { Format } from './format.js';
 import { frameOf, gutter } from './frame.js';
 import type { Frame } from './frame.js';
-import { legendMarks } from './legend.js';
+import { LEGEND_STEP, legendBelow, legendInside, rowsBelow } from './legend.js';
 import { BAND, BAND_SECOND, FAINT, ink, PAPER, TEXT } from './palette.js';
 import type { Box, Mark, Picture, Stroke } from './scene.js';
 import { area, line, marker, rectangle, strokeOf } from './shapes.js';
@@ -110,11 +110,14 @@ export function pictureOf(chart: Chart, format: Format): Picture {
   const share = height / chart.panels.length;
   const left = Math.max(...chart.panels.map((panel) => gutter(format, panel, share)));
   const panelMarks = (panel: Panel, i: number): Mark[] => {
-    const frame = frameOf(format, panel, { x: 0, y: i * share, width, height: share }, left);
+    const below = panel.legend === 'below' ? rowsBelow(panel.layers, format) : [];
+    const legendHeight = below.length * format.text * LEGEND_STEP;
+    const frame = frameOf(format, panel, { x: 0, y: i * share, width, height: share - legendHeight }, left);
     return [
       ...panel.layers.flatMap((layer) => layerMarks(layer, frame, format)),
       ...frame.marks,
-      ...(panel.legend === true ? legendMarks(panel.layers, frame, format) : []),
+      ...(panel.legend === 'inside' ? legendInside(panel.layers, frame, format) : []),
+      ...legendBelow(below, (i + 1) * share - legendHeight, format),
     ];
   };
   return {

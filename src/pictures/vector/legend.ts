@@ -94,34 +94,72 @@ function bestPlace(box: Box, width: number, height: number, text: number, taken:
   return places.reduce((best, place) => (covers(place) < covers(best) ? place : best));
 }
 
-/** The legend of a panel, on a ground of its own. */
-export function legendMarks(layers: readonly Layer[], frame: Frame, format: Format): Mark[] {
+/** From one entry to the next, and the length of a sample, in sizes of the text. */
+export const LEGEND_STEP = 1.4;
+const SAMPLE = 2;
+const SIZE = 0.92;
+
+const entryWidth = (layer: NamedLayer, format: Format): number =>
+  format.text * (SAMPLE + 0.6) + typeset(layer.name ?? '', format.text * SIZE).width;
+
+function entryMarks(layer: NamedLayer, x: number, base: number, format: Format): Mark[] {
+  const { text } = format;
+  return [
+    ...sample(layer, x, base - text * 0.33, text * SAMPLE, format),
+    {
+      kind: 'text',
+      x: x + text * (SAMPLE + 0.6),
+      y: base,
+      text: layer.name ?? '',
+      size: text * SIZE,
+      anchor: 'start',
+      colour: TEXT,
+    },
+  ];
+}
+
+/** The legend inside a panel, on a ground of its own. */
+export function legendInside(layers: readonly Layer[], frame: Frame, format: Format): Mark[] {
   const named = layers.filter(isNamed);
   if (named.length === 0) return [];
   const { text } = format;
-  const size = text * 0.92;
-  const step = text * 1.4;
-  const length = text * 2;
-  const width = length + text * 1.2 + Math.max(...named.map((layer) => typeset(layer.name ?? '', size).width));
+  const step = text * LEGEND_STEP;
+  const width = text * 0.6 + Math.max(...named.map((layer) => entryWidth(layer, format)));
   const height = step * named.length + text * 0.3;
   const ground = bestPlace(frame.box, width, height, text, occupied(layers, frame));
-  const left = ground.x + text * 0.3;
   return [
     rectangle(ground, { fill: PAPER, opacity: 0.85 }),
-    ...named.flatMap((layer, i): Mark[] => {
-      const base = ground.y + step * i + text * 1.15;
-      return [
-        ...sample(layer, left, base - text * 0.33, length, format),
-        {
-          kind: 'text',
-          x: left + length + text * 0.6,
-          y: base,
-          text: layer.name ?? '',
-          size,
-          anchor: 'start',
-          colour: TEXT,
-        },
-      ];
-    }),
+    ...named.flatMap((layer, i) => entryMarks(layer, ground.x + text * 0.3, ground.y + step * i + text * 1.15, format)),
   ];
+}
+
+/** Named layers in rows as wide as the format. */
+export function rowsBelow(layers: readonly Layer[], format: Format): NamedLayer[][] {
+  const rows: NamedLayer[][] = [];
+  let used = Infinity;
+  for (const layer of layers.filter(isNamed)) {
+    const width = entryWidth(layer, format) + format.text * 1.5;
+    if (used + width > format.width - format.text * 2) {
+      rows.push([]);
+      used = 0;
+    }
+    rows.at(-1)?.push(layer);
+    used += width;
+  }
+  return rows;
+}
+
+/** The rows of a legend below a panel, each in the middle. */
+export function legendBelow(rows: readonly (readonly NamedLayer[])[], top: number, format: Format): Mark[] {
+  const gap = format.text * 1.5;
+  return rows.flatMap((row, i) => {
+    const widths = row.map((layer) => entryWidth(layer, format));
+    const total = widths.reduce((sum, width) => sum + width, gap * (row.length - 1));
+    let x = (format.width - total) / 2;
+    return row.flatMap((layer, k) => {
+      const marks = entryMarks(layer, x, top + format.text * (LEGEND_STEP * i + 0.8), format);
+      x += widths[k]! + gap;
+      return marks;
+    });
+  });
 }
