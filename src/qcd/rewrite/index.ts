@@ -1,5 +1,14 @@
 /** @module Exact re-expansion of series: other scales, couplings, numbers of flavours, masses. */
 export { multiplyCoefficients, powerOfCoefficients } from './algebra.js';
+export {
+  circleMoments,
+  exactInPiSquared,
+  expandOnCircle,
+  inPiSquaredText,
+  onCircle,
+  weightIntegral,
+  type InPiSquared,
+} from './circle.js';
 export { decouplingMassFactor, decouplingRelation, inverseDecouplingRelation, type Decoupling } from './flavours.js';
 export { massRatioFormal, massRatioSeries, type MassDefinition, type MassRatioQuestion } from './mass.js';
 export {
