@@ -29,8 +29,13 @@ export function bitLength(n: bigint): number {
       step *= 2;
     }
   }
-  f64[0] = d < 0 ? -d : d;
-  return base + ((u32[HIGH]! >>> 20) & 0x7ff) - 1022;
+  return base + doubleBits(d);
+}
+
+/** The E with 2^(E−1) <= |x| < 2^E, for a normal double. */
+export function doubleBits(x: number): number {
+  f64[0] = x;
+  return ((u32[HIGH]! >>> 20) & 0x7ff) - 1022;
 }
 
 /** n·2^k rounded toward minus infinity. */

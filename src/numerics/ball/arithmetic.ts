@@ -5,10 +5,27 @@
  * Method     midpoints in integer arithmetic, rounded to `prec` bits; the rounding error is added to the radius.
  * Bound      written at each operation; products that could leave the range of doubles carry a binary exponent beside them.
  */
-import { bitLength, isqrt } from '../bits.js';
-import { absUp, COARSE_BITS, INDETERMINATE, ONE, rounded, scaleUp, shiftRound, UP, ZERO } from './core.js';
+import { bitLength, doubleBits, isqrt } from '../bits.js';
+import {
+  absUp,
+  COARSE_BITS,
+  cutBits,
+  INDETERMINATE,
+  ONE,
+  power2,
+  rounded,
+  scaleUp,
+  shiftLeft,
+  shiftRound,
+  SPARE,
+  UP,
+  ZERO,
+} from './core.js';
 import type { Ball } from './core.js';
 import { containsZero, isExactZero, isPositive } from './predicates.js';
+
+/** Products and quotients of midpoints below this stay in doubles, bounds included. */
+const LARGE = 2 ** 1000;
 
 export function add(a: Ball, b: Ball, prec: number): Ball {
   if (a.rad === Infinity || b.rad === Infinity) return INDETERMINATE;
@@ -43,7 +60,7 @@ function addAligned(a: Ball, b: Ball, gap: number, prec: number): Ball {
     exp = low;
     gap = a.exp - exp;
   }
-  return rounded((a.mid << BigInt(gap)) + mid, exp, scaleUp(a.rad, gap) + rad, prec);
+  return rounded(shiftLeft(a.mid, gap) + mid, exp, scaleUp(a.rad, gap) + rad, prec);
 }
 
 export function neg(a: Ball): Ball {
@@ -61,20 +78,20 @@ export function mul(a: Ball, b: Ball, prec: number): Ball {
     return isExactZero(a) || isExactZero(b) ? ZERO : INDETERMINATE;
   }
   const mid = a.mid * b.mid;
-  const la = Math.abs(Number(a.mid));
-  const lb = Math.abs(Number(b.mid));
-  if (la < Infinity && lb < Infinity) {
-    const rad = la * b.rad + lb * a.rad + a.rad * b.rad;
-    if (rad < Infinity) return rounded(mid, exp, rad, prec);
-  }
+  let la = Number(a.mid);
+  let lb = Number(b.mid);
+  if (la < 0) la = -la;
+  if (lb < 0) lb = -lb;
+  const size = la * lb;
+  const rad = la * b.rad + lb * a.rad + a.rad * b.rad;
+  if (size < LARGE && rad < Infinity) return cutBits(mid, exp, rad, doubleBits(size * UP) - prec - SPARE, 0);
   // |ab − m| <= |a| rb + |b| ra + ra rb with the long mantissas scaled to below 2^60.
   const sa = Math.max(0, bitLength(a.mid) - 60);
   const sb = Math.max(0, bitLength(b.mid) - 60);
   const s = Math.max(b.rad > 0 ? sa : 0, a.rad > 0 ? sb : 0);
   const ta = b.rad > 0 ? absUp(a.mid, -s) * b.rad : 0;
   const tb = a.rad > 0 ? absUp(b.mid, -s) * a.rad : 0;
-  const rad = ta + tb + scaleUp(a.rad * b.rad, -s);
-  return rounded(mid, exp, rad, prec, s);
+  return rounded(mid, exp, ta + tb + scaleUp(a.rad * b.rad, -s), prec, s);
 }
 
 /** Square, tighter and faster than mul(a, a): |(m+d)² − m²| <= 2|m| r + r². */
@@ -93,14 +110,40 @@ export function mul2exp(a: Ball, k: number): Ball {
  * Bound: with q the truncated quotient of the midpoints, |x/y − q| <= (ra + (|q|+1) rb)/(|b| − rb) + 1.
  */
 export function div(a: Ball, b: Ball, prec: number): Ball {
+  if (a.rad === 0 && b.rad === 0) return divExact(a, b, prec);
   if (containsZero(b) || a.rad === Infinity) return INDETERMINATE;
   if (isExactZero(a)) return ZERO;
   const lb = bitLength(b.mid);
   const k = Math.max(0, prec + 2 - bitLength(a.mid) + lb);
-  const n = k > 0 ? a.mid << BigInt(k) : a.mid;
-  const q = n / b.mid;
+  const q = shiftLeft(a.mid, k) / b.mid;
   const exp = a.exp - b.exp - k;
-  if (a.rad === 0 && b.rad === 0) return rounded(q, exp, q * b.mid === n ? 0 : 1, prec);
+  const size = Math.abs(Number(b.mid));
+  const quotient = Math.abs(Number(q));
+  if (size < LARGE && quotient < LARGE && k < 1000) {
+    const low = size * (1 - 2 ** -40) - b.rad * UP;
+    const rad = (a.rad * power2(k) + (quotient + 1) * b.rad * UP) / low + 1;
+    if (low > 0 && rad < Infinity) return rounded(q, exp, rad * UP, prec);
+  }
+  return divWide(a, b, prec, q, k, lb);
+}
+
+/** Exact operands: at least one bit more than `prec` is asked of the quotient, and nothing is left to round. */
+function divExact(a: Ball, b: Ball, prec: number): Ball {
+  if (b.mid === 0n) return INDETERMINATE;
+  if (a.mid === 0n) return ZERO;
+  const k = Math.max(0, prec + 2 - bitLength(a.mid) + bitLength(b.mid));
+  const n = shiftLeft(a.mid, k);
+  const q = n / b.mid;
+  // The lowest word tells nearly always that something is left over.
+  const low = BigInt.asUintN(64, BigInt.asUintN(64, q) * BigInt.asUintN(64, b.mid));
+  const rad = low === BigInt.asUintN(64, n) && q * b.mid === n ? 0 : 1;
+  const exp = a.exp - b.exp - k;
+  return k > 0 && rad !== 0 ? { mid: q, exp, rad } : rounded(q, exp, rad, prec);
+}
+
+/** The same where the sizes leave the range of doubles. */
+function divWide(a: Ball, b: Ball, prec: number, q: bigint, k: number, lb: number): Ball {
+  const exp = a.exp - b.exp - k;
   // Numerator and denominator of the bound in units of 2^lb; `low` is a lower bound of |b| − rb.
   const low = (absUp(b.mid, -lb) * (1 - 2 ** -40) - scaleUp(b.rad, -lb) * UP) * (1 - 2 ** -48);
   if (!(low > 0)) return INDETERMINATE;
