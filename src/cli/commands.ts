@@ -9,6 +9,7 @@ import { combine } from './commands/combine.js';
 import { growth } from './commands/growth.js';
 import { helpCommand } from './commands/help.js';
 import { plane } from './commands/plane.js';
+import { plot } from './commands/plot.js';
 import { rewrite } from './commands/rewrite.js';
 import { sum } from './commands/sum.js';
 import { truncation } from './commands/truncation.js';
@@ -24,6 +25,7 @@ const STUDIES: readonly Command[] = [
   evolve,
   rewrite,
   combine,
+  plot,
   catalogue,
 ];
 

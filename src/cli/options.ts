@@ -1,6 +1,7 @@
 /** @module Every option of the command line: its name, its value, its one line of help. */
 import type { OptionSpec, OptionWords } from './option-kinds.js';
 import { COMPARE_OPTIONS } from './options-compare.js';
+import { PICTURE_OPTIONS } from './options-pictures.js';
 import { QCD_OPTIONS } from './options-qcd.js';
 
 export type { OptionSpec, OptionWords } from './option-kinds.js';
@@ -9,6 +10,7 @@ export type OptionName =
   | 'at'
   | keyof typeof QCD_OPTIONS
   | keyof typeof COMPARE_OPTIONS
+  | keyof typeof PICTURE_OPTIONS
   | 'by'
   | 'variant'
   | 'by-order'
@@ -29,6 +31,7 @@ const MOST_DIGITS = 2000;
 export const OPTIONS: Readonly<Record<OptionName, OptionSpec>> = {
   ...QCD_OPTIONS,
   ...COMPARE_OPTIONS,
+  ...PICTURE_OPTIONS,
   at: {
     kind: 'text',
     placeholder: 'VALUE',

@@ -25,8 +25,11 @@ export function writeFailure(error: unknown): string {
   return REASONS[code] ?? (code === '' ? String(error) : `the system says ${code}`);
 }
 
-function writeAll(descriptor: number, text: string): void {
-  const bytes = Buffer.from(text, 'utf8');
+const bytesOf = (data: string | Uint8Array): Uint8Array =>
+  typeof data === 'string' ? Buffer.from(data, 'utf8') : data;
+
+function writeAll(descriptor: number, data: string | Uint8Array): void {
+  const bytes = bytesOf(data);
   for (let done = 0; done < bytes.length;) done += writeSync(descriptor, bytes, done);
 }
 
@@ -45,7 +48,7 @@ function target(path: string): { readonly path: string; readonly plain: boolean 
  * Writes a file through a temporary neighbour and a rename: a reader, a full disk or an interruption never meets half of
  * it. Devices and pipes are written directly.
  */
-export function writeWhole(path: string, text: string): void {
+export function writeWhole(path: string, text: string | Uint8Array): void {
   const { path: real, plain } = target(path);
   if (!plain) {
     const descriptor = openSync(real, 'w');
@@ -72,8 +75,8 @@ export function writeWhole(path: string, text: string): void {
   }
 }
 
-/** Sends the text of a result where the command line wants it. */
-export function deliver(text: string, { given, surroundings }: Call): void {
+/** Sends a result where the command line wants it. */
+export function deliver(text: string | Uint8Array, { given, surroundings }: Call): void {
   const { output } = given;
   if (output === undefined || output === '-') {
     surroundings.stdout.write(text);

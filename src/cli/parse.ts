@@ -139,78 +139,12 @@ const isText = (value: unknown): value is string => typeof value === 'string' &&
 const allTexts = (value: unknown): value is string | string[] =>
   Array.isArray(value) ? value.every(isText) : isText(value);
 
+/** "by-order" is the field byOrder of Given, and so on: every option its own field, named after it. */
+const fieldOf = (name: OptionName): string =>
+  name === 'alpha-s-mz' ? 'alphaSMZ' : name.replace(/-([a-z])/g, (_, letter: string) => letter.toUpperCase());
+
+/** The values have the type that the kind of their option asks for: `parse` has seen to it. */
 function collect(values: ReadonlyMap<OptionName, Value>): Given {
-  const text = (name: OptionName): string | undefined => {
-    const value = values.get(name);
-    return typeof value === 'string' ? value : undefined;
-  };
-  const number = (name: OptionName): number | undefined => {
-    const value = values.get(name);
-    return typeof value === 'number' ? value : undefined;
-  };
-  const list = (name: OptionName): readonly string[] | undefined => {
-    const value = values.get(name);
-    return typeof value === 'object' ? value : undefined;
-  };
-  const flag = (name: OptionName): true | undefined => (values.get(name) === true ? true : undefined);
-  const given = {
-    at: text('at'),
-    alphaSMZ: text('alpha-s-mz'),
-    alphaS: text('alpha-s'),
-    mass: text('mass'),
-    from: text('from'),
-    fromFlavours: number('from-flavours'),
-    to: text('to'),
-    toFlavours: number('to-flavours'),
-    loops: number('loops'),
-    threshold: list('threshold'),
-    scale: text('scale'),
-    coupling: text('coupling'),
-    massPower: text('mass-power'),
-    fromMass: text('from-mass'),
-    massOfScale: text('mass-of-scale'),
-    heavyInCoupling: flag('heavy-in-coupling'),
-    with: list('with'),
-    title: text('title'),
-    quantity: text('quantity'),
-    dimension: text('dimension'),
-    invented: flag('invented'),
-    published: flag('published'),
-    grid: text('grid'),
-    only: list('only'),
-    except: list('except'),
-    family: list('family'),
-    sort: text('sort'),
-    hide: number('hide'),
-    exact: text('exact'),
-    catalogue: flag('catalogue'),
-    csv: flag('csv'),
-    verdictRule: text('verdict-rule'),
-    by: text('by'),
-    variant: text('variant'),
-    prior: text('prior'),
-    byOrder: flag('by-order'),
-    order: number('order'),
-    flavours: number('flavours'),
-    digits: number('digits'),
-    output: text('output'),
-  };
-  return {
-    ...present(given),
-    json: values.get('json') === true,
-    quiet: values.get('quiet') === true,
-    noColor: values.get('no-color') === true,
-  };
-}
-
-type Present<T> = { [K in keyof T]?: Exclude<T[K], undefined> };
-
-/** Leaves out what was not given. */
-function present<T extends object>(object: T): Present<T> {
-  const kept: Present<T> = {};
-  for (const key in object) {
-    const value = object[key];
-    if (value !== undefined) Object.assign(kept, { [key]: value });
-  }
-  return kept;
+  const given: Given = { json: false, quiet: false, noColor: false };
+  return Object.assign(given, Object.fromEntries([...values].map(([name, value]) => [fieldOf(name), value])));
 }

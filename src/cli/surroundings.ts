@@ -1,7 +1,8 @@
 /** @module What a command sees of the outside world: streams, environment, terminal. Tests put their own in its place. */
 
 export interface Sink {
-  write(text: string): void;
+  /** Text, or the bytes of a picture. */
+  write(text: string | Uint8Array): void;
   readonly isTerminal: boolean;
   readonly columns?: number | undefined;
 }

@@ -27,14 +27,14 @@ export async function leastterm(argv: readonly string[], situation: Situation = 
   const surroundings: Surroundings = {
     stdout: {
       write: (text) => {
-        stdout += text;
+        stdout += typeof text === 'string' ? text : Buffer.from(text).toString('latin1');
       },
       isTerminal: situation.terminal !== undefined,
       columns: situation.terminal,
     },
     stderr: {
       write: (text) => {
-        stderr += text;
+        stderr += typeof text === 'string' ? text : Buffer.from(text).toString('latin1');
       },
       isTerminal: false,
     },
