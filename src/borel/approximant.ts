@@ -16,9 +16,9 @@ import type { PolePart } from './laplace.js';
 import { borelTransform } from './transform.js';
 
 /** Heuristics of the doublet test (see the header). */
-const DOUBLET_DISTANCE = 1e-2;
+export const DOUBLET_DISTANCE = 1e-2;
 const DOUBLET_SHARE = 1e-2;
-const NOISE_FACTOR = 1e3;
+export const NOISE_FACTOR = 1e3;
 /** Real poles on one side that count as a string mimicking a cut. */
 const STRING = 3;
 const ZERO_BITS = 64;

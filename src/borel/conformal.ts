@@ -12,9 +12,12 @@
  * Reference  S. Ciulli, J. Fischer, Nucl. Phys. 24 (1961) 465; A. H. Mueller (1992); I. Caprini, J. Fischer,
  *            arXiv:hep-ph/9811367, 1106.5336 (abstracts seen). Formulas re-derived.
  */
-import { ballField, C, cexp, clog, csqrt, R } from '../numerics/index.js';
+import { ballField, C, cexp, clog, csqrt, DoubleDouble as D, R } from '../numerics/index.js';
 import type { Ball, Complex, Exact } from '../numerics/index.js';
+import { amplification } from './partial.js';
 import { binomialSeries, composeSeries, multiplySeries, reciprocalSeries } from './power-series.js';
+import { quickReals } from './ray-quick.js';
+import type { Lossy, QuickComplex, QuickIntegrand } from './ray-quick.js';
 
 /** End of a cut: its distance from the origin and the exponent γ of the branch point there, when known. */
 export interface CutEnd {
@@ -149,4 +152,70 @@ function softeningFactors(
     factors.set('in w', cexp(C.add(inT, C.mulReal(half, both, prec), prec), prec));
   }
   return factors;
+}
+
+const Z = D.complex;
+/** What a logarithm, an exponential or a handful of products lose, in units of D.UNIT. */
+const FUNCTION_LOSS = 64;
+
+interface QuickCuts {
+  /** x/a and x/b. */
+  readonly slopes: readonly D.DoubleDouble[];
+  /** Exponents at the two ends, zero where unknown. */
+  readonly gammas: readonly D.DoubleDouble[];
+}
+
+function quickCuts(cuts: Cuts, x: Ball, prec: number): QuickCuts | undefined {
+  const { left, right } = inverses(cuts, prec);
+  const slopes = quickReals([R.mul(left, x, prec), R.mul(right, x, prec)]);
+  const gammas = quickReals([cuts.left, cuts.right].map((end) => end?.exponent?.ball(prec) ?? R.ZERO));
+  return slopes === undefined || gammas === undefined ? undefined : { slopes, gammas };
+}
+
+/** remappedValues at t = x s in double-double arithmetic: for each re-expansion with all coefficients and with `fewer` less. */
+export function remappedQuick(
+  list: readonly Remapped[],
+  cuts: Cuts,
+  x: Ball,
+  fewer: number,
+  prec: number,
+): QuickIntegrand | undefined {
+  const ends = quickCuts(cuts, x, prec);
+  const coefficients = list.map((r) => quickReals(r.coefficients));
+  if (ends === undefined || coefficients.some((c) => c === undefined)) return undefined;
+  const known = coefficients as D.DoubleDouble[][];
+  const [left, right] = ends.slopes;
+  const [first, second] = ends.gammas;
+  return (s) => {
+    const roots = [Z.sqrt(Z.add(Z.ONE, Z.mulReal(s, left!))), Z.sqrt(Z.sub(Z.ONE, Z.mulReal(s, right!)))] as const;
+    const sum = Z.add(roots[0], roots[1]);
+    const w = Z.div(Z.sub(roots[0], roots[1]), sum);
+    // Near w = 0 the difference of the roots cancels.
+    const loss = 32 + 32 / Math.max(Z.size(w), 1e-30);
+    const logs = roots.map(Z.log);
+    const inT = Z.mul2exp(Z.add(Z.mulReal(logs[0]!, first!), Z.mulReal(logs[1]!, second!)), 1);
+    const half = Z.mulReal(Z.log(Z.mul2exp(sum, -1)), D.mul2exp(D.add(first!, second!), 1));
+    const factors: Readonly<Record<Softening, QuickComplex>> = {
+      none: Z.ONE,
+      'in t': Z.exp(Z.neg(inT)),
+      'in w': Z.exp(Z.sub(half, inT)),
+    };
+    const gammas = Math.abs(first![0]) + Math.abs(second![0]);
+    return known.flatMap((c, i): Lossy[] => {
+      const factor = factors[list[i]!.softening];
+      const value = (count: number): Lossy => {
+        const used = c.slice(0, count);
+        const polynomial = Z.polynomial(used, w);
+        const size = Z.size(w);
+        const slope = used.reduceRight((acc, a, n) => acc * size + n * Math.abs(a[0]), 0);
+        const lost = (FUNCTION_LOSS + used.length * 4) * amplification(used, w, polynomial);
+        const moved = (loss * slope) / Math.max(Z.size(polynomial), 1e-300);
+        return {
+          value: Z.mul(polynomial, factor),
+          lost: lost + moved + FUNCTION_LOSS * (1 + gammas * (1 + Z.size(logs[0]!) + Z.size(logs[1]!))),
+        };
+      };
+      return [value(c.length), value(c.length - fewer)];
+    });
+  };
 }

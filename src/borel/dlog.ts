@@ -9,9 +9,11 @@
  * Bound      evaluation is in balls: it encloses the approximant.
  * Reference  G. A. Baker, Phys. Rev. 124 (1961) 768; D. Hunter, G. Baker, Phys. Rev. B 7 (1973) 3346 (from memory).
  */
-import { C, cexp, clog, padePoles, R, Rational } from '../numerics/index.js';
+import { C, cexp, clog, DoubleDouble as D, padePoles, R, Rational } from '../numerics/index.js';
 import type { Ball, Complex, Exact, Field } from '../numerics/index.js';
 import { onExact } from './exact-algorithm.js';
+import { quickComplexes, quickReals } from './ray-quick.js';
+import type { Lossy, QuickComplex } from './ray-quick.js';
 
 /** Taylor coefficients of B′/B: one fewer than of B. b_0 must not vanish. */
 export function logarithmicDerivative(b: readonly Exact[]): Exact[] {
@@ -86,4 +88,38 @@ function inversePower(x: Complex, n: number, prec: number): Complex {
   let power = C.ONE;
   for (let i = 0; i < n; i++) power = C.mul(power, x, prec);
   return C.inv(power, prec);
+}
+
+const Z = D.complex;
+/** What a logarithm, an exponential or a handful of products lose, in units of D.UNIT. */
+const FUNCTION_LOSS = 64;
+
+/** The approximant at t = x s in double-double arithmetic; undefined for multiple poles and parts known too badly. */
+export function dlogQuick(a: DlogApproximant, x: Ball, prec: number): ((s: QuickComplex) => Lossy) | undefined {
+  if (a.poles.some((p) => p.principal.length > 1)) return undefined;
+  const slopes = quickComplexes(a.poles.map((p) => C.mulReal(p.inverse, x, prec)));
+  // Exponents count absolutely: those of doublets next to nothing need no digits of their own.
+  const exponents = quickComplexes(
+    a.poles.map((p) => p.principal[0]!),
+    0,
+  );
+  // ∫ of the polynomial part, as a polynomial in s without its constant.
+  const integral = quickReals(
+    a.polynomial.map((c, k) => R.div(R.mul(c, R.powInt(x, k + 1, prec), prec), R.fromNumber(k + 1), prec)),
+  );
+  const head = quickReals([a.head.ball(prec)])?.[0];
+  if (slopes === undefined || exponents === undefined || integral === undefined || head === undefined) return undefined;
+  const sizes = exponents.map(Z.size);
+  return (s) => {
+    let exponent = Z.mul(Z.polynomial(integral, s), s);
+    let lost = FUNCTION_LOSS * (1 + Z.size(exponent));
+    for (let i = 0; i < slopes.length; i++) {
+      const step = Z.mul(s, slopes[i]!);
+      const ratio = Z.sub(Z.ONE, step);
+      const logarithm = Z.log(ratio);
+      exponent = Z.add(exponent, Z.mul(exponents[i]!, logarithm));
+      lost += sizes[i]! * (FUNCTION_LOSS * (1 + Z.size(logarithm)) + (4 * (1 + Z.size(step))) / Z.size(ratio));
+    }
+    return { value: Z.mulReal(Z.exp(exponent), head), lost };
+  };
 }

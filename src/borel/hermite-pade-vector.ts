@@ -1,12 +1,12 @@
 /**
  * @module The linear algebra of quadratic Hermite–Padé approximants: degrees, matrix, null vectors.
  *
- * Method     columns t^k, t^k f, t^k f² for the coefficients of P, Q, R; a null vector by exact elimination, or in balls with one
- *            component set to 1.
+ * Method     the rows t^{p+1} … t^{N−1} hold the coefficients of Q and R alone (columns t^k f, t^k f²): a null vector of these
+ *            by exact elimination, or in balls with one component set to 1. The first rows then give P.
  * Bound      exact, or enclosed.
  * Reference  G. A. Baker, P. Graves-Morris (1996) ch. 8 (from memory).
  */
-import { R, Rational, solveBall } from '../numerics/index.js';
+import { ballField, R, Rational, solveField } from '../numerics/index.js';
 import type { Ball, Field } from '../numerics/index.js';
 import { multiplySeries } from './power-series.js';
 
@@ -34,13 +34,27 @@ export function quadraticDegrees(count: number): Degrees[] {
   }
 }
 
-/** One column of the matrix for every coefficient of P, Q and R: rows t^0 … t^{rows−1}. */
+/** Polynomials P, Q, R by ascending coefficients. */
+export type Parts<T> = readonly [p: readonly T[], q: readonly T[], r: readonly T[]];
+
+/** The columns of Q and R in the rows t^{p+1} … t^{rows−1}. */
 export function columns<T>(field: Field<T>, f: readonly T[], [p, q, r]: Degrees, rows: number): T[][] {
   const square = multiplySeries(field, f, f, rows);
   const shifted = (s: readonly T[], by: number): T[] =>
-    Array.from({ length: rows }, (_, n) => (n < by ? field.zero : (s[n - by] ?? field.zero)));
+    Array.from({ length: rows - p - 1 }, (_, i) => {
+      const n = i + p + 1;
+      return n < by ? field.zero : (s[n - by] ?? field.zero);
+    });
   const block = (s: readonly T[], degree: number): T[][] => Array.from({ length: degree + 1 }, (_, k) => shifted(s, k));
-  return [...block([field.one], p), ...block(f, q), ...block(square, r)];
+  return [...block(f, q), ...block(square, r)];
+}
+
+/** P, Q, R from a null vector of the columns: P = −(Q f + R f²) through t^p. */
+export function partsOf<T>(field: Field<T>, f: readonly T[], [p, q]: Degrees, vector: readonly T[]): Parts<T> {
+  const middle = vector.slice(0, q + 1);
+  const last = vector.slice(q + 1);
+  const inner = multiplySeries(field, f, last, p + 1).map((c, n) => field.add(c, middle[n] ?? field.zero));
+  return [multiplySeries(field, f, inner, p + 1).map((c) => field.neg(c)), middle, last];
 }
 
 /** A non-zero exact null vector with as few trailing coefficients as possible, and the dimension of the null space. */
@@ -75,11 +89,13 @@ export function nullVectorExact(cols: readonly (readonly Rational[])[]): { vecto
 
 export function nullVectorBalls(cols: readonly (readonly Ball[])[], prec: number): Ball[] | undefined {
   const rows = cols[0]!.length;
+  // Plain elimination: the caller's spare bits pay for what it loses, which is less than a proved inverse costs.
+  const field = ballField(prec);
   // One component is set to 1; the first choice that leaves a regular system serves.
   for (let one = cols.length - 1; one >= 0; one--) {
     const others = cols.filter((_, j) => j !== one);
     const matrix = Array.from({ length: rows }, (_, i) => others.map((c) => c[i]!));
-    const solved = solveBall(matrix, cols[one]!.map(R.neg), prec);
+    const solved = solveField(field, matrix, cols[one]!.map(R.neg));
     if (solved !== undefined) return [...solved.slice(0, one), R.ONE, ...solved.slice(one)];
   }
   return undefined;

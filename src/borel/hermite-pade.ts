@@ -3,19 +3,21 @@
  *
  * Purpose    P + Q f + R f² = O(t^{p+q+r+2}): an approximant with square-root branch points of its own, so that a real series
  *            can have a complex sum on its cut.
- * Method     null vector of the N × (N+1) matrix [δ | f | f²], N = p+q+r+2, exactly for rational coefficients (and then with
- *            the smallest degrees when the null space is larger), else in balls.
+ * Method     null vector of the equations for Q and R (N = p+q+r+2 coefficients; P follows), exactly for rational coefficients
+ *            (and then with the smallest degrees when the null space is larger), else in balls.
  *            f = [−Q + √D]/(2R), D = Q² − 4PR, the branch fixed at the origin by √D(0) = 2R(0)f(0) + Q(0) and continued along
  *            straight lines from there by √D(t) = √D(0) Π √(1 − t/d_i), d_i the zeros of D.
  * Bound      evaluation is in balls: it encloses the approximant.
  * Reference  R. E. Shafer, SIAM J. Numer. Anal. 11 (1974) 447; G. A. Baker, P. Graves-Morris (1996) ch. 8 (from memory).
  */
-import { ballField, C, certifiedRoots, csqrt, R, Rational, rationalField } from '../numerics/index.js';
+import { ballField, C, certifiedRoots, csqrt, DoubleDouble, R, Rational, rationalField } from '../numerics/index.js';
 import type { Ball, CertifiedRoot, Complex, Exact } from '../numerics/index.js';
-import { columns, nullVectorBalls, nullVectorExact } from './hermite-pade-vector.js';
-import type { Degrees } from './hermite-pade-vector.js';
+import { columns, nullVectorBalls, nullVectorExact, partsOf } from './hermite-pade-vector.js';
+import type { Degrees, Parts } from './hermite-pade-vector.js';
 import { multiplySeries } from './power-series.js';
-import { polynomialValue } from './partial.js';
+import { amplification, polynomialValue } from './partial.js';
+import { quickComplexes, quickReals } from './ray-quick.js';
+import type { Lossy, QuickComplex } from './ray-quick.js';
 
 export interface QuadraticApproximant {
   readonly p: readonly Ball[];
@@ -60,13 +62,11 @@ export function quadraticApproximant(
   const used = f.slice(0, rows);
   const rationals = used.map((c) => c.rational).filter((x): x is Rational => x !== undefined);
   if (rationals.length === rows) {
-    if (rows <= EXACT_UP_TO) return exactly(rationals, degrees, rows, prec);
+    if (rows <= EXACT_UP_TO) return assemble(relation(rationals, degrees, rows), rationals[0]!, rows, prec);
     // A relation of low degree makes the null space of higher ones large: it is looked for first.
     for (const small of SMALL) {
-      const found = nullVectorExact(
-        columns(rationalField, rationals, small, small[0] + small[1] + small[2] + 2),
-      ).vector;
-      if (annihilates(found, small, rationals)) return assemble(split(found, small), rationals[0]!, rows, prec);
+      const found = relation(rationals, small, small[0] + small[1] + small[2] + 2);
+      if (annihilates(found, rationals)) return assemble(found, rationals[0]!, rows, prec);
     }
   }
   let work = prec + LOSS * rows;
@@ -75,33 +75,32 @@ export function quadraticApproximant(
     const vector = nullVectorBalls(columns(ballField(work), balls, degrees, rows), work);
     if (vector === undefined || !vector.every((v) => R.radiusBits(v) < R.upperBits(v) - prec || R.isExactZero(v)))
       continue;
-    return assembleBalls(split(vector, degrees), balls[0]!, rows, work);
+    return assembleBalls(partsOf(ballField(work), balls, degrees, vector), balls[0]!, rows, work);
   }
   return 'the null vector cannot be fixed: a relation of lower degree, or too little precision';
 }
 
-function exactly(f: readonly Rational[], degrees: Degrees, rows: number, prec: number): QuadraticApproximant | string {
-  const { vector } = nullVectorExact(columns(rationalField, f, degrees, rows));
-  return assemble(split(vector, degrees), f[0]!, rows, prec);
+/** P, Q, R that annihilate the first `rows` coefficients. */
+function relation(f: readonly Rational[], degrees: Degrees, rows: number): Parts<Rational> {
+  return partsOf(rationalField, f, degrees, nullVectorExact(columns(rationalField, f, degrees, rows)).vector);
 }
 
 /** Does P + Q f + R f² vanish to the order of all coefficients given? */
-function annihilates(vector: readonly Rational[], degrees: Degrees, f: readonly Rational[]): boolean {
-  const all = columns(rationalField, f, degrees, f.length);
-  return f.every((_, n) => all.reduce((s, column, k) => s.add(column[n]!.mul(vector[k]!)), Rational.ZERO).isZero());
-}
-
-function split<T>(vector: readonly T[], [p, q]: Degrees): [T[], T[], T[]] {
-  return [vector.slice(0, p + 1), vector.slice(p + 1, p + q + 2), vector.slice(p + q + 2)];
+function annihilates([p, q, r]: Parts<Rational>, f: readonly Rational[]): boolean {
+  const dot = (a: readonly Rational[], g: readonly Rational[], n: number): Rational =>
+    a.reduce((sum, c, k) => (k > n ? sum : sum.add(c.mul(g[n - k]!))), Rational.ZERO);
+  // f (Q + R f): one convolution with the whole of f, one with R.
+  const inner: Rational[] = [];
+  return f.every((_, n) => {
+    inner.push(dot(r, f, n).add(q[n] ?? Rational.ZERO));
+    return dot(inner, f, n)
+      .add(p[n] ?? Rational.ZERO)
+      .isZero();
+  });
 }
 
 /** Exact polynomials: the multiplicities of the zeros of the discriminant are then exact too. */
-function assemble(
-  parts: readonly [Rational[], Rational[], Rational[]],
-  f0: Rational,
-  used: number,
-  prec: number,
-): QuadraticApproximant | string {
+function assemble(parts: Parts<Rational>, f0: Rational, used: number, prec: number): QuadraticApproximant | string {
   const [p, q, r] = parts;
   const length = Math.max(2 * q.length, p.length + r.length);
   const four = Rational.of(4);
@@ -119,18 +118,13 @@ function assemble(
   return finished(ball(p), ball(q), ball(r), R.fromRational(f0, prec + SPARE), rest, prec + SPARE);
 }
 
-function trimmed(a: Rational[]): Rational[] {
+function trimmed(a: readonly Rational[]): readonly Rational[] {
   let n = a.length;
   while (n > 0 && a[n - 1]!.isZero()) n--;
   return a.slice(0, n);
 }
 
-function assembleBalls(
-  parts: readonly [Ball[], Ball[], Ball[]],
-  f0: Ball,
-  used: number,
-  prec: number,
-): QuadraticApproximant | string {
+function assembleBalls(parts: Parts<Ball>, f0: Ball, used: number, prec: number): QuadraticApproximant | string {
   const [p, q, r] = parts;
   const field = ballField(prec);
   const length = Math.max(2 * q.length - 1, p.length + r.length - 1);
@@ -189,4 +183,42 @@ export function quadraticPoles(a: QuadraticApproximant, bits: number): readonly 
     // √D = ±Q there: with the minus sign the branch is infinite. A double zero has both infinite.
     return C.upperBits(C.add(root, Q, bits)) <= C.upperBits(C.sub(root, Q, bits)) + TIE;
   });
+}
+
+const Z = DoubleDouble.complex;
+
+/** The approximant at t = x s in double-double arithmetic; undefined where its parts are known too badly for it. */
+export function quadraticQuick(
+  a: QuadraticApproximant,
+  x: Ball,
+  prec: number,
+): ((s: QuickComplex) => Lossy) | undefined {
+  const scaled = (p: readonly Ball[]): DoubleDouble.DoubleDouble[] | undefined =>
+    quickReals(p.map((c, k) => R.mul(c, R.powInt(x, k, prec), prec)));
+  const [p, q, r] = [scaled(a.p), scaled(a.q), scaled(a.r)];
+  const slopes = quickComplexes(a.branchPoints.map(({ value }) => C.mulReal(C.inv(value, prec), x, prec)));
+  const origin = quickReals([a.rootAtOrigin])?.[0];
+  if (p === undefined || q === undefined || r === undefined || slopes === undefined || origin === undefined)
+    return undefined;
+  return (s) => {
+    let root = Z.fromReal(origin);
+    let lost = 0;
+    slopes.forEach((slope, i) => {
+      const step = Z.mul(s, slope);
+      const ratio = Z.sub(Z.ONE, step);
+      const { multiplicity } = a.branchPoints[i]!;
+      lost += (4 * multiplicity * (1 + Z.size(step))) / Z.size(ratio) + 8;
+      if (multiplicity % 2 === 1) root = Z.mul(root, Z.sqrt(ratio));
+      for (let k = 0; k < Math.floor(multiplicity / 2); k++) root = Z.mul(root, ratio);
+    });
+    const Q = Z.polynomial(q, s);
+    const sum = Z.add(Q, root);
+    const difference = Z.sub(root, Q);
+    const first = Z.size(sum) >= Z.size(difference);
+    const other = Z.polynomial(first ? p : r, s);
+    const large = first ? sum : difference;
+    lost += 4 * (q.length * amplification(q, s, Q) + p.length * amplification(first ? p : r, s, other));
+    const value = first ? Z.div(Z.mul2exp(Z.neg(other), 1), large) : Z.div(large, Z.mul2exp(other, 1));
+    return { value, lost };
+  };
 }

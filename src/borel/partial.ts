@@ -6,10 +6,12 @@
  * Bound      evaluation is in balls: it encloses the approximant.
  * Reference  D. Boito, P. Masjuan, F. Oliani, arXiv:1807.01567 ("partial Padé"; memory).
  */
-import { C, cexp, clog, R } from '../numerics/index.js';
+import { C, cexp, clog, DoubleDouble as D, R } from '../numerics/index.js';
 import type { Ball, Complex, Exact, Field } from '../numerics/index.js';
 import { onExact } from './exact-algorithm.js';
 import { binomialSeries, multiplySeries } from './power-series.js';
+import { quickReals } from './ray-quick.js';
+import type { Lossy, QuickComplex } from './ray-quick.js';
 
 /** A factor (1 − t/t_i)^{−γ} of B. */
 export interface KnownFactor {
@@ -50,4 +52,56 @@ export function rationalValue(p: readonly Ball[], q: readonly Ball[], t: Complex
 /** Σ p_k t^k by Horner's rule. */
 export function polynomialValue(p: readonly Ball[], t: Complex, prec: number): Complex {
   return p.reduceRight<Complex>((acc, c) => C.add(C.mul(acc, t, prec), C.fromReal(c), prec), C.ZERO);
+}
+
+const Z = D.complex;
+/** What a logarithm, an exponential or a handful of products lose, in units of D.UNIT. */
+const FUNCTION_LOSS = 64;
+
+/** factorValue at t = x s in double-double arithmetic. */
+export function factorQuick(
+  factors: readonly KnownFactor[],
+  x: Ball,
+  prec: number,
+): ((s: QuickComplex) => Lossy) | undefined {
+  const slopes = quickReals(factors.map((f) => R.div(x, f.t.ball(prec), prec)));
+  const exponents = quickReals(factors.map((f) => f.exponent.ball(prec)));
+  if (slopes === undefined || exponents === undefined) return undefined;
+  return (s) => {
+    let exponent = Z.ZERO;
+    let lost = FUNCTION_LOSS;
+    for (let i = 0; i < slopes.length; i++) {
+      const step = Z.mulReal(s, slopes[i]!);
+      const ratio = Z.sub(Z.ONE, step);
+      const logarithm = Z.log(ratio);
+      exponent = Z.sub(exponent, Z.mulReal(logarithm, exponents[i]!));
+      const weight = Math.abs(exponents[i]![0]);
+      lost += weight * (FUNCTION_LOSS * (1 + Z.size(logarithm)) + (4 * (1 + Z.size(step))) / Z.size(ratio));
+    }
+    return { value: Z.exp(exponent), lost };
+  };
+}
+
+/** p(x s)/q(x s) in double-double arithmetic. */
+export function rationalQuick(
+  p: readonly Ball[],
+  q: readonly Ball[],
+  x: Ball,
+  prec: number,
+): ((s: QuickComplex) => Lossy) | undefined {
+  const scaled = (c: readonly Ball[]): D.DoubleDouble[] | undefined =>
+    quickReals(c.map((a, k) => R.mul(a, R.powInt(x, k, prec), prec)));
+  const [top, below] = [scaled(p), scaled(q)];
+  if (top === undefined || below === undefined) return undefined;
+  return (s) => {
+    const [above, under] = [Z.polynomial(top, s), Z.polynomial(below, s)];
+    const lost = 4 * (p.length * amplification(top, s, above) + q.length * amplification(below, s, under)) + 8;
+    return { value: Z.div(above, under), lost };
+  };
+}
+
+/** |p|(|t|)/|p(t)|: how much larger the terms of a polynomial are than its value. */
+export function amplification(p: readonly D.DoubleDouble[], t: QuickComplex, value: QuickComplex): number {
+  const r = Z.size(t);
+  return p.reduceRight((acc, c) => acc * r + Math.abs(c[0]), 0) / Z.size(value);
 }

@@ -7,6 +7,7 @@
  *            two differences d₁, d₂ of successive levels fix C and q, and the newest level is off by about d₂³/d₁².
  *            Where the imaginary part is small (the first singularity is far, ω = t* / x ≫ 1) it is computed from a ray that
  *            starts at a point p < ω of the axis: ∫_0^p is real and drops out, and e^{−p} is a factor.
+ *            Up to 24 digits the nodes are summed in double-double arithmetic (ray-quick.ts), a tenth of the cost of balls.
  * Bound      none that is proved: the radius is SAFETY times the larger of d₂³/d₁² and d₂²/|I| (or d₂ itself, where that is
  *            small enough), plus the rounding errors. Such digits are converged, not certified.
  * Reference  M. Mori, M. Sugihara, J. Comput. Appl. Math. 127 (2001) 287 (from memory).
@@ -14,23 +15,18 @@
 import { C, exp, R } from '../numerics/index.js';
 import type { Ball, Complex } from '../numerics/index.js';
 import type { LaplaceSum } from './laplace.js';
-import { AXIS, rayNodes, RAYS, stepsFor } from './ray-nodes.js';
+import { quadratureBits, refine, sweep } from './ray-levels.js';
+import type { Level } from './ray-levels.js';
+import { AXIS, rayNodes, RAYS } from './ray-nodes.js';
 import type { Ray } from './ray-nodes.js';
+import { quickIntegral } from './ray-quick.js';
+import type { QuickIntegrand } from './ray-quick.js';
 
 /** Values of the Borel transforms at t = x s, several at once because they share work. */
 export type RayIntegrand = (s: Complex, prec: number) => readonly Complex[];
 
 /** Digits of an imaginary part that is computed apart. */
 const IMAGINARY_DIGITS = 12;
-/** Refinements of the step after the first level. */
-const LEVELS = 6;
-/** Bits added to the estimated error of a level. Heuristic. */
-const SAFETY = 10;
-/** Nodes in a row that must be negligible before a side of the sum ends. */
-const QUIET = 3;
-/** |v| beyond which no node is used: r = e^{−50} or e^{12}. */
-const LOW = -6;
-const HIGH = 12;
 /** Spare bits of the working precision. */
 const SPARE = 24;
 /** Share of the angle to the next singularity above, and multiple of the one below, that a ray must respect. Heuristic. */
@@ -62,53 +58,32 @@ export function chooseRay(args: readonly number[], liftUpTo = 0): RayChoice | un
   return choices.find((c) => c.lifted === 0) ?? choices[0];
 }
 
-/** One level of the trapezoidal sum over the nodes j/steps, j odd only when `odd`; undefined when it does not converge. */
-function level(
-  f: RayIntegrand,
-  ray: Ray,
-  origin: Ball,
-  steps: number,
-  odd: boolean,
-  prec: number,
-): readonly Complex[] | undefined {
+/** One level of the trapezoidal sum in balls; undefined when it does not converge. */
+function ballLevel(f: RayIntegrand, ray: Ray, origin: Ball, prec: number): Level {
   const nodes = rayNodes(ray, prec);
-  let sums: Complex[] = [];
-  let largest: number[] = [];
-  const add = (j: number): 'negligible' | 'counts' | 'fails' => {
-    const { s, weight } = nodes.at(j, steps);
-    const values = f(R.isExactZero(origin) ? s : { re: R.add(s.re, origin, prec), im: s.im }, prec);
-    if (sums.length === 0) {
-      sums = values.map(() => C.ZERO);
-      largest = values.map(() => -Infinity);
-    }
-    let quiet = true;
-    for (let i = 0; i < values.length; i++) {
-      const term = C.mul(values[i]!, weight, prec);
-      const size = C.upperBits(term);
-      if (!(size < Infinity)) return 'fails';
-      sums[i] = C.add(sums[i]!, term, prec);
-      largest[i] = Math.max(largest[i]!, size);
-      if (size > largest[i]! - prec) quiet = false;
-    }
-    return quiet ? 'negligible' : 'counts';
-  };
-  const first = odd ? 1 : 0;
-  const stride = odd ? 2 : 1;
-  for (const direction of [1, -1]) {
-    const start = direction === 1 ? first : first - stride;
-    let silent = 0;
-    for (let j = start; silent < QUIET; j += direction * stride) {
-      const v = j / steps;
-      if (v > HIGH || v < LOW) {
-        if (direction === 1) return undefined;
-        break;
+  return (steps, odd) => {
+    let sums: Complex[] = [];
+    let largest: number[] = [];
+    const visit = (j: number): 'negligible' | 'counts' | 'fails' => {
+      const { s, weight } = nodes.at(j, steps);
+      const values = f(R.isExactZero(origin) ? s : { re: R.add(s.re, origin, prec), im: s.im }, prec);
+      if (sums.length === 0) {
+        sums = values.map(() => C.ZERO);
+        largest = values.map(() => -Infinity);
       }
-      const outcome = add(j);
-      if (outcome === 'fails') return undefined;
-      silent = outcome === 'negligible' ? silent + 1 : 0;
-    }
-  }
-  return sums;
+      let quiet = true;
+      for (let i = 0; i < values.length; i++) {
+        const term = C.mul(values[i]!, weight, prec);
+        const size = C.upperBits(term);
+        if (!(size < Infinity)) return 'fails';
+        sums[i] = C.add(sums[i]!, term, prec);
+        largest[i] = Math.max(largest[i]!, size);
+        if (size > largest[i]! - prec) quiet = false;
+      }
+      return quiet ? 'negligible' : 'counts';
+    };
+    return sweep(visit, steps, odd) ? sums : undefined;
+  };
 }
 
 /**
@@ -121,42 +96,9 @@ export function rayIntegral(
   digits: number,
   origin: Ball = R.ZERO,
 ): readonly Complex[] | undefined {
-  const bits = digits * 3.33;
+  const bits = quadratureBits(digits);
   const prec = 32 * Math.ceil((bits + SPARE) / 32);
-  let steps = Math.max(2, Math.ceil(stepsFor(ray, bits) / 4));
-  let raw = level(f, ray, origin, steps, false, prec);
-  if (raw === undefined) return undefined;
-  let current = raw.map((sum) => overSteps(sum, steps, prec));
-  let before = current.map(() => Infinity);
-  for (let refinement = 0; refinement < LEVELS; refinement++) {
-    const between = level(f, ray, origin, 2 * steps, true, prec);
-    if (between === undefined) return undefined;
-    steps *= 2;
-    raw = raw.map((sum, i) => C.add(sum, between[i]!, prec));
-    const next = raw.map((sum) => overSteps(sum, steps, prec));
-    const differences = next.map((value, i) => C.upperBits(C.exactMid(C.sub(value, current[i]!, prec))));
-    const settled = next.map((value, i) => withError(value, errorBits(value, before[i]!, differences[i]!, bits)));
-    if (settled.every((value) => C.accuracyBits(value) >= bits)) return settled;
-    current = next;
-    before = differences;
-  }
-  return undefined;
-}
-
-const overSteps = (sum: Complex, steps: number, prec: number): Complex =>
-  C.mulReal(sum, R.div(R.ONE, R.fromNumber(steps), prec), prec);
-
-/** log2 of the error of the newest level from the last two differences (as exponents of two), see the header. */
-function errorBits(value: Complex, first: number, second: number, wanted: number): number {
-  const size = C.upperBits(value);
-  if (second === -Infinity || size - second > wanted + 1 || !(second < first)) return second;
-  return Math.min(second, SAFETY + Math.max(3 * second - 2 * first, 2 * second - size));
-}
-
-function withError(value: Complex, bits: number): Complex {
-  if (bits === -Infinity) return value;
-  if (!(bits < Infinity)) return C.INDETERMINATE;
-  return { re: R.addError(value.re, 1, Math.ceil(bits)), im: R.addError(value.im, 1, Math.ceil(bits)) };
+  return refine(ballLevel(f, ray, origin, prec), ray, bits, prec);
 }
 
 /** How the contour runs. */
@@ -169,9 +111,21 @@ export interface Contour {
 /** The positive axis, for transforms without singularities near it. */
 export const STRAIGHT: Contour = { ray: AXIS };
 
+/** What is integrated: in balls, and where it can be had in double-double arithmetic too. */
+export interface Integrand {
+  readonly balls: RayIntegrand;
+  readonly quick?: QuickIntegrand;
+}
+
+/** By the quick way while it has the digits, else in balls. */
+function integral(f: Integrand, ray: Ray, digits: number, origin: Ball = R.ZERO): readonly Complex[] | undefined {
+  const quick = f.quick === undefined ? undefined : quickIntegral(f.quick, ray, digits, origin);
+  return quick ?? rayIntegral(f.balls, ray, digits, origin);
+}
+
 /** Lateral sums of several Borel transforms with one contour; undefined when the levels do not settle. */
-export function lateralSums(f: RayIntegrand, contour: Contour, digits: number): readonly LaplaceSum[] | undefined {
-  const direct = rayIntegral(f, contour.ray, digits);
+export function lateralSums(f: Integrand, contour: Contour, digits: number): readonly LaplaceSum[] | undefined {
+  const direct = integral(f, contour.ray, digits);
   if (direct === undefined) return undefined;
   if (contour.first === undefined) return direct.map((v) => ({ pv: v.re, im: R.ZERO }));
   const sharp = direct.every((v) => R.accuracyBits(v.im) >= IMAGINARY_DIGITS * 3.33);
@@ -181,9 +135,9 @@ export function lateralSums(f: RayIntegrand, contour: Contour, digits: number): 
 }
 
 /** Imaginary parts from a ray that leaves the axis shortly before the first singularity. */
-function imaginaryParts(f: RayIntegrand, ray: Ray, first: number): readonly Ball[] | undefined {
+function imaginaryParts(f: Integrand, ray: Ray, first: number): readonly Ball[] | undefined {
   const p = R.fromNumber(Math.max(first / 2, first - 1));
-  const found = rayIntegral(f, ray, IMAGINARY_DIGITS, p);
+  const found = integral(f, ray, IMAGINARY_DIGITS, p);
   const decay = exp(R.neg(p), 64);
   return found?.map((v) => R.mul(decay, v.im, 64));
 }

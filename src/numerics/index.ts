@@ -24,6 +24,7 @@ export { pi, ln2, eulerGamma } from './ball/constants.js';
 export { exp, expm1, sinh, cosh, log, log1p, sinCos, sinCosPi, atan, atan2, pow } from './ball/elementary.js';
 export type { SinCos } from './ball/elementary.js';
 export { cexp, clog, cpow, csqrt, arg } from './ball/complex-elementary.js';
+export * as DoubleDouble from './double-double/index.js';
 export { bernoulli } from './special/bernoulli.js';
 export { zeta } from './special/zeta.js';
 export { gamma, rgamma } from './special/gamma.js';

@@ -8,13 +8,13 @@
  */
 import { C, R, toNumberExact } from '../numerics/index.js';
 import type { Complex } from '../numerics/index.js';
-import { borelTransform, dlogApproximant, dlogValue } from '../borel/index.js';
+import { borelTransform, dlogApproximant, dlogQuick, dlogValue } from '../borel/index.js';
 import type { DlogApproximant, DlogPole } from '../borel/index.js';
 import type { Growth } from '../growth/index.js';
 import type { Expansion } from '../series/index.js';
 import { cleanPart, growthObjection, inputObjection } from './eligibility.js';
 import type { Outcome, Prescription } from './prescription.js';
-import type { Attempt } from './ray-family.js';
+import type { Attempt, Offer } from './ray-family.js';
 import { nearestDistance, rayFamily } from './ray-family.js';
 
 /** Most coefficients used. Heuristic: cost. */
@@ -76,20 +76,25 @@ function notesOf(a: DlogApproximant): string[] {
   return a.deficiency > 0 ? [...notes, 'degenerate block: a product of powers as far as the coefficients show'] : notes;
 }
 
-function build(e: Expansion, growth: Growth, bits: number): readonly Attempt[] {
+function build(e: Expansion, growth: Growth, bits: number): readonly Offer[] {
   const b = borelTransform(e.coefficients);
-  return places(b.length).map(([L, M]): Attempt => {
+  return places(b.length).map(([L, M]): Offer => {
     const label = `[${L}/${M}]`;
-    const a = dlogApproximant(b, L, M, bits);
-    if (typeof a === 'string') return { label, reason: a };
-    const doubt = suspicion(e, growth, a);
-    return {
-      label,
-      singular: a.poles.map((p): Complex => p.z),
-      value: (s, prec) => dlogValue(a, C.mulReal(s, e.x.ball(prec), prec), prec),
-      notes: notesOf(a),
-      ...(doubt === undefined ? {} : { suspicion: doubt }),
+    const make = (): Attempt => {
+      const a = dlogApproximant(b, L, M, bits);
+      if (typeof a === 'string') return { label, reason: a };
+      const doubt = suspicion(e, growth, a);
+      const quick = dlogQuick(a, e.x.ball(bits), bits);
+      return {
+        label,
+        singular: a.poles.map((p): Complex => p.z),
+        value: (s, prec) => dlogValue(a, C.mulReal(s, e.x.ball(prec), prec), prec),
+        ...(quick === undefined ? {} : { quick }),
+        notes: notesOf(a),
+        ...(doubt === undefined ? {} : { suspicion: doubt }),
+      };
     };
+    return { label, make };
   });
 }
 

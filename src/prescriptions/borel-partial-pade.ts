@@ -5,24 +5,26 @@
  * diagonal; B = Π (1 − t/t_i)^{−γ_i} [L/M]_P along a rotated ray. Truncation error: neighbours and order before.
  * Reference: D. Boito, P. Masjuan, F. Oliani, arXiv:1807.01567 (memory).
  */
-import { C, signExact, toNumberExact } from '../numerics/index.js';
+import { C, DoubleDouble, signExact, toNumberExact } from '../numerics/index.js';
 import type { Complex } from '../numerics/index.js';
 import {
   approximateTransformed,
   borelTransform,
+  factorQuick,
   factorValue,
   nearDiagonal,
   padeOf,
+  rationalQuick,
   rationalValue,
   withoutFactors,
 } from '../borel/index.js';
-import type { KnownFactor, RatedPole } from '../borel/index.js';
+import type { KnownFactor, Lossy, QuickComplex, RatedPole } from '../borel/index.js';
 import type { Growth } from '../growth/index.js';
 import type { Expansion } from '../series/index.js';
 import { cleanPart, growthObjection, inputObjection } from './eligibility.js';
 import type { Outcome, Prescription } from './prescription.js';
 import { refusal } from './prescription.js';
-import type { Attempt } from './ray-family.js';
+import type { Attempt, Offer } from './ray-family.js';
 import { nearestDistance, rayFamily } from './ray-family.js';
 
 /** Most coefficients used. Heuristic: cost. */
@@ -47,44 +49,75 @@ export function knownFactors(e: Expansion): readonly KnownFactor[] {
   });
 }
 
-function suspicion(e: Expansion, growth: Growth, poles: readonly RatedPole[]): string | undefined {
+/** Poles of the rest nearer to the origin than this are where none may be; undefined when no position is known. */
+export function innermostRest(e: Expansion, growth: Growth): number | undefined {
   const nearest = nearestDistance(e, growth.nearest);
+  return nearest === undefined ? undefined : INSIDE * nearest;
+}
+
+function suspicion(e: Expansion, growth: Growth, poles: readonly RatedPole[]): string | undefined {
+  const innermost = innermostRest(e, growth);
   const inside =
-    nearest === undefined ? undefined : poles.find((p) => p.role !== 'noise doublet' && p.modulus < INSIDE * nearest);
+    innermost === undefined ? undefined : poles.find((p) => p.role !== 'noise doublet' && p.modulus < innermost);
   return inside === undefined
     ? undefined
     : `a pole at |t| = ${inside.modulus.toPrecision(3)} lies where no singularity is expected`;
 }
 
-function build(e: Expansion, growth: Growth, factors: readonly KnownFactor[], bits: number): readonly Attempt[] {
-  const rest = withoutFactors(borelTransform(e.coefficients), factors);
-  // The factor is the same for every entry and the ray hands out the same points: it is computed once for each.
-  const memory = new WeakMap<Complex, Complex>();
-  const factorAt = (s: Complex, prec: number): Complex => {
+/** f with its last values by argument kept: every entry has the same factor, and the ray hands out the same points. */
+function remembered<S extends object, T>(f: (s: S) => T): (s: S) => T {
+  const memory = new WeakMap<S, T>();
+  return (s) => {
     const known = memory.get(s);
     if (known !== undefined) return known;
-    const value = factorValue(factors, C.mulReal(s, e.x.ball(prec), prec), prec);
+    const value = f(s);
     memory.set(s, value);
     return value;
   };
+}
+
+const Z = DoubleDouble.complex;
+
+/** Product of two values, with what both have lost. */
+const product = (a: Lossy, b: Lossy): Lossy => ({ value: Z.mul(a.value, b.value), lost: a.lost + b.lost });
+
+function build(e: Expansion, growth: Growth, factors: readonly KnownFactor[], bits: number): readonly Offer[] {
+  const rest = withoutFactors(borelTransform(e.coefficients), factors);
+  const x = e.x.ball(bits);
+  const factorAt = new Map<number, (s: Complex) => Complex>();
+  const factor = (prec: number): ((s: Complex) => Complex) => {
+    const made =
+      factorAt.get(prec) ?? remembered((s: Complex) => factorValue(factors, C.mulReal(s, e.x.ball(prec), prec), prec));
+    factorAt.set(prec, made);
+    return made;
+  };
+  const quickFactor = factorQuick(factors, x, bits);
+  const quickAt = quickFactor && remembered((s: QuickComplex) => quickFactor(s));
   const N = rest.length;
-  return nearDiagonal(N - 1, N > LONG ? 1 : 2).map(([L, M]): Attempt => {
+  return nearDiagonal(N - 1, N > LONG ? 1 : 2).map(([L, M]): Offer => {
     const label = `[${L}/${M}]`;
-    const poles = approximateTransformed(rest, L, M, POLE_BITS, Math.max(0, ...e.relativeErrors));
-    if (poles.exists !== true) return { label, reason: poles.reason ?? 'the entry does not exist' };
-    const entry = padeOf(rest, L, M, bits + PADE_LOSS * M);
-    if (entry.exists !== true) return { label, reason: entry.reason };
-    const doubt = suspicion(e, growth, poles.poles);
-    return {
-      label,
-      singular: [...poles.poles.map((p) => p.z), ...factors.map((f) => C.fromReal(f.t.ball(POLE_BITS)))],
-      value: (s, prec) => {
-        const t = C.mulReal(s, e.x.ball(prec), prec);
-        return C.mul(factorAt(s, prec), rationalValue(entry.numerator, entry.denominator, t, prec), prec);
-      },
-      notes: poles.deficiency > 0 ? ['degenerate block: exact as far as the coefficients show'] : [],
-      ...(doubt === undefined ? {} : { suspicion: doubt }),
+    const make = (): Attempt => {
+      const poles = approximateTransformed(rest, L, M, POLE_BITS, Math.max(0, ...e.relativeErrors));
+      if (poles.exists !== true) return { label, reason: poles.reason ?? 'the entry does not exist' };
+      const entry = padeOf(rest, L, M, bits + PADE_LOSS * M);
+      if (entry.exists !== true) return { label, reason: entry.reason };
+      const doubt = suspicion(e, growth, poles.poles);
+      const quickRest = rationalQuick(entry.numerator, entry.denominator, x, bits);
+      return {
+        label,
+        singular: [...poles.poles.map((p) => p.z), ...factors.map((f) => C.fromReal(f.t.ball(POLE_BITS)))],
+        value: (s, prec) => {
+          const t = C.mulReal(s, e.x.ball(prec), prec);
+          return C.mul(factor(prec)(s), rationalValue(entry.numerator, entry.denominator, t, prec), prec);
+        },
+        ...(quickAt === undefined || quickRest === undefined
+          ? {}
+          : { quick: (s: QuickComplex) => product(quickAt(s), quickRest(s)) }),
+        notes: poles.deficiency > 0 ? ['degenerate block: exact as far as the coefficients show'] : [],
+        ...(doubt === undefined ? {} : { suspicion: doubt }),
+      };
     };
+    return { label, make };
   });
 }
 

@@ -12,13 +12,14 @@ import {
   quadraticApproximant,
   quadraticDegrees,
   quadraticPoles,
+  quadraticQuick,
   quadraticValue,
 } from '../borel/index.js';
 import type { Growth } from '../growth/index.js';
 import type { Expansion } from '../series/index.js';
 import { cleanPart, growthObjection, inputObjection } from './eligibility.js';
 import type { Outcome, Prescription } from './prescription.js';
-import type { Attempt } from './ray-family.js';
+import type { Attempt, Offer } from './ray-family.js';
 import { nearestDistance, rayFamily } from './ray-family.js';
 
 /** Most coefficients used. Heuristic: cost of the null vector. */
@@ -30,27 +31,34 @@ const TWINS = 1e-3;
 /** Bits that decide which zeros of R are poles. */
 const POLE_BITS = 96;
 
-function build(e: Expansion, growth: Growth, bits: number): readonly Attempt[] {
+function build(e: Expansion, growth: Growth, bits: number): readonly Offer[] {
   const b = borelTransform(e.coefficients);
   const nearest = nearestDistance(e, growth.nearest);
-  return quadraticDegrees(b.length).map((degrees): Attempt => {
+  return quadraticDegrees(b.length).map((degrees): Offer => {
     const label = `[${degrees.join(',')}]`;
-    const a = quadraticApproximant(b, degrees, bits);
-    if (typeof a === 'string') return { label, reason: a };
-    const all = a.branchPoints.filter((p) => p.multiplicity % 2 === 1).map((p) => p.value);
-    const branchPoints = all.filter((z, i) => !all.some((other, j) => j !== i && isTwin(z, other)));
-    const singular: readonly Complex[] = [...branchPoints, ...quadraticPoles(a, POLE_BITS).map((p) => p.value)];
-    const inside = singular.map(modulus).find((m) => nearest !== undefined && m < INSIDE * nearest);
-    return {
-      label,
-      singular,
-      value: (s, prec) => quadraticValue(a, C.mulReal(s, e.x.ball(prec), prec), prec),
-      notes:
-        branchPoints.length < all.length ? ['branch points that lie on top of each other cancel and are ignored'] : [],
-      ...(inside === undefined
-        ? {}
-        : { suspicion: `a singularity at |t| = ${inside.toPrecision(3)} lies where none is expected` }),
+    const make = (): Attempt => {
+      const a = quadraticApproximant(b, degrees, bits);
+      if (typeof a === 'string') return { label, reason: a };
+      const all = a.branchPoints.filter((p) => p.multiplicity % 2 === 1).map((p) => p.value);
+      const branchPoints = all.filter((z, i) => !all.some((other, j) => j !== i && isTwin(z, other)));
+      const singular: readonly Complex[] = [...branchPoints, ...quadraticPoles(a, POLE_BITS).map((p) => p.value)];
+      const inside = singular.map(modulus).find((m) => nearest !== undefined && m < INSIDE * nearest);
+      const quick = quadraticQuick(a, e.x.ball(bits), bits);
+      return {
+        label,
+        singular,
+        value: (s, prec) => quadraticValue(a, C.mulReal(s, e.x.ball(prec), prec), prec),
+        ...(quick === undefined ? {} : { quick }),
+        notes:
+          branchPoints.length < all.length
+            ? ['branch points that lie on top of each other cancel and are ignored']
+            : [],
+        ...(inside === undefined
+          ? {}
+          : { suspicion: `a singularity at |t| = ${inside.toPrecision(3)} lies where none is expected` }),
+      };
     };
+    return { label, make };
   });
 }
 

@@ -7,8 +7,8 @@
  * References: I. Caprini, J. Fischer, arXiv:hep-ph/9811367; arXiv:1106.5336 (abstracts seen); S. Ciulli, J. Fischer (1961).
  */
 import { C, isZeroExact, R, signExact, toNumberExact } from '../numerics/index.js';
-import type { Ball } from '../numerics/index.js';
-import { borelTransform, lateralSums, RAYS, remap, remappedValues, STRAIGHT } from '../borel/index.js';
+import type { Ball, Complex } from '../numerics/index.js';
+import { borelTransform, lateralSums, RAYS, remap, remappedQuick, remappedValues, STRAIGHT } from '../borel/index.js';
 import type { Contour, CutEnd, Cuts, LaplaceSum, Softening } from '../borel/index.js';
 import type { Growth } from '../growth/index.js';
 import type { Expansion } from '../series/index.js';
@@ -29,13 +29,13 @@ interface Member {
   readonly shorter: LaplaceSum;
 }
 
-const label = (cuts: Cuts, softening: Softening): string => {
+export const memberLabel = (cuts: Cuts, softening: Softening): string => {
   const count = cuts.left !== undefined && cuts.right !== undefined ? 'two cuts' : 'one cut';
   return softening === 'none' ? `${count}, not softened` : `${count}, softened ${softening}`;
 };
 
 /** First stated singularity on each axis. */
-function cutsOf(e: Expansion): Cuts {
+export function cutsOf(e: Expansion): Cuts {
   const end = (side: 1 | -1): CutEnd | undefined => {
     const s = e.stated.find((p) => signExact(p.t) === side);
     if (s === undefined) return undefined;
@@ -90,15 +90,10 @@ function evaluate(e: Expansion, cuts: Cuts, softenings: readonly Softening[], di
     cuts.right === undefined
       ? STRAIGHT
       : { ray: RAYS[0]!, first: toNumberExact(cuts.right.distance) / toNumberExact(e.x) };
-  const found = lateralSums(
-    (s, p) =>
-      remappedValues(list, cuts, C.mulReal(s, e.x.ball(p), p), p, fewer).flatMap(({ full, shorter }) => [
-        full,
-        shorter,
-      ]),
-    contour,
-    digits,
-  );
+  const quick = remappedQuick(list, cuts, e.x.ball(prec), fewer, prec);
+  const balls = (s: Complex, p: number): readonly Complex[] =>
+    remappedValues(list, cuts, C.mulReal(s, e.x.ball(p), p), p, fewer).flatMap(({ full, shorter }) => [full, shorter]);
+  const found = lateralSums({ balls, ...(quick === undefined ? {} : { quick }) }, contour, digits);
   return found && softenings.map((softening, i) => ({ softening, full: found[2 * i]!, shorter: found[2 * i + 1]! }));
 }
 
@@ -113,14 +108,14 @@ function truncationOf(e: Expansion, member: Member, all: readonly Member[]): num
 function sums(e: Expansion, cuts: Cuts, request: Request): readonly Outcome[] {
   const anyExponent = cuts.left?.exponent !== undefined || cuts.right?.exponent !== undefined;
   const offered: readonly Softening[] = anyExponent ? ['in w', 'in t', 'none'] : ['none'];
-  const wanted = request.only === undefined ? offered : offered.filter((s) => label(cuts, s) === request.only);
+  const wanted = request.only === undefined ? offered : offered.filter((s) => memberLabel(cuts, s) === request.only);
   if (wanted.length === 0)
     return [refusal(request.only ?? 'mapped plane', 'not a member of the family', 'choose another')];
   const members = evaluate(e, cuts, wanted, request.digits);
   if (members === undefined)
     return [
       refusal(
-        label(cuts, wanted[0]!),
+        memberLabel(cuts, wanted[0]!),
         'the integral along the rotated ray does not settle',
         'take a smaller coupling or fewer digits',
       ),
@@ -131,7 +126,7 @@ function sums(e: Expansion, cuts: Cuts, request: Request): readonly Outcome[] {
     const truncation = request.only === undefined ? truncationOf(e, member, members) : undefined;
     return {
       kind: 'sum',
-      variant: label(cuts, member.softening),
+      variant: memberLabel(cuts, member.softening),
       value,
       imaginary: scaled(e, member.full.im, prec),
       ...(truncation === undefined ? {} : { truncation }),

@@ -62,6 +62,10 @@ export function growthObjection(growth: Growth, variant: string): Refusal | unde
   }
 }
 
+/** Does the diagnosis of the terms confirm a complex pair? Then its poles are real physics and no contour is lifted over them. */
+export const pairConfirmed = (growth: Growth): boolean =>
+  growth.nearest?.kind === 'complex pair' || growth.signPattern === 'quasi-periodic';
+
 /**
  * How many leading terms stand before a strictly alternating rest: 0 or 1 (a first term may be the free value that the
  * corrections alternate around); undefined when the signs do not alternate.

@@ -43,6 +43,8 @@ export type Outcome = Sum | Refusal;
 export interface Request {
   /** Certified decimal digits wanted of each value. */
   readonly digits: number;
+  /** Only the family's own choice is wanted, with its error: its neighbours need no digits of their own, nor be returned. */
+  readonly central?: boolean;
   /** Evaluate only this member, without its error estimate: used when inputs are varied. */
   readonly only?: string;
   /** Strong-coupling behaviour F ~ x^power [1 + O(x^−spacing)], for the methods that build it in. */

@@ -10,10 +10,10 @@
 import { C, R } from '../numerics/index.js';
 import type { Ball, Complex } from '../numerics/index.js';
 import { chooseRay, lateralSums, NEAR_AXIS_ANGLE, STRAIGHT } from '../borel/index.js';
-import type { Contour, LaplaceSum } from '../borel/index.js';
+import type { Contour, LaplaceSum, Lossy, QuickComplex } from '../borel/index.js';
 import type { Growth } from '../growth/index.js';
 import type { Expansion } from '../series/index.js';
-import { trustOf } from './eligibility.js';
+import { pairConfirmed, trustOf } from './eligibility.js';
 import { combineErrors } from './neighbours.js';
 import type { Outcome, Request } from './prescription.js';
 import { dressed, refusal, scaled } from './prescription.js';
@@ -25,6 +25,8 @@ export interface Candidate {
   readonly singular: readonly Complex[];
   /** Value of the approximated Borel transform at t = x s. */
   readonly value: (s: Complex, prec: number) => Complex;
+  /** The same in double-double arithmetic, where its parts are known well enough. */
+  readonly quick?: (s: QuickComplex) => Lossy;
   readonly notes: readonly string[];
   /** Why the approximant may not be believed. */
   readonly suspicion?: string;
@@ -32,16 +34,22 @@ export interface Candidate {
 
 export type Attempt = Candidate | { readonly label: string; readonly reason: string };
 
+/** A member by its label, made only when it is wanted. */
+export interface Offer {
+  readonly label: string;
+  readonly make: () => Attempt;
+}
+
 /** Candidates of an expansion, known to `bits` bits, best first. */
-export type Build = (e: Expansion, bits: number) => readonly Attempt[];
+export type Build = (e: Expansion, bits: number) => readonly Offer[];
 
 /** Digits of the evaluations that only serve an error estimate. */
 const ERROR_DIGITS = 12;
 const LIFTED = 'a complex pair near the positive axis is lifted over';
 const REMEDY = 'read the neighbouring approximants';
 
-/** Bits with which a family should know its approximants for sums of `digits` digits. */
-export const familyBits = (digits: number): number => Math.ceil(digits * 3.33) + 80;
+/** Bits with which a family should know its approximants for sums of `digits` digits; few are too few for the quick sums. */
+export const familyBits = (digits: number): number => Math.max(150, Math.ceil(digits * 3.33) + 80);
 
 interface Placed {
   readonly contour: Contour;
@@ -55,8 +63,7 @@ function place(e: Expansion, growth: Growth, singular: readonly Complex[]): Plac
   const args = points.filter((z) => !z.real && z.re > 0).map((z) => Math.abs(Math.atan2(z.im, z.re)));
   const onAxis = points.filter((z) => z.real && z.re > 0).map((z) => z.re / x);
   if (onAxis.length === 0 && args.length === 0) return { contour: STRAIGHT, lifted: 0 };
-  const mayLift = growth.nearest?.kind !== 'complex pair' && growth.signPattern !== 'quasi-periodic';
-  const choice = chooseRay(args, mayLift ? NEAR_AXIS_ANGLE : 0);
+  const choice = chooseRay(args, pairConfirmed(growth) ? 0 : NEAR_AXIS_ANGLE);
   if (choice === undefined) {
     const degrees = ((Math.min(...args) * 180) / Math.PI).toFixed(1);
     return `a complex singularity at ${degrees}° from the positive axis leaves no room for the contour`;
@@ -73,7 +80,12 @@ interface Summed extends LaplaceSum {
 function sumOf(e: Expansion, growth: Growth, c: Candidate, digits: number): Summed | string {
   const placed = place(e, growth, c.singular);
   if (typeof placed === 'string') return placed;
-  const found = lateralSums((s, prec) => [c.value(s, prec)], placed.contour, digits)?.[0];
+  const { quick } = c;
+  const integrand = {
+    balls: (s: Complex, prec: number) => [c.value(s, prec)],
+    ...(quick === undefined ? {} : { quick: (s: QuickComplex) => [quick(s)] }),
+  };
+  const found = lateralSums(integrand, placed.contour, digits)?.[0];
   return found === undefined
     ? 'the integral along the ray does not settle: the approximant grows too fast, or a singularity is too near'
     : { ...found, lifted: placed.lifted };
@@ -84,20 +96,26 @@ function sumOf(e: Expansion, growth: Growth, c: Candidate, digits: number): Summ
  * fewer for the error.
  */
 export function rayFamily(e: Expansion, growth: Growth, request: Request, build: Build): readonly Outcome[] {
-  const attempts = build(e, familyBits(request.digits));
-  const wanted = request.only === undefined ? attempts : attempts.filter((a) => a.label === request.only);
+  const offers = build(e, familyBits(request.digits));
+  const wanted = request.only === undefined ? offers : offers.filter((a) => a.label === request.only);
   if (wanted.length === 0)
     return [refusal(request.only ?? 'approximants', 'not a member of the family', 'choose another')];
-  const found = wanted.map((a) => ({
-    attempt: a,
-    result: standing(e, growth, a, request.digits, request.only !== undefined),
-  }));
+  let chosen = false;
+  const found = wanted.map(({ make }) => {
+    const attempt = make();
+    // Beside the family's own choice the others serve its error alone.
+    const digits = request.central === true && chosen ? Math.min(ERROR_DIGITS, request.digits) : request.digits;
+    const result = standing(e, growth, attempt, digits, request.only !== undefined);
+    const aside = chosen;
+    chosen ||= typeof result !== 'string';
+    return { attempt, result, aside };
+  });
   const values = found.map(({ result }) => (typeof result === 'string' ? undefined : result.pv));
   const centre = values.find((v) => v !== undefined);
   const earlier = request.only === undefined && centre !== undefined ? before(e, growth, build, centre) : undefined;
   const errors = combineErrors(e, values, earlier?.value);
   const prec = Math.max(128, request.digits * 4 + 64);
-  return found.map(({ attempt, result }, i): Outcome => {
+  const outcomes = found.map(({ attempt, result }, i): Outcome => {
     if (typeof result === 'string' || 'reason' in attempt)
       return refusal(attempt.label, typeof result === 'string' ? result : '', REMEDY);
     const value = dressed(e, result.pv, prec);
@@ -114,6 +132,7 @@ export function rayFamily(e: Expansion, growth: Growth, request: Request, build:
       notes: result.lifted > 0 ? [...attempt.notes, LIFTED] : attempt.notes,
     };
   });
+  return request.central === true ? outcomes.filter((_, i) => !found[i]!.aside) : outcomes;
 }
 
 /** `trusting`: the member was asked for by name, its doubts are known. */
@@ -147,8 +166,8 @@ const size = (a: Ball, b: Ball): number => Math.abs(R.toNumber(R.sub(a, b, 128))
 function valueOf(e: Expansion, growth: Growth, build: Build, fewer: number): Ball | undefined {
   if (e.coefficients.length <= fewer) return undefined;
   const shorter: Expansion = { ...e, coefficients: e.coefficients.slice(0, -fewer) };
-  for (const a of build(shorter, familyBits(ERROR_DIGITS))) {
-    const result = standing(shorter, growth, a, ERROR_DIGITS);
+  for (const { make } of build(shorter, familyBits(ERROR_DIGITS))) {
+    const result = standing(shorter, growth, make(), ERROR_DIGITS);
     if (typeof result !== 'string') return result.pv;
   }
   return undefined;

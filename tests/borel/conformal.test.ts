@@ -51,7 +51,7 @@ function sum(c: readonly Exact[], cuts: Cuts, softening: Softening, g: Exact, di
   const list = [remap(b, cuts, softening, prec)];
   const right = cuts.right;
   const found = lateralSums(
-    (s, p) => [remappedValues(list, cuts, C.mulReal(s, g.ball(p), p), p)[0]!.full],
+    { balls: (s, p) => [remappedValues(list, cuts, C.mulReal(s, g.ball(p), p), p)[0]!.full] },
     right === undefined
       ? STRAIGHT
       : { ray: RAYS[0]!, first: R.toNumber(right.distance.ball(60)) / R.toNumber(g.ball(60)) },
