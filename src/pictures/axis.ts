@@ -101,7 +101,15 @@ export function logAxis(low: number, high: number, label: string, place: AxisPla
   if (decades.length >= 2) return { from, to, label, at: (value) => scale(value), ticks: decades };
   // Less than a decade or two: the numbers between say more than the decades.
   const values = scale.ticks(room).filter((value) => value >= from && value <= to);
-  const write = (value: number): string => String(Number(value.toPrecision(2)));
+  const digits = (value: number): string => String(Number(value.toPrecision(2)));
+  // Equal steps crowd towards the upper end: a number stands only where the one before it leaves room.
+  let lastAt = -Infinity;
+  const write = (value: number): string => {
+    const at = scale(value);
+    if (Math.abs(at - lastAt) < place.text * (place.direction === 'along' ? 2.6 : 1.6)) return '';
+    lastAt = at;
+    return digits(value);
+  };
   return {
     from,
     to,

@@ -4,12 +4,15 @@
  * For a picture: values in doubles, indicative.
  */
 import { borelTransform, nearDiagonal, padeOf, RAYS } from '../borel/index.js';
+import { diagnoseGrowth } from '../growth/index.js';
 import { R, Rational, toNumberExact } from '../numerics/index.js';
 import type { Ball } from '../numerics/index.js';
+import { PRESCRIPTIONS } from '../prescriptions/index.js';
 import type { Series, Uncertain } from '../series/index.js';
 import type { AssessOptions } from './assess.js';
 import type { Assessment, Refused } from './assessment.js';
 import { expand } from './expand.js';
+import type { Expanded } from './expand.js';
 import { indicative } from './figures.js';
 import { couplingSummary, seriesSummary } from './summary.js';
 import { VERSION } from './version.js';
@@ -64,6 +67,18 @@ const horner = (p: readonly number[], z: Complex): Complex =>
     { re: 0, im: 0 },
   );
 
+/** The member whose sum the Borel–Padé prescription quotes, so that the picture shows what its number comes from. */
+function quoted({ expansion, growthInput }: Expanded): [number, number][] {
+  const outcomes = PRESCRIPTIONS.find(({ name }) => name === 'borel-pade')?.apply(
+    expansion,
+    diagnoseGrowth(growthInput),
+    { digits: 6 },
+  );
+  const variant = outcomes?.find((outcome) => outcome.kind === 'sum' && outcome.central === true)?.variant ?? '';
+  const [, L, M] = /^\[(\d+)\/(\d+)\]$/.exec(variant) ?? [];
+  return L === undefined || M === undefined || Number(L) + Number(M) >= MOST ? [] : [[Number(L), Number(M)]];
+}
+
 /** The integrand of the Borel integral of a series at a coupling. */
 export function laplaceIntegrand(
   series: Series,
@@ -80,7 +95,7 @@ export function laplaceIntegrand(
     angle: indicative((RAY.angle * 180) / Math.PI),
   };
   const b = borelTransform(expansion.coefficients.slice(0, MOST), Rational.ZERO);
-  for (const [L, M] of nearDiagonal(b.length - 1, 2)) {
+  for (const [L, M] of [...quoted(expanded), ...nearDiagonal(b.length - 1, 2)]) {
     const pade = padeOf(b, L, M, PREC);
     if (pade.exists !== true) continue;
     const doubles = (list: readonly Ball[]): number[] => list.map((c) => R.toNumber(c));

@@ -1,7 +1,7 @@
 /** @module A chart drawn with characters: what a terminal of 80 columns can show, with Unicode and without. */
 import { axisOf, nameAxis } from '../axis.js';
 import type { Axis } from '../axis.js';
-import type { Chart, Layer, Panel, Point } from '../chart.js';
+import type { Chart, Curve, Layer, Panel, Point } from '../chart.js';
 import { ASCII, UNICODE } from './glyphs.js';
 import type { Glyphs } from './glyphs.js';
 import { terminalWords } from './words.js';
@@ -46,6 +46,12 @@ function between([x0, y0]: Point, [x1, y1]: Point): Point[] {
   return Array.from({ length: steps + 1 }, (_, i) => [x0 + ((x1 - x0) * i) / steps, y0 + ((y1 - y0) * i) / steps]);
 }
 
+/** A line beside its markers is faint; one without has a character of its own. */
+const lineGlyph = (curve: Curve, glyphs: Glyphs): string =>
+  curve.marker !== undefined || curve.name === undefined
+    ? glyphs.line[curve.line ?? 'full']
+    : glyphs.curves[curve.ink % glyphs.curves.length]!;
+
 function drawLayer(field: Field, layer: Layer, x: Axis, y: Axis, glyphs: Glyphs, unicode: boolean): void {
   const put = (points: readonly Point[], glyph: string): void => points.forEach(([a, b]) => field.put(a, b, glyph));
   switch (layer.kind) {
@@ -55,7 +61,7 @@ function drawLayer(field: Field, layer: Layer, x: Axis, y: Axis, glyphs: Glyphs,
       if (style !== undefined)
         points.slice(1).forEach((point, i) => {
           const cells = between(points[i]!, point);
-          put(style === 'dotted' ? cells.filter((_, k) => k % 2 === 0) : cells, glyphs.line[style]);
+          put(cells, lineGlyph(layer, glyphs));
         });
       if (layer.marker !== undefined) put(points, glyphs.marker[layer.marker]);
       return;
@@ -108,7 +114,7 @@ function drawLayer(field: Field, layer: Layer, x: Axis, y: Axis, glyphs: Glyphs,
 const sampleOf = (layer: Layer, glyphs: Glyphs): string => {
   switch (layer.kind) {
     case 'curve':
-      return layer.marker === undefined ? glyphs.line[layer.line ?? 'full'].repeat(2) : glyphs.marker[layer.marker];
+      return layer.marker === undefined ? lineGlyph(layer, glyphs).repeat(2) : glyphs.marker[layer.marker];
     case 'band':
       return glyphs.band[layer.tone].repeat(2);
     case 'rule':

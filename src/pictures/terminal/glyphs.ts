@@ -4,6 +4,8 @@ import type { LineStyle, MarkerShape } from '../chart.js';
 export interface Glyphs {
   readonly marker: Readonly<Record<MarkerShape, string>>;
   readonly line: Readonly<Record<LineStyle, string>>;
+  /** Lines without markers, by ink. */
+  readonly curves: readonly string[];
   readonly band: Readonly<Record<'first' | 'second', string>>;
   readonly rule: { readonly x: string; readonly y: string };
   readonly interval: { readonly thin: string; readonly thick: string; readonly upright: string };
@@ -21,6 +23,7 @@ export interface Glyphs {
 export const UNICODE: Glyphs = {
   marker: { disc: '●', ring: '○', square: '■', diamond: '◆', triangle: '▲', cross: '×', bar: '┃' },
   line: { full: '·', dashed: '-', dotted: '·' },
+  curves: ['•', '+', '×', '∘', '~'],
   band: { first: '░', second: '▒' },
   rule: { x: '┊', y: '┄' },
   interval: { thin: '─', thick: '━', upright: '│' },
@@ -32,6 +35,7 @@ export const UNICODE: Glyphs = {
 export const ASCII: Glyphs = {
   marker: { disc: 'o', ring: 'O', square: '#', diamond: '@', triangle: '^', cross: 'x', bar: '!' },
   line: { full: '.', dashed: '-', dotted: '.' },
+  curves: ['*', '+', 'x', 'o', '~'],
   band: { first: ':', second: '%' },
   rule: { x: ':', y: '-' },
   interval: { thin: '-', thick: '=', upright: '|' },

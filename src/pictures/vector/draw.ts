@@ -104,9 +104,20 @@ function layerMarks(layer: Layer, frame: Frame, format: Format): Mark[] {
   }
 }
 
+/** A row of names needs this much, in sizes of the text; all else of such a panel as much as SURROUNDINGS. */
+const NAME_ROW = 1.45;
+const SURROUNDINGS = 9;
+
+/** The height of the format, or more where many names stand under each other. */
+function heightFor({ panels }: Chart, { height, text }: Format): number {
+  const needed = panels.map(({ y }) => (y.kind === 'names' ? (y.names.length * NAME_ROW + SURROUNDINGS) * text : 0));
+  return Math.max(height, Math.max(...needed) * panels.length);
+}
+
 /** Panels share the height evenly; what stands below the axes of the upper ones is taken from all. */
 export function pictureOf(chart: Chart, format: Format): Picture {
-  const { width, height } = format;
+  const { width } = format;
+  const height = heightFor(chart, format);
   const share = height / chart.panels.length;
   const left = Math.max(...chart.panels.map((panel) => gutter(format, panel, share)));
   const panelMarks = (panel: Panel, i: number): Mark[] => {

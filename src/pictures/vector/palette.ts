@@ -3,8 +3,8 @@
  * with any colour vision, and every one of them stands out from white paper. A test measures both.
  */
 
-/** Curves and markers, the most important one first: CIE lightness about 25, 45, 58, 35, 62. */
-export const INKS = ['#14376b', '#b3452c', '#3f9a8a', '#6d3f8c', '#b98a1f'] as const;
+/** Curves and markers, the most important one first: CIE lightness about 24, 43, 51, 33, 60. */
+export const INKS = ['#14376b', '#ac4129', '#2f887a', '#683988', '#b98a1f'] as const;
 
 export const TEXT = '#1c1c1c';
 export const FRAME = '#444444';

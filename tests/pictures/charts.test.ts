@@ -1,0 +1,120 @@
+/** Charts of real results: what they draw is what the result says, in every form. */
+import { describe, expect, test } from 'vitest';
+import {
+  CHART_KINDS,
+  FORMATS,
+  chartCsv,
+  pdfOf,
+  pictureOf,
+  pngOf,
+  svgOf,
+  terminalChart,
+} from '../../src/pictures/index.js';
+import type { Chart, SavedResult } from '../../src/pictures/index.js';
+import { loadSeries, parseUncertain, isNumberProblem } from '../../src/series/index.js';
+import { assess, backtest, compare, laplaceIntegrand, scaleDependence } from '../../src/studies/index.js';
+
+const at = (() => {
+  const value = parseUncertain('0.3156(30)');
+  if (isNumberProblem(value)) throw new Error('no number');
+  return value;
+})();
+const adler = await loadSeries('adler');
+const options = (command: string) => ({ digits: 12, request: { command, series: 'adler' } });
+
+const RESULTS: Readonly<Record<string, object>> = {
+  assess: assess(adler, at, options('assess')),
+  compare: compare(adler, [at], options('compare')),
+  backtest: backtest(adler, at, { ...options('backtest'), hide: 2 }),
+  scale: scaleDependence(adler, at, options('scale')),
+  integrand: laplaceIntegrand(adler, at, options('integrand')),
+};
+const kinds = CHART_KINDS.filter(({ from }) => from.some((command) => command in RESULTS));
+const drawn = (name: string): Chart => {
+  const kind = kinds.find((entry) => entry.name === name)!;
+  const command = kind.from.find((from) => from in RESULTS)!;
+  return kind.draw(JSON.parse(JSON.stringify(RESULTS[command])) as SavedResult);
+};
+const column = FORMATS[0]!;
+
+describe.each(kinds.map(({ name }) => name))('%s', (name) => {
+  const chart = drawn(name);
+
+  test('has a title, a description and numbers', () => {
+    expect(chart.title).toContain('Adler');
+    expect(chart.description.length).toBeGreaterThan(40);
+    for (const { columns, rows } of chart.data) for (const row of rows) expect(row.length).toBe(columns.length);
+  });
+
+  test('is finite, inside its frame, and alike from run to run', () => {
+    const svg = svgOf(pictureOf(chart, column));
+    expect(svg).not.toMatch(/NaN|Infinity|undefined/);
+    expect(svgOf(pictureOf(drawn(name), column))).toBe(svg);
+    const height = Number(/viewBox="0 0 \S+ (\S+)"/.exec(svg)![1]);
+    // A turned label is written where it was before it was turned.
+    const straight = svg.replaceAll(/<path [^>]*transform[^>]*>/g, '');
+    for (const [, x, y] of straight.matchAll(/[ML](-?[\d.]+) (-?[\d.]+)/g)) {
+      expect(Number(x)).toBeGreaterThan(-8);
+      expect(Number(x)).toBeLessThan(column.width + 8);
+      expect(Number(y)).toBeGreaterThan(-8);
+      expect(Number(y)).toBeLessThan(height + 8);
+    }
+  });
+
+  test.each([true, false])('reads in 80 columns (Unicode: %s)', (unicode) => {
+    const text = terminalChart(chart, { columns: 80, unicode });
+    for (const line of text.split('\n')) expect([...line].length).toBeLessThanOrEqual(80);
+    if (!unicode) expect(/^[ -~\n]*$/.test(text)).toBe(true);
+  });
+});
+
+test('PNG and PDF files are what they claim to be, with the size of the format', async () => {
+  const picture = pictureOf(drawn('terms'), column);
+  const png = await pngOf(picture, 2);
+  expect(Buffer.from(png.slice(1, 4)).toString()).toBe('PNG');
+  const header = new DataView(png.buffer, png.byteOffset);
+  expect(header.getUint32(16)).toBe(Math.round(column.width * 2));
+  const pdf = Buffer.from(await pdfOf(picture)).toString('latin1');
+  expect(pdf.startsWith('%PDF-')).toBe(true);
+  expect(pdf).toContain('/FontFile2');
+  expect(Buffer.from(await pdfOf(picture)).toString('latin1')).toBe(pdf);
+});
+
+test('the plotted numbers are those of the result', () => {
+  const result = RESULTS['assess'] as ReturnType<typeof assess>;
+  const lines = chartCsv(drawn('terms')).split('\n');
+  expect(lines[0]).toBe('order,term,partial_sum,least');
+  expect(lines[2]).toBe(`2,${result.terms[1]!.term},${result.terms[1]!.partialSum},0`);
+});
+
+test('at its own scale the scan gives the sums of the fixed order', () => {
+  const scan = RESULTS['scale'] as ReturnType<typeof scaleDependence>;
+  const result = RESULTS['assess'] as ReturnType<typeof assess>;
+  const own = scan.points.find((point) => Number(point.ratio) === 1)!;
+  own.sums.forEach((sum, n) => expect(Number(sum)).toBeCloseTo(Number(result.terms[n]!.partialSum), 8));
+});
+
+test('the integrand at the origin is c_0/x, and the ray and the axis start alike', () => {
+  const { samples, coupling } = RESULTS['integrand'] as ReturnType<typeof laplaceIntegrand>;
+  expect(Number(samples[0]!.axis)).toBeCloseTo(1 / Number(coupling.x), 3);
+  expect(Math.hypot(Number(samples[0]!.ray.re), Number(samples[0]!.ray.im))).toBeCloseTo(1 / Number(coupling.x), 3);
+});
+
+test('the integral along the ray has the imaginary part of the lateral sum', () => {
+  // Trapezoidal rule over the drawn samples against the closed form of the same approximant, to the drawn accuracy.
+  const { samples, approximant, coupling } = RESULTS['integrand'] as ReturnType<typeof laplaceIntegrand>;
+  const step = Number(samples[1]!.r);
+  const sum = samples.reduce(
+    (total, { ray }, i) => {
+      const weight = i === 0 || i === samples.length - 1 ? 0.5 : 1;
+      return { re: total.re + weight * Number(ray.re), im: total.im + weight * Number(ray.im) };
+    },
+    { re: 0, im: 0 },
+  );
+  const values = (RESULTS['assess'] as ReturnType<typeof assess>).values;
+  const entry = values.find(({ prescription, variant }) => prescription === 'borel-pade' && variant === approximant)!;
+  const x = Number(coupling.x);
+  // R = 1 + x F, F = (1/x) ∫: the integral of the samples is F.
+  expect(1 + x * sum.re * step).toBeCloseTo(Number(entry.value), 3);
+  expect(Math.abs(x * sum.im * step)).toBeCloseTo(Math.abs(Number(entry.imaginary)), 3);
+});
