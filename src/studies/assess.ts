@@ -11,6 +11,7 @@ import { ambiguityReport, optimalReport, powerReport } from './ambiguity-report.
 import type { Assessment, ValueEntry, ValueRecord } from './assessment.js';
 import { recordCautions, records } from './backtesting/record.js';
 import { cautions } from './cautions.js';
+import { fixedOrderSeries } from './contour/moment.js';
 import { checkCoupling } from './coupling-range.js';
 import { expand } from './expand.js';
 import type { Expanded } from './expand.js';
@@ -89,8 +90,14 @@ export interface Summed {
   readonly values: readonly Evaluated[];
 }
 
-/** Expands, diagnoses and runs the prescriptions: what `assess` and `sum` share. */
-export function sumUp(series: Series, at: Uncertain, options: Pick<AssessOptions, 'order' | 'digits' | 'by'>): Summed {
+/** Expands, diagnoses and runs the prescriptions; with `central` each gives its own choice only. */
+export function sumUp(
+  given: Series,
+  at: Uncertain,
+  options: Pick<AssessOptions, 'order' | 'digits' | 'by'>,
+  central = false,
+): Summed {
+  const series = fixedOrderSeries(given);
   checkCoupling(series, at);
   const expanded = expand(series, at.value, options.order);
   const growth = diagnoseGrowth(expanded.growthInput);
@@ -100,6 +107,7 @@ export function sumUp(series: Series, at: Uncertain, options: Pick<AssessOptions
     prescriptionsNamed(options.by),
     options.digits,
     inputsOf(series, expanded, at),
+    central,
   );
   return { expanded, growth, values };
 }
@@ -126,7 +134,8 @@ function withRecord(entry: ValueEntry, list: ReadonlyMap<string, ValueRecord>): 
 }
 
 /** The whole assessment of a series at the coupling value `at`. */
-export function assess(series: Series, at: Uncertain, options: AssessOptions): Assessment {
+export function assess(given: Series, at: Uncertain, options: AssessOptions): Assessment {
+  const series = fixedOrderSeries(given);
   const {
     expanded,
     growth,

@@ -20,6 +20,7 @@ import type { BacktestEstimate, BacktestMethod, BacktestResult, BacktestTrial } 
 import { isInside, missOf, scoreOf } from './backtesting/score.js';
 import { commonTargets, targetWords } from './backtesting/target.js';
 import type { Target } from './backtesting/target.js';
+import { fixedOrderSeries } from './contour/moment.js';
 import { expand } from './expand.js';
 import type { Expanded } from './expand.js';
 import { ballText, indicative } from './figures.js';
@@ -127,7 +128,8 @@ function estimatesOf(
 }
 
 /** The back-test of one series at the coupling value `at`. */
-export function backtest(series: Series, at: Uncertain, options: BacktestOptions): BacktestResult {
+export function backtest(given: Series, at: Uncertain, options: BacktestOptions): BacktestResult {
+  const series = fixedOrderSeries(given);
   const expanded = expand(series, at.value, options.order);
   const known = computedPart(expanded);
   const count = known.expansion.coefficients.length;
@@ -137,7 +139,7 @@ export function backtest(series: Series, at: Uncertain, options: BacktestOptions
   const seen = hidden.map((h) => seenOf(known, h));
   const chosen = common[0];
   const prescriptions = prescriptionsNamed(options.by).map((p) =>
-    methodOf(p, known, memberOf(p.apply(known.expansion, growth, { digits: PREDICT_DIGITS })), seen, common),
+    methodOf(p, known, memberOf(p.apply(known.expansion, growth, { digits: PREDICT_DIGITS, central: true })), seen, common),
   );
   return {
     leastterm: VERSION,

@@ -23,6 +23,11 @@ export function cautions(
   const list: Caution[] = [];
   if (series.invented)
     list.push({ code: 'invented', text: 'this series is invented for demonstration: quote nothing from it' });
+  if (series.expandedFrom !== undefined)
+    list.push({
+      code: 'contour-quantity',
+      text: 'a contour quantity, here expanded at fixed order: contour-improved summation differs by more than its errors, and which is right is contested',
+    });
   if (expanded.leadingZeros > 0)
     list.push({
       code: 'leading-zeros',

@@ -12,6 +12,7 @@ import type { Caution, CouplingSummary, Refused, SeriesSummary, Standing, ValueR
 import { records } from './backtesting/record.js';
 import { cautions } from './cautions.js';
 import { valueCautions } from './comparing-cautions.js';
+import { fixedOrderSeries } from './contour/moment.js';
 import { ballText } from './figures.js';
 import { couplingSummary, seriesSummary } from './summary.js';
 import { valueEntry } from './values.js';
@@ -153,13 +154,14 @@ function pointRows(series: Series, summed: Summed, point: CouplingSummary, optio
 }
 
 /** All prescriptions side by side, at each of the coupling values. */
-export function compare(series: Series, at: readonly Uncertain[], options: CompareOptions): CompareResult {
+export function compare(given: Series, at: readonly Uncertain[], options: CompareOptions): CompareResult {
+  const series = fixedOrderSeries(given);
   const points: ComparePoint[] = [];
   const rows: CompareRow[] = [];
   const said: Caution[] = [];
   let summary: SeriesSummary | undefined;
   for (const value of at) {
-    const summed = sumUp(series, value, options);
+    const summed = sumUp(series, value, options, true);
     const { expanded, growth } = summed;
     const coupling = couplingSummary(series, value, expanded, options.digits, options.path);
     const own = pointRows(series, summed, coupling, options);

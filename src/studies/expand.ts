@@ -1,7 +1,15 @@
 /**
  * @module From a Series and a coupling to an Expansion: where the bookkeeping of files ends and numerics begins.
  */
-import type { Expansion, KnownSingularity, Running, Series, StatedSingularity, Uncertain } from '../series/index.js';
+import type {
+  ContourOrigin,
+  Expansion,
+  KnownSingularity,
+  Running,
+  Series,
+  StatedSingularity,
+  Uncertain,
+} from '../series/index.js';
 import {
   addExact,
   divExact,
@@ -15,8 +23,10 @@ import {
   toNumberExact,
 } from '../numerics/index.js';
 import type { Exact } from '../numerics/index.js';
-import { betaCoefficients, divisorSize, expectedSingularity, isRefusal, uPerT } from '../qcd/index.js';
+import { betaCoefficients, divisorSize, expectedSingularity, isRefusal, uPerT, weightIntegral } from '../qcd/index.js';
 import type { GrowthInput, GrowthTerm } from '../growth/index.js';
+import { circleRunning, fixedOrderSeries } from './contour/moment.js';
+import { ROUNDED_DIGITS } from './expand-errors.js';
 import { couplingScheme, isOtherCoupling, knownLoops, massDefinition } from './scheme.js';
 
 export interface Expanded {
@@ -32,11 +42,9 @@ export interface Expanded {
 
 const TWO = Rational.of(2);
 
-/** Digits fewer than this are taken as "written short" (0.5, 1.25), not as rounded; heuristic. */
-const ROUNDED_DIGITS = 3;
-
 /** Expands the first `order` coefficients of the series at the coupling value `at`. */
-export function expand(series: Series, at: Exact, order?: number): Expanded {
+export function expand(from: Series, at: Exact, order?: number): Expanded {
+  const series = fixedOrderSeries(from);
   const kept = order === undefined ? series.coefficients : series.coefficients.slice(0, order);
   // Σ c_n x^n at x < 0 is Σ (−1)^n c_n |x|^n: the sum is along the positive axis of the mirrored Borel plane.
   const mirrored = series.coupling.plain && signExact(at) < 0;
@@ -60,6 +68,7 @@ export function expand(series: Series, at: Exact, order?: number): Expanded {
     relativeErrors,
     stated,
     ...runningOf(series),
+    ...(series.expandedFrom === undefined ? {} : { contour: contourOf(series.expandedFrom, order, scale) }),
   };
   const growthInput: GrowthInput = {
     terms: coefficients.map((c, n) =>
@@ -79,6 +88,30 @@ export function expand(series: Series, at: Exact, order?: number): Expanded {
     leadingZeros,
     errors: kept.slice(leadingZeros).map(quotedError),
     growthInput,
+  };
+}
+
+/** L loops fix L − 2 corrections of a singularity: c_1 holds β_2, c_2 holds β_3. */
+const LOOPS_BEFORE_CORRECTIONS = 2;
+
+/** What stands behind the fixed-order expansion of a contour quantity. */
+function contourOf(series: Series, order: number | undefined, scale: Exact | undefined): ContourOrigin {
+  const { flavours, loops } = circleRunning(series);
+  const weight = series.contour?.coefficients ?? [];
+  const kept = series.coefficients.slice(0, order);
+  return {
+    weight,
+    integral: weightIntegral(weight),
+    coefficients: kept.map((c) => c.value),
+    power: series.firstPower,
+    errors: kept.map(quotedError),
+    stated: statedSingularities(series, 0, scale).map((s) => ({
+      ...s,
+      corrections: s.corrections.slice(0, Math.max(0, loops - LOOPS_BEFORE_CORRECTIONS)),
+    })),
+    flavours,
+    loops,
+    divisor: series.coupling.divisor,
   };
 }
 

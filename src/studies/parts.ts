@@ -6,6 +6,7 @@ import { sumUp } from './assess.js';
 import type { AssessOptions } from './assess.js';
 import type { Assessment } from './assessment.js';
 import { cautions } from './cautions.js';
+import { fixedOrderSeries } from './contour/moment.js';
 import { expand } from './expand.js';
 import { growthReport } from './growth-report.js';
 import { planeReport } from './plane-report.js';
@@ -23,7 +24,8 @@ type PartOptions = Omit<AssessOptions, 'by' | 'path'>;
 const ANY_COUPLING = exact(1);
 
 /** The growth diagnosis of a series. */
-export function growthStudy(series: Series, options: PartOptions): GrowthResult {
+export function growthStudy(given: Series, options: PartOptions): GrowthResult {
+  const series = fixedOrderSeries(given);
   const expanded = expand(series, ANY_COUPLING, options.order);
   const growth = diagnoseGrowth(expanded.growthInput);
   return {
@@ -36,7 +38,8 @@ export function growthStudy(series: Series, options: PartOptions): GrowthResult 
 }
 
 /** The Borel plane of a series. */
-export function planeStudy(series: Series, options: PartOptions): PlaneResult {
+export function planeStudy(given: Series, options: PartOptions): PlaneResult {
+  const series = fixedOrderSeries(given);
   const expanded = expand(series, ANY_COUPLING, options.order);
   const growth = diagnoseGrowth(expanded.growthInput);
   return {
@@ -49,7 +52,8 @@ export function planeStudy(series: Series, options: PartOptions): PlaneResult {
 }
 
 /** Chosen prescriptions at a coupling. */
-export function sumStudy(series: Series, at: Uncertain, options: AssessOptions): SumResult {
+export function sumStudy(given: Series, at: Uncertain, options: AssessOptions): SumResult {
+  const series = fixedOrderSeries(given);
   const { expanded, growth, values } = sumUp(series, at, options);
   return {
     leastterm: VERSION,

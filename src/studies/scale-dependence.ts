@@ -7,6 +7,7 @@ import type { Series, Uncertain } from '../series/index.js';
 import { questionOf, USUAL_PRIORS } from '../truncation/index.js';
 import type { AssessOptions } from './assess.js';
 import type { Assessment, Refused } from './assessment.js';
+import { fixedOrderSeries } from './contour/moment.js';
 import { expand } from './expand.js';
 import { indicative } from './figures.js';
 import { couplingSummary, seriesSummary } from './summary.js';
@@ -44,7 +45,8 @@ const POINTS = 41;
 const DIGITS = 10;
 
 /** Partial sums through every order over a range of scales. */
-export function scaleDependence(series: Series, at: Uncertain, options: ScaleDependenceOptions): ScaleDependence {
+export function scaleDependence(given: Series, at: Uncertain, options: ScaleDependenceOptions): ScaleDependence {
+  const series = fixedOrderSeries(given);
   const expanded = expand(series, at.value, options.order);
   const { expansion } = expanded;
   const question = questionOf(expansion, {

@@ -18,6 +18,7 @@ import {
 import type { AssessOptions } from './assess.js';
 import type { Assessment, Caution, Refused, Standing } from './assessment.js';
 import { cautions } from './cautions.js';
+import { fixedOrderSeries } from './contour/moment.js';
 import { expand, type Expanded } from './expand.js';
 import { ballText, indicative } from './figures.js';
 import { ask, bandText, scaledText, type BandText } from './truncation-answer.js';
@@ -142,7 +143,8 @@ const NO_TERMS: Refused = {
 };
 
 /** All truncation-error models on a series at the coupling value `at`. */
-export function truncationStudy(series: Series, at: Uncertain, options: TruncationOptions): TruncationResult {
+export function truncationStudy(given: Series, at: Uncertain, options: TruncationOptions): TruncationResult {
+  const series = fixedOrderSeries(given);
   const expanded = expand(series, at.value, options.order);
   const e = expanded.expansion;
   const growth = diagnoseGrowth(expanded.growthInput);
