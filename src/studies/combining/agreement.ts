@@ -102,6 +102,13 @@ function variables(first: Operand, other: Operand): Refusal | undefined {
 export function disagreement(operands: readonly Operand[]): Refusal | undefined {
   const [first, ...others] = operands;
   if (first === undefined) return undefined;
+  const onCircle = operands.find((o) => o.series.contour !== undefined);
+  if (onCircle !== undefined) {
+    return refuse(
+      `${onCircle.name} (${onCircle.from}) is a contour quantity: its coefficients stand under an integral, and a product of integrals is not the integral of the product`,
+      'combine the series under the integral, and write "kind: contour" and its weight into the result',
+    );
+  }
   for (const other of others) {
     const bad = variables(first, other);
     if (bad !== undefined) return bad;
