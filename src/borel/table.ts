@@ -27,12 +27,24 @@ export type PadeOutcome =
     }
   | { readonly exists: false | undefined; readonly reason: string };
 
+const kept = new WeakMap<readonly Exact[], Map<string, ReturnType<typeof padeExact>>>();
+
+/** Exact [L/M], made once for a list: evaluations at rising precision ask for it again. */
+function exactEntry(list: readonly Exact[], rationals: readonly Rational[], L: number, M: number) {
+  const entries = kept.get(list) ?? new Map<string, ReturnType<typeof padeExact>>();
+  kept.set(list, entries);
+  const key = `${L}/${M}`;
+  const entry = entries.get(key) ?? padeExact(rationals, L, M);
+  entries.set(key, entry);
+  return entry;
+}
+
 /** [L/M] of Σ c_n x^n: exactly when all coefficients are rational, else enclosed at `prec` bits. */
 export function padeOf(c: readonly Exact[], L: number, M: number, prec: number): PadeOutcome {
   const used = c.slice(0, L + M + 1);
   const rationals = used.map((e) => e.rational).filter((q): q is Rational => q !== undefined);
   if (rationals.length === used.length) {
-    const p = padeExact(rationals, L, M);
+    const p = exactEntry(c, rationals, L, M);
     if (!p.exists) return { exists: false, reason: p.reason };
     return {
       exists: true,

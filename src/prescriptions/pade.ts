@@ -16,6 +16,8 @@ import { combineErrors } from './neighbours.js';
 
 /** Largest number of coefficients used: beyond, rational approximants of the coupling series gain nothing. Heuristic. */
 const MOST = 60;
+/** Digits of the values that only serve an error. */
+const ERROR_DIGITS = 12;
 
 function valueAt(e: Expansion, L: number, M: number, digits: number): Ball | undefined {
   let failed = false;
@@ -82,14 +84,22 @@ export const pade: Prescription = {
         ? [refusal(request.only, 'the entry does not exist', 'choose another')]
         : [sumOf(short, request.only, v, usable, notes)];
     }
-    const values = order.map(([L, M]) => ({ label: label(L, M), value: evaluate(L, M, request.digits) }));
-    const before = lower.map(([L, M]) => evaluate(L, M, 12)).find((v) => v !== undefined);
+    let chosen = false;
+    const values = order.map(([L, M]) => {
+      // Beside the family's own choice the others serve its error alone.
+      const aside = request.central === true && chosen;
+      const value = evaluate(L, M, aside ? ERROR_DIGITS : request.digits);
+      chosen ||= value !== undefined;
+      return { label: label(L, M), value, aside };
+    });
+    const before = lower.map(([L, M]) => evaluate(L, M, ERROR_DIGITS)).find((v) => v !== undefined);
     const errors = combineErrors(
       short,
       values.map((v) => v.value),
       before,
     );
     values.forEach((v, i) => {
+      if (v.aside) return;
       if (v.value === undefined)
         outcomes.push(
           refusal(v.label, 'the entry does not exist, or has a pole at this coupling', 'read the neighbouring entries'),

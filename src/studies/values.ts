@@ -28,16 +28,18 @@ export interface Evaluated {
 /** Certified digits asked of the shifted evaluations: enough for a difference quotient. */
 const SHIFT_DIGITS = 12;
 
-/** Runs the prescriptions; the family's central member also gets its input error. */
+/** Runs the prescriptions; the family's central member also gets its input error. With `central` no other one is wanted. */
 export function evaluateAll(
   e: Expansion,
   growth: Growth,
   prescriptions: readonly Prescription[],
   digits: number,
   inputs: Inputs,
+  central = false,
 ): Evaluated[] {
+  const request = central ? { digits, central } : { digits };
   return prescriptions.flatMap((prescription) =>
-    prescription.apply(e, growth, { digits }).map((outcome): Evaluated => {
+    prescription.apply(e, growth, request).map((outcome): Evaluated => {
       if (outcome.kind === 'refusal' || outcome.central !== true) return { prescription, outcome };
       const input = inputError(e, growth, prescription, outcome, inputs);
       return { prescription, outcome, ...(input === undefined ? {} : { input }) };

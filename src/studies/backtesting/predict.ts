@@ -50,7 +50,7 @@ export function predict(
   withNext: boolean,
 ): Prediction {
   const hidden = known.expansion.coefficients.length - seen.expansion.coefficients.length;
-  const outcomes = prescription.apply(seen.expansion, growth, { digits: PREDICT_DIGITS });
+  const outcomes = prescription.apply(seen.expansion, growth, { digits: PREDICT_DIGITS, central: true });
   const sum = memberOf(outcomes);
   if (sum === undefined) {
     const no = outcomes.find((o) => o.kind === 'refusal');

@@ -68,7 +68,7 @@ export function records(
   for (const [prescription, sum] of sums) {
     const predictions = seen.map((part) => predict(known, prescription, part, false));
     const own = (): Sum | undefined =>
-      whole ? sum : memberOf(prescription.apply(known.expansion, growth, { digits: PREDICT_DIGITS }));
+      whole ? sum : memberOf(prescription.apply(known.expansion, growth, { digits: PREDICT_DIGITS, central: true }));
     const target = common ?? ownTarget(own())[0];
     const score = target === undefined ? undefined : scoreOf(missesOf(predictions, target));
     if (target !== undefined && score !== undefined)
