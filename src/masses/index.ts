@@ -1,0 +1,10 @@
+/** @module Public face of the room of mass definitions: subtracted heavy-quark masses and conversions among them. */
+export {
+  DEFINITION_NAMES,
+  isDefinitionName,
+  type DefinitionName,
+  type MassDefinition,
+  type MassPlace,
+} from './definition.js';
+export { DEFINITIONS, definitionOf } from './definitions.js';
+export type { GivenCoupling, MassConversion, MassRequest } from './request.js';
