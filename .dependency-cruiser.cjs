@@ -5,6 +5,7 @@ const floors = [
   ['report', 'pictures'],
   ['extraction'],
   ['studies'],
+  ['fast'],
   ['prescriptions'],
   ['bubbles', 'contour', 'masses'],
   ['ambiguity', 'growth', 'borel', 'sequences', 'truncation'],

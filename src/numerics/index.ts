@@ -38,6 +38,7 @@ export { branchSame, branchAlternating, branchCut } from './special/kernels.js';
 export type { BranchValue } from './special/kernels.js';
 export type { DecimalText } from './enclose.js';
 export { certainDigits, raisePrecision, toDecimal } from './enclose.js';
+export { LARGEST_SEED, Philox, Substreams } from './random/index.js';
 export {
   gammaDouble,
   rgammaDouble,
@@ -45,6 +46,7 @@ export {
   digammaDouble,
   branchSameDouble,
   branchAlternatingDouble,
+  branchCutDouble,
   scaledE1Double,
 } from './special/double.js';
 export type { BranchDouble, ComplexDouble } from './special/double.js';

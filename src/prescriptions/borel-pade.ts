@@ -15,6 +15,7 @@ import { approximate, nearDiagonal, rationalSum } from '../borel/index.js';
 import type { Growth } from '../growth/index.js';
 import type { Expansion } from '../series/index.js';
 import { climb, placeOf } from './climb.js';
+import { pairConfirmed } from './eligibility.js';
 import { combineErrors, withTrust } from './neighbours.js';
 import type { Outcome, Prescription, Request, Sum } from './prescription.js';
 import { dressed, refusal, scaled, toDigits } from './prescription.js';
@@ -83,10 +84,6 @@ function objection(e: Expansion, growth: Growth): { reason: string; remedy: stri
   return undefined;
 }
 
-/** Does the diagnosis of the terms confirm a complex pair? Then its poles are real physics and the contour stays straight. */
-const pairConfirmed = (growth: Growth): boolean =>
-  growth.nearest?.kind === 'complex pair' || growth.signPattern === 'quasi-periodic';
-
 function evaluateEntry(
   e: Expansion,
   growth: Growth,
@@ -127,17 +124,23 @@ function evaluateEntry(
 }
 
 /** Relative noise of the coefficients: the largest quoted or implied error. */
-const noiseOf = (e: Expansion): number => Math.max(0, ...e.relativeErrors);
+export const noiseOf = (e: Expansion): number => Math.max(0, ...e.relativeErrors);
 
-function suspicion(e: Expansion, growth: Growth, a: Approximant): string | undefined {
+/** Poles nearer to the origin than this are where none may be; undefined when no position is known well enough. */
+export function innermostPole(e: Expansion, growth: Growth): number | undefined {
   const found = growth.nearest;
   const sharp = found !== undefined && found.t.error < SHARP * Math.abs(found.t.value);
   const nearest =
     e.stated[0] !== undefined ? Math.abs(toNumberExact(e.stated[0].t)) : sharp ? Math.abs(found.t.value) : undefined;
-  if (nearest === undefined) return undefined;
+  return nearest === undefined ? undefined : INSIDE * nearest;
+}
+
+function suspicion(e: Expansion, growth: Growth, a: Approximant): string | undefined {
+  const innermost = innermostPole(e, growth);
+  if (innermost === undefined) return undefined;
   for (const p of a.poles) {
     if (p.role === 'noise doublet') continue;
-    if (p.modulus < INSIDE * nearest)
+    if (p.modulus < innermost)
       return p.role === 'doublet'
         ? `a pole–zero doublet at |t| = ${p.modulus.toPrecision(3)} lies inside the circle of the nearest singularity`
         : `a pole at |t| = ${p.modulus.toPrecision(3)} lies where no singularity is expected`;

@@ -49,7 +49,11 @@ export const PRESCRIPTIONS: readonly Prescription[] = [
 
 export type { Outcome, Prescription, Refusal, Request, Sum, Trust } from './prescription.js';
 export { leastTerm, partialSums, prefactor, terms } from './prescription.js';
-export { leroyParameter } from './borel-pade.js';
+export { innermostPole, leroyParameter, noiseOf } from './borel-pade.js';
+export { innermostRest, knownFactors } from './borel-partial-pade.js';
+export { placeOf } from './climb.js';
+export { cutsOf, memberLabel } from './conformal.js';
+export { cleanPart, pairConfirmed, termsBeforeAlternation } from './eligibility.js';
 export { flavourPolynomials } from './flavour-polynomials.js';
-export { imaginaryPieces } from './singularity-model.js';
+export { imaginaryPieces, modelUsed } from './singularity-model.js';
 export { nextCoefficient } from './next-coefficient.js';

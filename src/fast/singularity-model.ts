@@ -1,0 +1,69 @@
+/**
+ * @module Singularity model in doubles: strengths and polynomial linear in the coefficients, branch sums in closed form.
+ *
+ *   N_i = Σ_n S_in c_n + S_i,  d_k = Σ_n P_kn c_n + P_k  (the fit of borel/model.ts, made beforehand in enclosures),
+ *   F = Σ_i N_i Σ_k c_ik ω F_{γ_i−1−k}(ω) + Σ_k d_k x^k,  ω = |t_i|/x  (G in place of F for t_i < 0).
+ */
+import { branchAlternatingDouble, branchSameDouble } from '../numerics/index.js';
+import type { Kernel } from './kernel.js';
+import { partialSum } from './kernel.js';
+
+/** A quantity linear in the coefficients, and what it is without any. */
+export interface Affine {
+  readonly slopes: readonly number[];
+  readonly constant: number;
+}
+
+export interface SingularityModelSetting {
+  readonly kind: 'singularity-model';
+  readonly points: readonly {
+    readonly t: number;
+    readonly exponent: number;
+    /** c_1, c_2, … */
+    readonly corrections: readonly number[];
+    readonly strength: Affine;
+  }[];
+  readonly polynomial: readonly Affine[];
+}
+
+function at({ slopes, constant }: Affine, c: Float64Array): number {
+  let sum = constant;
+  for (let n = 0; n < slopes.length; n++) sum += slopes[n]! * c[n]!;
+  return sum;
+}
+
+export function singularityModelKernel({ points, polynomial }: SingularityModelSetting): Kernel {
+  const strengths = new Float64Array(points.length);
+  const d = new Float64Array(polynomial.length);
+  const branches = points.map(({ t, exponent, corrections }) => ({
+    size: Math.abs(t),
+    positive: t > 0,
+    first: exponent - 1,
+    weights: Float64Array.of(1, ...corrections),
+  }));
+  const needed = Math.max(0, ...polynomial.map((p) => p.slopes.length));
+  return {
+    prepare(c) {
+      if (c.length < needed) return false;
+      points.forEach((p, i) => {
+        strengths[i] = at(p.strength, c);
+      });
+      polynomial.forEach((p, k) => {
+        d[k] = at(p, c);
+      });
+      return true;
+    },
+    value(x) {
+      let sum = partialSum(d, d.length, x);
+      for (let i = 0; i < branches.length; i++) {
+        const { size, positive, first, weights } = branches[i]!;
+        const w = size / x;
+        let shape = 0;
+        for (let k = 0; k < weights.length; k++)
+          shape += weights[k]! * (positive ? branchSameDouble(first - k, w).pv : branchAlternatingDouble(first - k, w));
+        sum += strengths[i]! * w * shape;
+      }
+      return sum;
+    },
+  };
+}
