@@ -34,6 +34,7 @@ export { digamma } from './special/digamma.js';
 export * from './polynomial/index.js';
 export * from './linear/index.js';
 export { scaledE1, eiScaled } from './special/expint.js';
+export { upperGamma, upperGammaComplex } from './special/upper-gamma.js';
 export { branchSame, branchAlternating, branchCut } from './special/kernels.js';
 export type { BranchValue } from './special/kernels.js';
 export type { DecimalText } from './enclose.js';

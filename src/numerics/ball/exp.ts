@@ -6,7 +6,8 @@
  * Bound      |e^(m+d) − e^m| <= e^m·(e^r − 1) <= e^m·r(1 + r) for |d| <= r <= 1/4; wider balls by e^m·(cosh r ± sinh r).
  */
 import { ln2Fixed } from './constants.js';
-import { expFixed, FIXED_ULPS, wordPrec } from './fixed.js';
+import { wordPrec } from './fixed.js';
+import { expFixed, FIXED_ULPS } from './fixed-tables.js';
 import * as R from './real.js';
 import type { Ball } from './real.js';
 import { shift } from '../bits.js';

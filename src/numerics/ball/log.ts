@@ -2,13 +2,14 @@
  * @module Natural logarithm of a positive ball, and log(1 + x).
  *
  * Purpose    enclosures with relative accuracy everywhere, next to x = 1 too.
- * Method     x = f·2^k; with y the double logarithm of f and E = e^y: log f = y + 2 artanh((f − E)/(f + E)), whose argument
- *            is below 2^-48; next to 1 (within 2^-30) y = 0 and E = 1 exactly.
+ * Method     x = f·2^k; with y the double logarithm of f cut to 24 bits and E = e^y from the tables of exp (beyond them y in full):
+ *            log f = y + 2 artanh((f − E)/(f + E)), whose argument is below 2^-25; next to 1 (within 2^-30) y = 0 and E = 1 exactly.
  * Bound      d/dx log x = 1/x: a ball of relative radius t = r/m < 1 gives |log(1 ± t)| <= t/(1 − t).
  */
 import { bitLength, shift } from '../bits.js';
 import { ln2Fixed } from './constants.js';
-import { expFixed, FIXED_ULPS, wordPrec } from './fixed.js';
+import { wordPrec } from './fixed.js';
+import { expFixed, expLeading, FIXED_ULPS, TABLE_ULPS } from './fixed-tables.js';
 import { divMag, magLower, magRadius, widenMag } from './mag.js';
 import { ODD_ULPS, oddSeries } from './odd-series.js';
 import * as R from './real.js';
@@ -18,6 +19,9 @@ import { Rational } from '../rational.js';
 const GUARD = 22;
 /** |f − 1| below 2^-NEAR: the start value is 0. */
 const NEAR = 30;
+/** Levels of the tables that make the start value, and the working precision up to which they serve (heuristic). */
+const START_LEVELS = 3;
+const TABLE_START = 4096;
 
 /** log x for x > 0; INDETERMINATE when the ball reaches zero. */
 export function log(x: Ball, prec: number): Ball {
@@ -57,21 +61,26 @@ function logMid(x: Ball, prec: number): Ball {
 function logFar(m: bigint, e: number, f: number, k: number, prec: number, extra: number): Ball {
   const wp = wordPrec(prec + GUARD + extra);
   const w = BigInt(wp);
-  const start = BigInt(Math.round(Math.log(f) * 2 ** 52));
-  const y = start << BigInt(wp - 52);
+  // The start value has as many bits as the tables of exp deliver by products alone, or all of a double.
+  const levels = wp <= TABLE_START ? START_LEVELS : 0;
+  const bits = levels > 0 ? 8 * levels : 52;
+  const start = Math.round(Math.log(f) * 2 ** bits);
+  const y = BigInt(start) << BigInt(wp - bits);
+  const power = levels > 0 ? expLeading(Math.abs(start), levels, wp) : expFixed(y < 0n ? -y : y, wp);
+  const ulps = levels > 0 ? TABLE_ULPS : FIXED_ULPS;
   let fx = shift(m, e + wp);
   let ex = 1n << w;
-  // E = e^y for y >= 0; for y < 0 compare f·e^|y| with 1 instead, so that the argument of expFixed is not negative.
-  if (start >= 0n) ex = expFixed(y, wp);
-  else fx = (fx * expFixed(-y, wp)) >> w;
+  // E = e^y for y >= 0; for y < 0 compare f·e^|y| with 1 instead.
+  if (start >= 0) ex = power;
+  else fx = (fx * power) >> w;
   const u = ((fx - ex) << w) / (fx + ex);
-  // fx and ex are off by at most 1.5·FIXED_ULPS and their sum exceeds 1.4: u is right to 3·FIXED_ULPS.
+  // fx and ex are off by at most 1.5·ulps + 2 and their sum exceeds 1.4: u is right to 3·ulps + 4.
   let v = y + 2n * oddSeries(u, wp, 1);
   if (k !== 0) {
     const kb = bitLength(BigInt(k));
     v += (BigInt(k) * ln2Fixed(wp + kb)) >> BigInt(kb);
   }
-  return R.ball(v, -wp, 6 * FIXED_ULPS + 2 * ODD_ULPS + 8, prec);
+  return R.ball(v, -wp, 6 * ulps + 2 * ODD_ULPS + 16, prec);
 }
 
 /** log(1 + x) for x > −1, with relative accuracy near 0. */

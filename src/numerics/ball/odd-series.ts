@@ -9,7 +9,7 @@
  * Reference  D. M. Smith, Math. Comp. 52 (1989) 131.
  */
 import { bitLength } from '../bits.js';
-import { int, powFixed } from './fixed.js';
+import { columns, int, powFixed } from './fixed.js';
 
 export const ODD_ULPS = 2 ** 10;
 
@@ -21,7 +21,7 @@ export function oddSeries(u: bigint, wp: number, s: 1 | -1): bigint {
   if (x === 0n) return u;
   const bits = 2 * (wp - bitLength(u));
   const terms = Math.ceil(wp / Math.max(20, bits)) + 1;
-  const m = terms < 6 ? 1 : Math.min(64, Math.round(Math.sqrt(terms)));
+  const m = terms < 6 ? 1 : columns(terms);
   const y = powFixed(x, m, w);
   const sums: bigint[] = new Array<bigint>(m).fill(0n);
   let k = 0;

@@ -5,13 +5,14 @@
  * Method     sin, cos: reduction to [0, π/4] with as many bits of π as the argument and a near zero need, then sinCosFixed.
  *            sin πx, cos πx: reduction modulo 1/2 is exact.
  *            atan2: with φ the double value of the angle in the first octant, atan(y/x) = φ + artan((yc − xs)/(xc + ys)),
- *            c + is = e^(iφ), whose argument is below 2^-47.
+ *            c + is = e^(iφ), with φ cut to 16 bits and e^(iφ) from the tables of sin and cos (beyond them φ in full).
  * Bound      |sin(m+d) − sin m| <= |cos m| r + r²/2, same with sin and cos exchanged; never above 1.
  *            atan2: |dθ| <= ((|x|+rx) ry + (|y|+ry) rx)/min(x² + y²) over the rectangle.
  */
 import { bitLength, shift } from '../bits.js';
 import { pi, piFixed } from './constants.js';
-import { FIXED_ULPS, sinCosFixed, wordPrec } from './fixed.js';
+import { wordPrec } from './fixed.js';
+import { FIXED_ULPS, sinCosFixed, sinCosLeading, TABLE_ULPS } from './fixed-tables.js';
 import {
   addMag,
   addMagLower,
@@ -37,6 +38,9 @@ export interface SinCos {
 const GUARD = 20;
 /** Arguments beyond 2^HUGE_BITS are not reduced: the answer is [−1, 1]. */
 const HUGE_BITS = 1 << 16;
+/** Levels of the tables that make atan's start value, and the working precision up to which they serve (heuristic). */
+const START_LEVELS = 2;
+const TABLE_START = 4096;
 /** A reduced argument this many bits below 1 makes the reduction start again with more bits. */
 const NEAR_ZERO = 12;
 const UNIT: Ball = { mid: 0n, exp: 0, rad: 1 };
@@ -164,12 +168,15 @@ function octant(a: Ball, b: Ball, e: number, prec: number): Ball {
   const scale = R.upperBits(b);
   const y = shift(a.mid, a.exp - scale + wp);
   const x = shift(b.mid, b.exp - scale + wp); // in [1/2, 1)
-  const start = BigInt(Math.round(Math.atan(Number((y << 53n) / x) * 2 ** -53) * 2 ** 52));
-  const phi = start << BigInt(wp - 52);
-  const [c, s] = sinCosFixed(phi, wp);
-  // Numerator off by at most 2·FIXED_ULPS + 2, denominator at least 1/2: z is right to 5·FIXED_ULPS.
+  const tabled = wp <= TABLE_START;
+  const bits = tabled ? 8 * START_LEVELS : 52;
+  const start = Math.round(Math.atan(Number((y << 53n) / x) * 2 ** -53) * 2 ** bits);
+  const phi = BigInt(start) << BigInt(wp - bits);
+  const [c, s] = tabled ? sinCosLeading(start, START_LEVELS, wp) : sinCosFixed(phi, wp);
+  const ulps = tabled ? TABLE_ULPS : FIXED_ULPS;
+  // Numerator off by at most 2·ulps + 2, denominator at least 1/2: z is right to 5·ulps + 8.
   const z = ((y * c - x * s) << w) / (x * c + y * s);
-  return R.ball(phi + oddSeries(z, wp, -1), -wp, 6 * FIXED_ULPS + ODD_ULPS, prec);
+  return R.ball(phi + oddSeries(z, wp, -1), -wp, 6 * ulps + ODD_ULPS + 16, prec);
 }
 
 /** artan z for 0 < z < 2^-e, e >= 20: z Σ (−z²)^k/(2k+1), tail below 2^(−2en). */

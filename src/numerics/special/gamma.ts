@@ -2,19 +2,28 @@
  * @module Γ and 1/Γ on the real line.
  *
  * Purpose    normalisations of every kernel; 1/Γ is entire and exact zero at the poles of Γ.
- * Method     x > 0: Γ(x) = exp(log Γ(X))/(x(x+1)…(x+n−1)) (stirling.ts). x <= 0: reflection, DLMF 5.5.3, with sin πx reduced
+ * Method     x > 0: at moderate size and precision Taylor polynomials of 1/Γ (gamma-taylor.ts) and a rising product; otherwise
+ *            Γ(x) = exp(log Γ(X))/(x(x+1)…(x+n−1)) (stirling.ts). x <= 0: reflection, DLMF 5.5.3, with sin πx reduced
  *            exactly, so that the neighbourhood of a pole keeps its relative accuracy. Small integers: factorials.
  * Bound      a radius r changes Γ by at most |Γ(m)|·(e^(r·sup|ψ|) − 1), |ψ(x)| <= |log x| + 1/x for x > 0.
  */
+import { shift } from '../bits.js';
 import { pi } from '../ball/constants.js';
 import { exp, expm1, sinCosPi } from '../ball/elementary.js';
+import { wordPrec } from '../ball/fixed.js';
 import { magBits, magRadius, magToNumber, magUpper, mulMag, widenMag } from '../ball/mag.js';
 import * as R from '../ball/real.js';
 import type { Ball } from '../ball/real.js';
+import { reciprocalGamma, taylorServes } from './gamma-taylor.js';
 import { psiBound, shiftedLogGamma } from './log-gamma.js';
+import { risingProduct } from './stirling.js';
 
 /** Heuristic: exact integers up to this are done by multiplication. */
 const FACTORIAL_LIMIT = 256n;
+/** Guard bits of the Taylor polynomials: their error stays below 2^10 units. */
+const TAYLOR_GUARD = 14;
+/** Heuristic: Taylor polynomials with a rising product serve up to this x. */
+const TAYLOR_STEPS = { least: 16, slope: 0.1 } as const;
 /** Γ of arguments beyond 2^HUGE_BITS is not followed. */
 const HUGE_BITS = 40;
 
@@ -63,9 +72,31 @@ function positive(x: Ball, prec: number): Ball {
 function exactPositive(x: Ball, prec: number): Ball {
   if (x.exp >= 0 && x.mid << BigInt(x.exp) <= FACTORIAL_LIMIT)
     return R.round(R.fromNumber(factorial(Number(x.mid << BigInt(x.exp)) - 1)), prec);
+  const wp = wordPrec(prec + TAYLOR_GUARD);
+  const near = R.toNumber(x) < TAYLOR_STEPS.least + TAYLOR_STEPS.slope * wp;
+  if (near && taylorServes(wp)) return byTaylor(x, wp, prec);
   const g = shiftedLogGamma(x, prec + 14);
   // The logarithm's absolute error is the relative error of Γ.
   return R.div(exp(g.log, prec + 8), g.product, prec);
+}
+
+/** x = m + u: Γ(x) = (u+1)…(u+m−1)/(1/Γ(1+u)) for m >= 1, and 1/(x·1/Γ(1+x)) for m = 0. */
+function byTaylor(x: Ball, wp: number, prec: number): Ball {
+  const fixed = shift(x.mid, x.exp + wp);
+  const w = BigInt(wp);
+  const m = Number((fixed + (1n << (w - 1n))) >> w);
+  const u = fixed - (BigInt(m) << w);
+  const { value, ulps } = reciprocalGamma(u, wp);
+  // u is off by less than a unit, and |d/du 1/Γ(1+u)| <= 1.2 on [−1/2, 1/2]
+  const f = R.ball(value, -wp, ulps + 2);
+  if (m === 0) return R.div(R.ONE, R.mul(x, f, prec + 8), prec);
+  if (m === 1) return R.div(R.ONE, f, prec);
+  if (m === 2) return R.div(R.ball(u + (1n << w), -wp, 1), f, prec);
+  // u may be negative: start from u + 1
+  const v = u + (1n << w);
+  const p = risingProduct(v, wp, 1, m - 1);
+  const product = R.mul(R.ball(p.mid, p.exp, m * 2 ** 6), R.ball(v, -wp, 1), wp);
+  return R.div(product, f, prec);
 }
 
 const factorials: bigint[] = [1n];

@@ -68,7 +68,7 @@ function computeLog(eps: Rational, m: number, prec: number): Ball {
 }
 
 /** H_m − γ, minus the limit of L(ε)/ε at 0. */
-function harmonicLimit(m: number, prec: number): Ball {
+export function harmonicLimit(m: number, prec: number): Ball {
   const wp = prec + 12 + bitLength(BigInt(m + 1));
   const one = 1n << BigInt(wp);
   let s = 0n;
@@ -135,7 +135,7 @@ export function polePartComplex(logW: Complex, eps: Rational, m: number, prec: n
 }
 
 /** e^z − 1, accurate relative to |z|. */
-function cexpm1(z: Complex, prec: number): Complex {
+export function cexpm1(z: Complex, prec: number): Complex {
   const e = -C.upperBits(z);
   if (e < prec / 8) return C.sub(cexp(z, prec + Math.max(0, e) + 8), C.ONE, prec);
   // z Σ_{k<n} z^k/(k+1)!, tail below 2·2^(−en)

@@ -129,8 +129,17 @@ export function spreadE1(w: Complex): Mag {
   return mulMag(r, magBits(inverse) < -0.5 ? far : near);
 }
 
-/** Effect of b's radius on F_b, G_b or their one-sided values at |w| >= low. */
-export function spreadExponent(b: Exponent, low: Mag): Mag {
+/** e^(π y), rounded up. */
+function turn(y: number): Mag {
+  const bits = Math.PI * y * Math.LOG2E * (1 + 1e-12);
+  return mag(2 ** (bits - Math.floor(bits)) * (1 + 1e-12), Math.floor(bits));
+}
+
+/**
+ * Effect of b's radius on F_b, G_b or their one-sided values at |w| >= low. `imaginary` bounds |Im b| where b is the real part of
+ * a complex exponent with that radius.
+ */
+export function spreadExponent(b: Exponent, low: Mag, imaginary = 0): Mag {
   if (b.radius.m === 0) return b.radius;
   const r = magToNumber(b.radius);
   const bottom = b.approx - r - 1e-9;
@@ -138,10 +147,11 @@ export function spreadExponent(b: Exponent, low: Mag): Mag {
   if (!(r < 1000) || low.m === 0) return UNBOUNDED;
   const n = Math.max(0, Math.ceil(LOWEST - bottom));
   const inverse = divMag(mag(1), low);
-  let value = mulMag(mag(Math.sqrt(Math.E * (top + n + 2)) * 1.001), inverse);
-  let slope = mulMag(mag(14.1 * Math.sqrt(top + n + 2.4)), inverse);
+  const turned = mulMag(turn(imaginary), inverse);
+  let value = mulMag(mag(Math.sqrt(Math.E * (top + n + 2)) * 1.001), turned);
+  let slope = mulMag(mag(14.1 * Math.sqrt(top + n + 2.4)), turned);
   for (let k = n; k >= 1; k--) {
-    const size = mag(Math.max(Math.abs(bottom + k), Math.abs(top + k)));
+    const size = mag(Math.hypot(Math.max(Math.abs(bottom + k), Math.abs(top + k)), imaginary) * (1 + 1e-12));
     slope = mulMag(addMag(value, mulMag(size, slope)), inverse);
     value = mulMag(addMag(mag(1), mulMag(size, value)), inverse);
   }
