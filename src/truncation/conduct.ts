@@ -1,6 +1,6 @@
 /** @module How the sizes of the known terms behave: what models that live on falling terms have to ask first. */
 import { leastIndex, type Known } from './known.js';
-import { refuse, type TruncationRefusal } from './model.js';
+import { refuse, tooFew, type TruncationRefusal } from './model.js';
 
 /** Index of the last non-zero term. */
 export const lastNonZero = (known: Known): number => known.logs.findLastIndex((l) => l > -Infinity);
@@ -19,6 +19,19 @@ export function endsWithZero(known: Known): TruncationRefusal | undefined {
     'the last known coefficient is exactly zero: no size can be read off it',
     'cut the series before the zero with --order; if the series ends there, its sum has no truncation error',
   );
+}
+
+/** The last term and the ratio to the one before it, with ln|ratio|; a refusal where there is none. */
+export function lastStep(
+  known: Known,
+): { readonly term: number; readonly ratio: number; readonly logRatio: number } | TruncationRefusal {
+  const refused = tooFew(known, 2, 'there is no ratio') ?? endsWithZero(known);
+  if (refused !== undefined) return refused;
+  const logRatio = lastLogRatio(known);
+  if (logRatio === undefined)
+    return refuse('the term before the last one is zero: there is no ratio', 'use the last term');
+  const term = known.values.at(-1) ?? 0;
+  return { term, ratio: Math.exp(logRatio) * Math.sign(term * (known.values.at(-2) ?? 0)), logRatio };
 }
 
 /**

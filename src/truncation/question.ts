@@ -1,10 +1,11 @@
 /** @module The question put to the models: the known terms, and what else of the expansion they may ask for. */
-import { exactReal, R, toNumberExact, type Exact } from '../numerics/index.js';
-import { betaCoefficients, changeScale, divisorSize, evolveLog, flowOf, isRefusal, type Loops } from '../qcd/index.js';
+import { toNumberExact, type Ball } from '../numerics/index.js';
+import { betaCoefficients, divisorSize, evolveLog, flowOf, isRefusal, type Loops } from '../qcd/index.js';
 import type { Expansion } from '../series/index.js';
 import { firstTerms, knownTerms } from './known.js';
 import { refuse, type Moved, type Question, type TruncationRefusal } from './model.js';
 import type { Priors } from './priors.js';
+import { logTable } from './scale/log-table.js';
 
 export type Setting = Pick<Question, 'coupling' | 'flavours' | 'priors'>;
 
@@ -29,13 +30,21 @@ export function restricted(question: Question, count: number): Question | undefi
 
 const isLoops = (n: number): n is Loops => [1, 2, 3, 4, 5].some((k) => k === n);
 
+type CoefficientsAt = (flavours: number, loops: Loops, logRatio: number) => Ball[];
+
 /** x and coefficients at μ′ with ln(μ′²/μ²) = L; every L is worked out once. */
 function mover(expansion: Expansion, { coupling, flavours, priors }: Setting): Question['atScale'] {
   const found = new Map<number, Moved | TruncationRefusal>();
+  let table: ((logRatio: number) => Ball[]) | undefined;
+  const coefficientsAt: CoefficientsAt = (flavourNumber, loops, logRatio) => {
+    const beta = (): ReturnType<typeof betaCoefficients> => betaCoefficients(flavourNumber, coupling.divisor);
+    table ??= logTable(expansion.coefficients, expansion.power, beta().slice(0, loops), MOVED_BITS);
+    return table(logRatio);
+  };
   return (logRatio) => {
     const before = found.get(logRatio);
     if (before !== undefined) return before;
-    const result = moved(expansion, coupling, flavours, priors, logRatio);
+    const result = moved(expansion, coupling, flavours, priors, logRatio, coefficientsAt);
     found.set(logRatio, result);
     return result;
   };
@@ -47,6 +56,7 @@ function moved(
   flavours: number | undefined,
   priors: Priors,
   logRatio: number,
+  coefficientsAt: CoefficientsAt,
 ): Moved | TruncationRefusal {
   if (coupling.plain) return refuse('the variable is no coupling that runs', 'use a model that needs no scale');
   if (flavours === undefined) {
@@ -61,14 +71,5 @@ function moved(
   const divisor = toNumberExact(divisorSize(coupling.divisor));
   const alpha = evolveLog(flowOf(flavours, loops), toNumberExact(expansion.x) * divisor, logRatio);
   if (isRefusal(alpha)) return refuse(alpha.reason, `${alpha.remedy}; or let the scale vary less with scale.factor`);
-  const beta = betaCoefficients(flavours, coupling.divisor).slice(0, loops);
-  const series = { coefficients: expansion.coefficients, firstPower: expansion.power };
-  const coefficients = logRatio === 0 ? expansion.coefficients : changeScale(series, beta, logOf(logRatio));
-  return { kind: 'moved', alpha, x: alpha / divisor, coefficients: coefficients.map((c) => c.ball(MOVED_BITS)) };
+  return { kind: 'moved', alpha, x: alpha / divisor, coefficients: coefficientsAt(flavours, loops, logRatio) };
 }
-
-/** The double L as an inexact number, so that rational coefficients do not grow with its powers. */
-const logOf = (logRatio: number): Exact => {
-  const half = R.fromNumber(logRatio);
-  return exactReal((prec) => R.round(half, prec + 64));
-};

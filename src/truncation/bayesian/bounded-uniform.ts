@@ -19,6 +19,14 @@ export function densityAt(s: number, r: number): number {
   return (s / (2 * (s + 1))) * (r <= 1 ? 1 : r ** (-s - 1));
 }
 
+/** within and densityAt in one: they share the power. */
+export function distributionAt(s: number, r: number): { readonly inside: number; readonly density: number } {
+  const flat = s / (2 * (s + 1));
+  if (r <= 1) return { inside: 2 * flat * r, density: flat };
+  const tail = r ** -s;
+  return { inside: 1 - tail / (s + 1), density: (flat * tail) / r };
+}
+
 /** r with P(|z| < r) = p. */
 export function halfWidth(s: number, p: number): number {
   return p <= s / (s + 1) ? ((s + 1) * p) / s : ((s + 1) * (1 - p)) ** (-1 / s);

@@ -2,8 +2,8 @@
  * @module Geometric tail, |t_m| r/(1−r) with r = |t_m/t_{m−1}| < 1: all missing terms if the last ratio stayed.
  * Reference: common practice.
  */
-import { endsWithZero, lastLogRatio } from '../conduct.js';
-import { refuse, tooFew, type TruncationModel } from '../model.js';
+import { lastStep } from '../conduct.js';
+import { refuse, type TruncationModel } from '../model.js';
 import { conventionalBands } from './bands.js';
 
 export const geometricTail: TruncationModel = {
@@ -17,18 +17,16 @@ export const geometricTail: TruncationModel = {
   reference: 'common practice',
   estimate(question) {
     const { known } = question;
-    const refused = tooFew(known, 2, 'there is no ratio') ?? endsWithZero(known);
-    if (refused !== undefined) return refused;
-    const logRatio = lastLogRatio(known);
-    if (logRatio === undefined)
-      return refuse('the term before the last one is zero: there is no ratio', 'use the last term');
+    const step = lastStep(known);
+    if ('reason' in step) return step;
+    const { term, logRatio } = step;
     if (logRatio >= 0) {
       return refuse(
         `the last ratio ${Math.exp(logRatio).toPrecision(3)} is not below 1: a geometric tail has no sum`,
         'cut the series at its least term with --order, or take a smaller coupling',
       );
     }
-    const tail = (known.values.at(-1) ?? 0) / Math.expm1(-logRatio);
+    const tail = term / Math.expm1(-logRatio);
     const facts = [{ name: 'ratio', value: Math.exp(logRatio) }];
     return { kind: 'estimate', terms: known.values.length, bands: conventionalBands(tail, question), facts, notes: [] };
   },

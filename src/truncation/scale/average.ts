@@ -9,7 +9,7 @@
  *             [abstracts seen, priors from memory].
  */
 import { geometricPosterior, type GeometricPosterior, type GeometricPrior } from '../bayesian/geometric-posterior.js';
-import { within, densityAt } from '../bayesian/bounded-uniform.js';
+import { distributionAt } from '../bayesian/bounded-uniform.js';
 import { ENDS_WITH_ZEROS } from '../bayesian/geometric.js';
 import { doesNotFall } from '../conduct.js';
 import { refuse, tooFew, type Question, type TruncationModel, type TruncationRefusal } from '../model.js';
@@ -32,16 +32,13 @@ export interface ScaleAverage extends Predictive {
 
 const sumOf = (terms: readonly number[]): number => terms.reduce((a, b) => a + b, 0);
 
-/**
- * Distribution of the sum with the next term included, over the scales; undefined when a posterior cannot be normalised.
- *
- * @param marginal weight each scale with the probability of its terms
- */
-export function averageOverScales(
-  nodes: readonly ScaleNode[],
-  prior: GeometricPrior,
-  marginal: boolean,
-): ScaleAverage | undefined {
+const posteriorsKept = new WeakMap<readonly ScaleNode[], { prior: GeometricPrior; posteriors: GeometricPosterior[] }>();
+
+/** The posterior at each scale, kept: both models ask for the same ones. Undefined when one cannot be normalised. */
+function posteriorsOf(nodes: readonly ScaleNode[], prior: GeometricPrior): GeometricPosterior[] | undefined {
+  const before = posteriorsKept.get(nodes);
+  if (before !== undefined && before.prior.omega === prior.omega && before.prior.epsilon === prior.epsilon)
+    return before.posteriors;
   const posteriors: GeometricPosterior[] = [];
   for (const { terms } of nodes) {
     const first = Math.log(Math.abs(terms[0] ?? 0));
@@ -52,6 +49,32 @@ export function averageOverScales(
     if (posterior === undefined) return undefined;
     posteriors.push(posterior);
   }
+  posteriorsKept.set(nodes, { prior, posteriors });
+  return posteriors;
+}
+
+/** Probability of the components that are left out, all together: far below the three digits shown. */
+const LEFT_OUT = 1e-10;
+
+/** The components without the lightest ones. */
+function heaviest<T extends { readonly weight: number }>(parts: readonly T[]): T[] {
+  const sorted = parts.toSorted((a, b) => a.weight - b.weight);
+  let left = 0;
+  return sorted.filter(({ weight }) => (left += weight) > LEFT_OUT);
+}
+
+/**
+ * Distribution of the sum with the next term included, over the scales; undefined when a posterior cannot be normalised.
+ *
+ * @param marginal weight each scale with the probability of its terms
+ */
+export function averageOverScales(
+  nodes: readonly ScaleNode[],
+  prior: GeometricPrior,
+  marginal: boolean,
+): ScaleAverage | undefined {
+  const posteriors = posteriorsOf(nodes, prior);
+  if (posteriors === undefined) return undefined;
   const logs = nodes.map((node, j) => Math.log(node.weight) + (marginal ? (posteriors[j]?.logEvidence ?? 0) : 0));
   const top = Math.max(...logs);
   const raw = logs.map((l) => Math.exp(l - top));
@@ -65,14 +88,15 @@ export function averageOverScales(
       scale: Math.exp(logScale) * Math.abs(node.terms[0] ?? 0),
     })),
   );
-  const kept = parts.filter((p) => p.weight > 1e-12);
+  const kept = heaviest(parts);
   const mean = nodes.reduce((sum, node, j) => sum + (weights[j] ?? 0) * sumOf(node.terms), 0);
   const at = (y: number): { cdf: number; pdf: number } => {
     let [cdf, pdf] = [0, 0];
     for (const { weight, offset, scale } of kept) {
       const r = (y - offset) / scale;
-      cdf += (weight * (1 + Math.sign(r) * within(s, Math.abs(r)))) / 2;
-      pdf += (weight * densityAt(s, Math.abs(r))) / scale;
+      const { inside, density } = distributionAt(s, Math.abs(r));
+      cdf += (weight * (1 + Math.sign(r) * inside)) / 2;
+      pdf += (weight * density) / scale;
     }
     return { cdf, pdf };
   };
@@ -80,8 +104,16 @@ export function averageOverScales(
   return { weights, mean, at, centre: mean, spread };
 }
 
-/** The known terms at the nodes in ln μ. */
+const nodesKept = new WeakMap<Question, ScaleNode[] | TruncationRefusal>();
+
+/** The known terms at the nodes in ln μ, worked out once for a question. */
 function scaleNodes(question: Question): ScaleNode[] | TruncationRefusal {
+  const nodes = nodesKept.get(question) ?? nodesOf(question);
+  nodesKept.set(question, nodes);
+  return nodes;
+}
+
+function nodesOf(question: Question): ScaleNode[] | TruncationRefusal {
   const logFactor = Math.log(question.priors['scale.factor']);
   const nodes: ScaleNode[] = [];
   for (const { at, weight } of gaussLegendre(question.priors['scale.nodes'])) {
