@@ -18,9 +18,10 @@ import {
   flowOf,
   onCircle,
 } from '../qcd/index.js';
-import type { ComplexNumber, Flow, Loops, Refusal } from '../qcd/index.js';
+import type { ComplexNumber, Flow, Refusal } from '../qcd/index.js';
 import type { ContourOrigin, Expansion } from '../series/index.js';
 import { couplingsOnArc } from './circle-double.js';
+import { loopsOf } from './loops.js';
 import { arcNodesDouble } from './gauss-legendre.js';
 
 /** Ways to sum a contour quantity that are fast enough for a hundred thousand replicas. */
@@ -97,12 +98,6 @@ function prepare(origin: ContourOrigin): Prepared {
     prepared.set(origin, found);
   }
   return found;
-}
-
-/** The number of loops as the QCD room wants it: 1 to 5. */
-export function loopsOf(n: number): Loops {
-  const known: readonly Loops[] = [1, 2, 3, 4, 5];
-  return known.find((loops) => loops === n) ?? 5;
 }
 
 /** W(−e^{iφ}) · weight. */

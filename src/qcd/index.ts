@@ -22,7 +22,7 @@ export { isRefusal, refuse, type Refusal } from './refusal.js';
 export { evolveAlpha, evolveLog, type Evolution } from './running/evolve.js';
 export { flowOf, logOverLambda, type Flow } from './running/flow.js';
 export { LAMBDA_DEFINITIONS, alphaOfLambda, lambdaOf, type LambdaDefinition } from './lambda.js';
-export { evolveAlongPath, evolveComplex } from './running/evolve-complex.js';
+export { evolveAlongPath, evolveComplex, pathBlocked } from './running/evolve-complex.js';
 export type { ComplexNumber } from './running/complex-number.js';
 export { expandedAlpha } from './running/expanded.js';
 export {
@@ -54,6 +54,7 @@ export * from './constants/index.js';
 export * from './rewrite/index.js';
 export { exactAlpha, exactLambda, exactMassRatio, type ExactEvolution } from './running/exact-alpha.js';
 export { complexAlpha, type ComplexEvolution } from './running/complex-ball.js';
+export { ballFlow, ballLogOfInverse, complexBracket, realBracket, type BallFlow } from './running/flow-ball.js';
 export {
   MAX_POLE_LOOPS,
   msbarMass,
@@ -76,3 +77,4 @@ export { exactPath, type ExactPathQuestion, type ExactPathResult } from './match
 export { liftExact, type Ring, type RingFormula } from './algebra/ring.js';
 export * from './algebra/truncated.js';
 export { shiftCoupling } from './algebra/renormalisation.js';
+export { polynomialRing } from './algebra/polynomial-ring.js';
