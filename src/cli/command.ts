@@ -1,10 +1,11 @@
 /** @module What a command is: its words for the help, the options it knows, and what it does. */
 import type { OptionName, OptionWords } from './options.js';
+import type { PaperGiven } from './options-papers.js';
 import type { PictureGiven } from './options-pictures.js';
 import type { Surroundings } from './surroundings.js';
 
 /** Option values after checking. Absent means not given. */
-export interface Given extends PictureGiven {
+export interface Given extends PictureGiven, PaperGiven {
   readonly at?: string;
   readonly alphaSMZ?: string;
   readonly alphaS?: string;

@@ -13,6 +13,7 @@ import { plot } from './commands/plot.js';
 import { rewrite } from './commands/rewrite.js';
 import { sum } from './commands/sum.js';
 import { truncation } from './commands/truncation.js';
+import { withPapers } from './papers.js';
 
 const STUDIES: readonly Command[] = [
   assess,
@@ -29,4 +30,6 @@ const STUDIES: readonly Command[] = [
   catalogue,
 ];
 
-export const COMMANDS: readonly Command[] = [...STUDIES, helpCommand(STUDIES)];
+const WITH_FORMS = STUDIES.map(withPapers);
+
+export const COMMANDS: readonly Command[] = [...WITH_FORMS, helpCommand(WITH_FORMS)];

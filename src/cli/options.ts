@@ -1,6 +1,7 @@
 /** @module Every option of the command line: its name, its value, its one line of help. */
 import type { OptionSpec, OptionWords } from './option-kinds.js';
 import { COMPARE_OPTIONS } from './options-compare.js';
+import { PAPER_OPTIONS } from './options-papers.js';
 import { PICTURE_OPTIONS } from './options-pictures.js';
 import { QCD_OPTIONS } from './options-qcd.js';
 
@@ -11,6 +12,7 @@ export type OptionName =
   | keyof typeof QCD_OPTIONS
   | keyof typeof COMPARE_OPTIONS
   | keyof typeof PICTURE_OPTIONS
+  | keyof typeof PAPER_OPTIONS
   | 'by'
   | 'variant'
   | 'by-order'
@@ -32,6 +34,7 @@ export const OPTIONS: Readonly<Record<OptionName, OptionSpec>> = {
   ...QCD_OPTIONS,
   ...COMPARE_OPTIONS,
   ...PICTURE_OPTIONS,
+  ...PAPER_OPTIONS,
   at: {
     kind: 'text',
     placeholder: 'VALUE',

@@ -1,0 +1,79 @@
+/**
+ * @module The literature of a result in BibTeX: the program, the methods whose numbers it holds, and the sources that the
+ * series file names.
+ */
+import { referencesFor } from './references.js';
+import type { Reference } from './references.js';
+import { texText } from './notation.js';
+
+const ACCENTS: Readonly<Record<string, string>> = { é: "{\\'e}", ü: '{\\"u}', ö: '{\\"o}', ć: "{\\'c}", ä: '{\\"a}' };
+
+const accented = (text: string): string => [...text].map((c) => ACCENTS[c] ?? c).join('');
+
+function entryText(type: string, key: string, fields: readonly (readonly [string, string | undefined])[]): string {
+  const lines = fields.flatMap(([name, value]) => (value === undefined ? [] : [`  ${name} = {${value}},`]));
+  return [`@${type}{${key},`, ...lines, '}'].join('\n');
+}
+
+const archive = (eprint: string | undefined): readonly (readonly [string, string | undefined])[] => [
+  ['eprint', eprint],
+  ['archivePrefix', eprint === undefined ? undefined : 'arXiv'],
+];
+
+const referenceText = (reference: Reference): string =>
+  entryText(reference.book === undefined ? 'article' : 'book', reference.key, [
+    ['author', accented(reference.authors.join(' and '))],
+    ['title', reference.book === undefined ? undefined : accented(reference.book)],
+    ['journal', reference.journal],
+    ['volume', reference.volume],
+    ['pages', reference.pages],
+    ['year', reference.year],
+    ...archive(reference.eprint),
+  ]);
+
+const ARXIV = /(?:arXiv:)?\b(\d{4}\.\d{4,5}|(?:hep-(?:ph|th|lat|ex)|math|cond-mat)\/\d{7})\b/;
+
+/** A source of a series file, whose text is its author's: the identifier is found in it where there is one. */
+function sourceText(source: string, i: number, id: string): string {
+  const eprint = ARXIV.exec(source)?.[1];
+  return entryText('misc', `${id.replace(/[^a-z0-9-]/gi, '')}:source${i + 1}`, [
+    ['note', accented(texText(source))],
+    ...archive(eprint),
+  ]);
+}
+
+/** Names of prescriptions and models anywhere in a result. */
+function methodsIn(value: unknown, found: Set<string>): Set<string> {
+  if (Array.isArray(value)) for (const entry of value) methodsIn(entry, found);
+  else if (typeof value === 'object' && value !== null) {
+    const refused = 'refused' in value && value.refused !== undefined;
+    for (const [key, inner] of Object.entries(value)) {
+      if (!refused && (key === 'prescription' || key === 'model') && typeof inner === 'string')
+        found.add(inner.split(':')[0]!);
+      else methodsIn(inner, found);
+    }
+  }
+  return found;
+}
+
+interface WithSources {
+  readonly leastterm?: unknown;
+  readonly series?: { readonly id?: unknown; readonly sources?: unknown };
+}
+
+/** BibTeX entries for a result of `command`. */
+export function bibtexOf(result: object, command: string): string {
+  const { leastterm, series } = result as WithSources;
+  const own = entryText('software', 'leastterm', [
+    ['author', '{Leastterm contributors}'],
+    ['title', 'Leastterm: what a truncated, divergent QCD series is worth'],
+    ['version', typeof leastterm === 'string' ? leastterm : undefined],
+  ]);
+  const sources = Array.isArray(series?.sources) ? series.sources.map(String) : [];
+  const id = typeof series?.id === 'string' ? series.id : 'series';
+  return `${[
+    own,
+    ...referencesFor(command, [...methodsIn(result, new Set())]).map(referenceText),
+    ...sources.map((source, i) => sourceText(source, i, id)),
+  ].join('\n\n')}\n`;
+}

@@ -1,0 +1,80 @@
+/**
+ * @module Tables in LaTeX: booktabs rules, numbers as \num{0.1180(9)} of siunitx, so that the document decides how
+ * uncertainties look. Compiles with \usepackage{booktabs,siunitx}.
+ */
+import { roundPdg, shorten, writeParentheses } from '../numerics/index.js';
+import { texHead, texText } from './notation.js';
+import { isMeasured } from './table.js';
+import type { Cell, Column, Measured, PaperTable } from './table.js';
+
+/** Numbers without an error show at most so many digits. */
+const DIGITS = 8;
+const SIZE_DIGITS = 2;
+
+const exact = ({ plus }: { readonly plus: string }): boolean => Number(plus) === 0;
+
+/** A number as siunitx reads it; asymmetric errors, which it reads only in later versions, are set by hand. */
+export function texNumber({ value, errors }: Measured): string {
+  const known = errors.filter((error) => !exact(error));
+  if (known.length === 0) return `\\num{${shorten(value, DIGITS)}}`;
+  const rounded = roundPdg(
+    value,
+    known.map(({ plus, minus }) => (plus === minus ? plus : { plus, minus })),
+  );
+  if (rounded === undefined) return texText(value);
+  const short = writeParentheses(rounded);
+  if (short !== undefined && known.length === 1) return `\\num{${short}}`;
+  if (short !== undefined) {
+    // Several errors: \num takes one; the others follow in the same units of the last place.
+    const [head = '', ...rest] = short.split(/(?<=\))(?=\()/);
+    const tail = rest.map((part) => part.replace(/e-?\d+$/, '')).join('');
+    const power = /e(-?\d+)$/.exec(short)?.[1];
+    return `$\\num{${head}}${tail}${power === undefined ? '' : `\\times 10^{${power}}`}$`;
+  }
+  const shown = known.map(({ plus, minus }) =>
+    plus === minus ? `\\pm ${shorten(plus, 2)}` : `\\,^{+${shorten(plus, 2)}}_{-${shorten(minus, 2)}}`,
+  );
+  return `$${shorten(value, DIGITS)}${shown.join('')}$`;
+}
+
+const NUMBER = /^[-+]?\d+(\.\d+)?(e[-+]?\d+)?$/;
+
+function cellTex(cell: Cell, kind: Column['kind']): string {
+  if (isMeasured(cell)) return texNumber(cell);
+  if (cell === '') return kind === 'text' ? '' : '{---}';
+  if (kind === 'text' || !NUMBER.test(cell)) return texText(cell);
+  return `\\num{${shorten(cell, kind === 'size' ? SIZE_DIGITS : DIGITS)}}`;
+}
+
+function tableTex(table: PaperTable): string {
+  const align = table.columns.map(({ kind }) => (kind === 'text' ? 'l' : 'r')).join('');
+  const heads = table.columns.map(
+    ({ head, unit }) => texHead(head) + (unit === undefined ? '' : ` [${texText(unit)}]`),
+  );
+  const errors = [
+    ...new Set(table.rows.flat().flatMap((cell) => (isMeasured(cell) ? cell.errors.map(({ label }) => label) : []))),
+  ];
+  const named =
+    errors.length === 0 ? '' : ` Errors in parentheses, in this order where present: ${texText(errors.join(', '))}.`;
+  return [
+    '\\begin{table}',
+    '  \\centering',
+    `  \\caption{${texText(table.title)}.${named}}`,
+    `  \\label{tab:${table.name}}`,
+    `  \\begin{tabular}{${align}}`,
+    '    \\toprule',
+    `    ${heads.join(' & ')} \\\\`,
+    '    \\midrule',
+    ...table.rows.map(
+      (row) => `    ${table.columns.map(({ kind }, i) => cellTex(row[i] ?? '', kind)).join(' & ')} \\\\`,
+    ),
+    '    \\bottomrule',
+    '  \\end{tabular}',
+    ...table.notes.map((note) => `  % ${note.replace(/\n/g, ' ')}`),
+    '\\end{table}',
+  ].join('\n');
+}
+
+/** All tables of a result, one table environment each. */
+export const latexOf = (tables: readonly PaperTable[]): string =>
+  `% needs \\usepackage{booktabs,siunitx}\n${tables.map(tableTex).join('\n\n')}\n`;

@@ -1,0 +1,33 @@
+/** @module The tables of any result, by the command that made it; results are those that --json writes. */
+import type {
+  Assessment,
+  BacktestResult,
+  BacktestSummary,
+  CompareResult,
+  EvolveResult,
+  SumResult,
+  TruncationResult,
+} from '../studies/index.js';
+import type { PaperTable } from './table.js';
+import { assessmentTables } from './tables/assess.js';
+import { compareTables } from './tables/compare.js';
+import { backtestTables, evolveTables, sumTables, truncationTables } from './tables/studies.js';
+
+/** What a result is, its request says. */
+export interface CommandResult {
+  readonly request: { readonly command: string };
+}
+
+const MAKERS: Readonly<Record<string, (result: CommandResult) => PaperTable[]>> = {
+  assess: (result) => assessmentTables(result as CommandResult & Assessment),
+  sum: (result) => sumTables(result as CommandResult & SumResult),
+  compare: (result) => compareTables(result as CommandResult & CompareResult),
+  truncation: (result) => truncationTables(result as CommandResult & TruncationResult),
+  backtest: (result) => backtestTables(result as CommandResult & (BacktestResult | BacktestSummary)),
+  evolve: (result) => evolveTables(result as CommandResult & EvolveResult),
+};
+
+/** Commands whose results have tables. */
+export const TABLED = Object.keys(MAKERS);
+
+export const tablesOf = (result: CommandResult): PaperTable[] => MAKERS[result.request.command]?.(result) ?? [];

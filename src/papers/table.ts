@@ -1,0 +1,72 @@
+/**
+ * @module A table of a result as plain data: what LaTeX, Markdown, CSV and the data-submission YAML all write.
+ *
+ * Numbers stay decimal texts; a measured cell keeps its errors apart by their names, so that a form can print 0.1180(9)
+ * or give each error a column of its own.
+ */
+
+export interface NamedError {
+  /** truncation, ambiguity, input, … */
+  readonly label: string;
+  /** Sizes, both without sign. */
+  readonly plus: string;
+  readonly minus: string;
+}
+
+export interface Measured {
+  readonly value: string;
+  readonly errors: readonly NamedError[];
+}
+
+/** An empty text is a cell with nothing to say. */
+export type Cell = string | Measured;
+
+export interface Column {
+  /** Head in the notation of `notation.ts`: plain words, x_{i}, x^{n}, and *x* for a quantity. */
+  readonly head: string;
+  /** One word for machines. */
+  readonly key: string;
+  /** size: a number that is read for its magnitude, such as an ambiguity; shown to two digits. */
+  readonly kind: 'text' | 'number' | 'size';
+  readonly unit?: string;
+}
+
+export interface PaperTable {
+  /** One word for machines and file names. */
+  readonly name: string;
+  readonly title: string;
+  readonly columns: readonly Column[];
+  readonly rows: readonly (readonly Cell[])[];
+  /** What the reader of the table has to know: definitions, cautions, who refused. */
+  readonly notes: readonly string[];
+}
+
+export const isMeasured = (cell: Cell): cell is Measured => typeof cell !== 'string';
+
+export const text = (key: string, head = key): Column => ({ key, head, kind: 'text' });
+
+export const number = (key: string, head = key, unit?: string): Column => ({
+  key,
+  head,
+  kind: 'number',
+  ...(unit === undefined ? {} : { unit }),
+});
+
+export const size = (key: string, head = key, unit?: string): Column => ({ ...number(key, head, unit), kind: 'size' });
+
+/** A symmetric error, or none where the text is absent. */
+export const symmetric = (label: string, size: string | undefined): NamedError[] =>
+  size === undefined ? [] : [{ label, plus: size.replace(/^[-+]/, ''), minus: size.replace(/^[-+]/, '') }];
+
+/** A value with its errors; an empty cell where there is no value. */
+export const measured = (value: string | undefined, ...errors: readonly (readonly NamedError[])[]): Cell =>
+  value === undefined ? '' : { value, errors: errors.flat() };
+
+/** Labels of the errors in a column, in the order in which they first come. */
+export function errorLabels(table: PaperTable, column: number): string[] {
+  const labels = table.rows.flatMap((row) => {
+    const cell = row[column] ?? '';
+    return isMeasured(cell) ? cell.errors.map(({ label }) => label) : [];
+  });
+  return [...new Set(labels)];
+}
