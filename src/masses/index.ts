@@ -8,3 +8,5 @@ export {
 } from './definition.js';
 export { DEFINITIONS, definitionOf } from './definitions.js';
 export type { GivenCoupling, MassConversion, MassRequest } from './request.js';
+export { convertMass } from './convert.js';
+export { exactMass, type ExactInputs } from './exact.js';

@@ -31,7 +31,7 @@ function average(k: number): Exact {
   return exact(value);
 }
 
-const PS_SERIES: SeriesInA = {
+export const PS_SERIES: SeriesInA = {
   key: 'ps',
   coefficients(light) {
     const relation = potentialRelation(light, '4*pi');
