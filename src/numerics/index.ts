@@ -40,6 +40,7 @@ export type { BranchValue } from './special/kernels.js';
 export type { DecimalText } from './enclose.js';
 export { certainDigits, raisePrecision, toDecimal } from './enclose.js';
 export { LARGEST_SEED, Philox, Substreams } from './random/index.js';
+export * from './interpolation/index.js';
 export {
   gammaDouble,
   rgammaDouble,
