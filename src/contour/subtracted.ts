@@ -8,8 +8,8 @@
  * Bound      converged, as the contour integrals.
  * Reference  M. Benitez-Rathgeb, D. Boito, A. H. Hoang, M. Jamin, arXiv:2202.10957, 2207.01116 (abstracts read).
  */
-import { C, exact, mulExact, R, Rational } from '../numerics/index.js';
-import type { Ball, Complex, Exact } from '../numerics/index.js';
+import { C, exact, mulExact, R } from '../numerics/index.js';
+import type { Ball, Complex, Exact, Rational } from '../numerics/index.js';
 import {
   circleMoments,
   exactInPiSquared,

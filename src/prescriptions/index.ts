@@ -51,6 +51,9 @@ export type { Outcome, Prescription, Refusal, Request, Sum, Trust } from './pres
 export { leastTerm, partialSums, prefactor, terms } from './prescription.js';
 export { innermostPole, leroyParameter, noiseOf } from './borel-pade.js';
 export { innermostRest, knownFactors } from './borel-partial-pade.js';
+export { CONTOUR_NAMES } from './contour-names.js';
+export { contourPrescriptions } from './contour-quantities.js';
+export type { ContourEngine } from './contour-quantities.js';
 export { placeOf } from './climb.js';
 export { cutsOf, memberLabel } from './conformal.js';
 export { cleanPart, pairConfirmed, termsBeforeAlternation } from './eligibility.js';

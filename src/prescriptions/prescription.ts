@@ -57,7 +57,7 @@ export interface Prescription {
   readonly title: string;
   /** One line: what it is, for lists. */
   readonly summary: string;
-  readonly family: 'truncation' | 'scale' | 'coupling' | 'borel' | 'model';
+  readonly family: 'truncation' | 'scale' | 'coupling' | 'borel' | 'model' | 'contour';
   apply(expansion: Expansion, growth: Growth, request: Request): readonly Outcome[];
 }
 

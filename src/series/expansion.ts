@@ -18,6 +18,8 @@ export interface StatedSingularity {
   /** c₁, c₂, …; empty when unknown. */
   readonly corrections: readonly Exact[];
   readonly strength?: Exact;
+  /** C_1, C_2, … of the operator's coefficient function 1 + C_1 x + C_2 x² + …, where the file has them. */
+  readonly wilson?: readonly Exact[];
   readonly dimension?: Exact;
   readonly kind: 'infrared' | 'ultraviolet' | 'other';
   /** The series file, the operator product expansion, or the terms themselves. */

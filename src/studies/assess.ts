@@ -32,6 +32,8 @@ export interface AssessOptions {
   readonly digits: number;
   /** Names of the prescriptions to run; CORE when absent. */
   readonly by?: readonly string[];
+  /** Prescriptions beside the usual ones: those of contour quantities, see contourPrescriptions. */
+  readonly more?: readonly Prescription[];
   /** The rule that makes the verdict; the ladder when absent. */
   readonly verdictRule?: VerdictRule;
   /** What was asked, repeated in the result. */
@@ -70,16 +72,34 @@ function inputsOf(series: Series, expanded: Expanded, at: Uncertain): Inputs {
     xError: relativeCouplingError(at),
     coefficientErrors: expanded.errors,
     ...(correlation === undefined ? {} : { correlation }),
+    ...onCircle(series, expanded),
   };
 }
 
-/** The prescriptions of that name, all when `by` is absent. Throws RangeError naming the known ones. */
-export function prescriptionsNamed(by: readonly string[] | undefined): readonly Prescription[] {
-  if (by === undefined) return PRESCRIPTIONS;
+/** Of a contour quantity: the errors of the coefficients that stand under the integral. */
+function onCircle(series: Series, expanded: Expanded): Pick<Inputs, 'onCircle'> {
+  const { contour } = expanded.expansion;
+  if (contour === undefined) return {};
+  const kept = contour.errors.length;
+  const correlation = series.expandedFrom?.correlation
+    ?.slice(0, kept)
+    .map((row) => row.slice(0, kept).map((q) => q.toNumber()));
+  return {
+    onCircle: { coefficientErrors: contour.errors, ...(correlation === undefined ? {} : { correlation }) },
+  };
+}
+
+/** The prescriptions of that name, all when `by` is absent; `more` beside the usual ones. Throws RangeError naming the known ones. */
+export function prescriptionsNamed(
+  by: readonly string[] | undefined,
+  more: readonly Prescription[] = [],
+): readonly Prescription[] {
+  const known = more.length === 0 ? PRESCRIPTIONS : [...PRESCRIPTIONS, ...more];
+  if (by === undefined) return known;
   return by.map((name) => {
-    const found = PRESCRIPTIONS.find((p) => p.name === name);
+    const found = known.find((p) => p.name === name);
     if (found === undefined)
-      throw new RangeError(`no prescription "${name}"; known: ${PRESCRIPTIONS.map((p) => p.name).join(', ')}`);
+      throw new RangeError(`no prescription "${name}"; known: ${known.map((p) => p.name).join(', ')}`);
     return found;
   });
 }
@@ -94,7 +114,7 @@ export interface Summed {
 export function sumUp(
   given: Series,
   at: Uncertain,
-  options: Pick<AssessOptions, 'order' | 'digits' | 'by'>,
+  options: Pick<AssessOptions, 'order' | 'digits' | 'by' | 'more'>,
   central = false,
 ): Summed {
   const series = fixedOrderSeries(given);
@@ -104,7 +124,7 @@ export function sumUp(
   const values = evaluateAll(
     expanded.expansion,
     growth,
-    prescriptionsNamed(options.by),
+    prescriptionsNamed(options.by, options.more),
     options.digits,
     inputsOf(series, expanded, at),
     central,

@@ -138,8 +138,14 @@ export function backtest(given: Series, at: Uncertain, options: BacktestOptions)
   const hidden = hidings(count, options.hide);
   const seen = hidden.map((h) => seenOf(known, h));
   const chosen = common[0];
-  const prescriptions = prescriptionsNamed(options.by).map((p) =>
-    methodOf(p, known, memberOf(p.apply(known.expansion, growth, { digits: PREDICT_DIGITS, central: true })), seen, common),
+  const prescriptions = prescriptionsNamed(options.by, options.more).map((p) =>
+    methodOf(
+      p,
+      known,
+      memberOf(p.apply(known.expansion, growth, { digits: PREDICT_DIGITS, central: true })),
+      seen,
+      common,
+    ),
   );
   return {
     leastterm: VERSION,

@@ -181,6 +181,7 @@ function statedSingularities(series: Series, leadingZeros: number, scale: Exact 
       ...(exponent === undefined ? {} : { exponent }),
       corrections: shift === 0 && expected !== undefined ? expected.corrections : [],
       ...(s.strength === undefined ? {} : { strength: s.strength.value }),
+      ...(s.wilsonCorrections === undefined ? {} : { wilson: s.wilsonCorrections }),
       ...(dimension === undefined ? {} : { dimension }),
       kind: s.kind,
       origin: expected === undefined ? 'file' : 'operator product expansion',

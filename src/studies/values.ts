@@ -7,6 +7,7 @@ import type { Growth } from '../growth/index.js';
 import type { Outcome, Prescription, Sum } from '../prescriptions/index.js';
 import type { Expansion } from '../series/index.js';
 import type { ValueEntry } from './assessment.js';
+import { fixedOrderOf } from './contour/moment.js';
 import { ballText, indicative } from './figures.js';
 
 export interface Inputs {
@@ -16,6 +17,8 @@ export interface Inputs {
   readonly coefficientErrors: readonly number[];
   /** Correlation matrix of the coefficient errors; identity when absent. */
   readonly correlation?: readonly (readonly number[])[];
+  /** Of a contour quantity: the errors of the coefficients of D, for the prescriptions that sum these. */
+  readonly onCircle?: Pick<Inputs, 'coefficientErrors' | 'correlation'>;
 }
 
 export interface Evaluated {
@@ -61,16 +64,18 @@ function inputError(e: Expansion, growth: Growth, p: Prescription, sum: Sum, inp
     inputs.xError > 0
       ? slope({ ...e, x: scaledBy(e.x, 1 + inputs.xError / 2) }, { ...e, x: scaledBy(e.x, 1 - inputs.xError / 2) })
       : 0;
-  const noisy = inputs.coefficientErrors.flatMap((s, n) => (s > 0 && n < e.coefficients.length ? [n] : []));
-  const fromC = noisy.map((n) =>
-    slope(shift(e, n, inputs.coefficientErrors[n]! / 2), shift(e, n, -inputs.coefficientErrors[n]! / 2)),
-  );
+  const onCircle = p.family === 'contour' ? inputs.onCircle : undefined;
+  const { coefficientErrors, correlation } = onCircle ?? inputs;
+  const move = onCircle === undefined ? shift : shiftOnCircle;
+  const count = (onCircle === undefined ? e : (e.contour ?? e)).coefficients.length;
+  const noisy = coefficientErrors.flatMap((s, n) => (s > 0 && n < count ? [n] : []));
+  const fromC = noisy.map((n) => slope(move(e, n, coefficientErrors[n]! / 2), move(e, n, -coefficientErrors[n]! / 2)));
   if (inputs.xError === 0 && noisy.length === 0) return undefined;
   if (fromX === undefined || fromC.some((s) => s === undefined)) return undefined;
   let variance = fromX * fromX;
   noisy.forEach((n, i) =>
     noisy.forEach((m, j) => {
-      const rho = i === j ? 1 : (inputs.correlation?.[n]?.[m] ?? 0);
+      const rho = i === j ? 1 : (correlation?.[n]?.[m] ?? 0);
       variance += rho * fromC[i]! * fromC[j]!;
     }),
   );
@@ -86,6 +91,14 @@ function shift(e: Expansion, n: number, by: number): Expansion {
     ...e,
     coefficients: e.coefficients.map((c, k) => (k === n ? addExact(c, exact(Rational.fromNumber(by))) : c)),
   };
+}
+
+/** The same for a coefficient of D; the fixed-order coefficients follow where a prescription needs both. */
+function shiftOnCircle(e: Expansion, n: number, by: number): Expansion {
+  const { contour } = e;
+  if (contour === undefined) return e;
+  const coefficients = contour.coefficients.map((c, k) => (k === n ? addExact(c, exact(Rational.fromNumber(by))) : c));
+  return { ...e, contour: { ...contour, coefficients }, coefficients: fixedOrderOf(contour, coefficients, e) };
 }
 
 /** The plain row of the result. */

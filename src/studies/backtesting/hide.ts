@@ -8,7 +8,8 @@ const FEWEST_SEEN = 2;
 export function firstOf(expanded: Expanded, count: number): Expanded {
   const { expansion: e, growthInput: g } = expanded;
   if (count >= e.coefficients.length) return expanded;
-  const { running } = e;
+  const { running, contour } = e;
+  const onCircle = count + expanded.leadingZeros;
   const polynomials = running?.flavourPolynomials;
   return {
     ...expanded,
@@ -19,6 +20,15 @@ export function firstOf(expanded: Expanded, count: number): Expanded {
       ...(running === undefined || polynomials === undefined
         ? {}
         : { running: { ...running, flavourPolynomials: polynomials.slice(0, count) } }),
+      ...(contour === undefined
+        ? {}
+        : {
+            contour: {
+              ...contour,
+              coefficients: contour.coefficients.slice(0, onCircle),
+              errors: contour.errors.slice(0, onCircle),
+            },
+          }),
     },
     errors: expanded.errors.slice(0, count),
     growthInput: {

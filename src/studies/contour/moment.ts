@@ -15,7 +15,7 @@ import {
   weightIntegral,
 } from '../../qcd/index.js';
 import { InputError, weightText } from '../../series/index.js';
-import type { Series } from '../../series/index.js';
+import type { ContourOrigin, Expansion, Series } from '../../series/index.js';
 import { couplingScheme, knownLoops } from '../scheme.js';
 import { momentCoefficients } from './coefficients.js';
 import { momentCondensate, momentSingularity } from './singularities.js';
@@ -43,6 +43,14 @@ export function circleRunning(series: Series): CircleRunning {
   if (flavours === undefined) throw problem('no number of flavours', 'a field "flavours"');
   const loops = knownLoops(scheme);
   return { flavours, loops, beta: betaCoefficients(flavours, series.coupling.divisor).slice(0, loops) };
+}
+
+/** The fixed-order coefficients that belong to other coefficients of D; as many as the expansion has, leading zeros left out. */
+export function fixedOrderOf(origin: ContourOrigin, coefficients: readonly Exact[], e: Expansion): readonly Exact[] {
+  const beta = betaCoefficients(origin.flavours, origin.divisor).slice(0, origin.loops);
+  const moments = circleMoments(origin.integral, coefficients.length).map(exactInPiSquared);
+  const values = expandOnCircle(coefficients, exact(origin.power), beta, moments);
+  return values.slice(e.power - origin.power);
 }
 
 const made = new WeakMap<Series, Series>();
