@@ -6,7 +6,7 @@ export const COMPARE_OPTIONS = {
     kind: 'text',
     placeholder: 'GRID',
     example: '0.1:0.4:7',
-    help: 'several couplings in place of --at: start:stop:count with both ends, or a list 0.1,0.2,0.3',
+    help: 'several couplings in place of --at: start:stop:count with both ends, or a list 0.1,0.2,0.3; or several scales mu/Q beside --at: scale=0.5:2:5 (even in ln mu), scale=0.5,1,2',
   },
   only: {
     kind: 'list',

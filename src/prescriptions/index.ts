@@ -17,6 +17,7 @@ import { orderDependentMap } from './order-dependent-map.js';
 import { pade } from './pade.js';
 import { pms } from './pms.js';
 import type { Prescription } from './prescription.js';
+import { scaleVariation } from './scale-variation.js';
 import { singularityModel } from './singularity-model.js';
 import { terminantSum } from './terminant.js';
 import { wenigerDelta } from './weniger-delta.js';
@@ -27,6 +28,7 @@ export const PRESCRIPTIONS: readonly Prescription[] = [
   leastTermSum,
   terminantSum,
   hyperasymptotic,
+  scaleVariation,
   fac,
   pms,
   blm,
@@ -49,11 +51,11 @@ export const PRESCRIPTIONS: readonly Prescription[] = [
 
 export type { Outcome, Prescription, Refusal, Request, Sum, Trust } from './prescription.js';
 export { leastTerm, partialSums, prefactor, terms } from './prescription.js';
-export { innermostPole, leroyParameter, noiseOf } from './borel-pade.js';
-export { innermostRest, knownFactors } from './borel-partial-pade.js';
 export { CONTOUR_NAMES } from './contour-names.js';
 export { contourPrescriptions } from './contour-quantities.js';
 export type { ContourEngine } from './contour-quantities.js';
+export { innermostPole, leroyParameter, noiseOf } from './borel-pade.js';
+export { innermostRest, knownFactors } from './borel-partial-pade.js';
 export { placeOf } from './climb.js';
 export { cutsOf, memberLabel } from './conformal.js';
 export { cleanPart, pairConfirmed, termsBeforeAlternation } from './eligibility.js';

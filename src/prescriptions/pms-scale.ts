@@ -11,7 +11,7 @@ import { R } from '../numerics/index.js';
 import type { Ball, Exact } from '../numerics/index.js';
 import { scaleLogTable } from '../qcd/index.js';
 import type { Expansion, Running } from '../series/index.js';
-import { betaFunction, bracket, runCoupling } from './running-coupling.js';
+import { betaFunction, bracket, runner } from './running-coupling.js';
 import type { BetaFunction } from './running-coupling.js';
 
 export interface Stationary {
@@ -33,7 +33,8 @@ interface Problem {
   readonly beta: BetaFunction;
   /** d_n as polynomials in L. */
   readonly table: readonly (readonly Exact[])[];
-  readonly x: Exact;
+  /** x at a shift of ln μ². */
+  readonly run: (shift: Ball) => Ball | undefined;
   readonly power: number;
 }
 
@@ -50,7 +51,7 @@ function row(coefficients: readonly Exact[], L: Ball, prec: number): readonly [B
 
 /** D and dD/dL at L = ln(μ²/μ_0²); undefined below the Landau pole. */
 function at(p: Problem, L: Ball, prec: number): readonly [Ball, Ball] | undefined {
-  const x = runCoupling(p.beta, p.x.ball(prec), L, prec);
+  const x = p.run(L);
   if (x === undefined) return undefined;
   const velocity = R.neg(R.mul(R.mul(p.beta.b0, R.sqr(x, prec), prec), bracket(p.beta, x, prec), prec));
   let weight = R.powInt(x, p.power - 1, prec);
@@ -77,15 +78,14 @@ export function stationaryPoints(
 ): readonly Stationary[] {
   const coefficients = e.coefficients.slice(0, count);
   const work = prec + 32;
-  const make = (bits: number): Problem => ({
-    beta: betaFunction(
+  const table = scaleLogTable({ coefficients, firstPower: e.power }, running.beta);
+  const make = (bits: number): Problem => {
+    const beta = betaFunction(
       running.beta.map((b) => b.ball(bits)),
       bits,
-    ),
-    table: scaleLogTable({ coefficients, firstPower: e.power }, running.beta),
-    x: e.x,
-    power: e.power,
-  });
+    );
+    return { beta, table, run: runner(beta, e.x.ball(bits), bits), power: e.power };
+  };
   const rough = make(GRID_BITS);
   const slopeAt = (L: number): number | undefined => {
     const found = at(rough, R.fromNumber(L), GRID_BITS);

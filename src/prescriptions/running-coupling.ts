@@ -91,8 +91,13 @@ const NEWTON_STEPS = 60;
  * x with scaleFunction(x) = target, enclosed; `start` a guess. Undefined when there is none below the first zero of S or
  * below LARGEST/(4π b_0-like size), that is at or below the Landau pole.
  */
-export function invertScale(beta: BetaFunction, target: Ball, start: number, prec: number): Ball | undefined {
-  const f = scaleFunction(beta, prec);
+export function invertScale(
+  beta: BetaFunction,
+  target: Ball,
+  start: number,
+  prec: number,
+  f = scaleFunction(beta, prec),
+): Ball | undefined {
   if (f === undefined) return undefined;
   const goal = R.exactMid(target);
   let x = start;
@@ -142,10 +147,15 @@ function sharpen(
   return undefined;
 }
 
-/** x at ln μ² larger by `shift`, from x; undefined below the Landau pole. */
-export function runCoupling(beta: BetaFunction, x: Ball, shift: Ball, prec: number): Ball | undefined {
+/** x at ln μ² larger by a shift, for any number of shifts; the zeros of S are found once. Undefined below the Landau pole. */
+export function runner(beta: BetaFunction, x: Ball, prec: number): (shift: Ball) => Ball | undefined {
   const f = scaleFunction(beta, prec);
-  if (f === undefined || !R.isPositive(bracket(beta, x, prec))) return undefined;
-  const target = R.add(f(x), R.mul(beta.b0, shift, prec), prec);
-  return invertScale(beta, target, R.toNumber(x), prec);
+  if (f === undefined || !R.isPositive(bracket(beta, x, prec))) return () => undefined;
+  const here = f(x);
+  const start = R.toNumber(x);
+  return (shift) => invertScale(beta, R.add(here, R.mul(beta.b0, shift, prec), prec), start, prec, f);
 }
+
+/** x at ln μ² larger by `shift`, from x; undefined below the Landau pole. */
+export const runCoupling = (beta: BetaFunction, x: Ball, shift: Ball, prec: number): Ball | undefined =>
+  runner(beta, x, prec)(shift);

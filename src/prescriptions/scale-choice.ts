@@ -20,14 +20,20 @@ export interface AtScale {
   readonly shorter: Ball;
 }
 
+/** Refusal of a series without a running coupling. */
+export function runningObjection(e: Expansion, variant: string): Refusal | undefined {
+  if (e.running !== undefined) return undefined;
+  return refusal(
+    variant,
+    'the expansion variable does not run',
+    'state a coupling and a number of flavours in the series file',
+  );
+}
+
 /** Refusal of a series without a running coupling, with a power that is none, or with too few terms. */
 export function scaleObjection(e: Expansion, variant: string, fewest: number): Refusal | undefined {
-  if (e.running === undefined)
-    return refusal(
-      variant,
-      'the expansion variable does not run',
-      'state a coupling and a number of flavours in the series file',
-    );
+  const still = runningObjection(e, variant);
+  if (still !== undefined) return still;
   if (e.power < 1)
     return refusal(
       variant,

@@ -4,6 +4,7 @@ import { shorten } from '../numerics/index.js';
 import { csv } from './csv.js';
 import { plusMinus, rough } from './layout/figures.js';
 import { Page } from './layout/page.js';
+import type { Fact } from './layout/page.js';
 import { unpainted } from './layout/paint.js';
 import { couplingFacts } from './sections/read.js';
 import { cautionPoints } from './sections/verdict.js';
@@ -96,17 +97,18 @@ export function compareText(result: CompareResult, options: TerminalOptions = {}
   const page = new Page(options.columns ?? 100, options.paint ?? unpainted, options.digits);
   page.title(result.series.title);
   for (const point of result.points) {
-    const at = point.coupling.value;
+    const { value: at } = point.coupling;
+    const scale: Fact[] = point.scale === undefined ? [] : [{ label: 'scale', text: `μ/Q = ${point.scale}` }];
     page.blank();
     page.facts(
       result.points.length === 1
         ? couplingFacts(result.series, point.coupling)
-        : couplingFacts(result.series, point.coupling).slice(0, 1),
+        : [...scale, ...couplingFacts(result.series, point.coupling).slice(0, 1)],
     );
     page.blank();
     pointTable(
       page,
-      result.rows.filter((row) => row.at === at),
+      result.rows.filter((row) => row.at === at && row.scale === point.scale),
       point,
     );
   }
@@ -120,14 +122,14 @@ export function compareText(result: CompareResult, options: TerminalOptions = {}
   return page.text();
 }
 
-/** name, value, truncation error: a line a value, set off by tabs; the coupling in front where there are several. */
+/** name, value, truncation error: a line a value, set off by tabs; the coupling (the scale) in front where there are several. */
 export function compareLines(result: CompareResult): string {
   return result.rows
     .flatMap((row) =>
       row.value === undefined
         ? []
         : [
-            `${[...(result.points.length > 1 ? [row.at] : []), row.prescription, row.value, row.truncationError ?? ''].join('\t')}\n`,
+            `${[...(result.points.length > 1 ? [row.scale ?? row.at] : []), row.prescription, row.value, row.truncationError ?? ''].join('\t')}\n`,
           ],
     )
     .join('');
@@ -135,6 +137,7 @@ export function compareLines(result: CompareResult): string {
 
 const HEAD = [
   'coupling',
+  'scale',
   'x',
   'prescription',
   'family',
@@ -162,6 +165,7 @@ export function compareCsv(result: CompareResult): string {
     HEAD,
     result.rows.map((row) => [
       row.at,
+      row.scale,
       row.x,
       row.prescription,
       row.family,

@@ -4,6 +4,8 @@
 import { R } from '../numerics/index.js';
 import type { Ball } from '../numerics/index.js';
 import type { Prescription, Sum } from '../prescriptions/index.js';
+import { isRefusal } from '../qcd/index.js';
+import type { Refusal } from '../qcd/index.js';
 import type { ReadNumber, Series, Uncertain } from '../series/index.js';
 import type { AssessOptions } from './assess.js';
 import { centralSums, sumUp } from './assess.js';
@@ -13,7 +15,10 @@ import { records } from './backtesting/record.js';
 import { cautions } from './cautions.js';
 import { valueCautions } from './comparing-cautions.js';
 import { fixedOrderSeries } from './contour/moment.js';
+import { checkCoupling } from './coupling-range.js';
 import { ballText } from './figures.js';
+import { atScaleRatio } from './scale-grid.js';
+import type { ComparedAt } from './scale-grid.js';
 import { couplingSummary, seriesSummary } from './summary.js';
 import { valueEntry } from './values.js';
 import type { Evaluated } from './values.js';
@@ -23,9 +28,10 @@ export const SORTS = ['value', 'truncation', 'ambiguity', 'score'] as const;
 export type Sort = (typeof SORTS)[number];
 
 export interface CompareRow {
-  /** The coupling value of this row, and x. */
+  /** The coupling value of this row, and x; μ/Q where scales are compared. */
   readonly at: string;
   readonly x: string;
+  readonly scale?: string;
   readonly prescription: string;
   readonly family: Prescription['family'];
   readonly variant: string;
@@ -53,6 +59,8 @@ export interface Spread {
 
 export interface ComparePoint {
   readonly coupling: CouplingSummary;
+  /** μ/Q, where scales are compared. */
+  readonly scale?: string;
   /** Lowest and highest value: of all rows, and of those without a caution. */
   readonly spread: { readonly all?: Spread; readonly unflagged?: Spread };
 }
@@ -61,9 +69,9 @@ export interface CompareResult {
   readonly leastterm: string;
   readonly request: AssessOptions['request'];
   readonly series: SeriesSummary;
-  /** One for each coupling. */
+  /** One for each coupling or scale. */
   readonly points: readonly ComparePoint[];
-  /** One for each coupling and prescription, refusals included. */
+  /** One for each point and prescription, refusals included. */
   readonly rows: readonly CompareRow[];
   readonly cautions: readonly Caution[];
 }
@@ -117,13 +125,18 @@ function keyOf(sum: Sum, record: ValueRecord | undefined, sort: Sort | undefined
 }
 
 /** The rows at one coupling. */
-function pointRows(series: Series, summed: Summed, point: CouplingSummary, options: CompareOptions): Row[] {
+function pointRows(
+  { series, scale }: ComparedAt,
+  summed: Summed,
+  point: CouplingSummary,
+  options: CompareOptions,
+): Row[] {
   const { expanded, growth, values } = summed;
   const sums = centralSums(values);
   const hide = options.hide ?? (expanded.expansion.coefficients.length > LONG ? 0 : 1);
   const exact = options.exact === undefined ? {} : { exact: options.exact };
   const list = hide > 0 ? records(series, expanded, sums, { hide, ...exact }) : new Map<string, ValueRecord>();
-  const place = { at: point.value, x: point.x };
+  const place = { at: point.value, x: point.x, ...(scale === undefined ? {} : { scale }) };
   const rowOf = (prescription: Prescription, own: readonly Evaluated[]): Row => {
     const { name, family } = prescription;
     const sum = sums.get(prescription);
@@ -156,26 +169,54 @@ function pointRows(series: Series, summed: Summed, point: CouplingSummary, optio
 /** All prescriptions side by side, at each of the coupling values. */
 export function compare(given: Series, at: readonly Uncertain[], options: CompareOptions): CompareResult {
   const series = fixedOrderSeries(given);
+  return comparePoints(
+    series,
+    at.map((value) => ({ series, at: value })),
+    options,
+  );
+}
+
+/** The same at each of the scales μ/Q, `at` being the coupling at the scale of the file. */
+export async function compareScales(
+  given: Series,
+  at: Uncertain,
+  scales: readonly Uncertain[],
+  options: CompareOptions,
+): Promise<CompareResult | Refusal> {
+  const series = fixedOrderSeries(given);
+  checkCoupling(series, at);
+  const places: ComparedAt[] = [];
+  for (const scale of scales) {
+    const place = await atScaleRatio(series, at, scale);
+    if (isRefusal(place)) return place;
+    places.push(place);
+  }
+  return comparePoints(series, places, options);
+}
+
+function comparePoints(given: Series, places: readonly ComparedAt[], options: CompareOptions): CompareResult {
   const points: ComparePoint[] = [];
   const rows: CompareRow[] = [];
   const said: Caution[] = [];
   let summary: SeriesSummary | undefined;
-  for (const value of at) {
+  for (const place of places) {
+    const { series, at: value, scale } = place;
     const summed = sumUp(series, value, options, true);
     const { expanded, growth } = summed;
     const coupling = couplingSummary(series, value, expanded, options.digits, options.path);
-    const own = pointRows(series, summed, coupling, options);
+    const own = pointRows(place, summed, coupling, options);
     const all = spreadOf(own.flatMap((r) => (r.value === undefined ? [] : [r.value])));
     const unflagged = spreadOf(
       own.flatMap((r) => (r.value === undefined || r.entry.cautions.length > 0 ? [] : [r.value])),
     );
     points.push({
       coupling,
+      ...(scale === undefined ? {} : { scale }),
       spread: { ...(all === undefined ? {} : { all }), ...(unflagged === undefined ? {} : { unflagged }) },
     });
     rows.push(...own.map((r) => r.entry));
     said.push(...cautions(series, expanded, growth, undefined, summed.values));
-    summary ??= seriesSummary(series, expanded);
+    summary ??= { ...seriesSummary(series, expanded), title: given.title, notes: given.notes };
   }
   if (summary === undefined) throw new RangeError('compare: no coupling value given');
   return {

@@ -32,10 +32,10 @@ export type {
   EstimateRecord,
   PooledMethod,
 } from './backtesting/result.js';
-export { compare, SORTS } from './compare.js';
+export { compare, compareScales, SORTS } from './compare.js';
 export type { CompareOptions, ComparePoint, CompareResult, CompareRow, Sort, Spread } from './compare.js';
 export { isGridProblem, readGrid } from './grid.js';
-export type { GridProblem } from './grid.js';
+export type { Grid, GridProblem } from './grid.js';
 export { verdictRule, verdictRules } from './verdict-rule.js';
 export type { VerdictRule } from './verdict-rule.js';
 export { unclearQuark } from './flavours-in-use.js';
@@ -45,3 +45,16 @@ export { scaleDependence } from './scale-dependence.js';
 export type { ScaleDependence, ScaleDependenceOptions, ScalePointReport } from './scale-dependence.js';
 export { laplaceIntegrand } from './laplace-integrand.js';
 export type { IntegrandSample, LaplaceIntegrand } from './laplace-integrand.js';
+export { CORE } from './assess.js';
+export { expand } from './expand.js';
+export type { Expanded } from './expand.js';
+export { knownLoops } from './scheme.js';
+export { ambiguityReport } from './ambiguity-report.js';
+export { termTable } from './terms.js';
+export { ballText, exactText, indicative } from './figures.js';
+export { writeVerdict } from './rounding.js';
+export { seriesSummary } from './summary.js';
+export { valueCautions } from './comparing-cautions.js';
+export { verdict } from './verdict.js';
+export type { Evaluated } from './values.js';
+export { fixedOrderOf, fixedOrderSeries } from './contour/moment.js';

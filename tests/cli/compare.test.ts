@@ -22,14 +22,29 @@ describe('leastterm compare', () => {
       rows: { at: string; prescription: string; value: string }[];
       points: unknown[];
     };
-    expect(csv[0]).toMatch(/^coupling,x,prescription,family,variant,value,truncation,/);
+    expect(csv[0]).toMatch(/^coupling,scale,x,prescription,family,variant,value,truncation,/);
     expect(csv.length - 1).toBe(6);
     expect(json.points.length).toBe(2);
     csv.slice(1).forEach((text, i) => {
       const cells = text.split(',');
       const row = json.rows[i];
-      expect([cells[0], cells[2], cells[5]]).toEqual([row?.at, row?.prescription, row?.value]);
+      expect([cells[0], cells[3], cells[6]]).toEqual([row?.at, row?.prescription, row?.value]);
     });
+  });
+
+  test('--grid scale=…: the coupling runs, a row a scale and prescription', async () => {
+    const { status, stdout } = await run(`compare adler --at 0.3 --grid scale=0.8:2:3 --only fixed-order,fac --csv`);
+    expect(status).toBe(0);
+    const rows = stdout
+      .trimEnd()
+      .split('\n')
+      .slice(1)
+      .map((text) => text.split(','));
+    expect(rows.map((cells) => cells[1])).toEqual(['0.8', '0.8', '1.26491', '1.26491', '2', '2']);
+    expect(Number(rows[0]?.[0])).toBeGreaterThan(0.3);
+    expect(Number(rows[4]?.[0])).toBeLessThan(0.3);
+    const text = (await run(`compare adler --at 0.3 --grid scale=1,2 --only fixed-order`)).stdout;
+    expect(text).toMatch(/scale\s+μ\/Q = 2/);
   });
 
   test('--only repeated adds up, --except takes away, --family narrows', async () => {
@@ -53,6 +68,10 @@ describe('leastterm compare', () => {
     ['--grid 0.1:0.2', /--grid: "0\.1:0\.2" has 2 parts; wanted start:stop:count/],
     ['--grid 0.1:0.2:1', /--grid: "1" points; wanted a whole number from 2 to 1000/],
     ['--at 0.1 --grid 0.1,0.2', /exclude each other/],
+    ['--grid scale=0.5:2:5', /--at is missing/],
+    ['--at 0.1 --grid scale=0.5:2:5', /plain variable.*remedy/],
+    ['--at 0.1 --grid scale=2:2:5', /start and stop are the same/],
+    ['--at 0.1 --grid mu=1,2', /"mu=" is nothing a grid can run over/],
     ['--at 0.1 --csv --json', /--csv and --json: give one of them/],
     ['--at 0.1 --exact x', /--exact: /],
     ['--at 0.1 --hide 99', /--hide: "99" is not a whole number from 0 to 20/],

@@ -13,6 +13,8 @@ import { chargeBeta, predictedCoefficient } from '../../src/prescriptions/effect
 import { fac } from '../../src/prescriptions/fac.js';
 import { flavourPolynomials, nonAbelianised } from '../../src/prescriptions/flavour-polynomials.js';
 import { pms } from '../../src/prescriptions/pms.js';
+import { fixedOrder } from '../../src/prescriptions/fixed-order.js';
+import { scaleVariation } from '../../src/prescriptions/scale-variation.js';
 import type { Outcome, Prescription, Sum } from '../../src/prescriptions/index.js';
 import { betaCoefficients } from '../../src/qcd/index.js';
 import type { Expansion, Running } from '../../src/series/index.js';
@@ -54,6 +56,33 @@ const member = (p: Prescription, e: Expansion, variant: string, digits = 25): Su
   if (found?.kind !== 'sum') expect.fail(`${variant}: ${found?.reason ?? 'missing'}`);
   return found;
 };
+
+describe('fixed order with its scale varied', () => {
+  it('has the value of fixed order and the distance to the ends of the known scan as error', () => {
+    // R at μ = Q/2, Q, 2Q with four-loop running (mpmath 1.2.1): 0.153078, 0.130889, 0.120148.
+    const s = central(scaleVariation, adler(4));
+    expect(R.overlaps(s.value, central(fixedOrder, adler(4)).value)).toBe(true);
+    expectNear(s.value, '0.130889', 1e-6);
+    expect(s.truncation).toBeCloseTo(0.153078 - 0.130889, 5);
+    expect(s.notes[0]).toBe('lowest 0.12015 at μ/Q = 2, highest 0.15308 at μ/Q = 0.5');
+  });
+  it('counts extremes inside the range: an envelope is never below the move to either end', () => {
+    // Two terms have a maximum between Q/2 and Q.
+    const s = central(scaleVariation, adler(2));
+    const known = /lowest ([\d.]+) at μ\/Q = ([\d.]+), highest ([\d.]+) at μ\/Q = ([\d.]+)/.exec(s.notes[0] ?? '');
+    expect(Number(known?.[4])).toBeGreaterThan(0.5);
+    expect(Number(known?.[4])).toBeLessThan(1);
+  });
+  it('shrinks to nothing for an exact charge, and refuses below the Landau pole', () => {
+    // x/(1 − r x) to many terms: the one-loop coupling at another scale does not depend on μ.
+    const c = Array.from({ length: 40 }, (_, n) => exact(Rational.of(1, 3).pow(n)));
+    const charge = (x: string): Expansion =>
+      expansion(c, q(x), { power: 1, running: { beta: [exact(1)], scaleRatio: exact(1) } });
+    expect(central(scaleVariation, charge('1/10')).truncation).toBeLessThan(1e-10);
+    expect(refused(scaleVariation, charge('4/5')).reason).toMatch(/below the Landau pole/);
+    expect(refused(scaleVariation, expansion(c, q('1/10'))).reason).toMatch(/does not run/);
+  });
+});
 
 describe('effective charge', () => {
   it('has the known invariants and predictions', () => {

@@ -4,7 +4,16 @@ import { readFileSync } from 'node:fs';
 import { isNumberProblem, parseSeries, parseUncertain } from '../../src/series/index.js';
 import type { ReadNumber } from '../../src/series/index.js';
 import { toNumberExact } from '../../src/numerics/index.js';
-import { assess, compare, isGridProblem, readGrid, verdictRule, verdictRules } from '../../src/studies/index.js';
+import {
+  assess,
+  compare,
+  compareScales,
+  isGridProblem,
+  readGrid,
+  verdictRule,
+  verdictRules,
+} from '../../src/studies/index.js';
+import type { Grid } from '../../src/studies/index.js';
 
 const number = (text: string): ReadNumber => {
   const value = parseUncertain(text);
@@ -55,7 +64,7 @@ describe('compare', () => {
   test('a grid gives one point a coupling, and the rows of each', async () => {
     const grid = readGrid('0.1:0.2:3');
     if (isGridProblem(grid)) expect.fail(grid.problem);
-    const { points, rows } = compare(euler, grid, { ...options, by: ['fixed-order', 'pade'] });
+    const { points, rows } = compare(euler, grid.values, { ...options, by: ['fixed-order', 'pade'] });
     expect(points.map((p) => p.coupling.value)).toEqual(['0.1', '0.15', '0.2']);
     expect(rows.map((r) => `${r.at} ${r.prescription}`)).toEqual(
       ['0.1', '0.15', '0.2'].flatMap((at) => [`${at} fixed-order`, `${at} pade`]),
@@ -75,8 +84,29 @@ describe('grids', () => {
   test('both ends, exactly', async () => {
     const grid = readGrid('0.1:0.4:7');
     if (isGridProblem(grid)) expect.fail(grid.problem);
-    expect(grid.map((g) => toNumberExact(g.value))).toEqual([0.1, 0.15, 0.2, 0.25, 0.3, 0.35, 0.4]);
-    expect(grid[1]?.value.rational?.toString()).toBe('3/20');
+    expect(grid.over).toBe('coupling');
+    expect(grid.values.map((g) => toNumberExact(g.value))).toEqual([0.1, 0.15, 0.2, 0.25, 0.3, 0.35, 0.4]);
+    expect(grid.values[1]?.value.rational?.toString()).toBe('3/20');
+  });
+
+  test('of scales: even in ln μ, the decimals shown are the scales used', () => {
+    const grid = readGrid('scale=0.5:2:5');
+    if (isGridProblem(grid)) expect.fail(grid.problem);
+    expect(grid.over).toBe('scale');
+    expect(grid.values.map((g) => g.text)).toEqual(['0.5', '0.707107', '1', '1.41421', '2']);
+    expect(grid.values.map((g) => g.value.rational?.toString())).toEqual([
+      '1/2',
+      '707107/1000000',
+      '1',
+      '141421/100000',
+      '2',
+    ]);
+    const list = readGrid(' scale = 1/2, 1');
+    expect(isGridProblem(list) ? list.problem : list.values.length).toBe(2);
+  });
+
+  test.each(['scale=0:2:3', 'scale=-1,1', 'scale=0.5:2', 'flavours=3:5:3', 'scale='])('%s is no grid', (text) => {
+    expect(isGridProblem(readGrid(text))).toBe(true);
   });
 
   test.each(['0.1:0.4', '0.1:0.4:1', '0.1:0.4:x', '0.1:0.1:3', 'a,b', '0.1,,0.2', '1:2:3:4', '0.1:0.4:99999'])(
@@ -85,6 +115,58 @@ describe('grids', () => {
       expect(isGridProblem(readGrid(text))).toBe(true);
     },
   );
+});
+
+describe('over scales', () => {
+  const scales = (text: string): Grid['values'] => {
+    const grid = readGrid(text);
+    return isGridProblem(grid) ? expect.fail(grid.problem) : grid.values;
+  };
+  const file = (scheme: string): string =>
+    `{"format": 1, "title": "a charge", "coupling": {"name": "alpha_s", "divisor": "pi"}, "first power": 1, "flavours": 3,
+      "scheme": "${scheme}", "scale ratio": 1, "coefficients": ["1", "1.5", "6", "40(2)"]}`;
+
+  test('an effective charge does not see the scale, fixed order does; errors of coefficients and coupling go along', async () => {
+    const series = await parseSeries(file('four-loop running only'), { name: 'charge' });
+    const found = await compareScales(series, number('0.25(1)'), scales('scale=0.7:2:4'), {
+      ...options,
+      by: ['fac', 'fixed-order'],
+      hide: 0,
+    });
+    if ('reason' in found) return expect.fail(found.reason);
+    expect(found.points.map((p) => p.scale)).toEqual(['0.7', '0.993288', '1.40946', '2']);
+    const of = (name: string) => found.rows.filter((r) => r.prescription === name);
+    const [charge, fixed] = [of('fac'), of('fixed-order')];
+    expect(charge[0]?.variant).toMatch(/^effective charge/);
+    for (const row of charge) {
+      // Four loops for four coefficients: the charge is the same to all digits.
+      expect(Number(row.value)).toBeCloseTo(Number(charge[0]?.value), 12);
+      expect(Number(row.inputError)).toBeCloseTo(Number(charge[0]?.inputError), 4);
+    }
+    expect(new Set(fixed.map((r) => r.value?.slice(0, 6))).size).toBeGreaterThan(2);
+    // At larger scales the coupling is smaller, and so is its error.
+    const at = found.rows.filter((r) => r.prescription === 'fac').map((r) => Number(r.at));
+    expect(at).toEqual(at.toSorted((a, b) => b - a));
+  });
+
+  test('at the scale of the file nothing changes', async () => {
+    const series = await parseSeries(file('MSbar'), { name: 'charge' });
+    const wanted = { ...options, by: ['fixed-order', 'borel-pade', 'fac'] };
+    const found = await compareScales(series, number('0.25'), scales('scale=1'), wanted);
+    if ('reason' in found) return expect.fail(found.reason);
+    const plain = compare(series, [number('0.25')], wanted).rows;
+    expect(found.rows.map((r) => r.value)).toEqual(plain.map((r) => r.value));
+  });
+
+  test('refusals name the scale, and what a series lacks', async () => {
+    const series = await parseSeries(file('MSbar'), { name: 'charge' });
+    expect(await compareScales(series, number('0.3'), scales('scale=0.01,1'), options)).toMatchObject({
+      reason: expect.stringMatching(/^at μ\/Q = 0\.01: .*Landau pole/) as string,
+    });
+    expect(await compareScales(euler, number('0.3'), scales('scale=0.5,1'), options)).toMatchObject({
+      reason: expect.stringMatching(/plain variable/) as string,
+    });
+  });
 });
 
 describe('the rule of the verdict', () => {
