@@ -2,5 +2,6 @@
  * @module Rooms that only some commands need, in a second piece: what `assess` and its like do not use must not be in the
  * first one, since they would pay for loading it.
  */
+export * as contour from '../contour/index.js';
 export * as papers from '../papers/index.js';
 export * as pictures from '../pictures/index.js';

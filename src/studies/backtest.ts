@@ -18,7 +18,7 @@ import type { Prediction } from './backtesting/predict.js';
 import { allStated, recordEntry } from './backtesting/record.js';
 import type { BacktestEstimate, BacktestMethod, BacktestResult, BacktestTrial } from './backtesting/result.js';
 import { isInside, missOf, scoreOf } from './backtesting/score.js';
-import { commonTargets, targetWords } from './backtesting/target.js';
+import { commonTargets, isTargetOf, targetWords } from './backtesting/target.js';
 import type { Target } from './backtesting/target.js';
 import { fixedOrderSeries } from './contour/moment.js';
 import { expand } from './expand.js';
@@ -78,7 +78,7 @@ function methodOf(
   common: readonly Target[],
 ): BacktestMethod {
   const predictions = seen.map((part) => predict(known, prescription, part, true));
-  const targets = [...common, ...ownTarget(full)];
+  const targets = [...common.filter((target) => isTargetOf(target, prescription.name)), ...ownTarget(full)];
   const stated = allStated(predictions);
   const records = targets.flatMap((target): ValueRecord[] => {
     const score = scoreOf(missesOf(predictions, target));

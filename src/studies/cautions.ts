@@ -1,10 +1,12 @@
 /** @module The cautions that apply to a result, in words. */
 import { R, toNumberExact } from '../numerics/index.js';
 import type { Growth } from '../growth/index.js';
+import type { Sum } from '../prescriptions/index.js';
 import type { Series } from '../series/index.js';
 import type { Caution } from './assessment.js';
 import type { Expanded } from './expand.js';
 import type { TermTable } from './terms.js';
+import { indicative } from './figures.js';
 import type { Evaluated } from './values.js';
 
 /** Couplings beyond which a perturbative series in α_s is hard to defend. Heuristic. */
@@ -23,11 +25,7 @@ export function cautions(
   const list: Caution[] = [];
   if (series.invented)
     list.push({ code: 'invented', text: 'this series is invented for demonstration: quote nothing from it' });
-  if (series.expandedFrom !== undefined)
-    list.push({
-      code: 'contour-quantity',
-      text: 'a contour quantity, here expanded at fixed order: contour-improved summation differs by more than its errors, and which is right is contested',
-    });
+  if (series.expandedFrom !== undefined) list.push(contourCaution(values));
   if (expanded.leadingZeros > 0)
     list.push({
       code: 'leading-zeros',
@@ -104,6 +102,25 @@ function centralSpread(values: readonly Evaluated[]): Caution | undefined {
         text: 'the resummed values differ by more than three times their own errors: the choice of prescription matters here',
       }
     : undefined;
+}
+
+/** A contour quantity has two expansions; where both stand, how far apart they are. */
+function contourCaution(values: readonly Evaluated[]): Caution {
+  const sumOf = (name: string): Sum | undefined =>
+    values.flatMap((v) => (v.prescription.name === name && v.outcome.kind === 'sum' ? [v.outcome] : []))[0];
+  const [fixed, improved] = [sumOf('fixed-order'), sumOf('contour-improved')];
+  if (fixed === undefined || improved === undefined)
+    return {
+      code: 'contour-quantity',
+      text: 'a contour quantity, here expanded at fixed order: contour-improved summation gives another value, and which is right is contested (contour-improved, and leastterm contour, show it)',
+    };
+  const gap = R.toNumber(R.sub(fixed.value, improved.value, 100));
+  const error = Math.max(fixed.truncation ?? 0, improved.truncation ?? 0);
+  const times = error > 0 ? `, ${indicative(Math.abs(gap) / error, 2)} times the larger truncation error` : '';
+  return {
+    code: 'contour-quantity',
+    text: `fixed order minus contour improved is ${indicative(gap, 3)}${times}: the two have different Borel sums (arXiv:2008.00578, 2105.11222), the contour-improved one conflicts with the standard operator product expansion (arXiv:2305.10386), and the choice is contested; the default is fixed order and its Borel sum; they are not to be averaged`,
+  };
 }
 
 function dedupe(list: readonly Caution[]): Caution[] {

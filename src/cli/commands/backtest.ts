@@ -1,6 +1,7 @@
 /** @module leastterm backtest: what the methods would have said of coefficients that are known by now. */
 import type { Call, Command } from '../command.js';
 import { choiceRequest, chosenPrescriptions } from '../choose.js';
+import { contourExtras } from '../contour-extras.js';
 import { EXIT, UsageError } from '../faults.js';
 import { couplingOf, exactValue, readSeries, requestOf, USUAL_DIGITS, wantedCoupling } from '../input.js';
 import { deliver } from '../output.js';
@@ -103,7 +104,10 @@ async function run(call: Call): Promise<number> {
   for (const { name, series } of list) {
     try {
       const { at, path } = await couplingOf(wanted, series, backtest.name);
-      results.push(studies.backtest(series, at, { ...optionsFor(name), ...(path === undefined ? {} : { path }) }));
+      const extras = await contourExtras(series, by, backtest.name);
+      results.push(
+        studies.backtest(series, at, { ...optionsFor(name), ...extras, ...(path === undefined ? {} : { path }) }),
+      );
     } catch (error) {
       // In the catalogue, a series that the coupling cannot be brought to is left out with the reason.
       if (!(error instanceof UsageError) || given.catalogue !== true) throw error;

@@ -12,7 +12,7 @@ import { memberOf, missesOf, ownTarget, predict, PREDICT_DIGITS, seenOf } from '
 import type { Prediction } from './predict.js';
 import { scoreOf } from './score.js';
 import type { Score } from './score.js';
-import { commonTargets } from './target.js';
+import { commonTargets, isTargetOf } from './target.js';
 import type { Target, TargetKind } from './target.js';
 
 /** A miss beyond this many errors, stated and the target's own together, is a bad record. A heuristic: a normal error does it once in 370 times. */
@@ -69,7 +69,7 @@ export function records(
     const predictions = seen.map((part) => predict(known, prescription, part, false));
     const own = (): Sum | undefined =>
       whole ? sum : memberOf(prescription.apply(known.expansion, growth, { digits: PREDICT_DIGITS, central: true }));
-    const target = common ?? ownTarget(own())[0];
+    const target = common !== undefined && isTargetOf(common, prescription.name) ? common : ownTarget(own())[0];
     const score = target === undefined ? undefined : scoreOf(missesOf(predictions, target));
     if (target !== undefined && score !== undefined)
       found.set(prescription.name, recordEntry(score, target.kind, allStated(predictions)));

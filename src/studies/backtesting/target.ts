@@ -10,7 +10,7 @@
 import { R, toNumberExact } from '../../numerics/index.js';
 import type { Ball } from '../../numerics/index.js';
 import type { Growth } from '../../growth/index.js';
-import { leastTerm, partialSums, PRESCRIPTIONS, terms } from '../../prescriptions/index.js';
+import { CONTOUR_NAMES, leastTerm, partialSums, PRESCRIPTIONS, terms } from '../../prescriptions/index.js';
 import type { Expansion, ReadNumber, Series, Uncertain } from '../../series/index.js';
 
 export type TargetKind = 'exact' | 'measurement' | 'known sum' | 'own value';
@@ -57,6 +57,10 @@ function fixedOrderError(e: Expansion, growth: Growth): number {
   const fixed = PRESCRIPTIONS.find((p) => p.name === 'fixed-order')?.apply(e, growth, { digits: ERROR_DIGITS })[0];
   return fixed?.kind === 'sum' ? (fixed.truncation ?? 0) : 0;
 }
+
+/** Is this a target for that method? The fixed-order sum is none for the contour-improved one, which tends elsewhere. */
+export const isTargetOf = (target: Target, prescription: string): boolean =>
+  target.kind !== 'known sum' || prescription !== CONTOUR_NAMES.improved.name;
 
 /** The targets that do not depend on the method, best first. */
 export function commonTargets(series: Series, e: Expansion, growth: Growth, exactValue?: ReadNumber): Target[] {
