@@ -1,7 +1,7 @@
 /** Rooms from high to low. Rooms on one floor do not know each other. Imports go down, and only to a room's index. */
 const floors = [
   ['cli'],
-  ['papers'],
+  ['papers', 'sheets'],
   ['report', 'pictures'],
   ['extraction'],
   ['studies'],

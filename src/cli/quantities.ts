@@ -14,13 +14,16 @@ const isUnit = (text: string | undefined): text is keyof typeof IN_GEV => text !
 
 const FORM = 'a positive number with its unit, such as 91.1879GeV or 500MeV, or one of MZ, MW, mtau';
 
+/** An option, or an operand, which has a name in capitals. */
+const written = (option: string): string => (/^[A-Z]/.test(option) ? option : `--${option}`);
+
 /** What the user wrote, and the option, in front of a complaint. */
 function wrong(option: string, text: string, wanted: string, command: string): UsageError {
-  return new UsageError(`--${option}: "${text}" ${wanted}`, command);
+  return new UsageError(`${written(option)}: "${text}" ${wanted}`, command);
 }
 
 const withoutUnit = (option: string, text: string, command: string): UsageError =>
-  wrong(option, text, `has no unit; write --${option} ${text}GeV`, command);
+  wrong(option, text, `has no unit; write ${/^[A-Z]/.test(option) ? '' : `--${option} `}${text}GeV`, command);
 
 /** A scale in GeV. */
 export async function scaleOf(option: string, text: string, command: string): Promise<number> {

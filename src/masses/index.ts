@@ -10,3 +10,7 @@ export { DEFINITIONS, definitionOf } from './definitions.js';
 export type { GivenCoupling, MassConversion, MassRequest } from './request.js';
 export { convertMass } from './convert.js';
 export { exactMass, type ExactInputs } from './exact.js';
+export { ambiguityOverLambda, poleAmbiguity, type PoleAmbiguity, type PoleAmbiguityQuestion } from './ambiguity.js';
+export { defaultStrength, poleStrength } from './strength.js';
+export { massStudy } from './study.js';
+export type * from './study-types.js';

@@ -1,0 +1,2 @@
+/** @module Text pages of the rooms that only some commands load; the report room draws those of the others. */
+export { massLines, massText } from './mass.js';
