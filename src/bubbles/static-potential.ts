@@ -93,11 +93,23 @@ function restLaplace(L: Ball, prec: number): Ball {
   return R.mul2exp(real, 1);
 }
 
+/** sin √τ. */
+const sineOfRoot = (tau: Rational, prec: number): Ball =>
+  sinCos(R.sqrt(R.fromRational(tau, prec + 16), prec + 16), prec).sin;
+
 export const POTENTIAL: Component = {
   factor: { rational: q(1), pi: -1 },
   kernel: PLAIN,
   base: q(SPLIT * SPLIT),
   poles: [],
   towers: [INFRARED],
-  rest: { laplace: (L, prec) => R.div(restLaplace(L, prec), pi(prec), prec) },
+  rest: {
+    laplace: (L, prec) => R.div(restLaplace(L, prec), pi(prec), prec),
+    distribution: (tau, prec) => R.div(sineOfRoot(tau, prec), pi(prec), prec),
+    // Yukawa's potential: r = e^(−√z).
+    massiveGluon: (logZ) => {
+      const root = Math.exp(logZ / 2);
+      return { difference: Math.expm1(-root), slope: (-root / 2) * Math.exp(-root) };
+    },
+  },
 };

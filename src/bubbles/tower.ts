@@ -47,6 +47,10 @@ export const PLAIN: Kernel = { kind: 'plain' };
 export interface Rest {
   /** ∫_0^∞ e^(−Lu) rest(u) du, times the factor of the component. */
   laplace(L: Ball, prec: number): Ball;
+  /** The whole distribution w(τ) of the component, poles included. */
+  distribution(tau: Rational, prec: number): Ball;
+  /** r(z) − r(0) of the whole component, and its slope in ln z, in doubles. */
+  massiveGluon(logZ: number): { readonly difference: number; readonly slope: number };
 }
 
 /** rational · π^pi. */
