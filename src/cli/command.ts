@@ -36,6 +36,7 @@ export interface Given extends PictureGiven, PaperGiven {
   readonly hide?: number;
   readonly exact?: string;
   readonly catalogue?: boolean;
+  readonly strongCoupling?: string;
   readonly csv?: boolean;
   readonly verdictRule?: string;
   readonly by?: string;

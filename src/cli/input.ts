@@ -18,7 +18,13 @@ export async function readSeries(name: string, { given, surroundings }: Call): P
   }
   const flavours = given.flavours === undefined ? {} : { flavours: given.flavours };
   const stdin = surroundings.stdin === undefined ? {} : { stdin: surroundings.stdin };
-  return series.loadSeries(name, { ...flavours, ...stdin });
+  const loaded = await series.loadSeries(name, { ...flavours, ...stdin });
+  if (given.strongCoupling === undefined) return loaded;
+  const strongCoupling = series.parseStrongCoupling(given.strongCoupling);
+  if (strongCoupling !== undefined) return { ...loaded, strongCoupling };
+  throw new UsageError(
+    `--strong-coupling: "${given.strongCoupling}" is not two numbers, the second one positive; wanted the power and the spacing of the exponents, such as 1/3,2/3`,
+  );
 }
 
 /** The value of --at. */
@@ -72,7 +78,15 @@ export async function exactValue(text: string | undefined, command: string): Pro
 /** What was asked, for the result to repeat. Where the output goes is no part of it. */
 export function requestOf(command: string, series: string, { given }: Call): Request {
   const { at, by, variant, order, flavours } = given;
-  const asked = { at, 'alpha-s-mz': given.alphaSMZ, by, variant, order, flavours };
+  const asked = {
+    at,
+    'alpha-s-mz': given.alphaSMZ,
+    by,
+    variant,
+    order,
+    flavours,
+    'strong-coupling': given.strongCoupling,
+  };
   const request: Request = { command, series };
   for (const [name, value] of Object.entries(asked)) if (value !== undefined) request[name] = value;
   request['digits'] = given.digits ?? USUAL_DIGITS;

@@ -46,6 +46,12 @@ export const COMPARE_OPTIONS = {
     example: '0.915633',
     help: 'the exact sum, where it is known: predictions are held against it',
   },
+  'strong-coupling': {
+    kind: 'text',
+    placeholder: 'S,D',
+    example: '1/3,2/3',
+    help: 'the sum behaves as x^S [1 + O(x^-D)] at large x: what order-dependent mapping needs',
+  },
   catalogue: { kind: 'flag', help: 'every published series of the catalogue that runs in alpha_s' },
   csv: { kind: 'flag', help: 'write comma-separated values, a line a row' },
   'verdict-rule': {

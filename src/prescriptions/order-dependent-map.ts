@@ -40,13 +40,13 @@ export const orderDependentMap: Prescription = {
     const e = cleanPart(full, growth, MOST);
     const K = e.coefficients.length - 1;
     const variant = `order ${K}`;
-    const strong = request.strongCoupling;
+    const strong = full.strongCoupling;
     if (strong === undefined)
       return [
         refusal(
           variant,
           'no strong-coupling exponents are given',
-          'give power and spacing of the strong-coupling expansion (none is known in QCD)',
+          'give --strong-coupling 1/3,2/3 (power and spacing of that expansion), or the field "strong coupling" in the series file; none is known in QCD',
         ),
       ];
     if (strong.spacing.sign() <= 0)

@@ -5,7 +5,7 @@
  * returns a number that it does not believe. Values are of the whole R (prefactor, power and additive part included).
  */
 import { R } from '../numerics/index.js';
-import type { Ball, Rational } from '../numerics/index.js';
+import type { Ball } from '../numerics/index.js';
 import type { Expansion } from '../series/index.js';
 import type { Growth } from '../growth/index.js';
 
@@ -47,8 +47,6 @@ export interface Request {
   readonly central?: boolean;
   /** Evaluate only this member, without its error estimate: used when inputs are varied. */
   readonly only?: string;
-  /** Strong-coupling behaviour F ~ x^power [1 + O(x^−spacing)], for the methods that build it in. */
-  readonly strongCoupling?: { readonly power: Rational; readonly spacing: Rational };
 }
 
 export interface Prescription {

@@ -7,7 +7,7 @@
  * positive t axis. With power = 1 and x = α this is the usual R = ∫ dt e^{−t/α} B(t) of a QCD correction.
  */
 import type { Exact, Rational } from '../numerics/index.js';
-import type { Divisor } from './series.js';
+import type { Divisor, StrongCoupling } from './series.js';
 
 /** A Borel singularity N (1 − t/t*)^(−γ) [1 + c₁(1 − t/t*) + c₂(1 − t/t*)² + …] taken as given. */
 export interface StatedSingularity {
@@ -73,4 +73,6 @@ export interface Expansion {
   readonly running?: Running;
   /** Present for the fixed-order expansion of a contour quantity. */
   readonly contour?: ContourOrigin;
+  /** Exponents of F at strong coupling, F ~ x^power [1 + O(x^−spacing)], where they are known. */
+  readonly strongCoupling?: StrongCoupling;
 }

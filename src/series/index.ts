@@ -17,6 +17,7 @@ export { InputError, describeProblem } from './input-error.js';
 export type { Problem } from './input-error.js';
 export { nearest, suggestion } from './nearest.js';
 export { NUMBER_FORMS, parseUncertain } from './uncertain.js';
+export { parseStrongCoupling } from './read-strong-coupling.js';
 export type { ReadNumber } from './uncertain.js';
 export { isNumberProblem } from './number-text.js';
 export type { NumberProblem } from './number-text.js';

@@ -11,6 +11,7 @@ import { readConstants } from './read-constants.js';
 import { readCorrelation } from './read-correlation.js';
 import { readChecks } from './read-checks.js';
 import { readSingularities } from './read-singularities.js';
+import { readStrongCoupling } from './read-strong-coupling.js';
 import { readSources, readTexts } from './read-texts.js';
 import type { Coupling, Divisor, Scale, Series } from './series.js';
 
@@ -21,7 +22,7 @@ export const FORMAT = 1;
 export const FIELDS = [
   'format', 'title', 'quantity', 'sources', 'notes', 'invented', 'coupling', 'variable', 'first power', 'scheme', 'flavours',
   'kind', 'weight', 'flavour choices', 'scale ratio', 'hard scale', 'factor', 'additive', 'constants', 'coefficients', 'correlation',
-  'singularities', 'condensates', 'measurement', 'checks',
+  'singularities', 'condensates', 'strong coupling', 'measurement', 'checks',
 ] as const; // prettier-ignore
 
 export const DIVISORS: readonly Divisor[] = ['1', 'pi', '2*pi', '4*pi'];
@@ -66,6 +67,7 @@ export function readSeries(entry: Entry, id: string, reader: FieldReader, flavou
     flavours: reader.numbers.flavours,
     scaleRatio: reader.exact(group.get('scale ratio'), 'scale ratio', 'positive'),
     hardScale: readScale(group.get('hard scale'), reader),
+    strongCoupling: readStrongCoupling(group.get('strong coupling'), reader),
     correlation: readCorrelation(group.get('correlation'), coefficients?.length ?? 0, reader),
     measurement: measurement && {
       value: measurement.value,

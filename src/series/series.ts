@@ -70,6 +70,12 @@ export interface ContourWeight {
   readonly coefficients: readonly Rational[];
 }
 
+/** The sum of the terms (without factor and additive part) behaves as x^power [1 + O(x^−spacing)] at strong coupling: known of model problems. */
+export interface StrongCoupling {
+  readonly power: Rational;
+  readonly spacing: Rational;
+}
+
 export interface Series {
   /** Catalogue id or file name, for messages. */
   readonly id: string;
@@ -92,6 +98,7 @@ export interface Series {
   readonly correlation?: readonly (readonly Rational[])[];
   readonly singularities: readonly KnownSingularity[];
   readonly condensates: readonly Condensate[];
+  readonly strongCoupling?: StrongCoupling;
   readonly measurement?: Uncertain & { readonly unit?: string; readonly source?: string };
   /**
    * The coefficients are those of D = Σ c_n x^(n + firstPower), x at the scale −s, and the quantity is

@@ -111,6 +111,8 @@ export function writeSeries(s: Series): string {
   );
   list('singularities', s.singularities.map(singularity));
   list('condensates', s.condensates.map(condensate));
+  const { strongCoupling } = s;
+  field('strong coupling', strongCoupling && flow([['power', strongCoupling.power.toString()], ['spacing', strongCoupling.spacing.toString()]])); // prettier-ignore
   if (s.measurement) field('measurement', uncertain(s.measurement, [['unit', text(s.measurement.unit)], ['source', text(s.measurement.source)]])); // prettier-ignore
   list('checks', (s.checks ?? []).map((c) => flow([['flavours', c.flavours?.toString()], ['values', `[${c.values.join(', ')}]`], ['source', text(c.source)]]))); // prettier-ignore
   return `${lines.join('\n')}\n`;

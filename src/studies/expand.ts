@@ -68,6 +68,7 @@ export function expand(from: Series, at: Exact, order?: number): Expanded {
     relativeErrors,
     stated,
     ...runningOf(series),
+    ...strongOf(series, leadingZeros),
     ...(series.expandedFrom === undefined ? {} : { contour: contourOf(series.expandedFrom, order, scale) }),
   };
   const growthInput: GrowthInput = {
@@ -113,6 +114,13 @@ function contourOf(series: Series, order: number | undefined, scale: Exact | und
     loops,
     divisor: series.coupling.divisor,
   };
+}
+
+/** The exponents of F = Σ c_n x^n: those of the file without the power in front. */
+function strongOf({ strongCoupling, firstPower }: Series, leadingZeros: number): Pick<Expansion, 'strongCoupling'> {
+  if (strongCoupling === undefined) return {};
+  const { power, spacing } = strongCoupling;
+  return { strongCoupling: { power: power.sub(Rational.of(firstPower + leadingZeros)), spacing } };
 }
 
 /**

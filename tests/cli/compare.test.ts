@@ -83,6 +83,44 @@ describe('leastterm compare', () => {
   });
 });
 
+describe('--strong-coupling', () => {
+  // (E − 1/2)/g and E of H = p²/2 + x²/2 + g x⁴ at g = 1: E = 0.80377065 (mpmath 1.2.1, diagonalisation); E ~ g^{1/3}.
+  const ENERGY = '1/2\n3/4\n-21/8\n333/16\n-30885/128\n916731/256\n-65518401/1024\n';
+  const by = '--by order-dependent-map --at 1 -q';
+  test('feeds order-dependent mapping in sum, compare and backtest', async () => {
+    const { status, stdout } = await run(`sum - ${by} --strong-coupling 1/3,2/3`, ENERGY);
+    expect(status).toBe(0);
+    expect(Math.abs(Number(stdout) - 0.80377065)).toBeLessThan(2e-5);
+    const rows = (await run('compare - --at 1 -q --only order-dependent-map --strong-coupling 1/3,2/3', ENERGY)).stdout;
+    expect(rows).toMatch(/^order-dependent-map\t0\.8037/);
+    const tested = await run('backtest - --at 1 --only order-dependent-map --strong-coupling 1/3,2/3 --json', ENERGY);
+    expect(JSON.parse(tested.stdout)).toMatchObject({ prescriptions: [{ records: [{ tested: 3 }] }] });
+  });
+  test('or the field of the file; the power of the first term is no part of F', async () => {
+    const file = (power: string, first: number, c: string): string =>
+      `{"variable": "g", "first power": ${first}, "strong coupling": {"power": "${power}", "spacing": "2/3"}, "coefficients": [${c}]}`;
+    const list = ENERGY.trim().split('\n').map((c) => `"${c}"`); // prettier-ignore
+    const whole = (await run(`sum - ${by}`, file('1/3', 0, list.join(',')))).stdout;
+    const moved = (await run(`sum - ${by}`, file('4/3', 1, list.join(',')))).stdout;
+    // At x = 1 the factor x is 1.
+    expect(moved).toBe(whole);
+    expect(Math.abs(Number(whole) - 0.80377065)).toBeLessThan(2e-5);
+  });
+  test('without it the refusal names the option; wrong ones are usage errors', async () => {
+    const { status, stdout } = await run('sum - --by order-dependent-map --at 1', ENERGY);
+    expect(status).toBe(1);
+    expect(stdout).toMatch(/--strong-coupling\s+1\/3,2\/3/);
+    for (const text of ['1/3', '1/3,0', '1/3,x', '1,2,3']) {
+      const wrong = await run(`sum - ${by} --strong-coupling ${text}`, ENERGY);
+      expect(wrong.status).toBe(2);
+      expect(wrong.stderr).toMatch(/--strong-coupling: .* not two numbers, the second one positive/);
+    }
+    const bad = await run(`sum - ${by}`, '{"strong coupling": {"power": "1/3"}, "coefficients": ["1", "-1", "2"]}');
+    expect(bad.status).toBe(2);
+    expect(bad.stderr).toMatch(/strong coupling: no spacing/);
+  });
+});
+
 describe('leastterm backtest', () => {
   test('values, next coefficients, truncation errors', async () => {
     const { status, stdout } = await run(`backtest - --at 0.1 ${SOME}`, EULER);

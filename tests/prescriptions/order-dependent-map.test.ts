@@ -15,7 +15,7 @@ import { expectNear } from '../support/check-value.js';
 
 const OSCILLATOR: StrongCoupling = { power: Rational.of(1, 3), spacing: Rational.of(2, 3) };
 const run = (e: Expansion, strongCoupling: StrongCoupling, digits = 25): readonly Outcome[] =>
-  orderDependentMap.apply(e, growthOf(e), { digits, strongCoupling });
+  orderDependentMap.apply({ ...e, strongCoupling }, growthOf(e), { digits });
 function value(e: Expansion, strong: StrongCoupling, digits = 25): Sum {
   const [found] = run(e, strong, digits);
   if (found?.kind !== 'sum') expect.fail(found?.reason ?? 'nothing');

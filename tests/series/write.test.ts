@@ -38,6 +38,13 @@ function comparable(series: Series): unknown {
   return strip(plain(series));
 }
 
+test('strong-coupling exponents', async () => {
+  const file = '{"strong coupling": {"power": "1/3", "spacing": "2/3"}, "coefficients": ["1", "-1"]}';
+  const series = await parseSeries(file, { name: 'x' });
+  expect(series.strongCoupling?.power.toString()).toBe('1/3');
+  expect(comparable(await again(series))).toEqual(comparable(series));
+});
+
 const ids = await catalogueIds();
 
 describe('the catalogue', () => {

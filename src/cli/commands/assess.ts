@@ -58,6 +58,7 @@ export const assess: Command = {
     'flavours',
     'digits',
     'verdict-rule',
+    'strong-coupling',
     'json',
     'output',
     'quiet',

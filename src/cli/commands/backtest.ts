@@ -154,6 +154,7 @@ export const backtest: Command = {
     'catalogue',
     'hide',
     'exact',
+    'strong-coupling',
     'only',
     'except',
     'family',

@@ -96,6 +96,7 @@ export const compare: Command = {
     'sort',
     'hide',
     'exact',
+    'strong-coupling',
     'order',
     'flavours',
     'digits',

@@ -59,6 +59,7 @@ export const sum: Command = {
     'at',
     'alpha-s-mz',
     'order',
+    'strong-coupling',
     'flavours',
     'digits',
     'json',
