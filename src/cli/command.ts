@@ -1,11 +1,13 @@
 /** @module What a command is: its words for the help, the options it knows, and what it does. */
+import type { ContourGiven } from './options-contour.js';
 import type { OptionName, OptionWords } from './options.js';
+import type { MassGiven } from './options-mass.js';
 import type { PaperGiven } from './options-papers.js';
 import type { PictureGiven } from './options-pictures.js';
 import type { Surroundings } from './surroundings.js';
 
 /** Option values after checking. Absent means not given. */
-export interface Given extends PictureGiven, PaperGiven {
+export interface Given extends PictureGiven, PaperGiven, MassGiven, ContourGiven {
   readonly at?: string;
   readonly alphaSMZ?: string;
   readonly alphaS?: string;
@@ -35,8 +37,8 @@ export interface Given extends PictureGiven, PaperGiven {
   readonly sort?: string;
   readonly hide?: number;
   readonly exact?: string;
-  readonly catalogue?: boolean;
   readonly strongCoupling?: string;
+  readonly catalogue?: boolean;
   readonly csv?: boolean;
   readonly verdictRule?: string;
   readonly by?: string;

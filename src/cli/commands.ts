@@ -6,10 +6,14 @@ import { catalogue } from './commands/catalogue.js';
 import { evolve } from './commands/evolve.js';
 import { compare } from './commands/compare.js';
 import { combine } from './commands/combine.js';
+import { contour } from './commands/contour.js';
 import { growth } from './commands/growth.js';
 import { helpCommand } from './commands/help.js';
+import { mass } from './commands/mass.js';
 import { plane } from './commands/plane.js';
 import { plot } from './commands/plot.js';
+import { replayCommand } from './commands/replay.js';
+import { report } from './commands/report.js';
 import { rewrite } from './commands/rewrite.js';
 import { sum } from './commands/sum.js';
 import { truncation } from './commands/truncation.js';
@@ -23,13 +27,18 @@ const STUDIES: readonly Command[] = [
   compare,
   truncation,
   backtest,
+  contour,
   evolve,
+  mass,
   rewrite,
   combine,
   plot,
+  report,
   catalogue,
 ];
 
 const WITH_FORMS = STUDIES.map(withPapers);
 
-export const COMMANDS: readonly Command[] = [...WITH_FORMS, helpCommand(WITH_FORMS)];
+const ALL = [...WITH_FORMS, replayCommand(WITH_FORMS)];
+
+export const COMMANDS: readonly Command[] = [...ALL, helpCommand(ALL)];

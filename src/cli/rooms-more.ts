@@ -3,5 +3,7 @@
  * first one, since they would pay for loading it.
  */
 export * as contour from '../contour/index.js';
+export * as masses from '../masses/index.js';
 export * as papers from '../papers/index.js';
 export * as pictures from '../pictures/index.js';
+export * as sheets from '../sheets/index.js';

@@ -4,3 +4,7 @@ export type { PaperForm } from './forms.js';
 export { TABLED, tablesOf } from './of-result.js';
 export type { CommandResult } from './of-result.js';
 export type { Cell, Column, Measured, NamedError, PaperTable } from './table.js';
+export { reportPage } from './page/page.js';
+export type { ReportInput } from './page/page.js';
+export { compareResults } from './replay.js';
+export type { Difference, Replay } from './replay.js';

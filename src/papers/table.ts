@@ -55,8 +55,8 @@ export const number = (key: string, head = key, unit?: string): Column => ({
 export const size = (key: string, head = key, unit?: string): Column => ({ ...number(key, head, unit), kind: 'size' });
 
 /** A symmetric error, or none where the text is absent. */
-export const symmetric = (label: string, size: string | undefined): NamedError[] =>
-  size === undefined ? [] : [{ label, plus: size.replace(/^[-+]/, ''), minus: size.replace(/^[-+]/, '') }];
+export const symmetric = (label: string, error: string | undefined): NamedError[] =>
+  error === undefined ? [] : [{ label, plus: error.replace(/^[-+]/, ''), minus: error.replace(/^[-+]/, '') }];
 
 /** A value with its errors; an empty cell where there is no value. */
 export const measured = (value: string | undefined, ...errors: readonly (readonly NamedError[])[]): Cell =>
