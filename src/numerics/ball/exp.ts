@@ -1,5 +1,5 @@
 /**
- * @module Real exponential function and its relatives: exp, expm1, sinh, cosh.
+ * @module Real exponential function and its relatives: exp, expm1, sinh, cosh, tanh.
  *
  * Purpose    enclosures for balls of any size, with relative accuracy where the value is small (expm1, sinh near 0).
  * Method     exp x = 2^n·exp t, t = x − n ln 2 in [0, ln 2), by expFixed; small arguments of expm1 and sinh by their series.
@@ -85,3 +85,23 @@ export function cosh(x: Ball, prec: number): Ball {
   const y = exp(R.abs(x), prec + 10);
   return R.mul2exp(R.add(y, R.div(R.ONE, y, prec + 10), prec), -1);
 }
+
+/** tanh x = m/(m + 2) with m = e^2x − 1, relatively accurate near 0; |tanh′| <= min(1, 4 e^(−2|x|)). */
+export function tanh(x: Ball, prec: number): Ball {
+  if (R.isExactZero(x)) return R.ZERO;
+  if (x.rad === Infinity) return UNIT;
+  const mid = R.exactMid(x);
+  // Beyond it the value is ±1 to more than 2^45 bits.
+  if (R.upperBits(mid) > HUGE_BITS) return x.rad === 0 ? R.addError(signOf(mid), 1, -(2 ** HUGE_BITS)) : UNIT;
+  const m = expm1(R.neg(R.mul2exp(R.abs(mid), 1)), prec + 10);
+  const size = R.div(R.neg(m), R.add(m, TWO, prec + 10), prec);
+  const y = mid.mid < 0n ? R.neg(size) : size;
+  if (x.rad === 0) return y;
+  const r = R.radiusToNumber(x);
+  const decay = 4 * Math.exp(-2 * Math.min(300, Math.max(0, Math.abs(R.toNumber(mid)) * (1 - 1e-12) - r)));
+  return R.addError(y, x.rad * Math.min(1, decay * 1.001), x.exp);
+}
+
+const UNIT: Ball = { mid: 0n, exp: 0, rad: 1 };
+const TWO: Ball = { mid: 2n, exp: 0, rad: 0 };
+const signOf = (x: Ball): Ball => (x.mid < 0n ? R.neg(R.ONE) : R.ONE);

@@ -14,13 +14,14 @@ import { eulerGamma } from '../ball/constants.js';
 import * as C from '../ball/complex.js';
 import type { Complex } from '../ball/complex.js';
 import { cexp, clog } from '../ball/complex-elementary.js';
-import { magBits } from '../ball/mag.js';
+import { addMag, mag, magBits, mulMag, widenMag } from '../ball/mag.js';
 import * as R from '../ball/real.js';
 import { Rational } from '../rational.js';
 import { gammaComplex } from './gamma-complex.js';
 import { cexpm1, harmonicLimit, powerOverFactorialComplex } from './pole-part.js';
 import { refine } from './refine.js';
 import { modulusUpper } from './spread.js';
+import { absoluteError, timesTracked, TRACKED_ONE } from './tracked.js';
 import { zeta } from './zeta.js';
 
 /** |b − m| below this takes the pole out. */
@@ -49,19 +50,24 @@ function asymptotic(b: Complex, w: Complex, size: number, prec: number): Complex
   const work = prec + 24 + Math.ceil(Math.log2(size));
   const inverse = C.inv(C.neg(w), work);
   const growth = Math.PI * Math.abs(im) * Math.LOG2E + 1;
-  let term: Complex = C.ONE;
+  let term = TRACKED_ONE;
   let sum: Complex = C.ONE;
+  let noise = mag(0);
   for (let n = 1; n + re <= size; n++) {
     const factor: Complex = { re: R.add(b.re, R.fromNumber(n), work), im: b.im };
-    term = C.mul(C.mul(term, factor, work), inverse, work);
+    term = timesTracked(term, C.mul(factor, inverse, work), work);
+    const own = absoluteError(term);
     if (n + re >= -1) {
-      const error = magBits(modulusUpper(term)) + growth + 0.5 * Math.log2(Math.E * (n + re + 2));
+      const whole = addMag(modulusUpper(term.value), own);
+      const error = magBits(whole) + growth + 0.5 * Math.log2(Math.E * (n + re + 2));
       if (error < -goal) {
-        const e = Math.ceil(Math.max(error, -1e9));
-        return C.mul({ re: R.addError(sum.re, 1, e), im: R.addError(sum.im, 1, e) }, C.neg(inverse), prec + 4);
+        const rest = addMag(noise, mag(1, Math.ceil(Math.max(error, -1e9))));
+        const wide: Complex = { re: widenMag(sum.re, rest), im: widenMag(sum.im, rest) };
+        return C.mul(wide, C.neg(inverse), prec + 4);
       }
     }
-    sum = C.add(sum, term, work);
+    sum = C.add(sum, term.value, work);
+    noise = addMag(noise, own);
   }
   return undefined;
 }
@@ -84,22 +90,25 @@ function convergent(b: Complex, w: Complex, size: number, bits: number): Complex
 
 /** Σ_{k≠m} z^k/(k!(k−b)). */
 function poleFreeSum(b: Complex, z: Complex, m: number, size: number, re: number, bits: number): Complex {
-  let term: Complex = C.ONE;
+  let term = TRACKED_ONE;
   let sum: Complex = C.ZERO;
+  let noise = mag(0);
   const from = Math.max(2 * size + 1, re + 2);
   for (let k = 0; ; k++) {
     if (k > 0) {
-      const t = C.mul(term, z, bits);
       const d = R.fromNumber(k);
-      term = { re: R.div(t.re, d, bits), im: R.div(t.im, d, bits) };
+      term = timesTracked(term, { re: R.div(z.re, d, bits), im: R.div(z.im, d, bits) }, bits);
     }
-    const top = C.upperBits(term);
+    const top = C.upperBits(term.value);
     if (k >= from && top < -bits + size * Math.LOG2E) {
-      return { re: R.addError(sum.re, 1, top + 1), im: R.addError(sum.im, 1, top + 1) };
+      const rest = addMag(noise, mag(1, top + 2));
+      return { re: widenMag(sum.re, rest), im: widenMag(sum.im, rest) };
     }
     if (k === m) continue;
     const denominator: Complex = { re: R.sub(R.fromNumber(k), b.re, bits), im: R.neg(b.im) };
-    sum = C.add(sum, C.div(term, denominator, bits), bits);
+    const inverse = C.inv(denominator, bits);
+    sum = C.add(sum, C.mul(term.value, inverse, bits), bits);
+    noise = addMag(noise, mulMag(absoluteError(term), modulusUpper(inverse)));
   }
 }
 
