@@ -6,3 +6,7 @@ export { CONTESTED } from './answers.js';
 export { improvedAnswers } from './answer-improved.js';
 export { modelAnswers, padeAnswers } from './answer-borel.js';
 export { subtractedAnswers } from './answer-subtracted.js';
+export { contourReport } from './report.js';
+export type { ReportOptions } from './report.js';
+export type { BorelRow, ContourReport, OrderRow, PowerRow, SubtractedReport, SummedTerm } from './report-types.js';
+export type { Norm } from './normalisation.js';

@@ -1,6 +1,7 @@
 /** @module The public face of the report room: plain results in, text out. */
 export { catalogueText, plainSeries, seriesText } from './catalogue.js';
 export { catalogueCheckText, catalogueProblems } from './catalogue-check.js';
+export { contourLines, contourText } from './contour.js';
 export { evolveText } from './evolve.js';
 export { plainJson, resultJson } from './json.js';
 export { rough } from './layout/figures.js';

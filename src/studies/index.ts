@@ -5,6 +5,8 @@ export type * from './assessment.js';
 export { growthStudy, planeStudy, sumStudy } from './parts.js';
 export type { GrowthResult, PlaneResult, SumResult } from './parts.js';
 export { VERSION } from './version.js';
+export { contourStudy } from './contour/study.js';
+export type { ContourResult, ContourStudyOptions } from './contour/study.js';
 export { truncationStudy } from './truncation.js';
 export type { TruncationEstimate, TruncationOptions, TruncationResult } from './truncation.js';
 export type { BandText } from './truncation-answer.js';

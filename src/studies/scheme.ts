@@ -32,6 +32,9 @@ const WORDS: readonly (readonly [RegExp, (m: RegExpExecArray) => CouplingScheme 
 
 const LOOP_WORDS = ['one', 'two', 'three', 'four', 'five'];
 
+/** "four-loop running only". */
+export const loopWords = (loops: number): string => `${LOOP_WORDS[loops - 1]}-loop running only`;
+
 function cScheme(text: string): CouplingScheme | undefined {
   const c = Rational.parse(text);
   return c && { kind: 'C', c };
@@ -50,7 +53,7 @@ export function schemeText(scheme: CouplingScheme): string {
     case 'series':
       return `coupling defined by ${scheme.name}`;
     case 'toy':
-      return `toy, ${LOOP_WORDS[scheme.loops - 1]}-loop running only`;
+      return `toy, ${loopWords(scheme.loops)}`;
     case 'MSbar':
     case 'mini-MOM':
       return scheme.kind;
