@@ -119,7 +119,7 @@ function lightOf(given: Given, quark: Threshold): number {
 
 /** The coupling of --alpha-s, --alpha-s-mz, or the world average. */
 async function alphaOf(given: Given, light: number): Promise<MassQuestion['alpha']> {
-  const { qcd } = await import('./rooms.js');
+  const { numerics, qcd } = await import('./rooms.js');
   const { alphaS, alphaSMZ, flavours } = given;
   if (alphaS !== undefined && alphaSMZ !== undefined) {
     throw new UsageError('--alpha-s and --alpha-s-mz exclude each other: one coupling is enough', COMMAND);
@@ -128,7 +128,10 @@ async function alphaOf(given: Given, light: number): Promise<MassQuestion['alpha
     if (flavours !== undefined) {
       throw new UsageError('--flavours belongs to the coupling of --alpha-s; that at M_Z has five', COMMAND);
     }
-    const text = alphaSMZ ?? `${qcd.INPUTS.alphaSMZ.value} +- ${qcd.INPUTS.alphaSMZ.error[0]}`;
+    const { value: average, error } = qcd.INPUTS.alphaSMZ;
+    const rounded = numerics.roundPdg(average, [error[0]]);
+    const usual = (rounded && numerics.writeParentheses(rounded)) ?? average;
+    const text = alphaSMZ ?? usual;
     const value = await couplingValue('alpha-s-mz', text, COMMAND);
     return { value: positive('alpha-s-mz', value), scale: Number(qcd.INPUTS.MZ.value), flavours: 5 };
   }
@@ -179,7 +182,7 @@ export async function massQuestion(operand: string, given: Given): Promise<MassQ
       ? undefined
       : positive('strength', await couplingValue('strength', given.strength, COMMAND));
   return {
-    mass,
+    mass: { ...mass, text: operand.trim() },
     from,
     to,
     alpha: await alphaOf(given, light),

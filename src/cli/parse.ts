@@ -66,6 +66,11 @@ function rawParse(words: readonly string[], command: Command): Map<string, unkno
 
 async function unknownOption(key: string, command: Command): Promise<UsageError> {
   const { series } = await import('./rooms.js');
+  if (/^\d/.test(key))
+    return new UsageError(
+      `-${key} reads as an option; write it behind --, or join it on: --NAME=-${key}`,
+      command.name,
+    );
   const written = key.length === 1 ? `-${key}` : `--${key}`;
   const near = series.nearest(key, command.options);
   const hint = near === undefined ? '' : `; did you mean --${near}?`;

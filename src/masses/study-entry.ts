@@ -45,7 +45,10 @@ function digitsOf(
 ): Pick<MassValue, 'value' | 'digits'> {
   if (exactValue !== undefined && !isRefusal(exactValue)) {
     const shown = toDecimal(exactValue.ball(Math.ceil(digits * 3.33) + 32), digits);
-    if (shown.certainDigits > 0) return { value: shown.text, digits: 'certified' };
+    // An exact number, the mass as it was given, needs no zeros behind it.
+    const short =
+      exactValue.rational === undefined ? shown.text : shown.text.replace(/(\.\d*?)0+$/, '$1').replace(/\.$/, '');
+    if (shown.certainDigits > 0) return { value: short, digits: 'certified' };
   }
   return { value: text(found.value), digits: 'converged' };
 }
@@ -69,7 +72,10 @@ function scaleParts(request: MassRequest, central: number): Pick<MassValue, 'sca
   return { scaleVariation: { plus: few(plus), minus: few(minus), points }, spread: Math.max(plus, minus) };
 }
 
-/** "4.408 ± 0.021 (inputs) ± 0.006 (perturbative)". */
+/** A component below this share of the largest would print digits that the larger one makes meaningless. Heuristic. */
+const NEGLIGIBLE = 0.1;
+
+/** "4.408 ± 0.021 (inputs) ± 0.006 (perturbative)"; negligible components are named, not printed. */
 function printedText(
   value: string,
   inputs: readonly Shift[],
@@ -77,21 +83,22 @@ function printedText(
   ambiguity: number | undefined,
 ): string {
   const quadrature = (side: 'plus' | 'minus'): number => Math.hypot(...inputs.map((s) => s[side]));
-  const parts = [
+  const all = [
     { label: 'inputs', plus: quadrature('plus'), minus: quadrature('minus') },
     { label: 'perturbative', plus: perturbative, minus: perturbative },
     { label: 'ambiguity', plus: ambiguity ?? 0, minus: ambiguity ?? 0 },
   ].filter((p) => p.plus > 0 || p.minus > 0);
+  const size = (p: { readonly plus: number; readonly minus: number }): number => Math.max(p.plus, p.minus);
+  const floor = NEGLIGIBLE * Math.max(0, ...all.map(size));
+  const parts = all.filter((p) => size(p) >= floor);
+  const hidden = all.filter((p) => size(p) < floor).map((p) => `; ${p.label} negligible`);
   const rounded = roundPdg(
     value,
     parts.map((p) => ({ plus: few(p.plus, 6), minus: few(p.minus, 6) })),
   );
-  return rounded === undefined
-    ? value
-    : writePlusMinus(
-        rounded,
-        parts.map((p) => p.label),
-      );
+  if (rounded === undefined) return value;
+  const labels = parts.map((p) => p.label);
+  return `${writePlusMinus(rounded, labels)}${hidden.join('')}`;
 }
 
 export interface EntryInputs {
@@ -138,7 +145,12 @@ export function entryOf(request: MassRequest, inputs: EntryInputs): MassEntry {
     ...(terms === undefined || isRefusal(terms) ? {} : { terms: listTerms(point, terms) }),
     ...(terms === undefined || isRefusal(terms) || terms.closed === 0 ? {} : { closed: term(terms.closed) }),
     ...(evolution === undefined ? {} : { evolution }),
-    errors: shifts.map((s) => ({ label: s.label, plus: few(s.plus), minus: few(s.minus) })),
+    errors: shifts.map((s) => ({
+      label: s.label,
+      plus: few(s.plus),
+      minus: few(s.minus),
+      ...(s.oneSided === true ? { oneSided: true } : {}),
+    })),
     ...(last > 0 ? { lastTerm: few(last) } : {}),
     ...(scaleVariation === undefined ? {} : { scaleVariation }),
     ...(perturbative > 0 ? { perturbative: few(perturbative) } : {}),

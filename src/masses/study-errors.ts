@@ -10,6 +10,8 @@ export interface Shift {
   readonly label: string;
   readonly plus: number;
   readonly minus: number;
+  /** One of the shifted inputs has no conversion: the other side stands for both. */
+  readonly oneSided?: boolean;
 }
 
 const sigmas = (u: Uncertain | undefined): readonly number[] =>
@@ -22,7 +24,10 @@ function shiftOf(label: string, central: number, requests: readonly MassRequest[
   });
   const plus = Math.max(0, ...moves);
   const minus = Math.max(0, ...moves.map((x) => -x));
-  return plus > 0 || minus > 0 ? { label, plus, minus } : undefined;
+  if (plus === 0 && minus === 0) return undefined;
+  if (moves.length === requests.length) return { label, plus, minus };
+  const size = Math.max(plus, minus);
+  return { label, plus: size, minus: size, oneSided: true };
 }
 
 /** Masses of the other quarks' thresholds, in quadrature; a crossing scale moves with its mass. */

@@ -30,6 +30,8 @@ export interface MassError {
   readonly label: string;
   readonly plus: string;
   readonly minus: string;
+  /** The shift in the other direction has no conversion: this side stands for both. */
+  readonly oneSided?: boolean;
 }
 
 /** One power of α_s at the scale μ, in GeV. */
@@ -113,6 +115,7 @@ export interface StrengthUsed {
 }
 
 export interface MassResult {
+  /** As given, with its unit. */
   readonly mass: string;
   readonly from: {
     readonly definition: DefinitionName;

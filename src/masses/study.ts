@@ -108,7 +108,12 @@ function cautionsFor(
 /** The study. Refused when not one of the definitions can be reached for a reason that they share. */
 export function massStudy(question: MassQuestion): MassResult | Refusal {
   const strength = strengthOf(question);
-  const probe = requestFor({ ...question, to: [question.from] }, { definition: 'msbar' }, strength.value);
+  // With as many orders as the first definition is reached with.
+  const [first = question.from] = question.to;
+  const probe = {
+    ...requestFor(question, { definition: 'msbar' }, strength.value),
+    order: orderFor(question, first),
+  };
   const found = convertMass(probe);
   if (isRefusal(found)) return found;
   const setting = settingOf(probe);

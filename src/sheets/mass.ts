@@ -42,7 +42,10 @@ function valueFacts(entry: MassValue): Fact[] {
     { label: entry.symbol, text: `${entry.value} GeV`, tone: 'mark' },
     { label: 'rounded, in GeV', text: entry.printed },
     { label: 'digits', text: digits },
-    ...entry.errors.map((e) => ({ label: `error from ${e.label}`, text: bothSides(e.plus, e.minus) })),
+    ...entry.errors.map((e) => ({
+      label: `error from ${e.label}`,
+      text: `${bothSides(e.plus, e.minus)}${e.oneSided === true ? ' (from one side: the other has no conversion)' : ''}`,
+    })),
     ...(entry.lastTerm === undefined ? [] : [{ label: 'last term', text: rough(entry.lastTerm) }]),
     ...scaleFact(entry),
     ...(entry.perturbative === undefined
@@ -84,6 +87,25 @@ function orderTable(page: Page, entry: MassValue): void {
     'faint',
   );
   if (entry.closed !== undefined) page.say(`added at once, as a Borel integral: ${cut(entry.closed, 7)} GeV`, 'faint');
+}
+
+/** The relation between m(m) and the definition given, when that is no MSbar mass. */
+function sourceSection(page: Page, result: MassResult): void {
+  const { sourceTerms, from } = result;
+  if (sourceTerms === undefined) return;
+  page.head(`Between m(m) and ${from.symbol}, in GeV, at m(m) as found`);
+  page.table(
+    [
+      { head: 'order', align: 'right' },
+      { head: 'pole term', align: 'point' },
+      { head: 'renormalon', align: 'point' },
+      { head: 'removed', align: 'point' },
+      { head: 'left', align: 'point' },
+      { head: 'ratio', align: 'point' },
+      { head: 'of left', align: 'point' },
+    ],
+    sourceTerms.map((t) => ({ cells: [String(t.order), ...termCells(t)] })),
+  );
 }
 
 const termCells = (t: MassTerm | undefined): string[] =>
@@ -142,8 +164,12 @@ function sideBySide(page: Page, values: readonly MassEntry[]): void {
       };
     }),
   );
+  page.blank();
+  for (const v of values) {
+    if (isValue(v) && v.closed !== undefined)
+      page.say(`${v.symbol}: a Borel integral of ${cut(v.closed, 7)} GeV is added to the terms`, 'faint');
+  }
   if (values.some((v) => isValue(v) && !v.renormalonFree)) {
-    page.blank();
     page.say('* holds the renormalon: its ambiguity comes on top, see below', 'faint');
   }
 }
@@ -187,8 +213,8 @@ export function massText(result: MassResult, options: TerminalOptions = {}): str
   const page = new Page(options.columns ?? 100, options.paint ?? unpainted, options.digits);
   const [only] = result.values;
   const single = result.values.length === 1 && only !== undefined && isValue(only) ? only : undefined;
-  const given = `${result.from.symbol} = ${result.mass.replace(/\s*[GMT]eV$/, '')}`;
-  page.title(single === undefined ? `${given} GeV in other definitions` : `${given} GeV as ${single.symbol}`);
+  const given = `${result.from.symbol} = ${result.mass.replace(/\s*([GMT]eV)$/, ' $1')}`;
+  page.title(single === undefined ? `${given} in other definitions` : `${given} as ${single.symbol}`);
   page.facts([
     {
       label: 'coupling',
@@ -206,7 +232,8 @@ export function massText(result: MassResult, options: TerminalOptions = {}): str
     page.head('Order by order, in GeV');
     orderTable(page, single);
   }
-  for (const entry of result.values) if (isValue(entry)) evolutionSection(page, entry);
+  if (single !== undefined) evolutionSection(page, single);
+  sourceSection(page, result);
   renormalonSection(page, result);
   definitionsSection(page, result.values);
   if (result.cautions.length > 0) {
