@@ -34,6 +34,8 @@ export interface ExpectedSingularityInput {
   readonly anomalousDimension?: Exact;
   readonly wilson?: WilsonCoefficient;
   readonly divisor: CouplingDivisor;
+  /** A world in which the beta function ends after so many loops; QCD's five when absent. */
+  readonly loops?: number;
 }
 
 export interface ExpectedSingularity {
@@ -87,7 +89,7 @@ function lambdaSeries<T>(ring: Ring<T>, beta: readonly T[], d: T, wilson: readon
 export function expectedSingularity(input: ExpectedSingularityInput): ExpectedSingularity {
   const dimension = input.dimension instanceof Rational ? input.dimension : Rational.of(input.dimension);
   if (dimension.isZero()) throw new RangeError('expectedSingularity: dimension 0 is no power correction');
-  const beta = betaCoefficients(input.flavours);
+  const beta = betaCoefficients(input.flavours).map((b, k) => (k < (input.loops ?? Infinity) ? b : exact(0)));
   const power = Rational.of(input.wilson?.power ?? 0);
   // In a = α_s/(4π) everything but Wilson coefficients given in α_s itself is free of π.
   const toA = overFourPi(input.divisor);

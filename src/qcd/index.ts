@@ -70,6 +70,7 @@ export {
   leadingNormalisation,
   type Normalisation,
   type NormalisationEstimate,
+  type NormalisationMethod,
   type NormalisationQuestion,
 } from './normalisation/normalisation.js';
 export { asymptoticRatio, borelFactor, sumRule } from './normalisation/estimates.js';

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { exact, toNumberExact, type Exact } from '../../src/numerics/index.js';
+import { Rational, addExact, exact, toNumberExact, type Exact } from '../../src/numerics/index.js';
 import {
   asymptoticRatio,
   betaNumbers,
@@ -13,6 +13,8 @@ import {
   type Normalisation,
   type NormalisationQuestion,
 } from '../../src/qcd/index.js';
+import { conformalSums, imageOfOne } from '../../src/qcd/normalisation/conformal.js';
+import { sumRuleTerms } from '../../src/qcd/normalisation/estimates.js';
 
 function granted(question: NormalisationQuestion): Normalisation {
   const result = leadingNormalisation(question);
@@ -152,6 +154,107 @@ describe('estimators on series with known strength', () => {
   });
 });
 
+describe('an infrared singularity behind an ultraviolet one', () => {
+  // 0.8 (2b_0/d)^n Γ(n+1+p)/Γ(1+p) + 0.003 (−b_0)^n Γ(n+1.2) + 0.1 (b_0/3)^n Γ(n+3), d = 4, n_f = 3, two-loop geometric coupling.
+  const [b0 = NaN, b1 = NaN] = betaNumbers(3, 2, '1');
+  const q = b1 / b0;
+  const p = (2 * q) / b0;
+  const series = (count: number, ultraviolet: number): number[] => {
+    let [same, opposite, next] = [0.8, ultraviolet * 0.918168742399761, 0.2];
+    return Array.from({ length: count }, (_, n) => {
+      if (n > 0) {
+        same *= (b0 / 2) * (n + p);
+        opposite *= -b0 * (n + 0.2);
+        next *= (b0 / 3) * (n + 2);
+      }
+      return same + opposite + next;
+    });
+  };
+
+  // Computed with mpmath 1.2.1, 40 digits: without and with the ultraviolet part.
+  it('spoils the plain sum rule', () => {
+    const without = sumRule(series(60, 0), b0, q, 4);
+    [
+      [3, 0.872327202994382],
+      [10, 0.80749525043751],
+      [30, 0.800003238298329],
+    ].forEach(([n = 0, value]) => expect(without[n]).toBeCloseTo(value ?? NaN, 9));
+    const own = sumRule(series(11, 0.003), b0, q, 4);
+    expect(own[3]).toBeCloseTo(0.869663658819154, 9);
+    expect(own[10]).toBeCloseTo(0.930655824732714, 9);
+  });
+
+  it('is no hindrance in the conformal variable', () => {
+    const own = conformalSums(sumRuleTerms(series(31, 0.003), b0, q, 4), { a: 0.5, b: 1.5 });
+    expect(imageOfOne({ a: 0.5, b: 1.5 })).toBeCloseTo(0.5, 15);
+    expect(Math.abs((own[10] ?? NaN) - 0.8)).toBeLessThan(5e-3);
+    expect(Math.abs((own[30] ?? NaN) - 0.8)).toBeLessThan(1e-6);
+  });
+
+  it('leads with the conformal sum, stops the others at n = 3, and says so', () => {
+    const coefficients = [1, 1.6398, 6.371, 49.076, 283].map((x) => exact(Rational.fromNumber(x)));
+    const base = { coefficients, firstPower: 1, divisor: 'pi', flavours: 3, dimension: 4, nextInfrared: 3 } as const;
+    const n = granted(base);
+    expect(n.estimates.map((e) => [e.method, e.steps.length])).toEqual([
+      ['sum rule in the conformal variable', 5],
+      ['sum rule', 4],
+      ['ratio to the asymptotic form', 4],
+      ['expansion of the Borel factor', 4],
+    ]);
+    expect(n.notes.join()).toMatch(/u = −1 lies closer/);
+    expect(n.error).toBeGreaterThan(Math.abs(n.value - (n.estimates[1]?.value ?? NaN)));
+    // The condensate's coefficient function 1 − (11/18) x is divided out: the answer moves.
+    const wilson = granted({ ...base, wilson: [exact(Rational.of(-11, 18))] });
+    expect(wilson.value).not.toBeCloseTo(n.value, 2);
+  });
+});
+
+describe('errors and other couplings', () => {
+  it('coefficient errors enter linearly', () => {
+    const coefficients = poleSeries(4);
+    const base = { coefficients, firstPower: 1, divisor: 'pi', flavours: 4, dimension: 1 } as const;
+    const errors = [0, 0, 0, 100];
+    const n = granted({ ...base, errors });
+    const moved = granted({
+      ...base,
+      coefficients: coefficients.map((c, k) => (k === 3 ? addExact(c, exact(100)) : c)),
+    });
+    expect(n.errorParts.input).toBeCloseTo(Math.abs(moved.value - n.value), 10);
+    expect(n.error).toBeGreaterThan(granted(base).error);
+  });
+
+  // Static energy on the lattice: c_n over the leading asymptotic form tends to 19.0(1.6) (arXiv:1303.3279, recalled).
+  it('without a beta function beyond two loops the ratio drifts, and its error says so', () => {
+    const coefficients = [1, 2, 8, 60, 700].map((x) => exact(x));
+    const n = granted({ coefficients, firstPower: 1, divisor: '1', flavours: 0, dimension: 1, loops: 2 });
+    expect(n.estimates.map((e) => e.method)).toEqual(['ratio to the asymptotic form', 'expansion of the Borel factor']);
+    expect(n.estimates[0]?.scaleVariation).toBeUndefined();
+    const own = n.estimates[0]?.steps ?? [];
+    expect(n.estimates[0]?.error).toBeCloseTo(4 * Math.abs((own[4] ?? NaN) - (own[3] ?? NaN)), 10);
+    expect(n.notes.join()).toMatch(/not known beyond two loops/);
+  });
+
+  it('a world of one loop: the pure pole at u = 1/2 is found exactly', () => {
+    // 4/3 (2b_0)^n n! in one-loop running.
+    const [first = NaN] = betaNumbers(4, 1, 'pi');
+    let r = 4 / 3;
+    const coefficients = Array.from({ length: 8 }, (_, n) => {
+      if (n > 0) r *= 2 * first * n;
+      return exact(Rational.fromNumber(r));
+    });
+    const n = granted({
+      coefficients,
+      firstPower: 1,
+      divisor: 'pi',
+      flavours: 4,
+      dimension: 1,
+      loops: 1,
+      ends: true,
+    });
+    expect(n.value).toBeCloseTo(4 / 3, 10);
+  });
+});
+
 it('refuses hopeless questions and warns of closer singularities', () => {
   const coefficients = [1, 2, 3].map((x) => exact(x));
   const base = { coefficients, firstPower: 1, divisor: 'pi', flavours: 3, dimension: 1 } as const;
@@ -160,5 +263,6 @@ it('refuses hopeless questions and warns of closer singularities', () => {
   expect(isRefusal(leadingNormalisation({ ...base, flavours: 20 }))).toBe(true);
   expect(isRefusal(leadingNormalisation({ ...base, firstPower: 0 }))).toBe(true);
   expect(granted({ ...base, dimension: 4 }).notes).toHaveLength(1);
+  expect(granted({ ...base, dimension: 2 }).notes.join()).toMatch(/as near as/);
   expect(granted({ ...base, firstPower: 2 }).estimates[0]?.steps).toHaveLength(4);
 });

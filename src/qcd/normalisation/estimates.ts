@@ -56,14 +56,18 @@ export function borelFactor(r: readonly number[], t: number, p: number): number[
  * Reference: J. Komijani, arXiv:1701.00347; N. Brambilla, J. Komijani, A. Kronfeld, A. Vairo, arXiv:1712.04983.
  */
 export function sumRule(rGeometric: readonly number[], b0: number, q: number, d: number): number[] {
+  let sum = 0;
+  return sumRuleTerms(rGeometric, b0, q, d).map((h) => (sum += h));
+}
+
+/** The terms of the sum rule. */
+export function sumRuleTerms(rGeometric: readonly number[], b0: number, q: number, d: number): number[] {
   const t = d / (2 * b0);
   // b_1 = q b_0 in any normalisation: β_1/(2β_0²) = q/(2b_0).
   const p = (d * q) / (2 * b0);
-  let sum = 0;
   return rGeometric.map((value, n) => {
     let f = value;
     for (let j = 0; j < n; j++) f -= (2 / d) * b0 * q ** j * (n - j) * (rGeometric[n - 1 - j] ?? 0);
-    sum += ((n + 1) * f * t ** n) / rising(p, n + 1);
-    return sum;
+    return ((n + 1) * f * t ** n) / rising(p, n + 1);
   });
 }
