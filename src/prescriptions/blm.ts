@@ -4,13 +4,13 @@
  * c_1(n_f)/c_0 = A + B n_f: the part B n_f = −(3/2) B β_0 + 33 B/2 that belongs to the running is absorbed in the scale,
  *   ln(μ*²/μ²) = 3B/(2 p b), b = b_0/β_0,  and A + 33B/2 stays as next-to-leading coefficient.
  * Higher coefficients are re-expanded at that scale. The notes compare the coefficients with their naive non-abelianisation.
- * Truncation error: the last term at the new scale.
- * Reference: S. J. Brodsky, G. P. Lepage, P. B. Mackenzie, Phys. Rev. D 28 (1983) 228. Sequential and multi-scale extensions need
- * more than the n_f dependence beyond this order and are not offered.
+ * A second member carries the scale one order further (blm-sequential.ts). Truncation error: the last term at the new scale.
+ * Reference: S. J. Brodsky, G. P. Lepage, P. B. Mackenzie, Phys. Rev. D 28 (1983) 228.
  */
 import { divExact, exact, isZeroExact, mulExact, R, Rational, toNumberExact } from '../numerics/index.js';
 import type { Exact } from '../numerics/index.js';
 import type { Expansion, Running } from '../series/index.js';
+import { sequentialMember } from './blm-sequential.js';
 import { inputObjection, trustOf } from './eligibility.js';
 import { betaUnit, nonAbelianised } from './flavour-polynomials.js';
 import type { Outcome, Prescription } from './prescription.js';
@@ -20,7 +20,7 @@ import type { AtScale } from './scale-choice.js';
 
 /** ln(μ*²/μ²); undefined when the series is not known for other numbers of flavours, or c_0 depends on n_f. */
 export function blmShift(e: Expansion, running: Running): Exact | undefined {
-  const polynomials = running.flavourPolynomials;
+  const polynomials = running.flavourPolynomials?.();
   const unit = betaUnit(running);
   const slope = polynomials?.[1]?.[1];
   if (polynomials === undefined || unit === undefined || slope === undefined) return undefined;
@@ -31,7 +31,7 @@ export function blmShift(e: Expansion, running: Running): Exact | undefined {
 
 /** "naive non-abelianisation gives 13.02 (9.278), 102.0 (94.42)": predicted and known, from c_1 on. */
 function comparison(e: Expansion, running: Running): string[] {
-  const polynomials = running.flavourPolynomials;
+  const polynomials = running.flavourPolynomials?.()?.slice(0, e.coefficients.length);
   if (polynomials === undefined || running.flavours === undefined) return [];
   const guessed = nonAbelianised(polynomials, running.flavours);
   const pairs = guessed
@@ -74,6 +74,9 @@ export const blm: Prescription = {
           'use fac, or another scale',
         ),
       ];
+    const further = sequentialMember(e, running, request);
+    if (request.only !== undefined && request.only !== variant)
+      return [further ?? refusal(request.only, 'not a member of the family', 'choose another')];
     const truncation =
       request.only === undefined ? Math.abs(R.toNumber(R.sub(found.value, found.shorter, 160))) : undefined;
     return [
@@ -91,6 +94,7 @@ export const blm: Prescription = {
         ],
         central: true,
       },
+      ...(further === undefined || request.central === true || request.only !== undefined ? [] : [further]),
     ];
   },
 };

@@ -33,8 +33,11 @@ export interface Running {
   /** μ/Q of x and of the coefficients. */
   readonly scaleRatio: Exact;
   readonly flavours?: number;
-  /** Entry [n][k] multiplies n_f^k in the coefficient c_n; present when the series is known for any n_f. */
-  readonly flavourPolynomials?: readonly (readonly Exact[])[];
+  /**
+   * Entry [n][k] multiplies n_f^k in the coefficient c_n; present when the series is known for any n_f, worked out when it
+   * is asked for. Undefined when the coefficients turn out to be no polynomials of degree n.
+   */
+  readonly flavourPolynomials?: () => readonly (readonly Exact[])[] | undefined;
 }
 
 /**

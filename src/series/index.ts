@@ -26,6 +26,7 @@ export type { Written } from './written.js';
 export { parseTree } from './expression/tree.js';
 export type { SyntaxTree } from './expression/syntax.js';
 export { loadSeries, parseSeries } from './load.js';
+export { coefficientsAt } from './other-flavours.js';
 export type { LoadOptions, ParseOptions, SeriesForm } from './load.js';
 export { writeSeries } from './write.js';
 export { checkSeries } from './check.js';

@@ -8,7 +8,8 @@ import { FieldReader } from './field-reader.js';
 import { InputError } from './input-error.js';
 import { Numbers } from './numbers.js';
 import { weighed } from './precheck.js';
-import { readSeries } from './read-series.js';
+import { rememberFlavours } from './other-flavours.js';
+import { readOnlyCoefficients, readSeries } from './read-series.js';
 import type { Series } from './series.js';
 import { csvEntries, listEntries } from './table.js';
 
@@ -64,6 +65,11 @@ function reading(entry: Entry, options: ParseOptions, earlier: Complaints, parse
   const numbers = new Numbers(parse);
   const id = options.name.replace(/^.*[\\/]/, '').replace(/\.(?:ya?ml|json|csv|txt|dat)$/i, '');
   const series = readSeries(entry, id, new FieldReader(complaints, numbers), options.flavours);
+  if (series?.anyFlavours === true && parse !== undefined) {
+    rememberFlavours(series.coefficients, (flavours) =>
+      readOnlyCoefficients(entry, new FieldReader(new Complaints(options.name), new Numbers(parse)), flavours),
+    );
+  }
   return {
     parserWanted: numbers.parserWanted,
     result(): Series {

@@ -1,5 +1,6 @@
 /** @module The fields of a series file, checked, as a Series. */
 import { exact } from '../numerics/index.js';
+import type { Exact } from '../numerics/index.js';
 import type { Entry } from './entry.js';
 import type { FieldReader, Group } from './field-reader.js';
 import { plainSigns } from './number-text.js';
@@ -118,6 +119,20 @@ export function readSeries(entry: Entry, id: string, reader: FieldReader, flavou
       );
     }
   }
+}
+
+/** The coefficients alone, for another number of flavours; complaints go to the reader. */
+export function readOnlyCoefficients(
+  entry: Entry,
+  reader: FieldReader,
+  flavours: number,
+): readonly Exact[] | undefined {
+  const group = entry.kind === 'map' ? reader.group(entry, '', FIELDS) : undefined;
+  if (group === undefined) return undefined;
+  reader.numbers.flavours = flavours;
+  readConstants(group.get('constants'), reader);
+  const list = readCoefficients(group, reader)?.map((c) => c.value);
+  return reader.complaints.any ? undefined : list;
 }
 
 type Present<T> = { [K in keyof T]?: Exclude<T[K], undefined> };

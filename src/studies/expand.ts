@@ -10,6 +10,7 @@ import type {
   StatedSingularity,
   Uncertain,
 } from '../series/index.js';
+import { coefficientsAt } from '../series/index.js';
 import {
   addExact,
   divExact,
@@ -23,6 +24,7 @@ import {
   toNumberExact,
 } from '../numerics/index.js';
 import type { Exact } from '../numerics/index.js';
+import { flavourPolynomials } from '../prescriptions/index.js';
 import { betaCoefficients, divisorSize, expectedSingularity, isRefusal, uPerT, weightIntegral } from '../qcd/index.js';
 import type { GrowthInput, GrowthTerm } from '../growth/index.js';
 import { circleRunning, fixedOrderSeries } from './contour/moment.js';
@@ -67,7 +69,7 @@ export function expand(from: Series, at: Exact, order?: number): Expanded {
     coefficients,
     relativeErrors,
     stated,
-    ...runningOf(series),
+    ...runningOf(series, coefficients.length, leadingZeros),
     ...strongOf(series, leadingZeros),
     ...(series.expandedFrom === undefined ? {} : { contour: contourOf(series.expandedFrom, order, scale) }),
   };
@@ -127,13 +129,47 @@ function strongOf({ strongCoupling, firstPower }: Series, leadingZeros: number):
  * The β function in the series' own variable, and the scale it stands at: where the file names MSbar (or a toy world of few
  * loops). A quantity in units of a running mass has a second source of scale dependence and is left without.
  */
-function runningOf(series: Series): { running?: Running } {
+function runningOf(series: Series, count: number, leadingZeros: number): { running?: Running } {
   const scheme = couplingScheme(series);
   const { flavours } = series;
   if (flavours === undefined || isRefusal(scheme) || massDefinition(series) === 'running') return {};
   if (scheme.kind !== 'MSbar' && scheme.kind !== 'toy') return {};
   const beta = betaCoefficients(flavours, series.coupling.divisor).slice(0, knownLoops(scheme));
-  return { running: { beta, scaleRatio: series.scaleRatio ?? exact(1), flavours } };
+  const polynomials = series.anyFlavours === true ? polynomialsOf(series, count, leadingZeros) : undefined;
+  return {
+    running: {
+      beta,
+      scaleRatio: series.scaleRatio ?? exact(1),
+      flavours,
+      ...(polynomials === undefined ? {} : { flavourPolynomials: polynomials }),
+    },
+  };
+}
+
+/** Bits at which an interpolated coefficient is held against the file's. */
+const CHECK_BITS = 128;
+
+/**
+ * The first `count` coefficients as polynomials in n_f of degree n, from the file at n_f = 0 … count − 1 when they are asked
+ * for; undefined unless they reproduce the file at one number more.
+ */
+function polynomialsOf(series: Series, count: number, leadingZeros: number): Running['flavourPolynomials'] {
+  let found: { readonly list: ReturnType<typeof flavourPolynomials> | undefined } | undefined;
+  return () => {
+    if (found !== undefined) return found.list;
+    const at = (flavours: number): readonly Exact[] | undefined =>
+      coefficientsAt(series, flavours)?.slice(leadingZeros, leadingZeros + count);
+    const lists = Array.from({ length: count }, (_, flavours) => at(flavours));
+    const check = at(count);
+    const known = lists.filter((list): list is readonly Exact[] => list !== undefined);
+    const list = known.length < count ? undefined : flavourPolynomials(known);
+    const holds = list?.every((p, n) => {
+      const value = p.reduceRight((acc, c) => addExact(mulExact(acc, exact(count)), c), exact(0));
+      return check?.[n] !== undefined && R.overlaps(value.ball(CHECK_BITS), check[n].ball(CHECK_BITS));
+    });
+    found = { list: holds === true ? list : undefined };
+    return found.list;
+  };
 }
 
 const negated = (e: Exact): Exact => mulExact(e, exact(-1));

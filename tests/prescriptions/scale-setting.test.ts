@@ -179,7 +179,7 @@ describe('BLM', () => {
           beta: b,
           scaleRatio: exact(1),
           flavours: 5,
-          flavourPolynomials: polynomials.map((p, n) => p.map((c) => scale(c, n))),
+          flavourPolynomials: () => polynomials.map((p, n) => p.map((c) => scale(c, n))),
         },
       });
       const s = central(blm, e, 25);

@@ -8,18 +8,14 @@ const FEWEST_SEEN = 2;
 export function firstOf(expanded: Expanded, count: number): Expanded {
   const { expansion: e, growthInput: g } = expanded;
   if (count >= e.coefficients.length) return expanded;
-  const { running, contour } = e;
+  const { contour } = e;
   const onCircle = count + expanded.leadingZeros;
-  const polynomials = running?.flavourPolynomials;
   return {
     ...expanded,
     expansion: {
       ...e,
       coefficients: e.coefficients.slice(0, count),
       relativeErrors: e.relativeErrors.slice(0, count),
-      ...(running === undefined || polynomials === undefined
-        ? {}
-        : { running: { ...running, flavourPolynomials: polynomials.slice(0, count) } }),
       ...(contour === undefined
         ? {}
         : {
