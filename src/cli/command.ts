@@ -1,13 +1,15 @@
 /** @module What a command is: its words for the help, the options it knows, and what it does. */
 import type { ContourGiven } from './options-contour.js';
 import type { OptionName, OptionWords } from './options.js';
+import type { BubbleGiven } from './options-bubbles.js';
 import type { MassGiven } from './options-mass.js';
+import type { NewGiven } from './options-new.js';
 import type { PaperGiven } from './options-papers.js';
 import type { PictureGiven } from './options-pictures.js';
 import type { Surroundings } from './surroundings.js';
 
 /** Option values after checking. Absent means not given. */
-export interface Given extends PictureGiven, PaperGiven, MassGiven, ContourGiven {
+export interface Given extends PictureGiven, PaperGiven, MassGiven, ContourGiven, NewGiven, BubbleGiven {
   readonly at?: string;
   readonly alphaSMZ?: string;
   readonly alphaS?: string;

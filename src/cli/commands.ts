@@ -2,6 +2,7 @@
 import type { Command } from './command.js';
 import { assess } from './commands/assess.js';
 import { backtest } from './commands/backtest.js';
+import { bubbles } from './commands/bubbles.js';
 import { catalogue } from './commands/catalogue.js';
 import { evolve } from './commands/evolve.js';
 import { compare } from './commands/compare.js';
@@ -12,6 +13,8 @@ import { helpCommand } from './commands/help.js';
 import { mass } from './commands/mass.js';
 import { plane } from './commands/plane.js';
 import { plot } from './commands/plot.js';
+import { completionCommand } from './commands/completion.js';
+import { create } from './commands/new.js';
 import { replayCommand } from './commands/replay.js';
 import { report } from './commands/report.js';
 import { rewrite } from './commands/rewrite.js';
@@ -34,11 +37,14 @@ const STUDIES: readonly Command[] = [
   combine,
   plot,
   report,
+  bubbles,
   catalogue,
 ];
 
 const WITH_FORMS = STUDIES.map(withPapers);
 
-const ALL = [...WITH_FORMS, replayCommand(WITH_FORMS)];
+const MOST = [...WITH_FORMS, replayCommand(WITH_FORMS), create];
+
+const ALL = [...MOST, completionCommand(MOST)];
 
 export const COMMANDS: readonly Command[] = [...ALL, helpCommand(ALL)];

@@ -1,5 +1,7 @@
 /** @module The help texts, made from the commands' own descriptions: examples first. */
 import type { Command } from './command.js';
+import { TOPICS } from './comfort/topics.js';
+import type { Topic } from './comfort/topics.js';
 import { OPTIONS, optionLabel, optionOf } from './options.js';
 import type { OptionName } from './options.js';
 
@@ -42,7 +44,8 @@ export function generalHelp(commands: readonly Command[]): string {
     `Commands\n${pairs(commands.map((command) => [command.name, command.summary]))}`,
     `Options of every command\n${pairs(always.map((name) => [optionLabel(name), OPTIONS[name].help]))}`,
     'Exit codes: 0 done; 1 every prescription refused; 2 wrong input or usage;\n3 a fault of leastterm; 130 interrupted.',
-    `More: leastterm help COMMAND\nManual: ${DOCS}`,
+    `Topics\n${pairs(TOPICS.map((topic) => [topic.name, topic.summary]))}`,
+    `More: leastterm help COMMAND, leastterm help TOPIC\nManual: ${DOCS}`,
   ]
     .join('\n\n')
     .concat('\n');
@@ -76,3 +79,9 @@ export function commandHelp(command: Command): string {
   parts.push(`Manual: docs/commands/${command.name}.md in the package`);
   return `${parts.join('\n\n')}\n`;
 }
+
+/** leastterm help TOPIC. */
+export const topicHelp = ({ name, summary, paragraphs }: Topic): string =>
+  [`${name}: ${summary}`, ...paragraphs.map((paragraph) => fold(paragraph, WIDTH).join('\n'))]
+    .join('\n\n')
+    .concat('\n');

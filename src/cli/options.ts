@@ -1,8 +1,10 @@
 /** @module Every option of the command line: its name, its value, its one line of help. */
 import type { OptionSpec, OptionWords } from './option-kinds.js';
+import { BUBBLE_OPTIONS } from './options-bubbles.js';
 import { COMPARE_OPTIONS } from './options-compare.js';
 import { MASS_OPTIONS } from './options-mass.js';
 import { CONTOUR_OPTIONS } from './options-contour.js';
+import { NEW_OPTIONS } from './options-new.js';
 import { PAPER_OPTIONS } from './options-papers.js';
 import { PICTURE_OPTIONS } from './options-pictures.js';
 import { QCD_OPTIONS } from './options-qcd.js';
@@ -13,9 +15,11 @@ export type OptionName =
   | 'at'
   | keyof typeof QCD_OPTIONS
   | keyof typeof COMPARE_OPTIONS
+  | keyof typeof BUBBLE_OPTIONS
   | keyof typeof CONTOUR_OPTIONS
   | keyof typeof MASS_OPTIONS
   | keyof typeof PICTURE_OPTIONS
+  | keyof typeof NEW_OPTIONS
   | keyof typeof PAPER_OPTIONS
   | 'by'
   | 'variant'
@@ -37,9 +41,11 @@ const MOST_DIGITS = 2000;
 export const OPTIONS: Readonly<Record<OptionName, OptionSpec>> = {
   ...QCD_OPTIONS,
   ...COMPARE_OPTIONS,
+  ...BUBBLE_OPTIONS,
   ...CONTOUR_OPTIONS,
   ...MASS_OPTIONS,
   ...PICTURE_OPTIONS,
+  ...NEW_OPTIONS,
   ...PAPER_OPTIONS,
   at: {
     kind: 'text',

@@ -1,7 +1,5 @@
 /** @module The message for a word that is no command. */
-import type { Command } from './command.js';
-
-export async function unknownCommand(word: string, commands: readonly Command[]): Promise<string> {
+export async function unknownCommand(word: string, commands: readonly { readonly name: string }[]): Promise<string> {
   const { series } = await import('./rooms.js');
   const names = commands.map((command) => command.name);
   const near = series.nearest(word, names);
