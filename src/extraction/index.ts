@@ -1,0 +1,22 @@
+/** @module From measured numbers to couplings, masses and condensates: values by prescription, with their budgets. */
+export { extract } from './extract.js';
+export { fit } from './fit/study.js';
+export { USUAL } from './setting.js';
+export { AMBIGUITY_NAMES, UNKNOWNS } from './problem.js';
+export type {
+  AmbiguityName,
+  CondensateChoice,
+  CondensateDefinition,
+  Datum,
+  Problem,
+  Quantity,
+  Unknown,
+} from './problem.js';
+export type * from './result.js';
+export type * from './fit/fit-result.js';
+export { bubbleLaboratory } from './bubble-laboratory.js';
+export { bubbleCut } from './bubble-cut.js';
+export { BUBBLE_VIEWS, bubbleView } from './bubble-views.js';
+export { chainSeries } from './bubble-series.js';
+export type { BubbleQuestion } from './bubble-words.js';
+export type * from './bubble-result.js';
