@@ -4,7 +4,10 @@ import type { FieldReader } from './field-reader.js';
 import { quote } from './quote.js';
 import type { Condensate } from './series.js';
 
-const FIELDS = ['dimension', 'name', 'wilson', 'value', 'unit', 'source'];
+const FIELDS = ['dimension', 'name', 'wilson', 'value', 'unit', 'source', 'defined by'];
+
+/** What a condensate's value may belong to. */
+const DEFINITION = /^(?:principal value|truncated sum|cut-off \d+(?:\.\d+)? ?[GM]eV)$/;
 
 export function readCondensates(entry: Entry | undefined, reader: FieldReader): readonly Condensate[] {
   if (entry === undefined) return [];
@@ -30,6 +33,16 @@ function condensate(entry: Entry, field: string, reader: FieldReader): Condensat
   const value = reader.uncertain(group.get('value'), `${field}.value`);
   const unit = reader.text(group.get('unit'), `${field}.unit`);
   const source = reader.text(group.get('source'), `${field}.source`);
+  const definition = group.get('defined by');
+  const definedBy = reader.text(definition, `${field}.defined by`);
+  if (definedBy !== undefined && !DEFINITION.test(definedBy)) {
+    complaints.add(
+      definition?.at,
+      `${field}.defined by`,
+      quote(definedBy),
+      '"principal value", "truncated sum" or a cut-off with its scale, "cut-off 1 GeV"',
+    );
+  }
   if (dimension === undefined || name === undefined) return undefined;
   if (value !== undefined && group.get('unit') === undefined) {
     const power = dimension.toString() === '1' ? '' : `^${dimension.toString()}`;
@@ -51,5 +64,6 @@ function condensate(entry: Entry, field: string, reader: FieldReader): Condensat
     ...(value && { value: { value: value.value, ...(value.error && { error: value.error }), text: value.text } }),
     ...(unit !== undefined && { unit }),
     ...(source !== undefined && { source }),
+    ...(definedBy !== undefined && { definedBy }),
   };
 }

@@ -56,6 +56,8 @@ export interface Condensate {
   readonly value?: Uncertain;
   readonly unit?: string;
   readonly source?: string;
+  /** The sum that the value belongs to, as the file says: principal value, truncated sum, or cut-off with its scale. */
+  readonly definedBy?: string;
 }
 
 export interface Scale {
@@ -91,6 +93,8 @@ export interface Series {
   /** μ/Q. */
   readonly scaleRatio?: Exact;
   readonly hardScale?: Scale;
+  /** What R is in units of: "GeV", "pb", or "Q", "Q^p" for a power of the hard scale. Absent: a pure number. */
+  readonly unit?: string;
   readonly factor: Exact;
   readonly additive: Exact;
   readonly coefficients: readonly Coefficient[];

@@ -74,6 +74,7 @@ const condensate = (c: Condensate): string =>
     ['value', c.value && uncertain(c.value)],
     ['unit', text(c.unit)],
     ['source', text(c.source)],
+    ['defined by', text(c.definedBy)],
   ]);
 
 /** The series as YAML. */
@@ -101,6 +102,7 @@ export function writeSeries(s: Series): string {
   if (s.flavourChoices !== undefined) field('flavour choices', `[${s.flavourChoices.join(', ')}]`);
   field('scale ratio', s.scaleRatio && scalar(textOf(s.scaleRatio)));
   field('hard scale', s.hardScale && scalar(s.hardScale.text));
+  field('unit', text(s.unit));
   field('factor', scalar(textOf(s.factor)));
   field('additive', scalar(textOf(s.additive)));
   if (s.constants !== undefined) lines.push('constants:', ...s.constants.map((c) => `  ${c.name}: ${scalar(c.text)}`));
