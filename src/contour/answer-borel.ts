@@ -83,7 +83,7 @@ export function modelAnswers(e: ContourQuantity, request: ContourRequest): reado
   const { contour: origin } = e;
   const count = origin.coefficients.length;
   const used = modelSingularities(origin, count);
-  const variant = `model of D, ${used.length} singularit${used.length === 1 ? 'y' : 'ies'}`;
+  const variant = `${used.length} singularit${used.length === 1 ? 'y' : 'ies'} of D`;
   if (used.length === 0)
     return [
       refused(variant, {

@@ -34,6 +34,7 @@ import {
   mulSeries,
   pathBlocked,
   polynomialRing,
+  refuse,
   relationOfBetas,
   shiftCoupling,
   uPerT,
@@ -140,6 +141,13 @@ function inverseCoupling(b0: Ball, q: Ball, target: Ball, start: number, prec: n
 
 const NEWTON_STEPS = 60;
 const GUARD = 40;
+/** ln(R²/Λ²) must be so far above the singularity of the C-scheme coupling; nearer to it no digit means anything. */
+const CLOSE = 0.05;
+
+const tooLow: Refusal = refuse(
+  'the scale R of the subtraction lies at or below the Landau singularity of the coupling',
+  'use a larger R (--subtraction-scale 1) or a smaller coupling',
+);
 
 /**
  * c̄ = PV ∫_0^∞ du e^{−u/ā(R²)} (2 − u)^{−1−4b}. `log` is ln(R²/μ²), μ the scale of x.
@@ -152,6 +160,10 @@ export function renormalonIntegral(origin: ContourOrigin, x: Exact, logR: Exact,
   const logLambda = R.add(ballLogOfInverse(flow, R.div(R.ONE, alpha, work), work), logR.ball(work), work);
   const [b0 = exact(1), b1 = exact(0)] = betaCoefficients(origin.flavours, '1');
   const q = R.div(b1.ball(work), b0.ball(work), work);
+  // Y − q ln Y falls to its least value at Y = q: below that the coupling has no value at R.
+  const [b, qn] = [R.toNumber(b0.ball(work)), R.toNumber(q)];
+  const least = (qn * (1 - Math.log(qn) + Math.log(b))) / b;
+  if (!(R.toNumber(logLambda) > least + CLOSE)) return tooLow;
   const start = Math.max(R.toNumber(R.mul(b0.ball(work), logLambda, work)), R.toNumber(q) + 1);
   const y = inverseCoupling(b0.ball(work), q, logLambda, start, work);
   // 1/ā = 4π Y/β_0 = Y/b_0 for α normalised couplings.

@@ -21,7 +21,7 @@ export interface OrderRow {
 
 export interface PowerRow {
   readonly dimension: number;
-  /** W_k, k = dimension/2: minus w_{k−1} · 2/k. */
+  /** (−1)^k W_k = (−1)^(k+1) (2/k) w_{k−1}, k = dimension/2. */
   readonly coefficient: string;
   readonly statement: string;
 }
@@ -66,7 +66,13 @@ export interface SubtractedReport {
 }
 
 export interface ContourReport {
-  readonly weight: { readonly coefficients: readonly string[]; readonly integral: readonly string[] };
+  readonly weight: {
+    /** "1 - 3*x^2 + 2*x^3". */
+    readonly text: string;
+    /** w_0, w_1, …, and W_0, W_1, … of W(x) = 2 ∫_x^1 w. */
+    readonly coefficients: readonly string[];
+    readonly integral: readonly string[];
+  };
   /** J_l = (1/2πi) ∮ dx/x W ln^l(−x). */
   readonly moments: readonly { readonly power: number; readonly value: string; readonly exact?: string }[];
   readonly powerCorrections: readonly PowerRow[];

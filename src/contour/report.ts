@@ -6,8 +6,9 @@ import { C, exact, pi, R, toDecimal, toNumberExact } from '../numerics/index.js'
 import type { Ball, Exact, Rational } from '../numerics/index.js';
 import { circleMoments, exactInPiSquared, inPiSquaredText } from '../qcd/index.js';
 import type { Refusal } from '../qcd/index.js';
+import { decimalText, weightText } from '../series/index.js';
 import { bitsFor, CONTESTED, lastSize } from './answers.js';
-import type { ContourQuantity } from './answers.js';
+import type { ContourAnswer, ContourQuantity } from './answers.js';
 import { modelAnswers, modelSums, padeAnswers } from './answer-borel.js';
 import { subtractedTerms, subtractionObjection, USUAL_RATIO } from './answer-subtracted.js';
 import { couplingsOnCircle } from './circle.js';
@@ -63,19 +64,20 @@ function exactText(c: Exact, digits: number): string {
   return text(c.ball(bitsFor(digits)), digits);
 }
 
-/** What an operator of dimension 2k finds in the weight: W_k, which w_{k−1} alone makes. */
+/** What an operator of dimension 2k finds in the weight, (1/2πi) ∮ dx/x W (−x)^(−k) = (−1)^k W_k: w_{k−1} alone makes it. */
 function sensitivities(origin: ContourQuantity['contour']): PowerRow[] {
   const last = Math.max(4, origin.integral.length - 1);
   return Array.from({ length: last - 1 }, (_, i): PowerRow => {
     const k = i + 2;
     const W = origin.integral[k];
     const absent = W === undefined || W.isZero();
+    const share = absent ? '0' : (k % 2 === 0 ? W : W.neg()).toString();
     return {
       dimension: 2 * k,
-      coefficient: absent ? '0' : W.toString(),
+      coefficient: share,
       statement: absent
-        ? 'suppressed: only through the running of its own coefficient'
-        : `enters with ${W.toString()} times its term of D`,
+        ? `suppressed, w has no x${k === 2 ? '' : `^${k - 1}`}: only through the running of its own coefficient`
+        : `enters with ${share} times its term of D`,
     };
   });
 }
@@ -98,45 +100,51 @@ function circleOf(e: ContourQuantity, digits: number): ContourReport['circle'] {
   };
 }
 
-function borelRows(e: ContourQuantity, digits: number): BorelRow[] {
-  const request = { digits };
-  const model = modelAnswers(e, request).map((answer): BorelRow => row('singularity model of D', answer));
-  const sums = modelSums(e, digits);
-  const pade = padeAnswers(e, request).map((answer): BorelRow => row('Borel–Padé of D', answer));
+function borelRow(e: ContourQuantity, method: string, answer: ContourAnswer, digits: number): BorelRow {
+  if (answer.kind === 'refusal')
+    return { method, variant: answer.variant, refused: { reason: answer.reason, remedy: answer.remedy } };
   const prec = bitsFor(digits);
-  const factor = e.factor.ball(prec);
-  const dress = (b: Ball): string => text(R.add(e.additive.ball(prec), R.mul(factor, b, prec), prec), digits);
-  const separated =
-    sums === undefined
-      ? model
-      : model.map((m) => ({
-          ...m,
-          improvedLimit: dress(sums.improved),
-          separation: text(R.mul(factor, R.sub(sums.pv, sums.improved, prec), prec), digits),
-        }));
-  return [...separated, ...pade];
-
-  function row(method: string, answer: ReturnType<typeof modelAnswers>[number]): BorelRow {
-    if (answer.kind === 'refusal')
-      return { method, variant: answer.variant, refused: { reason: answer.reason, remedy: answer.remedy } };
-    const front = Math.abs(toNumberExact(e.factor));
-    const im = answer.imaginary;
-    return {
-      method,
-      variant: answer.variant,
-      value: dress(answer.value),
-      ...(im === undefined
-        ? {}
-        : {
-            imaginary: text(R.mul(factor, im, prec), digits),
-            ambiguity: rough((Math.abs(R.toNumber(im)) * front) / Math.PI),
-          }),
-      ...(answer.truncation === undefined ? {} : { truncation: rough(answer.truncation * front) }),
-      ...(answer.central === true ? { central: true } : {}),
-      notes: answer.notes,
-    };
-  }
+  const front = Math.abs(toNumberExact(e.factor));
+  const im = answer.imaginary;
+  return {
+    method,
+    variant: answer.variant,
+    value: text(dressed(e, answer.value, prec), digits),
+    ...(im === undefined
+      ? {}
+      : {
+          imaginary: text(R.mul(e.factor.ball(prec), im, prec), digits),
+          ambiguity: rough((Math.abs(R.toNumber(im)) * front) / Math.PI),
+        }),
+    ...(answer.truncation === undefined ? {} : { truncation: rough(answer.truncation * front) }),
+    ...(answer.central === true ? { central: true } : {}),
+    notes: answer.notes,
+  };
 }
+
+/** additive + factor · value. */
+const dressed = (e: ContourQuantity, value: Ball, prec: number): Ball =>
+  R.add(e.additive.ball(prec), R.mul(e.factor.ball(prec), value, prec), prec);
+
+function borelRows(e: ContourQuantity, digits: number): BorelRow[] {
+  const prec = bitsFor(digits);
+  const sums = modelSums(e, digits);
+  const apart =
+    sums === undefined
+      ? {}
+      : {
+          improvedLimit: text(dressed(e, sums.improved, prec), digits),
+          separation: text(R.mul(e.factor.ball(prec), R.sub(sums.pv, sums.improved, prec), prec), digits),
+        };
+  return [
+    ...modelAnswers(e, { digits }).map((a) => ({ ...borelRow(e, 'Singularity model', a, digits), ...apart })),
+    ...padeAnswers(e, { digits }).map((a) => borelRow(e, 'Borel–Padé', a, digits)),
+  ];
+}
+
+/** A norm as it was given, or to a few digits. */
+const normText = (value: Exact, digits: number): string =>
+  (value.rational && decimalText(value.rational)) ?? text(value.ball(bitsFor(digits)), Math.min(digits, 8));
 
 function normOf(e: ContourQuantity, options: ReportOptions): Norm | Refusal {
   if (options.norm !== 'model') return options.norm ?? PUBLISHED_NORM;
@@ -171,7 +179,7 @@ function subtractedReport(
     rough(Math.abs(R.toNumber(taken.reduce((sum, t) => R.sub(sum, t, prec), parts.addedBack))) * share);
   return {
     norm: {
-      value: toDecimal(norm.value.ball(prec), Math.min(digits, 8)).text,
+      value: normText(norm.value, digits),
       ...(norm.error > 0 ? { error: rough(norm.error) } : {}),
       origin: norm.origin,
     },
@@ -216,6 +224,7 @@ export function contourReport(e: ContourQuantity, options: ReportOptions): Conto
   const larger = Math.max(last.fixed, last.improved ?? 0);
   return {
     weight: {
+      text: weightText({ coefficients: origin.weight }),
       coefficients: origin.weight.map(String),
       integral: origin.integral.map(String),
     },

@@ -17,7 +17,7 @@ function readFacts(result: ContourResult): Fact[] {
   const { end, loops, refused } = result.circle;
   return [
     { label: 'quantity', text: result.series.quantity ?? result.series.id },
-    { label: 'weight', text: `w(x) = ${result.weightText}, x = s/s_0` },
+    { label: 'weight', text: `w(x) = ${result.weight.text}, x = s/s_0` },
     { label: 'scheme', text: `${result.series.scheme ?? ''}, ${result.series.flavours ?? ''} active flavours` },
     ...couplingFacts(result.series, result.coupling).filter((fact) => fact.label !== 'Borel u'),
     {

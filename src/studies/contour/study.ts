@@ -3,10 +3,10 @@
  * The work is done by the contour room, which the caller has loaded: no other study needs it.
  */
 import type * as Contour from '../../contour/index.js';
-import { exact } from '../../numerics/index.js';
+import { exact, toNumberExact } from '../../numerics/index.js';
 
 import type { Rational } from '../../numerics/index.js';
-import { InputError, weightText } from '../../series/index.js';
+import { InputError } from '../../series/index.js';
 import type { ContourWeight, Series, Uncertain } from '../../series/index.js';
 import type { Assessment, Caution } from '../assessment.js';
 import type { AssessOptions } from '../assess.js';
@@ -30,10 +30,8 @@ export interface ContourStudyOptions extends Pick<AssessOptions, 'order' | 'digi
   readonly ratio?: Rational;
 }
 
-export type ContourResult = Pick<Assessment, 'leastterm' | 'request' | 'series' | 'coupling'> & {
-  /** "1 - 3*x^2 + 2*x^3". */
-  readonly weightText: string;
-} & Contour.ContourReport & { readonly cautions: readonly Caution[] };
+export type ContourResult = Pick<Assessment, 'leastterm' | 'request' | 'series' | 'coupling'> &
+  Contour.ContourReport & { readonly cautions: readonly Caution[] };
 
 /** The series with another weight, and in a world of fewer loops. */
 function adjusted(series: Series, { weight, loops }: ContourStudyOptions): Series {
@@ -100,9 +98,10 @@ export function contourStudy(
     request: options.request,
     series: seriesSummary(own, expanded),
     coupling: couplingSummary(own, at, expanded, options.digits, options.path),
-    weightText: own.contour === undefined ? '' : weightText(own.contour),
     ...report,
     // The difference of the two expansions has a part of its own in the report.
-    cautions: cautions(series, expanded, growth, undefined, []).filter(({ code }) => code !== 'contour-quantity'),
+    cautions: cautions(series, expanded, growth, undefined, [], toNumberExact(at.value)).filter(
+      ({ code }) => code !== 'contour-quantity',
+    ),
   };
 }
