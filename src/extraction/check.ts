@@ -34,15 +34,6 @@ export function checkMeasurement(problem: Problem, series: Series, datum: Datum)
   return undefined;
 }
 
-/** Condensates need a definition. */
-export function checkDefinition(problem: Problem): Refusal | undefined {
-  if (problem.condensates.length === 0 || problem.condensateBy !== undefined) return undefined;
-  return refuse(
-    `the value of ${problem.condensates.map((c) => c.name).join(', ')} belongs to one prescription of the sum, and it is not said to which`,
-    'say it: --condensate-by pv, truncated or cutoff:1GeV; or any, to mix them knowingly',
-  );
-}
-
 /** Can α_s be brought to where it is wanted? The reason when it cannot. */
 export function checkEvolution(series: Series, datum: Datum): Refusal | undefined {
   const bad = notMSbar(series);

@@ -12,7 +12,7 @@ import { exact } from '../numerics/index.js';
 import { variableOf } from './place.js';
 import type { Place, Shifts } from './place.js';
 import { powerFactor } from './power-terms.js';
-import type { PowerTerm } from './power-terms.js';
+import type { Operator } from './power-terms.js';
 import type { Solved } from './solve.js';
 import type { Theory } from './theory.js';
 
@@ -80,12 +80,7 @@ export const predict = (family: Theory, digits: number): Solved | Refusal =>
   );
 
 /** ⟨O_d⟩ from a measurement. */
-export function leftOver(
-  family: Theory,
-  target: Exact,
-  wilson: Omit<PowerTerm, 'value' | 'plus' | 'minus' | 'origin'>,
-  digits: number,
-): Solved | Refusal {
+export function leftOver(family: Theory, target: Exact, wilson: Operator, digits: number): Solved | Refusal {
   const { coupling } = family.prediction.stages.series;
   const divisor = coupling.plain ? exact(1) : divisorSize(coupling.divisor);
   const factor = (place: Place): number => powerFactor(wilson, variableOf(place.alpha, divisor), place.Q ?? 1);

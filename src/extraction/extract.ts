@@ -12,7 +12,7 @@ import { errorText } from './entries.js';
 import { evolver } from './evolved.js';
 import type { Evolver } from './evolved.js';
 import { hardScale, variableOf } from './place.js';
-import { DEFINITION_WORDS, powerFactor } from './power-terms.js';
+import { definitionWords, powerFactor } from './power-terms.js';
 import type { Problem } from './problem.js';
 import type { DatumSummary, ExtractResult, PowerTermEntry, UnknownSummary } from './result.js';
 import { evaluated, refusedRow, rowEntry, rowNumbers } from './rows.js';
@@ -83,31 +83,25 @@ function evolverOf(setting: Setting): Evolver | Refusal | undefined {
   return evolver(problem, from, problem.to);
 }
 
-function powerEntries(setting: Setting, row: RowNumbers | undefined): ExtractResult['condensates'] {
-  const { problem, terms, stages } = setting;
-  if (terms.length === 0 || problem.condensateBy === undefined || row === undefined) return undefined;
+function powerEntries(setting: Setting, row: RowNumbers | undefined): readonly PowerTermEntry[] | undefined {
+  const { terms, stages } = setting;
+  if (terms.length === 0 || row === undefined) return undefined;
   const { coupling } = stages.series;
   const divisor = coupling.plain ? exact(1) : divisorSize(coupling.divisor);
   const { alpha, Q } = row.solved.whole.place;
-  const definition = problem.condensateBy;
-  return {
-    belongTo:
-      definition.kind === 'cutoff'
-        ? `a factorisation scale of ${definition.mu} GeV`
-        : DEFINITION_WORDS[definition.kind],
-    terms: terms.map((t): PowerTermEntry => ({
-      name: t.name,
-      dimension: String(t.dimension),
-      value: errorText(t.value),
-      origin: t.origin,
-      adds: errorText(t.value * powerFactor(t, variableOf(alpha, divisor), Q ?? 1)),
-    })),
-  };
+  return terms.map((t): PowerTermEntry => ({
+    name: t.name,
+    dimension: String(t.dimension),
+    value: errorText(t.value),
+    origin: t.origin,
+    belongsTo: definitionWords(t.definition),
+    adds: errorText(t.value * powerFactor(t, variableOf(alpha, divisor), Q ?? 1)),
+  }));
 }
 
 /** Words about the question as a whole. */
 export function problemCautions(setting: Setting, evolve?: Evolver | Refusal): Caution[] {
-  const { problem, stages } = setting;
+  const { problem, stages, terms } = setting;
   const { series } = stages;
   const list: Caution[] = [];
   if (series.invented)
@@ -119,13 +113,13 @@ export function problemCautions(setting: Setting, evolve?: Evolver | Refusal): C
       code: 'rests-on-estimate',
       text: 'the values use a coefficient that is an estimate, not a calculation',
     });
-  if (problem.condensateBy?.kind === 'any' && problem.condensates.length > 0)
+  if (terms.some((t) => t.definition.kind === 'any'))
     list.push({
       code: 'definitions mixed',
       text: 'one condensate value is added to sums of different definitions, as asked: their difference contains the ambiguity',
     });
-  const left = series.condensates.filter((c) => c.value !== undefined);
-  if (problem.for !== 'condensate' && problem.condensates.length === 0 && left.length > 0)
+  const left = series.condensates.filter((c) => c.value !== undefined && terms.every((t) => t.name !== c.name));
+  if (problem.for !== 'condensate' && problem.fileCondensates !== false && left.length > 0)
     list.push({
       code: 'condensates left out',
       text: `the file states ${[...new Set(left.map((c) => c.name))].join(', ')}, but not to which prescription the value belongs: nothing is added (--condensate with --condensate-by adds it)`,

@@ -10,7 +10,7 @@ import type { Prescription } from '../prescriptions/index.js';
 import { refuse } from '../qcd/index.js';
 import type { Refusal } from '../qcd/index.js';
 import type { Condensate, Series } from '../series/index.js';
-import type { CondensateDefinition, Problem } from './problem.js';
+import type { CondensateChoice, CondensateDefinition, Problem } from './problem.js';
 
 export interface PowerTerm {
   readonly name: string;
@@ -23,6 +23,8 @@ export interface PowerTerm {
   readonly plus: number;
   readonly minus: number;
   readonly origin: string;
+  /** The sum that the value belongs to. */
+  readonly definition: CondensateDefinition;
 }
 
 /** C_d(x)/Q^d. */
@@ -47,10 +49,7 @@ function corrections(series: Series, dimension: number): readonly number[] {
 }
 
 /** The operator's coefficient function, whatever its value. */
-export function wilsonOf(
-  series: Series,
-  c: Condensate,
-): Omit<PowerTerm, 'value' | 'plus' | 'minus' | 'origin'> | Refusal {
+export function wilsonOf(series: Series, c: Condensate): Operator | Refusal {
   const dimension = c.dimension.toNumber();
   if (c.wilson === undefined) {
     return refuse(
@@ -62,7 +61,7 @@ export function wilsonOf(
 }
 
 /** The condensate of that name; names that occur several times need a value beside them. */
-function named(series: Series, name: string, hasValue: boolean): Condensate | Refusal {
+function named(series: Series, { name, value }: CondensateChoice): Condensate | Refusal {
   const all = series.condensates.filter((c) => c.name === name);
   const [first] = all;
   if (first === undefined) {
@@ -72,7 +71,7 @@ function named(series: Series, name: string, hasValue: boolean): Condensate | Re
       known.length === 0 ? 'the file states none: write condensates: into it' : `one of ${known.join('; ')}`,
     );
   }
-  if (hasValue || all.length === 1) return first;
+  if (value !== undefined || all.length === 1) return first;
   const values = all.map((c) => `${c.value?.text ?? 'no value'} ${c.unit ?? ''} (${c.source ?? 'no source'})`);
   return refuse(
     `${series.id} has ${all.length} values of ${name}: ${values.join('; ')}`,
@@ -80,29 +79,74 @@ function named(series: Series, name: string, hasValue: boolean): Condensate | Re
   );
 }
 
-/** The chosen power corrections of a series. */
-export function powerTerms(series: Series, problem: Pick<Problem, 'condensates'>): readonly PowerTerm[] | Refusal {
-  const terms: PowerTerm[] = [];
-  for (const choice of problem.condensates) {
-    const c = named(series, choice.name, choice.value !== undefined);
-    if ('reason' in c) return c;
-    const wilson = wilsonOf(series, c);
-    if ('reason' in wilson) return wilson;
-    const { value } = choice;
-    if (value !== undefined) {
-      if (value.dimension !== undefined && value.dimension !== wilson.dimension) {
-        return refuse(
-          `${value.text} has the unit GeV^${value.dimension}, but ${c.name} has dimension ${wilson.dimension}`,
-          `give its value in GeV^${wilson.dimension}`,
-        );
-      }
-      const { plus, minus } = value;
-      terms.push({ ...wilson, value: Number(value.value), plus, minus, origin: value.text });
-      continue;
-    }
+/** A definition in the words of a series file. */
+export function definitionOf(words: string | undefined): CondensateDefinition | undefined {
+  if (words === 'principal value') return { kind: 'pv' };
+  if (words === 'truncated sum') return { kind: 'truncated' };
+  const cut = /^cut-off (\d+(?:\.\d+)?) ?([GM])eV$/.exec(words ?? '');
+  return cut === null ? undefined : { kind: 'cutoff', mu: Number(cut[1]) * (cut[2] === 'M' ? 1e-3 : 1) };
+}
+
+const sameDefinition = (a: CondensateDefinition, b: CondensateDefinition): boolean =>
+  a.kind === b.kind && (a.kind !== 'cutoff' || b.kind !== 'cutoff' || a.mu === b.mu);
+
+/** The power correction of one condensate of the file, with a value of one's own or the file's. */
+function termOf(
+  series: Series,
+  c: Condensate,
+  choice: CondensateChoice,
+  by: CondensateDefinition | undefined,
+): PowerTerm | Refusal {
+  const wilson = wilsonOf(series, c);
+  if ('reason' in wilson) return wilson;
+  const { value } = choice;
+  const stated = value === undefined ? definitionOf(c.definedBy) : undefined;
+  const definition = by ?? stated;
+  if (definition === undefined) {
+    return refuse(
+      `the value of ${c.name} belongs to one prescription of the sum, and it is not said to which`,
+      'say it: --condensate-by pv, truncated or cutoff:1GeV; or any, to mix them knowingly',
+    );
+  }
+  if (stated !== undefined && by !== undefined && by.kind !== 'any' && !sameDefinition(stated, by)) {
+    return refuse(
+      `the file says that the value of ${c.name} is defined by the ${c.definedBy ?? ''}, not by what --condensate-by says`,
+      'leave --condensate-by out, or give a value of your own',
+    );
+  }
+  if (value === undefined) {
     const own = fromFile(series, c);
-    if ('reason' in own) return own;
-    terms.push({ ...wilson, ...own });
+    return 'reason' in own ? own : { ...wilson, ...own, definition };
+  }
+  if (value.dimension !== undefined && value.dimension !== wilson.dimension) {
+    return refuse(
+      `${value.text} has the unit GeV^${value.dimension}, but ${c.name} has dimension ${wilson.dimension}`,
+      `give its value in GeV^${wilson.dimension}`,
+    );
+  }
+  const { plus, minus } = value;
+  return { ...wilson, value: Number(value.value), plus, minus, origin: value.text, definition };
+}
+
+/** Condensates that enter without being asked for: those of which the file says to what their value belongs. */
+const defined = (series: Series): readonly Condensate[] =>
+  series.condensates.filter((c) => c.value !== undefined && c.wilson !== undefined && c.definedBy !== undefined);
+
+/** The power corrections of a series: those chosen, and those that the file defines; `except` is the one to be extracted. */
+export function powerTerms(
+  series: Series,
+  { condensates, condensateBy, fileCondensates }: Pick<Problem, 'condensates' | 'condensateBy' | 'fileCondensates'>,
+  except?: string,
+): readonly PowerTerm[] | Refusal {
+  const terms: PowerTerm[] = [];
+  const own = fileCondensates === false ? [] : defined(series).map((c) => c.name);
+  const names = [...new Set(own)].filter((name) => name !== except && condensates.every((c) => c.name !== name));
+  for (const choice of [...condensates, ...names.map((name): CondensateChoice => ({ name }))]) {
+    const c = named(series, choice);
+    if ('reason' in c) return c;
+    const term = termOf(series, c, choice, names.includes(choice.name) ? undefined : condensateBy);
+    if ('reason' in term) return term;
+    terms.push(term);
   }
   return terms;
 }
@@ -134,12 +178,18 @@ const PRINCIPAL = [
 ]; // prettier-ignore
 const TRUNCATED = ['fixed-order', 'least-term', 'fac', 'pms', 'blm'];
 
+/** The operator's coefficient without a value. */
+export type Operator = Omit<PowerTerm, 'value' | 'plus' | 'minus' | 'origin' | 'definition'>;
+
 export const DEFINITION_WORDS: Readonly<Record<CondensateDefinition['kind'], string>> = {
   pv: 'the principal value of the Borel sum',
   truncated: 'the truncated sum at the orders used',
   cutoff: 'a factorisation scale',
   any: 'no particular prescription',
 };
+
+export const definitionWords = (d: CondensateDefinition): string =>
+  d.kind === 'cutoff' ? `a factorisation scale of ${d.mu} GeV` : DEFINITION_WORDS[d.kind];
 
 /** Why a condensate of that definition may not be added to the sums of a prescription; undefined when it may. */
 export function definitionObjection(definition: CondensateDefinition, prescription: Prescription): Refusal | undefined {

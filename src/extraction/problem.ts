@@ -69,6 +69,8 @@ export interface Problem {
   readonly mass?: Quantity;
   readonly condensates: readonly CondensateChoice[];
   readonly condensateBy?: CondensateDefinition;
+  /** false: not even those condensates of which the file says to what their value belongs. */
+  readonly fileCondensates?: boolean;
   /** Name of the condensate that is extracted; absent: the only one of the file. */
   readonly condensate?: string;
   readonly loops: number;

@@ -93,6 +93,8 @@ export interface PowerTermEntry {
   readonly dimension: string;
   readonly value: string;
   readonly origin: string;
+  /** The sum that the value belongs to. */
+  readonly belongsTo: string;
   /** What it adds to R at the solution. */
   readonly adds: string;
 }
@@ -130,6 +132,6 @@ export interface ExtractResult {
   readonly searched?: { readonly from: string; readonly to: string };
   readonly rows: readonly ExtractRow[];
   readonly summary?: ExtractSummary;
-  readonly condensates?: { readonly belongTo: string; readonly terms: readonly PowerTermEntry[] };
+  readonly condensates?: readonly PowerTermEntry[];
   readonly cautions: readonly Caution[];
 }

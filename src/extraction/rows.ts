@@ -16,7 +16,7 @@ import { componentEntry, errorText, totalsEntry } from './entries.js';
 import { exactOf } from './place.js';
 import type { PlaceOf } from './place.js';
 import { DEFINITION_WORDS, definitionObjection } from './power-terms.js';
-import type { PowerTerm } from './power-terms.js';
+import type { Operator, PowerTerm } from './power-terms.js';
 import { predictionOf } from './prediction.js';
 import type { Datum, Problem } from './problem.js';
 import type { AmbiguityEntry, ExtractRow } from './result.js';
@@ -25,8 +25,8 @@ import type { Search, Solved } from './solve.js';
 import type { Stages } from './stage.js';
 import { theoryOf } from './theory.js';
 
-/** The wilson coefficient of the condensate that is extracted. */
-export type Extracted = Omit<PowerTerm, 'value' | 'plus' | 'minus' | 'origin'>;
+/** The condensate that is extracted: its coefficient without a value. */
+export type Extracted = Operator;
 
 export interface Setting {
   readonly problem: Problem;
@@ -34,6 +34,7 @@ export interface Setting {
   readonly stages: Stages;
   readonly placeAt: PlaceOf;
   readonly terms: readonly PowerTerm[];
+  /** The condensate that is extracted. */
   readonly extracted?: Extracted;
   readonly search?: Omit<Search, 'start'>;
 }
@@ -41,8 +42,8 @@ export interface Setting {
 /** The unknown by one prescription. */
 export function solveRow(setting: Setting, prescription: Prescription, start?: number): Solved | Refusal {
   const { problem, datum, stages, placeAt, terms, search } = setting;
-  if (problem.condensateBy !== undefined && terms.length > 0) {
-    const no = definitionObjection(problem.condensateBy, prescription);
+  for (const { definition } of terms) {
+    const no = definitionObjection(definition, prescription);
     if (no !== undefined) return no;
   }
   const family = theoryOf(predictionOf(prescription, stages), placeAt, terms);

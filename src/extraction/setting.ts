@@ -7,12 +7,13 @@ import { isRefusal, refuse } from '../qcd/index.js';
 import type { Refusal } from '../qcd/index.js';
 import type { Series } from '../series/index.js';
 import { CORE, fixedOrderSeries } from '../studies/index.js';
-import { checkDefinition, checkMeasurement } from './check.js';
+import { checkMeasurement } from './check.js';
 import { numberOf, placeOf } from './place.js';
 import { powerTerms, wilsonOf } from './power-terms.js';
+import type { Operator } from './power-terms.js';
 import type { Datum, Problem } from './problem.js';
 import { solveRow } from './rows.js';
-import type { Extracted, Setting } from './rows.js';
+import type { Setting } from './rows.js';
 import type { Solved } from './solve.js';
 import { Stages } from './stage.js';
 
@@ -53,7 +54,7 @@ function searchOf(problem: Problem, series: Series, datum: Datum): Setting['sear
 }
 
 /** The condensate whose value is wanted. */
-function extractedOf(problem: Problem, series: Series): Extracted | undefined | Refusal {
+function extractedOf(problem: Problem, series: Series): Operator | undefined | Refusal {
   if (problem.for !== 'condensate') return undefined;
   const names = [...new Set(series.condensates.filter((c) => c.wilson !== undefined).map((c) => c.name))];
   const name = problem.condensate ?? (names.length === 1 ? names[0] : undefined);
@@ -71,16 +72,16 @@ function extractedOf(problem: Problem, series: Series): Extracted | undefined | 
 
 /** Everything that the rows share; a refusal where the question cannot be put. */
 export function settingOf(problem: Problem, series: Series, datum: Datum, common = false): Setting | Refusal {
-  const bad = checkMeasurement(problem, series, datum) ?? checkDefinition(problem);
+  const bad = checkMeasurement(problem, series, datum);
   if (bad !== undefined) return bad;
   const placeAt = placeOf(problem, series, datum, common);
   if (isRefusal(placeAt)) return placeAt;
-  const terms = powerTerms(fixedOrderSeries(series), problem);
-  if (isRefusal(terms)) return terms;
   const search = searchOf(problem, series, datum);
   if (isRefusal(search)) return search;
   const extracted = extractedOf(problem, fixedOrderSeries(series));
   if (isRefusal(extracted)) return extracted;
+  const terms = powerTerms(fixedOrderSeries(series), problem, extracted?.name);
+  if (isRefusal(terms)) return terms;
   const { order, loops } = problem;
   return {
     problem,

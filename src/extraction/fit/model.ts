@@ -58,8 +58,8 @@ export function fitModel(
 ): FitModel | Refusal {
   const families: Theory[] = [];
   for (const { stages, placeAt, terms } of settings) {
-    if (problem.condensateBy !== undefined && terms.length > 0) {
-      const no = definitionObjection(problem.condensateBy, prescription);
+    for (const { definition } of terms) {
+      const no = definitionObjection(definition, prescription);
       if (no !== undefined) return no;
     }
     families.push(theoryOf(predictionOf(prescription, stages), placeAt, terms));
