@@ -89,7 +89,9 @@ function scoreWords(rows: readonly CompareRow[]): string {
   const target = against.map((kind) =>
     kind === 'own value' ? "the method's own value with all terms (stability only)" : `the ${kind}`,
   );
-  return ` Score: interval score of the predictions with the last coefficients hidden, held against ${target.join(' or ')}; small is good.`;
+  const seen = rows.find((row) => row.record?.seen !== undefined)?.record?.seen;
+  const from = seen === undefined ? 'with the last coefficients hidden' : `from the first ${seen} coefficients`;
+  return ` Score: interval score of the predictions ${from}, held against ${target.join(' or ')}; small is good.`;
 }
 
 /** The comparison for people. */

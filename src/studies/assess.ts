@@ -9,7 +9,7 @@ import type { Prescription, Sum } from '../prescriptions/index.js';
 import type { Series, Uncertain } from '../series/index.js';
 import { ambiguityReport, optimalReport, powerReport } from './ambiguity-report.js';
 import type { Assessment, ValueEntry, ValueRecord } from './assessment.js';
-import { recordCautions, records } from './backtesting/record.js';
+import { recordCautions, records, SEEN_OF_LONG } from './backtesting/record.js';
 import { cautions } from './cautions.js';
 import { fixedOrderSeries } from './contour/moment.js';
 import { checkCoupling } from './coupling-range.js';
@@ -132,12 +132,16 @@ export function sumUp(
   return { expanded, growth, values };
 }
 
-/** Numbers of coefficients for which one step back is both telling and cheap. */
+/** Fewer coefficients than this leave too little to test. */
 const SHORTEST = 6;
-const LONGEST = 12;
 
-const isShort = ({ expansion: { coefficients } }: Expanded): boolean =>
-  coefficients.length >= SHORTEST && coefficients.length <= LONGEST;
+/** The record that stands beside the values: one step back, or from the first coefficients of a long series. */
+function shortRecords(series: Series, expanded: Expanded, values: readonly Evaluated[]): Map<string, ValueRecord> {
+  const { length } = expanded.expansion.coefficients;
+  if (length < SHORTEST) return new Map();
+  const what = length > SEEN_OF_LONG ? { seen: SEEN_OF_LONG } : { hide: 1 };
+  return records(series, expanded, centralSums(values), { what });
+}
 
 /** The value that stands for each prescription. */
 export function centralSums(values: readonly Evaluated[]): Map<Prescription, Sum> {
@@ -168,9 +172,7 @@ export function assess(given: Series, at: Uncertain, options: AssessOptions): As
   const alpha = toNumberExact(at.value);
   const table = termTable(series, expanded, options.digits);
   const ambiguity = ambiguityReport(series, expanded, growth, table, values);
-  const record = isShort(expanded)
-    ? records(series, expanded, centralSums(values), { hide: 1 })
-    : new Map<string, ValueRecord>();
+  const record = shortRecords(series, expanded, values);
   const rows: ValueEntry[] = values.map((v) => withRecord(valueEntry(v, options.digits), record));
   return {
     leastterm: VERSION,

@@ -201,13 +201,15 @@ export interface ValueEntry {
   readonly notes?: readonly string[];
   /** The family's own best member. */
   readonly central?: boolean;
-  /** Of the family's own best member, one step back; only for short series. */
+  /** Of the family's own best member: one step back, or for a long series from its first coefficients; none below six. */
   readonly record?: ValueRecord;
   readonly refused?: Refused;
 }
 
 export interface AmbiguityReport {
   readonly conventions: readonly {
+  /** The predictions saw the first so many coefficients; absent: all but the last ones. */
+  readonly seen?: number;
     readonly name: string;
     readonly value: string;
     readonly relative?: string;

@@ -11,7 +11,7 @@ import type { AssessOptions } from './assess.js';
 import { centralSums, sumUp } from './assess.js';
 import type { Summed } from './assess.js';
 import type { Caution, CouplingSummary, Refused, SeriesSummary, Standing, ValueRecord } from './assessment.js';
-import { records } from './backtesting/record.js';
+import { records, SEEN_OF_LONG } from './backtesting/record.js';
 import { cautions } from './cautions.js';
 import { valueCautions } from './comparing-cautions.js';
 import { fixedOrderSeries } from './contour/moment.js';
@@ -78,7 +78,7 @@ export interface CompareResult {
 
 export interface CompareOptions extends Omit<AssessOptions, 'verdictRule'> {
   readonly sort?: Sort;
-  /** Most coefficients hidden in the back-test; 0 leaves it out. Absent: 1, but 0 for a long series, where it costs as much as the comparison. */
+  /** Most coefficients hidden in the back-test; 0 leaves it out. Absent: 1, but all after the first few for a long series. */
   readonly hide?: number;
   readonly exact?: ReadNumber;
 }
@@ -89,7 +89,7 @@ interface Row {
   readonly key: number;
 }
 
-/** Beyond so many coefficients the back-test runs only when it is asked for. A heuristic. */
+/** Beyond so many coefficients one step back costs as much as the comparison: the first few are seen instead. A heuristic. */
 const LONG = 24;
 /** Digits of the ends of a spread. */
 const SPREAD_DIGITS = 8;
@@ -133,9 +133,11 @@ function pointRows(
 ): Row[] {
   const { expanded, growth, values } = summed;
   const sums = centralSums(values);
-  const hide = options.hide ?? (expanded.expansion.coefficients.length > LONG ? 0 : 1);
+  const long = expanded.expansion.coefficients.length > LONG;
+  const { hide = 1 } = options;
+  const what = options.hide === undefined && long ? { seen: SEEN_OF_LONG } : { hide };
   const exact = options.exact === undefined ? {} : { exact: options.exact };
-  const list = hide > 0 ? records(series, expanded, sums, { hide, ...exact }) : new Map<string, ValueRecord>();
+  const list = hide > 0 ? records(series, expanded, sums, { what, ...exact }) : new Map<string, ValueRecord>();
   const place = { at: point.value, x: point.x, ...(scale === undefined ? {} : { scale }) };
   const rowOf = (prescription: Prescription, own: readonly Evaluated[]): Row => {
     const { name, family } = prescription;

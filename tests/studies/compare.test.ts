@@ -214,6 +214,25 @@ describe('the record in an assessment', () => {
     expect(four.values.every((v) => v.record === undefined)).toBe(true);
   });
 
+  test('of a long series is made from its first twelve coefficients, in assessments and comparisons alike', async () => {
+    const c = Array.from({ length: 30 }, (_, n) => n).reduce<bigint[]>(
+      (list, n) => (n === 0 ? [1n] : [...list, list[n - 1]! * BigInt(-n)]),
+      [],
+    );
+    const series = await parseSeries(`${c.join('\n')}\n`, { name: 'long' });
+    const result = assess(series, number('0.2'), options);
+    const of = (name: string) => result.values.find((v) => v.prescription === name && v.record !== undefined)?.record;
+    // From twelve terms fixed order says 12! 0.2^12 of thirty terms that end at 29! 0.2^29: its error is no measure.
+    expect(of('fixed-order')).toMatchObject({ seen: 12, tested: 1, inside: 0, against: 'own value', verdict: 'bad' });
+    expect(of('borel-pade')).toMatchObject({ seen: 12, inside: 1, verdict: 'good' });
+    expect(result.cautions.find((c2) => c2.code === 'bad-record')?.text).toMatch(
+      /^from the first 12 coefficients alone, fixed-order/,
+    );
+    const rows = compare(series, [number('0.2')], quick).rows;
+    expect(rows.find((r) => r.prescription === 'borel-pade')?.record).toEqual(of('borel-pade'));
+    expect(compare(series, [number('0.2')], { ...quick, hide: 1 }).rows[0]?.record?.seen).toBeUndefined();
+  });
+
   test('a bad one is a caution', async () => {
     // A wild fifth term after calm ones, summed to below its own noise by a Padé approximant of its own class.
     const series = await parseSeries('1\n1/2\n1/4\n1/8\n1/16\n1/32\n9\n', { name: 'jump' });

@@ -82,7 +82,7 @@ export const compare: Command = {
   name: 'compare',
   summary: 'every prescription side by side, with its track record',
   about: [
-    'One row a prescription that accepts the series: value, truncation error, ambiguity, terms used, trust in the number, trust in its digits, score with the last coefficient hidden (--hide for more, or for series beyond 24 coefficients, where it is left out), cautions. Below, the spread of all values and of those without a caution, and who refused and why.',
+    'One row a prescription that accepts the series: value, truncation error, ambiguity, terms used, trust in the number, trust in its digits, score with the last coefficient hidden (--hide for more; beyond 24 coefficients from the first 12), cautions. Below, the spread of all values and of those without a caution, and who refused and why.',
     'With --grid at several couplings, or with --grid scale=0.5:2:5 at several renormalisation scales mu/Q (coefficients rewritten, coupling run from the value of --at); --csv and --json write one row for each point and prescription. With --quiet a line a value: name, value, truncation error.',
   ],
   operands: [{ name: 'SERIES', help: 'a catalogue id, a series file, or - for standard input' }],

@@ -65,12 +65,13 @@ function lateralNotes(entries: readonly ValueEntry[]): TableNote[] {
 function recordNotes(entries: readonly ValueEntry[]): TableNote[] {
   return entries.flatMap(({ record }) => {
     if (record === undefined) return [];
-    const { against, inside, tested, sharpness, score, verdict } = record;
+    const { against, inside, tested, sharpness, score, verdict, seen } = record;
+    const from = seen === undefined ? 'one step back' : `from the first ${seen} coefficients`;
     const target = against === 'own value' ? 'its own value with all terms' : `the ${against}`;
     const stated = sharpness === undefined ? '' : `, stated error ${rough(sharpness)}`;
     return [
       {
-        note: `record one step back: ${verdict}; ${inside} of ${tested} inside against ${target}${stated}, score ${rough(score)}`,
+        note: `record ${from}: ${verdict}; ${inside} of ${tested} inside against ${target}${stated}, score ${rough(score)}`,
         indent: 4,
         tone: verdict === 'bad' ? ('warn' as const) : ('faint' as const),
       },

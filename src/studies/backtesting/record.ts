@@ -20,10 +20,18 @@ const BAD_PULL = 3;
 /** Digits of a score: it rests on one to three predictions. */
 const SCORE_DIGITS = 3;
 
+/** Coefficients that the short record of a long series is made from: a step at full length would cost as much as the values. */
+export const SEEN_OF_LONG = 12;
+
 export interface RecordOptions {
-  /** Most coefficients hidden. */
-  readonly hide: number;
+  /** Most coefficients hidden, one after the other; or how many are seen, all others being hidden at once. */
+  readonly what: { readonly hide: number } | { readonly seen: number };
   readonly exact?: ReadNumber;
+}
+
+function hiddenBy(what: RecordOptions['what'], known: number): readonly number[] {
+  if ('hide' in what) return hidings(known, what.hide);
+  return known > what.seen ? [known - what.seen] : [];
 }
 
 /** One word for a score. */
@@ -63,7 +71,8 @@ export function records(
   const whole = known === expanded;
   const growth = diagnoseGrowth(known.growthInput);
   const common: Target | undefined = commonTargets(series, known.expansion, growth, options.exact)[0];
-  const seen = hidings(known.expansion.coefficients.length, options.hide).map((hidden) => seenOf(known, hidden));
+  const { what } = options;
+  const seen = hiddenBy(what, known.expansion.coefficients.length).map((hidden) => seenOf(known, hidden));
   const found = new Map<string, ValueRecord>();
   for (const [prescription, sum] of sums) {
     const predictions = seen.map((part) => predict(known, prescription, part, false));
@@ -72,7 +81,10 @@ export function records(
     const target = common !== undefined && isTargetOf(common, prescription.name) ? common : ownTarget(own())[0];
     const score = target === undefined ? undefined : scoreOf(missesOf(predictions, target));
     if (target !== undefined && score !== undefined)
-      found.set(prescription.name, recordEntry(score, target.kind, allStated(predictions)));
+      found.set(prescription.name, {
+        ...recordEntry(score, target.kind, allStated(predictions)),
+        ...('seen' in what ? { seen: what.seen } : {}),
+      });
   }
   return found;
 }
@@ -80,12 +92,14 @@ export function records(
 /** The caution that goes with bad records. */
 export function recordCautions(list: ReadonlyMap<string, ValueRecord>): Caution[] {
   const bad = [...list].filter(([, record]) => record.verdict === 'bad').map(([name]) => name);
+  const seen = [...list.values()][0]?.seen;
+  const from = seen === undefined ? 'without the last known coefficients' : `from the first ${seen} coefficients alone`;
   return bad.length === 0
     ? []
     : [
         {
           code: 'bad-record',
-          text: `without the last known coefficients, ${bad.join(', ')} missed by more than ${BAD_PULL} times their stated errors on this series, the target's own error allowed for`,
+          text: `${from}, ${bad.join(', ')} missed by more than ${BAD_PULL} times their stated errors on this series, the target's own error allowed for`,
         },
       ];
 }
