@@ -8,3 +8,12 @@ export { borelPoles, imaginaryShare, leadingStrength } from './singularities.js'
 export type { BorelPole } from './singularities.js';
 export { betaNought, lambdaOverQ, landauOverQ, rangeObjection } from './point.js';
 export type { ChainPoint } from './point.js';
+export { formText } from './exact-text.js';
+export { couplingA, logLength } from './point.js';
+export { cutCoefficients, cutObjection, cutSum, couplingAtCut, lowPart } from './cut.js';
+export type { CutCoefficients, CutSum } from './cut.js';
+export { distribution, orderScales } from './momentum.js';
+export type { OrderScale } from './momentum.js';
+export { massiveGluon } from './dispersive.js';
+export type { MassiveGluon } from './dispersive.js';
+export { factorBall } from './tower.js';
