@@ -9,7 +9,17 @@ import type { OptionName } from './options.js';
 import type { PaperForm } from '../papers/index.js';
 
 /** Commands whose results have tables. */
-export const TABLED_COMMANDS: readonly string[] = ['assess', 'sum', 'compare', 'truncation', 'backtest', 'evolve'];
+export const TABLED_COMMANDS: readonly string[] = [
+  'assess',
+  'sum',
+  'compare',
+  'truncation',
+  'backtest',
+  'evolve',
+  'extract',
+  'mass',
+  'contour',
+];
 
 const FORMS = ['latex', 'bibtex', 'markdown', 'hepdata'] as const satisfies readonly OptionName[];
 

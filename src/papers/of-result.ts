@@ -8,8 +8,14 @@ import type {
   SumResult,
   TruncationResult,
 } from '../studies/index.js';
+import type { ContourReport } from '../contour/index.js';
+import type { ExtractResult, FitResult } from '../extraction/index.js';
+import type { MassResult } from '../masses/index.js';
 import type { PaperTable } from './table.js';
 import { assessmentTables } from './tables/assess.js';
+import { contourTables } from './tables/contour.js';
+import { extractTables } from './tables/extract.js';
+import { massTables } from './tables/mass.js';
 import { compareTables } from './tables/compare.js';
 import { backtestTables, evolveTables, sumTables, truncationTables } from './tables/studies.js';
 
@@ -25,6 +31,9 @@ const MAKERS: Readonly<Record<string, (result: CommandResult) => PaperTable[]>> 
   truncation: (result) => truncationTables(result as CommandResult & TruncationResult),
   backtest: (result) => backtestTables(result as CommandResult & (BacktestResult | BacktestSummary)),
   evolve: (result) => evolveTables(result as CommandResult & EvolveResult),
+  extract: (result) => extractTables(result as CommandResult & (ExtractResult | FitResult)),
+  mass: (result) => massTables(result as CommandResult & MassResult),
+  contour: (result) => contourTables(result as CommandResult & ContourReport),
 };
 
 /** Commands whose results have tables. */

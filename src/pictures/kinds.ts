@@ -7,10 +7,14 @@ import type {
   LaplaceIntegrand,
   ScaleDependence,
 } from '../studies/index.js';
+import type { ExtractResult, FitResult } from '../extraction/index.js';
 import type { Chart } from './chart.js';
+import { budgetChart } from './kinds/budget.js';
 import { coverageChart } from './kinds/coverage.js';
 import { integrandChart } from './kinds/integrand.js';
 import { planeChart } from './kinds/plane.js';
+import { replicasChart } from './kinds/replicas.js';
+import type { DrawnReplicas } from './kinds/replicas.js';
 import { ratiosChart } from './kinds/ratios.js';
 import { scaleChart } from './kinds/scale.js';
 import { termsChart } from './kinds/terms.js';
@@ -72,6 +76,18 @@ export const CHART_KINDS: readonly ChartKind[] = [
     summary: 'coverage of stated errors in back-tests',
     from: ['backtest'],
     draw: (result) => coverageChart(result as SavedResult & (BacktestResult | BacktestSummary)),
+  },
+  {
+    name: 'budget',
+    summary: 'the error budget of an extraction',
+    from: ['extract'],
+    draw: (result) => budgetChart(result as SavedResult & (ExtractResult | FitResult)),
+  },
+  {
+    name: 'replicas',
+    summary: 'the histogram of an extraction with replicas',
+    from: ['extract'],
+    draw: (result) => replicasChart(result as SavedResult & { readonly replicas?: DrawnReplicas }),
   },
 ];
 

@@ -144,11 +144,11 @@ export const plot: Command = {
   name: 'plot',
   summary: 'a chart as SVG, PDF or PNG, or drawn in the terminal',
   about: [
-    'Kinds: terms (terms and partial sums), ratios, plane (the Borel plane), values (by prescription), scale (dependence on the renormalisation scale), integrand (of the Borel integral), coverage (of stated errors in back-tests).',
-    'SERIES may also be the file of a result written with --json by the command that the chart is drawn from: assess for terms, ratios, plane and values, compare for values, backtest for coverage. With --csv the plotted numbers.',
+    'Kinds: terms (terms and partial sums), ratios, plane (the Borel plane), values (by prescription), scale (dependence on the renormalisation scale), integrand (of the Borel integral), coverage (of stated errors in back-tests), budget and replicas (of a saved extraction).',
+    'SERIES may also be the file of a result written with --json by the command that the chart is drawn from: assess for terms, ratios, plane and values, compare for values, backtest for coverage, extract for budget and replicas. With --csv the plotted numbers.',
   ],
   operands: [
-    { name: 'KIND', help: 'terms, ratios, plane, values, scale, integrand or coverage' },
+    { name: 'KIND', help: 'terms, ratios, plane, values, scale, integrand, coverage, budget or replicas' },
     { name: 'SERIES', help: 'a catalogue id, a series file, - for standard input, or a saved result' },
   ],
   options: [
