@@ -1,5 +1,6 @@
 /** @module From a setting to its kernel. */
 import { borelPadeKernel, type BorelPadeSetting } from './borel-pade.js';
+import { contourImprovedKernel, type ContourImprovedSetting } from './contour-improved.js';
 import { conformalKernel, type ConformalSetting } from './conformal.js';
 import { fixedOrderKernel, type FixedOrderSetting } from './fixed-order.js';
 import type { Kernel } from './kernel.js';
@@ -22,7 +23,11 @@ export type FastSetting =
   | BorelPadeSetting
   | PartialPadeSetting
   | ConformalSetting
-  | SingularityModelSetting;
+  | SingularityModelSetting
+  | ContourImprovedSetting;
+
+/** Does the kernel take the coefficients of D of a contour quantity, and not those of the fixed-order expansion? */
+export const readsCircle = (setting: FastSetting): boolean => setting.kind === 'contour-improved';
 
 export function makeKernel(setting: FastSetting): Kernel {
   switch (setting.kind) {
@@ -48,5 +53,7 @@ export function makeKernel(setting: FastSetting): Kernel {
       return conformalKernel(setting);
     case 'singularity-model':
       return singularityModelKernel(setting);
+    case 'contour-improved':
+      return contourImprovedKernel(setting);
   }
 }

@@ -6,9 +6,10 @@
  */
 import { borelTransform, fitModel, padeOf, remap, withoutFactors } from '../borel/index.js';
 import type { ModelFit, Softening } from '../borel/index.js';
+import { contourSum } from '../contour/index.js';
 import type { Growth } from '../growth/index.js';
-import { exact, R, Rational, toNumberExact } from '../numerics/index.js';
-import type { Exact } from '../numerics/index.js';
+import { chebyshevMap, exact, R, Rational, toNumberExact } from '../numerics/index.js';
+import type { ChebyshevMap, Exact } from '../numerics/index.js';
 import {
   cleanPart,
   cutsOf,
@@ -24,8 +25,10 @@ import {
   termsBeforeAlternation,
 } from '../prescriptions/index.js';
 import type { Sum } from '../prescriptions/index.js';
+import { divisorSize } from '../qcd/index.js';
 import type { Expansion } from '../series/index.js';
 import type { ConformalSetting } from './conformal.js';
+import type { ContourImprovedSetting } from './contour-improved.js';
 import type { FastSetting } from './make.js';
 import type { Affine, SingularityModelSetting } from './singularity-model.js';
 
@@ -71,6 +74,8 @@ export function fastSetting(name: string, e: Expansion, growth: Growth, sum: Sum
       return conformal(e, growth, sum.variant);
     case 'singularity-model':
       return singularityModel(e);
+    case 'contour-improved':
+      return contourImproved(e);
     default:
       return undefined;
   }
@@ -196,4 +201,42 @@ function singularityModel(e: Expansion): SingularityModelSetting | undefined {
     })),
     polynomial: nothing.polynomial.map((_, k) => affine((f) => f.polynomial[k]!)),
   };
+}
+
+/** Error of the tabled integrals, relative to the largest. */
+const TABLE_ERROR = 1e-13;
+/** Ranges of x that are tried, in units of its central value: near the Landau singularity the circle gives out. */
+const TABLED = [
+  [0.35, 1.8],
+  [0.5, 1.5],
+  [0.6, 1.35],
+  [0.7, 1.25],
+  [0.8, 1.15],
+] as const;
+
+function contourImproved(e: Expansion): ContourImprovedSetting | undefined {
+  const { contour } = e;
+  if (contour === undefined) return undefined;
+  const quantity = { factor: exact(1), additive: exact(0), contour };
+  const x = toNumberExact(e.x);
+  const N = contour.coefficients.length;
+  const divisor = toNumberExact(divisorSize(contour.divisor));
+  const table = (n: number, from: number, to: number): ChebyshevMap | undefined => {
+    const unitVector = Array.from({ length: N }, (_, k) => (k === n ? 1 : 0));
+    const integral = ([at = NaN]: readonly number[]): number => {
+      const value = contourSum(quantity, 'contour-improved', at * divisor, unitVector);
+      return typeof value === 'number' ? value / at ** e.power : NaN;
+    };
+    return chebyshevMap(integral, [from * x], [to * x], TABLE_ERROR);
+  };
+  for (const [from, to] of TABLED) {
+    const integrals: ChebyshevMap[] = [];
+    for (let n = 0; n < N; n++) {
+      const map = table(n, from, to);
+      if (map === undefined) break;
+      integrals.push(map);
+    }
+    if (integrals.length === N) return { kind: 'contour-improved', integrals };
+  }
+  return undefined;
 }

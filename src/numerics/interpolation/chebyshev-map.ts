@@ -5,8 +5,9 @@
  *            it can be sent to a worker.
  * Method     degrees from the lines through the middle of the box, each raised until the last coefficients fall below the tolerance;
  *            a tensor grid of Chebyshev points; discrete cosine sums along each direction.
- * Bound      checked, not proved: the largest relative error at points off the grid (Halton points and the corners of the box,
- *            slightly inside) is returned and must not exceed the tolerance; otherwise the degrees are raised.
+ * Bound      checked, not proved: the largest error at points off the grid (Halton points and the corners of the box, slightly
+ *            inside), relative to the largest value there, is returned and must not exceed the tolerance; otherwise the degrees are
+ *            raised.
  * Reference  L. N. Trefethen, Approximation Theory and Approximation Practice (2013), ch. 3–4; J. H. Halton (1960) (memory).
  */
 
@@ -16,7 +17,7 @@ export interface ChebyshevMap {
   /** Degree in each variable; the first variable runs fastest in `coefficients`. */
   readonly degrees: readonly number[];
   readonly coefficients: Float64Array;
-  /** Largest relative error that the check found. */
+  /** Largest error that the check found, relative to the largest value. */
   readonly error: number;
 }
 
@@ -88,8 +89,8 @@ function checkPoints(dimension: number): number[][] {
 }
 
 /**
- * The map of f on the box; f gives NaN where it has no value. Undefined when the tolerance (relative, at the points of the check)
- * is not met: a box that reaches a singularity, or more than six variables.
+ * The map of f on the box; f gives NaN where it has no value. Undefined when the tolerance (relative to the largest value, at the
+ * points of the check) is not met: a box that reaches a singularity, or more than six variables.
  */
 export function chebyshevMap(
   f: ManyVariables,
@@ -147,13 +148,18 @@ function tabulate(
 
 function worst(f: ManyVariables, map: Omit<ChebyshevMap, 'error'>): number {
   const reader = new MapReader({ ...map, error: 0 });
-  return checkPoints(map.from.length).reduce((most, s) => {
+  let error = 0;
+  let size = 0;
+  for (const s of checkPoints(map.from.length)) {
     const p = s.map((v, d) => place(v, map.from[d]!, map.to[d]!));
     const expected = f(p);
     reader.fix(p.slice(1));
-    const error = Math.abs(reader.at(p[0]!) - expected) / Math.abs(expected);
-    return Number.isNaN(error) ? Infinity : Math.max(most, error);
-  }, 0);
+    const gap = Math.abs(reader.at(p[0]!) - expected);
+    if (Number.isNaN(gap)) return Infinity;
+    error = Math.max(error, gap);
+    size = Math.max(size, Math.abs(expected));
+  }
+  return size === 0 ? error : error / size;
 }
 
 /** Evaluates a map: all variables but the first are fixed once, the first then runs at the cost of one Clenshaw sum. */
