@@ -2,7 +2,8 @@
  * @module The mass m with f(m) = target, bracketed: f is a pole or subtracted mass as a function of m(m).
  *
  * Method     f grows with m where perturbation theory holds; below it f turns up again, since the coupling grows. The search
- *            goes down from above, so that it meets the perturbative solution first, and stops where f no longer falls.
+ *            goes down from above, so that it meets the perturbative solution first, and ends where f no longer falls: the least
+ *            value is looked up there, since the solution may lie just above it.
  *            Inside the bracket: false position with the weights of Anderson and Björck, which keeps the bracket.
  * Bound      a few 2^-53.
  */
@@ -26,6 +27,39 @@ function none(target: number, why: string): Refusal {
   return refuse(`no MSbar mass leads to ${target} GeV: ${why}`, 'use fewer orders (--order), or a heavier quark');
 }
 
+const GOLDEN = (Math.sqrt(5) - 1) / 2;
+const TURN_STEPS = 40;
+
+/** f turns between low and high · SEARCH_FACTOR: the bracket above its least value, if the target lies above that. */
+function aboveTurn(f: Function, target: number, low: number, high: number): Bracket | Refusal {
+  let [a, b] = [low, high * SEARCH_FACTOR];
+  const value = (m: number): number => {
+    const found = f(m);
+    return isRefusal(found) ? Infinity : found;
+  };
+  const fHigh = value(b);
+  const top = b;
+  let [x, y] = [b - GOLDEN * (b - a), a + GOLDEN * (b - a)];
+  let [fx, fy] = [value(x), value(y)];
+  for (let k = 0; k < TURN_STEPS && Math.min(fx, fy) > target; k++) {
+    if (fx < fy) {
+      [b, y, fy] = [y, x, fx];
+      x = b - GOLDEN * (b - a);
+      fx = value(x);
+    } else {
+      [a, x, fx] = [x, y, fy];
+      y = a + GOLDEN * (b - a);
+      fy = value(y);
+    }
+  }
+  const [m, least] = fx < fy ? [x, fx] : [y, fy];
+  if (least <= target) return { low: m, fLow: least - target, high: top, fHigh: fHigh - target };
+  return none(
+    target,
+    `its series has no smaller value than ${least.toPrecision(6)} GeV, at m(m) = ${m.toPrecision(4)} GeV`,
+  );
+}
+
 function findBracket(f: Function, target: number): Bracket | Refusal {
   let high = target;
   let fHigh = f(high);
@@ -40,12 +74,7 @@ function findBracket(f: Function, target: number): Bracket | Refusal {
     const fLow = f(low);
     if (isRefusal(fLow)) return none(target, `at m(m) = ${low.toPrecision(4)} GeV ${fLow.reason}`);
     if (fLow <= target) return { low, fLow: fLow - target, high, fHigh: fHigh - target };
-    if (fLow >= fHigh) {
-      return none(
-        target,
-        `its series has no smaller value than ${fHigh.toPrecision(6)} GeV, near m(m) = ${high.toPrecision(4)} GeV`,
-      );
-    }
+    if (fLow >= fHigh) return aboveTurn(f, target, low, high);
     high = low;
     fHigh = fLow;
   }
