@@ -32,13 +32,12 @@ const ROUGH = 60;
 export function kummerM(a: Given, b: Given, z: Given, prec: number): Complex {
   const [A, B, Z] = [parameter(a), parameter(b), parameter(z)];
   return C.round(
-    sharpen(prec, prec + 20, (bits) => seriesM(A, B, Z, bits)),
+    sharpen(prec, prec + 20, (bits) => seriesM(A, B, Z.at(bits), bits)),
     prec,
   );
 }
 
-function seriesM(a: Parameter, b: Parameter, z: Parameter, bits: number): Complex {
-  const Z = z.at(bits);
+function seriesM(a: Parameter, b: Parameter, Z: Complex, bits: number): Complex {
   if (!(magToNumber(modulusUpper(Z)) < FAR)) return C.INDETERMINATE;
   if (endsSeries(a) || R.toNumber(Z.re) >= 0) return hypergeometricSeries([a.at(bits)], [b.at(bits)], Z, bits);
   const other = hypergeometricSeries([difference(b, a).at(bits)], [b.at(bits)], C.neg(Z), bits);
@@ -51,16 +50,25 @@ export function kummerU(a: Given, b: Given, z: Given, prec: number): Complex {
   const rough = Z.at(ROUGH);
   if (!R.isPositive(rough.re) && R.containsZero(rough.im)) return C.INDETERMINATE;
   const c = plus(difference(A, B), 1);
-  const start = prec + 20;
-  return C.round(
-    sharpen(prec, start, (bits) => {
-      const w = Z.at(bits);
-      if (endsSeries(A)) return finite(A, c, w, bits);
-      if (endsSeries(c)) return C.mul(power(w, difference(parameter(1), B), bits), finite(c, A, w, bits), bits);
-      return asymptotic(A, B, c, w, prec, bits) ?? connected(A, B, c, w, bits);
-    }),
-    prec,
-  );
+  const value =
+    endsSeries(A) || endsSeries(c)
+      ? sharpen(prec, prec + 20, (bits) => polynomial(A, B, c, Z.at(bits), bits))
+      : (asymptotic(A, B, c, Z.at(prec + 24), prec, prec + 24) ??
+        sharpen(prec, prec + 20 + cancelled(B, rough), (bits) => connected(A, B, c, Z.at(bits), bits)));
+  return C.round(value, prec);
+}
+
+/** Bits that the convergent series lose: their terms reach e^|z|, the results do not. */
+function cancelled(b: Parameter, z: Complex): number {
+  const { re, im } = C.toNumbers(z);
+  const size = Math.hypot(re, im);
+  if (!(size < FAR)) return 0;
+  return Math.ceil(Math.LOG2E * (integer(b) === undefined && re < 0 ? size + re : size));
+}
+
+function polynomial(a: Parameter, b: Parameter, c: Parameter, z: Complex, bits: number): Complex {
+  if (endsSeries(a)) return finite(a, c, z, bits);
+  return C.mul(power(z, difference(parameter(1), b), bits), finite(c, a, z, bits), bits);
 }
 
 const power = (z: Complex, p: Parameter, bits: number): Complex => cpow(z, p.at(bits), bits);
@@ -149,8 +157,8 @@ function connected(a: Parameter, b: Parameter, c: Parameter, z: Complex, bits: n
     return C.mul(power(z, parameter(1 - n), bits), logarithmic(c, 1 - n, z, bits), bits);
   }
   const one = parameter(1);
-  const first = hypergeometricSeries([a.at(bits)], [b.at(bits)], z, bits);
-  const second = hypergeometricSeries([c.at(bits)], [difference(parameter(2), b).at(bits)], z, bits);
+  const first = seriesM(a, b, z, bits);
+  const second = seriesM(c, difference(parameter(2), b), z, bits);
   const less = difference(one, b);
   const p = C.mul(gammaComplex(less.at(bits), bits), rgammaComplex(c.at(bits), bits), bits);
   const q = C.mul(gammaComplex(minus(less).at(bits), bits), rgammaComplex(a.at(bits), bits), bits);

@@ -26,19 +26,19 @@ const SECTOR_BITS = 0.1143;
 export function digammaComplex(z: Complex, prec: number): Complex {
   if (R.isExactZero(z.im)) return C.fromReal(digamma(z.re, prec));
   if (R.toNumber(z.re) < 0.5) {
-    const work = prec + 12;
+    const work = prec + 16;
     const other = digammaComplex(C.sub(C.ONE, z, work + 40), work);
     return C.sub(other, piCot(z, work), prec);
   }
   const { re, im } = C.toNumbers(z);
   if (!(re < 2 ** 40 && Math.abs(im) < 2 ** 20)) return C.INDETERMINATE;
-  const reach = Math.max(4, Math.ceil(SHIFT_RATIO * prec), Math.abs(im) + 1);
+  const reach = Math.max(4, Math.ceil(SHIFT_RATIO * (prec + 8)), Math.abs(im) + 1);
   const n = Math.max(0, Math.ceil(reach - re));
-  const work = prec + 16 + Math.ceil(Math.log2(n + 2));
+  const work = prec + 20 + Math.ceil(Math.log2(n + 2));
   const big: Complex = { re: R.add(z.re, R.fromNumber(n), work + 20), im: z.im };
   const inverse = C.inv(big, work);
   const square = C.mul(inverse, inverse, work);
-  const { terms, remainder } = stirlingTerms(Math.log2(Math.hypot(re + n, im)) - SECTOR_BITS - 1e-9, prec, false);
+  const { terms, remainder } = stirlingTerms(Math.log2(Math.hypot(re + n, im)) - SECTOR_BITS - 1e-9, prec + 8, false);
   let sum: Complex = C.ZERO;
   for (let k = terms - 1; k >= 1; k--) {
     const coefficient = R.fromRational(bernoulli(2 * k).div(Rational.of(2 * k)), work);

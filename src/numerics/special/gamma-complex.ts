@@ -66,13 +66,19 @@ function sinPi(z: Complex, prec: number): Complex {
   return { re: R.mul(sin, cosh(y, prec + 8), prec), im: R.mul(cos, sinh(y, prec + 8), prec) };
 }
 
+/** Bits beside prec: the logarithm's absolute error is the relative one of Γ, and it grows with |z| log|z|. */
+function spareBits(z: Complex): number {
+  const { re, im } = C.toNumbers(z);
+  return 14 + Math.ceil(2 * Math.log2(2 + Math.min(1e12, Math.abs(re) + Math.abs(im))));
+}
+
 const inRightPart = (z: Complex): boolean => R.toNumber(z.re) >= 0.5;
 const reflected = (z: Complex, prec: number): Complex => C.sub(C.ONE, z, prec);
 
 /** Γ(z); INDETERMINATE where z may be a pole. Relative accuracy about 2^-prec for |Im z| of order one. */
 export function gammaComplex(z: Complex, prec: number): Complex {
   if (R.isExactZero(z.im)) return C.fromReal(gamma(z.re, prec));
-  const work = prec + 12;
+  const work = prec + spareBits(z);
   if (!inRightPart(z)) {
     const upper = C.mulReal(rgammaComplex(reflected(z, work + 40), work), pi(work), work);
     return C.div(upper, sinPi(z, work), prec);
@@ -84,7 +90,7 @@ export function gammaComplex(z: Complex, prec: number): Complex {
 /** 1/Γ(z), entire. */
 export function rgammaComplex(z: Complex, prec: number): Complex {
   if (R.isExactZero(z.im)) return C.fromReal(rgamma(z.re, prec));
-  const work = prec + 12;
+  const work = prec + spareBits(z);
   if (!inRightPart(z)) {
     const upper = C.mul(gammaComplex(reflected(z, work + 40), work), sinPi(z, work), work);
     return C.mulReal(upper, R.div(R.ONE, pi(work), work), prec);
