@@ -5,11 +5,15 @@
  *   t* > 0:  T_n · ω F_{n+γ−1}(ω)  (principal value),  Im above = T_n π ω^{n+γ} e^{−ω}/Γ(n+γ),  ω = |t*| / x,
  *   t* < 0:  T_n · ω G_{n+γ−1}(ω),
  * with T_n the first omitted term (the last one continued by (n−1+γ)/ω·sign when it is not known).
- * Truncation error: the larger of the changes when the cut is moved by one term either way.
+ * Truncation error: the larger of two. (1) The changes when the cut is moved by one term either way. (2) What the strength does not
+ * tell: with s_k = c_k t*^k/Γ(k+γ) → S the linear extrapolant k s_k − (k−1) s_{k−1} differs from s_k by the share
+ *   ρ = (k−1) |1 − s_{k−1}/s_k|,  the larger one of k = n, n−1, at most 1; 1 below k = 2.
+ * The omitted terms behind the first one, T_n (ω F_{n+γ−1} − 1) together, are known no better; where they cancel by accident half
+ * of T_n counts: ρ |T_n| max(1/2, |ω F − 1|).
  * Reference: R. B. Dingle (1973) ch. 21–22 (from memory); C. Ayala, X. Lobregat, A. Pineda, arXiv:1902.07736, 1909.01370
  * (abstracts seen); DLMF 2.11(iii). Re-derived and checked to 35 digits.
  */
-import { addExact, branchAlternating, branchSame, exact, R, toNumberExact } from '../numerics/index.js';
+import { addExact, branchAlternating, branchSame, exact, isZeroExact, R, toNumberExact } from '../numerics/index.js';
 import type { Ball } from '../numerics/index.js';
 import { branchImaginary } from '../borel/index.js';
 import type { Expansion, StatedSingularity } from '../series/index.js';
@@ -19,7 +23,12 @@ import { leastTerm, partialSums, refusal, terms, toDigits } from './prescription
 interface Cut {
   readonly value: Ball;
   readonly im: Ball;
+  /** Size of all omitted terms but the first, and not less than half of the first. */
+  readonly omitted: number;
 }
+
+/** Share of the first omitted term that counts where the terms behind it cancel. Heuristic, as with the least term. */
+const LEAST_SHARE = 0.5;
 
 /** Partial sum of n terms plus the terminant of s. */
 function completed(e: Expansion, s: StatedSingularity, n: number, prec: number): Cut {
@@ -34,15 +43,38 @@ function completed(e: Expansion, s: StatedSingularity, n: number, prec: number):
   const first = n < all.length ? all[n]! : R.mul(all[n - 1]!, step, prec);
   const b = addExact(gamma, exact(-1));
   const base = partialSums(e, prec)[n]!;
+  const omitted = (factor: Ball): number =>
+    Math.abs(R.toNumber(first)) * Math.max(LEAST_SHARE, Math.abs(R.toNumber(factor) - 1));
   if (!R.isPositive(t)) {
     const factor = R.mul(w, branchAlternating(b, w, prec), prec);
-    return { value: R.add(base, R.mul(first, factor, prec), prec), im: R.ZERO };
+    return { value: R.add(base, R.mul(first, factor, prec), prec), im: R.ZERO, omitted: omitted(factor) };
   }
   const factor = R.mul(w, branchSame(b, w, prec).pv, prec);
   return {
     value: R.add(base, R.mul(first, factor, prec), prec),
     im: R.mul(first, branchImaginary(gamma, w, prec), prec),
+    omitted: omitted(factor),
   };
+}
+
+/** Steps of the strength that are looked at: one may be small by accident. */
+const STEPS = 2;
+
+/** How far the strength s_n may be from its limit, as a share of it: see the header. */
+function strengthDoubt(e: Expansion, s: StatedSingularity, n: number): number {
+  const shares = Array.from({ length: STEPS }, (_, i) => stepShare(e, s, n - i));
+  return Math.min(1, Math.max(...shares));
+}
+
+/** (k−1) |1 − s_{k−1}/s_k|; 1 where it cannot be had. */
+function stepShare(e: Expansion, s: StatedSingularity, k: number): number {
+  const [last, before] = [e.coefficients[k], e.coefficients[k - 1]];
+  if (k < 2 || last === undefined || before === undefined || isZeroExact(last)) return 1;
+  // s_{k−1}/s_k = c_{k−1} (k−1+γ)/(c_k t*).
+  const next = R.mul(last.ball(96), s.t.ball(96), 96);
+  const ratio = R.div(R.mul(before.ball(96), addExact(s.exponent!, exact(k - 1)).ball(96), 96), next, 96);
+  const share = (k - 1) * Math.abs(R.toNumber(R.sub(R.ONE, ratio, 96)));
+  return Number.isFinite(share) ? share : 1;
 }
 
 /** Where to cut: x − b − 1/3 terms for the same-sign leader, the least term for the alternating one; within 1 … N − 1. */
@@ -101,7 +133,7 @@ export const terminantSum: Prescription = {
     if (request.only === undefined) {
       const moved = [n - 1, n + 1].filter((m) => m >= 1 && m <= N).map((m) => R.toNumber(completed(e, s, m, 96).value));
       const here = R.toNumber(best.value);
-      truncation = Math.max(...moved.map((v) => Math.abs(v - here)));
+      truncation = Math.max(...moved.map((v) => Math.abs(v - here)), strengthDoubt(e, s, n) * best.omitted);
     }
     return [
       {
