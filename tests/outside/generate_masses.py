@@ -10,9 +10,10 @@ from mpmath import mpf
 
 mp.mp.dps = 50
 PI = mp.pi
-Z3, Z5 = mp.zeta(3), mp.zeta(5)
-L2, A4 = mp.log(2), mp.polylog(4, mpf(1) / 2)
-CF, CA = mpf(4) / 3, mpf(3)
+with mp.workdps(80):
+    Z3, Z5 = mp.zeta(3), mp.zeta(5)
+    L2, A4 = mp.log(2), mp.polylog(4, mpf(1) / 2)
+    CF, CA = mpf(4) / 3, mpf(3)
 
 
 def beta(nl):
@@ -54,7 +55,7 @@ def run(al, ratio, b):
         return al
     guess = al / (1 + b[0] * al / (2 * PI) * mp.log(ratio))
     f = lambda a: mp.quad(lambda t: 1 / beta_r(t, b), [al, a]) - mp.log(ratio)
-    return mp.findroot(f, guess, tol=mpf(10) ** -70)
+    return mp.findroot(f, guess, tol=mpf(10) ** -int(1.4 * mp.mp.dps))
 
 
 def product(p, q, n):
@@ -187,16 +188,16 @@ def masses(nl, m, al, N, R, ratio):
     return out
 
 
-def evolved(nl, m, al, R):
-    """m_MSRp(R) - m, with K terms of gamma and of beta, K = 1 .. 4."""
+def evolved(nl, m, al, R, counts=(1, 2, 3, 4)):
+    """m_MSRp(R) - m, with K terms of gamma and of beta."""
     b4 = beta(nl)
     c = pole(nl)
     a = [c[n] * 4 ** (n + 1) for n in range(4)]
     gamma = [a[n] - 2 * sum((n - j) * b4[j] * a[n - 1 - j] for j in range(n)) for n in range(4)]
     out = []
-    for K in (1, 2, 3, 4):
+    for K in counts:
         bb = b4[:K]
-        with mp.workdps(25):
+        with mp.workdps(min(25, mp.mp.dps)):
             f = lambda lr: -m * mp.exp(lr) * sum(gamma[k] * (run(al, mp.exp(lr), bb) / (4 * PI)) ** (k + 1) for k in range(K))
             out.append(mp.quad(f, [0, mp.log(R / m)]))
     return out
@@ -216,11 +217,17 @@ CASES = [
     dict(name='top', light=5, mass='163', alpha='0.1085', strength='0.4641', cutoff='20', ratio='1'),
     dict(name='charm', light=3, mass='1.28', alpha='0.388837', strength='0.5357', cutoff='1', ratio='1.5'),
 ]
-result = {'generator': 'tests/outside/generate_masses.py, mpmath ' + mp.__version__ + ', 50 digits', 'cases': []}
-for case in CASES:
-    values = masses(case['light'], *(mpf(case[k]) for k in ('mass', 'alpha', 'strength', 'cutoff', 'ratio')))
-    result['cases'].append({**case, 'values': text(values)})
-result['evolved'] = {'light': 4, 'mass': '4.18', 'alpha': '0.2250', 'cutoff': '2',
-                     'shifts': text(evolved(4, mpf('4.18'), mpf('0.2250'), mpf(2)), 20)}
-with open(os.path.join(os.path.dirname(os.path.abspath(__file__)), 'data', 'masses.json'), 'w') as f:
-    json.dump(result, f, indent=1)
+
+def main():
+    result = {'generator': 'tests/outside/generate_masses.py, mpmath ' + mp.__version__ + ', 50 digits', 'cases': []}
+    for case in CASES:
+        values = masses(case['light'], *(mpf(case[k]) for k in ('mass', 'alpha', 'strength', 'cutoff', 'ratio')))
+        result['cases'].append({**case, 'values': text(values)})
+    result['evolved'] = {'light': 4, 'mass': '4.18', 'alpha': '0.2250', 'cutoff': '2',
+                         'shifts': text(evolved(4, mpf('4.18'), mpf('0.2250'), mpf(2)), 20)}
+    with open(os.path.join(os.path.dirname(os.path.abspath(__file__)), 'data', 'masses.json'), 'w') as f:
+        json.dump(result, f, indent=1)
+
+
+if __name__ == '__main__':
+    main()
