@@ -43,15 +43,16 @@ import type { Refusal, Ring } from '../qcd/index.js';
 import type { ContourOrigin } from '../series/index.js';
 import { loopsOf } from './loops.js';
 
-/** 4b = 2 β_1/β_0². */
-export function fourB(flavours: number): Exact {
+/** 4b = 2 β_1/β_0²; zero in a world of one loop. */
+export function fourB({ flavours, loops }: ContourOrigin): Exact {
+  if (loops === 1) return exact(0);
   const [b0 = exact(1), b1 = exact(0)] = betaCoefficients(flavours);
   return divExact(mulExact(exact(2), b1), mulExact(b0, b0));
 }
 
 /** r_1 … r_n in powers of X = α̂/divisor: r_l (u per t)^l. */
 function renormalonSeries(origin: ContourOrigin, n: number): Exact[] {
-  const b4 = fourB(origin.flavours);
+  const b4 = fourB(origin);
   const half = divExact(uPerT(origin.flavours, origin.divisor), exact(2));
   const list: Exact[] = [];
   // r_1 = 2^{−1−4b}, r_{l+1}/r_l = (l + 4b)/2.
@@ -87,7 +88,9 @@ export interface SubtractionSeries {
 /** The series of the renormalon to `n` orders; `wilson` holds C_1, C_2, …. */
 export function subtractionSeries(origin: ContourOrigin, wilson: readonly Exact[], n: number): SubtractionSeries {
   const beta = betaOf(origin, n);
-  const inC = cSchemeBeta(origin.flavours, origin.divisor, n);
+  const whole = cSchemeBeta(origin.flavours, origin.divisor, n);
+  // One loop knows no other scheme.
+  const inC = origin.loops === 1 ? beta : whole;
   const r = renormalonSeries(origin, n);
   const C = wilson.slice(0, n);
   const inputs = [...beta, ...inC, ...r, ...C];
@@ -159,15 +162,15 @@ export function renormalonIntegral(origin: ContourOrigin, x: Exact, logR: Exact,
   const alpha = R.mul(x.ball(work), divisorSize(origin.divisor).ball(work), work);
   const logLambda = R.add(ballLogOfInverse(flow, R.div(R.ONE, alpha, work), work), logR.ball(work), work);
   const [b0 = exact(1), b1 = exact(0)] = betaCoefficients(origin.flavours, '1');
-  const q = R.div(b1.ball(work), b0.ball(work), work);
+  const q = origin.loops === 1 ? R.ZERO : R.div(b1.ball(work), b0.ball(work), work);
   // Y − q ln Y falls to its least value at Y = q: below that the coupling has no value at R.
   const [b, qn] = [R.toNumber(b0.ball(work)), R.toNumber(q)];
-  const least = (qn * (1 - Math.log(qn) + Math.log(b))) / b;
+  const least = qn > 0 ? (qn * (1 - Math.log(qn) + Math.log(b))) / b : 0;
   if (!(R.toNumber(logLambda) > least + CLOSE)) return tooLow;
   const start = Math.max(R.toNumber(R.mul(b0.ball(work), logLambda, work)), R.toNumber(q) + 1);
   const y = inverseCoupling(b0.ball(work), q, logLambda, start, work);
   // 1/ā = 4π Y/β_0 = Y/b_0 for α normalised couplings.
   const w = R.mul2exp(R.div(y, b0.ball(work), work), 1);
-  const b4 = fourB(origin.flavours);
+  const b4 = fourB(origin);
   return R.mul(powerOfTwo(b4).ball(work), branchSame(b4, w, work).pv, prec);
 }

@@ -56,7 +56,7 @@ export function modelNorm(origin: ContourOrigin, prec: number): Norm | undefined
   const place = model?.singularities.findIndex((s) => s.t === gluon?.t) ?? -1;
   const S = model?.fit.strengths[place];
   if (S === undefined) return undefined;
-  const gamma = addExact(exact(1), fourB(origin.flavours));
+  const gamma = addExact(exact(1), fourB(origin));
   const power: Exact = exactReal((bits) => pow(R.fromNumber(2), gamma.ball(bits + 8), bits + 8));
   const K = divExact(mulExact({ ball: () => S }, power), uPerT(origin.flavours, origin.divisor));
   return {

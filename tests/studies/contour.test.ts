@@ -38,7 +38,6 @@ describe('the fixed-order series', () => {
     const s = fixedOrderSeries(await quantity('[1, "2 +0.3 -0.1", 5]', '[0, 1]'));
     // w = x: W = 1 − x². The sign of dK_3/dc_2 is that of J_1 = −1/2·…
     const { plus, minus } = s.coefficients[2]!.error!;
-    expect([plus.toNumber(), minus.toNumber()].toSorted()).not.toEqual([0, 0]);
     expect(plus.toNumber() / minus.toNumber()).toBeCloseTo(3, 8);
   });
 
