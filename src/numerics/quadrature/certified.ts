@@ -8,7 +8,8 @@
  * Bound      f = Σ a_k T_k with |a_k| <= 2Mρ^−k. The rule is exact below degree 2n, odd k drop out, and the integral and the sum of
  *            weights contribute at most 2/(k²−1) and 2 for the others: |E| <= |h| (64/15) M ρ^(−2n)/(1 − ρ^−2) for n >= 2.
  *            Pieces that cannot be halved further contribute |b−a|·f(piece), if that is finite.
- *            The integrand must be analytic wherever its enclosure is finite: a branch cut inside the rectangle has to give INDETERMINATE.
+ *            The integrand must be analytic wherever its enclosure is finite. Functions with a cut enclose their values on both sides of
+ *            it, finitely: their arguments have to go through awayFromCut, or the bound is not one.
  * Reference  L. N. Trefethen, SIAM Rev. 50 (2008) 67, theorem 4.5 (constant re-derived); K. Petras, J. Comput. Appl. Math. 145 (2002) 345.
  */
 import * as C from '../ball/complex.js';
@@ -35,7 +36,12 @@ export interface CertifiedOptions {
   readonly mostPieces?: number;
 }
 
-/** ∫_a^b f, enclosed. The radius is near 2^-prec of the integral's size where the integrand allows it. */
+/** z itself where the rectangle certainly avoids (−∞, 0], INDETERMINATE elsewhere: for arguments of logarithms, roots and powers. */
+export function awayFromCut(z: Complex): Complex {
+  return R.isPositive(z.re) || !R.containsZero(z.im) ? z : C.INDETERMINATE;
+}
+
+/** ∫_a^b f, enclosed. f must be analytic wherever its enclosure is finite (awayFromCut). The radius is near 2^-prec of the integral's size where the integrand allows it. */
 export function integrateAnalytic(
   f: Integrand,
   a: Complex,
