@@ -73,6 +73,22 @@ export async function bundle(outdir) {
     metafile: true,
     logLevel: 'warning',
   });
+  await build({
+    absWorkingDir: root,
+    // What a worker thread runs, whole in one file: sharing chunks with the program would cut those into more pieces, which every
+    // command would pay for.
+    entryPoints: { 'replica-worker': 'src/extraction/replicas/worker.ts' },
+    outdir,
+    bundle: true,
+    format: 'esm',
+    platform: 'node',
+    target: 'node20',
+    outExtension: { '.js': '.mjs' },
+    minifyWhitespace: true,
+    minifySyntax: true,
+    legalComments: 'none',
+    logLevel: 'warning',
+  });
   await mkdir(join(outdir, 'assets'), { recursive: true });
   for (const [name, source] of Object.entries(ASSETS))
     await copyFile(join(root, 'node_modules', source), join(outdir, 'assets', name));

@@ -20,3 +20,6 @@ export { BUBBLE_VIEWS, bubbleView } from './bubble-views.js';
 export { chainSeries } from './bubble-series.js';
 export type { BubbleQuestion } from './bubble-words.js';
 export type * from './bubble-result.js';
+export { REPLICA_LIMITS, replicate } from './replicas/study.js';
+export type { RunOptions as ReplicaOptions } from './replicas/run.js';
+export type * from './replicas/result.js';

@@ -53,7 +53,7 @@ export type { Expanded } from './expand.js';
 export { knownLoops } from './scheme.js';
 export { ambiguityReport } from './ambiguity-report.js';
 export { termTable } from './terms.js';
-export { ballText, exactText, indicative } from './figures.js';
+export { ballText, estimateText, exactText, indicative } from './figures.js';
 export { writeVerdict } from './rounding.js';
 export { seriesSummary } from './summary.js';
 export { valueCautions } from './comparing-cautions.js';
