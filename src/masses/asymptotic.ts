@@ -7,7 +7,7 @@
  * Reference  M. Beneke, Phys. Lett. B344 (1995) 341; A. Pineda, hep-ph/0105008 (c_1, c_2);
  *            N. Brambilla, J. Komijani, A. Kronfeld, A. Vairo, arXiv:1712.04983 (geometric coupling).
  */
-import { Rational, addExact, divExact, exact, mulExact, toNumberExact, type Exact } from '../numerics/index.js';
+import { Rational, addExact, exact, mulExact, toNumberExact, type Exact } from '../numerics/index.js';
 import { betaCoefficients, divisorSize, expectedSingularity } from '../qcd/index.js';
 import type { SeriesInA } from './definition.js';
 
@@ -92,9 +92,3 @@ export function asymptoticNumbers(light: number, count: number): number[] {
   const fourPi = toNumberExact(divisorSize('4*pi'));
   return coefficients(light, renormalonOf(light).c, count, 0).map((c, n) => toNumberExact(c) / fourPi ** (n + 1));
 }
-
-/** 2π/β_0 as a double. */
-export const positionNumber = (light: number): number => toNumberExact(renormalonOf(light).t);
-
-/** (2π/β_0) 2^(−b)/Γ(1+b) needs these two in enclosures too: β_0/(2π) = 1/t. */
-export const inversePosition = (light: number): Exact => divExact(exact(1), renormalonOf(light).t);
