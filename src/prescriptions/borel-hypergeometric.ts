@@ -72,6 +72,16 @@ function fitted(c: readonly Exact[]): Fitted | string {
   return { apart: before === 1 ? c[0]! : exact(0), shift: before, fit, rough };
 }
 
+/** The transform fitted to all coefficients after those that stand apart; undefined where it cannot be believed. */
+export function fittedTransform(
+  c: readonly Exact[],
+  prec: number,
+): { readonly apart: 0 | 1; readonly transform: HypergeometricTransform } | undefined {
+  const found = c.length > MOST ? 'too many' : fitted(c);
+  const transform = typeof found === 'string' ? found : found.fit.at(prec);
+  return typeof found === 'string' || typeof transform === 'string' ? undefined : { apart: found.shift, transform };
+}
+
 function evaluate(f: Fitted, x: Exact, digits: number): HypergeometricSum | undefined {
   const result = toDigits(
     digits,

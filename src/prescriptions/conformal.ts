@@ -34,6 +34,10 @@ export const memberLabel = (cuts: Cuts, softening: Softening): string => {
   return softening === 'none' ? `${count}, not softened` : `${count}, softened ${softening}`;
 };
 
+/** The softening that a member's name says; undefined for a name that is none. */
+export const softeningOf = (cuts: Cuts, variant: string): Softening | undefined =>
+  (['in w', 'in t', 'none'] as const).find((softening) => memberLabel(cuts, softening) === variant);
+
 /** First stated singularity on each axis. */
 export function cutsOf(e: Expansion): Cuts {
   const end = (side: 1 | -1): CutEnd | undefined => {
