@@ -45,7 +45,7 @@ async function runAs(form: PaperForm, command: Command, call: Call): Promise<num
       },
     },
   });
-  const { papers } = await import('./rooms-more.js');
+  const { papers } = await import('./rooms-pictures.js');
   deliver(papers.paperText(JSON.parse(json), form), call);
   return status;
 }

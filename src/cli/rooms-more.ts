@@ -6,6 +6,4 @@ export * as bubbles from '../bubbles/index.js';
 export * as contour from '../contour/index.js';
 export * as extraction from '../extraction/index.js';
 export * as masses from '../masses/index.js';
-export * as papers from '../papers/index.js';
-export * as pictures from '../pictures/index.js';
 export * as sheets from '../sheets/index.js';

@@ -22,7 +22,7 @@ const SHELLS = ['bash', 'zsh', 'fish'];
 /** Everything that completes, for a program with these commands. */
 export async function vocabulary(commands: readonly Command[]): Promise<Vocabulary> {
   const { prescriptions, series, studies } = await import('../rooms.js');
-  const { pictures } = await import('../rooms-more.js');
+  const { pictures } = await import('../rooms-pictures.js');
   const ids = await series.catalogueIds();
   const names = prescriptions.PRESCRIPTIONS.map(({ name }) => name);
   const operandsOf = (command: Command): readonly string[] => {

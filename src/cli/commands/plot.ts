@@ -16,7 +16,7 @@ const MOST_COLUMNS = 100;
 const isForm = (text: string): text is Form => FORMS.some((form) => form === text);
 
 async function kindOf(name: string): Promise<ChartKind> {
-  const { pictures } = await import('../rooms-more.js');
+  const { pictures } = await import('../rooms-pictures.js');
   const found = pictures.chartKind(name);
   if (found !== undefined) return found;
   const { series } = await import('../rooms.js');
@@ -48,7 +48,7 @@ function formOf({ given, surroundings }: Call): Form | 'terminal' {
 }
 
 async function sizeOf(name: string | undefined): Promise<Format> {
-  const { pictures } = await import('../rooms-more.js');
+  const { pictures } = await import('../rooms-pictures.js');
   const format = pictures.formatNamed(name ?? 'column');
   if (format !== undefined) return format;
   throw new UsageError(
@@ -99,7 +99,7 @@ function checkDrawn(kind: ChartKind, chart: Chart, result: SavedResult): void {
 }
 
 async function draw(chart: Chart, call: Call, form: Form | 'terminal'): Promise<string | Uint8Array> {
-  const { pictures } = await import('../rooms-more.js');
+  const { pictures } = await import('../rooms-pictures.js');
   if (form === 'terminal') {
     const { environment } = call.surroundings;
     const { columns } = await presentation(call);
@@ -135,7 +135,7 @@ async function run(call: Call): Promise<number> {
   const result = saved ?? (await resultFor(kind, name, call));
   const chart = kind.draw(result);
   checkDrawn(kind, chart, result);
-  const { pictures } = await import('../rooms-more.js');
+  const { pictures } = await import('../rooms-pictures.js');
   deliver(given.csv === true ? pictures.chartCsv(chart) : await draw(chart, call, form), call);
   return EXIT.done;
 }

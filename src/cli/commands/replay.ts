@@ -69,7 +69,7 @@ export function replayCommand(others: readonly Command[]): Command {
         },
       },
     });
-    const { papers } = await import('../rooms-more.js');
+    const { papers } = await import('../rooms-pictures.js');
     const now: unknown = JSON.parse(json);
     if (typeof now !== 'object' || now === null) throw new Error('a result is an object');
     const replay = papers.compareResults(saved, now);

@@ -34,7 +34,7 @@ async function studied(name: string, call: Call): Promise<SavedResult[]> {
     studies.laplaceIntegrand(series, at, options('integrand')),
     studies.backtest(series, at, { ...options('backtest'), hide: HIDDEN }),
   ];
-  const { pictures } = await import('../rooms-more.js');
+  const { pictures } = await import('../rooms-pictures.js');
   // What went through JSON is what a saved file would hold.
   return results.map((result): unknown => JSON.parse(JSON.stringify(result))).filter(pictures.isSavedResult);
 }
@@ -65,7 +65,7 @@ async function run(call: Call): Promise<number> {
     provenance.push(...(await fileHash(name)));
   }
   provenance.push(['sha256 of the results', sha256(JSON.stringify(results))]);
-  const { papers } = await import('../rooms-more.js');
+  const { papers } = await import('../rooms-pictures.js');
   deliver(papers.reportPage({ results, provenance }), call);
   return EXIT.done;
 }
