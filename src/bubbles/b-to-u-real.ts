@@ -15,6 +15,7 @@ import { formalRational, formalSymbol, powersOfSymbol, rationalOfFormal } from '
 import type { Formal } from '../qcd/index.js';
 import { addLaurent, deriveLaurent, expandFraction, mulLaurent, principal, valueAt, slopeAt } from './laurent.js';
 import type { Fraction, Laurent } from './laurent.js';
+import { remembered } from './tower.js';
 import type { Component, Pole, SineKernel, Tower } from './tower.js';
 
 const q = (n: number, d = 1): Rational => Rational.of(n, d);
@@ -92,7 +93,7 @@ function towerFrom(residues: Residues, start: Rational, first: Rational): Tower 
   return {
     side: 'infrared',
     first,
-    parts: (k) => partsFrom(first.add(q(k)), residues.at(k + skip)),
+    parts: remembered((k) => partsFrom(first.add(q(k)), residues.at(k + skip))),
     decay: {
       kind: 'geometric',
       ratio: 0.39,

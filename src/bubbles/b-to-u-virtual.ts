@@ -14,7 +14,7 @@
  */
 import { Rational } from '../numerics/index.js';
 import { halfBinomial } from './pole-mass.js';
-import { PLAIN } from './tower.js';
+import { PLAIN, remembered } from './tower.js';
 import type { Component, Pole, Tower } from './tower.js';
 
 const q = (n: number, d = 1): Rational => Rational.of(n, d);
@@ -49,13 +49,17 @@ function xSlope(u: Rational): Rational {
 }
 
 /** H_k and O_k. */
-const harmonic = (k: number): Rational => sumTo(k, (j) => q(1, j));
-const odd = (k: number): Rational => sumTo(k, (j) => q(1, 2 * j - 1));
-const sumTo = (k: number, f: (j: number) => Rational): Rational => {
-  let sum = Rational.ZERO;
-  for (let j = 1; j <= k; j++) sum = sum.add(f(j));
-  return sum;
-};
+const harmonic = partialSum((j) => q(1, j));
+const odd = partialSum((j) => q(1, 2 * j - 1));
+
+/** k → Σ_{j=1}^k f(j), with the sums kept. */
+function partialSum(f: (j: number) => Rational): (k: number) => Rational {
+  const sums = [Rational.ZERO];
+  return (k) => {
+    for (let j = sums.length; j <= k; j++) sums.push(sums[j - 1]!.add(f(j)));
+    return sums[k]!;
+  };
+}
 
 function ultraviolet(k: number): readonly Rational[] {
   const u = q(-k);
@@ -104,19 +108,19 @@ const TOWERS: readonly Tower[] = [
   {
     side: 'ultraviolet',
     first: q(1),
-    parts: (k) => ultraviolet(k + 1),
+    parts: remembered((k) => ultraviolet(k + 1)),
     decay: { kind: 'alternating', mass: [100] },
   },
   {
     side: 'infrared',
     first: q(11, 2),
-    parts: (k) => halfInteger(k + 5),
+    parts: remembered((k) => halfInteger(k + 5)),
     decay: { kind: 'alternating', mass: [300, 90] },
   },
   {
     side: 'infrared',
     first: q(5),
-    parts: (k) => integer(k + 5),
+    parts: remembered((k) => integer(k + 5)),
     decay: { kind: 'alternating', mass: [100] },
   },
 ];

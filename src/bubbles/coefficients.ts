@@ -17,6 +17,8 @@ import { subtractionSeries } from './taylor.js';
 import type { Component } from './tower.js';
 import { sumOver } from './tower-sum.js';
 
+/** Bits of the first evaluation: what prescriptions ask for. */
+const FIRST_BITS = 320;
 const FIVE_THIRDS = Rational.of(5, 3);
 
 /** 5/3 + ln(μ²/Q²). */
@@ -113,13 +115,26 @@ export function exactForms(quantity: Quantity, ratio: Exact, length: number): Fo
   });
 }
 
+/** Lists kept, since studies ask for the same ones again and again. */
+const KEPT = 8;
+const kept = new Map<string, readonly Exact[]>();
+
 /** c_0 … c_(length−1), rational where the quantity is, else enclosed to the precision asked. */
-export function chainCoefficients(quantity: Quantity, length: number, ratio: Exact = exact(1)): Exact[] {
+export function chainCoefficients(quantity: Quantity, length: number, ratio: Exact = exact(1)): readonly Exact[] {
+  if (ratio.rational === undefined) return enclosed(quantity, length, ratio);
+  const key = `${quantity.name} ${length} ${ratio.rational.toString()}`;
+  const list = kept.get(key) ?? enclosed(quantity, length, ratio);
+  if (kept.size >= KEPT) kept.clear();
+  kept.set(key, list);
+  return list;
+}
+
+function enclosed(quantity: Quantity, length: number, ratio: Exact): Exact[] {
   const rational = quantity.rational === true ? exactForms(quantity, ratio, length) : undefined;
   if (rational !== undefined) return rational.map(valueOf);
   let last: { readonly prec: number; readonly values: readonly Ball[] } | undefined;
   const at = (prec: number): readonly Ball[] => {
-    for (let work = prec + 64 + 4 * length; last === undefined || last.prec < prec; work *= 2) {
+    for (let work = Math.max(FIRST_BITS, prec + 64) + 4 * length; last === undefined || last.prec < prec; work *= 2) {
       const values = withFactorials(borelCoefficients(quantity, ratio, length, work), work);
       const reached = Math.min(...values.map((v) => R.accuracyBits(v)));
       if (reached >= prec || work > 8 * prec + 4096) last = { prec: Math.max(prec, Math.min(reached, work)), values };

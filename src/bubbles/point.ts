@@ -74,10 +74,14 @@ export function rangeObjection(quantity: Quantity, point: ChainPoint): Refusal |
 /** A value that depends on the working precision, as an Exact that raises it until the digits asked are there. */
 export function sharpened(evaluate: (prec: number) => Ball): Exact {
   return exactReal((prec) => {
-    let best: Ball = R.INDETERMINATE;
+    let reached = -Infinity;
     for (let work = prec + 24; ; work *= 2) {
-      best = evaluate(work);
-      if (R.accuracyBits(best) >= prec || R.isExactZero(best) || work > 4 * prec + 2048) return best;
+      const value = evaluate(work);
+      const accuracy = R.accuracyBits(value);
+      // An input that is known to some digits only stops the gain.
+      const stalled = accuracy > 0 && accuracy <= reached + 2;
+      if (accuracy >= prec || stalled || R.isExactZero(value) || work > 4 * prec + 2048) return value;
+      reached = accuracy;
     }
   });
 }

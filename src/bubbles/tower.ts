@@ -78,6 +78,15 @@ export interface Component {
   readonly rest?: Rest;
 }
 
+/** The parts of a tower, each worked out once. */
+export function remembered(parts: Tower['parts']): Tower['parts'] {
+  const list: (readonly Rational[])[] = [];
+  return (k) => {
+    for (let n = list.length; n <= k; n++) list.push(parts(n));
+    return list[k]!;
+  };
+}
+
 /** Position of the k-th pole of a tower. */
 export function placeOf(tower: Tower, k: number): Rational {
   const size = tower.first.add(Rational.of(k));

@@ -150,6 +150,12 @@ function trial(row: CompareRow, pv: Ball, ambiguity: number): BubbleTrial {
 export const bubbleObjection = (quantity: Quantity, question: BubbleQuestion): Refusal | undefined =>
   rangeObjection(quantity, pointOf(question));
 
+/** The principal value alone, or why there is none. */
+export function bubbleValue({ quantity, digits, ...rest }: BubbleQuestion): string | Refusal {
+  const point = pointOf({ quantity, digits, ...rest });
+  return rangeObjection(quantity, point) ?? ballText(chainSum(quantity, point).pv.ball(bitsFor(digits)), digits);
+}
+
 /** The laboratory, or why there is none at this coupling. */
 export function bubbleLaboratory(question: BubbleQuestion): BubbleResult | Refusal {
   const { quantity, at, order, digits, request } = question;

@@ -14,12 +14,14 @@ export type {
 } from './problem.js';
 export type * from './result.js';
 export type * from './fit/fit-result.js';
-export { bubbleLaboratory } from './bubble-laboratory.js';
+export { bubbleLaboratory, bubbleValue } from './bubble-laboratory.js';
 export { bubbleCut } from './bubble-cut.js';
 export { BUBBLE_VIEWS, bubbleView } from './bubble-views.js';
 export { chainSeries } from './bubble-series.js';
 export type { BubbleQuestion } from './bubble-words.js';
 export type * from './bubble-result.js';
+export { thresholdObjection, thresholdSeries } from './threshold-mass.js';
+export type { ThresholdMass } from './threshold-mass.js';
 export { REPLICA_LIMITS, replicate } from './replicas/study.js';
 export type { RunOptions as ReplicaOptions } from './replicas/run.js';
 export type * from './replicas/result.js';

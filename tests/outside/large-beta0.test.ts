@@ -5,14 +5,29 @@
  */
 import { readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
-import { chainCoefficients, chainSum, quantityNamed } from '../../src/bubbles/index.js';
+import {
+  betaNought,
+  chainCoefficients,
+  chainSum,
+  cutCoefficients,
+  cutSum,
+  factorBall,
+  quantityNamed,
+} from '../../src/bubbles/index.js';
 import type { ChainPoint, Quantity } from '../../src/bubbles/index.js';
-import { R, Rational, exact } from '../../src/numerics/index.js';
+import { R, Rational, exact, toNumberExact } from '../../src/numerics/index.js';
 import type { Ball, Exact } from '../../src/numerics/index.js';
 
 interface Data {
   readonly checks: readonly { readonly id: string; readonly value: string }[];
   readonly coefficients: Readonly<Record<string, readonly string[]>>;
+  readonly cut: {
+    readonly resummed: readonly (readonly [tau: string, high: string, low: string])[];
+    readonly table: Readonly<Record<string, readonly (readonly string[])[]>>;
+  };
+  readonly truncation: Readonly<
+    Record<string, { readonly nmin: number; readonly tmin: string; readonly Smin: string }>
+  >;
 }
 const data = JSON.parse(readFileSync(new URL('data/large-beta0.json', import.meta.url), 'utf8')) as unknown as Data;
 
@@ -104,4 +119,53 @@ test('leading n_f terms found through integer relations', () => {
   expectDigits(leadingFlavours('pole-mass', c, 3).ball(PREC), value('nf.pole.nl3'), 40);
   expectDigits(leadingFlavours('b-to-u-pole', c, 2).ball(PREC), value('nf.b_u.nl2'), 40);
   expectDigits(leadingFlavours('b-to-u-pole', c, 3).ball(PREC), value('nf.b_u.nl3'), 40);
+});
+
+describe('the cut of the Adler function', () => {
+  const adler = named('adler');
+  test.each(data.cut.resummed)('k² > %s Q²', (tau, high, low) => {
+    const cut = rational(tau);
+    // τ_f = μ_f²/Q²: the cut is its root, a rational only for 1/4; elsewhere a rational beyond all digits.
+    const root = R.sqrt(R.fromRational(cut, 400), 400);
+    const near = Rational.of(root.mid, 1n << BigInt(-root.exp));
+    const sum = cutSum(adler, at(3, '0.32'), near);
+    expectDigits(sum.high.ball(PREC), high, 40);
+    expectDigits(sum.low.ball(PREC), low, 38);
+  });
+
+  test.each([
+    ['0.25', '1/2'],
+    ['0.0625', '1/4'],
+  ] as const)('coefficients by momentum, τ_f = %s', (tau, cut) => {
+    const parts = cutCoefficients(adler, exact(1), rational(cut), 33);
+    for (const [n, whole, low, high, window, ultraviolet] of data.cut.table[tau]!) {
+      const rows = [parts.whole, parts.low, parts.high, parts.window, parts.ultraviolet];
+      [whole, low, high, window, ultraviolet].forEach((text, i) =>
+        expectDigits(rows[i]![Number(n)]!.ball(PREC), text!, Math.min(20, significant(text!) - 1)),
+      );
+    }
+  });
+});
+
+test.each([
+  ['adler', 'adler', at(3, '0.32')],
+  ['r-ratio', 'R', at(3, '0.32')],
+  ['tau-width', 'tau', at(3, '0.32')],
+  ['bjorken', 'bj', at(3, '0.32')],
+  ['static-potential', 'pot', at(3, '0.25')],
+  ['pole-mass', 'pole_b', at(4, '0.22')],
+  ['pole-mass', 'pole_t', at(5, '0.108')],
+  ['b-to-u-pole', 'bu_pole', at(4, '0.22')],
+  ['b-to-u-msbar', 'bu_MS', at(4, '0.22')],
+])('least term and partial sum of %s (%s)', (name, id, point) => {
+  const quantity = named(name);
+  const { nmin, tmin, Smin } = data.truncation[id]!;
+  const a = toNumberExact(point.alpha) * R.toNumber(betaNought(point.flavours, 80));
+  const scale = toNumberExact(point.alpha) * R.toNumber(factorBall(quantity.norm.factor, 80));
+  const terms = chainCoefficients(quantity, 16).map((c, n) => scale * toNumberExact(c) * a ** n);
+  // The published tables end at n = 12 but for the width.
+  const shown = terms.slice(0, id.startsWith('bu') ? 16 : 13).map(Math.abs);
+  expect(shown.indexOf(Math.min(...shown))).toBe(nmin);
+  expect(terms[nmin]! / Number(tmin)).toBeCloseTo(1, 12);
+  expect(terms.slice(0, nmin + 1).reduce((s, t) => s + t, 0) / Number(Smin)).toBeCloseTo(1, 12);
 });

@@ -70,9 +70,13 @@ async function run(call: Call): Promise<number> {
   else {
     const { extraction, sheets } = await import('../rooms-more.js');
     const { report } = await import('../rooms.js');
+    if (given.quiet && !given.json) {
+      const value = extraction.bubbleValue(question);
+      deliver(`${typeof value === 'string' ? value : accepted(value, bubbles.name)}\n`, call);
+      return EXIT.done;
+    }
     const result = accepted(extraction.bubbleLaboratory(question), bubbles.name);
     if (given.json) deliver(report.plainJson(result), call);
-    else if (given.quiet) deliver(`${result.sum.pv}\n`, call);
     else deliver(sheets.bubbleText(result, await presentation(call)), call);
   }
   return EXIT.done;
