@@ -151,9 +151,12 @@ export const bubbleObjection = (quantity: Quantity, question: BubbleQuestion): R
   rangeObjection(quantity, pointOf(question));
 
 /** The principal value alone, or why there is none. */
-export function bubbleValue({ quantity, digits, ...rest }: BubbleQuestion): string | Refusal {
-  const point = pointOf({ quantity, digits, ...rest });
-  return rangeObjection(quantity, point) ?? ballText(chainSum(quantity, point).pv.ball(bitsFor(digits)), digits);
+export function bubbleValue(question: BubbleQuestion): { readonly pv: string } | Refusal {
+  const { quantity, digits } = question;
+  const point = pointOf(question);
+  return (
+    rangeObjection(quantity, point) ?? { pv: ballText(chainSum(quantity, point).pv.ball(bitsFor(digits)), digits) }
+  );
 }
 
 /** The laboratory, or why there is none at this coupling. */

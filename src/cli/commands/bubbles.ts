@@ -71,8 +71,8 @@ async function run(call: Call): Promise<number> {
     const { extraction, sheets } = await import('../rooms-more.js');
     const { report } = await import('../rooms.js');
     if (given.quiet && !given.json) {
-      const value = extraction.bubbleValue(question);
-      deliver(`${typeof value === 'string' ? value : accepted(value, bubbles.name)}\n`, call);
+      const { pv } = accepted(extraction.bubbleValue(question), bubbles.name);
+      deliver(`${pv}\n`, call);
       return EXIT.done;
     }
     const result = accepted(extraction.bubbleLaboratory(question), bubbles.name);
