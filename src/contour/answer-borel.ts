@@ -59,10 +59,6 @@ function modelSum(e: ContourQuantity, count: number, digits: number): (ContourBo
   return 'reason' in found ? undefined : { ...found, ...model };
 }
 
-/** The sums of the model through all coefficients, the limit of the contour-improved series among them. */
-export const modelSums = (e: ContourQuantity, digits: number): ContourBorel | undefined =>
-  modelSum(e, e.contour.coefficients.length, digits);
-
 function modelNotes(e: ContourQuantity, { fit, singularities, pv, improved }: ContourBorel & FittedModel): string[] {
   const notes = singularities.map(
     (s, i) =>
@@ -104,6 +100,7 @@ export function modelAnswers(e: ContourQuantity, request: ContourRequest): reado
     variant,
     value: best.pv,
     imaginary: best.imaginary,
+    improvedLimit: best.improved,
     termsUsed: count,
     notes: [],
     central: true,

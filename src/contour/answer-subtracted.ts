@@ -47,12 +47,13 @@ export function subtractionObjection(e: ContourQuantity): Refusal | undefined {
   return undefined;
 }
 
-/** Terms of both series, subtracted; the same factor and power as the terms of the plain ones. */
+/** Terms of both series, subtracted; the same factor and power as the terms of the plain ones. `known` are the A_n. */
 export function subtractedTerms(
   e: ContourQuantity,
   norm: Norm,
   ratio: Rational,
   digits: number,
+  known?: readonly Ball[],
 ): SubtractedTerms | Refusal {
   const { contour: origin, x } = e;
   const mu = e.running?.scaleRatio ?? exact(1);
@@ -67,7 +68,7 @@ export function subtractedTerms(
     digits,
   );
   if ('reason' in parts) return parts;
-  const integrals = contourIntegrals(origin, x, digits);
+  const integrals = known ?? contourIntegrals(origin, x, digits);
   if ('reason' in integrals) return integrals;
   const prec = bitsFor(digits);
   const improved = improvedTerms(origin, integrals, prec);

@@ -16,6 +16,8 @@ export interface ContourSum {
   readonly value: Ball;
   readonly imaginary?: Ball;
   readonly truncation?: number;
+  /** What the contour-improved series of the same transform tends to. */
+  readonly improvedLimit?: Ball;
   readonly termsUsed: number;
   readonly notes: readonly string[];
   readonly central?: boolean;

@@ -34,6 +34,8 @@ const SPARE_NODES = 5;
 /** Rules beyond this size are not tried. */
 const MOST_NODES = 800;
 const SPARE_BITS = 40;
+/** Fewer digits than these are worked out with the nodes of these, which are then shared. */
+const LEVELS = [12, 21, 36] as const;
 /** Digits of a part that is zero, or nearly, beside the others are not waited for. */
 const NEGLIGIBLE = 1e-3;
 
@@ -46,8 +48,29 @@ function weightAt(origin: ContourOrigin, phase: Complex, prec: number): Complex 
   return sum;
 }
 
-/** One rule: the real parts of the integrals. */
-function rule(origin: ContourOrigin, x: Exact, f: CircleIntegrand, n: number, prec: number): readonly Ball[] | Refusal {
+interface Points {
+  readonly x: Exact;
+  readonly rules: Map<string, readonly (CirclePoint & { readonly share: Ball })[]>;
+}
+
+/** The points of a quantity at one coupling: its series, integrals and sums all stand on the same. */
+const kept = new WeakMap<ContourOrigin, Points>();
+
+/** The nodes of a rule with everything that does not depend on the integrand; `share` is the weight of ∫ dφ/π. */
+function pointsOf(
+  origin: ContourOrigin,
+  x: Exact,
+  n: number,
+  prec: number,
+): readonly (CirclePoint & { readonly share: Ball })[] | Refusal {
+  let points = kept.get(origin);
+  if (points?.x !== x) {
+    points = { x, rules: new Map() };
+    kept.set(origin, points);
+  }
+  const key = `${n} ${prec}`;
+  const found = points.rules.get(key);
+  if (found !== undefined) return found;
   const nodes = arcNodes(n, prec);
   const couplings = couplingsOnCircle(
     origin,
@@ -56,13 +79,23 @@ function rule(origin: ContourOrigin, x: Exact, f: CircleIntegrand, n: number, pr
     prec,
   );
   if ('reason' in couplings) return couplings;
-  let sums: Ball[] = [];
-  nodes.forEach(({ angle, weight }, k) => {
+  const made = nodes.map(({ angle, weight }, k) => {
     const phase = cexp({ re: R.ZERO, im: angle }, prec);
-    const point = { phase, angle, weight: weightAt(origin, phase, prec), x: couplings[k]! };
-    const values = f(point, prec).map((v) => R.mul(v.re, weight, prec));
-    sums = sums.length === 0 ? values : sums.map((s, i) => R.add(s, values[i]!, prec));
+    return { phase, angle, weight: weightAt(origin, phase, prec), x: couplings[k]!, share: weight };
   });
+  points.rules.set(key, made);
+  return made;
+}
+
+/** One rule: the real parts of the integrals. */
+function rule(origin: ContourOrigin, x: Exact, f: CircleIntegrand, n: number, prec: number): readonly Ball[] | Refusal {
+  const points = pointsOf(origin, x, n, prec);
+  if ('reason' in points) return points;
+  let sums: Ball[] = [];
+  for (const point of points) {
+    const values = f(point, prec).map((v) => R.mul(v.re, point.share, prec));
+    sums = sums.length === 0 ? values : sums.map((s, i) => R.add(s, values[i]!, prec));
+  }
   return sums;
 }
 
@@ -88,9 +121,10 @@ export function circleIntegrals(
   digits: number,
 ): readonly Ball[] | Refusal {
   const bits = Math.ceil(digits * 3.3219) + 4;
-  const prec = 32 * Math.ceil((bits + SPARE_BITS) / 32);
+  const level = LEVELS.find((l) => digits <= l) ?? digits;
+  const prec = 32 * Math.ceil((level * 3.3219 + 4 + SPARE_BITS) / 32);
   let n = Math.ceil(
-    (digits + 3) / ERROR_POWER / DIGITS_PER_NODE + SPARE_NODES + NODES_PER_DEGREE * origin.integral.length,
+    (level + 3) / ERROR_POWER / DIGITS_PER_NODE + SPARE_NODES + NODES_PER_DEGREE * origin.integral.length,
   );
   let coarse = rule(origin, x, f, n, prec);
   if (isRefusal(coarse)) return coarse;

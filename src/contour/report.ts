@@ -9,7 +9,7 @@ import type { Refusal } from '../qcd/index.js';
 import { decimalText, weightText } from '../series/index.js';
 import { bitsFor, CONTESTED, lastSize } from './answers.js';
 import type { ContourAnswer, ContourQuantity } from './answers.js';
-import { modelAnswers, modelSums, padeAnswers } from './answer-borel.js';
+import { modelAnswers, padeAnswers } from './answer-borel.js';
 import { subtractedTerms, subtractionObjection, USUAL_RATIO } from './answer-subtracted.js';
 import { couplingsOnCircle } from './circle.js';
 import { contourIntegrals, improvedTerms } from './improved.js';
@@ -105,7 +105,7 @@ function borelRow(e: ContourQuantity, method: string, answer: ContourAnswer, dig
     return { method, variant: answer.variant, refused: { reason: answer.reason, remedy: answer.remedy } };
   const prec = bitsFor(digits);
   const front = Math.abs(toNumberExact(e.factor));
-  const im = answer.imaginary;
+  const { imaginary: im, improvedLimit: limit } = answer;
   return {
     method,
     variant: answer.variant,
@@ -115,6 +115,12 @@ function borelRow(e: ContourQuantity, method: string, answer: ContourAnswer, dig
       : {
           imaginary: text(R.mul(e.factor.ball(prec), im, prec), digits),
           ambiguity: rough((Math.abs(R.toNumber(im)) * front) / Math.PI),
+        }),
+    ...(limit === undefined
+      ? {}
+      : {
+          improvedLimit: text(dressed(e, limit, prec), digits),
+          separation: text(R.mul(e.factor.ball(prec), R.sub(answer.value, limit, prec), prec), digits),
         }),
     ...(answer.truncation === undefined ? {} : { truncation: rough(answer.truncation * front) }),
     ...(answer.central === true ? { central: true } : {}),
@@ -126,21 +132,10 @@ function borelRow(e: ContourQuantity, method: string, answer: ContourAnswer, dig
 const dressed = (e: ContourQuantity, value: Ball, prec: number): Ball =>
   R.add(e.additive.ball(prec), R.mul(e.factor.ball(prec), value, prec), prec);
 
-function borelRows(e: ContourQuantity, digits: number): BorelRow[] {
-  const prec = bitsFor(digits);
-  const sums = modelSums(e, digits);
-  const apart =
-    sums === undefined
-      ? {}
-      : {
-          improvedLimit: text(dressed(e, sums.improved, prec), digits),
-          separation: text(R.mul(e.factor.ball(prec), R.sub(sums.pv, sums.improved, prec), prec), digits),
-        };
-  return [
-    ...modelAnswers(e, { digits }).map((a) => ({ ...borelRow(e, 'Singularity model', a, digits), ...apart })),
-    ...padeAnswers(e, { digits }).map((a) => borelRow(e, 'Borel–Padé', a, digits)),
-  ];
-}
+const borelRows = (e: ContourQuantity, digits: number): BorelRow[] => [
+  ...modelAnswers(e, { digits }).map((a) => borelRow(e, 'Singularity model', a, digits)),
+  ...padeAnswers(e, { digits }).map((a) => borelRow(e, 'Borel–Padé', a, digits)),
+];
 
 /** A norm as it was given, or to a few digits. */
 const normText = (value: Exact, digits: number): string =>
@@ -160,6 +155,7 @@ function normOf(e: ContourQuantity, options: ReportOptions): Norm | Refusal {
 function subtractedReport(
   e: ContourQuantity,
   options: ReportOptions,
+  integrals: readonly Ball[] | undefined,
 ): SubtractedReport | { readonly refused: Refusal } {
   const { digits } = options;
   const objection = subtractionObjection(e);
@@ -167,7 +163,7 @@ function subtractedReport(
   const norm = normOf(e, options);
   if ('reason' in norm) return { refused: norm };
   const ratio = options.ratio ?? USUAL_RATIO;
-  const found = subtractedTerms(e, norm, ratio, digits);
+  const found = subtractedTerms(e, norm, ratio, digits, integrals);
   if ('reason' in found) return { refused: found };
   const { fixedOrder, improved, parts } = found;
   const prec = bitsFor(digits);
@@ -254,6 +250,6 @@ export function contourReport(e: ContourQuantity, options: ReportOptions): Conto
         }),
     ...(refusedCircle === undefined ? {} : { refused: refusedCircle }),
     borel: borelRows(e, digits),
-    subtracted: subtractedReport(e, options),
+    subtracted: subtractedReport(e, options, 'reason' in integrals ? undefined : integrals),
   };
 }

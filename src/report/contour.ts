@@ -202,8 +202,16 @@ export function contourLines(result: ContourResult): string {
   if (!('refused' in subtracted)) {
     const last = subtracted.orders.at(-1);
     lines.push(
-      ['condensate-subtracted fixed-order', last?.fixedOrder.sum, last?.fixedOrder.term.replace('-', '')],
-      ['condensate-subtracted contour-improved', last?.improved.sum, last?.improved.term.replace('-', '')],
+      [
+        'condensate-subtracted fixed-order',
+        last?.fixedOrder.sum,
+        shorten(last?.fixedOrder.term.replace('-', '') ?? '', 3),
+      ],
+      [
+        'condensate-subtracted contour-improved',
+        last?.improved.sum,
+        shorten(last?.improved.term.replace('-', '') ?? '', 3),
+      ],
     );
   }
   return lines.map((line) => `${line.map((cell) => cell ?? '').join('\t')}\n`).join('');
