@@ -5,6 +5,7 @@ import { backtest } from './commands/backtest.js';
 import { bubbles } from './commands/bubbles.js';
 import { catalogue } from './commands/catalogue.js';
 import { evolve } from './commands/evolve.js';
+import { extract } from './commands/extract.js';
 import { compare } from './commands/compare.js';
 import { combine } from './commands/combine.js';
 import { contour } from './commands/contour.js';
@@ -32,6 +33,7 @@ const STUDIES: readonly Command[] = [
   backtest,
   contour,
   evolve,
+  extract,
   mass,
   rewrite,
   combine,

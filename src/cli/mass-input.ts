@@ -39,7 +39,7 @@ async function nameOf(option: string, text: string): Promise<DefinitionName> {
 }
 
 /** A definition with its scale: its own, or that of --cutoff. */
-async function placeOf(option: string, text: string, cutoff: number | undefined): Promise<MassPlace> {
+export async function placeOf(option: string, text: string, cutoff: number | undefined): Promise<MassPlace> {
   const { masses } = await import('./rooms-more.js');
   const [, word = '', own] = PLACE.exec(text) ?? [];
   const definition = await nameOf(option, word);
@@ -93,7 +93,7 @@ async function usesCutoff(places: readonly MassPlace[]): Promise<boolean> {
 }
 
 /** The quark by name, or the one whose threshold is nearest on a logarithmic scale. */
-function quarkOf(given: Given, mass: number, thresholds: readonly Threshold[]): Threshold {
+export function quarkOf(given: Given, mass: number, thresholds: readonly Threshold[]): Threshold {
   const far = (t: Threshold): number => Math.abs(Math.log(t.mass / mass));
   const named = thresholds.find((t) => t.name === given.quark);
   if (given.quark !== undefined && named === undefined) {
@@ -107,7 +107,7 @@ function quarkOf(given: Given, mass: number, thresholds: readonly Threshold[]): 
   return found;
 }
 
-function lightOf(given: Given, quark: Threshold): number {
+export function lightOf(given: Given, quark: Threshold): number {
   const most = quark.flavours - 1;
   const { light = most } = given;
   if (light <= most) return light;

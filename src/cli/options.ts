@@ -2,6 +2,7 @@
 import type { OptionSpec, OptionWords } from './option-kinds.js';
 import { BUBBLE_OPTIONS } from './options-bubbles.js';
 import { COMPARE_OPTIONS } from './options-compare.js';
+import { EXTRACT_OPTIONS } from './options-extract.js';
 import { MASS_OPTIONS } from './options-mass.js';
 import { CONTOUR_OPTIONS } from './options-contour.js';
 import { NEW_OPTIONS } from './options-new.js';
@@ -15,6 +16,7 @@ export type OptionName =
   | 'at'
   | keyof typeof QCD_OPTIONS
   | keyof typeof COMPARE_OPTIONS
+  | keyof typeof EXTRACT_OPTIONS
   | keyof typeof BUBBLE_OPTIONS
   | keyof typeof CONTOUR_OPTIONS
   | keyof typeof MASS_OPTIONS
@@ -41,6 +43,7 @@ const MOST_DIGITS = 2000;
 export const OPTIONS: Readonly<Record<OptionName, OptionSpec>> = {
   ...QCD_OPTIONS,
   ...COMPARE_OPTIONS,
+  ...EXTRACT_OPTIONS,
   ...BUBBLE_OPTIONS,
   ...CONTOUR_OPTIONS,
   ...MASS_OPTIONS,

@@ -1,8 +1,12 @@
 /** @module The renormalon ambiguity of R at a solution, under one named convention. */
+import { toNumberExact } from '../numerics/index.js';
+import { imaginaryPieces } from '../prescriptions/index.js';
 import { isRefusal, refuse } from '../qcd/index.js';
 import type { Refusal } from '../qcd/index.js';
 import { ambiguityReport, fixedOrderSeries, termTable } from '../studies/index.js';
 import type { Evaluated } from '../studies/index.js';
+import type { Expansion } from '../series/index.js';
+import type { Operator } from './power-terms.js';
 import type { AmbiguityName } from './problem.js';
 import type { Solved } from './solve.js';
 
@@ -37,14 +41,21 @@ export interface AmbiguityFound {
   readonly leastTermReached: boolean;
 }
 
+/** Two positions are one within this relative distance. */
+const SAME = 1e-9;
 /** Digits of the terms that a convention looks at. */
 const DIGITS = 12;
 
 /**
  * The ambiguity at a solution: from the prescription's own lateral sums, or for a prescription without any from those of the
- * others, most structured first.
+ * others, most structured first. For a condensate: that of its own singularity, where a model tells the singularities apart.
  */
-export function ambiguityAt(solved: Solved, others: readonly Evaluated[], name: AmbiguityName): AmbiguityFound {
+export function ambiguityAt(
+  solved: Solved,
+  others: readonly Evaluated[],
+  name: AmbiguityName,
+  operator?: Operator,
+): AmbiguityFound {
   const { theory, whole } = solved;
   const { stages, prescription } = theory.prediction;
   const stage = stages.central;
@@ -57,6 +68,8 @@ export function ambiguityAt(solved: Solved, others: readonly Evaluated[], name: 
   const values = whole.sum.imaginary === undefined ? others : [own];
   const found = ambiguityReport(stages.series, expanded, stage.growth, table, values);
   if (name === 'none') return { ambiguity: refuse('left out as asked', 'choose a convention'), leastTermReached };
+  const piece = operator === undefined ? undefined : ownPiece(expansion, operator, name);
+  if (piece !== undefined) return { ambiguity: inGeV(piece, operator?.dimension, whole.place.Q), leastTermReached };
   const convention = found.list.find((c) => c.name === CONVENTION[name]);
   if (convention === undefined) {
     const reason = found.list.length === 0 ? found.report.statement : `${CONVENTION[name]} cannot be stated here`;
@@ -64,15 +77,25 @@ export function ambiguityAt(solved: Solved, others: readonly Evaluated[], name: 
   }
   // |Im|/π names its source only beside |Im|.
   const lateral = found.list.find((c) => c.name === CONVENTION.im);
-  const { dimension } = found;
-  const { Q } = whole.place;
-  return {
-    ambiguity: {
-      value: convention.value,
-      origin: name === 'im/pi' ? `${lateral?.origin ?? convention.origin}, divided by π` : convention.origin,
-      ...(dimension === undefined ? {} : { dimension }),
-      ...(dimension === undefined || Q === undefined ? {} : { GeV: convention.value * Q ** dimension }),
-    },
-    leastTermReached,
-  };
+  const origin = name === 'im/pi' ? `${lateral?.origin ?? convention.origin}, divided by π` : convention.origin;
+  return { ambiguity: inGeV({ value: convention.value, origin }, found.dimension, whole.place.Q), leastTermReached };
+}
+
+const inGeV = (a: Ambiguity, dimension: number | undefined, Q: number | undefined): Ambiguity => ({
+  ...a,
+  ...(dimension === undefined ? {} : { dimension }),
+  ...(dimension === undefined || Q === undefined ? {} : { GeV: a.value * Q ** dimension }),
+});
+
+/** What the operator's own singularity contributes to the imaginary part, where a model tells the singularities apart. */
+function ownPiece(e: Expansion, { dimension }: Operator, name: AmbiguityName): Ambiguity | undefined {
+  if (name !== 'im' && name !== 'im/pi') return undefined;
+  const s = e.stated.find((one) => one.dimension !== undefined && toNumberExact(one.dimension) === dimension);
+  const t = s === undefined ? undefined : toNumberExact(s.t);
+  const piece = t === undefined ? undefined : imaginaryPieces(e).find((p) => Math.abs(p.t - t) < SAME * Math.abs(t));
+  if (piece === undefined) return undefined;
+  const origin = `|Im| of the singularity of dimension ${dimension} alone, in the singularity model`;
+  return name === 'im'
+    ? { value: Math.abs(piece.im), origin }
+    : { value: Math.abs(piece.im) / Math.PI, origin: `${origin}, divided by π` };
 }

@@ -29,7 +29,8 @@ function answers(solved: Solved, causes: readonly Cause[]): Sources {
     label,
     shifts: variations.flatMap((v) => ask(v.cause, v.shifts)),
   }));
-  return { sources: sources.filter((s) => s.shifts.length > 0), refusals };
+  // What moves nothing is no source: the threshold of the quark whose mass is extracted, say.
+  return { sources: sources.filter((s) => s.shifts.some((one) => one.shift !== 0)), refusals };
 }
 
 /** A component from sources, with what could not be had named. */

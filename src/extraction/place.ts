@@ -12,7 +12,9 @@ import { INPUTS, evolvePath, isRefusal, refuse } from '../qcd/index.js';
 import type { PathStep, Refusal, Threshold } from '../qcd/index.js';
 import type { Series } from '../series/index.js';
 import { couplingScheme, hardScaleOf, schemeText } from '../studies/index.js';
+import { isDefinitionName } from '../masses/index.js';
 import type { SeriesShifts } from './stage.js';
+import { coefficientDrift } from './threshold-mass.js';
 import type { Datum, Problem, Quantity } from './problem.js';
 
 /** Everything an error budget shifts, as changes from the central values. */
@@ -39,6 +41,8 @@ export interface Place {
   readonly factor: number;
   /** How the coupling was reached. */
   readonly steps: readonly PathStep[];
+  /** Where the coefficients themselves depend on the unknown: their change from the series as it stands. */
+  readonly drift?: readonly number[];
 }
 
 export type PlaceOf = (unknown: Exact, shifts: Shifts) => Place | Refusal;
@@ -94,10 +98,32 @@ export const noScale = (series: Series): Refusal =>
     'give it: --scale-of-measurement 1.777GeV, or leave α_s where it is: --to none',
   );
 
-/** The coupling of a series at a hard scale, from α_s(M_Z). */
-function fromMZ(series: Series, problem: Problem, alphaMZ: number, Q: number, shifts: Shifts): Place | Refusal {
+/** A mass this near to that of a threshold is the mass of that quark: within this factor. Heuristic. */
+const SAME_QUARK = 1.3;
+
+/** The quark whose mass is extracted, by the mass that the series was made for. */
+function ownQuark(problem: Problem, series: Series, { threshold }: Datum): string | undefined {
+  const found = hardScaleOf(series);
+  const about = threshold?.reference ?? (isRefusal(found) ? undefined : toNumberExact(found));
+  if (about === undefined) return undefined;
+  return problem.thresholds.find((t) => Math.abs(Math.log(t.mass / about)) < Math.log(SAME_QUARK))?.name;
+}
+
+/** The coupling of a series at a hard scale, from α_s(M_Z); the threshold of `own` lies at that scale. */
+function fromMZ(
+  series: Series,
+  problem: Problem,
+  alphaMZ: number,
+  Q: number,
+  shifts: Shifts,
+  own?: string,
+): Place | Refusal {
   const to = { scale: Q * ratioOf(series), flavours: series.flavours ?? MZ.flavours };
-  const thresholds = shiftedThresholds(problem.thresholds, shifts.thresholds);
+  const thresholds = shiftedThresholds(problem.thresholds, shifts.thresholds).map((t): Threshold => {
+    if (t.name !== own) return t;
+    const { scale: _scale, ...rest } = t;
+    return { ...rest, mass: Q };
+  });
   const end = evolvePath({ alpha: alphaMZ, from: MZ, to, options: { loops: problem.loops, thresholds } });
   return isRefusal(end) ? end : { alpha: fromDouble(end.alpha), Q, factor: 1, steps: end.steps };
 }
@@ -143,6 +169,14 @@ function givenCoupling(problem: Problem, series: Series, Q: number | undefined):
   return (_, shifts) => fromMZ(series, problem, numberOf(alphaS) + (shifts.alphaS ?? 0), Q, shifts);
 }
 
+/** The coefficients of a threshold mass move with m(m); undefined for a series that stands as it is. */
+function driftOf({ threshold }: Datum): ReturnType<typeof coefficientDrift> | undefined | Refusal {
+  if (threshold === undefined) return undefined;
+  const { definition, scale, light, reference } = threshold;
+  if (!isDefinitionName(definition)) return refuse(`there is no mass definition "${definition}"`, 'give one by --from');
+  return coefficientDrift({ place: { definition, ...(scale === undefined ? {} : { scale }) }, light }, reference);
+}
+
 function massPlace(problem: Problem, series: Series, datum: Datum): PlaceOf | Refusal {
   const { alphaS, mass } = problem;
   const { massPower = 1, norm } = datum;
@@ -150,12 +184,21 @@ function massPlace(problem: Problem, series: Series, datum: Datum): PlaceOf | Re
   const bad = notMSbar(series);
   if (bad !== undefined) return bad;
   const centralNorm = norm === undefined ? 1 : numberOf(norm);
+  const own = ownQuark(problem, series, datum);
+  const drifting = driftOf(datum);
+  if (isRefusal(drifting)) return drifting;
   const fixed = problem.for === 'pole-mass' && mass !== undefined ? mass : undefined;
   return (unknown, shifts) => {
     const m = fixed === undefined ? toNumberExact(unknown) : numberOf(fixed) + (shifts.mass ?? 0);
-    const place = fromMZ(series, problem, numberOf(alphaS) + (shifts.alphaS ?? 0), m, shifts);
+    const place = fromMZ(series, problem, numberOf(alphaS) + (shifts.alphaS ?? 0), m, shifts, own);
     if (isRefusal(place)) return place;
-    return { ...place, factor: (centralNorm + (shifts.norm ?? 0)) * m ** massPower };
+    const drift = drifting?.(m);
+    if (isRefusal(drift)) return drift;
+    return {
+      ...place,
+      factor: (centralNorm + (shifts.norm ?? 0)) * m ** massPower,
+      ...(drift === undefined ? {} : { drift }),
+    };
   };
 }
 

@@ -22,7 +22,7 @@ export interface Prediction {
   /** R by the member, an enclosure of about `digits` digits. */
   value(alpha: Exact, digits: number, shifts?: SeriesShifts): Ball | Refusal;
   /** The family's central sum with its own errors. */
-  whole(alpha: Exact, digits: number): Sum | Refusal;
+  whole(alpha: Exact, digits: number, shifts?: SeriesShifts): Sum | Refusal;
   /** R by the member in doubles; absent where the member has no fast version. */
   readonly quick?: Quick;
   /** The same prediction by the member that a sum at α stands for. */
@@ -31,11 +31,19 @@ export interface Prediction {
 
 const NOTHING = refuse('no value', 'choose another prescription');
 
-/** The central sum of a prescription on the unshifted series, or why there is none. */
-function central(prescription: Prescription, stages: Stages, alpha: Exact, digits: number): Sum | Refusal {
-  const e = stages.central.at(alpha);
+/** The central sum of a prescription, or why there is none. */
+function central(
+  prescription: Prescription,
+  stages: Stages,
+  alpha: Exact,
+  digits: number,
+  shifts: SeriesShifts,
+): Sum | Refusal {
+  const stage = stages.at(shifts);
+  if (isRefusal(stage)) return stage;
+  const e = stage.at(alpha);
   if (isRefusal(e)) return e;
-  const outcomes = prescription.apply(e, stages.central.growth, { digits });
+  const outcomes = prescription.apply(e, stage.growth, { digits });
   const sums = outcomes.filter((o) => o.kind === 'sum');
   const best = sums.find((s) => s.central === true) ?? sums[0];
   if (best !== undefined) return best;
@@ -64,7 +72,7 @@ export function predictionOf(prescription: Prescription, stages: Stages, variant
         ? found.value
         : refuse('the value could not be enclosed', 'choose another prescription');
     },
-    whole: (alpha, digits) => central(prescription, stages, alpha, digits),
+    whole: (alpha, digits, shifts = {}) => central(prescription, stages, alpha, digits, shifts),
     member: (sum, alpha) =>
       predictionOf(prescription, stages, sum.variant, quickOf(prescription.name, stages, sum, alpha)),
   };

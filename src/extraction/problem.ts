@@ -45,6 +45,13 @@ export interface Datum {
   /** The measured quantity is norm · m^massPower · R with R at the scale m; 0: R itself, at its own scale. */
   readonly massPower?: number;
   readonly norm?: Quantity;
+  /** The measured mass is of this definition; the series is its relation to m(m), made at the reference mass in GeV. */
+  readonly threshold?: {
+    readonly definition: string;
+    readonly scale?: number;
+    readonly light: number;
+    readonly reference: number;
+  };
 }
 
 export interface Problem {

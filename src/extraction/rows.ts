@@ -20,7 +20,7 @@ import type { Operator, PowerTerm } from './power-terms.js';
 import { predictionOf } from './prediction.js';
 import type { Datum, Problem } from './problem.js';
 import type { AmbiguityEntry, ExtractRow } from './result.js';
-import { solve } from './solve.js';
+import { FOLLOWED, solve } from './solve.js';
 import type { Search, Solved } from './solve.js';
 import type { Stages } from './stage.js';
 import { theoryOf } from './theory.js';
@@ -83,13 +83,16 @@ export function cautionsOf(solved: Solved): Caution[] {
     const others = solved.otherRoots.map((p) => indicative(p)).join(', ');
     list.push({ code: 'several roots', text: `the measurement is reproduced at ${others} as well` });
   }
-  return [...list, ...solved.notes.map((text) => ({ code: 'solution', text }))];
+  return [
+    ...list,
+    ...solved.notes.map((text) => ({ code: text.startsWith(FOLLOWED) ? 'followed' : 'solution', text })),
+  ];
 }
 
 /** All numbers of a row; `others` lend their lateral sums to a prescription without any. */
 export function rowNumbers(setting: Setting, solved: Solved, others: readonly Evaluated[]): RowNumbers {
   const { problem, datum } = setting;
-  const found = ambiguityAt(solved, others, problem.ambiguityBy);
+  const found = ambiguityAt(solved, others, problem.ambiguityBy, setting.extracted);
   const components = withOverlaps(componentsOf(solved, problem, datum, found.ambiguity), found.leastTermReached);
   const { prescription } = solved.theory.prediction;
   return { prescription, solved, components, found, cautions: cautionsOf(solved) };

@@ -8,9 +8,10 @@ import type { Refusal } from '../qcd/index.js';
 import type { Series } from '../series/index.js';
 import { CORE, fixedOrderSeries } from '../studies/index.js';
 import { checkMeasurement } from './check.js';
-import { numberOf, placeOf } from './place.js';
+import { cutSeries } from './cutoff.js';
+import { hardScale, noScale, numberOf, placeOf } from './place.js';
 import { powerTerms, wilsonOf } from './power-terms.js';
-import type { Operator } from './power-terms.js';
+import type { Operator, PowerTerm } from './power-terms.js';
 import type { Datum, Problem } from './problem.js';
 import { solveRow } from './rows.js';
 import type { Setting } from './rows.js';
@@ -70,6 +71,18 @@ function extractedOf(problem: Problem, series: Series): Operator | undefined | R
   );
 }
 
+/** The series that a condensate with a factorisation scale is added to: nothing of it lies below that scale. */
+function withoutLow(series: Series, terms: readonly PowerTerm[], Q: number | undefined): Series | Refusal {
+  const cuts = terms.flatMap((t) => (t.definition.kind === 'cutoff' ? [{ mu: t.definition.mu, d: t.dimension }] : []));
+  let view: Series | Refusal = series;
+  for (const { mu, d } of cuts) {
+    if (isRefusal(view)) return view;
+    if (Q === undefined) return noScale(series);
+    view = cutSeries(view, d, mu, Q);
+  }
+  return view;
+}
+
 /** Everything that the rows share; a refusal where the question cannot be put. */
 export function settingOf(problem: Problem, series: Series, datum: Datum, common = false): Setting | Refusal {
   const bad = checkMeasurement(problem, series, datum);
@@ -83,10 +96,12 @@ export function settingOf(problem: Problem, series: Series, datum: Datum, common
   const terms = powerTerms(fixedOrderSeries(series), problem, extracted?.name);
   if (isRefusal(terms)) return terms;
   const { order, loops } = problem;
+  const view = withoutLow(series, terms, hardScale(series, datum));
+  if (isRefusal(view)) return view;
   return {
     problem,
     datum,
-    stages: new Stages(series, { loops, ...(order === undefined ? {} : { order }) }),
+    stages: new Stages(view, { loops, ...(order === undefined ? {} : { order }) }),
     placeAt,
     terms,
     ...(search === undefined ? {} : { search }),

@@ -53,6 +53,9 @@ const DOUBLE = 4e-16;
 /** How often the family may name another member at the solution. */
 const MEMBERS = 4;
 
+/** How the note of a member begins that was not searched on a grid. */
+export const FOLLOWED = 'followed from the fixed-order solution';
+
 const fromDouble = (x: number): Exact => exact(Rational.fromNumber(x));
 
 export const short = (x: number): string => String(Number(x.toPrecision(4)));
@@ -136,7 +139,7 @@ function rootsOf(theory: Theory, target: number, search: Search): Roots | Refusa
   const slope = slopeAt(theory, start);
   const near = slope === undefined ? undefined : nearRoot(f, start, slope, DOUBLE);
   if (near === undefined || near < search.from || near > search.to) return onGrid(theory, f, target, search);
-  return { roots: [near], notes: ['followed from the fixed-order solution; other roots were not looked for'] };
+  return { roots: [near], notes: [`${FOLLOWED}; other roots were not looked for`] };
 }
 
 interface Settled extends Roots {

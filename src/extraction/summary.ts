@@ -23,8 +23,9 @@ export interface Quotable {
   readonly cautions: readonly Caution[];
 }
 
-/** Several roots are told, but do not speak against the one that was chosen. */
-const clean = (r: Quotable): boolean => r.cautions.every((c) => c.code === 'several roots');
+/** How the solution was found, and which others there are, does not speak against it. */
+const HARMLESS = ['several roots', 'followed'];
+const clean = (r: Quotable): boolean => r.cautions.every((c) => HARMLESS.includes(c.code));
 
 /** The row that is quoted, and the rule that chose it: the verdict's ladder among the rows without a caution. */
 export function quotedRow<T extends Quotable>(

@@ -44,6 +44,12 @@ const NUMBER_DIGITS = 13;
 /** Digits of a search without a fast version. */
 const ROUGH_DIGITS = 6;
 
+/** Shifts of the coefficients on top of what the place itself does to them. */
+function drifted({ drift }: Place, shifts: Shifts): Shifts {
+  if (drift === undefined) return shifts;
+  return { ...shifts, coefficients: drift.map((d, n) => d + (shifts.coefficients?.[n] ?? 0)) };
+}
+
 const numeric = (b: Ball | Refusal): number | undefined => (isRefusal(b) ? undefined : R.toNumber(b));
 
 /** Σ_d C_d ⟨O_d⟩/Q^d with shifted condensates. */
@@ -67,7 +73,7 @@ export function theoryOf(prediction: Prediction, placeAt: PlaceOf, terms: readon
     value(unknown, digits, shifts = {}) {
       const place = placeAt(unknown, shifts);
       if (isRefusal(place)) return place;
-      const sum = prediction.value(place.alpha, digits, shifts);
+      const sum = prediction.value(place.alpha, digits, drifted(place, shifts));
       if (isRefusal(sum)) return sum;
       const added = powerAt(place, shifts) + (shifts.remainder ?? 0);
       if (!Number.isFinite(added) || !Number.isFinite(place.factor))
@@ -79,7 +85,7 @@ export function theoryOf(prediction: Prediction, placeAt: PlaceOf, terms: readon
     whole(unknown, digits, shifts = {}) {
       const place = placeAt(unknown, shifts);
       if (isRefusal(place)) return place;
-      const sum = prediction.whole(place.alpha, digits);
+      const sum = prediction.whole(place.alpha, digits, drifted(place, {}));
       return isRefusal(sum) ? sum : { sum, place, power: powerAt(place, shifts) };
     },
     rough(unknown, shifts = {}) {
@@ -88,7 +94,7 @@ export function theoryOf(prediction: Prediction, placeAt: PlaceOf, terms: readon
       if (quick === undefined) return numeric(this.value(at, ROUGH_DIGITS, shifts));
       const place = placeAt(at, shifts);
       if (isRefusal(place)) return undefined;
-      const sum = quick(toNumberExact(place.alpha), shifts);
+      const sum = quick(toNumberExact(place.alpha), drifted(place, shifts));
       return sum === undefined ? undefined : place.factor * (sum + powerAt(place, shifts) + (shifts.remainder ?? 0));
     },
     number(unknown, shifts = {}) {

@@ -34,3 +34,6 @@ export { catalogueFolder, catalogueIds, catalogueText, listCatalogue, nearestCat
 export type { CatalogueEntry } from './catalogue.js';
 export { LIMITS } from './limits.js';
 export { parseWeight, weightText } from './weights.js';
+export { loadPlainTree } from './plain-tree.js';
+export type { PlainTree } from './plain-tree.js';
+export { readTextFile } from './bytes.js';

@@ -2,3 +2,4 @@
 export { massLines, massText } from './mass.js';
 export { bubbleCutCsv, bubbleCutText, bubbleViewCsv, bubbleViewText } from './bubble-momenta.js';
 export { bubbleList, bubbleText } from './bubbles.js';
+export { extractLines, extractText } from './extract.js';
