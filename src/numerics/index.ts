@@ -40,6 +40,7 @@ export * from './polynomial/index.js';
 export * from './linear/index.js';
 export * from './quadrature/index.js';
 export { scaledE1, eiScaled } from './special/expint.js';
+export { expintE1 } from './special/expint-real.js';
 export { upperGamma, upperGammaComplex } from './special/upper-gamma.js';
 export { branchSame, branchAlternating, branchCut } from './special/kernels.js';
 export type { BranchValue } from './special/kernels.js';

@@ -20,7 +20,7 @@ function timed<T>(run: () => T, what: string): T {
 }
 
 describe('on the real line', () => {
-  const special = REAL.filter(({ name }) => /Γ|ψ|ζ|F_b|G_b|Ei|tanh/.test(name));
+  const special = REAL.filter(({ name }) => /Γ|ψ|ζ|F_b|G_b|Ei|E₁|tanh/.test(name));
   it.each(special.map((f) => [f.name, f] as const))('%s', (name, { f, domain }) => {
     const points = pointsOf(domain);
     DIGITS.forEach((digits, k) => {

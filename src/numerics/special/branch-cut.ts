@@ -21,7 +21,7 @@ import { Rational } from '../rational.js';
 import { branchAlternating } from './branch-alternating.js';
 import { asymptoticComplex, asymptoticLength } from './asymptotic.js';
 import { columnSumCost, fractionCost, productCost } from './cost.js';
-import { readExponent } from './exponent.js';
+import { ORDER_ZERO, readExponent } from './exponent.js';
 import type { Exponent } from './exponent.js';
 import { exponentialSumComplex, exponentialTerms } from './exponential-sum.js';
 import { gamma } from './gamma.js';
@@ -48,13 +48,11 @@ export function branchCut(b: Exact | Rational | Ball, w: Complex, prec: number):
   return C.round({ re: widenMag(mid.re, error), im: widenMag(mid.im, error) }, prec);
 }
 
-const E1_EXPONENT: Exponent = { value: Rational.ZERO, m: 0, eps: Rational.ZERO, radius: mag(0), approx: 0 };
-
 /** e^w E₁(w) for complex w off the cut, accurate to about prec bits relative to its modulus. INDETERMINATE on the cut. */
 export function scaledE1(w: Complex, prec: number): Complex {
   if (!offCut(w)) return C.INDETERMINATE;
   if (R.isExactZero(w.im)) return C.fromReal(branchAlternating(Rational.ZERO, w.re, prec));
-  const mid = exactCut(E1_EXPONENT, C.exactMid(w), prec);
+  const mid = exactCut(ORDER_ZERO, C.exactMid(w), prec);
   const error = spreadE1(w);
   return C.round({ re: widenMag(mid.re, error), im: widenMag(mid.im, error) }, prec);
 }

@@ -42,3 +42,6 @@ function fromRational(value: Rational, radius: Mag): Exponent | undefined {
   const m = Rational.of(2n * value.num + value.den, 2n * value.den).floor();
   return { value, m: Number(m), eps: value.sub(Rational.of(m)), radius, approx: value.toNumber() };
 }
+
+/** b = 0, exactly: the exponent of E₁ and Ei. */
+export const ORDER_ZERO: Exponent = { value: Rational.ZERO, m: 0, eps: Rational.ZERO, radius: mag(0), approx: 0 };

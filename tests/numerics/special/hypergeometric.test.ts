@@ -11,6 +11,7 @@ import {
   cpow,
   digammaComplex,
   gammaComplex,
+  expintE1,
   gauss,
   kummerM,
   kummerU,
@@ -135,6 +136,19 @@ describe('upper incomplete Γ', () => {
     expect(upperGammaComplex(q('1/2'), { re: R.neg(R.ONE), im: R.ball(0n, 0, 1) }, P)).toBe(C.INDETERMINATE);
     expect(upperGammaComplex(z('1', '1'), { re: R.neg(R.ONE), im: R.ball(0n, 0, 1) }, P)).toBe(C.INDETERMINATE);
     expect(upperGammaComplex(z('1', '90000'), C.ONE, P)).toBe(C.INDETERMINATE);
+  });
+});
+
+describe('E₁(x)', () => {
+  it('is Γ(0, x) and e^−x G₀(x), also on balls', () => {
+    for (const x of ['1e-20', '0.3', '5', '40', '400', '3000']) {
+      expect(R.overlaps(expintE1(b(x), P), upperGamma(Rational.ZERO, b(x), P)), x).toBe(true);
+      const wide = expintE1(R.addRelativeError(b(x), 1, -30), P);
+      for (const t of ['0.9999999991', '1', '1.0000000009']) {
+        expect(R.overlaps(wide, expintE1(R.mul(b(x), b(t), W), P)), `${x} ${t}`).toBe(true);
+      }
+    }
+    expect(expintE1(R.ball(0n, 0, 1), P)).toBe(R.INDETERMINATE);
   });
 });
 
