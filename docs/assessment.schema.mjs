@@ -6,7 +6,9 @@ import { readFileSync, writeFileSync } from 'node:fs';
 import { fileURLToPath, pathToFileURL } from 'node:url';
 import ts from 'typescript';
 
-const SOURCE = new URL('../src/studies/assessment.ts', import.meta.url);
+const SOURCES = ['basics', 'growth', ''].map(
+  (part) => new URL(`../src/studies/assessment${part === '' ? '' : `-${part}`}.ts`, import.meta.url),
+);
 const TARGET = new URL('assessment.schema.json', import.meta.url);
 
 const docOf = (node) => {
@@ -42,6 +44,11 @@ function unionSchema(types) {
   return { anyOf: types.map((type) => schemaOf(type)) };
 }
 
+function tupleSchema(elements) {
+  const items = elements.map((element) => schemaOf(ts.isNamedTupleMember(element) ? element.type : element));
+  return { type: 'array', items, minItems: items.length, maxItems: items.length };
+}
+
 function schemaOf(type) {
   switch (type.kind) {
     case ts.SyntaxKind.StringKeyword:
@@ -56,6 +63,8 @@ function schemaOf(type) {
       return schemaOf(type.type);
     case ts.SyntaxKind.ArrayType:
       return { type: 'array', items: schemaOf(type.elementType) };
+    case ts.SyntaxKind.TupleType:
+      return tupleSchema(type.elements);
     case ts.SyntaxKind.UnionType:
       return unionSchema(type.types);
     case ts.SyntaxKind.LiteralType:
@@ -69,12 +78,13 @@ function schemaOf(type) {
   }
 }
 
+const statementsOf = (path) =>
+  ts.createSourceFile(path, readFileSync(path, 'utf8'), ts.ScriptTarget.ES2022, true).statements;
+
 /** The schema as an object. */
 export function assessmentSchema() {
-  const path = fileURLToPath(SOURCE);
-  const file = ts.createSourceFile(path, readFileSync(path, 'utf8'), ts.ScriptTarget.ES2022, true);
   const definitions = {};
-  for (const statement of file.statements) {
+  for (const statement of SOURCES.flatMap((source) => [...statementsOf(fileURLToPath(source))])) {
     if (ts.isInterfaceDeclaration(statement)) {
       if (statement.heritageClauses !== undefined) throw new Error(`${statement.name.text} extends another type`);
       definitions[statement.name.text] = { ...docOf(statement), ...objectSchema(statement.members) };

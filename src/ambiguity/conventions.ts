@@ -4,6 +4,7 @@
  *   half difference of the lateral sums  I = |Im S₊|
  *   |Im|/π                               A = I/π (default)
  *   least term                           |T_min| ≈ A √(2π/ω),  ω = |t*| / x
+ *   |Im|/π from N                        N (2πd/β₀)(d/2)^{db}/Γ(1+db) (Λ/Q)^d, from the strength of the leading singularity
  *   near-least partial sums              half the range of the partial sums that end on a term |T_n| <= 5/4 |T_min|
  *
  * The conventions differ by factors of 2 and π: never compare numbers across rows without converting.
@@ -15,11 +16,13 @@
 /** Terms within this factor of the least one count as near-least (arXiv:1706.08526, factor from memory). */
 export const NEAR_LEAST_FACTOR = 1.25;
 
-export type ConventionName = '|Im|' | '|Im|/pi' | 'least term' | 'near-least partial sums';
+export type ConventionName = '|Im|' | '|Im|/pi' | 'least term' | 'near-least partial sums' | '|Im|/pi from N';
 
 export interface Convention {
   readonly name: ConventionName;
   readonly value: number;
+  /** Of the value itself, from the errors of its inputs. */
+  readonly error?: number;
   readonly origin: string;
 }
 
@@ -30,6 +33,8 @@ export interface LateralSource {
   readonly size: number;
   /** Which prescription it comes from. */
   readonly origin: string;
+  /** Error of |Im| from the errors of the inputs. */
+  readonly error?: number;
 }
 
 /**
@@ -64,9 +69,15 @@ export function conventions(
     list.push({
       name: '|Im|',
       value: lateral.im,
+      ...(lateral.error === undefined ? {} : { error: lateral.error }),
       origin: `half the difference of the lateral sums of ${lateral.origin}`,
     });
-    list.push({ name: '|Im|/pi', value: lateral.im / Math.PI, origin: `the same, divided by pi` });
+    list.push({
+      name: '|Im|/pi',
+      value: lateral.im / Math.PI,
+      ...(lateral.error === undefined ? {} : { error: lateral.error / Math.PI }),
+      origin: `the same, divided by pi`,
+    });
   }
   if (leastReached) {
     const sizes = terms.map(Math.abs);

@@ -43,7 +43,17 @@ export interface Approximant {
   readonly positiveRealPoles: number;
 }
 
-/** [L/M] of the Borel–Leroy transform with parameter b. @param noise relative one-sigma noise of the coefficients, 0 when exact. */
+interface Kept {
+  readonly prec: number;
+  readonly noise: number;
+  readonly approximant: Approximant;
+}
+
+const kept = new WeakMap<readonly Exact[], Map<string, Kept>>();
+
+/**
+ * [L/M] of the Borel–Leroy transform with parameter b, made once for a list: enclosures that are sharp enough for one
+ * question serve the next one too. @param noise relative one-sigma noise of the coefficients, 0 when exact. */
 export function approximate(
   c: readonly Exact[],
   b: Rational,
@@ -52,7 +62,14 @@ export function approximate(
   prec: number,
   noise: number,
 ): Approximant {
-  return approximateTransformed(borelTransform(c.slice(0, L + M + 1), b), L, M, prec, noise);
+  const entries = kept.get(c) ?? new Map<string, Kept>();
+  kept.set(c, entries);
+  const key = `${L}/${M} ${b.toString()}`;
+  const before = entries.get(key);
+  if (before !== undefined && before.prec >= prec && before.noise === noise) return before.approximant;
+  const approximant = approximateTransformed(borelTransform(c.slice(0, L + M + 1), b), L, M, prec, noise);
+  entries.set(key, { prec, noise, approximant });
+  return approximant;
 }
 
 /** [L/M] of an already transformed coefficient list. */

@@ -2,6 +2,7 @@
 import { COMMANDS } from './commands.js';
 import { EXIT, tell, UsageError } from './faults.js';
 import { commandHelp, generalHelp } from './help.js';
+import { plainText } from './letters.js';
 import { OPTION_NAMES, OPTIONS } from './options.js';
 import { parse } from './parse.js';
 import type { Surroundings } from './surroundings.js';
@@ -78,7 +79,7 @@ export async function run(argv: readonly string[], surroundings: Surroundings): 
   } catch (error) {
     const debug = (surroundings.environment['LEASTTERM_DEBUG'] ?? '') !== '';
     const { text, exitCode } = tell(error, debug);
-    surroundings.stderr.write(text);
+    surroundings.stderr.write(await plainText(text, surroundings));
     return exitCode;
   }
 }

@@ -58,7 +58,8 @@ export function classifyShort(p: Prepared, rows: readonly RatioRow[]): Classifie
   if (tame && k <= 1 / RULE.veryStrong && levelling(p)) return made('geometric');
   const falls = value <= RULE.convergent && before !== undefined && before <= RULE.convergent;
   if (tame && k <= 1 / RULE.positive && falls) return made('convergent');
-  const evidence = `the Bayes factor for factorial against geometric growth is ${short(k, 2)} from ${n} coefficients`;
+  const few = n <= RULE.few ? 'the series is too short to tell: ' : '';
+  const evidence = `${few}the Bayes factor for factorial against geometric growth is ${short(k, 2)} from ${n} coefficients`;
   const moved = settling(rows);
   return k >= RULE.positive && !settled && moved !== undefined
     ? undecided(

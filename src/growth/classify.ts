@@ -13,7 +13,9 @@ export function classify(p: Prepared, rows: readonly RatioRow[]): Classified {
   const n = p.nonZero.length;
   if (n < MIN_COEFFICIENTS) {
     return undecided(
-      n === 0 ? 'no coefficient is known' : `${plural(n, 'known coefficient')}: growth cannot be determined`,
+      n === 0
+        ? 'no coefficient is known'
+        : `the series is too short: ${plural(n, 'known coefficient')}, and nothing is said of growth from fewer than ${MIN_COEFFICIENTS}`,
     );
   }
   const { unknown, unknownFrom } = p.sequence;

@@ -20,6 +20,7 @@ import { nonZero, readTerms, type Reading } from './reading.js';
 import { shortLines } from './short-lines.js';
 import { statementOf } from './statement.js';
 import { complexPair, recurrence } from './two-root.js';
+import { MIN_COEFFICIENTS } from './verdict-rule.js';
 import type { Classified } from './verdict-rule.js';
 
 /** Coefficients from which on a verdict may be called converged, and the error of the order it needs. */
@@ -125,9 +126,16 @@ function standingOf(p: Prepared, c: Classified, nearest: FoundSingularity | unde
   return c.beyond || (c.order !== undefined && c.order.error < CONVERGED.order) ? 'converged' : 'indicative';
 }
 
+/** Two or three signs as they are: no more than a description. */
+function shortPattern({ nonZero: points }: Prepared): Growth['signPattern'] {
+  const changes = points.slice(1).filter((point, i) => point.sign !== points[i]!.sign).length;
+  return changes === 0 ? 'same' : changes === points.length - 1 ? 'alternating' : 'irregular';
+}
+
 function patternOf(p: Prepared, located: Located | undefined): Growth['signPattern'] {
   if (p.nonZero.length < 2) return 'none';
   if (p.sequence.stride > 1) return 'lacunary';
+  if (p.nonZero.length < MIN_COEFFICIENTS) return shortPattern(p);
   return located?.quasiPeriodic === true ? 'quasi-periodic' : p.pattern.kind;
 }
 
@@ -152,7 +160,7 @@ export function diagnoseGrowth(input: GrowthInput): Growth {
   const usable = usableOf(p);
   const shown = c.verdict === 'factorial' || c.verdict === 'undecided' ? shortLines(p, input) : { lines: [] };
   const flags = flagsOf(p, c, located, rows, input, shown.opposite);
-  const tooShort = p.nonZero.length < 4;
+  const tooShort = p.nonZero.length < MIN_COEFFICIENTS;
   const nearest = located?.nearest;
   return {
     verdict: c.verdict,
@@ -165,13 +173,15 @@ export function diagnoseGrowth(input: GrowthInput): Growth {
     ...(radius === undefined ? {} : { radius }),
     stride,
     ratios: shownRows,
-    ...(p.comparisonAll === undefined ? {} : { comparison: p.comparisonAll }),
-    predictions: predictions(
-      p.tail.length >= 4 ? p.tail : p.nonZero,
-      stride,
-      p.pattern.kind === 'irregular' ? undefined : p.pattern.kind,
-      p.comparison?.shift ?? 0,
-    ),
+    ...(p.comparisonAll === undefined || tooShort ? {} : { comparison: p.comparisonAll }),
+    predictions: tooShort
+      ? []
+      : predictions(
+          p.tail.length >= 4 ? p.tail : p.nonZero,
+          stride,
+          p.pattern.kind === 'irregular' ? undefined : p.pattern.kind,
+          p.comparison?.shift ?? 0,
+        ),
     competition: [...(located?.competition ?? []), ...shown.lines],
     ...(usable === undefined ? {} : { usableCoefficients: usable }),
     flags: tooShort ? [{ code: 'too-short', text: c.reason }, ...flags] : flags,

@@ -32,6 +32,8 @@ export const SHORT_RULE = {
   convergent: -0.6,
   /** Fewest coefficients for "geometric" and "convergent": four or five terms of an asymptotic series often look so. */
   tameCoefficients: 6,
+  /** Up to this many coefficients an open question is one of length. */
+  few: 5,
   /** Superfactorial: fewest coefficients, and steadiness of the local order. */
   superCoefficients: 7,
   superSteady: 0.2,

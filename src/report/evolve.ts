@@ -37,14 +37,20 @@ function valueFacts(result: EvolveResult): Fact[] {
 
 function matchingFacts(result: EvolveResult): Fact[] {
   if (result.matching === undefined) return [];
-  const rows = result.matching.crossings.map((c): Fact => {
-    const where = `${c.threshold} crossed at ${c.factor} times its scale`;
+  const { matching } = result;
+  const rows = matching.crossings.map((c): Fact => {
+    const where = `${c.threshold} crossed at ${c.factor} times its scale${c.limited === true ? ', 1 GeV' : ''}`;
     return {
       label: where,
       text: c.value === undefined ? `refused: ${c.refused?.reason ?? ''}` : shorten(c.value, PATH_DIGITS),
     };
   });
-  return [{ label: 'matching spread', text: `± ${rough(result.matching.spread)}` }, ...rows];
+  const shares = matching.parts.map((p) => `${p.threshold} ± ${rough(p.spread)}`).join(', ');
+  const most = matching.parts.length > 1 ? `; the ${matching.dominant} threshold dominates (${shares})` : '';
+  const floor = matching.crossings.some((c) => c.limited === true)
+    ? '; no threshold is crossed below 1 GeV, where the truncated running means little'
+    : '';
+  return [{ label: 'matching spread', text: `± ${rough(matching.spread)}${most}${floor}` }, ...rows];
 }
 
 const lambdaFacts = (result: EvolveResult): Fact[] =>

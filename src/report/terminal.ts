@@ -5,7 +5,7 @@ import type { Paint } from './layout/paint.js';
 import { unpainted } from './layout/paint.js';
 import { ambiguitySection } from './sections/ambiguity.js';
 import { growthSection } from './sections/growth.js';
-import { planeSection } from './sections/plane.js';
+import { entryName, planeSection } from './sections/plane.js';
 import { couplingFacts, readSection } from './sections/read.js';
 import { sumSection } from './sections/sum.js';
 import { termsSection } from './sections/terms.js';
@@ -37,7 +37,7 @@ export function assessmentText(assessment: Assessment, options: TerminalOptions 
   planeSection(page, assessment.borelPlane);
   valuesSection(page, assessment.values);
   ambiguitySection(page, assessment);
-  truncationSection(page, assessment.optimalTruncation);
+  truncationSection(page, assessment.optimalTruncation, assessment.coupling.name);
   verdictSection(page, assessment.verdict, assessment.cautions);
   return page.text();
 }
@@ -82,9 +82,9 @@ export function bareValues(values: readonly ValueEntry[]): string {
     .join('');
 }
 
-/** The bare poles, one a line: entry, real part, imaginary part, set off by tabs. */
+/** The bare poles, one a line: entry with its Leroy parameter, real part, imaginary part, set off by tabs. */
 export function planeLines(plane: Assessment['borelPlane']): string {
   return plane.entries
-    .flatMap((entry) => entry.poles.map((pole) => `${entry.label}\t${pole.re}\t${pole.im ?? '0'}\n`))
+    .flatMap((entry) => entry.poles.map((pole) => `${entryName(entry)}\t${pole.re}\t${pole.im ?? '0'}\n`))
     .join('');
 }

@@ -22,8 +22,8 @@ export const FORMAT = 1;
 /** Every field of a series file, in the order in which they are written. */
 export const FIELDS = [
   'format', 'title', 'quantity', 'sources', 'notes', 'invented', 'coupling', 'variable', 'first power', 'scheme', 'flavours',
-  'kind', 'weight', 'flavour choices', 'scale ratio', 'hard scale', 'factor', 'additive', 'constants', 'coefficients', 'correlation',
-  'singularities', 'condensates', 'strong coupling', 'measurement', 'checks',
+  'kind', 'weight', 'flavour choices', 'scale ratio', 'hard scale', 'unit', 'factor', 'additive', 'constants', 'coefficients', 'correlation',
+  'singularities', 'condensates', 'strong coupling', 'bubble chain', 'measurement', 'checks',
 ] as const; // prettier-ignore
 
 export const DIVISORS: readonly Divisor[] = ['1', 'pi', '2*pi', '4*pi'];
@@ -68,7 +68,9 @@ export function readSeries(entry: Entry, id: string, reader: FieldReader, flavou
     flavours: reader.numbers.flavours,
     scaleRatio: reader.exact(group.get('scale ratio'), 'scale ratio', 'positive'),
     hardScale: readScale(group.get('hard scale'), reader),
+    unit: reader.text(group.get('unit'), 'unit'),
     strongCoupling: readStrongCoupling(group.get('strong coupling'), reader),
+    bubbleChain: reader.text(group.get('bubble chain'), 'bubble chain'),
     correlation: readCorrelation(group.get('correlation'), coefficients?.length ?? 0, reader),
     measurement: measurement && {
       value: measurement.value,

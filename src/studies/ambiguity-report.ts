@@ -1,13 +1,17 @@
-/** @module Ambiguity, power correction and optimal truncation as the result states them. */
-import { condensateShift, conventions, inGeV, powerOf, predictOptimum } from '../ambiguity/index.js';
+/** @module The ambiguity under its conventions and the power correction, as the result states them. */
+import { condensateShift, conventions, inGeV, powerOf } from '../ambiguity/index.js';
 import type { Convention, LateralSource } from '../ambiguity/index.js';
-import { R, toNumberExact } from '../numerics/index.js';
+import { mulExact, R, toNumberExact } from '../numerics/index.js';
 import type { Growth } from '../growth/index.js';
+import { divisorSize } from '../qcd/index.js';
 import { imaginaryPieces } from '../prescriptions/index.js';
 import type { Series } from '../series/index.js';
-import type { AmbiguityReport, OptimalTruncationReport, PowerCorrectionReport } from './assessment.js';
+import type { AmbiguityReport, PowerCorrectionReport } from './assessment.js';
 import type { Expanded } from './expand.js';
-import { ballText, exactText, indicative } from './figures.js';
+import { estimateText, exactText, indicative } from './figures.js';
+import { LAMBDA_LOOPS } from './lambda.js';
+import { ambiguityOverPower } from './strength-report.js';
+import type { LeadingStrength } from './strength-report.js';
 import { hardScaleGeV, lambdaOverQ } from './summary.js';
 import type { TermTable } from './terms.js';
 import type { Evaluated } from './values.js';
@@ -15,8 +19,8 @@ import type { Evaluated } from './values.js';
 /** Prescriptions whose imaginary part states the ambiguity, most structured first. */
 const LATERAL_ORDER = ['singularity-model', 'borel-leroy-pade', 'borel-pade', 'borel-pade-2', 'terminant'];
 
-/** The lateral sums that the ambiguity is read from: a converged sum first, then the order above. */
-export function lateralSource(values: readonly Evaluated[]): LateralSource | undefined {
+/** The lateral sums that the ambiguity is read from: those of the preferred value, a converged sum, then the order above. */
+export function lateralSource(values: readonly Evaluated[], preferred?: Evaluated): LateralSource | undefined {
   const candidates = values.flatMap((v) =>
     v.outcome.kind === 'sum' && v.outcome.central === true && v.outcome.imaginary !== undefined
       ? [{ v, im: v.outcome.imaginary, trust: v.outcome.trust }]
@@ -25,6 +29,7 @@ export function lateralSource(values: readonly Evaluated[]): LateralSource | und
   const rank = (name: string): number => LATERAL_ORDER.indexOf(name);
   candidates.sort(
     (a, b) =>
+      Number(b.v === preferred) - Number(a.v === preferred) ||
       Number(b.trust === 'converged') - Number(a.trust === 'converged') ||
       rank(a.v.prescription.name) - rank(b.v.prescription.name),
   );
@@ -35,6 +40,7 @@ export function lateralSource(values: readonly Evaluated[]): LateralSource | und
         im: Math.abs(R.toNumber(best.im)),
         size: best.v.outcome.kind === 'sum' ? Math.abs(R.toNumber(best.v.outcome.value)) : 0,
         origin: `${best.v.prescription.name} ${best.v.outcome.variant}`,
+        ...(best.v.imaginaryInput === undefined ? {} : { error: best.v.imaginaryInput }),
       };
 }
 
@@ -44,10 +50,11 @@ export interface AmbiguityFound {
   /** |Im|/π, or the least term where no lateral sums stand; undefined when there is none to state. */
   readonly chosen?: Convention;
   readonly dimension?: number;
+  readonly fromStrength?: NonNullable<PowerCorrectionReport['fromStrength']>;
 }
 
 /** Has the growth an ambiguity at all? */
-const DIVERGENT = new Set(['factorial', 'superfactorial', 'undecided', 'subfactorial']);
+export const DIVERGENT: ReadonlySet<string> = new Set(['factorial', 'superfactorial', 'undecided', 'subfactorial']);
 
 export function ambiguityReport(
   series: Series,
@@ -55,6 +62,7 @@ export function ambiguityReport(
   growth: Growth,
   table: TermTable,
   values: readonly Evaluated[],
+  more: { readonly preferred?: Evaluated; readonly strength?: LeadingStrength } = {},
 ): AmbiguityFound {
   const none = (statement: string): AmbiguityFound => ({ report: { conventions: [], statement }, list: [] });
   if (!DIVERGENT.has(growth.verdict)) return none(`the growth is ${growth.verdict}: there is no ambiguity to quote`);
@@ -62,7 +70,7 @@ export function ambiguityReport(
     return none('the coefficient errors exceed the coefficients: no ambiguity can be stated');
   if (growth.verdict === 'superfactorial' && growth.order !== 2)
     return none('the coefficients grow faster than any (kn)!: no ambiguity can be stated');
-  const found = lateralSource(values);
+  const found = lateralSource(values, more.preferred);
   // An approximant without a positive pole proves nothing where neither the terms nor the file tell of a singularity.
   const lateral =
     found?.im === 0 && growth.verdict === 'undecided' && expanded.expansion.stated.length === 0 ? undefined : found;
@@ -71,7 +79,11 @@ export function ambiguityReport(
   const powers = numbers.map((_, n) => n + expanded.expansion.power);
   const reached = table.least?.reached === true;
   const summable = lateral !== undefined && lateral.im === 0;
-  const list = conventions(numbers, sums, powers, reached, lateral);
+  const own = fromStrength(series, expanded, more.strength);
+  const list = [
+    ...conventions(numbers, sums, powers, reached, lateral),
+    ...(own === undefined || summable ? [] : [own.convention]),
+  ];
   if (list.length === 0)
     return none('no lateral sums stand and the least term is not reached: no ambiguity can be stated from these terms');
   const dimension = leadingDimension(expanded);
@@ -86,6 +98,7 @@ export function ambiguityReport(
       conventions: list.map((c) => ({
         name: c.name,
         value: indicative(c.value, 6),
+        ...(c.error === undefined || !(c.error > 0) ? {} : { error: indicative(c.error, 2) }),
         ...(value > 0 ? { relative: indicative(c.value / value, 3) } : {}),
         ...(Q === undefined || dimension === undefined ? {} : { GeV: indicative(inGeV(c.value, Q, dimension), 4) }),
         standing: 'indicative' as const,
@@ -96,7 +109,52 @@ export function ambiguityReport(
     },
     list,
     chosen,
+    ...(own === undefined ? {} : { fromStrength: own.power }),
     ...(dimension === undefined ? {} : { dimension }),
+  };
+}
+
+/** |Im|/π from the strength N and Λ_MSbar; undefined where one of them is not known. */
+function fromStrength(
+  series: Series,
+  expanded: Expanded,
+  strength: LeadingStrength | undefined,
+): { convention: Convention; power: NonNullable<PowerCorrectionReport['fromStrength']> } | undefined {
+  const { flavours } = series;
+  const alpha = series.coupling.plain
+    ? expanded.expansion.x
+    : mulExact(expanded.expansion.x, divisorSize(series.coupling.divisor));
+  const lambda = lambdaOverQ(series, alpha);
+  if (strength === undefined || flavours === undefined || lambda === undefined) return undefined;
+  const over = ambiguityOverPower(strength, expanded, flavours);
+  if (over === undefined) return undefined;
+  const d = strength.dimension;
+  const Q = hardScaleGeV(series);
+  const power = powerOf(lambda, d);
+  const [value, error] = [over.value * power, over.error * power];
+  const texts = estimateText(value, error);
+  const ratio = estimateText(over.value, over.error);
+  const energy = Q === undefined ? undefined : inGeV(value, Q, d);
+  return {
+    convention: {
+      name: '|Im|/pi from N',
+      value,
+      error,
+      origin: `the strength N of the growth section and Lambda, all corrections resummed in it`,
+    },
+    power: {
+      overPower: ratio.value,
+      overPowerError: ratio.error,
+      value: texts.value,
+      error: texts.error,
+      ...(energy === undefined
+        ? {}
+        : {
+            GeV: { ...estimateText(energy, (energy * over.error) / over.value), power: String(d) },
+            ...(d > 1 ? { root: indicative(energy ** (1 / d)) } : {}),
+          }),
+      lambda: `Lambda_MSbar, n_f = ${flavours}, exact definition at ${LAMBDA_LOOPS} loops`,
+    },
   };
 }
 
@@ -104,6 +162,25 @@ export function ambiguityReport(
 function leadingDimension(expanded: Expanded): number | undefined {
   const s = expanded.expansion.stated.find((one) => toNumberExact(one.t) > 0);
   return s?.dimension === undefined ? undefined : toNumberExact(s.dimension);
+}
+
+/** Why a condensate's shift, or its size against the value, is not stated. */
+function lackingOf(has: {
+  readonly im: number | undefined;
+  readonly Q: number | undefined;
+  readonly wilson: number | undefined;
+  readonly fileValue: number | undefined;
+}): string[] {
+  return [
+    ...(has.wilson === undefined
+      ? ['no Wilson coefficient in the file']
+      : has.wilson === 0
+        ? ['Wilson coefficient 0']
+        : []),
+    ...(has.im === undefined ? ['no imaginary part of its own dimension'] : []),
+    ...(has.Q === undefined ? ['no hard scale'] : []),
+    ...(has.fileValue === undefined ? ['no value in the file'] : []),
+  ];
 }
 
 export function powerReport(
@@ -138,6 +215,7 @@ export function powerReport(
       Q === undefined || wilson === undefined || wilson === 0 ? undefined : condensateShift(amount, Q, dim, wilson);
     const both = im === undefined ? undefined : { pi: shift(im / Math.PI), full: shift(im) };
     const fileValue = c.value === undefined ? undefined : Math.abs(toNumberExact(c.value.value));
+    const lacking = lackingOf({ im, Q, wilson, fileValue });
     return {
       name: c.name,
       dimension: String(dim),
@@ -148,6 +226,7 @@ export function powerReport(
       ...(both?.pi === undefined || fileValue === undefined || fileValue === 0
         ? {}
         : { shiftOverValue: indicative(both.pi / fileValue, 3) }),
+      ...(lacking.length === 0 ? {} : { missing: lacking.join(', ') }),
     };
   });
   const missing = [
@@ -160,76 +239,11 @@ export function powerReport(
       ? {}
       : { power: indicative(power), lambdaOverQ: indicative(lambda!), inPowerUnits: indicative(A / power) }),
     ...(Q === undefined ? {} : { GeV: { value: indicative(inGeV(A, Q, d)), power: String(d) } }),
+    ...(found.fromStrength === undefined ? {} : { fromStrength: found.fromStrength }),
     condensates,
     statement:
       missing.length === 0
         ? `the ambiguity (${found.chosen!.name}) is a power correction of dimension ${d}; a condensate defined with the principal value shifts by the amount shown when the prescription changes`
         : `not known: ${missing.join(', ')}`,
-  };
-}
-
-export function optimalReport(
-  expanded: Expanded,
-  growth: Growth,
-  table: TermTable,
-  digits: number,
-): OptimalTruncationReport {
-  const e = expanded.expansion;
-  if (!DIVERGENT.has(growth.verdict))
-    return {
-      status: 'not applicable',
-      statement: `the growth is ${growth.verdict}: more terms only help`,
-      standing: growth.standing,
-    };
-  const least = table.least;
-  const predicted = prediction(expanded, growth);
-  const observed =
-    least === undefined || !least.reached
-      ? undefined
-      : {
-          power: least.index + e.power,
-          ...(least.tiedWith === undefined ? {} : { tiedWith: least.tiedWith + e.power }),
-          term: ballText(table.terms[least.index]!, Math.min(digits, 8)),
-          sumThrough: ballText(table.sums[least.index + 1]!, digits),
-          sumBefore: ballText(table.sums[least.index]!, digits),
-        };
-  const competing = growth.flags.some((f) => f.code === 'competing-singularities');
-  return {
-    ...(observed === undefined ? {} : { observed }),
-    status: observed === undefined ? 'not reached' : 'reached',
-    ...(predicted === undefined ? {} : { predicted }),
-    ...(observed === undefined
-      ? {}
-      : { errorOfStopping: indicative(Math.abs(R.toNumber(table.terms[least!.index]!)), 3) }),
-    statement:
-      (observed === undefined
-        ? 'the terms still fall at the last known order: the series has not begun to diverge at this coupling'
-        : `the term of order ${observed.power} is the smallest; stopping there leaves an error of its size`) +
-      (competing ? '; singularities compete, so the smallest term alone does not mark the best cut' : ''),
-    standing: 'indicative',
-  };
-}
-
-/** From the stated leading singularity, or from the one that the terms show. */
-function prediction(expanded: Expanded, growth: Growth): OptimalTruncationReport['predicted'] {
-  const e = expanded.expansion;
-  const s = e.stated[0];
-  const x = toNumberExact(e.x);
-  const found = growth.nearest;
-  const source =
-    s?.exponent !== undefined
-      ? { t: toNumberExact(s.t), b: toNumberExact(s.exponent) - 1, origin: s.origin }
-      : found?.exponent !== undefined && found.kind !== 'complex pair'
-        ? { t: found.t.value, b: found.exponent.value - 1, origin: 'the position and exponent found in the terms' }
-        : undefined;
-  if (source === undefined || !(x > 0)) return undefined;
-  const p = predictOptimum(source.t, source.b, x);
-  if (!(p.leastTermAt > 0)) return undefined;
-  return {
-    leastTermAt: indicative(p.leastTermAt, 3),
-    ...(source.t > 0 ? { principalValueAt: indicative(p.principalValueAt, 3) } : {}),
-    x: indicative(p.omega, 5),
-    b: indicative(p.b, 5),
-    origin: source.origin,
   };
 }

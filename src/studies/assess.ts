@@ -7,21 +7,25 @@ import { toNumberExact } from '../numerics/index.js';
 import { PRESCRIPTIONS } from '../prescriptions/index.js';
 import type { Prescription, Sum } from '../prescriptions/index.js';
 import type { Series, Uncertain } from '../series/index.js';
-import { ambiguityReport, optimalReport, powerReport } from './ambiguity-report.js';
+import { ambiguityReport, powerReport } from './ambiguity-report.js';
 import type { Assessment, ValueEntry, ValueRecord } from './assessment.js';
 import { recordCautions, records, SEEN_OF_LONG } from './backtesting/record.js';
 import { cautions } from './cautions.js';
 import { fixedOrderSeries } from './contour/moment.js';
+import { keptCorrelation } from './correlation.js';
 import { checkCoupling } from './coupling-range.js';
 import { expand } from './expand.js';
 import type { Expanded } from './expand.js';
 import { growthReport } from './growth-report.js';
+import { optimalReport } from './optimal-report.js';
 import { planeReport } from './plane-report.js';
+import { leadingStrength, strengthReport } from './strength-report.js';
 import { couplingSummary, relativeCouplingError, seriesSummary } from './summary.js';
 import { termTable } from './terms.js';
 import { evaluateAll, valueEntry } from './values.js';
 import type { Evaluated, Inputs } from './values.js';
-import { verdict } from './verdict.js';
+import { inUnit } from './units.js';
+import { picked, verdict } from './verdict.js';
 import type { VerdictRule } from './verdict-rule.js';
 import { VERSION } from './version.js';
 
@@ -64,10 +68,7 @@ const worthARow = (v: Evaluated, growth: Growth): boolean =>
 
 /** Input errors of an expanded series. */
 function inputsOf(series: Series, expanded: Expanded, at: Uncertain): Inputs {
-  const kept = expanded.expansion.coefficients.length;
-  const correlation = series.correlation
-    ?.slice(expanded.leadingZeros, expanded.leadingZeros + kept)
-    .map((row) => row.slice(expanded.leadingZeros, expanded.leadingZeros + kept).map((q) => q.toNumber()));
+  const correlation = keptCorrelation(series, expanded);
   return {
     xError: relativeCouplingError(at),
     coefficientErrors: expanded.errors,
@@ -171,7 +172,13 @@ export function assess(given: Series, at: Uncertain, options: AssessOptions): As
   const values = options.by === undefined ? all.filter((v) => worthARow(v, growth)) : all;
   const alpha = toNumberExact(at.value);
   const table = termTable(series, expanded, options.digits);
-  const ambiguity = ambiguityReport(series, expanded, growth, table, values);
+  const count = expanded.expansion.coefficients.length;
+  const preferred = picked(values, growth, count, options.verdictRule);
+  const strength = leadingStrength(series, expanded);
+  const ambiguity = ambiguityReport(series, expanded, growth, table, values, {
+    ...(preferred === undefined ? {} : { preferred }),
+    ...(strength === undefined ? {} : { strength }),
+  });
   const record = shortRecords(series, expanded, values);
   const rows: ValueEntry[] = values.map((v) => withRecord(valueEntry(v, options.digits), record));
   return {
@@ -180,13 +187,13 @@ export function assess(given: Series, at: Uncertain, options: AssessOptions): As
     series: seriesSummary(series, expanded),
     coupling: couplingSummary(series, at, expanded, options.digits, options.path),
     terms: table.rows,
-    growth: growthReport(growth, expanded),
-    borelPlane: planeReport(expanded, growth, options.digits),
+    growth: growthReport(growth, expanded, strengthReport(strength)),
+    borelPlane: planeReport(expanded, growth, options.digits, keptCorrelation(series, expanded)),
     values: rows,
     ambiguity: ambiguity.report,
     powerCorrection: powerReport(series, expanded, ambiguity, alpha),
-    optimalTruncation: optimalReport(expanded, growth, table, options.digits),
-    verdict: verdict(values, growth, expanded.expansion.coefficients.length, ambiguity.chosen, options.verdictRule),
+    optimalTruncation: optimalReport(series, expanded, growth, table, options.digits),
+    verdict: inUnit(verdict(values, growth, count, ambiguity.chosen, options.verdictRule), series),
     cautions: [...cautions(series, expanded, growth, table, values, alpha), ...recordCautions(record)],
   };
 }

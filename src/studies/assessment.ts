@@ -3,21 +3,11 @@
  * Every number is a decimal string with as many digits as are known.
  */
 
-/** Trust in a number: proved by enclosure; two independent evaluations agree; a model or heuristic. */
-export type Standing = 'certified' | 'converged' | 'indicative';
+import type { Caution, Refused, Standing } from './assessment-basics.js';
+import type { BorelPlaneReport, GrowthReport } from './assessment-growth.js';
 
-/** A number and what stands behind it. `digits` says how the shown digits are known, `standing` how far the number itself is to be trusted. */
-export interface Figure {
-  readonly value: string;
-  readonly error?: string;
-  readonly standing: Standing;
-  readonly digits?: Standing;
-}
-
-export interface Caution {
-  readonly code: string;
-  readonly text: string;
-}
+export type * from './assessment-basics.js';
+export type * from './assessment-growth.js';
 
 export interface SeriesSummary {
   readonly id: string;
@@ -32,6 +22,8 @@ export interface SeriesSummary {
   readonly flavours?: number;
   readonly scaleRatio?: string;
   readonly hardScale?: { readonly value: string; readonly unit: string };
+  /** What R is in units of, as the file says: GeV, pb, or Q, Q^p for powers of the hard scale. */
+  readonly unit?: string;
   readonly factor: string;
   readonly additive: string;
   readonly sources: readonly string[];
@@ -59,6 +51,8 @@ export interface TermRow {
   readonly order: number;
   readonly coefficient: string;
   readonly coefficientError?: string;
+  /** A coefficient with an error as the file writes it. */
+  readonly written?: string;
   readonly estimated?: boolean;
   readonly term: string;
   readonly partialSum: string;
@@ -68,107 +62,13 @@ export interface TermRow {
   readonly least?: boolean;
 }
 
-export interface SingularityReport {
-  readonly t: string;
-  readonly tError?: string;
-  readonly u?: string;
-  readonly uError?: string;
-  /** Degrees, for a complex pair. */
-  readonly angle?: string;
-  readonly exponent?: string;
-  readonly exponentError?: string;
-  readonly strength?: string;
-  readonly strengthError?: string;
-  readonly kind: string;
-  readonly standing: Standing;
-}
-
-export interface ExpectedSingularity {
-  readonly t: string;
-  readonly u?: string;
-  readonly dimension?: string;
-  readonly exponent?: string;
-  readonly strength?: string;
-  readonly kind: string;
-  /** Where the expectation comes from: the file, or the operator product expansion with the beta function. */
-  readonly origin: string;
-}
-
-export interface GrowthReport {
-  readonly verdict: string;
-  readonly order?: string;
-  readonly statement: string;
-  readonly standing: Standing;
-  readonly signPattern: string;
-  readonly nearest?: SingularityReport;
-  readonly expected: readonly ExpectedSingularity[];
-  /** How observation and expectation compare, in words. */
-  readonly agreement?: string;
-  readonly evidence: {
-    readonly ratios: readonly {
-      readonly n: number;
-      readonly ratio: string;
-      readonly linear?: string;
-      readonly linearError?: string;
-    }[];
-    readonly comparison?: {
-      readonly points: number;
-      readonly bayesFactor: string;
-      readonly deltaAICc?: string;
-      readonly growthOrder?: string;
-      readonly growthOrderError?: string;
-      readonly inversePosition: string;
-      readonly wording: string;
-    };
-    readonly predictions: readonly { readonly n: number; readonly method: string; readonly relativeMiss: string }[];
-    readonly competition: readonly string[];
-  };
-  readonly usableCoefficients?: number;
-  readonly flags: readonly Caution[];
-}
-
-export interface PoleReport {
-  /** In the Borel variable t conjugate to x; "im" absent for a real pole. */
-  readonly re: string;
-  readonly im?: string;
-  /** The same in u, for a QCD series. */
-  readonly u?: { readonly re: string; readonly im?: string };
-  readonly multiplicity: number;
-  /** Amplitude A of A/(1 − t/z) (of the highest-order part for a multiple pole). */
-  readonly amplitude?: { readonly re: string; readonly im?: string };
-  readonly note?: 'doublet' | 'near-axis';
-}
-
-export interface PadeEntry {
-  readonly label: string;
-  /** Leroy parameter of the transform, 0 for the plain one. */
-  readonly leroy: string;
-  readonly exists: boolean;
-  /** Deficiency > 0: the entry sits in a degenerate block and equals a smaller one. */
-  readonly deficiency?: number;
-  readonly reason?: string;
-  readonly positiveRealPoles?: number;
-  readonly poles: readonly PoleReport[];
-}
-
-export interface BorelPlaneReport {
-  readonly variable: string;
-  readonly entries: readonly PadeEntry[];
-  readonly doublets: number;
-  readonly notes: readonly string[];
-  readonly standing: Standing;
-}
-
-export interface Refused {
-  readonly reason: string;
-  readonly remedy: string;
-}
-
 /** How a prescription did on this series with its last coefficients hidden; sizes in units of the target. */
 export interface ValueRecord {
   /** What the predictions were held against. */
   readonly against: 'exact' | 'measurement' | 'known sum' | 'own value';
   readonly tested: number;
+  /** The predictions saw the first so many coefficients; absent: all but the last ones. */
+  readonly seen?: number;
   /** How many lay within the stated error, the target's own error allowed for. */
   readonly inside: number;
   /** Mean of (predicted − target)/|target|. */
@@ -191,6 +91,8 @@ export interface ValueEntry {
   readonly ambiguity?: string;
   /** Im of the lateral sum above the positive axis, signed. The lateral sums are value ± i·imaginary. */
   readonly imaginary?: string;
+  /** Error of the ambiguity from the coefficients' and the coupling's errors. */
+  readonly ambiguityError?: string;
   /** From the coefficients' and the coupling's errors. */
   readonly inputError?: string;
   readonly termsUsed?: number;
@@ -208,10 +110,10 @@ export interface ValueEntry {
 
 export interface AmbiguityReport {
   readonly conventions: readonly {
-  /** The predictions saw the first so many coefficients; absent: all but the last ones. */
-  readonly seen?: number;
     readonly name: string;
     readonly value: string;
+    /** From the errors of coefficients and coupling, or that of N. */
+    readonly error?: string;
     readonly relative?: string;
     readonly GeV?: string;
     readonly standing: Standing;
@@ -230,6 +132,18 @@ export interface PowerCorrectionReport {
   /** The ambiguity in units of (Λ/Q)^d: a pure number. */
   readonly inPowerUnits?: string;
   readonly GeV?: { readonly value: string; readonly power: string };
+  /** |Im|/π from the strength N and Λ: A = κ Λ^d. */
+  readonly fromStrength?: {
+    readonly overPower: string;
+    readonly overPowerError: string;
+    readonly value: string;
+    readonly error: string;
+    readonly GeV?: { readonly value: string; readonly error: string; readonly power: string };
+    /** d-th root in GeV, for d > 1. */
+    readonly root?: string;
+    /** The Λ that it rests on. */
+    readonly lambda: string;
+  };
   readonly condensates: readonly {
     readonly name: string;
     readonly dimension: string;
@@ -240,6 +154,8 @@ export interface PowerCorrectionReport {
     readonly shift?: string;
     readonly shiftIm?: string;
     readonly shiftOverValue?: string;
+    /** Why a number of this row is missing. */
+    readonly missing?: string;
   }[];
   readonly statement: string;
 }
@@ -263,6 +179,22 @@ export interface OptimalTruncationReport {
     readonly origin: string;
   };
   readonly errorOfStopping?: string;
+  /** The sum of all known terms at other renormalisation scales: coefficients re-expanded, coupling run. */
+  readonly scales?: {
+    readonly points: readonly { readonly ratio: string; readonly coupling: string; readonly value: string }[];
+    /** Largest distance from the value at the scale of the series. */
+    readonly spread?: string;
+    readonly refused?: Refused;
+  };
+  /** What other models say is missing beyond the last known term. */
+  readonly models?: readonly {
+    readonly model: string;
+    readonly title: string;
+    readonly nature: 'credible' | 'conventional';
+    readonly about: 'next term' | 'remainder';
+    readonly low: string;
+    readonly high: string;
+  }[];
   readonly statement: string;
   readonly standing: Standing;
 }
@@ -271,7 +203,13 @@ export interface VerdictReport {
   readonly value?: string;
   readonly truncation?: string;
   readonly ambiguity?: string;
+  /** Whose lateral sums or least term the ambiguity is. */
+  readonly ambiguityOf?: string;
   readonly input?: string;
+  /** What the value rests on beyond its stated errors. */
+  readonly assumption?: string;
+  /** The same in the unit of the quantity. */
+  readonly inUnit?: { readonly unit: string; readonly value: string; readonly printed: string };
   /** The line as a paper would print it, PDG-rounded. */
   readonly printed: string;
   readonly prescription?: string;

@@ -74,7 +74,9 @@ function budget(result: EvolveResult): string {
   const inputs = result.errors.map((e) => `${e.label} +${e.plus} -${e.minus}`);
   const estimates = [
     ...(result.oneLoopLess === undefined ? [] : [`one loop less moves it by ${result.oneLoopLess.shift}`]),
-    ...(result.matching === undefined ? [] : [`crossing the thresholds elsewhere by ${result.matching.spread}`]),
+    ...(result.matching === undefined
+      ? []
+      : [`crossing the thresholds elsewhere by ${result.matching.spread} (mostly ${result.matching.dominant})`]),
   ];
   return `its error: ${inputs.length === 0 ? 'none given' : inputs.join(', ')}; not in it: ${estimates.length === 0 ? 'nothing' : estimates.join(', ')}`;
 }

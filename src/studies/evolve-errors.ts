@@ -3,12 +3,15 @@ import { INPUTS, crossingScale, isRefusal, type Threshold } from '../qcd/index.j
 import type { Uncertain } from '../series/index.js';
 import type { Refused } from './assessment.js';
 import { runOnce, type Outcome, type Setting } from './evolve-run.js';
+import { indicative } from './figures.js';
 import type { EvolveRequest, EvolveResult } from './evolve-types.js';
 
 /** Digits of a result in doubles that is good to 1e-14 or so. */
 const DIGITS = 12;
 /** Crossing scales of the matching spread, in units of the chosen ones. */
 const FACTORS = [0.5, 2] as const;
+/** No threshold is crossed below this scale in GeV: a custom, since the truncated running means little there. */
+export const LOWEST_CROSSING = 1;
 
 /** Shift of the value up and down, from two changed settings. */
 export interface Shift {
@@ -72,24 +75,39 @@ function thresholdMasses(setting: Setting, central: number): Shift | undefined {
 export function matchingSpread(
   setting: Setting,
   outcome: Outcome,
-): { spread: number; crossings: NonNullable<EvolveResult['matching']>['crossings'] } | undefined {
+): (NonNullable<EvolveResult['matching']> & { readonly size: number }) | undefined {
   const crossed = setting.thresholds.filter((t) =>
     [...outcome.approach, ...outcome.steps].some((s) => s.threshold === t.name),
   );
   if (crossed.length === 0) return undefined;
-  let square = 0;
+  const parts: { threshold: string; size: number }[] = [];
   const crossings = crossed.flatMap((t) => {
     let largest = 0;
-    const rows = FACTORS.map((factor) => {
-      const other: Threshold = { ...t, scale: crossingScale(t) * factor };
+    const rows = FACTORS.map((wanted) => {
+      const here = crossingScale(t);
+      const scale = Math.max(here * wanted, Math.min(here, LOWEST_CROSSING));
+      const factor = scale / here;
+      const other: Threshold = { ...t, scale };
       const moved = runOnce({ ...setting, thresholds: setting.thresholds.map((u) => (u === t ? other : u)) });
-      const row = { threshold: t.name, factor: String(factor) };
+      const row = {
+        threshold: t.name,
+        factor: String(Number(factor.toPrecision(3))),
+        ...(factor > wanted ? { limited: true } : {}),
+      };
       if (isRefusal(moved)) return { ...row, refused: moved };
       largest = Math.max(largest, Math.abs(moved.value - outcome.value));
       return { ...row, value: text(moved.value) };
     });
-    square += largest ** 2;
+    parts.push({ threshold: t.name, size: largest });
     return rows;
   });
-  return { spread: Math.sqrt(square), crossings };
+  const size = Math.hypot(...parts.map((p) => p.size));
+  const dominant = parts.reduce((a, b) => (b.size > a.size ? b : a)).threshold;
+  return {
+    size,
+    spread: indicative(size, 3),
+    dominant,
+    parts: parts.map((p) => ({ threshold: p.threshold, spread: indicative(p.size, 3) })),
+    crossings,
+  };
 }

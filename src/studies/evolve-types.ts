@@ -50,12 +50,21 @@ export interface EvolveResult {
   /** From the errors of the input: the value itself, α_s behind a mass, the masses at the thresholds. */
   readonly errors: readonly EvolveError[];
   readonly oneLoopLess?: { readonly loops: number; readonly value: string; readonly shift: string };
-  /** Largest shift when the thresholds are crossed at half and at twice the mass, each in turn, in quadrature. */
+  /**
+   * Largest shift when the thresholds are crossed at half and at twice their scale, each in turn, in quadrature. No threshold
+   * is crossed below 1 GeV, where the coupling's truncated running means little.
+   */
   readonly matching?: {
     readonly spread: string;
+    /** The threshold that makes the largest part. */
+    readonly dominant: string;
+    readonly parts: readonly { readonly threshold: string; readonly spread: string }[];
     readonly crossings: readonly {
       readonly threshold: string;
+      /** Crossing scale over the chosen one. */
       readonly factor: string;
+      /** The factor would have been 1/2, but for the floor of 1 GeV. */
+      readonly limited?: boolean;
       readonly value?: string;
       readonly refused?: Refused;
     }[];

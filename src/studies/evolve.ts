@@ -89,7 +89,7 @@ export function evolveStudy(request: EvolveRequest): EvolveResult | Refused {
   if (less !== undefined && !isRefusal(less)) {
     components.push({ label: 'one loop less', error: Math.abs(less.value - outcome.value) });
   }
-  if (spread !== undefined) components.push({ label: 'matching', error: spread.spread });
+  if (spread !== undefined) components.push({ label: 'matching', error: spread.size });
   return {
     quantity: request.quantity,
     loops: setting.loops,
@@ -114,7 +114,14 @@ export function evolveStudy(request: EvolveRequest): EvolveResult | Refused {
         }),
     ...(spread === undefined
       ? {}
-      : { matching: { spread: indicative(spread.spread, 3), crossings: spread.crossings } }),
+      : {
+          matching: {
+            spread: spread.spread,
+            dominant: spread.dominant,
+            parts: spread.parts,
+            crossings: spread.crossings,
+          },
+        }),
     lambda: lambdas(setting, outcome, alphaErrors(request)),
     path: outcome.steps.map(plainStep),
     ...(outcome.approach.length > 0 ? { couplingPath: outcome.approach.map(plainStep) } : {}),

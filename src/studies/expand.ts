@@ -29,7 +29,7 @@ import { betaCoefficients, divisorSize, expectedSingularity, isRefusal, uPerT, w
 import type { GrowthInput, GrowthTerm } from '../growth/index.js';
 import { circleRunning, fixedOrderSeries } from './contour/moment.js';
 import { ROUNDED_DIGITS } from './expand-errors.js';
-import { couplingScheme, isOtherCoupling, knownLoops, massDefinition } from './scheme.js';
+import { couplingScheme, isMSbar, knownLoops, massDefinition } from './scheme.js';
 
 export interface Expanded {
   readonly expansion: Expansion;
@@ -71,6 +71,7 @@ export function expand(from: Series, at: Exact, order?: number): Expanded {
     stated,
     ...runningOf(series, coefficients.length, leadingZeros),
     ...strongOf(series, leadingZeros),
+    ...(series.bubbleChain === undefined ? {} : { bubbleChain: series.bubbleChain }),
     ...(series.expandedFrom === undefined ? {} : { contour: contourOf(series.expandedFrom, order, scale) }),
   };
   const growthInput: GrowthInput = {
@@ -254,7 +255,8 @@ function statedSingularities(series: Series, leadingZeros: number, scale: Exact 
 
 /**
  * Expected exponent and corrections: of an infrared singularity from its dimension; of an ultraviolet one only where the
- * file states the anomalous term, since that needs operators which no rule in n_f alone fixes.
+ * file states the anomalous term, since that needs operators which no rule in n_f alone fixes. An invented world has its own
+ * rules: nothing is expected there but what its file states.
  */
 function expectation(
   series: Series,
@@ -263,13 +265,18 @@ function expectation(
 ): ReturnType<typeof expectedSingularity> | undefined {
   if (u?.rational === undefined || series.flavours === undefined || series.coupling.plain) return undefined;
   if (u.rational.sign() < 0 && stated.anomalousDimension === undefined) return undefined;
+  const scheme = couplingScheme(series);
+  const loops = !isRefusal(scheme) && scheme.kind === 'toy' ? scheme.loops : undefined;
+  if (loops !== undefined && !isMSbar(series)) return undefined;
   const expected = expectedSingularity({
     flavours: series.flavours,
     dimension: u.rational.add(u.rational),
     divisor: series.coupling.divisor,
+    ...(loops === undefined ? {} : { loops }),
     ...(stated.anomalousDimension === undefined ? {} : { anomalousDimension: stated.anomalousDimension }),
     ...(stated.wilsonCorrections === undefined ? {} : { wilson: { corrections: stated.wilsonCorrections } }),
   });
-  // Position and exponent belong to the quantity; the corrections to the MSbar beta function.
-  return isOtherCoupling(series) ? { ...expected, corrections: [] } : expected;
+  // Position and exponent belong to the quantity; the corrections to the beta function of MSbar.
+  const known = isMSbar(series) ? Math.max(0, (loops ?? Infinity) - LOOPS_BEFORE_CORRECTIONS) : 0;
+  return { ...expected, corrections: expected.corrections.slice(0, known) };
 }

@@ -1,16 +1,21 @@
 /** @module The growth diagnosis as the result states it, in t and in u, beside what is expected. */
-import { toNumberExact } from '../numerics/index.js';
+import { exact, mulExact, subExact, toNumberExact } from '../numerics/index.js';
+import type { Exact } from '../numerics/index.js';
 import type { FoundSingularity, Growth } from '../growth/index.js';
 import type { StatedSingularity } from '../series/index.js';
-import type { ExpectedSingularity, GrowthReport, SingularityReport } from './assessment.js';
+import type { ExpectedSingularity, GrowthReport, SingularityReport, StrengthReport } from './assessment.js';
 import type { Expanded } from './expand.js';
 import { estimateText, exactText, indicative } from './figures.js';
 
 /** Digits of expected (exact) positions and exponents. */
 const EXPECTED_DIGITS = 10;
+/** Digits of the corrections. */
+const CORRECTION_DIGITS = 8;
 const MARGIN = 1.5;
+/** A fitted power of n! is not known better than its rounding. */
+const LEAST_ORDER_ERROR = 1e-12;
 
-export function growthReport(growth: Growth, expanded: Expanded): GrowthReport {
+export function growthReport(growth: Growth, expanded: Expanded, strength?: StrengthReport): GrowthReport {
   const stated = expanded.expansion.stated;
   const agreement = compare(growth, stated);
   const c = growth.comparison;
@@ -22,6 +27,7 @@ export function growthReport(growth: Growth, expanded: Expanded): GrowthReport {
     signPattern: growth.signPattern,
     ...(growth.nearest === undefined ? {} : { nearest: singularityReport(growth.nearest, expanded) }),
     expected: stated.map(expectedReport),
+    ...(strength === undefined ? {} : { strength }),
     ...(agreement === undefined ? {} : { agreement }),
     evidence: {
       ratios: growth.ratios.map((r) => ({
@@ -41,7 +47,7 @@ export function growthReport(growth: Growth, expanded: Expanded): GrowthReport {
                 ? {}
                 : {
                     growthOrder: indicative(c.growthOrder.value, 3),
-                    growthOrderError: indicative(c.growthOrder.error, 2),
+                    growthOrderError: indicative(Math.max(c.growthOrder.error, LEAST_ORDER_ERROR), 2),
                   }),
               inversePosition: indicative(c.inversePosition, 4),
               wording: c.wording,
@@ -84,13 +90,29 @@ function singularityReport(s: FoundSingularity, expanded: Expanded): Singularity
   };
 }
 
+/** e_j = c_j p(p−1)…(p−j+1): what stands over (n+p)(n+p−1)…(n+p−j+1). */
+function overN(exponent: Exact, corrections: readonly Exact[]): Exact[] {
+  let falling = exact(1);
+  return corrections.map((c, j) => {
+    falling = mulExact(falling, subExact(exponent, exact(j + 1)));
+    return mulExact(c, falling);
+  });
+}
+
 function expectedReport(s: StatedSingularity): ExpectedSingularity {
+  const { exponent, corrections } = s;
   return {
     t: exactText(s.t, EXPECTED_DIGITS),
     ...(s.u === undefined ? {} : { u: exactText(s.u, EXPECTED_DIGITS) }),
     ...(s.dimension === undefined ? {} : { dimension: exactText(s.dimension, EXPECTED_DIGITS) }),
     ...(s.exponent === undefined ? {} : { exponent: exactText(s.exponent, EXPECTED_DIGITS) }),
     ...(s.strength === undefined ? {} : { strength: exactText(s.strength, EXPECTED_DIGITS) }),
+    ...(exponent === undefined || corrections.length === 0
+      ? {}
+      : {
+          corrections: corrections.map((c) => exactText(c, CORRECTION_DIGITS)),
+          overN: overN(exponent, corrections).map((c) => exactText(c, CORRECTION_DIGITS)),
+        }),
     kind: s.kind,
     origin: s.origin,
   };

@@ -7,9 +7,11 @@ import type { AssessOptions } from './assess.js';
 import type { Assessment } from './assessment.js';
 import { cautions } from './cautions.js';
 import { fixedOrderSeries } from './contour/moment.js';
+import { keptCorrelation } from './correlation.js';
 import { expand } from './expand.js';
 import { growthReport } from './growth-report.js';
 import { planeReport } from './plane-report.js';
+import { leadingStrength, strengthReport } from './strength-report.js';
 import { couplingSummary, seriesSummary } from './summary.js';
 import { valueEntry } from './values.js';
 import { VERSION } from './version.js';
@@ -32,7 +34,7 @@ export function growthStudy(given: Series, options: PartOptions): GrowthResult {
     leastterm: VERSION,
     request: options.request,
     series: seriesSummary(series, expanded),
-    growth: growthReport(growth, expanded),
+    growth: growthReport(growth, expanded, strengthReport(leadingStrength(series, expanded))),
     cautions: cautions(series, expanded, growth, undefined, []),
   };
 }
@@ -46,7 +48,7 @@ export function planeStudy(given: Series, options: PartOptions): PlaneResult {
     leastterm: VERSION,
     request: options.request,
     series: seriesSummary(series, expanded),
-    borelPlane: planeReport(expanded, growth, options.digits),
+    borelPlane: planeReport(expanded, growth, options.digits, keptCorrelation(series, expanded)),
     cautions: cautions(series, expanded, growth, undefined, []),
   };
 }

@@ -7,7 +7,9 @@ import type { Growth } from '../growth/index.js';
 import { leroyParameter } from '../prescriptions/index.js';
 import type { BorelPlaneReport, PadeEntry, PoleReport } from './assessment.js';
 import type { Expanded } from './expand.js';
-import { ballText } from './figures.js';
+import { ballText, indicative } from './figures.js';
+import { poleErrors } from './pole-errors.js';
+import type { Position } from './pole-errors.js';
 
 /** Coefficients shown in the plane of a long series: the picture does not change beyond, the cost does. Heuristic. */
 const MOST = 24;
@@ -15,7 +17,12 @@ const POLE_BITS = 96;
 const POLE_DIGITS = 8;
 
 /** Near-diagonal entries of the plain transform and, where the leading exponent is known, of the Leroy transform. */
-export function planeReport(expanded: Expanded, growth: Growth, digits: number): BorelPlaneReport {
+export function planeReport(
+  expanded: Expanded,
+  growth: Growth,
+  digits: number,
+  correlation?: readonly (readonly number[])[],
+): BorelPlaneReport {
   const e = expanded.expansion;
   const usable = Math.min(e.coefficients.length, growth.usableCoefficients ?? MOST, MOST);
   const variable = expanded.uPerT === undefined ? 't' : 't (u = uPerT * t)';
@@ -45,7 +52,9 @@ export function planeReport(expanded: Expanded, growth: Growth, digits: number):
   for (const leroy of transforms) {
     for (const order of [usable - 1, usable - 2]) {
       for (const [L, M] of nearDiagonal(order, order === usable - 1 ? 2 : 1)) {
-        entries.push(entryReport(approximate(e.coefficients, leroy, L, M, POLE_BITS, noise), leroy, shown, scale));
+        const approximant = approximate(e.coefficients, leroy, L, M, POLE_BITS, noise);
+        const errors = errorsOf(approximant, expanded, correlation, leroy, [L, M]);
+        entries.push(entryReport(approximant, errors, leroy, shown, scale));
       }
     }
   }
@@ -57,12 +66,33 @@ export function planeReport(expanded: Expanded, growth: Growth, digits: number):
   if (entries.some((x) => x.poles.some((p) => p.note === 'near-axis')))
     notes.push('a complex pair close to the positive axis is lifted over in the sums unless the terms confirm it');
   const doublets = entries.reduce((s, x) => s + x.poles.filter((p) => p.note === 'doublet').length, 0);
-  return { variable, entries, doublets, notes, standing: 'certified' };
+  const central = expanded.errors.slice(0, usable).some((error) => error > 0);
+  return { variable, entries, doublets, notes, standing: 'certified', ...(central ? { central } : {}) };
+}
+
+/** Errors of the poles from those of the coefficients; a multiple pole, or one set aside, has none. */
+function errorsOf(
+  a: Approximant,
+  expanded: Expanded,
+  correlation: readonly (readonly number[])[] | undefined,
+  leroy: Rational,
+  entry: readonly [number, number],
+): readonly (Position | undefined)[] {
+  if (a.exists !== true || a.deficiency > 0 || !expanded.errors.some((error) => error > 0)) return [];
+  const places = a.poles.map((p) => C.toNumbers(p.z));
+  const found = poleErrors(expanded.expansion.coefficients, expanded.errors, correlation, leroy, entry, places);
+  return a.poles.map((p, i) => (p.multiplicity > 1 || p.role !== undefined ? undefined : found[i]));
 }
 
 const labelOf = (x: PadeEntry): string => (x.leroy === '0' ? x.label : `${x.label} (b = ${x.leroy})`);
 
-function entryReport(a: Approximant, leroy: Rational, digits: number, scale: number | undefined): PadeEntry {
+function entryReport(
+  a: Approximant,
+  errors: readonly (Position | undefined)[],
+  leroy: Rational,
+  digits: number,
+  scale: number | undefined,
+): PadeEntry {
   if (a.exists !== true)
     return {
       label: a.label,
@@ -78,7 +108,7 @@ function entryReport(a: Approximant, leroy: Rational, digits: number, scale: num
     exists: true,
     ...(a.deficiency > 0 ? { deficiency: a.deficiency } : {}),
     positiveRealPoles: a.positiveRealPoles,
-    poles: a.poles.map((p) => poleReport(p, near.has(p), digits, scale)),
+    poles: a.poles.map((p, i) => poleReport(p, errors[i], near.has(p), digits, scale)),
   };
 }
 
@@ -86,13 +116,22 @@ function complexText(z: Complex, digits: number, real: boolean): { re: string; i
   return real ? { re: ballText(z.re, digits) } : { re: ballText(z.re, digits), im: ballText(z.im, digits) };
 }
 
-function poleReport(p: RatedPole, near: boolean, digits: number, scale: number | undefined): PoleReport {
+function poleReport(
+  p: RatedPole,
+  error: Position | undefined,
+  near: boolean,
+  digits: number,
+  scale: number | undefined,
+): PoleReport {
   const amplitude = p.amplitudes[p.amplitudes.length - 1];
   const role = p.role !== undefined ? 'doublet' : near ? 'near-axis' : undefined;
   const u = scale === undefined ? undefined : C.mulReal(p.z, R.fromNumber(scale), POLE_BITS);
   return {
     ...complexText(p.z, digits, p.real),
     ...(u === undefined ? {} : { u: complexText(u, digits, p.real) }),
+    ...(error === undefined
+      ? {}
+      : { error: { re: indicative(error.re, 2), ...(p.real ? {} : { im: indicative(error.im, 2) }) } }),
     multiplicity: p.multiplicity,
     ...(amplitude === undefined ? {} : { amplitude: complexText(amplitude, Math.min(digits, 6), p.real) }),
     ...(role === undefined ? {} : { note: role }),

@@ -137,8 +137,5 @@ export function hardScaleOf(series: Series): Exact | Refusal {
 /** Loops of the beta function that a scheme knows: all that are known for QCD, fewer in a toy world. */
 export const knownLoops = (scheme: CouplingScheme): number => (scheme.kind === 'toy' ? scheme.loops : MAX_LOOPS);
 
-/** Is the coupling certainly another one than MSbar, so that Λ_MSbar and the MSbar beta function do not apply? */
-export function isOtherCoupling(series: Series): boolean {
-  const scheme = couplingScheme(series);
-  return !('reason' in scheme) && scheme.kind !== 'MSbar' && scheme.kind !== 'toy';
-}
+/** Λ_MSbar and its β function belong to an MSbar coupling; a file that names no scheme is taken as MSbar. */
+export const isMSbar = (series: Series): boolean => series.scheme === undefined || /^ms-?bar/i.test(series.scheme);

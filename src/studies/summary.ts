@@ -2,6 +2,7 @@
 import { toNumberExact } from '../numerics/index.js';
 import type { Exact } from '../numerics/index.js';
 import { lambdaRatio } from './lambda.js';
+import { isMSbar } from './scheme.js';
 import type { Series, Uncertain } from '../series/index.js';
 import type { CouplingSummary, SeriesSummary } from './assessment.js';
 import type { Expanded } from './expand.js';
@@ -27,6 +28,7 @@ export function seriesSummary(series: Series, expanded: Expanded): SeriesSummary
     ...(series.hardScale === undefined
       ? {}
       : { hardScale: { value: exactText(series.hardScale.value, INPUT_DIGITS), unit: series.hardScale.unit } }),
+    ...(series.unit === undefined ? {} : { unit: series.unit }),
     factor: exactText(series.factor, INPUT_DIGITS),
     additive: exactText(series.additive, INPUT_DIGITS),
     sources: series.sources,
@@ -47,9 +49,6 @@ export function hardScaleGeV(series: Series): number | undefined {
   const v = toNumberExact(series.hardScale.value);
   return series.hardScale.unit === 'MeV' ? v / 1000 : v;
 }
-
-/** Λ_MSbar and its β function belong to an MSbar coupling; a file that names no scheme is taken as MSbar. */
-const isMSbar = (series: Series): boolean => series.scheme === undefined || /^ms-?bar/i.test(series.scheme);
 
 /** Λ/Q of the series at this coupling: Λ/μ from α and n_f at the loops of the β function, times μ/Q. None outside MSbar. */
 export function lambdaOverQ(series: Series, at: Exact): number | undefined {

@@ -1,7 +1,7 @@
 /** @module The table of terms: order, coefficient, term, partial sum, ratio, least term. */
 import { isZeroExact, R } from '../numerics/index.js';
 import type { Ball } from '../numerics/index.js';
-import type { Series } from '../series/index.js';
+import type { Coefficient, Series } from '../series/index.js';
 import { leastTerm, partialSums, terms } from '../prescriptions/index.js';
 import type { TermRow } from './assessment.js';
 import type { Expanded } from './expand.js';
@@ -17,6 +17,10 @@ export interface TermTable {
 }
 
 const FIRST_BITS = 256;
+
+/** A number with an error as the file has it; an expression is no number to show. */
+const writtenOf = ({ text }: Coefficient): Pick<TermRow, 'written'> =>
+  /^[-+\d.e() ±]+$/i.test(text) ? { written: text.replace(/\s*(\+\/?-|±)\s*/, ' ± ') } : {};
 
 /** Rows for the non-zero part of the series (leading zeros are listed with zero terms). */
 export function termTable(series: Series, expanded: Expanded, digits: number): TermTable {
@@ -40,7 +44,7 @@ export function termTable(series: Series, expanded: Expanded, digits: number): T
     rows.push({
       order: n + e.power,
       coefficient: exactText(c.value, digits),
-      ...(expanded.errors[n]! > 0 ? { coefficientError: indicative(expanded.errors[n]!, 3) } : {}),
+      ...(expanded.errors[n]! > 0 ? { coefficientError: indicative(expanded.errors[n]!, 4), ...writtenOf(c) } : {}),
       ...(c.status === 'estimated' ? { estimated: true } : {}),
       term: isZeroExact(c.value) ? '0' : ballText(term, digits),
       partialSum: ballText(sums[n + 1]!, digits),

@@ -2,7 +2,7 @@
  * @module Every prescription on one expansion, with truncation, ambiguity and input errors; sums and refusals side by side.
  */
 import { addExact, exact, mulExact, R, Rational } from '../numerics/index.js';
-import type { Exact } from '../numerics/index.js';
+import type { Ball, Exact } from '../numerics/index.js';
 import type { Growth } from '../growth/index.js';
 import type { Outcome, Prescription, Sum } from '../prescriptions/index.js';
 import type { Expansion } from '../series/index.js';
@@ -26,6 +26,8 @@ export interface Evaluated {
   readonly outcome: Outcome;
   /** Error from coefficients and coupling, absolute. */
   readonly input?: number;
+  /** The same of the imaginary part of the lateral sums. */
+  readonly imaginaryInput?: number;
 }
 
 /** Certified digits asked of the shifted evaluations: enough for a difference quotient. */
@@ -44,42 +46,67 @@ export function evaluateAll(
   return prescriptions.flatMap((prescription) =>
     prescription.apply(e, growth, request).map((outcome): Evaluated => {
       if (outcome.kind === 'refusal' || outcome.central !== true) return { prescription, outcome };
-      const input = inputError(e, growth, prescription, outcome, inputs);
-      return { prescription, outcome, ...(input === undefined ? {} : { input }) };
+      return { prescription, outcome, ...inputError(e, growth, prescription, outcome, inputs) };
     }),
   );
 }
 
-/** Linear propagation by central differences of half a standard deviation; √(J C Jᵀ). Undefined without any input error. */
-function inputError(e: Expansion, growth: Growth, p: Prescription, sum: Sum, inputs: Inputs): number | undefined {
-  const at = (shifted: Expansion): number | undefined => {
+/** A change of the value and of the imaginary part. */
+interface Move {
+  readonly value: number;
+  readonly imaginary: number;
+}
+
+const NO_MOVE: Move = { value: 0, imaginary: 0 };
+
+/**
+ * Linear propagation by central differences of half a standard deviation; √(J C Jᵀ), of the value and of its imaginary part.
+ * Empty without any input error.
+ */
+function inputError(
+  e: Expansion,
+  growth: Growth,
+  p: Prescription,
+  sum: Sum,
+  inputs: Inputs,
+): Pick<Evaluated, 'input' | 'imaginaryInput'> {
+  const at = (shifted: Expansion): Move | undefined => {
     const found = p.apply(shifted, growth, { digits: SHIFT_DIGITS, only: sum.variant })[0];
-    return found?.kind === 'sum' ? R.toNumber(R.sub(found.value, sum.value, 160)) : undefined;
+    if (found?.kind !== 'sum') return undefined;
+    const difference = (a: Ball, b: Ball): number => R.toNumber(R.sub(a, b, 160));
+    const im =
+      found.imaginary === undefined || sum.imaginary === undefined ? 0 : difference(found.imaginary, sum.imaginary);
+    return { value: difference(found.value, sum.value), imaginary: im };
   };
-  const slope = (up: Expansion, down: Expansion): number | undefined => {
+  const slope = (up: Expansion, down: Expansion): Move | undefined => {
     const [a, b] = [at(up), at(down)];
-    return a === undefined || b === undefined ? undefined : a - b;
+    return a === undefined || b === undefined
+      ? undefined
+      : { value: a.value - b.value, imaginary: a.imaginary - b.imaginary };
   };
   const fromX =
     inputs.xError > 0
       ? slope({ ...e, x: scaledBy(e.x, 1 + inputs.xError / 2) }, { ...e, x: scaledBy(e.x, 1 - inputs.xError / 2) })
-      : 0;
+      : NO_MOVE;
   const onCircle = p.family === 'contour' ? inputs.onCircle : undefined;
   const { coefficientErrors, correlation } = onCircle ?? inputs;
   const move = onCircle === undefined ? shift : shiftOnCircle;
   const count = (onCircle === undefined ? e : (e.contour ?? e)).coefficients.length;
   const noisy = coefficientErrors.flatMap((s, n) => (s > 0 && n < count ? [n] : []));
   const fromC = noisy.map((n) => slope(move(e, n, coefficientErrors[n]! / 2), move(e, n, -coefficientErrors[n]! / 2)));
-  if (inputs.xError === 0 && noisy.length === 0) return undefined;
-  if (fromX === undefined || fromC.some((s) => s === undefined)) return undefined;
-  let variance = fromX * fromX;
-  noisy.forEach((n, i) =>
-    noisy.forEach((m, j) => {
-      const rho = i === j ? 1 : (correlation?.[n]?.[m] ?? 0);
-      variance += rho * fromC[i]! * fromC[j]!;
-    }),
-  );
-  return Math.sqrt(Math.max(0, variance));
+  if (inputs.xError === 0 && noisy.length === 0) return {};
+  if (fromX === undefined || !fromC.every((s) => s !== undefined)) return {};
+  const total = (part: keyof Move): number => {
+    let variance = fromX[part] ** 2;
+    noisy.forEach((n, i) =>
+      noisy.forEach((m, j) => {
+        const rho = i === j ? 1 : (correlation?.[n]?.[m] ?? 0);
+        variance += rho * fromC[i]![part] * fromC[j]![part];
+      }),
+    );
+    return Math.sqrt(Math.max(0, variance));
+  };
+  return { input: total('value'), ...(sum.imaginary === undefined ? {} : { imaginaryInput: total('imaginary') }) };
 }
 
 function scaledBy(x: Exact, factor: number): Exact {
@@ -101,6 +128,12 @@ function shiftOnCircle(e: Expansion, n: number, by: number): Expansion {
   return { ...e, contour: { ...contour, coefficients }, coefficients: fixedOrderOf(contour, coefficients, e) };
 }
 
+/** A truncation error of 0 that no theorem stands behind: the coefficients known so far follow a rational Borel transform. */
+export const restsOnPattern = (sum: Sum): boolean => sum.truncation === 0 && sum.trust === 'converged';
+
+const PATTERN =
+  'truncation 0 assumes that all further coefficients follow the same rational Borel transform: nothing in the known ones says so';
+
 /** The plain row of the result. */
 export function valueEntry(v: Evaluated, digits: number): ValueEntry {
   const { prescription, outcome } = v;
@@ -121,13 +154,16 @@ export function valueEntry(v: Evaluated, digits: number): ValueEntry {
       ? {
           ambiguity: indicative(Math.abs(R.toNumber(im)) / Math.PI, 6),
           imaginary: R.isExactZero(im) ? '0' : ballText(im, digits),
+          ...(v.imaginaryInput === undefined || !(v.imaginaryInput > 0)
+            ? {}
+            : { ambiguityError: indicative(v.imaginaryInput / Math.PI, 2) }),
         }
       : {}),
     ...(v.input === undefined ? {} : { inputError: indicative(v.input, 3) }),
     termsUsed: outcome.termsUsed,
     standing: outcome.trust,
     digits: outcome.digitsTrust ?? 'certified',
-    notes: outcome.notes,
+    notes: restsOnPattern(outcome) ? [...outcome.notes, PATTERN] : outcome.notes,
     ...(outcome.central === true ? { central: true } : {}),
   };
 }

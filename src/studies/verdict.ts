@@ -11,7 +11,7 @@
  *   5. Borel–Leroy–Padé, then Borel–Padé (central entry);
  *   6. least term with terminant; 7. least term; 8. fixed order.
  * Truncation error: the prescription's own, never below the half-spread of rungs 4 and 5 where both stand.
- * Ambiguity: |Im|/π of the chosen lateral sums, or the least term. Input: propagated. Nothing is averaged.
+ * Ambiguity: |Im|/π of the value's own lateral sums; of another prescription's, or the least term, where it has none. Input: propagated. Nothing is averaged.
  * Other rules, chosen by name (verdict-rule.ts): fixed-order, least-term, prescription:NAME.
  */
 import { R } from '../numerics/index.js';
@@ -21,6 +21,7 @@ import type { Sum } from '../prescriptions/index.js';
 import type { Standing, VerdictReport } from './assessment.js';
 import { ballText, indicative } from './figures.js';
 import { writeVerdict } from './rounding.js';
+import { restsOnPattern } from './values.js';
 import type { Evaluated } from './values.js';
 import { LADDER, ruleName } from './verdict-rule.js';
 import type { VerdictRule } from './verdict-rule.js';
@@ -49,6 +50,17 @@ interface Choice {
 
 function central(values: readonly Evaluated[], name: string): Evaluated | undefined {
   return values.find((v) => v.prescription.name === name && v.outcome.kind === 'sum' && v.outcome.central === true);
+}
+
+/** The value that a rule picks, for the ambiguity to be read from its own lateral sums; undefined when there is none. */
+export function picked(
+  values: readonly Evaluated[],
+  growth: Growth,
+  count: number,
+  rule: VerdictRule = LADDER,
+): Evaluated | undefined {
+  const choice = pick(values, growth, count, rule);
+  return typeof choice === 'string' ? undefined : choice.v;
 }
 
 function choose(values: readonly Evaluated[], growth: Growth, count: number): Choice | string {
@@ -131,6 +143,16 @@ function spread(values: readonly Evaluated[], chosen: Evaluated): number {
   return numbers.length < 2 ? 0 : (Math.max(...numbers) - Math.min(...numbers)) / 2;
 }
 
+const ENDS = 'all further coefficients are zero, as the last known ones are';
+const PATTERN = 'all further coefficients follow the rational Borel transform of the known ones';
+
+/** |Im|/π of the value's own lateral sums; where it has none, the number from elsewhere with its origin. */
+function ownAmbiguity(v: Evaluated, elsewhere: Convention): { readonly value: number; readonly origin: string } {
+  const im = v.outcome.kind === 'sum' ? v.outcome.imaginary : undefined;
+  if (im !== undefined) return { value: Math.abs(R.toNumber(im)) / Math.PI, origin: 'its own lateral sums, |Im|/pi' };
+  return { value: elsewhere.value, origin: `${elsewhere.name}, not its own: ${elsewhere.origin}` };
+}
+
 export function verdict(
   values: readonly Evaluated[],
   growth: Growth,
@@ -139,19 +161,18 @@ export function verdict(
   by: VerdictRule = LADDER,
 ): VerdictReport {
   const rule = `${ruleName(by)} (docs/verdict.md)`;
-  const picked = pick(values, growth, count, by);
-  if (typeof picked === 'string') return { printed: `no value: ${picked}`, rule, standing: 'indicative' };
-  const { v, rung } = picked;
+  const choice = pick(values, growth, count, by);
+  if (typeof choice === 'string') return { printed: `no value: ${choice}`, rule, standing: 'indicative' };
+  const { v, rung } = choice;
   const outcome = v.outcome;
   if (outcome.kind !== 'sum') return { printed: 'no value', rule, standing: 'indicative' };
   const truncation =
     outcome.truncation === undefined
       ? undefined
       : Math.max(outcome.truncation, by.kind !== 'ladder' || outcome.trust === 'converged' ? 0 : spread(values, v));
-  const amount =
-    ambiguity !== undefined && ambiguity.value > 0 && v.prescription.name !== 'fixed-order'
-      ? ambiguity.value
-      : undefined;
+  const stated =
+    ambiguity === undefined || v.prescription.name === 'fixed-order' ? undefined : ownAmbiguity(v, ambiguity);
+  const amount = stated !== undefined && stated.value > 0 ? stated.value : undefined;
   const parts = [
     { label: 'truncation', error: truncation },
     { label: 'ambiguity', error: amount },
@@ -159,12 +180,15 @@ export function verdict(
   ].flatMap((p) => (p.error !== undefined && p.error > 0 ? [{ label: p.label, error: p.error }] : []));
   const exactSum = truncation === 0 && parts.length === 0 && growth.verdict === 'terminating';
   const standing: Standing = exactSum ? 'certified' : outcome.trust;
-  const printed = writeVerdict(ballText(outcome.value, DIGITS), parts);
+  const assumption = exactSum ? ENDS : restsOnPattern(outcome) ? PATTERN : undefined;
+  const value = ballText(outcome.value, DIGITS);
+  const printed = `${writeVerdict(value, parts)}${assumption === undefined ? '' : `, if ${assumption}`}`;
   return {
-    value: ballText(outcome.value, DIGITS),
+    value,
     ...(truncation === undefined ? {} : { truncation: indicative(truncation, 3) }),
-    ...(amount === undefined ? {} : { ambiguity: indicative(amount, 3) }),
+    ...(amount === undefined ? {} : { ambiguity: indicative(amount, 3), ambiguityOf: stated!.origin }),
     ...(v.input === undefined ? {} : { input: indicative(v.input, 3) }),
+    ...(assumption === undefined ? {} : { assumption }),
     printed,
     prescription: `${v.prescription.name}: ${outcome.variant}`,
     rule: `${rule}; rung: ${rung}`,

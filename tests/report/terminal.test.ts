@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
-import { painter } from '../../src/report/layout/paint.js';
+import { asciiOf } from '../../src/report/layout/letters.js';
+import { inAscii, painter, unpainted } from '../../src/report/layout/paint.js';
 import { width } from '../../src/report/layout/text.js';
 import { assessmentText, bareValues, growthText, planeLines, planeText, sumText } from '../../src/report/terminal.js';
 import { fixture } from './fixture.js';
@@ -86,8 +87,54 @@ describe('the assessment as text', () => {
       partialSum: '1',
     }));
     const text = assessmentText({ ...fixture, terms });
-    expect(text).toContain('… 168 orders between, all in the --json output …');
+    expect(text).toContain('… 180 more of 200 rows; all in --json');
   });
+});
+
+describe('what the reader is told', () => {
+  test('a coefficient stands as the file writes it, never rounded to its error', () => {
+    const [first, ...rest] = fixture.terms;
+    const written = { ...fixture, terms: [{ ...first!, written: '827.37(21.5)', coefficientError: '21.5' }, ...rest] };
+    const text = assessmentText(written);
+    expect(text).toContain(' 827.37(21.5) ');
+    expect(text).toMatch(/ 583 ± 142 /);
+  });
+
+  test('a table of ratios shows its two ends', () => {
+    const ratios = Array.from({ length: 40 }, (_, n) => ({ n: n + 1, ratio: String(2 + n / 100) }));
+    const growth = { ...fixture.growth, evidence: { ...fixture.growth.evidence, ratios } };
+    const text = growthText({ ...fixture, growth });
+    expect(text).toContain('… 28 more of 40 rows; all in --json');
+    expect(text).toMatch(/^ +40 +2\.39/m);
+    expect(text).not.toMatch(/^ +20 +2\.19/m);
+  });
+
+  test('the Leroy parameter stands beside the entry in the bare list of poles', () => {
+    expect(planeLines(fixture.borelPlane)).toContain('[1/3] b = 1/2\t0.0512345\t0\n');
+  });
+
+  test('a number that a condensate lacks is said to be missing, and why', () => {
+    const text = assessmentText(fixture);
+    expect(text).toMatch(/four-quark condensate +6 +– +– +– +– +–/);
+    expect(text).toContain('four-quark condensate: no Wilson coefficient in the file.');
+  });
+
+  test('in ASCII: no other letter, the same columns, aligned tables', () => {
+    const text = assessmentText(fixture, { columns: 80, paint: inAscii(unpainted) });
+    expect(text.search(/[^\n -~]/)).toBe(-1);
+    expect(bodyWidth(text)).toBe(80);
+    expect(text).toMatch(/[(]0\.13153|0\.13153 \+- 0\.00210/);
+    expect(text).toContain('|Im|/pi from N');
+    expect(text).toContain('Lambda/Q');
+  });
+});
+
+test('signs, Greek, raised digits and accents have their ASCII', () => {
+  expect(asciiOf('α_s² ± √2 × β₀ − Λ ≤ 10⁻³ → “Gómez”, Ł')).toBe(
+    'alpha_s^2 +- sqrt2 x beta_0 - Lambda <= 10^-3 -> "Gomez", L',
+  );
+  expect(asciiOf('級')).toBe('?');
+  expect(asciiOf('plain\ttext\n')).toBe('plain\ttext\n');
 });
 
 describe('the shorter texts', () => {

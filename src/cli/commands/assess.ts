@@ -2,6 +2,7 @@
 import type { Call, Command } from '../command.js';
 import { EXIT, UsageError } from '../faults.js';
 import { couplingOf, readSeries, requestOf, USUAL_DIGITS, wantedCoupling } from '../input.js';
+import { plainText } from '../letters.js';
 import { deliver } from '../output.js';
 import { presentation } from '../present.js';
 import type { VerdictRule } from '../../studies/index.js';
@@ -38,7 +39,7 @@ async function run(call: Call): Promise<number> {
     },
   });
   if (given.json) deliver(report.resultJson(result), call);
-  else if (given.quiet) deliver(`${result.verdict.printed}\n`, call);
+  else if (given.quiet) deliver(await plainText(`${result.verdict.printed}\n`, call.surroundings), call);
   else deliver(report.assessmentText(result, await presentation(call)), call);
   return result.values.every((entry) => entry.refused !== undefined) ? EXIT.allRefused : EXIT.done;
 }

@@ -130,7 +130,11 @@ function notesOf(question: NormalisationQuestion, s: Setting): string[] {
         : 'the exponent is stated: no sum rule, and the ratio has no corrections',
     );
   if (s.sumRuleTerms < question.coefficients.length + question.firstPower - 1 && !s.plain && s.nearby !== 'inside')
-    notes.push(`the beta function is known to ${s.sumRuleTerms} loops: the sum rule takes as many coefficients`);
+    notes.push(
+      question.ends === true
+        ? `the sum rule takes the first ${s.sumRuleTerms} coefficients: later ones change it no more`
+        : `the beta function is known to ${s.sumRuleTerms} loops: the sum rule takes as many coefficients`,
+    );
   return notes;
 }
 

@@ -17,6 +17,8 @@ const CORRECTIONS = 2;
 const KNOWN_LOOPS = 5;
 /** From three loops on the corrections and the geometric coupling have a meaning beyond the exponent. */
 const LEAST_LOOPS = 3;
+/** Coefficients beyond these change the sum rule no more, but cost; longer series show their convergence by their steps. */
+const LONGEST = 16;
 /** Distances in u that are told apart. */
 const SAME = 1e-9;
 /** Operators of dimension six in the Lagrangian. */
@@ -72,8 +74,8 @@ export function settingOf(question: NormalisationQuestion): Setting {
     dimension,
     wilson: [1, ...wilson.map(toNumberExact)],
     plain,
-    sumRuleTerms: ends ? Infinity : loops,
-    scales: runs,
+    sumRuleTerms: ends ? LONGEST : loops,
+    scales: runs && question.coefficients.length <= LONGEST,
     ...(nearby === undefined
       ? {}
       : { nearby, cuts: { a: (ultraviolet ?? u) / u, b: (question.nextInfrared ?? u + NEXT) / u } }),

@@ -33,7 +33,7 @@ const NUMBER = /^[±+-]?\s?\d/;
 /** What stands left of the decimal point, and the rest with the point. A text that is no number goes to the left part. */
 function atPoint(cell: string): readonly [string, string] {
   if (!NUMBER.test(cell)) return [cell, ''];
-  const point = cell.search(/[.e(]/);
+  const point = cell.search(/[.e(]| [±+]/);
   return point < 0 ? [cell, ''] : [cell.slice(0, point), cell.slice(point)];
 }
 
@@ -69,25 +69,34 @@ function withFoldedWords(set: SetColumn, columns: number): SetColumn {
   return { ...set, head: fold(set.column.head, columns), lines, width: columns };
 }
 
-/** Brings the columns into `room`: first the heads are folded, then the widest columns of words. */
+/** Which columns may be folded: words first; numbers only at their blanks, when words give no more room. */
+const FOLDABLE: readonly ((set: SetColumn) => boolean)[] = [
+  (set) => set.column.align === 'left',
+  (set) => set.column.align === 'point' && set.cells.some((cell) => /\S\s\S/.test(cell)),
+];
+
+/** Brings the columns into `room`: first the heads are folded, then the widest columns of words, numbers last. */
 export function narrowed(columns: readonly SetColumn[], room: number): SetColumn[] {
   const excess = (sets: readonly SetColumn[]): number => sets.reduce((total, set) => total + set.width, -room);
   let sets = [...columns];
   if (excess(sets) <= 0) return sets;
   sets = sets.map((set) => withFoldedHead(set));
-  for (;;) {
-    const over = excess(sets);
-    if (over <= 0) return sets;
-    const words = sets
-      .map((set) => ({ set, least: Math.max(NARROWEST, longestWord([set.column.head, ...set.cells])) }))
-      .filter(({ set, least }) => set.column.align === 'left' && set.width > least)
-      .toSorted((a, b) => b.set.width - a.set.width);
-    const [first, second] = words;
-    if (first === undefined) return sets;
-    // No further than the next widest: then the two share what is left.
-    const widest = first.set;
-    const shared = Math.min(second?.set.width ?? 0, widest.width - 1);
-    const target = Math.max(first.least, widest.width - over, shared);
-    sets = sets.map((set) => (set === widest ? withFoldedWords(set, target) : set));
+  for (const foldable of FOLDABLE) {
+    for (;;) {
+      const over = excess(sets);
+      if (over <= 0) return sets;
+      const words = sets
+        .map((set) => ({ set, least: Math.max(NARROWEST, longestWord([set.column.head, ...set.cells])) }))
+        .filter(({ set, least }) => foldable(set) && set.width > least)
+        .toSorted((a, b) => b.set.width - a.set.width);
+      const [first, second] = words;
+      if (first === undefined) break;
+      // No further than the next widest: then the two share what is left.
+      const widest = first.set;
+      const shared = Math.min(second?.set.width ?? 0, widest.width - 1);
+      const target = Math.max(first.least, widest.width - over, shared);
+      sets = sets.map((set) => (set === widest ? withFoldedWords(set, target) : set));
+    }
   }
+  return sets;
 }

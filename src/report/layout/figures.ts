@@ -11,6 +11,9 @@ import {
 /** Errors are shown to two digits: more would pretend to know the error of the error. */
 const ERROR_DIGITS = 2;
 
+/** A value with its error takes no more digits than these. */
+const MOST_DIGITS = 12;
+
 /** An error or any other size that is read for its magnitude, without sign word. */
 export const rough = (text: string): string => shorten(text, ERROR_DIGITS, 'half-up');
 
@@ -22,11 +25,14 @@ export function plusMinus(text: string | undefined): string {
   return d.coefficient === 0n ? '0' : `± ${rough(text).replace(/^-/, '')}`;
 }
 
+const digitsOf = (d: { readonly coefficient: bigint }): number => String(d.coefficient).replace('-', '').length;
+
 /** "277(51)" with an error, "49.075700" without: at most `digits` digits. */
 export function withError(value: string, error: string | undefined, digits: number): string {
   if (error === undefined) return shorten(value, digits);
   const rounded = roundPdg(value, [error]);
-  if (rounded === undefined) return shorten(value, digits);
+  // An error far below the digits of a page says that all of them are known.
+  if (rounded === undefined || digitsOf(rounded.value) > MOST_DIGITS) return shorten(value, Math.max(digits, 10));
   return writeParentheses(rounded) ?? `${shorten(value, digits)} ± ${rough(error)}`;
 }
 

@@ -6,10 +6,17 @@
  */
 export type Tone = 'plain' | 'strong' | 'faint' | 'mark' | 'warn';
 
-/** Colours a text that already has its final width. */
-export type Paint = (text: string, tone: Tone) => string;
+/** Colours a text that already has its final width, and knows whether the page may use more than ASCII. */
+export interface Paint {
+  (text: string, tone: Tone): string;
+  readonly ascii?: boolean;
+}
 
 export const unpainted: Paint = (text) => text;
+
+/** The same painter for a page in plain ASCII. */
+export const inAscii = (paint: Paint): Paint =>
+  Object.assign((text: string, tone: Tone) => paint(text, tone), { ascii: true });
 
 /**
  * Painter for a terminal that shows colours.

@@ -21,6 +21,8 @@ export interface TableFrame {
   readonly width: number;
   readonly indent: number;
   readonly paint: Paint;
+  /** One column of the rule under the heads; a thin line when absent. */
+  readonly rule?: string;
 }
 
 /** Blanks between columns, the widest that fit. */
@@ -41,6 +43,15 @@ function rowLines(texts: readonly (readonly string[])[], columns: readonly SetCo
   );
 }
 
+/** Columns folded to fit with two blanks between them, with one where two do not do. */
+function squeezed(
+  natural: readonly SetColumn[],
+  spare: (gap: number) => number,
+): { gap: number; set: readonly SetColumn[] } {
+  const set = narrowed(natural, spare(2));
+  return sum(set.map((c) => c.width)) <= spare(2) ? { gap: 2, set } : { gap: 1, set: narrowed(natural, spare(1)) };
+}
+
 /** Sets a table. Columns whose cells are all empty are left out. */
 export function table(
   columns: readonly Column[],
@@ -56,8 +67,8 @@ export function table(
   const room = frame.width - indent;
   const spare = (gap: number): number => room - gap * (natural.length - 1);
   const total = sum(natural.map((set) => set.width));
-  const gap = GAPS.find((g) => total <= spare(g)) ?? 2;
-  const set = narrowed(natural, spare(gap));
+  const roomy = GAPS.find((g) => total <= spare(g));
+  const { gap, set } = roomy === undefined ? squeezed(natural, spare) : { gap: roomy, set: natural };
 
   const margin = ' '.repeat(indent);
   const between = ' '.repeat(gap);
@@ -80,7 +91,7 @@ export function table(
         set.map((c) => c.head),
         'faint',
       ),
-      margin + paint('─'.repeat(ruled), 'faint'),
+      margin + paint((frame.rule ?? '─').repeat(ruled), 'faint'),
     );
   }
   let at = 0;

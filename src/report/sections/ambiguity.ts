@@ -1,7 +1,7 @@
 /** @module Section 6: the renormalon ambiguity under its named conventions, and the power correction it stands for. */
 import type { AmbiguityReport, Assessment, PowerCorrectionReport } from '../../studies/index.js';
 import { shorten } from '../../numerics/index.js';
-import { percent, rough } from '../layout/figures.js';
+import { percent, rough, withError } from '../layout/figures.js';
 import type { Fact, Page } from '../layout/page.js';
 import type { TableNote, TableRow } from '../layout/table.js';
 import { sentence, withPi } from '../words.js';
@@ -13,7 +13,13 @@ const few = (text: string | undefined): string => (text === undefined ? '' : sho
 function conventionTable(page: Page, ambiguity: AmbiguityReport, unit: string): void {
   const rows = ambiguity.conventions.flatMap((c): (TableRow | TableNote)[] => {
     const name = c.name === ambiguity.chosen ? `${withPi(c.name)} (used in the verdict)` : withPi(c.name);
-    const cells = [name, few(c.value), c.relative === undefined ? '' : percent(c.relative), few(c.GeV), c.standing];
+    const cells = [
+      name,
+      withError(c.value, c.error, DIGITS),
+      c.relative === undefined ? '' : percent(c.relative),
+      few(c.GeV),
+      c.standing,
+    ];
     return [{ cells }, { note: c.origin, indent: 2, tone: 'faint' }];
   });
   if (rows.length === 0) return;
@@ -31,7 +37,7 @@ function conventionTable(page: Page, ambiguity: AmbiguityReport, unit: string): 
 }
 
 /** "GeV", "GeV^4". */
-const unitOf = ({ GeV }: PowerCorrectionReport): string =>
+const unitOf = ({ GeV }: { readonly GeV?: { readonly power: string } }): string =>
   GeV === undefined || GeV.power === '1' ? 'GeV' : `GeV^${GeV.power}`;
 
 function powerFacts(power: PowerCorrectionReport): Fact[] {
@@ -44,6 +50,15 @@ function powerFacts(power: PowerCorrectionReport): Fact[] {
   }
   if (power.GeV !== undefined) {
     facts.push({ label: 'as energy', text: `${few(power.GeV.value)} ${unitOf(power)}` });
+  }
+  const { fromStrength: own } = power;
+  if (own !== undefined) {
+    const energy = own.GeV === undefined ? '' : ` = ${withError(own.GeV.value, own.GeV.error, DIGITS)} ${unitOf(own)}`;
+    const root = own.root === undefined ? '' : `, its root ${few(own.root)} GeV`;
+    facts.push({
+      label: 'from N',
+      text: `|Im|/π = ${withError(own.overPower, own.overPowerError, DIGITS)} ${d === '1' ? 'Λ' : `Λ^${d}`}${energy}${root} (${own.lambda})`,
+    });
   }
   return facts;
 }
@@ -69,15 +84,23 @@ function condensateTable(page: Page, power: PowerCorrectionReport): void {
       cells: [
         c.name,
         c.dimension,
-        few(c.wilson),
-        c.fileValue ?? '',
-        few(c.shift),
-        few(c.shiftIm),
-        c.shiftOverValue === undefined ? '' : rough(c.shiftOverValue),
+        c.wilson === undefined ? NONE : few(c.wilson),
+        c.fileValue ?? NONE,
+        c.shift === undefined ? NONE : few(c.shift),
+        c.shiftIm === undefined ? NONE : few(c.shiftIm),
+        c.shiftOverValue === undefined ? NONE : rough(c.shiftOverValue),
       ],
     })),
   );
+  const reasons = new Map<string, string[]>();
+  for (const { name, missing } of power.condensates) {
+    if (missing !== undefined) reasons.set(missing, [...(reasons.get(missing) ?? []), name]);
+  }
+  page.points([...reasons].map(([why, names]) => `${[...new Set(names)].join(', ')}: ${why}.`));
 }
+
+/** Stands for a number that is missing; the line below the table says why. */
+const NONE = '–';
 
 export function ambiguitySection(
   page: Page,

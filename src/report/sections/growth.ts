@@ -1,9 +1,9 @@
 /** @module Section 3: how the coefficients grow, on what evidence, and where the nearest Borel singularity sits. */
-import type { ExpectedSingularity, GrowthReport, SingularityReport } from '../../studies/index.js';
+import type { ExpectedSingularity, GrowthReport, SingularityReport, StrengthReport } from '../../studies/index.js';
 import { shorten } from '../../numerics/index.js';
 import { percent, plusMinus, withError } from '../layout/figures.js';
 import type { Fact, Page } from '../layout/page.js';
-import type { TableRow } from '../layout/table.js';
+import type { TableNote, TableRow } from '../layout/table.js';
 import { sentence } from '../words.js';
 
 const DIGITS = 6;
@@ -68,6 +68,83 @@ function singularities(page: Page, growth: GrowthReport): void {
     page.blank();
     page.say(sentence(growth.agreement));
   }
+  const forms = correctionFacts(growth);
+  if (forms.length > 0) {
+    page.blank();
+    page.say(
+      'Corrections expected, (1 − t/t*)^(−γ) [1 + c_1 (1 − t/t*) + …] and c(n) ∝ Γ(n+γ) t*^(−n) [1 + …], p = γ − 1:',
+    );
+    page.facts(forms);
+  }
+  if (growth.strength !== undefined) strengthBlock(page, growth.strength);
+}
+
+const PLAIN_ORDER = 1e-9;
+
+/** Growth order with its error; an exact fit has no digits to show. */
+const orderText = (value: string, error: string | undefined): string =>
+  error !== undefined && Number(error) < PLAIN_ORDER ? shorten(value, 3) : withError(value, error, 4);
+
+/** Digits of a correction on the page. */
+const CORRECTION_DIGITS = 4;
+
+/** Corrections of every expected singularity, as many as the beta function fixes: c_1, c_2, … and what they are in 1/n. */
+function correctionFacts(growth: GrowthReport): Fact[] {
+  return growth.expected.flatMap(({ u, exponent, overN = [], corrections = [] }) => {
+    if (u === undefined || exponent === undefined || overN.length === 0) return [];
+    const p = Number((Number(exponent) - 1).toPrecision(DIGITS));
+    const under = (j: number): string =>
+      j === 0 ? '(n+p)' : `((n+p)${Array.from({ length: j }, (_, i) => `(n+p−${i + 1})`).join('')})`;
+    const terms = overN.map(
+      (e, j) => `${e.startsWith('-') ? '−' : '+'} ${shorten(e.replace(/^-/, ''), CORRECTION_DIGITS)}/${under(j)}`,
+    );
+    const c = corrections.map((x) => shorten(x, DIGITS)).join(', ');
+    return [{ label: `u = ${shorten(u, DIGITS)}`, text: `c = ${c}; 1 ${terms.join(' ')}, p = ${p}` }];
+  });
+}
+
+const STEP_DIGITS = 4;
+/** Steps shown: the last ones tell. */
+const STEPS = 4;
+
+const stepText = (steps: readonly string[]): string =>
+  `${steps.length > STEPS ? '… ' : ''}${steps
+    .slice(-STEPS)
+    .map((x) => shorten(x, STEP_DIGITS))
+    .join(', ')}`;
+
+function strengthBlock(page: Page, strength: StrengthReport): void {
+  page.blank();
+  const place = `Strength N at u = ${shorten(strength.u, DIGITS)} (d = ${strength.dimension}), for the series in the coupling itself`;
+  if (strength.refused !== undefined) {
+    page.say(`${place}: not known, since ${strength.refused.reason}.`, 'faint');
+    return;
+  }
+  page.say(`${place}:`);
+  page.blank();
+  page.table(
+    [
+      { head: 'method', align: 'left' },
+      { head: 'N', align: 'point' },
+      { head: 'coefficient by coefficient', align: 'left' },
+      { head: 'at Q/2, 2Q', align: 'left' },
+    ],
+    strength.methods.map((m) => ({
+      cells: [
+        m.method,
+        withError(m.value, m.error, DIGITS),
+        stepText(m.steps),
+        (m.scaleVariation ?? []).map((x) => shorten(x, STEP_DIGITS)).join(', '),
+      ],
+    })),
+  );
+  page.blank();
+  const value = withError(strength.value ?? '', strength.error, DIGITS);
+  page.say(
+    `N = ${value}: the first row, its error not below the distance to the next ones. Trust: ${strength.standing}.`,
+  );
+  page.say(strength.methods.map((m) => `${m.method}: ${m.reference}`).join('; '), 'faint');
+  page.points(strength.notes.map(sentence), 'warn');
 }
 
 function comparisonFacts(growth: GrowthReport): Fact[] {
@@ -78,13 +155,23 @@ function comparisonFacts(growth: GrowthReport): Fact[] {
   const order =
     comparison.growthOrder === undefined
       ? ''
-      : `; power of n! preferred: ${withError(comparison.growthOrder, comparison.growthOrderError, 4)}`;
+      : `; power of n! preferred: ${orderText(comparison.growthOrder, comparison.growthOrderError)}`;
   return [
     {
       label: 'models',
       text: `factorial against geometric on ${comparison.points} points: Bayes factor ${shorten(comparison.bayesFactor, 3)} (${comparison.wording}), ${aicc}${order}`,
     },
   ];
+}
+
+/** Longer tables are shown by their two ends. */
+const SHOWN = { atMost: 16, head: 4, tail: 8 } as const;
+
+function abridged(rows: readonly TableRow[]): (TableRow | TableNote)[] {
+  if (rows.length <= SHOWN.atMost) return [...rows];
+  const hidden = rows.length - SHOWN.head - SHOWN.tail;
+  const note: TableNote = { note: `… ${hidden} more of ${rows.length} rows; all in --json`, tone: 'faint' };
+  return [...rows.slice(0, SHOWN.head), note, ...rows.slice(-SHOWN.tail)];
 }
 
 function ratioTable(page: Page, growth: GrowthReport): void {
@@ -98,9 +185,11 @@ function ratioTable(page: Page, growth: GrowthReport): void {
       { head: 'linear extrapolant', align: 'point' },
       { head: 'its error', align: 'point' },
     ],
-    ratios.map((row) => ({
-      cells: [String(row.n), shorten(row.ratio, DIGITS), optional(row.linear), plusMinus(row.linearError)],
-    })),
+    abridged(
+      ratios.map((row) => ({
+        cells: [String(row.n), shorten(row.ratio, DIGITS), optional(row.linear), plusMinus(row.linearError)],
+      })),
+    ),
   );
   page.say('Both columns tend to 1/t* when one singularity leads. Indicative.', 'faint');
 }

@@ -1,7 +1,7 @@
 /** @module Section 4: what the Padé approximants see in the Borel plane. */
 import type { BorelPlaneReport, PadeEntry, PoleReport } from '../../studies/index.js';
 import { parseDecimal } from '../../numerics/index.js';
-import { conjugates } from '../layout/figures.js';
+import { conjugates, plusMinus } from '../layout/figures.js';
 import type { Page } from '../layout/page.js';
 import type { TableNote, TableRow } from '../layout/table.js';
 import { sentence } from '../words.js';
@@ -24,6 +24,12 @@ function modulus({ re, im = '0' }: PoleReport): number {
   return Math.hypot(Number(re), Number(im));
 }
 
+/** "± 0.0012" of a real pole, "± 0.002 ± 0.004i" of the two parts of a complex one. */
+function errorText(error: PoleReport['error']): string {
+  if (error === undefined) return '';
+  return error.im === undefined ? plusMinus(error.re) : `${plusMinus(error.re)} and ${plusMinus(error.im)}i`;
+}
+
 function poleRow(pole: PoleReport, name: string, digits: number): TableRow {
   const remarks = [
     pole.multiplicity > 1 ? `multiplicity ${pole.multiplicity}` : '',
@@ -39,7 +45,9 @@ function poleRow(pole: PoleReport, name: string, digits: number): TableRow {
   return pole.note === 'doublet' ? { cells, tone: 'faint' } : { cells };
 }
 
-const named = (entry: PadeEntry): string => (isZero(entry.leroy) ? entry.label : `${entry.label} b = ${entry.leroy}`);
+/** "[2/1]", and "[2/1] b = 17/81" of the Leroy transform. */
+export const entryName = (entry: PadeEntry): string =>
+  isZero(entry.leroy) ? entry.label : `${entry.label} b = ${entry.leroy}`;
 const isZero = (text: string): boolean => parseDecimal(text)?.coefficient === 0n;
 
 function countWords(count: number | undefined): string {
@@ -50,17 +58,21 @@ function countWords(count: number | undefined): string {
 
 function entryRows(entry: PadeEntry, digits: number): (TableRow | TableNote)[] {
   if (!entry.exists) {
-    return [{ note: `${named(entry)}  does not exist: ${entry.reason ?? 'degenerate block'}`, tone: 'warn' }];
+    return [{ note: `${entryName(entry)}  does not exist: ${entry.reason ?? 'degenerate block'}`, tone: 'warn' }];
   }
   const block = (entry.deficiency ?? 0) > 0 ? 'in a degenerate block, equal to a smaller entry' : '';
   const facts = [countWords(entry.positiveRealPoles), block].filter((text) => text !== '').join('; ');
   const drawn = entry.poles.filter((pole) => !isLowerTwin(pole, entry.poles)).sort((a, b) => modulus(a) - modulus(b));
   const rows: (TableRow | TableNote)[] = drawn
     .slice(0, POLES_SHOWN)
-    .map((pole, i) => poleRow(pole, i === 0 ? named(entry) : '', digits));
+    .map((pole, i) => poleRow(pole, i === 0 ? entryName(entry) : '', digits));
   const rest = drawn.length - POLES_SHOWN;
-  const tail = [facts, rest > 0 ? `${rest} more, farther out` : ''].filter((text) => text !== '').join('; ');
-  if (rows.length === 0) rows.push({ cells: [named(entry), 'no poles', '', '', ''] });
+  const moved = drawn.slice(0, POLES_SHOWN).map((pole) => errorText(pole.error));
+  const errors = moved.some((text) => text !== '')
+    ? `errors in t: ${moved.map((text) => (text === '' ? 'none' : text)).join(', ')}`
+    : '';
+  const tail = [facts, rest > 0 ? `${rest} more, farther out` : '', errors].filter((text) => text !== '').join('; ');
+  if (rows.length === 0) rows.push({ cells: [entryName(entry), 'no poles', '', '', ''] });
   if (tail !== '') rows.push({ note: tail, indent: 3, tone: 'faint' });
   return rows;
 }
@@ -86,6 +98,15 @@ export function planeSection(page: Page, plane: BorelPlaneReport): void {
     plane.doublets === 0
       ? 'No Froissart doublet.'
       : `${plane.doublets} Froissart doublet${plane.doublets === 1 ? '' : 's'} named and set aside.`;
-  page.say(`${doublets} Trust: ${plane.standing}.`);
+  page.say(
+    `${doublets} Trust: ${plane.standing} for ${plane.central === true ? 'the central' : 'these'} coefficients.`,
+  );
+  if (plane.central === true)
+    page.say(
+      plane.entries.some((entry) => entry.poles.some((pole) => pole.error !== undefined))
+        ? 'Errors of poles: from the quoted errors of the coefficients, to first order; none where a pole does not move smoothly. Indicative.'
+        : 'The quoted errors of the coefficients move no pole smoothly: positions have no first-order error.',
+      'faint',
+    );
   page.points(plane.notes.map((note) => sentence(note)));
 }

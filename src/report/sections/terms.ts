@@ -1,12 +1,11 @@
 /** @module Section 2: the terms, order by order, with the least one marked. */
 import type { Assessment, TermRow } from '../../studies/index.js';
 import { shorten } from '../../numerics/index.js';
-import { withError } from '../layout/figures.js';
 import type { Page } from '../layout/page.js';
 import type { TableNote, TableRow } from '../layout/table.js';
 
 /** Longer lists are shown by their two ends; the JSON output has every row. */
-const SHOWN = { atMost: 40, head: 16, tail: 16 } as const;
+const SHOWN = { atMost: 24, head: 10, tail: 10 } as const;
 
 const RATIO_DIGITS = 5;
 
@@ -17,10 +16,20 @@ function remark(row: TermRow, reached: boolean): string {
   return words.join(', ');
 }
 
+/** Digits of an error that the file gives by an expression. */
+const ERROR_DIGITS = 4;
+
+/** As the file says it: nothing of an input is rounded to its error. */
+function coefficient(row: TermRow, digits: number): string {
+  if (row.written !== undefined) return row.written;
+  const value = shorten(row.coefficient, digits);
+  return row.coefficientError === undefined ? value : `${value} ± ${shorten(row.coefficientError, ERROR_DIGITS)}`;
+}
+
 function setRow(row: TermRow, page: Page, reached: boolean): TableRow {
   const cells = [
     String(row.order),
-    withError(row.coefficient, row.coefficientError, page.digits),
+    coefficient(row, page.digits),
     shorten(row.term, page.digits),
     shorten(row.partialSum, page.digits),
     row.ratio === undefined ? '' : shorten(row.ratio, RATIO_DIGITS),
@@ -49,7 +58,7 @@ export function termsSection(
   const rows: (TableRow | TableNote)[] = terms.map((row) => setRow(row, page, reached));
   if (rows.length > SHOWN.atMost) {
     const hidden = rows.length - SHOWN.head - SHOWN.tail;
-    rows.splice(SHOWN.head, hidden, { note: `… ${hidden} orders between, all in the --json output …`, tone: 'faint' });
+    rows.splice(SHOWN.head, hidden, { note: `… ${hidden} more of ${terms.length} rows; all in --json`, tone: 'faint' });
   }
   page.table(
     [

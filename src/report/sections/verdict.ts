@@ -3,7 +3,7 @@ import type { Caution, VerdictReport } from '../../studies/index.js';
 import { shorten } from '../../numerics/index.js';
 import { plusMinus } from '../layout/figures.js';
 import type { Fact, Page } from '../layout/page.js';
-import { prescriptionTitle, sentence } from '../words.js';
+import { prescriptionTitle, sentence, withPi } from '../words.js';
 
 /** "borel-pade: [2/2]" in words. */
 function origin(prescription: string): string {
@@ -16,8 +16,13 @@ function parts(verdict: VerdictReport, digits: number): Fact[] {
   if (verdict.prescription !== undefined) facts.push({ label: 'from', text: origin(verdict.prescription) });
   if (verdict.value !== undefined) facts.push({ label: 'value', text: shorten(verdict.value, digits) });
   if (verdict.truncation !== undefined) facts.push({ label: 'truncation', text: plusMinus(verdict.truncation) });
-  if (verdict.ambiguity !== undefined) facts.push({ label: 'ambiguity', text: plusMinus(verdict.ambiguity) });
+  if (verdict.ambiguity !== undefined) {
+    const whose = verdict.ambiguityOf === undefined ? '' : `  (${withPi(verdict.ambiguityOf)})`;
+    facts.push({ label: 'ambiguity', text: `${plusMinus(verdict.ambiguity)}${whose}` });
+  }
   if (verdict.input !== undefined) facts.push({ label: 'input', text: plusMinus(verdict.input) });
+  if (verdict.assumption !== undefined)
+    facts.push({ label: 'assumes', text: `that ${verdict.assumption}`, tone: 'warn' });
   facts.push({ label: 'rule', text: verdict.rule }, { label: 'trust', text: verdict.standing });
   return facts;
 }
@@ -27,6 +32,7 @@ export function verdictSection(page: Page, verdict: VerdictReport, cautions: rea
   page.facts(parts(verdict, page.digits));
   page.blank();
   page.say(verdict.printed, 'mark');
+  if (verdict.inUnit !== undefined) page.say(`= ${verdict.inUnit.printed}`, 'mark');
   cautionPoints(page, cautions);
 }
 
