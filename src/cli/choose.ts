@@ -28,7 +28,11 @@ async function checked(
 /** Names of the prescriptions chosen, in the order of the list; undefined when nothing narrows it. */
 export async function chosenPrescriptions(given: Given, command: string): Promise<readonly string[] | undefined> {
   const { prescriptions } = await import('./rooms.js');
-  const all = [...prescriptions.PRESCRIPTIONS, ...Object.values(prescriptions.CONTOUR_NAMES)];
+  const all = [
+    ...prescriptions.PRESCRIPTIONS,
+    ...Object.values(prescriptions.CONTOUR_NAMES),
+    prescriptions.BUBBLE_CHAIN,
+  ];
   const names = all.map((p) => p.name);
   const families = [...new Set(all.map((p) => p.family))];
   const only = await checked('only', 'prescription', given.only, names, command);

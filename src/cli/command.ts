@@ -3,6 +3,7 @@ import type { ContourGiven } from './options-contour.js';
 import type { OptionName, OptionWords } from './options.js';
 import type { BubbleGiven } from './options-bubbles.js';
 import type { ExtractGiven } from './options-extract.js';
+import type { ReplicaGiven } from './options-replicas.js';
 import type { MassGiven } from './options-mass.js';
 import type { NewGiven } from './options-new.js';
 import type { PaperGiven } from './options-papers.js';
@@ -10,7 +11,8 @@ import type { PictureGiven } from './options-pictures.js';
 import type { Surroundings } from './surroundings.js';
 
 /** Option values after checking. Absent means not given. */
-export interface Given extends PictureGiven, PaperGiven, MassGiven, ContourGiven, NewGiven, BubbleGiven, ExtractGiven {
+export interface Given
+  extends PictureGiven, PaperGiven, MassGiven, ContourGiven, NewGiven, BubbleGiven, ExtractGiven, ReplicaGiven {
   readonly at?: string;
   readonly alphaSMZ?: string;
   readonly alphaS?: string;

@@ -3,6 +3,7 @@ import type { OptionSpec, OptionWords } from './option-kinds.js';
 import { BUBBLE_OPTIONS } from './options-bubbles.js';
 import { COMPARE_OPTIONS } from './options-compare.js';
 import { EXTRACT_OPTIONS } from './options-extract.js';
+import { REPLICA_OPTIONS } from './options-replicas.js';
 import { MASS_OPTIONS } from './options-mass.js';
 import { CONTOUR_OPTIONS } from './options-contour.js';
 import { NEW_OPTIONS } from './options-new.js';
@@ -17,6 +18,7 @@ export type OptionName =
   | keyof typeof QCD_OPTIONS
   | keyof typeof COMPARE_OPTIONS
   | keyof typeof EXTRACT_OPTIONS
+  | keyof typeof REPLICA_OPTIONS
   | keyof typeof BUBBLE_OPTIONS
   | keyof typeof CONTOUR_OPTIONS
   | keyof typeof MASS_OPTIONS
@@ -44,6 +46,7 @@ export const OPTIONS: Readonly<Record<OptionName, OptionSpec>> = {
   ...QCD_OPTIONS,
   ...COMPARE_OPTIONS,
   ...EXTRACT_OPTIONS,
+  ...REPLICA_OPTIONS,
   ...BUBBLE_OPTIONS,
   ...CONTOUR_OPTIONS,
   ...MASS_OPTIONS,

@@ -14,6 +14,8 @@ export interface Surroundings {
   /** Standard input, when it is not the process's own. */
   readonly stdin?: AsyncIterable<Uint8Array | string>;
   readonly environment: Readonly<Record<string, string | undefined>>;
+  /** Calls the handler at the first Ctrl-C in place of ending; the second one ends at once. The way back comes back. */
+  readonly onInterrupt?: (handler: () => void) => () => void;
 }
 
 /** The process's own. */
@@ -30,5 +32,11 @@ export function processSurroundings(): Surroundings {
     stderr: sink(process.stderr),
     stdinIsTerminal: process.stdin.isTTY === true,
     environment: process.env,
+    onInterrupt: (handler) => {
+      process.once('SIGINT', handler);
+      return () => {
+        process.removeListener('SIGINT', handler);
+      };
+    },
   };
 }

@@ -2,6 +2,7 @@
 import type { Assessment, Caution, EvolveStep, Refused, SeriesSummary, Standing } from '../studies/index.js';
 import type { ComponentName, TotalName } from './budget.js';
 import type { Unknown } from './problem.js';
+import type { ReplicaResult } from './replicas/result.js';
 
 /** Signed change of the unknown by one cause; `slope` of R or a new solution. */
 export interface ShiftEntry {
@@ -133,5 +134,7 @@ export interface ExtractResult {
   readonly rows: readonly ExtractRow[];
   readonly summary?: ExtractSummary;
   readonly condensates?: readonly PowerTermEntry[];
+  /** A Monte Carlo of the same question. */
+  readonly replicas?: ReplicaResult;
   readonly cautions: readonly Caution[];
 }

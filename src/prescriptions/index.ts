@@ -51,6 +51,8 @@ export const PRESCRIPTIONS: readonly Prescription[] = [
 
 export type { Outcome, Prescription, Refusal, Request, Sum, Trust } from './prescription.js';
 export { leastTerm, partialSums, prefactor, terms } from './prescription.js';
+export { BUBBLE_CHAIN, bubbleChain } from './bubble-chain.js';
+export type { BubbleEngine } from './bubble-chain.js';
 export { CONTOUR_NAMES } from './contour-names.js';
 export { contourPrescriptions } from './contour-quantities.js';
 export type { ContourEngine } from './contour-quantities.js';

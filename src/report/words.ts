@@ -1,11 +1,11 @@
 /** @module Plain words for the names that results use. */
-import { CONTOUR_NAMES, PRESCRIPTIONS } from '../prescriptions/index.js';
+import { BUBBLE_CHAIN, CONTOUR_NAMES, PRESCRIPTIONS } from '../prescriptions/index.js';
 
 const capital = (text: string): string => text.slice(0, 1).toUpperCase() + text.slice(1);
 
 /** The title of a prescription as a heading; an unknown one in its own letters. */
 export function prescriptionTitle(name: string): string {
-  const all = [...PRESCRIPTIONS, ...Object.values(CONTOUR_NAMES)];
+  const all = [...PRESCRIPTIONS, ...Object.values(CONTOUR_NAMES), BUBBLE_CHAIN];
   const known = all.find((prescription) => prescription.name === name);
   return capital(known?.title ?? name.replaceAll('-', ' '));
 }

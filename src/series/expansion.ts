@@ -78,4 +78,6 @@ export interface Expansion {
   readonly contour?: ContourOrigin;
   /** Exponents of F at strong coupling, F ~ x^power [1 + O(x^−spacing)], where they are known. */
   readonly strongCoupling?: StrongCoupling;
+  /** Name of the large-β0 quantity that continues the series, see the prescription bubble-chain. */
+  readonly bubbleChain?: string;
 }

@@ -103,6 +103,8 @@ export interface Series {
   readonly singularities: readonly KnownSingularity[];
   readonly condensates: readonly Condensate[];
   readonly strongCoupling?: StrongCoupling;
+  /** Name of the quantity whose large-β0 limit continues the series to all orders. */
+  readonly bubbleChain?: string;
   readonly measurement?: Uncertain & { readonly unit?: string; readonly source?: string };
   /**
    * The coefficients are those of D = Σ c_n x^(n + firstPower), x at the scale −s, and the quantity is

@@ -113,6 +113,7 @@ export function writeSeries(s: Series): string {
   );
   list('singularities', s.singularities.map(singularity));
   list('condensates', s.condensates.map(condensate));
+  field('bubble chain', text(s.bubbleChain));
   const { strongCoupling } = s;
   field('strong coupling', strongCoupling && flow([['power', strongCoupling.power.toString()], ['spacing', strongCoupling.spacing.toString()]])); // prettier-ignore
   if (s.measurement) field('measurement', uncertain(s.measurement, [['unit', text(s.measurement.unit)], ['source', text(s.measurement.source)]])); // prettier-ignore

@@ -2,6 +2,7 @@
 import type { FitResult, FitSummary } from '../extraction/index.js';
 import { Page, unpainted, type TerminalOptions } from '../report/index.js';
 import { budgetTable, cut, legend, refusedFacts, sidesText } from './budget-parts.js';
+import { replicaSection } from './replicas.js';
 
 const withPi = (text: string): string => text.replaceAll(/\balpha_s\b/g, 'α_s');
 
@@ -160,6 +161,7 @@ export function fitText(result: FitResult, options: TerminalOptions): string {
     page.head('Correlations');
     correlations(page, result, summary);
   }
+  if (result.replicas !== undefined) replicaSection(page, result.replicas);
   if (result.cautions.length > 0) {
     page.head('Cautions');
     page.points(result.cautions.map((c) => c.text), 'warn'); // prettier-ignore

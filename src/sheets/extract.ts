@@ -3,6 +3,7 @@ import type { ExtractResult, ExtractRow, FitResult, UnknownSummary } from '../ex
 import { Page, unpainted, type Fact, type TerminalOptions } from '../report/index.js';
 import { budgetTable, cellText, componentOf, cut, legend, refusedFacts, sidesText } from './budget-parts.js';
 import { fitLines, fitText } from './extract-fit.js';
+import { replicaSection } from './replicas.js';
 
 const withPi = (text: string): string => text.replaceAll(/\balpha_s\b/g, 'α_s');
 
@@ -185,6 +186,7 @@ function singleText(result: ExtractResult, options: TerminalOptions): string {
   }
   summarySection(page, result);
   condensateSection(page, result);
+  if (result.replicas !== undefined) replicaSection(page, result.replicas);
   if (result.cautions.length > 0) {
     page.head('Cautions');
     page.points(result.cautions.map((c) => c.text), 'warn'); // prettier-ignore

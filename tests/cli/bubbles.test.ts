@@ -120,3 +120,30 @@ describe('leastterm bubbles', () => {
     expect(stderr.replaceAll('\nleastterm: ', ' ')).toMatch(message);
   });
 });
+
+describe('the prescription bubble-chain', () => {
+  test('is a row of compare where the file names a chain, and only there', async () => {
+    const rows = async (series: string): Promise<string[]> =>
+      (await run(`compare ${series} --at 0.25 --only fixed-order,bubble-chain --hide 0 -q`)).stdout
+        .trim()
+        .split('\n')
+        .map((row) => row.split('\t')[0] ?? '');
+    expect(await rows('bjorken')).toEqual(['fixed-order', 'bubble-chain']);
+    expect(await rows('top-width')).toEqual(['fixed-order']);
+  });
+
+  test('sum gives its digits', async () => {
+    const { stdout } = await run('sum adler --at 0.3139 --by bubble-chain --digits 15 -q');
+    expect(stdout).toBe('1.14038258567987\n');
+  });
+
+  test('asked of a series without a chain, and of one with a wrong name', async () => {
+    const none = await run('sum top-width --at 0.1 --by bubble-chain');
+    expect([none.status, none.stderr]).toEqual([2, expect.stringContaining('names no bubble chain; write "bubble chain: adler"')]); // prettier-ignore
+    const text =
+      'coupling: { name: alpha_s, divisor: pi }\nscheme: MSbar\nflavours: 3\nfirst power: 1\nbubble chain: adlr\ncoefficients: [1, 2, 3]\n';
+    const wrong = await leastterm(words('sum - --at 0.1 --by bubble-chain'), { stdin: text });
+    expect(wrong.status).toBe(2);
+    expect(wrong.stderr).toContain('no quantity "adlr" (did you mean "adler"?)');
+  });
+});

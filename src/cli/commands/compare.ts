@@ -1,7 +1,7 @@
 /** @module leastterm compare: every prescription side by side. */
 import type { Call, Command } from '../command.js';
 import { choiceRequest, chosenPrescriptions } from '../choose.js';
-import { contourExtras } from '../contour-extras.js';
+import { seriesExtras } from '../chain-extras.js';
 import { EXIT, UsageError } from '../faults.js';
 import { couplingOf, exactValue, readSeries, requestOf, USUAL_DIGITS, wantedCoupling } from '../input.js';
 import { deliver } from '../output.js';
@@ -51,7 +51,7 @@ async function run(call: Call): Promise<number> {
   const options: CompareOptions = {
     ...(reached?.path === undefined ? {} : { path: reached.path }),
     ...(given.order === undefined ? {} : { order: given.order }),
-    ...(await contourExtras(series, by, compare.name)),
+    ...(await seriesExtras(series, by, compare.name)),
     ...(sort === undefined ? {} : { sort }),
     ...(exact === undefined ? {} : { exact }),
     ...(given.hide === undefined ? {} : { hide: given.hide }),

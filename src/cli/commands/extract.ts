@@ -8,6 +8,7 @@ import { problemOf } from '../extract-problem.js';
 import { EXIT, UsageError } from '../faults.js';
 import { readSeries, USUAL_DIGITS } from '../input.js';
 import { deliver } from '../output.js';
+import { checkReplicaOptions, replicasOf } from '../replicas.js';
 import { presentation } from '../present.js';
 import { accepted } from '../refused.js';
 import type { Request } from '../input.js';
@@ -94,6 +95,7 @@ function requestOf(given: Given, rows: readonly Row[]): Request {
     correlation: given.correlation,
     weights: given.weights,
     search: given.search,
+    replicas: given.replicas,
     order: given.order,
     flavours: given.flavours,
     ...choiceRequest(given),
@@ -103,6 +105,7 @@ function requestOf(given: Given, rows: readonly Row[]): Request {
 }
 
 async function run(call: Call): Promise<number> {
+  checkReplicaOptions(call, extract.name);
   const { given, rows, correlation } = await questionOf(call);
   const mass = given.from === undefined ? undefined : await measuredMass(given);
   const series = mass === undefined ? [] : [mass.series];
@@ -121,13 +124,16 @@ async function run(call: Call): Promise<number> {
   if (series.length > 1 && problem.for !== 'alpha_s' && problem.for !== 'mass')
     throw new UsageError(`--for ${problem.for} takes one series; a fit is for alpha_s or mass`, extract.name);
   const fitted = series.length > 1 || problem.freeAlphaS === true;
-  const result = accepted(
+  const solved = accepted(
     fitted ? extraction.fit(problem, series, request) : extraction.extract(problem, first, request),
     extract.name,
   );
+  const replicas = await replicasOf(call, problem, series, extract.name);
+  const result = replicas === undefined ? solved : { ...solved, replicas };
   if (given.json) deliver(report.plainJson(result), call);
   else if (given.quiet) deliver(sheets.extractLines(result), call);
   else deliver(sheets.extractText(result, await presentation(call)), call);
+  if (replicas?.interrupted === true) return EXIT.interrupted;
   return result.rows.every((row) => row.refused !== undefined) ? EXIT.allRefused : EXIT.done;
 }
 
@@ -174,6 +180,9 @@ export const extract: Command = {
     'weights',
     'search',
     'problem',
+    'replicas',
+    'seed',
+    'workers',
     'order',
     'flavours',
     'digits',

@@ -1,6 +1,6 @@
 /** @module leastterm sum: one prescription, as many digits as are wanted. */
 import type { Call, Command } from '../command.js';
-import { contourExtras } from '../contour-extras.js';
+import { seriesExtras } from '../chain-extras.js';
 import { EXIT, UsageError } from '../faults.js';
 import { couplingOf, readSeries, requestOf, USUAL_DIGITS, wantedCoupling } from '../input.js';
 import { deliver } from '../output.js';
@@ -9,7 +9,11 @@ import { presentation } from '../present.js';
 /** The prescription that --by names; a usage error with the known names otherwise. */
 async function prescriptionOf(by: string | undefined): Promise<string> {
   const { prescriptions, series } = await import('../rooms.js');
-  const names = [...prescriptions.PRESCRIPTIONS, ...Object.values(prescriptions.CONTOUR_NAMES)].map((p) => p.name);
+  const names = [
+    ...prescriptions.PRESCRIPTIONS,
+    ...Object.values(prescriptions.CONTOUR_NAMES),
+    prescriptions.BUBBLE_CHAIN,
+  ].map((p) => p.name);
   if (by !== undefined && names.includes(by)) return by;
   const known = `one of ${names.join(', ')}`;
   if (by === undefined) throw new UsageError(`--by is missing: ${known}`, sum.name);
@@ -30,7 +34,7 @@ async function run(call: Call): Promise<number> {
     ...(given.order === undefined ? {} : { order: given.order }),
     digits: given.digits ?? USUAL_DIGITS,
     ...(path === undefined ? {} : { path }),
-    ...(await contourExtras(series, [by], sum.name)),
+    ...(await seriesExtras(series, [by], sum.name)),
     request: requestOf(sum.name, name, call),
   });
   const { variant } = given;
@@ -50,7 +54,7 @@ export const sum: Command = {
   summary: 'one prescription, to any number of digits',
   about: [
     "Sums the series by one prescription: every member of the family with its value, truncation error, ambiguity and trust, or a refusal with its reason and remedy. With --quiet only the value of the family's own choice, for scripts.",
-    'Prescriptions: fixed-order, least-term, terminant, hyperasymptotic, scale-variation, fac, pms, blm, pade, wynn-epsilon, levin, weniger-delta, euler, order-dependent-map, borel-pade, borel-leroy-pade, borel-dlog, borel-partial-pade, borel-quadratic, borel-conformal, borel-hypergeometric, borel-pade-2, singularity-model; for contour quantities also contour-improved, contour-borel, contour-borel-pade, condensate-subtracted.',
+    'Prescriptions: fixed-order, least-term, terminant, hyperasymptotic, scale-variation, fac, pms, blm, pade, wynn-epsilon, levin, weniger-delta, euler, order-dependent-map, borel-pade, borel-leroy-pade, borel-dlog, borel-partial-pade, borel-quadratic, borel-conformal, borel-hypergeometric, borel-pade-2, singularity-model; for contour quantities also contour-improved, contour-borel, contour-borel-pade, condensate-subtracted; for series that name their chain also bubble-chain.',
   ],
   operands: [{ name: 'SERIES', help: 'a catalogue id, a series file, or - for standard input' }],
   options: [

@@ -1,5 +1,6 @@
 /** @module The plain result of a fit to several measurements. Numbers are decimal strings. */
 import type { Assessment, Caution, Refused } from '../../studies/index.js';
+import type { ReplicaResult } from '../replicas/result.js';
 import type { BudgetEntry, DatumSummary, ExtractSummary, QuotedEntry, UnknownSummary } from '../result.js';
 
 export interface PullEntry {
@@ -58,5 +59,7 @@ export interface FitResult {
   readonly weights: string;
   readonly rows: readonly FitRow[];
   readonly summary?: FitSummary;
+  /** A Monte Carlo of the same question. */
+  readonly replicas?: ReplicaResult;
   readonly cautions: readonly Caution[];
 }

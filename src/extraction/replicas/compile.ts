@@ -22,7 +22,7 @@ import type { Whole } from '../theory.js';
 import type { Range } from './places.js';
 import { placeModel } from './places.js';
 import type { DatumModel, PrescriptionModel, Slot } from './problem.js';
-import { SlotList } from './slots.js';
+import type { SlotList } from './slots.js';
 
 /** One measurement of an extraction, with its series and power corrections. */
 export interface DatumSource {

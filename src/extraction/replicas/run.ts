@@ -77,13 +77,14 @@ async function threaded(
   const work = async (): Promise<void> =>
     new Promise((resolve, reject) => {
       const worker = new Worker(file, { workerData: order });
+      const send = worker.postMessage.bind(worker);
       threads.push(worker);
       const hand = (): void => {
         const block = blocks[next];
         if (block === undefined || options.signal?.aborted === true) resolve();
         else {
           next++;
-          worker.postMessage(block);
+          send(block);
         }
       };
       worker.on('message', (result: BlockResult) => {
