@@ -64,7 +64,7 @@ export async function replicasOf(
   const release = surroundings.onInterrupt?.(() => stop.abort());
   const bar = barOf(call, count);
   try {
-    const options = { count, seed, workers, signal: stop.signal, onProgress: bar.show };
+    const options = { count, seed, workers, signal: stop.signal, onProgress: (done: number) => bar.show(done) };
     return accepted(await extraction.replicate(problem, series, options), command);
   } finally {
     bar.clear();

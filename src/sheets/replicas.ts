@@ -21,6 +21,8 @@ function about(median: ReplicaNumber, low: ReplicaNumber, high: ReplicaNumber): 
   return sidesText({ plus, minus }).replace('± ', '±');
 }
 
+const digits = (text: string, count: number): string => String(Number(Number(text).toPrecision(count)));
+
 const share = (part: number, of: number): string =>
   part === 0 ? '' : `${rough(((100 * part) / Math.max(1, of)).toPrecision(3))} %`;
 
@@ -45,7 +47,9 @@ function cells(name: string, d: ReplicaDistribution, ratio: string | undefined, 
     about(median, low95, high95),
     cut(sigma.value),
     cut(ratio),
-    Number(skewness.value).toFixed(2),
+    Number(skewness.value)
+      .toFixed(2)
+      .replace(/^-(0\.0+)$/, '$1'),
     failed,
   ];
 }
@@ -96,7 +100,7 @@ function histograms(page: Page, replicas: ReplicaResult, q: number): void {
   const lines = mixed === undefined ? rows : [...rows, { label: 'drawn at random', counts: mixed }];
   if (lines.length === 0) return;
   const bins = lines[0]?.counts.length ?? 0;
-  const range = `${bins} bins from ${rough4(quantity.from)} to ${rough4(quantity.to)}`;
+  const range = `${bins} bins from ${digits(quantity.from, 4)} to ${digits(quantity.to, 4)}`;
   page.blank();
   page.facts([
     ...lines.map(({ label, counts }): Fact => ({ label, text: `|${sparkline(counts, ascii)}|` })),
@@ -104,15 +108,13 @@ function histograms(page: Page, replicas: ReplicaResult, q: number): void {
   ]);
 }
 
-const rough4 = (text: string): string => String(Number(Number(text).toPrecision(4)));
-
 /** The section, behind the budgets. */
 export function replicaSection(page: Page, replicas: ReplicaResult): void {
   page.head('Replicas');
   const { asked, done, seed, inputs } = replicas;
   const drawn = inputs.map(({ name, central, plus, minus }) => {
-    const size = plus === minus ? `± ${rough(plus)}` : `+${rough(plus)} -${rough(minus)}`;
-    return `${withPi(name)} ${rough6(central)} ${size}`;
+    const size = plus === minus ? `± ${digits(plus, 2)}` : `+${digits(plus, 2)} -${digits(minus, 2)}`;
+    return `${withPi(name)} ${digits(central, 6)} ${size}`;
   });
   page.facts([
     { label: 'replicas', text: `${done}${done === asked ? '' : ` of ${asked}, interrupted`}, seed ${seed}` },
@@ -145,5 +147,3 @@ function words({ mixture, leftOut, rows }: ReplicaResult): string[] {
     ...leftOut.map(({ prescription, reason }) => `${prescription} is left out: ${reason}.`),
   ];
 }
-
-const rough6 = (text: string): string => String(Number(Number(text).toPrecision(6)));

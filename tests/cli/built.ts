@@ -23,8 +23,10 @@ export async function builtProgram(): Promise<string> {
   return join(outdir, 'leastterm.mjs');
 }
 
-/** Removes what builtProgram left. */
-export const removeProgram = (program: string): void => rmSync(dirname(program), { recursive: true, force: true });
+/** Removes what builtProgram left; nothing when it left nothing. */
+export function removeProgram(program: string): void {
+  if (program !== '') rmSync(dirname(program), { recursive: true, force: true });
+}
 
 export interface Ended {
   readonly status: number | null;
