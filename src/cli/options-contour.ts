@@ -6,7 +6,7 @@ export const CONTOUR_OPTIONS = {
     kind: 'text',
     placeholder: 'WEIGHT',
     example: "'1,-2,1'",
-    help: "another weight w(x): coefficients w_0,w_1,… of a polynomial in x = s/s_0, such as '1,-2,1', or a name, such as kinematic",
+    help: "another weight w(x): coefficients w_0,w_1,... of a polynomial in x = s/s_0, such as '1,-2,1', or a name, such as kinematic",
   },
   norm: {
     kind: 'text',

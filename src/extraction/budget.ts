@@ -151,7 +151,10 @@ export function totals(components: readonly Component[]): Totals {
   return { quadrature: both('quadrature'), linear: both('linear'), mixed: both('mixed') };
 }
 
-/** The same components for a function of the unknown, each shift taken through it. */
+/**
+ * The same components for a function of the unknown, each shift taken through it. A component whose shifted unknown leads
+ * nowhere has no number there.
+ */
 export function mapped(
   components: readonly Component[],
   central: number,
@@ -159,13 +162,24 @@ export function mapped(
 ): readonly Component[] {
   const there = f(central);
   if (there === undefined) return [];
+  const through = (shift: number): number | undefined => {
+    if (shift === 0) return 0;
+    const moved = f(central + shift);
+    return moved === undefined ? undefined : moved - there;
+  };
   return components.map((c) => {
-    const through = (shift: number): number => (shift === 0 ? 0 : (f(central + shift) ?? NaN) - there);
+    if (c.missing !== undefined) return c;
     const sources = c.sources.map((s) => ({
       ...s,
-      shifts: s.shifts.map((one) => ({ ...one, shift: through(one.shift) })),
+      shifts: s.shifts.flatMap((one) => {
+        const shift = through(one.shift);
+        return shift === undefined ? [] : [{ ...one, shift }];
+      }),
     }));
     const [up, down] = [through(c.plus), through(-c.minus)];
+    if (up === undefined || down === undefined) {
+      return { ...c, sources, plus: 0, minus: 0, missing: 'the shifted value cannot be taken there' };
+    }
     return { ...c, sources, plus: Math.max(0, up, down), minus: Math.max(0, -up, -down) };
   });
 }

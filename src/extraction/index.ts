@@ -25,3 +25,6 @@ export type { ThresholdMass } from './threshold-mass.js';
 export { REPLICA_LIMITS, replicate } from './replicas/study.js';
 export type { RunOptions as ReplicaOptions } from './replicas/run.js';
 export type * from './replicas/result.js';
+export { lowMomentumSeries, seriesCut } from './series-cut.js';
+export type { SeriesCutQuestion } from './series-cut.js';
+export type { SeriesCutResult, SeriesCutRow } from './series-cut-result.js';

@@ -13,8 +13,8 @@ import { isRefusal, refuse } from '../qcd/index.js';
 import type { Refusal } from '../qcd/index.js';
 import type { Coefficient, Series } from '../series/index.js';
 
-/** Coupling at which the coefficients are read off; any would do. */
-const PROBE = 0.3;
+/** Coupling at m(m) at which the coefficients are read off; any would do that can be run to the cutoff. */
+const PROBE = 0.2;
 /** Digits of a coefficient that survive the differences. */
 const DIGITS = 11;
 

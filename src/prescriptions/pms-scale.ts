@@ -8,9 +8,9 @@
  * Reference  P. M. Stevenson, Phys. Rev. D 23 (1981) 2916 (scale variable only).
  */
 import { R } from '../numerics/index.js';
-import type { Ball, Exact } from '../numerics/index.js';
-import { scaleLogTable } from '../qcd/index.js';
+import type { Ball } from '../numerics/index.js';
 import type { Expansion, Running } from '../series/index.js';
+import { logRows } from '../truncation/index.js';
 import { betaFunction, bracket, runner } from './running-coupling.js';
 import type { BetaFunction } from './running-coupling.js';
 
@@ -31,20 +31,20 @@ const GRID_BITS = 80;
 
 interface Problem {
   readonly beta: BetaFunction;
-  /** d_n as polynomials in L. */
-  readonly table: readonly (readonly Exact[])[];
+  /** Entry [k][n] multiplies ln(μ_0²/μ²)^k in d_n. */
+  readonly table: readonly (readonly Ball[])[];
   /** x at a shift of ln μ². */
   readonly run: (shift: Ball) => Ball | undefined;
   readonly power: number;
 }
 
 /** d_n(L) and its derivative. */
-function row(coefficients: readonly Exact[], L: Ball, prec: number): readonly [Ball, Ball] {
+function row(table: Problem['table'], n: number, L: Ball, prec: number): readonly [Ball, Ball] {
   let value: Ball = R.ZERO;
   let slope: Ball = R.ZERO;
-  for (let k = coefficients.length - 1; k >= 0; k--) {
+  for (let k = n; k >= 0; k--) {
     slope = R.add(R.mul(slope, L, prec), value, prec);
-    value = R.add(R.mul(value, L, prec), coefficients[k]!.ball(prec), prec);
+    value = R.add(R.mul(value, L, prec), table[k]![n]!, prec);
   }
   return [value, slope];
 }
@@ -57,9 +57,9 @@ function at(p: Problem, L: Ball, prec: number): readonly [Ball, Ball] | undefine
   let weight = R.powInt(x, p.power - 1, prec);
   let value: Ball = R.ZERO;
   let slope: Ball = R.ZERO;
-  p.table.forEach((coefficients, n) => {
+  p.table.forEach((_, n) => {
     // The table is in ln(μ_0²/μ²) = −L.
-    const [d, opposite] = row(coefficients, R.neg(L), prec);
+    const [d, opposite] = row(p.table, n, R.neg(L), prec);
     const moved = R.mul(R.mul(R.fromNumber(n + p.power), d, prec), velocity, prec);
     slope = R.add(slope, R.mul(weight, R.sub(moved, R.mul(opposite, x, prec), prec), prec), prec);
     weight = R.mul(weight, x, prec);
@@ -78,12 +78,12 @@ export function stationaryPoints(
 ): readonly Stationary[] {
   const coefficients = e.coefficients.slice(0, count);
   const work = prec + 32;
-  const table = scaleLogTable({ coefficients, firstPower: e.power }, running.beta);
   const make = (bits: number): Problem => {
     const beta = betaFunction(
       running.beta.map((b) => b.ball(bits)),
       bits,
     );
+    const table = logRows(coefficients, e.power, running.beta, bits);
     return { beta, table, run: runner(beta, e.x.ball(bits), bits), power: e.power };
   };
   const rough = make(GRID_BITS);

@@ -6,4 +6,4 @@ export { nextOrder, type Known } from './known.js';
 export { PRIORS, USUAL_PRIORS, isPriorProblem, priorNames, readPriors } from './priors.js';
 export type { PriorName, PriorProblem, Priors } from './priors.js';
 export { questionOf, restricted, type Setting } from './question.js';
-export { logTable } from './scale/log-table.js';
+export { logRows, logTable } from './scale/log-table.js';

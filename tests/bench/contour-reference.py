@@ -31,7 +31,7 @@ def weight(phase, W):
 
 
 def around(f, a, W):
-    return quad(lambda p: (weight(exp(1j * p), W) * f(a(p)[0])).real, [0, pi], method="gauss-legendre", maxdegree=4) / pi
+    return quad(lambda p: (weight(exp(1j * p), W) * f(a(p)[0])).real, [0, pi], method="gauss-legendre", maxdegree=6) / pi
 
 
 def improved(alpha, c, W, digits):

@@ -62,10 +62,11 @@ def pipeline(n, coefficients, x, digits):
     slope = [k * q[k] for k in range(1, n + 1)]
     x = mpf(x[0]) / mpf(x[1])
     total = p[n] / q[n]
+    # residues at full precision: the polynomials cancel
+    residues = [mp.polyval(p[::-1], z) / mp.polyval(slope[::-1], z) for z in roots]
     mp.dps = digits + 15
-    for z in roots:
+    for z, residue in zip(roots, residues):
         # residue/(t - z): int e^-s/(x s - z) ds = (1/x) e^w E1(w) at w = -z/x, passing above a positive pole
-        residue = mp.polyval(p[::-1], z) / mp.polyval(slope[::-1], z)
         w = -z / x
         if abs(mp.im(z)) < mpf(10) ** (-digits) * abs(z) and mp.re(z) > 0:
             y = mp.re(z) / x

@@ -203,7 +203,7 @@ describe('the quoted row', () => {
   test('as chosen, or by the ladder among the rows without a caution', async () => {
     const series = await loadSeries('tau-delta0-estimate');
     const problem = coupling(quantity('0.2037', 0.005), { to: atMZ });
-    expect(standing(extract(problem, series, {})).summary?.prescription).toBe('fixed-order');
+    expect(standing(extract(problem, series, {})).summary?.prescription).toBe('singularity-model');
     expect(standing(extract({ ...problem, central: 'borel-pade' }, series, {})).summary).toMatchObject({
       prescription: 'borel-pade',
       rule: 'as chosen',

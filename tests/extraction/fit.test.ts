@@ -105,15 +105,19 @@ describe('two measurements of one number', () => {
   });
 
   test('theory in the weights takes weight from the uncertain prediction', async () => {
-    const sharp = { ...(await yaml(LINE)), id: 'one' };
-    const noisy = { ...(await yaml('first power: 1\ncoefficients: [{ value: 1, error: 0.2 }]')), id: 'two' };
+    // The second term keeps the truncation error out of the way.
+    const sharp = { ...(await yaml('first power: 1\ncoefficients: [1, 1e-9]')), id: 'one' };
+    const noisy = {
+      ...(await yaml('first power: 1\ncoefficients: [{ value: 1, error: 0.2 }, 1e-9]')),
+      id: 'two',
+    };
     const problem = twice(0.3, 0.01, 0.36, 0.01, 0);
     const value = (more: Partial<Problem>): number =>
-      Number(
-        standing(fit({ ...problem, truncationBy: 'last-term', ...more }, [sharp, noisy], {})).summary?.values[0]?.value,
-      );
-    near(value({}), 0.33, 1e-6);
-    expect(value({ theoryInWeights: true })).toBeLessThan(0.33 + 1e-9);
+      Number(standing(fit({ ...problem, ...more }, [sharp, noisy], {})).summary?.values[0]?.value);
+    near(value({}), 0.33, 1e-7);
+    // Weights 1/0.01² and 1/(0.01² + (0.2 · 0.33)²).
+    const w = 1 / (0.01 ** 2 + (0.2 * 0.33) ** 2);
+    near(value({ theoryInWeights: true }), (0.3 / 0.01 ** 2 + 0.36 * w) / (1 / 0.01 ** 2 + w), 1e-6);
   });
 });
 
@@ -141,7 +145,7 @@ describe('refused', () => {
 });
 
 describe('QCD series', () => {
-  test('mass and α_s free: two moments made at known values give them back', async () => {
+  test('mass and α_s free: two moments fix both, and the mass alone at that α_s is the same', async () => {
     const series = [await loadSeries('charm-moment-1'), await loadSeries('charm-moment-2')];
     const base = { ...usual, alphaS: quantity('0.118', 0.001), prescriptions: ['fixed-order'] } as const;
     const made = (massPower: number, norm: string, value: string): Problem['data'][number] => ({
@@ -150,7 +154,6 @@ describe('QCD series', () => {
       norm: quantity(norm),
       measured: quantity(value, Number(value) / 100, massPower),
     });
-    // The moments at m = 1.28 GeV, α_s(M_Z) = 0.12, from fits of m at that coupling, inverted.
     const at = (data: Problem['data'], more: Partial<Problem>): FitResult =>
       standing(fit({ ...base, for: 'mass', data, ...more }, series, {}));
     const guess = [made(-2, '1/4', '0.2166'), made(-4, '1/16', '0.01497')];

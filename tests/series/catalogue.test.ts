@@ -85,7 +85,7 @@ describe('what is stated beside the coefficients', () => {
     expect([additive.rational?.toString(), firstPower]).toEqual(['1', 1]);
     expect(condensates[0]!.dimension.toString()).toBe('4');
     expect(condensates[0]!.wilson!.ball(64).mid > 0n).toBe(true);
-    expect(singularities.map((s) => s.kind)).toEqual(['infrared', 'infrared', 'ultraviolet']);
+    expect(singularities.map((s) => s.kind)).toEqual(['infrared', 'infrared', 'ultraviolet', 'ultraviolet']);
   });
 
   test('the invented series are exact to sixty coefficients, and two of them cancel', async () => {

@@ -12,14 +12,13 @@ import { R, type Ball, type Exact } from '../../numerics/index.js';
 /** Spare bits for the sums over powers of L. */
 const SPARE = 64;
 
-/** Coefficients at ln(μ²/μ_0²) = logRatio for a series Σ c_n x^(n + firstPower) at μ_0, enclosed to about `bits` bits. */
-export function logTable(
+/** T_k[n] for a series Σ c_n x^(n + firstPower) at μ_0, rows k = 0 … N−1, computed with `prec` bits. */
+export function logRows(
   coefficients: readonly Exact[],
   firstPower: number,
   beta: readonly Exact[],
-  bits: number,
-): (logRatio: number) => Ball[] {
-  const prec = bits + SPARE;
+  prec: number,
+): Ball[][] {
   const b = beta.map((x) => x.ball(prec));
   const rows: Ball[][] = [coefficients.map((c) => c.ball(prec))];
   for (let k = 1; k < coefficients.length; k++) {
@@ -36,6 +35,18 @@ export function logTable(
       }),
     );
   }
+  return rows;
+}
+
+/** Coefficients at ln(μ²/μ_0²) = logRatio, enclosed to about `bits` bits. */
+export function logTable(
+  coefficients: readonly Exact[],
+  firstPower: number,
+  beta: readonly Exact[],
+  bits: number,
+): (logRatio: number) => Ball[] {
+  const prec = bits + SPARE;
+  const rows = logRows(coefficients, firstPower, beta, prec);
   return (logRatio) => {
     const L = R.fromNumber(-logRatio);
     return coefficients.map((_, n) => {
