@@ -51,7 +51,7 @@ function step(n: number, x: bigint, wp: number): bigint {
 /** The zero to double precision. */
 function roughZero(n: number, i: number): number {
   let x = Math.cos((Math.PI * (i + 0.75)) / (n + 0.5));
-  for (let step = 0; step < 6; step++) {
+  for (let round = 0; round < 6; round++) {
     let [before, value] = [1, x];
     for (let k = 1; k < n; k++) [before, value] = [value, ((2 * k + 1) * x * value - k * before) / (k + 1)];
     x -= (value * (1 - x * x)) / (n * (before - x * value));

@@ -1,11 +1,13 @@
 /** @module The public face of the report room: plain results in, text out. */
 export { catalogueText, plainSeries, seriesText } from './catalogue.js';
 export { catalogueCheckText, catalogueProblems } from './catalogue-check.js';
-export { contourLines, contourText } from './contour.js';
 export { evolveText } from './evolve.js';
 export { plainJson, resultJson } from './json.js';
-export { rough } from './layout/figures.js';
+export { conjugates, plusMinus, rough, withError } from './layout/figures.js';
 export { Page, type Fact } from './layout/page.js';
+export { couplingFacts } from './sections/read.js';
+export { cautionPoints } from './sections/verdict.js';
+export { sentence, withPi } from './words.js';
 export type { TableNote, TableRow } from './layout/table.js';
 export type { Paint, Tone } from './layout/paint.js';
 export { inAscii, painter, unpainted } from './layout/paint.js';

@@ -31,7 +31,7 @@ def weight(phase, W):
 
 
 def around(f, a, W):
-    return quad(lambda p: (weight(exp(1j * p), W) * f(a(p)[0])).real, [0, pi], method="gauss-legendre", maxdegree=6) / pi
+    return quad(lambda p: (weight(exp(1j * p), W) * f(a(p)[0])).real, [0, pi], method="gauss-legendre", maxdegree=5) / pi
 
 
 def improved(alpha, c, W, digits):
@@ -102,6 +102,6 @@ alpha, c, W = task["alpha"], task["coefficients"], task["integral"]
 print(json.dumps({
     "version": __version__,
     "doubles": timed(lambda: improved(alpha, c, W, 15)),
-    "improved": timed(lambda: improved(alpha, c, W, 30)),
+    "improved": timed(lambda: improved(alpha, c, W, 20)),
     "borel": timed(lambda: borel(alpha, c, W, 15)),
 }))

@@ -17,13 +17,13 @@ describe('fixed order, δ⁽⁰⁾ = 0.2037, c_5 = 283 (root finding with mpmath
   test('solution and slope', async () => {
     const row = rowOf(extract(fixed('0.2037', 0.0019), await yaml(FIXED_ORDER), {}), 'fixed-order');
     // The coefficients above have 15 digits, and so has the solution less what they lose.
-    near(row.value, 0.319868648861861417, 2e-14);
-    near(row.slope, 1.18836340961718071, 1e-10);
+    near(row.value, Number('0.319868648861861417'), 2e-14);
+    near(row.slope, Number('1.18836340961718071'), 1e-10);
   });
 
   test.each([
-    [0.0019, 0.00159883751436950238],
-    [0.006, 0.00504896057169316539],
+    [0.0019, Number('0.00159883751436950238')],
+    [0.006, Number('0.00504896057169316539')],
   ])('an error of %s in δ⁽⁰⁾', async (error, shift) => {
     const row = rowOf(extract(fixed('0.2037', error), await yaml(FIXED_ORDER), {}), 'fixed-order');
     near(componentIn(row, 'measurement').plus, shift, 1e-7);
@@ -32,7 +32,7 @@ describe('fixed order, δ⁽⁰⁾ = 0.2037, c_5 = 283 (root finding with mpmath
 
   test('the last term as truncation error', async () => {
     const row = rowOf(extract(fixed('0.2037', 0), await yaml(FIXED_ORDER), {}), 'fixed-order');
-    near(componentIn(row, 'truncation').plus, 0.00543985594918687924, 1e-7);
+    near(componentIn(row, 'truncation').plus, Number('0.00543985594918687924'), 1e-7);
   });
 });
 

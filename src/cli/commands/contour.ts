@@ -76,8 +76,8 @@ async function run(call: Call): Promise<number> {
     more.contour,
   );
   if (given.json) deliver(report.plainJson(result), call);
-  else if (given.quiet) deliver(report.contourLines(result), call);
-  else deliver(report.contourText(result, await presentation(call)), call);
+  else if (given.quiet) deliver(more.sheets.contourLines(result), call);
+  else deliver(more.sheets.contourText(result, await presentation(call)), call);
   return EXIT.done;
 }
 

@@ -104,7 +104,7 @@ describe('upper incomplete Γ', () => {
     for (const s of ['1/3', '-2', '-5.5']) {
       const wide = upperGammaComplex(q(s), { re: R.addError(b('1.5'), 1, -30), im: R.addError(b('-2'), 1, -30) }, P);
       for (const d of ['-9e-10', '0', '9e-10']) {
-        const at = upperGammaComplex(q(s), { re: b(`${1.5}`), im: R.add(b('-2'), b(d), W) }, P);
+        const at = upperGammaComplex(q(s), { re: b('1.5'), im: R.add(b('-2'), b(d), W) }, P);
         expect(C.overlaps(wide, at)).toBe(true);
       }
       expect(C.accuracyBits(wide)).toBeGreaterThan(24);

@@ -1,14 +1,19 @@
 /** @module A contour quantity for people: the weight, both expansions order by order, their Borel sums, the subtracted series. */
 import type { ContourResult } from '../studies/index.js';
 import { shorten } from '../numerics/index.js';
-import { conjugates, plusMinus, rough, withError } from './layout/figures.js';
-import { Page } from './layout/page.js';
-import type { Fact } from './layout/page.js';
-import { unpainted } from './layout/paint.js';
-import { couplingFacts } from './sections/read.js';
-import { cautionPoints } from './sections/verdict.js';
-import type { TerminalOptions } from './terminal.js';
-import { sentence, withPi } from './words.js';
+import {
+  cautionPoints,
+  conjugates,
+  couplingFacts,
+  Page,
+  plusMinus,
+  rough,
+  sentence,
+  unpainted,
+  withError,
+  withPi,
+} from '../report/index.js';
+import type { Fact, TerminalOptions } from '../report/index.js';
 
 /** Moments and operator dimensions shown; JSON has all. */
 const MOST_ROWS = 5;
