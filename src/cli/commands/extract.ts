@@ -196,19 +196,19 @@ export const extract: Command = {
     'mass-power': {
       placeholder: 'POWERS',
       example: '-2',
-      help: 'the measured quantity is norm · m^P · R: -2n for the n-th moment, 5 for a width (default 1); 0 for a datum without the mass; several series: joined by commas',
+      help: 'the measured quantity is norm * m^P * R: -2n for the n-th moment, 5 for a width (default 1); 0 for a datum without the mass; several series: joined by commas',
     },
     norm: {
       placeholder: 'VALUES',
       example: '1/4',
-      help: 'the measured quantity is norm · m^P · R (default 1), with its error and unit if it has them; several series: joined by commas',
+      help: 'the measured quantity is norm * m^P * R (default 1), with its error and unit if it has them; several series: joined by commas',
     },
     from: {
       placeholder: 'DEFINITION',
       example: 'ps@2GeV',
       help: 'in place of a series, for --for mass: the definition of the measured mass, pole, rs@2GeV, rs-prime@2GeV, ps@2GeV, kinetic@1GeV',
     },
-    to: { help: 'where α_s is wanted besides its own scale: a scale with its unit, MZ (default), mtau, or none' },
+    to: { help: 'where alpha_s is wanted besides its own scale: a scale with its unit, MZ (default), mtau, or none' },
     'to-flavours': { help: 'active flavours there; needed where two numbers are in use' },
     at: { help: 'the coupling of the series, with its error, for --for condensate' },
     'alpha-s-mz': {
@@ -223,8 +223,8 @@ export const extract: Command = {
       'the coupling at the tau mass and at M_Z from the hadronic tau width',
     ],
     [
-      "leastterm extract charm-moment-1 --measured '0.2166(31) GeV^-2' --for mass --mass-power -2 --norm 1/4",
-      'the charm mass from the first moment',
+      "leastterm extract moment.yaml --measured '0.2166(31) GeV^-2' --for mass --mass-power -2",
+      'a quark mass from a moment that falls like its square',
     ],
     ["leastterm extract pole-msbar-nl5 --for pole-mass --mass '162.5(1.8)GeV'", 'the top pole mass and its ambiguity'],
   ],
