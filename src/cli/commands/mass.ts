@@ -114,7 +114,7 @@ export const mass: Command = {
     ["leastterm mass '172.1(6)GeV' --from pole --to msbar", 'the top pole mass as m(m), with its ambiguity'],
     [
       "leastterm mass '4.18GeV' --to msr@2GeV --alpha-s 0.2250@4.18GeV --loops 4",
-      'with a coupling of four flavours at the mass, and the path of the R-evolution',
+      'with four flavours in the coupling, and the path of the R-evolution',
     ],
   ],
   run,
