@@ -125,10 +125,7 @@ export const bubbles: Command = {
   },
   examples: [
     ['leastterm bubbles', 'the quantities'],
-    [
-      'leastterm bubbles adler --at 0.32',
-      'the Adler function: exact sum, ambiguity, and every prescription against it',
-    ],
+    ['leastterm bubbles adler --at 0.32', 'the Adler function: its exact sum, and every prescription against it'],
     ['leastterm bubbles pole-mass --at 0.22 --scale 4.2GeV --digits 40', 'the pole mass, its ambiguity in GeV'],
     ['leastterm bubbles static-potential --at 0.25 --view scales', 'ever softer momenta, order by order'],
     ['leastterm bubbles adler --at 0.32 --cut 0.6', 'without the momenta below 0.6 Q'],

@@ -116,7 +116,7 @@ export const create: Command = {
   examples: [
     ['leastterm new mine.yaml', 'asks, and writes mine.yaml'],
     [
-      "leastterm new mine.yaml --coupling alpha_s/pi --flavours 3 --scheme MSbar --coefficients '1, 1.6398, 6.371'",
+      "leastterm new mine.yaml --coupling alpha_s/pi --flavours 3 --coefficients '1, 1.64, 6.37'",
       'from options, for a script',
     ],
   ],
