@@ -48,7 +48,7 @@ module.exports = {
       severity: 'error',
       comment:
         'commands get what they run from import("../rooms.js"); from the rooms themselves they import types only',
-      from: { path: '^src/cli/', pathNot: '^src/cli/rooms(-more|-pictures)?\\.ts$' },
+      from: { path: '^src/cli/', pathNot: '^src/cli/rooms(-core|-more|-pictures)?\\.ts$' },
       to: { path: '^src/[^/]+/index', pathNot: '^src/cli/', dependencyTypesNot: ['type-only'] },
     },
     {
@@ -56,7 +56,7 @@ module.exports = {
       severity: 'error',
       comment: 'a static import would load all rooms for every --help',
       from: { path: '^src/cli/' },
-      to: { path: '^src/cli/rooms(-more|-pictures)?\\.ts$', dynamic: false },
+      to: { path: '^src/cli/rooms(-core|-more|-pictures)?\\.ts$', dynamic: false },
     },
     {
       name: 'rooms-do-not-import-the-public-face',

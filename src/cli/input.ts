@@ -12,7 +12,7 @@ export const USUAL_DIGITS = 15;
 
 /** Loads the series that the first operand names: a catalogue id, a file, or - for standard input. */
 export async function readSeries(name: string, { given, surroundings }: Call): Promise<Series> {
-  const { series } = await import('./rooms.js');
+  const series = await import('./rooms-core.js');
   if (name === '-' && surroundings.stdinIsTerminal && !given.quiet) {
     surroundings.stderr.write('leastterm: reading the series from the terminal; Ctrl-D ends it\n');
   }
@@ -29,7 +29,7 @@ export async function readSeries(name: string, { given, surroundings }: Call): P
 
 /** The value of --at. */
 export async function readCoupling(at: string, command: string): Promise<Uncertain> {
-  const { series } = await import('./rooms.js');
+  const series = await import('./rooms-core.js');
   const value = series.parseUncertain(at);
   if (series.isNumberProblem(value)) throw new UsageError(`--at: ${value.problem}; wanted ${value.wanted}`, command);
   return value;

@@ -20,6 +20,6 @@ export function asciiOnly(environment: Readonly<Record<string, string | undefine
 /** A text as these surroundings can show it. */
 export async function plainText(text: string, { environment }: Pick<Surroundings, 'environment'>): Promise<string> {
   if (!asciiOnly(environment)) return text;
-  const { report } = await import('./rooms.js');
-  return report.asciiOf(text);
+  const { asciiOf } = await import('./rooms-core.js');
+  return asciiOf(text);
 }

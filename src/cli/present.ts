@@ -13,7 +13,7 @@ function columnsOf(environment: Readonly<Record<string, string | undefined>>): n
 }
 
 export async function presentation({ given, surroundings }: Call): Promise<TerminalOptions> {
-  const { report } = await import('./rooms.js');
+  const report = await import('./rooms-core.js');
   const toFile = given.output !== undefined && given.output !== '-';
   const level = colourLevel({
     refused: given.noColor,

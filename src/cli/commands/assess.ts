@@ -26,9 +26,9 @@ async function run(call: Call): Promise<number> {
   const wanted = await wantedCoupling(call, assess.name);
   const series = await readSeries(name, call);
   const { at, path } = await couplingOf(wanted, series, assess.name);
-  const { report, studies } = await import('../rooms.js');
+  const rooms = await import('../rooms-core.js');
   const rule = await ruleOf(given.verdictRule);
-  const result = studies.assess(series, at, {
+  const result = rooms.assess(series, at, {
     ...(given.order === undefined ? {} : { order: given.order }),
     digits: given.digits ?? USUAL_DIGITS,
     ...(path === undefined ? {} : { path }),
@@ -38,9 +38,9 @@ async function run(call: Call): Promise<number> {
       ...(given.verdictRule === undefined ? {} : { 'verdict-rule': given.verdictRule }),
     },
   });
-  if (given.json) deliver(report.resultJson(result), call);
+  if (given.json) deliver(rooms.resultJson(result), call);
   else if (given.quiet) deliver(await plainText(`${result.verdict.printed}\n`, call.surroundings), call);
-  else deliver(report.assessmentText(result, await presentation(call)), call);
+  else deliver(rooms.assessmentText(result, await presentation(call)), call);
   return result.values.every((entry) => entry.refused !== undefined) ? EXIT.allRefused : EXIT.done;
 }
 

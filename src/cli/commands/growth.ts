@@ -9,15 +9,15 @@ async function run(call: Call): Promise<number> {
   const [name = ''] = call.operands;
   if (call.given.at !== undefined) await readCoupling(call.given.at, growth.name);
   const series = await readSeries(name, call);
-  const { report, studies } = await import('../rooms.js');
-  const result = studies.growthStudy(series, {
+  const rooms = await import('../rooms-core.js');
+  const result = rooms.growthStudy(series, {
     ...(call.given.order === undefined ? {} : { order: call.given.order }),
     digits: call.given.digits ?? USUAL_DIGITS,
     request: requestOf(growth.name, name, call),
   });
-  if (call.given.json) deliver(report.resultJson(result), call);
+  if (call.given.json) deliver(rooms.resultJson(result), call);
   else if (call.given.quiet) deliver(`${result.growth.verdict}\n`, call);
-  else deliver(report.growthText(result, await presentation(call)), call);
+  else deliver(rooms.growthText(result, await presentation(call)), call);
   return EXIT.done;
 }
 

@@ -9,16 +9,16 @@ async function run(call: Call): Promise<number> {
   const [name = ''] = call.operands;
   if (call.given.at !== undefined) await readCoupling(call.given.at, plane.name);
   const series = await readSeries(name, call);
-  const { report, studies } = await import('../rooms.js');
-  const result = studies.planeStudy(series, {
+  const rooms = await import('../rooms-core.js');
+  const result = rooms.planeStudy(series, {
     ...(call.given.order === undefined ? {} : { order: call.given.order }),
     digits: call.given.digits ?? USUAL_DIGITS,
     request: requestOf(plane.name, name, call),
   });
-  if (call.given.json) deliver(report.resultJson(result), call);
+  if (call.given.json) deliver(rooms.resultJson(result), call);
   else
     deliver(
-      call.given.quiet ? report.planeLines(result.borelPlane) : report.planeText(result, await presentation(call)),
+      call.given.quiet ? rooms.planeLines(result.borelPlane) : rooms.planeText(result, await presentation(call)),
       call,
     );
   return EXIT.done;
