@@ -2,10 +2,11 @@
  * @module Conformally mapped Borel transform in doubles: linear in the coefficients, summed along a ray.
  *
  *   B = (1+w)^{−2γ₁} (1−w)^{−2γ₂} Σ d_n w^n  or  (1+t/a)^{−γ₁} (1−t/b)^{−γ₂} Σ d_n w^n  or  Σ d_n w^n,   d = D c,
- * with the matrix D of the re-expansion made beforehand in enclosures. Formulas: borel/conformal.ts; the ray: ray-sum.ts.
+ * with the matrix D of the re-expansion made beforehand in enclosures; the integrals of w^n are tabled. Formulas: borel/conformal.ts; the ray: ray-sum.ts.
  */
 import type { Kernel } from './kernel.js';
 import { RaySum } from './ray-sum.js';
+import { TabledSums } from './tabled.js';
 
 export interface ConformalSetting {
   readonly kind: 'borel-conformal';
@@ -61,6 +62,31 @@ export function conformalKernel({ rows, softening, left, right, x: X }: Conforma
     factorRe[j] = Math.exp(log) * Math.cos(turn);
     factorIm[j] = Math.exp(log) * Math.sin(turn);
   }
+  const sumFor = (coefficients: ArrayLike<number>): void => {
+    for (let j = 0; j < ray.count; j++) {
+      const [x, y] = [wRe[j]!, wIm[j]!];
+      let re = 0;
+      let im = 0;
+      for (let n = N - 1; n >= 0; n--) {
+        const t = re * x - im * y + coefficients[n]!;
+        im = re * y + im * x;
+        re = t;
+      }
+      ray.set(j, re * factorRe[j]! - im * factorIm[j]!, re * factorIm[j]! + im * factorRe[j]!);
+    }
+  };
+  // The integrals of w^n, one after the other, are the functions; the d_n their weights.
+  const integrals = Array.from({ length: N }, (_, n) => {
+    sumFor(Float64Array.from({ length: N }, (_d, k) => (k === n ? 1 : 0)));
+    return ray.snapshot();
+  });
+  const sums = new TabledSums(
+    N,
+    (x, out) => {
+      for (let n = 0; n < N; n++) out[n] = integrals[n]!(x);
+    },
+    X,
+  );
   return {
     prepare(c) {
       if (c.length < N) return false;
@@ -70,19 +96,15 @@ export function conformalKernel({ rows, softening, left, right, x: X }: Conforma
         for (let k = 0; k <= n; k++) sum += row[k]! * c[k]!;
         d[n] = sum;
       }
-      for (let j = 0; j < ray.count; j++) {
-        const [x, y] = [wRe[j]!, wIm[j]!];
-        let re = 0;
-        let im = 0;
-        for (let n = N - 1; n >= 0; n--) {
-          const t = re * x - im * y + d[n]!;
-          im = re * y + im * x;
-          re = t;
-        }
-        ray.set(j, re * factorRe[j]! - im * factorIm[j]!, re * factorIm[j]! + im * factorRe[j]!);
-      }
+      sums.contract(d);
       return true;
     },
-    value: (x) => ray.real(x),
+    value(x) {
+      const tabled = sums.at(x);
+      if (!Number.isNaN(tabled)) return tabled;
+      let sum = 0;
+      for (let n = 0; n < N; n++) sum += d[n]! * integrals[n]!(x);
+      return sum;
+    },
   };
 }

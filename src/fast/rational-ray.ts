@@ -94,6 +94,7 @@ export class RationalOnRay {
       const vi = (pi * qr - pr * qi) / norm;
       ray.set(j, vr * fRe[j]! - vi * fIm[j]!, vr * fIm[j]! + vi * fRe[j]!);
     }
+    ray.settle();
   }
 
   /** Real part of (1/x) ∫ e^{−t/x} f(t) [L/M](t) dt. */

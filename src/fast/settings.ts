@@ -200,6 +200,7 @@ function singularityModel(e: Expansion): SingularityModelSetting | undefined {
       strength: affine((f) => f.strengths[i]!),
     })),
     polynomial: nothing.polynomial.map((_, k) => affine((f) => f.polynomial[k]!)),
+    x: toNumberExact(e.x),
   };
 }
 

@@ -2,13 +2,14 @@
  * @module The whole Monte Carlo of an extraction, checked: what is fast agrees with what is certified at the central values, and
  * every map reaches as far as the inputs can carry the parameters.
  */
-import { isRefusal, refuse } from '../../qcd/index.js';
+import { evolvePath, isRefusal, refuse } from '../../qcd/index.js';
 import type { Refusal, ScalePoint } from '../../qcd/index.js';
+import { shiftedThresholds } from '../place.js';
 import type { Problem } from '../problem.js';
 import { dataModels, prescriptionModel } from './compile.js';
 import type { CentralSource, DatumSource } from './compile.js';
 import { Engine } from './engine.js';
-import { evolutionMap, LARGEST_DEVIATE } from './maps.js';
+import { couplingMap, LARGEST_DEVIATE } from './maps.js';
 import type { Range } from './places.js';
 import type { DatumModel, DerivedModel, ParameterModel, PrescriptionModel, ReplicaProblem, Task } from './problem.js';
 import { SlotList } from './slots.js';
@@ -48,8 +49,8 @@ const SLACK = 4;
 /** Deviates reach 8.7 standard deviations; responses are not exactly linear. */
 const MARGIN = 1.25;
 const ATTEMPTS = 4;
-/** The coupling is followed down to this share of its central value and up to that multiple of it, where the evolution allows. */
-const FOLLOWED = { down: 0.3, up: 0.4 } as const;
+/** The coupling is followed at least so far below and above its central value, never farther below than `least`; in units of it. */
+const FOLLOWED = { down: 0.3, up: 0.4, least: 0.9 } as const;
 
 interface Solutions {
   readonly list: readonly PrescriptionModel[];
@@ -150,11 +151,12 @@ function derivedOf(
   if (evolution === undefined) return undefined;
   const values = list.map((p) => p.central[0]!);
   const { central, reach } = rangeOf(values, MARGIN * widest(engine, 0));
-  const mapped = evolutionMap(problem, slots, {
-    variables: [
-      { slot: 0, central, down: Math.min(reach, FOLLOWED.down * central), up: Math.max(reach, FOLLOWED.up * central) },
-    ],
-    path: ([alpha = NaN]) => ({ alpha, ...evolution }),
+  const down = Math.min(Math.max(reach, FOLLOWED.down * central), FOLLOWED.least * central);
+  const variable = { slot: 0, central, down, up: Math.max(reach, FOLLOWED.up * central) };
+  const mapped = couplingMap(problem, slots, [variable], ([alpha = NaN], shifts) => {
+    const thresholds = shiftedThresholds(problem.thresholds, shifts);
+    const end = evolvePath({ alpha, ...evolution, options: { loops: problem.loops, thresholds } });
+    return isRefusal(end) ? NaN : end.alpha;
   });
   if (isRefusal(mapped)) return mapped;
   return { symbol: `alpha_s(${evolution.to.scale} GeV)`, ...mapped };
@@ -168,7 +170,7 @@ function disagreeing(engine: Engine, list: readonly PrescriptionModel[]): LeftOu
     if (gap <= AGREES) return [];
     const reason = Number.isNaN(gap)
       ? 'its fast version has no value at the central inputs'
-      : `its fast version is off by ${gap.toExponential(1)} at the central inputs: the coefficients are too ill-conditioned for doubles`;
+      : `its fast version is off by ${gap.toExponential(1)} at the central inputs: doubles do not carry it`;
     return [{ prescription: p.name, reason }];
   });
 }

@@ -14,6 +14,7 @@ import type { Series } from '../../series/index.js';
 import { fixedOrderOf } from '../../studies/index.js';
 import type { Expanded } from '../../studies/index.js';
 import { numberOf } from '../place.js';
+import type { PlaceOf } from '../place.js';
 import type { PowerTerm } from '../power-terms.js';
 import type { Datum, Problem } from '../problem.js';
 import type { Extracted } from '../rows.js';
@@ -28,6 +29,7 @@ import type { SlotList } from './slots.js';
 export interface DatumSource {
   readonly datum: Datum;
   readonly stages: Stages;
+  readonly placeAt: PlaceOf;
   readonly terms: readonly PowerTerm[];
   readonly extracted?: Extracted;
 }
@@ -99,12 +101,15 @@ export function dataModels(
     }),
   );
   const models: DatumModel[] = [];
-  for (const [i, { datum, stages, terms }] of sources.entries()) {
+  for (const [i, { datum, stages, placeAt, terms }] of sources.entries()) {
     const { series } = stages;
     const stage = stages.at();
     if (isRefusal(stage)) return stage;
     const coefficients = coefficientSlots(stage, series, slots);
-    const place = placeModel({ problem, series, datum, slots, ranges, common, label: labels[i] ?? '' });
+    const label = labels[i] ?? '';
+    const count = coefficients.length;
+    const question = { problem, series, datum, placeAt, slots, ranges, common, label, coefficients: count };
+    const place = placeModel(question);
     if (isRefusal(place)) return place;
     const { expansion } = stage.expanded;
     const own = measured[i];

@@ -49,9 +49,10 @@ function parameterOf({ problem, stages, extracted, datum }: Setting): Parameter 
   }
 }
 
-const datumSource = ({ datum, stages, terms, extracted }: Setting): DatumSource => ({
+const datumSource = ({ datum, stages, placeAt, terms, extracted }: Setting): DatumSource => ({
   datum,
   stages,
+  placeAt,
   terms,
   ...(extracted === undefined ? {} : { extracted }),
 });

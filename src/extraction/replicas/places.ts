@@ -1,16 +1,19 @@
-/** @module Where the coupling of a datum comes from in a Monte Carlo: the doubles of place.ts. */
-import { toNumberExact } from '../../numerics/index.js';
-import { INPUTS, isRefusal, refuse } from '../../qcd/index.js';
+/**
+ * @module Where the coupling of a datum comes from in a Monte Carlo: the places of the extraction itself (place.ts), as tables over
+ * the parameters and inputs that move them.
+ */
+import { Rational, exact, toNumberExact } from '../../numerics/index.js';
+import type { Exact } from '../../numerics/index.js';
+import { isRefusal, refuse } from '../../qcd/index.js';
 import type { Refusal } from '../../qcd/index.js';
 import type { Series } from '../../series/index.js';
 import { hardScale, numberOf } from '../place.js';
+import type { PlaceOf, Shifts } from '../place.js';
 import type { Datum, Problem, Quantity } from '../problem.js';
-import { evolutionMap, LARGEST_DEVIATE } from './maps.js';
-import type { Mapped, Variable } from './maps.js';
-import type { CouplingSource, Slot } from './problem.js';
+import { couplingMap, driftMaps, LARGEST_DEVIATE } from './maps.js';
+import type { CouplingAt, Variable } from './maps.js';
+import type { DatumModel, Slot } from './problem.js';
 import type { Errors, SlotList } from './slots.js';
-
-const MZ = { scale: Number(INPUTS.MZ.value), flavours: 5 } as const;
 
 /** Where a parameter may go: central − reach to central + reach. */
 export interface Range {
@@ -18,20 +21,14 @@ export interface Range {
   readonly reach: number;
 }
 
-export interface PlaceModel {
-  readonly coupling: CouplingSource;
-  /** m of X = norm · m^P · R. */
-  readonly mass?: Slot;
-  readonly massPower: number;
-  readonly norm?: Slot;
-  /** Hard scale in GeV. */
-  readonly scale?: Slot;
-}
+/** What a place makes of a datum. */
+export type PlaceModel = Pick<DatumModel, 'coupling' | 'mass' | 'massPower' | 'norm' | 'scale' | 'drift'>;
 
 export interface PlaceQuestion {
   readonly problem: Problem;
   readonly series: Series;
   readonly datum: Datum;
+  readonly placeAt: PlaceOf;
   readonly slots: SlotList;
   /** The parameters. */
   readonly ranges: readonly Range[];
@@ -39,111 +36,139 @@ export interface PlaceQuestion {
   readonly common: boolean;
   /** Tells this datum from the others. */
   readonly label: string;
+  /** Coefficients that are used. */
+  readonly coefficients: number;
 }
 
-const ratioOf = (series: Series): number => (series.scaleRatio === undefined ? 1 : toNumberExact(series.scaleRatio));
-
 /** The input slot of a quoted quantity. */
-export const quantitySlot = (slots: SlotList, name: string, q: Quantity): Slot => slots.add(name, numberOf(q), q);
+const quantitySlot = (slots: SlotList, name: string, q: Quantity): Slot => slots.add(name, numberOf(q), q);
 
-const asVariable = (slot: Slot, central: number, { plus, minus }: Errors): Variable => ({
+const inputVariable = (slot: Slot, central: number, { plus, minus }: Errors): Variable => ({
   slot,
   central,
   down: LARGEST_DEVIATE * minus,
   up: LARGEST_DEVIATE * plus,
 });
 
-const parameterVariable = (slot: Slot, { central, reach }: Range): Variable => ({
+const parameterVariable = (slot: Slot, range: Range | undefined): Variable => ({
   slot,
-  central,
-  down: reach,
-  up: reach,
+  central: range?.central ?? NaN,
+  down: range?.reach ?? NaN,
+  up: range?.reach ?? NaN,
 });
 
-const fromMap = ({ map, variables }: Mapped): CouplingSource => ({ kind: 'map', map, variables });
-
-/** α_s(M_Z) as a variable: a free parameter, or an input. */
-function couplingAtMZ(problem: Problem, slots: SlotList, ranges: readonly Range[]): Variable | Refusal {
+/** α_s(M_Z) as a variable, a free parameter or an input, with the value around which the places count its shifts. */
+function couplingAtMZ({
+  problem,
+  slots,
+  ranges,
+}: PlaceQuestion): (Variable & { readonly reference: number }) | Refusal {
   const { alphaS } = problem;
-  const second = ranges[1];
-  if (problem.freeAlphaS === true && second !== undefined) return parameterVariable(1, second);
   if (alphaS === undefined) return refuse('the coupling is missing', 'give --alpha-s-mz');
-  return asVariable(quantitySlot(slots, 'alpha_s(M_Z)', alphaS), numberOf(alphaS), alphaS);
+  const reference = numberOf(alphaS);
+  if (problem.freeAlphaS === true && ranges[1] !== undefined) return { ...parameterVariable(1, ranges[1]), reference };
+  return { ...inputVariable(quantitySlot(slots, 'alpha_s(M_Z)', alphaS), reference, alphaS), reference };
 }
 
-/** The coupling of a series at a fixed hard scale from α_s(M_Z). */
-function fixedScale(
-  problem: Problem,
-  series: Series,
-  Q: number,
-  slots: SlotList,
-  alpha: Variable,
-): CouplingSource | Refusal {
-  const to = { scale: Q * ratioOf(series), flavours: series.flavours ?? MZ.flavours };
-  const mapped = evolutionMap(problem, slots, {
-    variables: [alpha],
-    path: ([value = NaN]) => ({ alpha: value, from: MZ, to }),
-  });
-  return isRefusal(mapped) ? mapped : fromMap(mapped);
+const fromDouble = (x: number): Exact => exact(Rational.fromNumber(x));
+
+/** α at a place; NaN where the place refuses, or where a variable has left the numbers. */
+function alphaAt(placeAt: PlaceOf, unknown: number, shifts: Shifts): number {
+  if (!(unknown > 0 && unknown < Infinity)) return NaN;
+  const place = placeAt(fromDouble(unknown), shifts);
+  return isRefusal(place) ? NaN : toNumberExact(place.alpha);
 }
 
-function given({ problem, series, datum, slots, ranges, label }: PlaceQuestion): PlaceModel | Refusal {
-  const { coupling } = problem;
-  const Q = hardScale(series, datum);
-  const scale = Q === undefined ? {} : { scale: slots.add(`Q of ${label}`, Q) };
-  if (coupling !== undefined) {
-    return { coupling: { kind: 'slot', slot: quantitySlot(slots, 'coupling', coupling) }, massPower: 0, ...scale };
+/** The coupling as a map of some variables. */
+function mapped(
+  question: PlaceQuestion,
+  variables: readonly Variable[],
+  at: CouplingAt,
+): PlaceModel['coupling'] | Refusal {
+  const found = couplingMap(question.problem, question.slots, variables, at);
+  return isRefusal(found) ? found : { kind: 'map', ...found };
+}
+
+/** The coupling is an input. */
+function given(question: PlaceQuestion, scale: Pick<PlaceModel, 'scale'>): PlaceModel | Refusal {
+  const { problem, slots, placeAt } = question;
+  if (problem.coupling !== undefined) {
+    const slot = quantitySlot(slots, 'coupling', problem.coupling);
+    return { coupling: { kind: 'slot', slot }, massPower: 0, ...scale };
   }
-  const alpha = couplingAtMZ(problem, slots, ranges);
+  const alpha = couplingAtMZ(question);
   if (isRefusal(alpha)) return alpha;
-  if (Q === undefined) return refuse(`${series.id} has no hard scale`, 'give it: --scale-of-measurement');
-  const source = fixedScale(problem, series, Q, slots, alpha);
-  return isRefusal(source) ? source : { coupling: source, massPower: 0, ...scale };
+  const coupling = mapped(question, [alpha], ([value = NaN], thresholds) =>
+    alphaAt(placeAt, 1, { alphaS: value - alpha.reference, thresholds }),
+  );
+  return isRefusal(coupling) ? coupling : { coupling, massPower: 0, ...scale };
 }
 
-function massPlace({ problem, series, datum, slots, ranges, label }: PlaceQuestion): PlaceModel | Refusal {
-  const alpha = couplingAtMZ(problem, slots, ranges);
+/** The mass is the unknown, or an input behind a pole mass, and the hard scale as well. */
+function atMass(question: PlaceQuestion): PlaceModel | Refusal {
+  const { problem, slots, placeAt, ranges, datum, label, coefficients } = question;
+  const alpha = couplingAtMZ(question);
   if (isRefusal(alpha)) return alpha;
-  const own = problem.for === 'pole-mass' && problem.mass !== undefined ? problem.mass : undefined;
+  const own = problem.for === 'pole-mass' ? problem.mass : undefined;
   const mass =
     own === undefined
-      ? parameterVariable(0, ranges[0] ?? { central: NaN, reach: NaN })
-      : asVariable(quantitySlot(slots, 'm(m)', own), numberOf(own), own);
-  const ratio = ratioOf(series);
-  const flavours = series.flavours ?? MZ.flavours;
-  const mapped = evolutionMap(problem, slots, {
-    variables: [mass, alpha],
-    path: ([m = NaN, value = NaN]) => ({ alpha: value, from: MZ, to: { scale: m * ratio, flavours } }),
-  });
-  if (isRefusal(mapped)) return mapped;
+      ? parameterVariable(0, ranges[0])
+      : inputVariable(quantitySlot(slots, 'm(m)', own), numberOf(own), own);
+  const shiftsOf = (m: number): Shifts => (own === undefined ? {} : { mass: m - mass.central });
+  const coupling = mapped(question, [mass, alpha], ([m = NaN, value = NaN], thresholds) =>
+    alphaAt(placeAt, m, { ...shiftsOf(m), alphaS: value - alpha.reference, thresholds }),
+  );
+  if (isRefusal(coupling)) return coupling;
+  const drift = driftOf((m) => placeAt(fromDouble(m), shiftsOf(m)), coefficients, mass);
+  if (drift !== undefined && isRefusal(drift)) return drift;
   const { norm, massPower = 1 } = datum;
   return {
-    coupling: fromMap(mapped),
+    coupling,
     mass: mass.slot,
     massPower,
     scale: mass.slot,
     ...(norm === undefined ? {} : { norm: quantitySlot(slots, `norm of ${label}`, norm) }),
+    ...(drift === undefined ? {} : { drift: { variable: mass.slot, maps: drift } }),
   };
+}
+
+type Drift = NonNullable<DatumModel['drift']>['maps'];
+
+/** How the coefficients move with the mass; undefined where they stand still. */
+function driftOf(
+  placeAt: (m: number) => ReturnType<PlaceOf>,
+  count: number,
+  mass: Variable,
+): Drift | undefined | Refusal {
+  const at = (m: number): readonly number[] | undefined => {
+    const place = placeAt(m);
+    return isRefusal(place) ? undefined : place.drift;
+  };
+  if (at(mass.central) === undefined) return undefined;
+  return (
+    driftMaps(at, count, mass) ??
+    refuse('the coefficients move with the mass in a way that no table follows', 'give a smaller error')
+  );
 }
 
 /** The place of a datum. */
 export function placeModel(question: PlaceQuestion): PlaceModel | Refusal {
-  const { problem, series, datum, slots, ranges, common, label } = question;
+  const { problem, series, datum, placeAt, slots, ranges, common, label } = question;
   const Q = hardScale(series, datum);
   const scale = Q === undefined ? {} : { scale: slots.add(`Q of ${label}`, Q) };
   switch (problem.for) {
     case 'alpha_s': {
-      const [first] = ranges;
       if (!common) return { coupling: { kind: 'slot', slot: 0 }, massPower: 0, ...scale };
-      if (first === undefined || Q === undefined) return refuse(`${series.id} has no hard scale`, 'give it');
-      const source = fixedScale(problem, series, Q, slots, parameterVariable(0, first));
-      return isRefusal(source) ? source : { coupling: source, massPower: 0, ...scale };
+      const coupling = mapped(question, [parameterVariable(0, ranges[0])], ([value = NaN], thresholds) =>
+        alphaAt(placeAt, value, { thresholds }),
+      );
+      return isRefusal(coupling) ? coupling : { coupling, massPower: 0, ...scale };
     }
     case 'condensate':
-      return given(question);
+      return given(question, scale);
     case 'mass':
-      return datum.massPower === 0 ? given(question) : massPlace(question);
+      return datum.massPower === 0 ? given(question, scale) : atMass(question);
     case 'pole-mass':
-      return massPlace(question);
+      return atMass(question);
   }
 }

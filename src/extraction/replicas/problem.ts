@@ -47,6 +47,8 @@ export interface DatumModel {
   readonly coefficients: readonly Slot[];
   /** A contour quantity: rows of the matrix that turns the coefficients of D into those of the fixed-order expansion. */
   readonly circle?: readonly (readonly number[])[];
+  /** Coefficients that move with a mass: tables of what is added to each. */
+  readonly drift?: { readonly variable: Slot; readonly maps: readonly ChebyshevMap[] };
   readonly norm?: Slot;
   readonly mass?: Slot;
   readonly massPower: number;

@@ -77,16 +77,26 @@ export class DatumTheory {
   readonly shared: DatumInputs;
   private readonly kernel: Kernel;
   private readonly coefficients: Float64Array;
+  /** Tables of what is added to the coefficients at a mass, and room for the sums. */
+  private readonly drift: readonly MapReader[];
+  private readonly moved: Float64Array;
 
   constructor(shared: DatumInputs, setting: FastSetting) {
     this.shared = shared;
     this.coefficients = readsCircle(setting) ? shared.inCircle : shared.coefficients;
     this.kernel = makeKernel(setting);
+    this.drift = shared.model.drift?.maps.map((map) => new MapReader(map)) ?? [];
+    this.moved = new Float64Array(this.coefficients.length);
   }
 
-  /** Takes the coefficients of a replica; false where the prescription refuses them. */
+  /** Takes the coefficients of a replica; false where the prescription refuses them. Those that move are taken with the mass. */
   prepare(): boolean {
-    return this.kernel.prepare(this.coefficients);
+    return this.drift.length > 0 || this.kernel.prepare(this.coefficients);
+  }
+
+  private follow(m: number): boolean {
+    for (let n = 0; n < this.moved.length; n++) this.moved[n] = this.coefficients[n]! + (this.drift[n]?.at(m) ?? 0);
+    return this.kernel.prepare(this.moved);
   }
 
   /** R at the coupling of the state, with the power corrections; without norm and mass. NaN where there is none. */
@@ -95,6 +105,7 @@ export class DatumTheory {
     if (restless) coupling.prepare(state);
     const x = coupling.at(state) / model.divisor;
     if (!(x > 0)) return NaN;
+    if (model.drift !== undefined && !this.follow(state[model.drift.variable]!)) return NaN;
     let value = model.additive + model.factor * (model.power === 0 ? 1 : x ** model.power) * this.kernel.value(x);
     for (let k = 0; k < model.terms.length; k++) {
       const term = model.terms[k]!;
