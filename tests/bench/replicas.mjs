@@ -76,8 +76,8 @@ const alone = await timed(async () => {
   const known = await runReplicas(problem, { count: COUNT, seed: SEED, workers: WORKERS, workerFile: join(outdir, 'replica-worker.mjs') });
   return { known, result: summarise(problem, known, SEED, []) };
 });
+const whole = built({ to: { scale: 91.1879, flavours: 5 } });
 const evolved = await timed(async () => {
-  const whole = built({ to: { scale: 91.1879, flavours: 5 } });
   const known = await runReplicas(whole, { count: COUNT, seed: SEED, workers: WORKERS, workerFile: join(outdir, 'replica-worker.mjs') });
   return summarise(whole, known, SEED, []);
 });

@@ -24,10 +24,14 @@ export interface Statistics {
   readonly mean: Estimate;
   readonly sigma: Estimate;
   readonly skewness: Estimate;
+  /** All values but the share OUTSIDE at either end. */
+  readonly ends: { readonly from: number; readonly to: number };
   /** Largest difference of the halves' percentiles in units of its error; absent for fewer than TWO_HALVES replicas. */
   readonly halves?: number;
 }
 
+/** Share of the values left outside of a histogram at each end. */
+const OUTSIDE = 0.002;
 /** Replicas below which halves say nothing. */
 const TWO_HALVES = 100;
 
@@ -55,8 +59,7 @@ export function present(column: Float64Array): Float64Array {
   return column.filter((value) => !Number.isNaN(value));
 }
 
-function percentiles(values: Float64Array): Record<LevelName, Estimate> {
-  const sorted = values.toSorted();
+function percentiles(sorted: Float64Array): Record<LevelName, Estimate> {
   const at = (name: LevelName): Estimate => percentile(sorted, LEVELS[name]);
   return { low95: at('low95'), low68: at('low68'), median: at('median'), high68: at('high68'), high95: at('high95') };
 }
@@ -85,49 +88,64 @@ export function statistics(column: Float64Array): Statistics | undefined {
   const { mean, m2, m3, m4 } = moments(values);
   const sigma = Math.sqrt((m2 * n) / (n - 1));
   const excess = m2 > 0 ? m4 / (m2 * m2) - 3 : 0;
-  const all = percentiles(values);
+  const sorted = values.toSorted();
+  const all = percentiles(sorted);
   const common = {
     count: n,
     percentiles: all,
+    ends: {
+      from: orderStatistic(sorted, OUTSIDE * (n - 1)),
+      to: orderStatistic(sorted, (1 - OUTSIDE) * (n - 1)),
+    },
     mean: { value: mean, error: sigma / Math.sqrt(n) },
     sigma: { value: sigma, error: sigma * Math.sqrt(Math.max(0, excess + 2) / (4 * n)) },
     skewness: { value: m2 > 0 ? m3 / m2 ** 1.5 : 0, error: Math.sqrt(6 / n) },
   };
   if (n < TWO_HALVES) return common;
   const half = Math.floor(n / 2);
-  const [first, second] = [percentiles(values.subarray(0, half)), percentiles(values.subarray(n - half))];
+  const [first, second] = [values.subarray(0, half), values.subarray(n - half)].map((part) =>
+    percentiles(part.toSorted()),
+  );
   const pulls = LEVEL_NAMES.map((name) => {
-    const gap = Math.abs(first[name].value - second[name].value);
+    const gap = Math.abs(first![name].value - second![name].value);
     return gap === 0 ? 0 : gap / (2 * all[name].error);
   });
   return { ...common, halves: Math.max(...pulls) };
 }
 
-/** Covariance of two columns over the replicas in which both have a value; NaN for fewer than two. */
-export function covariance(a: Float64Array, b: Float64Array): number {
+/** Covariance and correlation of two columns over the replicas in which both have a value. */
+export interface Pair {
+  /** NaN for fewer than two replicas. */
+  readonly covariance: number;
+  /** 0 where one of them does not vary. */
+  readonly correlation: number;
+}
+
+export function pairOf(a: Float64Array, b: Float64Array): Pair {
   let n = 0;
   let [sa, sb] = [0, 0];
   for (let i = 0; i < a.length; i++) {
-    if (Number.isNaN(a[i]!) || Number.isNaN(b[i]!)) continue;
-    n++;
-    sa += a[i]!;
-    sb += b[i]!;
+    const [x, y] = [a[i]!, b[i]!];
+    // Only a number equals itself.
+    if (x === x && y === y) {
+      n++;
+      sa += x;
+      sb += y;
+    }
   }
+  if (n < 2) return { covariance: NaN, correlation: NaN };
   const [ma, mb] = [sa / n, sb / n];
-  let sum = 0;
+  let [aa, ab, bb] = [0, 0, 0];
   for (let i = 0; i < a.length; i++) {
-    if (Number.isNaN(a[i]!) || Number.isNaN(b[i]!)) continue;
-    sum += (a[i]! - ma) * (b[i]! - mb);
+    const [x, y] = [a[i]! - ma, b[i]! - mb];
+    if (x === x && y === y) {
+      aa += x * x;
+      ab += x * y;
+      bb += y * y;
+    }
   }
-  return n < 2 ? NaN : sum / (n - 1);
-}
-
-/** Correlation of two columns over the replicas in which both have a value; 0 where one does not vary. */
-export function correlation(a: Float64Array, b: Float64Array): number {
-  const both = a.map((value, i) => (Number.isNaN(b[i]!) ? NaN : value));
-  const other = b.map((value, i) => (Number.isNaN(a[i]!) ? NaN : value));
-  const size = Math.sqrt(covariance(both, both) * covariance(other, other));
-  return size > 0 ? covariance(both, other) / size : 0;
+  const size = Math.sqrt(aa * bb);
+  return { covariance: ab / (n - 1), correlation: size > 0 ? ab / size : 0 };
 }
 
 export interface Histogram {

@@ -7,15 +7,14 @@ import { Engine, FAILURES } from './engine.js';
 import type { ReplicaProblem } from './problem.js';
 import { quantitiesOf } from './problem.js';
 import type { ReplicaDistribution, ReplicaNumber, ReplicaQuantity, ReplicaResult, ReplicaRow } from './result.js';
-import { correlation, covariance, histogram, orderStatistic, present, statistics } from './statistics.js';
-import type { Estimate, Statistics } from './statistics.js';
+import { histogram, pairOf, statistics } from './statistics.js';
+import type { Estimate, Pair, Statistics } from './statistics.js';
 import type { Known } from './tally.js';
 
 /** A prescription that fails in more replicas than this is unstable, and left out of the mixture. */
 export const MOST_FAILURES = 0.05;
-/** Bins of the histograms, and the share of values left outside at each end. */
+/** Bins of the histograms. */
 const BINS = 41;
-const OUTSIDE = 0.002;
 /** Half-width of the range around values that are all alike, relative. */
 const ALIKE = 1e-6;
 /** Halves that differ by more than this many standard deviations have not converged: five percentiles, one chance in 500. */
@@ -44,13 +43,11 @@ interface Ends {
 }
 
 /** Range that holds all but the outermost values of every column. */
-function endsOf(columns: readonly Float64Array[]): Ends {
+function endsOf(columns: readonly Column[]): Ends {
   let [from, to] = [Infinity, -Infinity];
-  for (const column of columns) {
-    const sorted = present(column).toSorted();
-    if (sorted.length === 0) continue;
-    from = Math.min(from, orderStatistic(sorted, OUTSIDE * (sorted.length - 1)));
-    to = Math.max(to, orderStatistic(sorted, (1 - OUTSIDE) * (sorted.length - 1)));
+  for (const { statistics: s } of columns) {
+    from = Math.min(from, s?.ends.from ?? Infinity);
+    to = Math.max(to, s?.ends.to ?? -Infinity);
   }
   if (from < to) return { from, to };
   // All values alike, or none at all.
@@ -187,9 +184,7 @@ export function summarise(
     values,
     statistics: statistics(values),
   }));
-  const ends = Array.from({ length: quantities }, (_, q) =>
-    endsOf(columns.filter((c) => c.quantity === q).map((c) => c.values)),
-  );
+  const ends = Array.from({ length: quantities }, (_, q) => endsOf(columns.filter((c) => c.quantity === q)));
   const rows = problem.prescriptions.map((_, p) => rowOf(problem, engine, known, p, columns, ends));
   const stable = rows.flatMap((row, p) => (row.stable ? [p] : []));
   const { names, central, plus, minus, drawn } = problem.inputs;
@@ -223,12 +218,13 @@ function covariances(
     (q) => q.symbol,
   );
   const known = columns.filter((c) => c.statistics !== undefined);
-  const table = (of: (a: Float64Array, b: Float64Array) => string): string[][] =>
-    known.map((a) => known.map((b) => of(a.values, b.values)));
+  const pairs = known.map((a, i) => known.slice(0, i + 1).map((b) => pairOf(a.values, b.values)));
+  const table = (text: (pair: Pair) => string): string[][] =>
+    known.map((_, i) => known.map((_column, j) => text(pairs[Math.max(i, j)]![Math.min(i, j)]!)));
   return {
     labels: known.map((c) => `${rows[c.prescription]!.prescription}: ${symbols[c.quantity]!}`),
-    matrix: table((a, b) => textOf(covariance(a, b))),
-    correlation: table((a, b) => (a === b ? '1' : textOf(correlation(a, b), 4))),
+    matrix: table((p) => textOf(p.covariance)),
+    correlation: table((p) => (p.correlation === 1 ? '1' : textOf(p.correlation, 4))),
   };
 }
 

@@ -2,13 +2,7 @@
 import { describe, expect, test } from 'vitest';
 import { rootNear } from '../../../src/extraction/replicas/root.js';
 import { SlotList } from '../../../src/extraction/replicas/slots.js';
-import {
-  correlation,
-  covariance,
-  histogram,
-  orderStatistic,
-  statistics,
-} from '../../../src/extraction/replicas/statistics.js';
+import { histogram, orderStatistic, pairOf, statistics } from '../../../src/extraction/replicas/statistics.js';
 import { isRefusal } from '../../../src/qcd/index.js';
 
 describe('rootNear', () => {
@@ -61,10 +55,11 @@ describe('statistics', () => {
   test('covariance over the replicas that both have', () => {
     const a = Float64Array.of(1, 2, 3, NaN, 100);
     const b = Float64Array.of(2, 4, 6, 50, NaN);
-    expect(covariance(a, b)).toBeCloseTo(2, 12);
-    expect(correlation(a, b)).toBeCloseTo(1, 12);
-    expect(correlation(a, Float64Array.of(1, 1, 1, 1, 1))).toBe(0);
-    expect(covariance(Float64Array.of(1, NaN), Float64Array.of(NaN, 1))).toBeNaN();
+    const both = pairOf(a, b);
+    expect(both.covariance).toBeCloseTo(2, 12);
+    expect(both.correlation).toBeCloseTo(1, 12);
+    expect(pairOf(a, Float64Array.of(1, 1, 1, 1, 1)).correlation).toBe(0);
+    expect(pairOf(Float64Array.of(1, NaN), Float64Array.of(NaN, 1)).covariance).toBeNaN();
   });
 
   test('histograms count everything once', () => {
