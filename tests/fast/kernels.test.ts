@@ -1,7 +1,9 @@
 /** @module Prescriptions in doubles against the same prescriptions in enclosures. */
 import { describe, expect, test } from 'vitest';
-import { fastSetting, makeKernel } from '../../src/fast/index.js';
+import { contourSum } from '../../src/contour/index.js';
+import { fastSetting, makeKernel, readsCircle } from '../../src/fast/index.js';
 import type { FastSetting } from '../../src/fast/index.js';
+import { TabledSums } from '../../src/fast/tabled.js';
 import { diagnoseGrowth } from '../../src/growth/index.js';
 import type { Growth } from '../../src/growth/index.js';
 import { exact, R, Rational, toNumberExact } from '../../src/numerics/index.js';
@@ -128,6 +130,71 @@ test('every prescription with a fast version is compared somewhere', async () =>
     }
   }
   expect([...seen].sort()).toEqual([...FAST].sort());
+});
+
+describe('contour improved', () => {
+  test('the tabled integrals give what the integral around the circle gives, at any coefficients', async () => {
+    const s = await catalogue('tau-contour-estimate', 0.32);
+    const { contour } = s.e;
+    if (contour === undefined) expect.fail('no contour quantity');
+    const sum = centralSum(prescription('fixed-order'), s)!;
+    const setting = fastSetting('contour-improved', s.e, s.growth, sum)!;
+    expect(readsCircle(setting)).toBe(true);
+    const kernel = makeKernel(setting);
+    const central = contour.coefficients.map(toNumberExact);
+    const [factor, additive, power] = [toNumberExact(s.e.factor), toNumberExact(s.e.additive), s.e.power];
+    for (const [alpha, by] of [
+      [0.32, 0],
+      [0.3, 0.05],
+      [0.35, -0.1],
+    ] as const) {
+      const c = central.map((v, n) => v * (1 + by * n));
+      expect(kernel.prepare(Float64Array.from(c))).toBe(true);
+      const x = alpha / Math.PI;
+      const fast = additive + factor * x ** power * kernel.value(x);
+      const slow = contourSum({ ...s.e, contour }, 'contour-improved', alpha, c);
+      if (typeof slow !== 'number') expect.fail(slow.reason);
+      expect(Math.abs(fast / slow - 1)).toBeLessThan(1e-12);
+    }
+    expect(kernel.value(2)).toBeNaN();
+  });
+});
+
+describe('tabled sums', () => {
+  test('agree with the functions inside the range, and have no value outside', () => {
+    const values = (x: number, out: Float64Array): void => {
+      out[0] = Math.exp(-1 / x);
+      out[1] = 1 / (2 + x);
+    };
+    const sums = new TabledSums(2, values, 0.3);
+    const out = new Float64Array(2);
+    sums.contract(Float64Array.of(3, -2));
+    for (const x of [0.15, 0.2, 0.3, 0.42, 0.51]) {
+      values(x, out);
+      expect(Math.abs(sums.at(x) - (3 * out[0]! - 2 * out[1]!))).toBeLessThan(1e-14);
+    }
+    expect([sums.at(0.149), sums.at(0.52), sums.at(NaN)]).toEqual([NaN, NaN, NaN]);
+  });
+
+  test('of a function that is not smooth have no value anywhere', () => {
+    const sums = new TabledSums(1, (x, out) => out.fill(Math.abs(x - 0.31)), 0.3);
+    sums.contract(Float64Array.of(1));
+    expect(sums.at(0.3)).toBeNaN();
+  });
+
+  test('a kernel is continuous where its table ends', async () => {
+    const s = await catalogue('adler-estimate', 0.32);
+    for (const name of ['borel-conformal', 'singularity-model', 'borel-partial-pade']) {
+      const sum = centralSum(prescription(name), s)!;
+      const kernel = makeKernel(fastSetting(name, s.e, s.growth, sum)!);
+      kernel.prepare(Float64Array.from(s.e.coefficients, toNumberExact));
+      const X = toNumberExact(s.e.x);
+      for (const end of [0.5 * X, 1.7 * X]) {
+        const [inside, outside] = [kernel.value(end * (1 + 1e-13)), kernel.value(end * (1 - 1e-13))];
+        expect(Math.abs(inside / outside - 1), name).toBeLessThan(5e-12);
+      }
+    }
+  });
 });
 
 describe('refusals', () => {

@@ -39,6 +39,14 @@ try {
   const verdict = run(bin, ['assess', 'adler', '--at', '0.3156(30)', '-q']).trim();
   step('assess adler', () => verdict);
 
+  // The worker's file has to be found where the package is installed.
+  const replicas = (workers) =>
+    run(bin, ['extract', 'tau-delta0', '--measured', '0.2042(30)', '--for', 'alpha_s', '--only', 'fixed-order', '--replicas', '2000', '--workers', workers]);
+  step('replicas', () => {
+    if (replicas('2') !== replicas('1')) throw new Error('two threads give other replicas than one');
+    return 'the same on one thread and on two';
+  });
+
   writeFileSync(join(folder, 'consumer.ts'), CONSUMER);
   writeFileSync(
     join(folder, 'tsconfig.json'),

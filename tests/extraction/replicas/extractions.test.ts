@@ -8,6 +8,10 @@ import type { ReplicaResult } from '../../../src/extraction/replicas/result.js';
 import { runReplicas } from '../../../src/extraction/replicas/run.js';
 import { summarise } from '../../../src/extraction/replicas/summary.js';
 import { replicate } from '../../../src/extraction/replicas/study.js';
+import { firstFit, fitSetting } from '../../../src/extraction/fit/fit.js';
+import { thresholdSeries } from '../../../src/extraction/threshold-mass.js';
+import { PRESCRIPTIONS } from '../../../src/prescriptions/index.js';
+import type { Prescription } from '../../../src/prescriptions/index.js';
 import type { Solved } from '../../../src/extraction/solve.js';
 import { chosen, settingOf, solveAll } from '../../../src/extraction/setting.js';
 import type { Shifts } from '../../../src/extraction/place.js';
@@ -90,6 +94,8 @@ const CASES: readonly (readonly [string, string, Problem])[] = [
     }),
   ],
 ];
+
+const prescriptionNamed = (name: string): Prescription => PRESCRIPTIONS.find((p) => p.name === name)!;
 
 async function seriesOf(id: string): Promise<Series> {
   return loadSeries(id, id === 'pole-msbar' ? { flavours: 5 } : {});
@@ -214,7 +220,72 @@ describe('α_s at M_Z', () => {
   });
 });
 
+describe('a mass whose series moves with it', () => {
+  test('the bottom mass from a PS mass: every input that the extraction shifts, at the slope that it has', async () => {
+    const place = { definition: 'ps', scale: 2, light: 4, reference: 4.18 };
+    const series = thresholdSeries({ place: { definition: 'ps', scale: 2 }, light: 4 }, place.reference);
+    if (isRefusal(series)) expect.fail(series.reason);
+    const asked = problem({
+      for: 'mass',
+      data: [{ series: series.id, measured: quantity('4.484', 0.06, 1), threshold: place }],
+      alphaS: ALPHA,
+      prescriptions: ['fixed-order'],
+    });
+    const setting = settingOf(asked, series, asked.data[0]!);
+    if (isRefusal(setting)) expect.fail(setting.reason);
+    const solved = solveAll(setting, chosen(asked, [series]));
+    const [one] = [...solved.values()];
+    if (one === undefined || isRefusal(one)) expect.fail('no solution');
+    const built = buildReplicas(singleSource(setting, solved));
+    if (isRefusal(built)) expect.fail(built.reason);
+    expect(built.problem.data[0]!.drift?.maps).toHaveLength(series.coefficients.length);
+    // The threshold of the quark whose mass is wanted lies at that mass: it is no input.
+    expect(built.problem.inputs.drawn.map((i) => built.problem.inputs.names[i])).not.toContain('m_b');
+    const engine = new Engine(built.problem, 7);
+    expect(Math.abs(engine.central[0]![0]! / one.number - 1)).toBeLessThan(1e-9);
+    const linear = Math.hypot(...engine.responses[0]!.map((r) => r[0]!));
+    expect(Math.abs(linear / linearOf(one, asked, series) - 1)).toBeLessThan(2e-3);
+  });
+});
+
 describe('fits', () => {
+  test('mass and α_s from two moments: two parameters with their covariance', async () => {
+    const series = [await loadSeries('charm-moment-1'), await loadSeries('charm-moment-2')];
+    const asked = problem({
+      for: 'mass',
+      freeAlphaS: true,
+      data: [
+        { series: 'charm-moment-1', measured: quantity('0.2166', 0.0031, -2), massPower: -2, norm: quantity('1/4', 0) },
+        {
+          series: 'charm-moment-2',
+          measured: quantity('0.01497', 0.00027, -4),
+          massPower: -4,
+          norm: quantity('1/16', 0),
+        },
+      ],
+      correlation: [
+        [1, 0.8],
+        [0.8, 1],
+      ],
+      alphaS: ALPHA,
+      prescriptions: ['fixed-order'],
+    });
+    const fitted = fitSetting(asked, series);
+    if (isRefusal(fitted)) expect.fail(fitted.reason);
+    const first = firstFit(fitted, prescriptionNamed('fixed-order'));
+    if (isRefusal(first)) expect.fail(first.reason);
+    const result = await replicate(asked, series, { count: 1000, seed: 5, workers: 1 });
+    if (isRefusal(result)) expect.fail(result.reason);
+    const { parameters, covariance } = first.minimum;
+    result.rows[0]!.values.forEach((v, k) => {
+      expect(Math.abs(Number(v.central) / parameters[k]! - 1)).toBeLessThan(1e-7);
+      // The fit's own covariance holds the measurements; the threshold of the bottom quark adds next to nothing.
+      expect(Math.abs(Number(v.linear) / Math.sqrt(covariance[k]![k]!) - 1)).toBeLessThan(0.02);
+    });
+    const rho = covariance[0]![1]! / Math.sqrt(covariance[0]![0]! * covariance[1]![1]!);
+    expect(Math.abs(Number(result.covariance.correlation[0]![1]) - rho)).toBeLessThan(0.1);
+  });
+
   test('two measurements of α_s(M_Z): the width of the weighted mean', async () => {
     const series = [await loadSeries('tau-delta0'), await loadSeries('bjorken')];
     const asked = problem({
