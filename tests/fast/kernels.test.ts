@@ -77,16 +77,17 @@ const SUBJECTS: readonly (readonly [string, () => Promise<Subject> | Subject])[]
   ['Adler function', () => catalogue('adler-estimate', 0.32)],
   ['tau width', () => catalogue('tau-delta0-estimate', 0.32)],
   ['pole mass', () => catalogue('pole-msbar', 0.225)],
-  ['Bjorken sum rule', () => catalogue('bjorken', 0.3)],
   ['Higgs to gluons', () => catalogue('higgs-gg', 0.113)],
   ['plaquette', () => catalogue('plaquette', 0.1)],
   ['alternating factorials', () => bench('s01_euler_alternating', 6)],
   ['two branch points', () => bench('s10_uv1_ir2_branch', 6)],
   ['a pole of second order', () => bench('s152_demo_tessel_uv', 7)],
-  ['a mass-like series', () => bench('s13_mass_like', 6)],
   ['quartic oscillator', () => bench('s40_aho_quartic', 6)],
   ['complex pair', () => bench('s119_conj_cos3_5', 7)],
 ];
+
+/** Prescriptions compared so far. */
+const seen = new Set<string>();
 
 describe.each(SUBJECTS)('%s', (_, make) => {
   test('fast and certified versions agree at the central values, at another coupling, with other coefficients', async () => {
@@ -113,22 +114,14 @@ describe.each(SUBJECTS)('%s', (_, make) => {
         const gap = Math.abs(fast - value) / Math.abs(value - additive);
         expect(gap, `${name} ${sum.variant} at ${at}: ${fast} against ${value}`).toBeLessThan(ALLOWED);
         compared++;
+        seen.add(name);
       }
     }
     expect(compared).toBeGreaterThan(5);
   });
 });
 
-test('every prescription with a fast version is compared somewhere', async () => {
-  const seen = new Set<string>();
-  for (const [, make] of SUBJECTS) {
-    const s = await make();
-    for (const name of FAST) {
-      if (seen.has(name)) continue;
-      const sum = centralSum(prescription(name), s);
-      if (sum !== undefined && fastSetting(name, s.e, s.growth, sum) !== undefined) seen.add(name);
-    }
-  }
+test('every prescription with a fast version is compared somewhere', () => {
   expect([...seen].sort()).toEqual([...FAST].sort());
 });
 
