@@ -3,6 +3,7 @@ import { describe, expect, test } from 'vitest';
 import { rootNear } from '../../../src/extraction/replicas/root.js';
 import { SlotList } from '../../../src/extraction/replicas/slots.js';
 import { histogram, orderStatistic, pairOf, statistics } from '../../../src/extraction/replicas/statistics.js';
+import { Substreams } from '../../../src/numerics/index.js';
 import { isRefusal } from '../../../src/qcd/index.js';
 
 describe('rootNear', () => {
@@ -17,6 +18,8 @@ describe('rootNear', () => {
     expect(rootNear(f, 6.4, 1, 1, 20)).toBeCloseTo(2 * Math.PI, 12);
     expect(rootNear(f, 12.2, 1, 1, 20)).toBeCloseTo(4 * Math.PI, 12);
     expect(rootNear(f, 9, -1, 1, 20)).toBeCloseTo(3 * Math.PI, 12);
+    // Secants alone would fall to the root at π, where f falls.
+    expect(rootNear(f, 2.5, 1, 1, 20)).toBeCloseTo(2 * Math.PI, 12);
   });
 
   test('a wrong slope, a jump and a pole are no roots', () => {
@@ -50,6 +53,22 @@ describe('statistics', () => {
   test('halves that disagree are seen', () => {
     const drifting = Float64Array.from({ length: 1000 }, (_, i) => (i < 500 ? 0 : 3) + Math.sin(i * 12.9898) * 0.5);
     expect(statistics(drifting)!.halves).toBeGreaterThan(5);
+  });
+
+  test('halves of one distribution differ by as much as they should', () => {
+    const z = new Float64Array(1);
+    const largest = Array.from({ length: 30 }, (_, seed) => {
+      const streams = new Substreams(seed);
+      const column = Float64Array.from({ length: 800 }, (_value, i) => {
+        streams.normals(i, z);
+        return z[0]!;
+      });
+      return statistics(column)!.halves!;
+    });
+    // The largest of five standard normal sizes, somewhat correlated: between 1 and 2 on the average.
+    const mean = largest.reduce((a, b) => a + b) / largest.length;
+    expect(mean).toBeGreaterThan(1);
+    expect(mean).toBeLessThan(2);
   });
 
   test('covariance over the replicas that both have', () => {
