@@ -6,6 +6,7 @@ import { build } from 'esbuild';
 import { chmod, copyFile, mkdir, readFile, rm, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import { fileURLToPath, pathToFileURL } from 'node:url';
+import { directImports } from './esbuild.imports.config.mjs';
 
 const root = fileURLToPath(new URL('.', import.meta.url));
 
@@ -69,7 +70,7 @@ export async function bundle(outdir) {
     minifyWhitespace: true,
     minifySyntax: true,
     legalComments: 'none',
-    plugins: [parserOnly],
+    plugins: [directImports, parserOnly],
     metafile: true,
     logLevel: 'warning',
   });
@@ -87,6 +88,7 @@ export async function bundle(outdir) {
     minifyWhitespace: true,
     minifySyntax: true,
     legalComments: 'none',
+    plugins: [directImports],
     logLevel: 'warning',
   });
   await mkdir(join(outdir, 'assets'), { recursive: true });
