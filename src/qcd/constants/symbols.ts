@@ -1,5 +1,5 @@
 /** @module The transcendental numbers that stand in the constants, by the names used in the formulas. */
-import { R, Rational, eulerGamma, exactReal, ln2, pi, zeta, type Ball, type Exact } from '../../numerics/index.js';
+import { R, Rational, eulerGamma, exactReal, ln2, pi, polylogHalf, zeta, type Exact } from '../../numerics/index.js';
 
 /** Enclosure of a number given by its decimals, half a unit of the last place as radius. */
 function decimal(text: string): Exact {
@@ -7,18 +7,6 @@ function decimal(text: string): Exact {
   const places = text.length - text.indexOf('.') - 1;
   const half = Rational.of(1n, 2n * 10n ** BigInt(places));
   return exactReal((prec) => R.widen(R.fromRational(q, prec), R.fromRational(half, 32)));
-}
-
-/** Li_n(1/2) = Σ_{k≥1} 2^(−k) k^(−n); the terms after the K-th add up to less than 2^(−K). */
-function polylogHalf(n: number, prec: number): Ball {
-  const last = prec + 4;
-  let sum: Ball = R.ZERO;
-  for (let k = 1; k <= last; k++) {
-    const bits = Math.max(prec + 8 - k, 8);
-    const term = R.div(R.ONE, R.fromNumber(BigInt(k) ** BigInt(n)), bits);
-    sum = R.add(sum, R.mul2exp(term, -k), prec + 8);
-  }
-  return R.widen(sum, R.mul2exp(R.ONE, -last));
 }
 
 export const SYMBOLS: Readonly<Record<string, Exact>> = {

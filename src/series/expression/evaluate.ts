@@ -18,6 +18,7 @@ import {
   log,
   mulExact,
   pi,
+  polylogHalf,
   isZeroExact,
   signExact,
   subExact,
@@ -27,7 +28,6 @@ import type { Exact } from '../../numerics/index.js';
 import { LIMITS, grouped } from '../limits.js';
 import { isNumberProblem, parsePlain } from '../number-text.js';
 import { quote } from '../quote.js';
-import { li4Half } from './li4-half.js';
 import { ExpressionProblem } from './syntax.js';
 import type { BinaryOperator, SyntaxTree } from './syntax.js';
 
@@ -42,7 +42,7 @@ export interface Scope {
 const BUILT_IN: ReadonlyMap<string, Exact> = new Map([
   ['pi', exactReal(pi)],
   ['gamma_euler', exactReal(eulerGamma)],
-  ['li4_half', exactReal(li4Half)],
+  ['li4_half', exactReal((prec) => polylogHalf(4, prec))],
 ]);
 
 const bits = (n: bigint): number => n.toString(16).length * 4;
