@@ -136,6 +136,9 @@ function methodReport(e: NormalisationEstimate, size: number): StrengthMethod {
   };
 }
 
+/** An error as large as the value says neither size nor sign. */
+const isDetermined = ({ value, error }: Normalisation): boolean => error < Math.abs(value);
+
 export function strengthReport(strength: LeadingStrength | undefined): StrengthReport | undefined {
   if (strength === undefined) return undefined;
   const { singularity, dimension, found } = strength;
@@ -145,15 +148,17 @@ export function strengthReport(strength: LeadingStrength | undefined): StrengthR
     standing: 'indicative' as const,
   };
   if (isRefusal(found)) return { ...place, methods: [], notes: [], refused: found };
-  const { value, error } = estimateText(found.inAlpha.value, found.inAlpha.error);
   const size = found.value / found.inAlpha.value;
-  return {
-    ...place,
-    value,
-    error,
-    methods: found.estimates.map((e) => methodReport(e, size)),
-    notes: found.notes,
-  };
+  const methods = found.estimates.map((e) => methodReport(e, size));
+  if (!isDetermined(found)) {
+    const undetermined = refuse(
+      'the error of the leading method is as large as its value',
+      'more coefficients, or smaller errors of those known',
+    );
+    return { ...place, methods, notes: found.notes, refused: undetermined };
+  }
+  const { value, error } = estimateText(found.inAlpha.value, found.inAlpha.error);
+  return { ...place, value, error, methods, notes: found.notes };
 }
 
 /** |Im|/π of the series' sum over (Λ/Q)^d, with the relative error of N. */
@@ -163,7 +168,7 @@ export function ambiguityOverPower(
   flavours: number,
 ): { readonly value: number; readonly error: number } | undefined {
   const { exponent, wilson = [] } = singularity;
-  if (isRefusal(found) || exponent === undefined || !(Math.abs(found.value) > 0)) return undefined;
+  if (isRefusal(found) || exponent === undefined || !isDetermined(found)) return undefined;
   const { expansion, uPerT } = expanded;
   const x = toNumberExact(expansion.x);
   const [b0, b1] = [uPerT, betaOne(flavours)];

@@ -9,8 +9,8 @@
  *            and inside it the plain methods stop at n = 3. Where only the exponent is known (another coupling, an
  *            anomalous dimension) the ratio without corrections and the Borel factor remain.
  * Bound      of a method: the larger of its last step (drift of a ratio without corrections: n times that) and half the spread
- *            under the change of scale, with the coefficients' errors in quadrature. Of N: the largest of these of the leading method, and the disagreement of the methods.
- *            A heuristic: the result is indicative.
+ *            under the change of scale, with the coefficients' errors in quadrature. Of N: the leading method's, or its distance to
+ *            another method beyond that one's own error, whichever is larger. A heuristic: the result is indicative.
  * Reference  see estimates.ts and conformal.ts.
  */
 import { R, exact, exactReal, log, toNumberExact, type Exact } from '../../numerics/index.js';
@@ -152,7 +152,8 @@ export function leadingNormalisation(question: NormalisationQuestion): Normalisa
   const rivals = setting.plain ? rest : rest.filter((e) => e.method !== 'expansion of the Borel factor');
   const errorParts = {
     lastStep: Math.abs(value - (steps[steps.length - 2] ?? NaN)),
-    methods: Math.max(0, ...rivals.map((e) => Math.abs(value - e.value))),
+    // A method that is far away but does not claim to be near contradicts nothing.
+    methods: Math.max(0, ...rivals.map((e) => Math.abs(value - e.value) - e.error)),
     scale: (Math.max(...spread) - Math.min(...spread)) / 2,
     input: leading?.input ?? 0,
   };

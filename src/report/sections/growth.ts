@@ -113,10 +113,16 @@ const stepText = (steps: readonly string[]): string =>
     .map((x) => shorten(x, STEP_DIGITS))
     .join(', ')}`;
 
+function strengthVerdict({ value, error, refused, standing }: StrengthReport): string {
+  if (refused !== undefined) return `N is not determined: ${refused.reason}. Remedy: ${refused.remedy}.`;
+  const text = withError(value ?? '', error, DIGITS);
+  return `N = ${text}: the first row, wider where another method is further off than its own error. Trust: ${standing}.`;
+}
+
 function strengthBlock(page: Page, strength: StrengthReport): void {
   page.blank();
   const place = `Strength N at u = ${shorten(strength.u, DIGITS)} (d = ${strength.dimension}), for the series in the coupling itself`;
-  if (strength.refused !== undefined) {
+  if (strength.refused !== undefined && strength.methods.length === 0) {
     page.say(`${place}: not known, since ${strength.refused.reason}.`, 'faint');
     return;
   }
@@ -139,10 +145,7 @@ function strengthBlock(page: Page, strength: StrengthReport): void {
     })),
   );
   page.blank();
-  const value = withError(strength.value ?? '', strength.error, DIGITS);
-  page.say(
-    `N = ${value}: the first row, its error not below the distance to the next ones. Trust: ${strength.standing}.`,
-  );
+  page.say(strengthVerdict(strength));
   page.say(strength.methods.map((m) => `${m.method}: ${m.reference}`).join('; '), 'faint');
   page.points(strength.notes.map(sentence), 'warn');
 }
