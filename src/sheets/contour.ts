@@ -1,5 +1,5 @@
 /** @module A contour quantity for people: the weight, both expansions order by order, their Borel sums, the subtracted series. */
-import type { ContourResult } from '../studies/index.js';
+import type { ContourResult, ContourSum } from '../studies/index.js';
 import { shorten } from '../numerics/index.js';
 import {
   cautionPoints,
@@ -169,6 +169,36 @@ function subtractedSection(page: Page, result: ContourResult): void {
     );
 }
 
+/** Every sum with all its errors, so that none is taken without the others in sight. */
+function sumsSection(page: Page, { sums, coupling }: ContourResult): void {
+  page.head('Side by side');
+  const columns = [
+    { head: 'truncation', of: (s: ContourSum) => s.truncation },
+    { head: 'ambiguity', of: (s: ContourSum) => s.ambiguity },
+    { head: 'coupling', of: (s: ContourSum) => s.coupling },
+    { head: 'coefficients', of: (s: ContourSum) => s.coefficients },
+  ].filter(({ of }) => sums.some((s) => of(s) !== undefined));
+  page.table(
+    [
+      { head: '', align: 'left' },
+      { head: 'value', align: 'point' },
+      ...columns.map(({ head }) => ({ head, align: 'left' as const })),
+    ],
+    sums.map((s) => ({
+      cells: [s.name, shorten(s.value, page.digits), ...columns.map(({ of }) => plusMinus(of(s)))],
+    })),
+  );
+  page.blank();
+  page.say(
+    'Ambiguity is |Im|/π; coupling and coefficients: what one standard deviation of the input moves. All of these are indicative.',
+    'faint',
+  );
+  if (sums.some((s) => [s.coupling, s.coefficients].includes('unknown')))
+    page.say('Unknown: with the input moved by its error the sum is refused.', 'faint');
+  if (sums.every((s) => s.coupling === undefined))
+    page.say(`No error of ${coupling.name} is given: --at 'VALUE(ERROR)' adds its share.`, 'faint');
+}
+
 /** The study for people. */
 export function contourText(result: ContourResult, options: TerminalOptions = {}): string {
   const page = new Page(options.columns ?? 100, options.paint ?? unpainted, options.digits);
@@ -179,6 +209,7 @@ export function contourText(result: ContourResult, options: TerminalOptions = {}
   orderTables(page, result);
   borelSection(page, result);
   subtractedSection(page, result);
+  sumsSection(page, result);
   page.blank();
   page.say(
     'Fixed-order digits are certified for these coefficients; those of contour integrals are converged (two rules agree). Borel sums rest on a model or an approximant: indicative.',

@@ -7,6 +7,7 @@ export type { GrowthResult, PlaneResult, SumResult } from './parts.js';
 export { VERSION } from './version.js';
 export { contourStudy } from './contour/study.js';
 export type { ContourResult, ContourStudyOptions } from './contour/study.js';
+export type { ContourSum } from './contour/sums.js';
 export { truncationStudy } from './truncation.js';
 export type { TruncationEstimate, TruncationOptions, TruncationResult } from './truncation.js';
 export type { BandText } from './truncation-answer.js';

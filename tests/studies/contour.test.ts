@@ -1,9 +1,16 @@
 /** Contour quantities as series of their own: errors, singularities, condensates, orders, and what refuses them. */
 import { describe, expect, test } from 'vitest';
 import { exact, Rational, toNumberExact } from '../../src/numerics/index.js';
-import { InputError, loadSeries, parseSeries, writeSeries } from '../../src/series/index.js';
+import {
+  InputError,
+  isNumberProblem,
+  loadSeries,
+  parseSeries,
+  parseUncertain,
+  writeSeries,
+} from '../../src/series/index.js';
 import type { Series } from '../../src/series/index.js';
-import { assess, combineStudy, compare, growthStudy, sumStudy } from '../../src/studies/index.js';
+import { assess, combineStudy, compare, contourStudy, growthStudy, sumStudy } from '../../src/studies/index.js';
 import { fixedOrderSeries } from '../../src/studies/contour/moment.js';
 import { expand } from '../../src/studies/expand.js';
 import { contourPrescriptions } from '../../src/prescriptions/index.js';
@@ -175,5 +182,39 @@ describe('the studies', () => {
     const again = await parseSeries(writeSeries(s), { name: 'test', form: 'yaml' });
     expect(again.contour?.coefficients.map(String)).toEqual(['1/2', '0', '-3']);
     expect(numbers(fixedOrderSeries(again))).toEqual(numbers(fixedOrderSeries(s)));
+  });
+});
+
+describe('what the errors of the input move', () => {
+  const sums = async (coefficients: string, coupling: string) => {
+    const given = parseUncertain(coupling);
+    if (isNumberProblem(given)) throw new Error(given.problem);
+    return contourStudy(await quantity(coefficients), given, { digits: 12, request: {} }, contour).sums;
+  };
+  const fixed = async (coefficients: string, coupling: string) => {
+    const found = (await sums(coefficients, coupling)).find((s) => s.name === 'Fixed order');
+    return { coupling: Number(found?.coupling), coefficients: Number(found?.coefficients) };
+  };
+
+  test('fixed order: the derivatives of its polynomial', async () => {
+    // K_2 = c_2 + 57/16 and so on: a unit of c_2 moves x² + (57/8) x³, α_s moves Σ n K_n x^n / α_s.
+    const series = fixedOrderSeries(await quantity('[1, 2, 5]'));
+    const x = 0.3 / Math.PI;
+    const slope = numbers(series).reduce((sum, k, n) => sum + (n + 1) * k * x ** (n + 1), 0) / 0.3;
+    const moved = await fixed('[1, "2.0(3)", 5]', '0.300(1)');
+    expect(moved.coupling / (slope * 0.001)).toBeCloseTo(1, 2);
+    expect(moved.coefficients / (0.3 * (x ** 2 + (57 / 8) * x ** 3))).toBeCloseTo(1, 2);
+  });
+
+  test('contour improved: the integral A_2 times the error of c_2', async () => {
+    const found = (await sums('[1, "2.0(3)", 5]', '0.300')).find((s) => s.name === 'Contour improved');
+    const engine = contourStudy(await quantity('[1, 2, 5]'), at('0.300'), { digits: 12, request: {} }, contour);
+    expect(Number(found?.coefficients) / (0.3 * Number(engine.orders[1]?.integral))).toBeCloseTo(1, 2);
+    expect(found?.coupling).toBeUndefined();
+  });
+
+  test('a coupling whose error reaches zero has none', async () => {
+    const found = await sums('[1, 2, 5]', '0.3(3)');
+    expect(found.map((s) => s.coupling)).toEqual(found.map(() => 'unknown'));
   });
 });

@@ -3,7 +3,7 @@
  * The work is done by the contour room, which the caller has loaded: no other study needs it.
  */
 import type * as Contour from '../../contour/index.js';
-import { exact, toNumberExact } from '../../numerics/index.js';
+import { exact, signExact, toNumberExact } from '../../numerics/index.js';
 
 import type { Rational } from '../../numerics/index.js';
 import { InputError } from '../../series/index.js';
@@ -18,6 +18,8 @@ import { couplingScheme, loopWords } from '../scheme.js';
 import { couplingSummary, seriesSummary } from '../summary.js';
 import { VERSION } from '../version.js';
 import { fixedOrderSeries } from './moment.js';
+import { contourSums } from './sums.js';
+import type { ContourSum } from './sums.js';
 
 export interface ContourStudyOptions extends Pick<AssessOptions, 'order' | 'digits' | 'request' | 'path'> {
   /** In place of the file's own; with it any series of D will do. */
@@ -31,7 +33,14 @@ export interface ContourStudyOptions extends Pick<AssessOptions, 'order' | 'digi
 }
 
 export type ContourResult = Pick<Assessment, 'leastterm' | 'request' | 'series' | 'coupling'> &
-  Contour.ContourReport & { readonly cautions: readonly Caution[] };
+  Contour.ContourReport & {
+    /** Every sum with its errors, those of the input among them. */
+    readonly sums: readonly ContourSum[];
+    readonly cautions: readonly Caution[];
+  };
+
+/** Digits at which the sums are made again for the errors of the input. */
+const MOVED_DIGITS = 8;
 
 /** The series with another weight, and in a world of fewer loops. */
 function adjusted(series: Series, { weight, loops }: ContourStudyOptions): Series {
@@ -84,14 +93,19 @@ export function contourStudy(
   const { contour } = expanded.expansion;
   if (contour === undefined) throw new RangeError('contourStudy: the expansion has lost its contour');
   const norm = normOf(options.norm);
-  const report = engine.contourReport(
-    { ...expanded.expansion, contour },
-    {
-      digits: options.digits,
-      ...(norm === undefined ? {} : { norm }),
-      ...(options.ratio === undefined ? {} : { ratio: options.ratio }),
-    },
-  );
+  const how = {
+    ...(norm === undefined ? {} : { norm }),
+    ...(options.ratio === undefined ? {} : { ratio: options.ratio }),
+  };
+  const report = engine.contourReport({ ...expanded.expansion, contour }, { ...how, digits: options.digits });
+  const sums = contourSums(report, own, at, (moved, coupling) => {
+    if (signExact(coupling) <= 0) return undefined;
+    const { expansion } = expand(fixedOrderSeries(moved), coupling, options.order);
+    return (
+      expansion.contour &&
+      engine.contourReport({ ...expansion, contour: expansion.contour }, { ...how, digits: MOVED_DIGITS })
+    );
+  });
   const growth = diagnoseGrowth(expanded.growthInput);
   return {
     leastterm: VERSION,
@@ -99,6 +113,7 @@ export function contourStudy(
     series: seriesSummary(own, expanded),
     coupling: couplingSummary(own, at, expanded, options.digits, options.path),
     ...report,
+    sums,
     // The difference of the two expansions has a part of its own in the report.
     cautions: cautions(series, expanded, growth, undefined, [], toNumberExact(at.value)).filter(
       ({ code }) => code !== 'contour-quantity',
