@@ -4,6 +4,7 @@ import { UsageError } from './faults.js';
 import { USUAL_DIGITS, wantedCoupling } from './input.js';
 import { scaleOf } from './quantities.js';
 import { accepted } from './refused.js';
+import { askedOf } from './request.js';
 import type { BubbleQuestion } from '../extraction/index.js';
 import type { Quantity } from '../bubbles/index.js';
 import type { Exact, Rational } from '../numerics/index.js';
@@ -75,14 +76,6 @@ async function couplingAt(
   return { at: { ...at, value }, path: [...path, `rounded to ${printed}, which is exact from here on`] };
 }
 
-/** What was asked, for the result to repeat. */
-function requestOf(name: string, command: string, given: Given): BubbleQuestion['request'] {
-  const { at, alphaSMZ, flavours, scale, mu, order, digits, view, cut } = given;
-  const options = { at, 'alpha-s-mz': alphaSMZ, flavours, scale, mu, order, view, cut, digits: digits ?? USUAL_DIGITS };
-  const list = Object.entries(options).flatMap(([key, value]) => (value === undefined ? [] : [[key, value] as const]));
-  return { command, quantity: name, ...Object.fromEntries(list) };
-}
-
 function checkSizes({ order, digits }: Given, command: string): void {
   if (order !== undefined && order > MOST_ORDER) {
     throw new UsageError(`--order: ${order} coefficients are more than the ${MOST_ORDER} that this takes`, command);
@@ -110,7 +103,7 @@ export async function bubbleQuestion(name: string, call: Call, command: string):
     ...(scale === undefined ? {} : { scale }),
     digits: given.digits ?? USUAL_DIGITS,
     order: given.order ?? USUAL_ORDER,
-    request: requestOf(quantity.name, command, given),
+    request: askedOf(command, { quantity: quantity.name }, given, { digits: USUAL_DIGITS }),
   };
 }
 

@@ -50,11 +50,3 @@ export async function chosenPrescriptions(given: Given, command: string): Promis
     );
   return left.map((p) => p.name);
 }
-
-/** The choice as the request repeats it. */
-export function choiceRequest(given: Given): Record<string, string> {
-  const joined = { only: split(given.only), except: split(given.except), family: split(given.family) };
-  return Object.fromEntries(
-    Object.entries(joined).flatMap(([name, list]) => (list.length === 0 ? [] : [[name, list.join(',')]])),
-  );
-}

@@ -3,9 +3,9 @@ import type { Call } from './command.js';
 import { UsageError } from './faults.js';
 import { couplingValue } from './quantities.js';
 import { accepted } from './refused.js';
+import { askedOf } from './request.js';
+import type { Request } from './request.js';
 import type { ReadNumber, Series, Uncertain } from '../series/index.js';
-
-export type Request = Record<string, string | number | boolean>;
 
 /** Certified digits of each value when --digits is not given. */
 export const USUAL_DIGITS = 15;
@@ -75,20 +75,6 @@ export async function exactValue(text: string | undefined, command: string): Pro
   return value;
 }
 
-/** What was asked, for the result to repeat. Where the output goes is no part of it. */
-export function requestOf(command: string, series: string, { given }: Call): Request {
-  const { at, by, variant, order, flavours } = given;
-  const asked = {
-    at,
-    'alpha-s-mz': given.alphaSMZ,
-    by,
-    variant,
-    order,
-    flavours,
-    'strong-coupling': given.strongCoupling,
-  };
-  const request: Request = { command, series };
-  for (const [name, value] of Object.entries(asked)) if (value !== undefined) request[name] = value;
-  request['digits'] = given.digits ?? USUAL_DIGITS;
-  return request;
-}
+/** What was asked of a command on a series. */
+export const requestOf = (command: string, series: string | readonly string[], { given }: Call): Request =>
+  askedOf(command, { series }, given, { digits: USUAL_DIGITS });

@@ -118,6 +118,10 @@ export const OPTIONS: Readonly<Record<OptionName, OptionSpec>> = {
 
 export const OPTION_NAMES = Object.keys(OPTIONS).filter((name): name is OptionName => name in OPTIONS);
 
+/** "by-order" is the field byOrder of Given, and so on: every option its own field, named after it. */
+export const fieldOf = (name: OptionName): string =>
+  name === 'alpha-s-mz' ? 'alphaSMZ' : name.replace(/-([a-z])/g, (_, letter: string) => letter.toUpperCase());
+
 /** The specification of an option in the words of a command. */
 export const optionOf = (name: OptionName, words: OptionWords | undefined): OptionSpec => ({
   ...OPTIONS[name],

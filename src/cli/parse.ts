@@ -2,7 +2,7 @@
 import { Parser } from 'yargs/helpers';
 import type { Command, Given } from './command.js';
 import { UsageError } from './faults.js';
-import { OPTION_NAMES, OPTIONS, optionOf } from './options.js';
+import { fieldOf, OPTION_NAMES, OPTIONS, optionOf } from './options.js';
 import type { OptionName, OptionSpec } from './options.js';
 
 export interface Parsed {
@@ -143,10 +143,6 @@ type Value = string | number | boolean | readonly string[];
 const isText = (value: unknown): value is string => typeof value === 'string' && value !== '';
 const allTexts = (value: unknown): value is string | string[] =>
   Array.isArray(value) ? value.every(isText) : isText(value);
-
-/** "by-order" is the field byOrder of Given, and so on: every option its own field, named after it. */
-const fieldOf = (name: OptionName): string =>
-  name === 'alpha-s-mz' ? 'alphaSMZ' : name.replace(/-([a-z])/g, (_, letter: string) => letter.toUpperCase());
 
 /** The values have the type that the kind of their option asks for: `parse` has seen to it. */
 function collect(values: ReadonlyMap<OptionName, Value>): Given {

@@ -6,7 +6,7 @@ import { accepted } from './refused.js';
 import type { Problem, ReplicaResult } from '../extraction/index.js';
 import type { Series } from '../series/index.js';
 
-const USUAL_SEED = 1;
+export const USUAL_SEED = 1;
 const BAR = 30;
 /** Milliseconds between two drawings of the bar. */
 const PERIOD = 100;

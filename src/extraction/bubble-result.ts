@@ -2,7 +2,7 @@
  * @module The result of `bubbles`: plain, serialisable, the very object that --json prints. Every number is a decimal string
  * with as many digits as are known.
  */
-import type { Caution, GrowthReport, Standing } from '../studies/index.js';
+import type { Assessment, Caution, GrowthReport, Standing } from '../studies/index.js';
 
 export interface BubbleQuantity {
   readonly name: string;
@@ -97,7 +97,7 @@ export interface BubbleTrial {
 
 export interface BubbleResult {
   readonly leastterm: string;
-  readonly request: Readonly<Record<string, string | number | boolean>>;
+  readonly request: Assessment['request'];
   readonly quantity: BubbleQuantity;
   readonly coupling: BubbleCoupling;
   readonly terms: readonly BubbleTerm[];

@@ -5,7 +5,7 @@ import { R, toNumberExact } from '../numerics/index.js';
 import type { Rational } from '../numerics/index.js';
 import type { Uncertain } from '../series/index.js';
 import { exactText, indicative } from '../studies/index.js';
-import type { BubbleCoupling, BubbleQuantity } from './bubble-result.js';
+import type { BubbleCoupling, BubbleQuantity, BubbleResult } from './bubble-result.js';
 
 /** The coupling as the user gave it. */
 export interface BubbleQuestion {
@@ -19,7 +19,7 @@ export interface BubbleQuestion {
   readonly digits: number;
   /** Number of coefficients. */
   readonly order: number;
-  readonly request: Readonly<Record<string, string | number | boolean>>;
+  readonly request: BubbleResult['request'];
 }
 
 export const pointOf = ({ at, flavours, ratio }: BubbleQuestion): ChainPoint => ({ alpha: at.value, flavours, ratio });

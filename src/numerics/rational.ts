@@ -146,7 +146,7 @@ export class Rational {
     return this.num < 0n && q * this.den !== this.num ? q - 1n : q;
   }
 
-  /** Nearest double within 1 ulp; ±Infinity or 0 outside the range of doubles. */
+  /** A double within a relative 3·2^-53 of the value; ±Infinity or 0 outside the range of doubles. */
   toNumber(): number {
     if (this.num === 0n) return 0;
     const direct = Number(this.num) / Number(this.den);

@@ -54,6 +54,8 @@ export type { Expanded } from './expand.js';
 export { knownLoops } from './scheme.js';
 export { ambiguityReport } from './ambiguity-report.js';
 export { termTable } from './terms.js';
+export { leadingStrength } from './strength-report.js';
+export { couplingSummary } from './summary.js';
 export { ballText, estimateText, exactText, indicative } from './figures.js';
 export { writeVerdict } from './rounding.js';
 export { seriesSummary } from './summary.js';

@@ -33,10 +33,7 @@ async function run(call: Call): Promise<number> {
     digits: given.digits ?? USUAL_DIGITS,
     ...(path === undefined ? {} : { path }),
     ...(rule === undefined ? {} : { verdictRule: rule }),
-    request: {
-      ...requestOf(assess.name, name, call),
-      ...(given.verdictRule === undefined ? {} : { 'verdict-rule': given.verdictRule }),
-    },
+    request: requestOf(assess.name, name, call),
   });
   if (given.json) deliver(rooms.resultJson(result), call);
   else if (given.quiet) deliver(await plainText(`${result.verdict.printed}\n`, call.surroundings), call);

@@ -1,11 +1,12 @@
 /** @module leastterm backtest: what the methods would have said of coefficients that are known by now. */
 import type { Call, Command } from '../command.js';
-import { choiceRequest, chosenPrescriptions } from '../choose.js';
+import { chosenPrescriptions } from '../choose.js';
 import { contourExtras } from '../contour-extras.js';
 import { EXIT, UsageError } from '../faults.js';
-import { couplingOf, exactValue, readSeries, requestOf, USUAL_DIGITS, wantedCoupling } from '../input.js';
+import { couplingOf, exactValue, readSeries, USUAL_DIGITS, wantedCoupling } from '../input.js';
 import { deliver } from '../output.js';
 import { presentation } from '../present.js';
+import { askedOf } from '../request.js';
 import type { Series } from '../../series/index.js';
 import type { BacktestOptions, BacktestResult, BacktestSummary } from '../../studies/index.js';
 
@@ -87,18 +88,17 @@ async function run(call: Call): Promise<number> {
   const exact = await exactValue(given.exact, backtest.name);
   const { list, skipped } = await tasks(call);
   const { studies } = await import('../rooms.js');
+  const usual = { hide: USUAL_HIDE, digits: USUAL_DIGITS };
+  // Of one series, also where it is one of many.
+  const { catalogue: _, ...alone } = given;
+  const requestFor = (name: string) => askedOf(backtest.name, { series: name }, alone, usual);
   const optionsFor = (name: string): BacktestOptions => ({
     ...(given.order === undefined ? {} : { order: given.order }),
     ...(by === undefined ? {} : { by }),
     ...(exact === undefined ? {} : { exact }),
     hide: given.hide ?? USUAL_HIDE,
     digits: given.digits ?? USUAL_DIGITS,
-    request: {
-      ...requestOf(backtest.name, name, call),
-      ...choiceRequest(given),
-      ...(given.exact === undefined ? {} : { exact: given.exact }),
-      hide: given.hide ?? USUAL_HIDE,
-    },
+    request: requestFor(name),
   });
   const results: BacktestResult[] = [];
   for (const { name, series } of list) {
@@ -126,10 +126,9 @@ async function run(call: Call): Promise<number> {
       series: r.series.id,
       reason: `${r.known} known coefficients: nothing to hide, or nothing to hold it against`,
     }));
-  const names = given.catalogue === true ? 'catalogue' : list.map(({ name }) => name).join(' ');
   await presentMany(call, {
     leastterm: studies.VERSION,
-    request: optionsFor(names).request,
+    request: askedOf(backtest.name, { series: call.operands }, given, usual),
     results: good,
     skipped: [...skipped, ...tooShort],
     summary: studies.pool(good),

@@ -4,6 +4,7 @@ import { EXIT, UsageError } from '../faults.js';
 import { readSeries } from '../input.js';
 import { deliver } from '../output.js';
 import { accepted } from '../refused.js';
+import { askedOf } from '../request.js';
 import type { Operand } from '../../studies/index.js';
 
 const WITH = /^([^=]+)=(.+)$/;
@@ -33,7 +34,13 @@ async function run(call: Call): Promise<number> {
   const title = given.title === undefined ? {} : { title: given.title };
   const result = accepted(await rooms.studies.combineStudy({ expression, operands: list, ...title }), combine.name);
   deliver(
-    given.json ? rooms.report.plainJson(rooms.report.plainSeries(result)) : rooms.series.writeSeries(result),
+    given.json
+      ? rooms.report.plainJson({
+          leastterm: rooms.studies.VERSION,
+          request: askedOf(combine.name, { expression }, given),
+          ...rooms.report.plainSeries(result),
+        })
+      : rooms.series.writeSeries(result),
     call,
   );
   return EXIT.done;

@@ -1,6 +1,6 @@
 /** @module leastterm compare: every prescription side by side. */
 import type { Call, Command } from '../command.js';
-import { choiceRequest, chosenPrescriptions } from '../choose.js';
+import { chosenPrescriptions } from '../choose.js';
 import { seriesExtras } from '../chain-extras.js';
 import { EXIT, UsageError } from '../faults.js';
 import { couplingOf, exactValue, readSeries, requestOf, USUAL_DIGITS, wantedCoupling } from '../input.js';
@@ -56,14 +56,7 @@ async function run(call: Call): Promise<number> {
     ...(exact === undefined ? {} : { exact }),
     ...(given.hide === undefined ? {} : { hide: given.hide }),
     digits: given.digits ?? USUAL_DIGITS,
-    request: {
-      ...requestOf(compare.name, name, call),
-      ...(given.grid === undefined ? {} : { grid: given.grid }),
-      ...choiceRequest(given),
-      ...(sort === undefined ? {} : { sort }),
-      ...(given.exact === undefined ? {} : { exact: given.exact }),
-      ...(given.hide === undefined ? {} : { hide: given.hide }),
-    },
+    request: requestOf(compare.name, name, call),
   };
   const couplings = grid?.over === 'coupling' ? grid.values : reached === undefined ? [] : [reached.at];
   const [at] = couplings;

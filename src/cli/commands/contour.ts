@@ -1,5 +1,5 @@
 /** @module leastterm contour: a quantity on a circle, order by order, at fixed order and contour improved. */
-import type { Call, Command, Given } from '../command.js';
+import type { Call, Command } from '../command.js';
 import { EXIT, UsageError } from '../faults.js';
 import { couplingOf, readSeries, requestOf, USUAL_DIGITS, wantedCoupling } from '../input.js';
 import { deliver } from '../output.js';
@@ -41,14 +41,6 @@ async function ratioOf(text: string | undefined): Promise<Pick<ContourStudyOptio
   return { ratio };
 }
 
-/** The options of its own, for the result to repeat. */
-function asked({ weight, norm, subtractionScale, loops }: Given): Record<string, string | number> {
-  const list = { weight, norm, 'subtraction-scale': subtractionScale, loops };
-  return Object.fromEntries(
-    Object.entries(list).flatMap(([key, value]) => (value === undefined ? [] : [[key, value]])),
-  );
-}
-
 async function run(call: Call): Promise<number> {
   const [name = ''] = call.operands;
   const { given } = call;
@@ -71,7 +63,7 @@ async function run(call: Call): Promise<number> {
       ...(given.order === undefined ? {} : { order: given.order }),
       ...(path === undefined ? {} : { path }),
       digits: given.digits ?? USUAL_DIGITS,
-      request: { ...requestOf(contour.name, name, call), ...asked(given) },
+      request: requestOf(contour.name, name, call),
     },
     more.contour,
   );

@@ -6,6 +6,7 @@ import { deliver } from '../output.js';
 import { presentation } from '../present.js';
 import { couplingValue, massOf, scaleOf, thresholdsOf } from '../quantities.js';
 import { accepted } from '../refused.js';
+import { askedOf } from '../request.js';
 import type { EvolveRequest } from '../../studies/index.js';
 import type { Threshold } from '../../qcd/index.js';
 
@@ -80,33 +81,20 @@ async function request(given: Given): Promise<EvolveRequest> {
   };
 }
 
-/** What was asked, for the JSON object to repeat. */
-function asked(given: Given): Record<string, unknown> {
-  const { alphaS, mass, from, fromFlavours, to, toFlavours, loops, alphaSMZ, threshold } = given;
-  const options = {
-    'alpha-s': alphaS,
-    mass,
-    from,
-    'from-flavours': fromFlavours,
-    to,
-    'to-flavours': toFlavours,
-    loops,
-    'alpha-s-mz': alphaSMZ,
-    threshold,
-    digits: given.digits ?? USUAL_DIGITS,
-  };
-  return {
-    command: evolve.name,
-    ...Object.fromEntries(Object.entries(options).filter(([, value]) => value !== undefined)),
-  };
-}
-
 async function run(call: Call): Promise<number> {
   const { given } = call;
   const question = await request(given);
   const { report, studies } = await import('../rooms.js');
   const result = accepted(studies.evolveToDigits(question, given.digits ?? USUAL_DIGITS), evolve.name);
-  if (given.json) deliver(report.plainJson({ leastterm: studies.VERSION, request: asked(given), ...result }), call);
+  if (given.json)
+    deliver(
+      report.plainJson({
+        leastterm: studies.VERSION,
+        request: askedOf(evolve.name, {}, given, { digits: USUAL_DIGITS }),
+        ...result,
+      }),
+      call,
+    );
   else if (given.quiet) deliver(`${result.value}\n`, call);
   else deliver(report.evolveText(result, await presentation(call)), call);
   return EXIT.done;

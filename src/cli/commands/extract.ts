@@ -1,6 +1,5 @@
 /** @module leastterm extract: from measured numbers to the coupling, a mass or a condensate, with the budget of errors. */
-import type { Call, Command, Given } from '../command.js';
-import { choiceRequest } from '../choose.js';
+import type { Call, Command } from '../command.js';
 import { problemFile } from '../extract-file.js';
 import type { ProblemFile, Row } from '../extract-file.js';
 import { measuredMass } from '../extract-mass.js';
@@ -8,10 +7,10 @@ import { problemOf } from '../extract-problem.js';
 import { EXIT, UsageError } from '../faults.js';
 import { readSeries, USUAL_DIGITS } from '../input.js';
 import { deliver } from '../output.js';
-import { checkReplicaOptions, replicasOf } from '../replicas.js';
+import { checkReplicaOptions, replicasOf, USUAL_SEED } from '../replicas.js';
 import { presentation } from '../present.js';
 import { accepted } from '../refused.js';
-import type { Request } from '../input.js';
+import { askedOf } from '../request.js';
 import type { Problem } from '../../extraction/index.js';
 
 /** The values of an option that may stand once for all series, or once for each. */
@@ -66,44 +65,6 @@ async function questionOf(call: Call): Promise<ProblemFile> {
   return problemFile(given.problem, given);
 }
 
-/** What was asked, for the result to repeat. */
-function requestOf(given: Given, rows: readonly Row[]): Request {
-  const asked: Record<string, string | number | undefined> = {
-    command: extract.name,
-    series: rows.map((r) => r.series).join(' '),
-    problem: given.problem,
-    measured: rows.some((r) => r.measured !== undefined) ? rows.map((r) => r.measured ?? '').join('; ') : undefined,
-    for: given.for,
-    'scale-of-measurement': given.scaleOfMeasurement?.join('; '),
-    'mass-power': given.massPower,
-    norm: given.norm,
-    at: given.at,
-    'alpha-s-mz': given.alphaSMZ,
-    mass: given.mass,
-    from: given.from,
-    quark: given.quark,
-    light: given.light,
-    to: given.to,
-    'to-flavours': given.toFlavours,
-    loops: given.loops,
-    threshold: given.threshold?.join('; '),
-    central: given.central,
-    'truncation-by': given.truncationBy,
-    'ambiguity-by': given.ambiguityBy,
-    condensate: given.condensate?.join('; '),
-    'condensate-by': given.condensateBy,
-    correlation: given.correlation,
-    weights: given.weights,
-    search: given.search,
-    replicas: given.replicas,
-    order: given.order,
-    flavours: given.flavours,
-    ...choiceRequest(given),
-    digits: given.digits ?? USUAL_DIGITS,
-  };
-  return Object.fromEntries(Object.entries(asked).flatMap(([k, v]) => (v === undefined ? [] : [[k, v] as const])));
-}
-
 async function run(call: Call): Promise<number> {
   checkReplicaOptions(call, extract.name);
   const { given, rows, correlation } = await questionOf(call);
@@ -118,7 +79,10 @@ async function run(call: Call): Promise<number> {
     ...(correlation === undefined ? {} : { correlation }),
     ...(mass === undefined ? {} : { data: stated.data.map((d) => ({ ...d, threshold: mass.threshold })) }),
   };
-  const request = requestOf(given, rows);
+  const request = askedOf(extract.name, { series: call.operands }, call.given, {
+    ...(call.given.replicas === undefined ? {} : { seed: USUAL_SEED }),
+    digits: given.digits ?? USUAL_DIGITS,
+  });
   const [first] = series;
   if (first === undefined) throw new UsageError('there is no series; name one, such as adler', extract.name);
   if (series.length > 1 && problem.for !== 'alpha_s' && problem.for !== 'mass')

@@ -1,47 +1,11 @@
 /** @module leastterm mass: a heavy-quark mass in other definitions. */
-import type { Call, Command, Given } from '../command.js';
+import type { Call, Command } from '../command.js';
 import { EXIT } from '../faults.js';
 import { massQuestion } from '../mass-input.js';
 import { deliver } from '../output.js';
 import { presentation } from '../present.js';
 import { accepted } from '../refused.js';
-
-/** What was asked, for the JSON object to repeat. */
-function asked(operand: string, given: Given, digits: number): Record<string, unknown> {
-  const {
-    from = 'msbar',
-    to,
-    cutoff,
-    light,
-    quark,
-    strength,
-    order,
-    loops,
-    scale,
-    alphaS,
-    alphaSMZ,
-    flavours,
-    threshold,
-  } = given;
-  const options = {
-    from,
-    to,
-    cutoff,
-    'alpha-s': alphaS,
-    'alpha-s-mz': alphaSMZ,
-    flavours,
-    light,
-    quark,
-    order,
-    loops,
-    scale,
-    strength,
-    threshold,
-    digits,
-  };
-  const given2 = Object.entries(options).filter(([, value]) => value !== undefined);
-  return { command: mass.name, mass: operand, ...Object.fromEntries(given2) };
-}
+import { askedOf } from '../request.js';
 
 async function run(call: Call): Promise<number> {
   const [operand = ''] = call.operands;
@@ -50,7 +14,7 @@ async function run(call: Call): Promise<number> {
   const { masses, sheets } = await import('../rooms-more.js');
   const result = accepted(masses.massStudy(question), mass.name);
   const { report, studies } = await import('../rooms.js');
-  const request = asked(operand, given, question.digits);
+  const request = askedOf(mass.name, { mass: operand }, given, { from: 'msbar', digits: question.digits });
   if (given.json) deliver(report.plainJson({ leastterm: studies.VERSION, request, ...result }), call);
   else if (given.quiet) deliver(sheets.massLines(result), call);
   else deliver(sheets.massText(result, await presentation(call)), call);

@@ -10,17 +10,22 @@ import type { SavedResult } from '../../pictures/index.js';
 /** Differences shown on the page; all are in the JSON. */
 const SHOWN = 20;
 
-/** Words of the command line that a request stands for: operands first, then options. */
-export function wordsOf(request: SavedResult['request']): string[] {
-  const { command: _, series, ...options } = request;
-  const operands = (Array.isArray(series) ? series : [series]).filter((name) => typeof name === 'string');
+/**
+ * Words of the command line that a request stands for. Options first, their values joined on, since a value may begin with
+ * a dash; operands last, behind a --.
+ */
+export function wordsOf(request: SavedResult['request'], { operands }: Pick<Command, 'operands'>): string[] {
+  const names = operands.map(({ name }) => name.toLowerCase());
+  const texts = (value: unknown): string[] =>
+    value === undefined || value === null ? [] : (Array.isArray(value) ? value : [value]).map(String);
+  const options = Object.entries(request).filter(([name]) => name !== 'command' && !names.includes(name));
   return [
-    ...operands,
-    ...Object.entries(options).flatMap(([name, value]) => {
+    ...options.flatMap(([name, value]) => {
       if (value === true) return [`--${name}`];
-      if (value === false || value === undefined || value === null) return [];
-      return (Array.isArray(value) ? value : [value]).flatMap((one) => [`--${name}`, String(one)]);
+      return value === false ? [] : texts(value).map((text) => `--${name}=${text}`);
     }),
+    '--',
+    ...names.flatMap((name) => texts(request[name])),
   ];
 }
 
@@ -47,14 +52,22 @@ export function replayCommand(others: readonly Command[]): Command {
     const [name = ''] = call.operands;
     const saved = await savedResult(name);
     if (saved === undefined)
-      throw new UsageError(`${name} holds no result: wanted a file written with --json by another command`, 'replay');
+      throw new UsageError(
+        `${name} holds no result with the request behind it: wanted a file that ends in .json, written with --json by another command`,
+        'replay',
+      );
     const command = others.find((other) => other.name === saved.request.command);
     if (command === undefined)
       throw new UsageError(
         `${name} holds a result of "${saved.request.command}", which cannot be carried out again; wanted one of ${others.map((c) => c.name).join(', ')}`,
         'replay',
       );
-    const { operands, given } = await parse(wordsOf(saved.request), command);
+    const { operands, given } = await parse(wordsOf(saved.request, command), command);
+    if (operands.includes('-'))
+      throw new UsageError(
+        `${name}: its series came from standard input, which is gone; keep the series in a file, and run ${command.name} on that`,
+        'replay',
+      );
     let json = '';
     await command.run({
       operands,

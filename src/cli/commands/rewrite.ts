@@ -5,6 +5,7 @@ import { readSeries } from '../input.js';
 import { deliver } from '../output.js';
 import { scaleOf, thresholdsOf } from '../quantities.js';
 import { accepted } from '../refused.js';
+import { askedOf } from '../request.js';
 import type { Exact } from '../../numerics/index.js';
 import type { MassDefinition } from '../../qcd/index.js';
 import type { Series } from '../../series/index.js';
@@ -105,7 +106,13 @@ async function run(call: Call): Promise<number> {
   };
   const result = accepted(await rooms.studies.rewriteStudy(series, request), rewrite.name);
   deliver(
-    given.json ? rooms.report.plainJson(rooms.report.plainSeries(result)) : rooms.series.writeSeries(result),
+    given.json
+      ? rooms.report.plainJson({
+          leastterm: rooms.studies.VERSION,
+          request: askedOf(rewrite.name, { series: name }, given),
+          ...rooms.report.plainSeries(result),
+        })
+      : rooms.series.writeSeries(result),
     call,
   );
   return EXIT.done;

@@ -29,11 +29,7 @@ async function run(call: Call): Promise<number> {
     byOrder: given.byOrder === true,
     digits: given.digits ?? USUAL_DIGITS,
     ...(path === undefined ? {} : { path }),
-    request: {
-      ...requestOf(truncation.name, name, call),
-      ...(given.prior === undefined ? {} : { prior: given.prior }),
-      ...(given.byOrder === true ? { 'by-order': true } : {}),
-    },
+    request: requestOf(truncation.name, name, call),
   });
   if (given.json) deliver(report.plainJson(report.truncationObject(result)), call);
   else if (given.quiet) deliver(report.truncationLines(result), call);

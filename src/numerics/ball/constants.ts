@@ -70,9 +70,23 @@ const piRaw = cached((wp) => {
   return (426880n * q * root) / t;
 });
 
-/** Σ_{a<=k<b} 1/((2k+1) x2^k) as T/(P Q) with P = x2^(b−a), Q = Π(2k+1). */
+/** Heuristic: terms added one by one at the bottom of the splitting. */
+const LEAF = 12;
+
+/** Σ_{a<=k<b} 1/((2k+1) x2^(k−a)) as T/(P Q) with P = x2^(b−a), Q = Π(2k+1). */
 function acothSplit(x2: bigint, a: number, b: number): Split {
-  if (b - a === 1) return [x2, BigInt(2 * a + 1), x2];
+  if (b - a <= LEAF) {
+    let p = 1n;
+    let q = 1n;
+    let t = 0n;
+    for (let k = a; k < b; k++) {
+      const odd = int(2 * k + 1);
+      t = (t * odd + q) * x2;
+      q *= odd;
+      p *= x2;
+    }
+    return [p, q, t];
+  }
   const m = (a + b) >> 1;
   const [p1, q1, t1] = acothSplit(x2, a, m);
   const [p2, q2, t2] = acothSplit(x2, m, b);

@@ -2,7 +2,7 @@
  * @module Real exponential function and its relatives: exp, expm1, sinh, cosh, tanh.
  *
  * Purpose    enclosures for balls of any size, with relative accuracy where the value is small (expm1, sinh near 0).
- * Method     exp x = 2^n·exp t, t = x − n ln 2 in [0, ln 2), by expFixed; small arguments of expm1 and sinh by their series.
+ * Method     exp x = 2^n·exp t, t = x − n ln 2 in [0, ln 2), by tables (expFixed) or, long, by several primes (expSmooth); small arguments of expm1 and sinh by their series.
  * Bound      |e^(m+d) − e^m| <= e^m·(e^r − 1) <= e^m·r(1 + r) for |d| <= r <= 1/4; wider balls by e^m·(cosh r ± sinh r).
  */
 import { ln2Fixed } from './constants.js';
@@ -10,6 +10,8 @@ import { wordPrec } from './fixed.js';
 import { expFixed, FIXED_ULPS } from './fixed-tables.js';
 import * as R from './real.js';
 import type { Ball } from './real.js';
+import { REACH, SMOOTH_FROM } from './smooth.js';
+import { expSmooth, SMOOTH_ULPS } from './smooth-exp.js';
 import { shift } from '../bits.js';
 
 /** Exponents beyond 2^HUGE_BITS are not followed: the result is unbounded, or enclosed as next to nothing. */
@@ -20,6 +22,7 @@ const GUARD = 20;
 function expMid(x: Ball, up: number, prec: number): Ball {
   const wp = wordPrec(prec + GUARD);
   if (up < -wp) return R.addError(R.ONE, 1, up + 1);
+  if (wp >= SMOOTH_FROM && up <= REACH) return fromSmooth(shift(x.mid, x.exp + wp), wp, 0, prec);
   const extra = Math.max(0, up) + 4;
   const t = shift(x.mid, x.exp + wp + extra);
   const ln2 = ln2Fixed(wp + extra);
@@ -27,7 +30,14 @@ function expMid(x: Ball, up: number, prec: number): Ball {
   if (t < 0n) n -= 1n;
   // |n| < 2^(up+1), so n·ln 2 is right to 2^(up+2−extra) < 1 ulp of 2^-wp; the three floors lose 3 more.
   const r = (t - n * ln2) >> BigInt(extra);
+  if (wp >= SMOOTH_FROM) return fromSmooth(r, wp, Number(n), prec);
   return R.ball(expFixed(r, wp), Number(n) - wp, FIXED_ULPS + 16, prec);
+}
+
+/** 2^n·exp(t·2^-wp) for t off by less than 4 units, each of which changes the mantissa by less than 2. */
+function fromSmooth(t: bigint, wp: number, n: number, prec: number): Ball {
+  const e = expSmooth(t, wp);
+  return R.ball(e.y, n + e.n - wp, SMOOTH_ULPS + 8, prec);
 }
 
 /** e^x. INDETERMINATE when x may exceed 2^45. */

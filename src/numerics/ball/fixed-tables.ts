@@ -10,13 +10,14 @@
  *            FIXED_ULPS in all. The table values alone carry TABLE_ULPS.
  * Reference  R. P. Brent, P. Zimmermann, "Modern Computer Arithmetic" (2010), section 4.3.
  */
-import { expReduced, expSeries, int, SERIES_ULPS, sinCosReduced, sinCosSeries } from './fixed.js';
+import { expReduced, expSeries } from './exp-series.js';
+import { int, SERIES_ULPS, sinCosReduced, sinCosSeries } from './fixed.js';
 
 /** Error bound, in units of 2^-wp, of expFixed and sinCosFixed. */
 export const FIXED_ULPS = 4 * SERIES_ULPS;
 /** Error bound of expLeading and sinCosLeading. */
 export const TABLE_ULPS = 64;
-/** Heuristic: tables pay up to this precision; beyond it they would cost more to fill than they save. */
+/** Heuristic: tables of sin and cos pay up to this precision; beyond it they would cost more to fill than they save. */
 const TABLE_LIMIT = 4096;
 const LEVEL_BITS = 8;
 const HALF = LEVEL_BITS / 2;
@@ -49,7 +50,7 @@ function levelOf<T>(levels: Level<T>[], l: number): Level<T> {
 /** Number of levels: each costs one product (sin/cos: four) and saves terms of the series (heuristic). */
 export function levelsFor(wp: number, products: 1 | 4): number {
   if (products === 4) return wp <= 2000 ? 2 : 3;
-  return wp <= 256 ? 2 : wp <= 640 ? 3 : wp <= 2000 ? 4 : 5;
+  return wp <= 256 ? 2 : wp <= 640 ? 3 : 4;
 }
 
 /** The halves' exponentials: r < 2^-h for h bits that are zero at the top. */
@@ -85,7 +86,7 @@ function rotate([c, s]: Pair, [tc, ts]: Pair, w: bigint): Pair {
   return [(c * tc - s * ts) >> w, (s * tc + c * ts) >> w];
 }
 
-/** exp(n·2^(−8L))·2^wp for an integer 0 <= n < 2^(8L), L <= 6; TABLE_ULPS. wp a multiple of 64. */
+/** exp(n·2^(−8L))·2^wp for an integer 0 <= n < 2^(8L), L <= 4; TABLE_ULPS. wp a multiple of 64. */
 export function expLeading(n: number, levels: number, wp: number): bigint {
   const w = BigInt(wp);
   const table = tablesFor(wp).exp;
@@ -117,9 +118,8 @@ export function sinCosLeading(n: number, levels: number, wp: number): Pair {
   return e ?? [1n << w, 0n];
 }
 
-/** exp(t·2^-wp)·2^wp for 0 <= t < 2^wp; wp a multiple of 64. Off by at most FIXED_ULPS. */
+/** exp(t·2^-wp)·2^wp for 0 <= t < 2^wp; wp a multiple of 64, of moderate size (smooth-exp.ts beyond). Off by at most FIXED_ULPS. */
 export function expFixed(t: bigint, wp: number): bigint {
-  if (wp > TABLE_LIMIT) return expReduced(t, wp, 0);
   const levels = levelsFor(wp, 1);
   const down = wp - LEVEL_BITS * levels;
   const n = Number(t >> BigInt(down));

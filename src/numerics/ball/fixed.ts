@@ -1,9 +1,9 @@
 /**
- * @module Fixed-point exponential and sine/cosine series: the inner loops of all elementary functions.
+ * @module Fixed-point sine/cosine series, and what all fixed-point series share.
  *
- * Purpose    exp r and (cos r, sin r) for an integer r that stands for r·2^-wp, without a ball in the loop.
- * Method     r below 2^-10 at least: by tables (fixed-tables.ts), or halved further here, the result squared back. The Taylor series
- *            is summed by columns: with X = r^m, Σ r^k/k! = Σ_j r^j Σ_i X^i/(im+j)!, so that only about 2·√n of the n terms cost a
+ * Purpose    (cos r, sin r) for an integer r that stands for r·2^-wp, without a ball in the loop; powers, small integers, row lengths.
+ * Method     r below 2^-10 at least: by tables (fixed-tables.ts), or halved further here and doubled back. The Taylor series
+ *            is summed by columns: with X = r^2m, every column a power series in X, so that only about 2·√n of the n terms cost a
  *            full product and the rest a division by a small integer.
  * Bound      all quantities are below 2 and every floor loses less than one unit in the last place (ulp).
  *            T = X^i/k! carries at most 3 ulp: e → e/k + 1 at a division, e → e·X + T·e_X + 1 at a product, where
@@ -16,8 +16,8 @@
 
 /** Error bound of the series, in units of 2^-wp. */
 export const SERIES_ULPS = 2 ** 11;
-/** Arguments of the series are below 2^-LEAST_REDUCTION. */
-const LEAST_REDUCTION = 10;
+/** Arguments of the exponential and trigonometric series are below 2^-LEAST_REDUCTION. */
+export const LEAST_REDUCTION = 10;
 /** Heuristic: from here on a few halvings are cheaper than the terms they save. */
 const HALVING_FROM = 900;
 /** Guard bits for halvings: s <= 48 squarings turn 2^11 ulp into less than 2^60. */
@@ -44,6 +44,18 @@ export function powFixed(x: bigint, n: number, wp: bigint): bigint {
   return n & 1 ? (sq * x) >> wp : sq;
 }
 
+/** x, …, x^m in fixed point at their index, |x| < 2^-10; each off by less than 2 ulp if x is off by less than 1. */
+export function powersFixed(x: bigint, m: number, wp: bigint): bigint[] {
+  const out = [1n << wp, x];
+  for (let i = 2; i <= m; i++) out.push((out[i >> 1]! * out[i - (i >> 1)]!) >> wp);
+  return out;
+}
+
+/** Terms in a row, about factor·√n and at most `most`, so that the rows of n terms are as full as they can be. */
+export function rowsOf(n: number, factor: number, most: number): number {
+  return Math.ceil(n / Math.ceil(n / Math.max(1, Math.min(most, Math.round(factor * Math.sqrt(n))))));
+}
+
 /**
  * Columns for about `terms` terms. Horner's rule and the power X cost about 1.4 full products a column; the terms/m products with
  * the shrinking T cost half of one each (heuristic).
@@ -57,24 +69,6 @@ function termsNeeded(wp: number, h: number): number {
   let n = wp / (h + 2);
   for (let i = 0; i < 3; i++) n = wp / (h + Math.max(0, Math.log2(n + 1) - 1.44));
   return Math.ceil(n);
-}
-
-/** exp r for 0 <= r < 2^-h, h >= 10. */
-export function expSeries(r: bigint, wp: number, h: number): bigint {
-  const w = BigInt(wp);
-  const m = columns(termsNeeded(wp, h));
-  const x = powFixed(r, m, w);
-  const sums: bigint[] = new Array<bigint>(m).fill(0n);
-  let t = 1n << w;
-  for (let k = 1; t !== 0n; t = (t * x) >> w) {
-    for (let j = 0; j < m; j++, k++) {
-      sums[j]! += t;
-      t /= int(k);
-    }
-  }
-  let s = sums[m - 1]!;
-  for (let j = m - 2; j >= 0; j--) s = ((s * r) >> w) + sums[j]!;
-  return s;
 }
 
 /** (cos r, sin r) for 0 <= r < 2^-h, h >= 10: even and odd columns of the exponential series with alternating signs. */
@@ -108,17 +102,6 @@ export function sinCosSeries(r: bigint, wp: number, h: number): [bigint, bigint]
 /** Number of halvings that balance squarings against terms (heuristic). */
 function halvings(wp: number): number {
   return wp < HALVING_FROM ? 0 : Math.min(48, Math.round(Math.sqrt(wp) / 5));
-}
-
-/** exp r for r < 2^-h, h < 10 or wp beyond the tables, with s halvings and squarings. */
-export function expReduced(r: bigint, wp: number, h: number): bigint {
-  const s = Math.max(halvings(wp), LEAST_REDUCTION - h);
-  if (s === 0) return expSeries(r, wp, h);
-  const work = wp + HALVING_GUARD;
-  const w = BigInt(work);
-  let e = expSeries(r << BigInt(HALVING_GUARD - s), work, h + s);
-  for (let i = 0; i < s; i++) e = (e * e) >> w;
-  return e >> BigInt(HALVING_GUARD);
 }
 
 /** (cos r, sin r) for r < 2^-h, with s angle doublings. */

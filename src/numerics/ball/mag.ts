@@ -83,7 +83,7 @@ export function mulMagLower(a: Mag, b: Mag): Mag {
 export function magToNumber(a: Mag): number {
   if (a.m === 0) return 0;
   if (a.e > 1200) return Infinity;
-  if (a.e < -1200) return Number.MIN_VALUE;
+  if (a.e < -1300) return Number.MIN_VALUE; // m < 2^200
   const half = Math.trunc(a.e / 2);
   return a.m * 2 ** half * 2 ** (a.e - half) + Number.MIN_VALUE;
 }
