@@ -156,6 +156,13 @@ describe('scores', () => {
     expect(scoreOf([miss(0.51, 0.3, 0.4)])).toMatchObject({ inside: 0 });
   });
 
+  test('saying no error is no way to a good score: a point gets no allowance for the error of the target', async () => {
+    const silent = scoreOf([{ hidden: 1, miss: 0.1, targetError: 0.4 }]);
+    expect(silent).toMatchObject({ inside: 1 });
+    expect(silent?.score).toBeCloseTo(6.25 * 0.1, 14);
+    expect(scoreOf([miss(0.1, 0.1, 0.4)])?.score).toBeCloseTo(0.2, 14);
+  });
+
   test('the interval score is least, on average, for the true 68 % interval of a uniform truth', async () => {
     const grid = Array.from({ length: 2001 }, (_, i) => i / 1000 - 1);
     const mean = (half: number): number =>

@@ -6,6 +6,8 @@
  *   coverage   share of |m| <= w, w = √(s² + the target's own error²)
  *   sharpness  mean of s
  *   score      mean of 2 s + (2/α) max(0, |m| − w), α = 0.32: the interval score at 68 %; small is good, 0 is perfect.
+ * A prediction without an error is scored as a point, w = 0: otherwise saying nothing would score best against a target that is
+ * known badly.
  * The score is proper: on average it is least for the interval that one believes in; wide and wrong both cost.
  * Reference: T. Gneiting, A. E. Raftery, J. Am. Stat. Assoc. 102 (2007) 359, sec. 6.2 (from memory).
  */
@@ -59,6 +61,10 @@ const width = (m: Miss): number => Math.hypot(m.error ?? 0, m.targetError);
 
 export const isInside = (m: Miss): boolean => Math.abs(m.miss) <= width(m);
 
+/** Interval score of one prediction. */
+const scoreOfOne = (m: Miss): number =>
+  2 * (m.error ?? 0) + (2 / LEVEL_68) * Math.max(0, Math.abs(m.miss) - (m.error === undefined ? 0 : width(m)));
+
 /** |m|/w. */
 export const pull = (m: Miss): number => (m.miss === 0 ? 0 : Math.abs(m.miss) / width(m));
 
@@ -83,7 +89,7 @@ export function scoreOf(misses: readonly Miss[]): Score | undefined {
     inside: misses.filter(isInside).length,
     bias: mean(misses.map((m) => m.miss)),
     ...(errors.length < misses.length ? {} : { sharpness: mean(errors) }),
-    score: mean(misses.map((m) => 2 * (m.error ?? 0) + (2 / LEVEL_68) * Math.max(0, Math.abs(m.miss) - width(m)))),
+    score: mean(misses.map(scoreOfOne)),
     worst: Math.max(...misses.map(pull)),
   };
 }
