@@ -1,7 +1,7 @@
 /**
  * @module Exact numbers that remember how they were written, so that a series can be written again without loss.
  */
-import { R, exact } from '../numerics/index.js';
+import { R, exact, writePlain, writeScientific } from '../numerics/index.js';
 import type { Exact, Rational } from '../numerics/index.js';
 
 export interface Written extends Exact {
@@ -48,17 +48,25 @@ function decimal(value: Exact): string {
 /** A terminating decimal with up to so many digits is shorter to read than its fraction (habit). */
 const SHORT = 24;
 
-/** The decimal form of q when it ends, and soon. Reads back to q. */
+/** Zeros before the first digit, or places before the point, from which on a power of ten reads better (habit). */
+const LONGEST = 15;
+
+/** The decimal form of q when it ends, and soon; with a power of ten for a very small or large q. Reads back to q. */
 export function decimalText(q: Rational): string | undefined {
+  if (q.isZero()) return '0';
   let rest = q.den;
   let [twos, fives] = [0, 0];
   for (; rest % 2n === 0n; twos++) rest /= 2n;
   for (; rest % 5n === 0n; fives++) rest /= 5n;
   const places = Math.max(twos, fives);
-  if (rest !== 1n || places > SHORT) return undefined;
-  const all = ((q.abs().num * 10n ** BigInt(places)) / q.den).toString().padStart(places + 1, '0');
-  if (all.length > SHORT) return undefined;
-  const point = all.length - places;
-  const text = places === 0 ? all : `${all.slice(0, point)}.${all.slice(point)}`;
-  return q.sign() < 0 ? `-${text}` : text;
+  if (rest !== 1n) return undefined;
+  const all = ((q.abs().num * 10n ** BigInt(places)) / q.den).toString();
+  const digits = all.replace(/0+$/, '');
+  if (digits.length > SHORT) return undefined;
+  const exponent = all.length - digits.length - places;
+  const decimal = { coefficient: BigInt(digits) * BigInt(q.sign()), exponent };
+  const leading = all.length - places;
+  return Math.abs(leading) > LONGEST || digits.length - exponent > SHORT
+    ? writeScientific(decimal)
+    : writePlain(decimal);
 }

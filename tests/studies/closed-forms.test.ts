@@ -102,6 +102,15 @@ describe('closed forms', () => {
     expect(rationalText(Rational.parse('-49.0757') ?? Rational.ZERO)).toBe('-49.0757');
     expect(decimalText(Rational.of(1, 3))).toBeUndefined();
     expect(decimalText(Rational.of(-1, 8))).toBe('-0.125');
+    expect(decimalText(Rational.of(12000, 1))).toBe('12000');
+    expect(decimalText(Rational.of(-24n * 10n ** 15n, 1n))).toBe('-2.4e16');
+    expect(decimalText(Rational.of(3n, 2n * 10n ** 30n))).toBe('1.5e-30');
+    for (const text of ['0', '1e15', '100000000000000', '1.25e-20', '-3.000001', '123456789012345678901234'])
+      expect(
+        Rational.parse(decimalText(Rational.parse(text)!)!)!
+          .sub(Rational.parse(text)!)
+          .isZero(),
+      ).toBe(true);
     fc.assert(
       fc.property(rational, (q) => {
         expect(Rational.parse(rationalText(q))?.equals(q)).toBe(true);
