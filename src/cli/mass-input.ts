@@ -152,9 +152,9 @@ async function alphaOf(given: Given, light: number): Promise<MassQuestion['alpha
 
 type Value = MassQuestion['alpha']['value'];
 
-function positive(option: string, value: Value): Value {
+function positive(option: string, value: Value, what = 'coupling'): Value {
   if ((value.value.rational?.sign() ?? 1) > 0) return value;
-  throw new UsageError(`--${option}: ${value.text} is not positive; wanted a coupling above 0`, COMMAND);
+  throw new UsageError(`--${option}: ${value.text} is not positive; wanted a ${what} above 0`, COMMAND);
 }
 
 /** μ: a bare number is a multiple of m(m), a scale has its unit. */
@@ -180,7 +180,7 @@ export async function massQuestion(operand: string, given: Given): Promise<MassQ
   const strength =
     given.strength === undefined
       ? undefined
-      : positive('strength', await couplingValue('strength', given.strength, COMMAND));
+      : positive('strength', await couplingValue('strength', given.strength, COMMAND), 'strength');
   return {
     mass: { ...mass, text: operand.trim() },
     from,

@@ -4,9 +4,12 @@ import type { Estimate, FoundSingularity } from './growth.js';
 /** At most `digits` significant digits, without trailing zeros. */
 export const short = (x: number, digits = 3): string => Number(x.toPrecision(digits)).toString();
 
+/** Relative errors below this are the rounding of doubles, and say nothing about the series. */
+const ROUNDING = 1e-12;
+
 /** value ± error, the error to two digits and the value to the same place. */
 export function plusMinus(e: Estimate): string {
-  if (!(e.error > 0) || !Number.isFinite(e.error)) return short(e.value, 10);
+  if (!(e.error > ROUNDING * Math.abs(e.value)) || !Number.isFinite(e.error)) return short(e.value, 10);
   const relative = Math.abs(e.value) > 0 ? e.error / Math.abs(e.value) : 1;
   const digits = Math.min(15, Math.max(2, 2 + Math.ceil(-Math.log10(relative))));
   return `${short(e.value, digits)} ± ${short(e.error, 2)}`;

@@ -154,7 +154,7 @@ export function entryOf(request: MassRequest, inputs: EntryInputs): MassEntry {
     ...(last > 0 ? { lastTerm: few(last) } : {}),
     ...(scaleVariation === undefined ? {} : { scaleVariation }),
     ...(perturbative > 0 ? { perturbative: few(perturbative) } : {}),
-    ...(ambiguity === undefined ? {} : { ambiguity: few(ambiguity) }),
+    ...(ambiguity === undefined ? {} : { ambiguity: few(ambiguity, 4) }),
     printed: printedText(text(found.value), shifts, perturbative, ambiguity),
     source: definition.source,
     status: definition.status,

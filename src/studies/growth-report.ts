@@ -34,7 +34,9 @@ export function growthReport(growth: Growth, expanded: Expanded, strength?: Stre
         n: r.n,
         ratio: indicative(r.ratio, 6),
         ...(r.linear === undefined ? {} : { linear: indicative(r.linear, 6) }),
-        ...(r.linearError === undefined ? {} : { linearError: indicative(r.linearError, 2) }),
+        ...(r.linearError === undefined
+          ? {}
+          : { linearError: indicative(beyondRounding(r.linearError, r.linear ?? 1), 2) }),
       })),
       ...(c === undefined
         ? {}
@@ -56,7 +58,7 @@ export function growthReport(growth: Growth, expanded: Expanded, strength?: Stre
       predictions: growth.predictions.map((p) => ({
         n: p.n,
         method: p.method,
-        relativeMiss: indicative(p.relativeMiss, 3),
+        relativeMiss: indicative(beyondRounding(p.relativeMiss, 1), 3),
       })),
       competition: growth.competition,
     },
@@ -64,6 +66,12 @@ export function growthReport(growth: Growth, expanded: Expanded, strength?: Stre
     flags: growth.flags,
   };
 }
+
+/** Relative sizes below this are the rounding of doubles. */
+const ROUNDING = 1e-12;
+
+/** `x` as it is, 0 where it is no more than the rounding of something of the size of `of`. */
+const beyondRounding = (x: number, of: number): number => (Math.abs(x) < ROUNDING * Math.abs(of) ? 0 : x);
 
 function singularityReport(s: FoundSingularity, expanded: Expanded): SingularityReport {
   const t = estimateText(s.t.value, s.t.error);
