@@ -12,7 +12,7 @@ import type { LaplaceSum, PolePart } from '../borel/index.js';
 import { approximateTransformed, borelTransformOrder2, laplace, nearDiagonal } from '../borel/index.js';
 import type { Expansion } from '../series/index.js';
 import { climb, placeOf } from './climb.js';
-import { combineErrors, withTrust } from './neighbours.js';
+import { combineErrors, countBefore, withTrust } from './neighbours.js';
 import type { Outcome, Prescription, Sum } from './prescription.js';
 import { dressed, refusal, scaled, toDigits } from './prescription.js';
 
@@ -118,7 +118,7 @@ function toSum(e: Expansion, variant: string, s: LaplaceSum, termsUsed: number, 
 function tableOf(e: Expansion, digits: number): Outcome[] {
   const count = e.coefficients.length;
   const entries = nearDiagonal(count - 1, 1).map(([L, M]) => ({ label: `[${L}/${M}]`, s: sumAt(e, L, M, digits) }));
-  const before = nearDiagonal(count - 2, 1)
+  const before = nearDiagonal(countBefore(e.coefficients) - 1, 1)
     .map(([L, M]) => sumAt(e, L, M, digits))
     .find((s): s is LaplaceSum => typeof s !== 'string');
   const errors = combineErrors(

@@ -16,7 +16,7 @@ import type { Growth } from '../growth/index.js';
 import type { Expansion } from '../series/index.js';
 import { climb, placeOf } from './climb.js';
 import { pairConfirmed } from './eligibility.js';
-import { combineErrors, withTrust } from './neighbours.js';
+import { combineErrors, countBefore, withTrust } from './neighbours.js';
 import type { Outcome, Prescription, Request, Sum } from './prescription.js';
 import { dressed, refusal, scaled, toDigits } from './prescription.js';
 
@@ -209,7 +209,7 @@ function tableOf(e: Expansion, growth: Growth, b: Rational, digits: number): Out
   const ranked = nearDiagonal(count - 1, count > LONG ? 1 : 2)
     .map(evaluate)
     .sort((p, q) => rank(p.entry) - rank(q.entry));
-  const before = nearDiagonal(count - 2, 1)
+  const before = nearDiagonal(countBefore(e.coefficients) - 1, 1)
     .map((place) => evaluate(place).entry)
     .sort((p, q) => rank(p) - rank(q))
     .find((p): p is Entry => typeof p !== 'string');

@@ -14,7 +14,7 @@ import { inputObjection } from './eligibility.js';
 import type { Prescription } from './prescription.js';
 import { leastTerm, partialSums, refusal, terms, toDigits } from './prescription.js';
 
-/** Ï = |t*| divided by Î±, and b = Î³ â 1, of the nearest stated singularity with an exponent. */
+/** x = |t*| divided by α, and b = γ − 1, of the nearest stated singularity with an exponent. */
 export function stateOfLeading(e: Expansion): { x: number; b: number; positive: boolean } | undefined {
   const s = e.stated[0];
   if (s?.exponent === undefined) return undefined;

@@ -3,7 +3,7 @@
  *
  * [L/M](x) of F, evaluated exactly. A series with a same-sign factorial divergence has its cut on the positive axis, where
  * real approximants only wander: such a value is given with that caution and without an ambiguity.
- * Truncation error: half the range over the neighbouring entries of the same order and the step from the order before, in
+ * Truncation error: the range over the neighbouring entries of the same order and the step from the order before, in
  * quadrature. Reference: G. A. Baker, P. Graves-Morris, Padé Approximants (1996) (from memory).
  */
 import { R } from '../numerics/index.js';
@@ -12,7 +12,7 @@ import { nearDiagonal, padeOf } from '../borel/index.js';
 import type { Expansion } from '../series/index.js';
 import type { Outcome, Prescription } from './prescription.js';
 import { dressed, refusal, toDigits } from './prescription.js';
-import { combineErrors } from './neighbours.js';
+import { combineErrors, countBefore } from './neighbours.js';
 
 /** Largest number of coefficients used: beyond, rational approximants of the coupling series gain nothing. Heuristic. */
 const MOST = 60;
@@ -75,7 +75,7 @@ export const pade: Prescription = {
         : [];
     const outcomes: Outcome[] = [];
     const order = nearDiagonal(usable - 1, 2);
-    const lower = nearDiagonal(usable - 2, 1);
+    const lower = nearDiagonal(countBefore(short.coefficients) - 1, 1);
     const label = (L: number, M: number): string => `[${L}/${M}]`;
     if (request.only !== undefined) {
       const wanted = order.find(([L, M]) => label(L, M) === request.only);

@@ -14,7 +14,7 @@ import type { Contour, LaplaceSum, Lossy, QuickComplex } from '../borel/index.js
 import type { Growth } from '../growth/index.js';
 import type { Expansion } from '../series/index.js';
 import { pairConfirmed, trustOf } from './eligibility.js';
-import { combineErrors } from './neighbours.js';
+import { combineErrors, countBefore } from './neighbours.js';
 import type { Outcome, Request } from './prescription.js';
 import { dressed, refusal, scaled } from './prescription.js';
 
@@ -150,12 +150,13 @@ interface Before {
   readonly confirmed: boolean;
 }
 
-/** Principal value with one coefficient fewer, or with two where that differs more. */
+/** Principal value of the order before, or of the one before that where it differs more. */
 function before(e: Expansion, growth: Growth, build: Build, value: Ball): Before | undefined {
-  const one = valueOf(e, growth, build, 1);
+  const fewer = e.coefficients.length - countBefore(e.coefficients);
+  const one = valueOf(e, growth, build, fewer);
   if (one === undefined || size(value, one) > SUSPICIOUSLY_SMALL * size(value, R.ZERO))
     return one && { value: one, confirmed: true };
-  const two = valueOf(e, growth, build, 2);
+  const two = valueOf(e, growth, build, fewer + 1);
   if (two === undefined) return { value: one, confirmed: false };
   return { value: size(value, two) > size(value, one) ? two : one, confirmed: true };
 }
