@@ -7,12 +7,18 @@ export const short = (x: number, digits = 3): string => Number(x.toPrecision(dig
 /** Relative errors below this are the rounding of doubles, and say nothing about the series. */
 const ROUNDING = 1e-12;
 
+/** Places after the point, and the power of ten, from which on a number is written with an exponent. */
+const MOST_PLACES = 15;
+const MOST_PLAIN = 7;
+
 /** value ± error, the error to two digits and the value to the same place. */
 export function plusMinus(e: Estimate): string {
   if (!(e.error > ROUNDING * Math.abs(e.value)) || !Number.isFinite(e.error)) return short(e.value, 10);
-  const relative = Math.abs(e.value) > 0 ? e.error / Math.abs(e.value) : 1;
-  const digits = Math.min(15, Math.max(2, 2 + Math.ceil(-Math.log10(relative))));
-  return `${short(e.value, digits)} ± ${short(e.error, 2)}`;
+  const place = Math.floor(Math.log10(e.error)) - 1;
+  const leading = e.value === 0 ? place : Math.floor(Math.log10(Math.abs(e.value)));
+  const plain = place < 0 && place >= -MOST_PLACES && leading < MOST_PLAIN;
+  const value = plain ? e.value.toFixed(-place) : short(e.value, Math.min(15, Math.max(1, leading - place + 1)));
+  return `${value} ± ${short(e.error, 2)}`;
 }
 
 /** "t = −0.333 ± …, on the negative axis". */
