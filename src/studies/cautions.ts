@@ -14,6 +14,9 @@ const LARGE_ALPHA = 0.5;
 /** A spread among central values above this multiple of the largest stated error is worth a word. Heuristic. */
 const SPREAD_FACTOR = 3;
 
+/** A coupling error above this part of the coupling leaves linear propagation an order of magnitude. Heuristic. */
+const WIDE_COUPLING = 0.3;
+
 export function cautions(
   series: Series,
   expanded: Expanded,
@@ -64,6 +67,18 @@ export function cautions(
     list.push({
       code: 'unstable-table',
       text: `${rejected} of ${rejected + stood} Borel–Padé entries do not stand: read the ones that do with care`,
+    });
+  const silentOn = values.filter((v) => v.inputUnknown === true).map((v) => v.prescription.name);
+  if (silentOn.length > 0)
+    list.push({
+      code: 'input-error-unknown',
+      text: `the errors of the inputs could not be carried through ${silentOn.join(', ')}: nothing is stated there, and it is not zero`,
+    });
+  const wide = Math.max(0, ...values.map((v) => v.couplingError ?? 0));
+  if (wide > WIDE_COUPLING)
+    list.push({
+      code: 'wide-coupling',
+      text: `the error of the coupling is ${Math.round(100 * wide)} % of it: errors carried linearly are no more than orders of magnitude`,
     });
   const spread = centralSpread(values);
   if (spread !== undefined) list.push(spread);

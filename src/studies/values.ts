@@ -28,7 +28,16 @@ export interface Evaluated {
   readonly input?: number;
   /** The same of the imaginary part of the lateral sums. */
   readonly imaginaryInput?: number;
+  /** An input has an error, and what it does to this value could not be computed. */
+  readonly inputUnknown?: true;
+  /** One-sigma relative error of the coupling that `input` holds. */
+  readonly couplingError?: number;
 }
+
+/** Widest relative step of the coupling to either side: beyond it a difference quotient is no derivative. */
+const WIDEST_STEP = 0.25;
+/** Parts of the wanted step that are tried, the next where a prescription does not stand at the one before. */
+const STEPS = [1, 1 / 16, 1 / 256];
 
 /** Certified digits asked of the shifted evaluations: enough for a difference quotient. */
 const SHIFT_DIGITS = 12;
@@ -60,8 +69,8 @@ interface Move {
 const NO_MOVE: Move = { value: 0, imaginary: 0 };
 
 /**
- * Linear propagation by central differences of half a standard deviation; √(J C Jᵀ), of the value and of its imaginary part.
- * Empty without any input error.
+ * Linear propagation by central differences of half a standard deviation, or of less where the prescription does not stand
+ * that far; √(J C Jᵀ), of the value and of its imaginary part. Empty without any input error.
  */
 function inputError(
   e: Expansion,
@@ -69,7 +78,7 @@ function inputError(
   p: Prescription,
   sum: Sum,
   inputs: Inputs,
-): Pick<Evaluated, 'input' | 'imaginaryInput'> {
+): Pick<Evaluated, 'input' | 'imaginaryInput' | 'inputUnknown' | 'couplingError'> {
   const at = (shifted: Expansion): Move | undefined => {
     const found = p.apply(shifted, growth, { digits: SHIFT_DIGITS, only: sum.variant })[0];
     if (found?.kind !== 'sum') return undefined;
@@ -84,18 +93,28 @@ function inputError(
       ? undefined
       : { value: a.value - b.value, imaginary: a.imaginary - b.imaginary };
   };
+  /** The move for a whole standard deviation from shifts by parts of it, of the first part at which both ends stand. */
+  const move = (largest: number, shifted: (part: number) => Expansion): Move | undefined => {
+    for (const step of STEPS) {
+      const part = step * largest;
+      const found = slope(shifted(part / 2), shifted(-part / 2));
+      if (found !== undefined) return { value: found.value / part, imaginary: found.imaginary / part };
+    }
+    return undefined;
+  };
+  const { xError } = inputs;
   const fromX =
-    inputs.xError > 0
-      ? slope({ ...e, x: scaledBy(e.x, 1 + inputs.xError / 2) }, { ...e, x: scaledBy(e.x, 1 - inputs.xError / 2) })
+    xError > 0
+      ? move(Math.min(1, (2 * WIDEST_STEP) / xError), (part) => ({ ...e, x: scaledBy(e.x, 1 + part * xError) }))
       : NO_MOVE;
   const onCircle = p.family === 'contour' ? inputs.onCircle : undefined;
   const { coefficientErrors, correlation } = onCircle ?? inputs;
-  const move = onCircle === undefined ? shift : shiftOnCircle;
+  const shifted = onCircle === undefined ? shift : shiftOnCircle;
   const count = (onCircle === undefined ? e : (e.contour ?? e)).coefficients.length;
   const noisy = coefficientErrors.flatMap((s, n) => (s > 0 && n < count ? [n] : []));
-  const fromC = noisy.map((n) => slope(move(e, n, coefficientErrors[n]! / 2), move(e, n, -coefficientErrors[n]! / 2)));
-  if (inputs.xError === 0 && noisy.length === 0) return {};
-  if (fromX === undefined || !fromC.every((s) => s !== undefined)) return {};
+  const fromC = noisy.map((n) => move(1, (part) => shifted(e, n, part * coefficientErrors[n]!)));
+  if (xError === 0 && noisy.length === 0) return {};
+  if (fromX === undefined || !fromC.every((s) => s !== undefined)) return { inputUnknown: true };
   const total = (part: keyof Move): number => {
     let variance = fromX[part] ** 2;
     noisy.forEach((n, i) =>
@@ -106,7 +125,11 @@ function inputError(
     );
     return Math.sqrt(Math.max(0, variance));
   };
-  return { input: total('value'), ...(sum.imaginary === undefined ? {} : { imaginaryInput: total('imaginary') }) };
+  return {
+    input: total('value'),
+    ...(sum.imaginary === undefined ? {} : { imaginaryInput: total('imaginary') }),
+    couplingError: xError,
+  };
 }
 
 function scaledBy(x: Exact, factor: number): Exact {

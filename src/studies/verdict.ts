@@ -182,7 +182,8 @@ export function verdict(
   const standing: Standing = exactSum ? 'certified' : outcome.trust;
   const assumption = exactSum ? ENDS : restsOnPattern(outcome) ? PATTERN : undefined;
   const value = ballText(outcome.value, DIGITS);
-  const printed = `${writeVerdict(value, parts)}${assumption === undefined ? '' : `, if ${assumption}`}`;
+  const unknown = v.inputUnknown === true ? '; input error not known' : '';
+  const printed = `${writeVerdict(value, parts)}${unknown}${assumption === undefined ? '' : `, if ${assumption}`}`;
   return {
     value,
     ...(truncation === undefined ? {} : { truncation: indicative(truncation, 3) }),

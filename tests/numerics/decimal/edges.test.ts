@@ -130,6 +130,7 @@ describe('values with errors', () => {
   test('an asymmetric error: signs ignored, zero on one side, different numbers of decimals', () => {
     expect(both('1', { plus: '0.4', minus: '-0.2' })).toEqual(['1.00 +0.40 −0.20', undefined]);
     expect(both('1', { plus: '0.4', minus: '0' })).toEqual(['1.0 +0.4 −0.0', undefined]);
+    expect(both('1', '0.4', { plus: '0', minus: '0' })).toEqual(['1.0 ± 0.4 ± 0.0', '1.0(4)(0)']);
     expect(both('1', { plus: '0.40', minus: '0.4' })).toEqual(['1.0 ± 0.4', '1.0(4)']);
     expect(both('1', { plus: '0.4', minus: '0.385' })).toEqual(['1.0 ± 0.4', '1.0(4)']);
     expect(both('1', { plus: '0.12', minus: '0.125' })).toEqual(['1.00 ± 0.12', '1.00(12)']);
