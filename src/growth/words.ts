@@ -11,13 +11,13 @@ const ROUNDING = 1e-12;
 const MOST_PLACES = 15;
 const MOST_PLAIN = 7;
 
-/** value ± error, the error to two digits and the value to the same place. */
+/** value ± error, the error to two digits and the value to the same last. */
 export function plusMinus(e: Estimate): string {
   if (!(e.error > ROUNDING * Math.abs(e.value)) || !Number.isFinite(e.error)) return short(e.value, 10);
-  const place = Math.floor(Math.log10(e.error)) - 1;
-  const leading = e.value === 0 ? place : Math.floor(Math.log10(Math.abs(e.value)));
-  const plain = place < 0 && place >= -MOST_PLACES && leading < MOST_PLAIN;
-  const value = plain ? e.value.toFixed(-place) : short(e.value, Math.min(15, Math.max(1, leading - place + 1)));
+  const last = Math.floor(Math.log10(e.error)) - 1;
+  const leading = e.value === 0 ? last : Math.floor(Math.log10(Math.abs(e.value)));
+  const plain = last < 0 && last >= -MOST_PLACES && leading < MOST_PLAIN;
+  const value = plain ? e.value.toFixed(-last) : short(e.value, Math.min(15, Math.max(1, leading - last + 1)));
   return `${value} ± ${short(e.error, 2)}`;
 }
 
