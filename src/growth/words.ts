@@ -11,7 +11,7 @@ const ROUNDING = 1e-12;
 const MOST_PLACES = 15;
 const MOST_PLAIN = 7;
 
-/** value ± error, the error to two digits and the value to the same last. */
+/** value ± error, the error to two digits and the value to the same place. */
 export function plusMinus(e: Estimate): string {
   if (!(e.error > ROUNDING * Math.abs(e.value)) || !Number.isFinite(e.error)) return short(e.value, 10);
   const last = Math.floor(Math.log10(e.error)) - 1;
