@@ -18,14 +18,18 @@ export interface Shift {
   readonly label: string;
   readonly plus: number;
   readonly minus: number;
+  /** Why one of the settings has no value: the shift is then no error. */
+  readonly refused?: Refused;
 }
 
 export const text = (x: number): string => String(Number(x.toPrecision(DIGITS)));
 export const scaleText = (x: number): string => String(Number(x.toPrecision(6)));
 
 function shiftBetween(label: string, central: number, outcomes: readonly (Outcome | Refused)[]): Shift | undefined {
+  if (outcomes.length === 0) return undefined;
+  const refused = outcomes.find(isRefusal);
+  if (refused !== undefined) return { label, plus: 0, minus: 0, refused };
   const moves = outcomes.flatMap((o) => ('reason' in o ? [] : [o.value - central]));
-  if (moves.length === 0) return undefined;
   return { label, plus: Math.max(0, ...moves), minus: Math.max(0, ...moves.map((x) => -x)) };
 }
 
@@ -60,13 +64,16 @@ export function parametricShifts(request: EvolveRequest, setting: Setting, centr
 /** Errors of the threshold masses, in quadrature; the crossing scale moves along with its mass. */
 function thresholdMasses(setting: Setting, central: number): Shift | undefined {
   let square = 0;
+  let refused: Refused | undefined;
   for (const t of setting.thresholds) {
     if (t.error === undefined) continue;
     const factor = 1 + t.error / t.mass;
     const heavier: Threshold = { ...t, mass: t.mass * factor, scale: crossingScale(t) * factor };
     const moved = runOnce({ ...setting, thresholds: setting.thresholds.map((u) => (u === t ? heavier : u)) });
-    if (!isRefusal(moved)) square += (moved.value - central) ** 2;
+    if (isRefusal(moved)) refused = moved;
+    else square += (moved.value - central) ** 2;
   }
+  if (refused !== undefined) return { label: 'quark masses', plus: 0, minus: 0, refused };
   const size = Math.sqrt(square);
   return size > 0 ? { label: 'quark masses', plus: size, minus: size } : undefined;
 }

@@ -82,7 +82,9 @@ export function evolveStudy(request: EvolveRequest): EvolveResult | Refused {
   if (isRefusal(setting)) return setting;
   const outcome = runOnce(setting);
   if (isRefusal(outcome)) return outcome;
-  const shifts = parametricShifts(request, setting, outcome.value);
+  const moved = parametricShifts(request, setting, outcome.value);
+  const shifts = moved.filter((s) => s.refused === undefined);
+  const notCarried = moved.flatMap(({ label, refused }) => (refused === undefined ? [] : [{ label, refused }]));
   const less = setting.loops > 1 ? runOnce({ ...setting, loops: setting.loops - 1 }) : undefined;
   const spread = matchingSpread(setting, outcome);
   const components: Component[] = shifts.map((s) => ({ label: s.label, error: Math.max(s.plus, s.minus) }));
@@ -125,9 +127,13 @@ export function evolveStudy(request: EvolveRequest): EvolveResult | Refused {
     lambda: lambdas(setting, outcome, alphaErrors(request)),
     path: outcome.steps.map(plainStep),
     ...(outcome.approach.length > 0 ? { couplingPath: outcome.approach.map(plainStep) } : {}),
-    printed: writeVerdict(
-      text(outcome.value),
-      components.filter((c) => c.error > 0),
-    ),
+    ...(notCarried.length === 0 ? {} : { notCarried }),
+    printed: [
+      writeVerdict(
+        text(outcome.value),
+        components.filter((c) => c.error > 0),
+      ),
+      ...notCarried.map(({ label }) => `error of ${label} not carried`),
+    ].join('; '),
   };
 }

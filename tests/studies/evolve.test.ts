@@ -82,6 +82,19 @@ describe('evolve', () => {
     expect(Number(result.value)).toBeCloseTo(1 / (1 / 0.3 + (9 / (4 * Math.PI)) * Math.log(100)), 11);
   });
 
+  it('an error that cannot be carried is named, never dropped: half of it is none', () => {
+    // 0.118 − 0.2 is no coupling; 0.118 + 0.02 has its Landau pole above 1 GeV while 0.118 − 0.02 would do.
+    for (const [value, to] of [
+      ['0.118(200)', 10],
+      ['0.118(20)', 1],
+    ] as const) {
+      const result = granted({ quantity: 'alpha_s', value: uncertain(value), from: { scale: MZ }, to: { scale: to } });
+      expect(result.errors.map((e) => e.label)).not.toContain('α_s');
+      expect(result.notCarried?.map((e) => e.label)).toEqual(['α_s']);
+      expect(result.printed).toContain('error of α_s not carried');
+    }
+  });
+
   it('refuses with reason and remedy', () => {
     const base: EvolveRequest = {
       quantity: 'alpha_s',
