@@ -19,6 +19,9 @@ export async function readSeries(name: string, { given, surroundings }: Call): P
   const flavours = given.flavours === undefined ? {} : { flavours: given.flavours };
   const stdin = surroundings.stdin === undefined ? {} : { stdin: surroundings.stdin };
   const loaded = await series.loadSeries(name, { ...flavours, ...stdin });
+  const known = loaded.coefficients.length;
+  if ((given.order ?? 0) > known && !given.quiet)
+    surroundings.stderr.write(`leastterm: --order ${given.order}: ${loaded.id} has ${known}; all of them are used\n`);
   if (given.strongCoupling === undefined) return loaded;
   const strongCoupling = series.parseStrongCoupling(given.strongCoupling);
   if (strongCoupling !== undefined) return { ...loaded, strongCoupling };

@@ -113,6 +113,13 @@ describe('usage errors: exit code 2, nothing on standard output, the option and 
   });
 });
 
+test('--order beyond what is known is said, not dropped', async () => {
+  const { status, stderr } = await leastterm(words('sum adler --at 0.3 --by fixed-order --order 9'));
+  expect([status, stderr]).toEqual([0, 'leastterm: --order 9: adler has 4; all of them are used\n']);
+  const quiet = await leastterm(words('sum adler --at 0.3 --by fixed-order --order 9 -q'));
+  expect(quiet.stderr).toBe('');
+});
+
 describe('--at', () => {
   test.each(['half', '0.1(x)', '0.1 +- ', '1e999999999', 'NaN', '10%'])('refuses "%s"', async (at) => {
     const { status, stderr } = await leastterm(['assess', 'adler', '--at', at]);
