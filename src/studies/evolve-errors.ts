@@ -1,5 +1,5 @@
 /** @module The errors of an evolution: shifted inputs, shifted thresholds. */
-import { INPUTS, crossingScale, isRefusal, type Threshold } from '../qcd/index.js';
+import { INPUTS, crossingScale, isRefusal, refuse, type Threshold } from '../qcd/index.js';
 import type { Uncertain } from '../series/index.js';
 import type { Refused } from './assessment.js';
 import { runOnce, type Outcome, type Setting } from './evolve-run.js';
@@ -23,8 +23,19 @@ export interface Shift {
 export const text = (x: number): string => String(Number(x.toPrecision(DIGITS)));
 export const scaleText = (x: number): string => String(Number(x.toPrecision(6)));
 
-function shiftBetween(label: string, central: number, outcomes: readonly (Outcome | Refused)[]): Shift | undefined {
-  const moves = outcomes.flatMap((o) => ('reason' in o ? [] : [o.value - central]));
+/** The shift between the ends of an error; undefined without an error, a refusal where an end cannot be evolved. */
+function shiftBetween(
+  label: string,
+  central: number,
+  outcomes: readonly (Outcome | Refused)[],
+): Shift | Refused | undefined {
+  const lost = outcomes.find(isRefusal);
+  if (lost !== undefined)
+    return refuse(
+      `the error of ${label} reaches values that cannot be evolved: ${lost.reason}`,
+      'give a smaller error, or the value without one',
+    );
+  const moves = outcomes.flatMap((o) => (isRefusal(o) ? [] : [o.value - central]));
   if (moves.length === 0) return undefined;
   return { label, plus: Math.max(0, ...moves), minus: Math.max(0, ...moves.map((x) => -x)) };
 }
@@ -43,9 +54,13 @@ export function alphaErrors(request: EvolveRequest): readonly number[] {
   return [Number(INPUTS.alphaSMZ.error[0]), -Number(INPUTS.alphaSMZ.error[1])];
 }
 
-/** Shifts from the errors of the inputs. */
-export function parametricShifts(request: EvolveRequest, setting: Setting, central: number): readonly Shift[] {
-  const shifts: (Shift | undefined)[] = [];
+/** Shifts from the errors of the inputs; a refusal where one of them leaves the range of the evolution. */
+export function parametricShifts(
+  request: EvolveRequest,
+  setting: Setting,
+  central: number,
+): readonly Shift[] | Refused {
+  const shifts: (Shift | Refused | undefined)[] = [];
   const { mass } = setting;
   if (mass !== undefined) {
     const varied = sigmas(request.value).map((d) => runOnce({ ...setting, mass: mass + d }));
@@ -54,7 +69,8 @@ export function parametricShifts(request: EvolveRequest, setting: Setting, centr
   const varied = alphaErrors(request).map((d) => runOnce({ ...setting, alpha: setting.alpha + d }));
   shifts.push(shiftBetween('α_s', central, varied));
   shifts.push(thresholdMasses(setting, central));
-  return shifts.filter((s) => s !== undefined);
+  const lost = shifts.find((s) => s !== undefined && isRefusal(s));
+  return lost !== undefined && isRefusal(lost) ? lost : shifts.filter((s) => s !== undefined && !isRefusal(s));
 }
 
 /** Errors of the threshold masses, in quadrature; the crossing scale moves along with its mass. */

@@ -83,6 +83,7 @@ export function evolveStudy(request: EvolveRequest): EvolveResult | Refused {
   const outcome = runOnce(setting);
   if (isRefusal(outcome)) return outcome;
   const shifts = parametricShifts(request, setting, outcome.value);
+  if (isRefusal(shifts)) return shifts;
   const less = setting.loops > 1 ? runOnce({ ...setting, loops: setting.loops - 1 }) : undefined;
   const spread = matchingSpread(setting, outcome);
   const components: Component[] = shifts.map((s) => ({ label: s.label, error: Math.max(s.plus, s.minus) }));

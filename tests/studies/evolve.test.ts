@@ -116,3 +116,29 @@ describe('evolve', () => {
     expect(JSON.parse(JSON.stringify(result))).toEqual(result);
   });
 });
+
+describe('errors that leave the range of the evolution', () => {
+  const request = (text: string, to: number): EvolveRequest => ({
+    quantity: 'alpha_s',
+    value: uncertain(text),
+    from: { scale: MZ },
+    to: { scale: to },
+  });
+  // 0.118 − 0.200 is below 0; 0.118 + 0.060 has its Landau pole above 1 GeV. Neither may pass for no error at all.
+  it.each([
+    ['0.118(200)', 10],
+    ['0.118(60)', 1],
+  ])('%s to %d GeV is refused with a remedy', (text, to) => {
+    const result = evolveStudy(request(text, to));
+    expect('reason' in result && result.reason).toMatch(/^the error of α_s reaches values that cannot be evolved: /);
+    expect('remedy' in result && result.remedy).toContain('a smaller error');
+  });
+
+  it('an end that still stands gives its error, on its own side', () => {
+    const result = granted(request('0.118(60)', 10));
+    const alpha = result.errors.find((e) => e.label === 'α_s')!;
+    const at = (text: string): number => Number(granted(request(text, 10)).value);
+    expect(Number(alpha.plus)).toBeCloseTo(at('0.178') - at('0.118'), 3);
+    expect(Number(alpha.minus)).toBeCloseTo(at('0.118') - at('0.058'), 3);
+  });
+});
