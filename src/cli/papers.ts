@@ -6,7 +6,7 @@ import type { Call, Command, Given } from './command.js';
 import { UsageError } from './faults.js';
 import { deliver } from './output.js';
 import type { OptionName } from './options.js';
-import type { PaperForm } from '../papers/index.js';
+import type { CommandResult, PaperForm } from '../papers/index.js';
 
 /** Commands whose results have tables. */
 export const TABLED_COMMANDS: readonly string[] = [
@@ -19,6 +19,12 @@ export const TABLED_COMMANDS: readonly string[] = [
   'extract',
   'mass',
   'contour',
+  'growth',
+  'plane',
+  'bubbles',
+  'rewrite',
+  'combine',
+  'catalogue',
 ];
 
 const FORMS = ['latex', 'bibtex', 'markdown', 'hepdata'] as const satisfies readonly OptionName[];
@@ -46,8 +52,17 @@ async function runAs(form: PaperForm, command: Command, call: Call): Promise<num
     },
   });
   const { papers } = await import('./rooms-pictures.js');
-  deliver(papers.paperText(JSON.parse(json), form), call);
+  const text = papers.paperText(resultOf(JSON.parse(json), command.name), form);
+  if (text === '')
+    throw new UsageError(`there is no table in this for --${form}; --json has all that is known`, command.name);
+  deliver(text, call);
   return status;
+}
+
+/** What a command wrote, named after it where it does not say so itself: lists and series do not. */
+function resultOf(written: object, command: string): CommandResult {
+  const named = { request: { command } };
+  return Array.isArray(written) ? Object.assign(named, { entries: written }) : { ...named, ...written };
 }
 
 /** The command with the forms for papers. */

@@ -128,6 +128,7 @@ export function entryOf(request: MassRequest, inputs: EntryInputs): MassEntry {
   const evolution = evolutionOf(setting, request.to, found.msbar);
   const rows = byOrder(request, found.order);
   const shifts = inputErrors(request, question, strength, found.value);
+  if (isRefusal(shifts)) return { definition: name, title, refused: shifts };
   const last = rows.length > 1 ? Math.abs(Number(rows.at(-1)?.change ?? 0)) : 0;
   const { spread, scaleVariation } = scaleParts(request, found.value);
   const perturbative = Math.max(last, spread);

@@ -1,5 +1,5 @@
 /** @module The errors of a conversion: shifted inputs, other scales. Components stay apart. */
-import { crossingScale, isRefusal, DEFAULT_THRESHOLDS, type Refusal } from '../qcd/index.js';
+import { crossingScale, isRefusal, refuse, DEFAULT_THRESHOLDS, type Refusal } from '../qcd/index.js';
 import type { Uncertain } from '../series/index.js';
 import { convertMass } from './convert.js';
 import { definitionOf } from './definitions.js';
@@ -17,11 +17,16 @@ export interface Shift {
 const sigmas = (u: Uncertain | undefined): readonly number[] =>
   u?.error === undefined ? [] : [u.error.plus.toNumber(), -u.error.minus.toNumber()].filter((x) => x !== 0);
 
-function shiftOf(label: string, central: number, requests: readonly MassRequest[]): Shift | undefined {
-  const moves = requests.flatMap((request) => {
-    const found = convertMass(request);
-    return isRefusal(found) ? [] : [found.value - central];
-  });
+/** The shift between the ends of an error; undefined without one, a refusal where neither end has a conversion. */
+function shiftOf(label: string, central: number, requests: readonly MassRequest[]): Shift | Refusal | undefined {
+  const ends = requests.map(convertMass);
+  const moves = ends.flatMap((found) => (isRefusal(found) ? [] : [found.value - central]));
+  const lost = ends.find(isRefusal);
+  if (moves.length === 0 && lost !== undefined)
+    return refuse(
+      `the error of ${label} reaches values that have no conversion: ${lost.reason}`,
+      'give a smaller error, or the value without one',
+    );
   const plus = Math.max(0, ...moves);
   const minus = Math.max(0, ...moves.map((x) => -x));
   if (plus === 0 && minus === 0) return undefined;
@@ -46,20 +51,20 @@ function thresholdShift(request: MassRequest, central: number): Shift | undefine
   return size > 1e-13 * central ? { label: 'threshold masses', plus: size, minus: size } : undefined;
 }
 
-/** Errors from the inputs, each by itself. */
+/** Errors from the inputs, each by itself; a refusal where one of them leaves the range of the conversion on both sides. */
 export function inputErrors(
   request: MassRequest,
   question: MassQuestion,
   strength: { readonly value: number; readonly error: number },
   central: number,
-): readonly Shift[] {
+): readonly Shift[] | Refusal {
   const ends = [definitionOf(request.from.definition), definitionOf(request.to.definition)];
   const withAlpha = (d: number): MassRequest => ({
     ...request,
     alpha: { ...request.alpha, value: request.alpha.value + d },
   });
   const signs = [1, -1];
-  const shifts = [
+  const shifts: readonly (Shift | Refusal | undefined)[] = [
     shiftOf(
       'mass',
       central,
@@ -87,7 +92,7 @@ export function inputErrors(
       : undefined,
     thresholdShift(request, central),
   ];
-  return shifts.filter((s) => s !== undefined);
+  return shifts.find(isRefusal) ?? shifts.filter((s) => s !== undefined && !isRefusal(s));
 }
 
 /** Scales looked at, in units of the one used. */

@@ -56,21 +56,30 @@ function methodsIn(value: unknown, found: Set<string>): Set<string> {
   return found;
 }
 
-interface WithSources {
+interface Sourced {
+  readonly id?: unknown;
+  readonly name?: unknown;
+  readonly sources?: unknown;
+}
+
+/** A series stands in a result, or is the result; a bubble chain has a quantity. */
+interface WithSources extends Sourced {
   readonly leastterm?: unknown;
-  readonly series?: { readonly id?: unknown; readonly sources?: unknown };
+  readonly series?: Sourced;
+  readonly quantity?: Sourced;
 }
 
 /** BibTeX entries for a result of `command`. */
 export function bibtexOf(result: object, command: string): string {
-  const { leastterm, series } = result as WithSources;
+  const { leastterm, series, quantity, ...itself } = result as WithSources;
+  const of: Sourced = [series, quantity].find((entry) => typeof entry === 'object') ?? itself;
   const own = entryText('software', 'leastterm', [
     ['author', '{Leastterm contributors}'],
     ['title', 'Leastterm: what a truncated, divergent QCD series is worth'],
     ['version', typeof leastterm === 'string' ? leastterm : undefined],
   ]);
-  const sources = Array.isArray(series?.sources) ? series.sources.map(String) : [];
-  const id = typeof series?.id === 'string' ? series.id : 'series';
+  const sources = Array.isArray(of.sources) ? of.sources.map(String) : [];
+  const id = [of.id, of.name].find((name) => typeof name === 'string') ?? 'series';
   return `${[
     own,
     ...referencesFor(command, [...methodsIn(result, new Set())]).map(referenceText),

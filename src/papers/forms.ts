@@ -10,8 +10,9 @@ import type { CommandResult } from './of-result.js';
 export const PAPER_FORMS = ['latex', 'bibtex', 'markdown', 'csv', 'hepdata'] as const;
 export type PaperForm = (typeof PAPER_FORMS)[number];
 
-/** A result in one of the forms. */
+/** A result in one of the forms; an empty text where it has no table. */
 export function paperText(result: CommandResult, form: PaperForm): string {
+  if (form !== 'bibtex' && tablesOf(result).length === 0) return '';
   switch (form) {
     case 'latex':
       return latexOf(tablesOf(result));

@@ -6,7 +6,7 @@
  */
 import { stringify } from 'yaml';
 import { plainHead } from './notation.js';
-import { isMeasured } from './table.js';
+import { isMeasured, knownErrors } from './table.js';
 import type { Cell, Column, NamedError, PaperTable } from './table.js';
 
 /** Names may not be longer. */
@@ -27,7 +27,7 @@ function errorEntry({ label, plus, minus }: NamedError): object {
 
 function entry(cell: Cell): Entry {
   if (!isMeasured(cell)) return { value: NUMBER.test(cell) ? Number(cell) : cell === '' ? '-' : cell };
-  const errors = cell.errors.filter(({ plus, minus }) => Number(plus) !== 0 || Number(minus) !== 0).map(errorEntry);
+  const errors = knownErrors(cell).map(errorEntry);
   return {
     value: NUMBER.test(cell.value) ? Number(cell.value) : cell.value,
     ...(errors.length === 0 ? {} : { errors }),

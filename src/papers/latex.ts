@@ -4,18 +4,17 @@
  */
 import { roundPdg, shorten, writeParentheses } from '../numerics/index.js';
 import { texHead, texText } from './notation.js';
-import { isMeasured } from './table.js';
+import { isMeasured, knownErrors } from './table.js';
 import type { Cell, Column, Measured, PaperTable } from './table.js';
 
 /** Numbers without an error show at most so many digits. */
 const DIGITS = 8;
 const SIZE_DIGITS = 2;
 
-const exact = ({ plus }: { readonly plus: string }): boolean => Number(plus) === 0;
-
 /** A number as siunitx reads it; asymmetric errors, which it reads only in later versions, are set by hand. */
-export function texNumber({ value, errors }: Measured): string {
-  const known = errors.filter((error) => !exact(error));
+export function texNumber(cell: Measured): string {
+  const { value } = cell;
+  const known = knownErrors(cell);
   if (known.length === 0) return `\\num{${shorten(value, DIGITS)}}`;
   const rounded = roundPdg(
     value,
@@ -39,6 +38,9 @@ export function texNumber({ value, errors }: Measured): string {
 
 const NUMBER = /^[-+]?\d+(\.\d+)?(e[-+]?\d+)?$/;
 
+/** Behind the \\\\ of the row above, a bracket would read as its argument and a star as its variant. */
+const atRowStart = (tex: string): string => tex.replace(/^[[*]/, (c) => `{${c}}`);
+
 function cellTex(cell: Cell, kind: Column['kind']): string {
   if (isMeasured(cell)) return texNumber(cell);
   if (cell === '') return kind === 'text' ? '' : '{---}';
@@ -46,7 +48,15 @@ function cellTex(cell: Cell, kind: Column['kind']): string {
   return `\\num{${shorten(cell, kind === 'size' ? SIZE_DIGITS : DIGITS)}}`;
 }
 
-function tableTex(table: PaperTable): string {
+/** The columns that a page has room for, with their cells. */
+function withoutLong(table: PaperTable): PaperTable {
+  const kept = table.columns.map(({ long }) => long !== true);
+  const keep = <T>(list: readonly T[]): T[] => list.filter((_, i) => kept[i]);
+  return { ...table, columns: keep(table.columns), rows: table.rows.map(keep) };
+}
+
+function tableTex(whole: PaperTable): string {
+  const table = withoutLong(whole);
   const align = table.columns.map(({ kind }) => (kind === 'text' ? 'l' : 'r')).join('');
   const heads = table.columns.map(
     ({ head, unit }) => texHead(head) + (unit === undefined ? '' : ` [${texText(unit)}]`),
@@ -66,7 +76,7 @@ function tableTex(table: PaperTable): string {
     `    ${heads.join(' & ')} \\\\`,
     '    \\midrule',
     ...table.rows.map(
-      (row) => `    ${table.columns.map(({ kind }, i) => cellTex(row[i] ?? '', kind)).join(' & ')} \\\\`,
+      (row) => `    ${atRowStart(table.columns.map(({ kind }, i) => cellTex(row[i] ?? '', kind)).join(' & '))} \\\\`,
     ),
     '    \\bottomrule',
     '  \\end{tabular}',

@@ -1,15 +1,16 @@
 /** @module Tables in Markdown (the pipe tables of CommonMark's common extension), notes below. */
 import { parseDecimal, roundPdg, shorten, writeParentheses, writePlusMinus } from '../numerics/index.js';
 import { markdownText, plainHead } from './notation.js';
-import { isMeasured } from './table.js';
+import { isMeasured, knownErrors } from './table.js';
 import type { Cell, Column, Measured, PaperTable } from './table.js';
 
 const DIGITS = 8;
 const SIZE_DIGITS = 2;
 
 /** "0.1180(9)", with the names of the errors where there are several. */
-export function plainNumber({ value, errors }: Measured): string {
-  const known = errors.filter(({ plus, minus }) => Number(plus) !== 0 || Number(minus) !== 0);
+export function plainNumber(cell: Measured): string {
+  const { value } = cell;
+  const known = knownErrors(cell);
   if (known.length === 0) return shorten(value, DIGITS);
   const rounded = roundPdg(
     value,

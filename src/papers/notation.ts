@@ -38,8 +38,8 @@ const TEX: Readonly<Record<string, string>> = {
 /** Text from outside in LaTeX: every character that means something there is escaped. */
 export const texText = (text: string): string =>
   text
-    .split(/(\balpha_s\b|α_s)/)
-    .map((part, i) => (i % 2 === 1 ? '$\\alpha_s$' : escaped(part)))
+    .split(/(\balpha_s\b|α_s|β_0)/)
+    .map((part, i) => (i % 2 === 0 ? escaped(part) : part === 'β_0' ? '$\\beta_0$' : '$\\alpha_s$'))
     .join('');
 
 const escaped = (text: string): string =>

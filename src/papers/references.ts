@@ -260,6 +260,8 @@ const OF_METHOD: Readonly<Record<string, readonly Name[]>> = {
 /** By command: what every result of it rests on. */
 const OF_COMMAND: Readonly<Record<string, readonly Name[]>> = {
   assess: ['beneke', 'dombSykes'],
+  growth: ['dombSykes'],
+  plane: ['bakerGravesMorris'],
   compare: ['beneke'],
   evolve: ['fiveLoops', 'decoupling', 'decoupling4', 'flag'],
   mass: ['bmns', 'pineda', 'msr', 'mrs', 'ps', 'kinetic', 'komijani'],

@@ -29,6 +29,8 @@ export interface Column {
   /** size: a number that is read for its magnitude, such as an ambiguity; shown to two digits. */
   readonly kind: 'text' | 'number' | 'size';
   readonly unit?: string;
+  /** Texts that no printed page has room for: left out of LaTeX. */
+  readonly long?: true;
 }
 
 export interface PaperTable {
@@ -54,6 +56,9 @@ export const number = (key: string, head = key, unit?: string): Column => ({
 
 export const size = (key: string, head = key, unit?: string): Column => ({ ...number(key, head, unit), kind: 'size' });
 
+/** A column of texts that may be as long as they like. */
+export const longText = (key: string, head = key): Column => ({ ...text(key, head), long: true });
+
 /** A symmetric error, or none where the text is absent. */
 export const symmetric = (label: string, error: string | undefined): NamedError[] =>
   error === undefined ? [] : [{ label, plus: error.replace(/^[-+]/, ''), minus: error.replace(/^[-+]/, '') }];
@@ -61,6 +66,24 @@ export const symmetric = (label: string, error: string | undefined): NamedError[
 /** A value with its errors; an empty cell where there is no value. */
 export const measured = (value: string | undefined, ...errors: readonly (readonly NamedError[])[]): Cell =>
   value === undefined ? '' : { value, errors: errors.flat() };
+
+/** A value with so many digits was worked out, not quoted. */
+const WORKED_OUT = 8;
+
+/**
+ * The errors that say something. A zero does not, and neither does one below the last digit of a value that was worked out:
+ * it is the rounding of the calculation, and printing it would make up digits between.
+ */
+export function knownErrors({ value, errors }: Measured): readonly NamedError[] {
+  const [, digits = '', power = '0'] = /^[-+]?([\d.]+)(?:e([-+]?\d+))?$/i.exec(value) ?? [];
+  const count = digits.replace('.', '').replace(/^0+/, '').length;
+  const decimals = digits.includes('.') ? digits.length - digits.indexOf('.') - 1 : 0;
+  const least = count < WORKED_OUT ? 0 : 10 ** (Number(power) - decimals);
+  return errors.filter(({ plus, minus }) => {
+    const largest = Math.max(Math.abs(Number(plus)), Math.abs(Number(minus)));
+    return largest > 0 && largest >= least;
+  });
+}
 
 /** Labels of the errors in a column, in the order in which they first come. */
 export function errorLabels(table: PaperTable, column: number): string[] {

@@ -3,7 +3,8 @@
  *
  * Members: the effective charge, summed by its own renormalisation group (all corrections vanish in its scheme), and the
  * truncated series at the scale where the next-to-leading coefficient vanishes. The notes give the predicted next coefficient.
- * Truncation error: the step from one coefficient fewer.
+ * Truncation error: the step from one coefficient fewer; of the effective charge one fewer of those that enter, since a beta
+ * function of L loops lets no coefficient beyond the L-th in (the second always enters, through the Λ of the charge).
  * Reference: G. Grunberg, Phys. Lett. B 95 (1980) 70, Phys. Rev. D 29 (1984) 2315; A. L. Kataev, V. V. Starshenko (1995).
  */
 import { divExact, exact, mulExact, R, toNumberExact } from '../numerics/index.js';
@@ -53,22 +54,25 @@ function chargeMember(e: Expansion, running: Running, request: Request): Outcome
       'the effective charge has a Landau pole or a fixed point in the way',
       'take a smaller coupling (a higher scale), or fewer terms',
     );
+  const known = running.beta.length;
+  const used = Math.min(N, Math.max(2, known));
   const before =
-    request.only === undefined && N > 1
-      ? charge({ ...e, coefficients: e.coefficients.slice(0, -1) }, running, ERROR_DIGITS)
+    request.only === undefined && used > 1
+      ? charge({ ...e, coefficients: e.coefficients.slice(0, used - 1) }, running, ERROR_DIGITS)
       : undefined;
   const truncation = before === undefined ? undefined : size(value, before);
-  const known = running.beta.length;
   return {
     kind: 'sum',
     variant,
     value,
     ...(truncation === undefined ? {} : { truncation }),
-    termsUsed: Math.min(N, known),
+    termsUsed: used,
     trust: trustOf(value, truncation),
     notes: [
       ...prediction(e, running),
-      ...(N > known ? [`the beta function is known to ${known} loops: later coefficients do not enter`] : []),
+      ...(N > used
+        ? [`the beta function is known to ${known} loop${known === 1 ? '' : 's'}: later coefficients do not enter`]
+        : []),
     ],
     central: true,
   };

@@ -18,6 +18,7 @@ export {
   type ExpectedSingularityInput,
   type WilsonCoefficient,
 } from './expected.js';
+export { currentUltraviolet, fourQuarkShifts } from './four-quark.js';
 export { isRefusal, refuse, type Refusal } from './refusal.js';
 export { evolveAlpha, evolveLog, type Evolution } from './running/evolve.js';
 export { flowOf, logOverLambda, type Flow } from './running/flow.js';

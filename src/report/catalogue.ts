@@ -1,5 +1,6 @@
 /** @module The catalogue for people, and one series of it: what its file says, nothing evaluated. */
-import { parseDecimal, shorten, toDecimal } from '../numerics/index.js';
+import { exact, parseDecimal, shorten, toDecimal } from '../numerics/index.js';
+import type { Rational } from '../numerics/index.js';
 import { textOf, weightText } from '../series/index.js';
 import type { CatalogueEntry, Series, Uncertain } from '../series/index.js';
 import type { Fact } from './layout/page.js';
@@ -130,8 +131,41 @@ export function seriesText(series: Series, options: TerminalOptions = {}): strin
   return page.text();
 }
 
-/** The series as plain data, numbers as the file writes them. */
-export function plainSeries(series: Series): object {
+/** Significant digits of the decimals of coefficients. */
+const DECIMALS = 15;
+
+/** A coefficient and its error as decimals. */
+function decimalOf({ value, text, error }: Uncertain): PlainDecimal {
+  const decimal = (q: Rational): string => toDecimal(exact(q).ball(BITS), DECIMALS).text;
+  return {
+    value: parseDecimal(text) === undefined ? toDecimal(value.ball(BITS), DECIMALS).text : text,
+    ...(error === undefined ? {} : { plus: decimal(error.plus), minus: decimal(error.minus) }),
+  };
+}
+
+export interface PlainDecimal {
+  readonly value: string;
+  readonly plus?: string;
+  readonly minus?: string;
+}
+
+/** What others read of a plain series; it holds all else that the file says as well. */
+export interface PlainSeries {
+  readonly [more: string]: unknown;
+  readonly title: string;
+  readonly sources: readonly string[];
+  readonly notes: readonly string[];
+  readonly coupling: { readonly name: string; readonly divisor: string };
+  readonly coefficients: readonly {
+    readonly order: number;
+    readonly text: string;
+    readonly status: string;
+    readonly decimal: PlainDecimal;
+  }[];
+}
+
+/** The series as plain data, numbers as the file writes them, the coefficients as decimals too. */
+export function plainSeries(series: Series): PlainSeries {
   const {
     scaleRatio,
     factor,
@@ -157,7 +191,12 @@ export function plainSeries(series: Series): object {
     ...(scaleRatio === undefined ? {} : { scaleRatio: textOf(scaleRatio) }),
     factor: textOf(factor),
     additive: textOf(additive),
-    coefficients: coefficients.map((c, n) => ({ order: n + series.firstPower, ...number(c), status: c.status })),
+    coefficients: coefficients.map((c, n) => ({
+      order: n + series.firstPower,
+      ...number(c),
+      decimal: decimalOf(c),
+      status: c.status,
+    })),
     ...(correlation === undefined ? {} : { correlation: correlation.map((row) => row.map(String)) }),
     singularities: singularities.map((s) => ({
       kind: s.kind,

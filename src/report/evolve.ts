@@ -28,12 +28,6 @@ function valueFacts(result: EvolveResult): Fact[] {
     ...(result.digitsNote === undefined ? [] : [{ label: '', text: result.digitsNote }]),
     ...result.errors.map((e) => ({ label: `error from ${e.label}`, text: errorText(e.plus, e.minus) })),
   ];
-  for (const { label, refused } of result.notCarried ?? [])
-    facts.push({
-      label: `error from ${label}`,
-      text: `not carried: with it moved, ${refused.reason}. Remedy: ${refused.remedy}, or give a smaller error`,
-      tone: 'warn',
-    });
   if (result.oneLoopLess !== undefined) {
     const { loops, value, shift } = result.oneLoopLess;
     facts.push({ label: 'one loop less', text: `${shorten(value, PATH_DIGITS)} with ${loops}: ${signed(shift)}` });

@@ -1,5 +1,6 @@
 /** @module The public face of the report room: plain results in, text out. */
 export { catalogueText, plainSeries, seriesText } from './catalogue.js';
+export type { PlainDecimal, PlainSeries } from './catalogue.js';
 export { catalogueCheckText, catalogueProblems } from './catalogue-check.js';
 export { evolveText } from './evolve.js';
 export { plainJson, resultJson } from './json.js';

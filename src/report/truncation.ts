@@ -4,8 +4,10 @@ import { parseDecimal, shorten } from '../numerics/index.js';
 import { Page } from './layout/page.js';
 import { unpainted } from './layout/paint.js';
 import type { TableNote, TableRow } from './layout/table.js';
+import { competingFacts } from './sections/competing.js';
 import { couplingFacts } from './sections/read.js';
 import { cautionPoints } from './sections/verdict.js';
+import { sentence } from './words.js';
 import type { TerminalOptions } from './terminal.js';
 
 /** Significant digits of a band: a model's width is not known better. */
@@ -79,6 +81,14 @@ function sideBySide(page: Page, result: TruncationResult): void {
   page.say('Bands are distances from the sum. All of them are indicative: models and rules of thumb.', 'faint');
 }
 
+function competing(page: Page, { competing: found }: TruncationResult): void {
+  if (found === undefined) return;
+  page.head('Competing growth: where to stop');
+  page.facts(competingFacts(found, page.digits));
+  page.blank();
+  page.say(sentence(found.statement));
+}
+
 const FELL: Readonly<Record<Fell, string>> = { 68: 'inside', 95: 'in the 95 % band', outside: 'outside' };
 
 function orderRows(order: TruncationOrder, titles: ReadonlyMap<string, string>): (TableRow | TableNote)[] {
@@ -148,6 +158,7 @@ export function truncationText(result: TruncationResult, options: TerminalOption
   page.blank();
   page.facts(couplingFacts(result.series, result.coupling));
   sideBySide(page, result);
+  competing(page, result);
   if (result.byOrder !== undefined) byOrder(page, result);
   cautionPoints(page, result.cautions);
   return page.text();
@@ -172,6 +183,7 @@ const KEYS = [
   'coupling',
   'sum',
   'estimates',
+  'competing',
   'byOrder',
   'record',
   'cautions',

@@ -17,6 +17,11 @@ function modelFacts({ cut }: SeriesCutResult): Fact[] {
       label: 'removed',
       text: `k < μ_f of λ ∫ dτ/τ τ^${shorten(singularity.u, 6)} x(k), τ = k²/Q²: the model of the singularity at u = ${shorten(singularity.u, 6)}, d = ${singularity.dimension}, exponent ${shorten(singularity.exponent, 6)} (${singularity.origin})`,
     },
+    {
+      label: 'μ_f',
+      text: 'the scale of the MSbar coupling under the integral; the virtuality of a gluon in a bubble chain is e^(5/6) = 2.30 times larger',
+      tone: 'faint',
+    },
     { label: 'λ', text: used ?? '' },
     ...(others.length === 0 ? [] : [{ label: 'not used', text: others.join(', '), tone: 'faint' as const }]),
     { label: 'trust', text: 'indicative: one singularity stands for all low momenta' },

@@ -20,6 +20,7 @@ import { growthReport } from './growth-report.js';
 import { optimalReport } from './optimal-report.js';
 import { planeReport } from './plane-report.js';
 import { leadingStrength, strengthReport } from './strength-report.js';
+import { ultravioletReport } from './ultraviolet-report.js';
 import { couplingSummary, relativeCouplingError, seriesSummary } from './summary.js';
 import { termTable } from './terms.js';
 import { evaluateAll, valueEntry } from './values.js';
@@ -187,7 +188,7 @@ export function assess(given: Series, at: Uncertain, options: AssessOptions): As
     series: seriesSummary(series, expanded),
     coupling: couplingSummary(series, at, expanded, options.digits, options.path),
     terms: table.rows,
-    growth: growthReport(growth, expanded, strengthReport(strength)),
+    growth: growthReport(growth, expanded, strengthReport(strength), ultravioletReport(series, expanded)),
     borelPlane: planeReport(expanded, growth, options.digits, keptCorrelation(series, expanded)),
     values: rows,
     ambiguity: ambiguity.report,

@@ -31,6 +31,43 @@ export interface ExpectedSingularity {
   readonly origin: string;
 }
 
+/** The first ultraviolet singularity with the anomalous dimensions of the four-quark operators. */
+export interface UltravioletReport {
+  readonly u: string;
+  /** lambda_i = gamma_i/(2 beta_0) of the four operators, the largest first. */
+  readonly shifts: readonly string[];
+  /** Exponent that the series file leads to; prescriptions use it. */
+  readonly inFile?: string;
+  /** Exponent with the largest shift; absent where it is not known how the operators enter. */
+  readonly exponent?: string;
+  readonly statement: string;
+  readonly reference: string;
+  readonly standing: Standing;
+}
+
+/** One side of competing growth. */
+export interface CompetingSide {
+  readonly t: string;
+  readonly u?: string;
+  readonly exponent?: string;
+  /** Power of the least term that this singularity alone would have. */
+  readonly leastAt: number;
+  readonly origin: string;
+}
+
+/** Ultraviolet against infrared growth at the coupling asked for. */
+export interface CompetingReport {
+  readonly ultraviolet: CompetingSide;
+  readonly infrared: CompetingSide;
+  /** Powers of the last term of the partial sums in the bracket. */
+  readonly orders: readonly [from: number, to: number];
+  /** Range of the partial sums in it, through the last known order; absent where fewer than two are known. */
+  readonly sums?: { readonly low: string; readonly high: string; readonly through: number };
+  /** The smallest |term| and whether it lies in the bracket; absent where it is not reached. */
+  readonly least?: { readonly order: number; readonly inside: boolean };
+  readonly statement: string;
+}
+
 export interface StrengthMethod {
   readonly method: string;
   readonly reference: string;
@@ -65,6 +102,8 @@ export interface GrowthReport {
   readonly nearest?: SingularityReport;
   readonly expected: readonly ExpectedSingularity[];
   readonly strength?: StrengthReport;
+  /** u = −1 beyond the large-β_0 limit. */
+  readonly ultraviolet?: UltravioletReport;
   /** How observation and expectation compare, in words. */
   readonly agreement?: string;
   readonly evidence: {

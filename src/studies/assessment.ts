@@ -4,7 +4,7 @@
  */
 
 import type { Caution, Refused, Standing } from './assessment-basics.js';
-import type { BorelPlaneReport, GrowthReport } from './assessment-growth.js';
+import type { BorelPlaneReport, CompetingReport, GrowthReport } from './assessment-growth.js';
 
 export type * from './assessment-basics.js';
 export type * from './assessment-growth.js';
@@ -179,6 +179,8 @@ export interface OptimalTruncationReport {
     readonly origin: string;
   };
   readonly errorOfStopping?: string;
+  /** Where ultraviolet and infrared growth compete: the bracket of orders and sums, in place of min |term|. */
+  readonly competing?: CompetingReport;
   /** The sum of all known terms at other renormalisation scales: coefficients re-expanded, coupling run. */
   readonly scales?: {
     readonly points: readonly { readonly ratio: string; readonly coupling: string; readonly value: string }[];

@@ -1,5 +1,5 @@
 /** @module The errors of an evolution: shifted inputs, shifted thresholds. */
-import { INPUTS, crossingScale, isRefusal, type Threshold } from '../qcd/index.js';
+import { INPUTS, crossingScale, isRefusal, refuse, type Threshold } from '../qcd/index.js';
 import type { Uncertain } from '../series/index.js';
 import type { Refused } from './assessment.js';
 import { runOnce, type Outcome, type Setting } from './evolve-run.js';
@@ -18,18 +18,25 @@ export interface Shift {
   readonly label: string;
   readonly plus: number;
   readonly minus: number;
-  /** Why one of the settings has no value: the shift is then no error. */
-  readonly refused?: Refused;
 }
 
 export const text = (x: number): string => String(Number(x.toPrecision(DIGITS)));
 export const scaleText = (x: number): string => String(Number(x.toPrecision(6)));
 
-function shiftBetween(label: string, central: number, outcomes: readonly (Outcome | Refused)[]): Shift | undefined {
-  if (outcomes.length === 0) return undefined;
-  const refused = outcomes.find(isRefusal);
-  if (refused !== undefined) return { label, plus: 0, minus: 0, refused };
-  const moves = outcomes.flatMap((o) => ('reason' in o ? [] : [o.value - central]));
+/** The shift between the ends of an error; undefined without an error, a refusal where an end cannot be evolved. */
+function shiftBetween(
+  label: string,
+  central: number,
+  outcomes: readonly (Outcome | Refused)[],
+): Shift | Refused | undefined {
+  const lost = outcomes.find(isRefusal);
+  if (lost !== undefined)
+    return refuse(
+      `the error of ${label} reaches values that cannot be evolved: ${lost.reason}`,
+      'give a smaller error, or the value without one',
+    );
+  const moves = outcomes.flatMap((o) => (isRefusal(o) ? [] : [o.value - central]));
+  if (moves.length === 0) return undefined;
   return { label, plus: Math.max(0, ...moves), minus: Math.max(0, ...moves.map((x) => -x)) };
 }
 
@@ -47,9 +54,13 @@ export function alphaErrors(request: EvolveRequest): readonly number[] {
   return [Number(INPUTS.alphaSMZ.error[0]), -Number(INPUTS.alphaSMZ.error[1])];
 }
 
-/** Shifts from the errors of the inputs. */
-export function parametricShifts(request: EvolveRequest, setting: Setting, central: number): readonly Shift[] {
-  const shifts: (Shift | undefined)[] = [];
+/** Shifts from the errors of the inputs; a refusal where one of them leaves the range of the evolution. */
+export function parametricShifts(
+  request: EvolveRequest,
+  setting: Setting,
+  central: number,
+): readonly Shift[] | Refused {
+  const shifts: (Shift | Refused | undefined)[] = [];
   const { mass } = setting;
   if (mass !== undefined) {
     const varied = sigmas(request.value).map((d) => runOnce({ ...setting, mass: mass + d }));
@@ -58,22 +69,20 @@ export function parametricShifts(request: EvolveRequest, setting: Setting, centr
   const varied = alphaErrors(request).map((d) => runOnce({ ...setting, alpha: setting.alpha + d }));
   shifts.push(shiftBetween('α_s', central, varied));
   shifts.push(thresholdMasses(setting, central));
-  return shifts.filter((s) => s !== undefined);
+  const lost = shifts.find((s) => s !== undefined && isRefusal(s));
+  return lost !== undefined && isRefusal(lost) ? lost : shifts.filter((s) => s !== undefined && !isRefusal(s));
 }
 
 /** Errors of the threshold masses, in quadrature; the crossing scale moves along with its mass. */
 function thresholdMasses(setting: Setting, central: number): Shift | undefined {
   let square = 0;
-  let refused: Refused | undefined;
   for (const t of setting.thresholds) {
     if (t.error === undefined) continue;
     const factor = 1 + t.error / t.mass;
     const heavier: Threshold = { ...t, mass: t.mass * factor, scale: crossingScale(t) * factor };
     const moved = runOnce({ ...setting, thresholds: setting.thresholds.map((u) => (u === t ? heavier : u)) });
-    if (isRefusal(moved)) refused = moved;
-    else square += (moved.value - central) ** 2;
+    if (!isRefusal(moved)) square += (moved.value - central) ** 2;
   }
-  if (refused !== undefined) return { label: 'quark masses', plus: 0, minus: 0, refused };
   const size = Math.sqrt(square);
   return size > 0 ? { label: 'quark masses', plus: size, minus: size } : undefined;
 }

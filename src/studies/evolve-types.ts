@@ -49,8 +49,6 @@ export interface EvolveResult {
   readonly digitsNote?: string;
   /** From the errors of the input: the value itself, α_s behind a mass, the masses at the thresholds. */
   readonly errors: readonly EvolveError[];
-  /** Inputs whose error cannot be carried through: with the input moved by it the evolution is refused. */
-  readonly notCarried?: readonly { readonly label: string; readonly refused: Refused }[];
   readonly oneLoopLess?: { readonly loops: number; readonly value: string; readonly shift: string };
   /**
    * Largest shift when the thresholds are crossed at half and at twice their scale, each in turn, in quadrature. No threshold

@@ -82,9 +82,8 @@ export function evolveStudy(request: EvolveRequest): EvolveResult | Refused {
   if (isRefusal(setting)) return setting;
   const outcome = runOnce(setting);
   if (isRefusal(outcome)) return outcome;
-  const moved = parametricShifts(request, setting, outcome.value);
-  const shifts = moved.filter((s) => s.refused === undefined);
-  const notCarried = moved.flatMap(({ label, refused }) => (refused === undefined ? [] : [{ label, refused }]));
+  const shifts = parametricShifts(request, setting, outcome.value);
+  if (isRefusal(shifts)) return shifts;
   const less = setting.loops > 1 ? runOnce({ ...setting, loops: setting.loops - 1 }) : undefined;
   const spread = matchingSpread(setting, outcome);
   const components: Component[] = shifts.map((s) => ({ label: s.label, error: Math.max(s.plus, s.minus) }));
@@ -127,13 +126,9 @@ export function evolveStudy(request: EvolveRequest): EvolveResult | Refused {
     lambda: lambdas(setting, outcome, alphaErrors(request)),
     path: outcome.steps.map(plainStep),
     ...(outcome.approach.length > 0 ? { couplingPath: outcome.approach.map(plainStep) } : {}),
-    ...(notCarried.length === 0 ? {} : { notCarried }),
-    printed: [
-      writeVerdict(
-        text(outcome.value),
-        components.filter((c) => c.error > 0),
-      ),
-      ...notCarried.map(({ label }) => `error of ${label} not carried`),
-    ].join('; '),
+    printed: writeVerdict(
+      text(outcome.value),
+      components.filter((c) => c.error > 0),
+    ),
   };
 }

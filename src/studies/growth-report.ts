@@ -3,7 +3,13 @@ import { exact, mulExact, subExact, toNumberExact } from '../numerics/index.js';
 import type { Exact } from '../numerics/index.js';
 import type { FoundSingularity, Growth } from '../growth/index.js';
 import type { StatedSingularity } from '../series/index.js';
-import type { ExpectedSingularity, GrowthReport, SingularityReport, StrengthReport } from './assessment.js';
+import type {
+  ExpectedSingularity,
+  GrowthReport,
+  SingularityReport,
+  StrengthReport,
+  UltravioletReport,
+} from './assessment.js';
 import type { Expanded } from './expand.js';
 import { estimateText, exactText, indicative } from './figures.js';
 
@@ -15,7 +21,12 @@ const MARGIN = 1.5;
 /** A fitted power of n! is not known better than its rounding. */
 const LEAST_ORDER_ERROR = 1e-12;
 
-export function growthReport(growth: Growth, expanded: Expanded, strength?: StrengthReport): GrowthReport {
+export function growthReport(
+  growth: Growth,
+  expanded: Expanded,
+  strength?: StrengthReport,
+  ultraviolet?: UltravioletReport,
+): GrowthReport {
   const stated = expanded.expansion.stated;
   const agreement = compare(growth, stated);
   const c = growth.comparison;
@@ -28,6 +39,7 @@ export function growthReport(growth: Growth, expanded: Expanded, strength?: Stre
     ...(growth.nearest === undefined ? {} : { nearest: singularityReport(growth.nearest, expanded) }),
     expected: stated.map(expectedReport),
     ...(strength === undefined ? {} : { strength }),
+    ...(ultraviolet === undefined ? {} : { ultraviolet }),
     ...(agreement === undefined ? {} : { agreement }),
     evidence: {
       ratios: growth.ratios.map((r) => ({

@@ -4,7 +4,7 @@ import { R, toNumberExact } from '../numerics/index.js';
 import type { Growth } from '../growth/index.js';
 import type { Series } from '../series/index.js';
 import { DIVERGENT } from './ambiguity-report.js';
-import type { OptimalTruncationReport } from './assessment.js';
+import type { CompetingReport, OptimalTruncationReport } from './assessment.js';
 import type { Expanded } from './expand.js';
 import { ballText, indicative } from './figures.js';
 import type { TermTable } from './terms.js';
@@ -18,7 +18,7 @@ export function optimalReport(
   digits: number,
 ): OptimalTruncationReport {
   const e = expanded.expansion;
-  const lines = growth.verdict === 'terminating' ? {} : truncationLines(series, e);
+  const lines = growth.verdict === 'terminating' ? {} : truncationLines(series, expanded, growth);
   if (!DIVERGENT.has(growth.verdict))
     return {
       status: 'not applicable',
@@ -45,15 +45,30 @@ export function optimalReport(
     ...(predicted === undefined ? {} : { predicted }),
     ...(observed === undefined
       ? {}
-      : { errorOfStopping: indicative(Math.abs(R.toNumber(table.terms[least!.index]!)), 3) }),
+      : { errorOfStopping: indicative(stopping(table, least!.index, lines.competing), 3) }),
     ...lines,
     statement:
       (observed === undefined
         ? 'the terms still fall at the last known order: the series has not begun to diverge at this coupling'
         : `the term of order ${observed.power} is the smallest; stopping there leaves an error of its size`) +
-      (competing ? '; singularities compete, so the smallest term alone does not mark the best cut' : ''),
+      (lines.competing !== undefined
+        ? `. ${capital(lines.competing.statement)}`
+        : competing
+          ? '; singularities compete, so the smallest term alone does not mark the best cut'
+          : ''),
     standing: 'indicative',
   };
+}
+
+const capital = (text: string): string => text.slice(0, 1).toUpperCase() + text.slice(1);
+
+/** The smallest term or, where two kinds of growth compete, the way to the far end of the bracket. */
+function stopping(table: TermTable, least: number, competing: CompetingReport | undefined): number {
+  const size = Math.abs(R.toNumber(table.terms[least]!));
+  const { sums } = competing ?? {};
+  if (sums === undefined) return size;
+  const sum = R.toNumber(table.sums[least + 1]!);
+  return Math.max(size, Math.abs(Number(sums.low) - sum), Math.abs(Number(sums.high) - sum));
 }
 
 /** From the stated leading singularity, or from the one that the terms show. */

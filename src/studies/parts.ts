@@ -13,6 +13,7 @@ import { growthReport } from './growth-report.js';
 import { planeReport } from './plane-report.js';
 import { leadingStrength, strengthReport } from './strength-report.js';
 import { couplingSummary, seriesSummary } from './summary.js';
+import { ultravioletReport } from './ultraviolet-report.js';
 import { valueEntry } from './values.js';
 import { VERSION } from './version.js';
 
@@ -34,7 +35,12 @@ export function growthStudy(given: Series, options: PartOptions): GrowthResult {
     leastterm: VERSION,
     request: options.request,
     series: seriesSummary(series, expanded),
-    growth: growthReport(growth, expanded, strengthReport(leadingStrength(series, expanded))),
+    growth: growthReport(
+      growth,
+      expanded,
+      strengthReport(leadingStrength(series, expanded)),
+      ultravioletReport(series, expanded),
+    ),
     cautions: cautions(series, expanded, growth, undefined, []),
   };
 }

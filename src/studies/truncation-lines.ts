@@ -2,12 +2,15 @@
  * @module Two short looks at what is missing, beside the verdict's own truncation error: the sum of all known terms at half
  * and at twice the scale, and the answers of the truncation-error models that are closed formulas. `truncation` has them all.
  */
+import type { Growth } from '../growth/index.js';
 import { R, toNumberExact } from '../numerics/index.js';
 import { refuse } from '../qcd/index.js';
 import type { Expansion, Series } from '../series/index.js';
 import { questionOf, TRUNCATION_MODELS, USUAL_PRIORS } from '../truncation/index.js';
 import type { Question } from '../truncation/index.js';
 import type { OptimalTruncationReport, Refused } from './assessment.js';
+import { competingReport, foundLeading } from './competing-report.js';
+import type { Expanded } from './expand.js';
 import { indicative } from './figures.js';
 import { couplingScheme, massDefinition } from './scheme.js';
 import { ask, bandText } from './truncation-answer.js';
@@ -85,15 +88,22 @@ function modelsOf(question: Question): NonNullable<OptimalTruncationReport['mode
 }
 
 /** Values at other scales and answers of other models. */
-export function truncationLines(series: Series, e: Expansion): Pick<OptimalTruncationReport, 'scales' | 'models'> {
+export function truncationLines(
+  series: Series,
+  { expansion: e, uPerT }: Expanded,
+  growth: Growth,
+): Pick<OptimalTruncationReport, 'scales' | 'models' | 'competing'> {
   const question = questionOf(e, {
     coupling: series.coupling,
     ...(series.flavours === undefined ? {} : { flavours: series.flavours }),
     priors: USUAL_PRIORS,
+    found: foundLeading(growth),
   });
+  const competing = competingReport(question, e, uPerT);
   const scales = scalesOf(series, e, question);
   return {
     ...(scales === undefined ? {} : { scales }),
     ...(question === undefined ? {} : { models: modelsOf(question) }),
+    ...(competing === undefined ? {} : { competing }),
   };
 }

@@ -16,8 +16,9 @@ import {
   type TruncationModel,
 } from '../truncation/index.js';
 import type { AssessOptions } from './assess.js';
-import type { Assessment, Caution, Refused, Standing } from './assessment.js';
+import type { Assessment, Caution, CompetingReport, Refused, Standing } from './assessment.js';
 import { cautions } from './cautions.js';
+import { competingReport, foundLeading } from './competing-report.js';
 import { fixedOrderSeries } from './contour/moment.js';
 import { expand, type Expanded } from './expand.js';
 import { ballText, indicative } from './figures.js';
@@ -58,6 +59,8 @@ export interface TruncationResult {
   /** The sum of all known terms and its order. */
   readonly sum: { readonly through: number; readonly value: string; readonly lastTerm: string };
   readonly estimates: readonly TruncationEstimate[];
+  /** Where ultraviolet and infrared growth compete: the bracket of orders and sums, in place of min |term|. */
+  readonly competing?: CompetingReport;
   /** With the first 1, 2, … terms alone: what each model said of the next one. */
   readonly byOrder?: readonly TruncationOrder[];
   readonly record?: readonly TruncationRecord[];
@@ -155,7 +158,9 @@ export function truncationStudy(given: Series, at: Uncertain, options: Truncatio
     coupling: { name, divisor, plain },
     ...(series.flavours === undefined ? {} : { flavours: series.flavours }),
     priors,
+    found: foundLeading(growth),
   });
+  const competing = competingReport(question, e, expanded.uPerT);
   const last = table.rows.at(-1);
   const sums = question === undefined ? () => '' : sumTexts(e, question, options.digits);
   return {
@@ -167,6 +172,7 @@ export function truncationStudy(given: Series, at: Uncertain, options: Truncatio
     estimates: TRUNCATION_MODELS.map((model) =>
       question === undefined ? refusedEntry(model, priors) : estimateEntry(model, question, sums),
     ),
+    ...(competing === undefined ? {} : { competing }),
     ...(options.byOrder === true && question !== undefined ? byOrder(question) : {}),
     cautions: [...cautions(series, expanded, growth, table, []), ...ownCautions(growth, expanded)],
   };

@@ -55,6 +55,13 @@ export interface Moved {
   readonly coefficients: readonly Ball[];
 }
 
+/** A leading singularity as the models need it: position in t, exponent γ where it is known. */
+export interface Leading {
+  readonly t: number;
+  readonly exponent?: number;
+  readonly origin: string;
+}
+
 export interface Question {
   readonly known: Known;
   readonly expansion: Expansion;
@@ -66,6 +73,8 @@ export interface Question {
   /** Number of flavours, where the coupling runs by the beta function of QCD. */
   readonly flavours?: number;
   readonly priors: Priors;
+  /** Singularities that the terms themselves show, nearest first. */
+  readonly found?: readonly Leading[];
   /** All coefficients at μ′, ln(μ′²/μ²) = logRatio; the first ones do not depend on the later ones. */
   atScale(logRatio: number): Moved | TruncationRefusal;
 }

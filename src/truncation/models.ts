@@ -9,6 +9,7 @@ import { geometricTail } from './conventional/geometric-tail.js';
 import { lastRatio } from './conventional/last-ratio.js';
 import { lastTerm } from './conventional/last-term.js';
 import { leastTerm } from './conventional/least-term.js';
+import { remainder } from './conventional/remainder.js';
 import { padeNext } from './conventional/pade-next.js';
 import { guarded } from './guard.js';
 import type { TruncationModel } from './model.js';
@@ -20,6 +21,7 @@ export const TRUNCATION_MODELS: readonly TruncationModel[] = [
   lastRatio,
   geometricTail,
   leastTerm,
+  remainder,
   padeNext,
   facNext,
   scaleEnvelope,

@@ -7,7 +7,7 @@ import { refuse, type Moved, type Question, type TruncationRefusal } from './mod
 import type { Priors } from './priors.js';
 import { logTable } from './scale/log-table.js';
 
-export type Setting = Pick<Question, 'coupling' | 'flavours' | 'priors'>;
+export type Setting = Pick<Question, 'coupling' | 'flavours' | 'priors' | 'found'>;
 
 /** Bits of the coefficients at another scale: far more than a double holds, since the terms of the re-expansion cancel. */
 const MOVED_BITS = 192;

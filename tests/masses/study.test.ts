@@ -259,3 +259,9 @@ test('the relation of the given definition is shown when it is no MSbar mass', (
       .every((line) => line.length <= 80),
   ).toBe(true);
 });
+
+test('an error of α_s that no conversion can carry is refused, not left out', () => {
+  // 0.118 − 0.118 = 0 and 0.236, whose Landau pole lies above the bottom mass.
+  const result = massStudy({ ...QUESTION, alpha: { ...QUESTION.alpha, value: uncertain('0.118(118)') } });
+  expect(isRefusal(result) && result.reason).toMatch(/^the error of α_s reaches values that have no conversion: /);
+});

@@ -3,13 +3,17 @@ import { describe, expect, it } from 'vitest';
 import {
   atan,
   awayFromCut,
+  branchCut,
   C,
   cexp,
   clog,
+  cpow,
   csqrt,
   expRay,
+  gauss,
   gaussPanels,
   integrateAnalytic,
+  kummerU,
   legendreRule,
   log,
   pi,
@@ -18,6 +22,7 @@ import {
   rayPoints,
   scaledE1,
   tanhSinh,
+  upperGammaComplex,
 } from '../../src/numerics/index.js';
 import type { Complex } from '../../src/numerics/index.js';
 
@@ -78,6 +83,69 @@ describe('certified integrals', () => {
     const arsinh = log(R.mul2exp(R.add(R.ONE, root, P), 10), P);
     expect(R.overlaps(value.re, R.add(root, R.mul(square.re, arsinh, P), P))).toBe(true);
     expect(C.accuracyBits(value)).toBeGreaterThan(55);
+  });
+});
+
+describe('certificates across a cut are refused', () => {
+  /** ∫ log and ∫ √ along a path that crosses (−∞, 0] at −1, from the primitives on both sides. */
+  const [from, to] = [n(-1, -1), n(-1, 1)];
+  const above = n(-1, 0);
+  const cases = {
+    log: {
+      f: clog,
+      // z log z − z
+      primitive: (z: Complex): Complex => C.sub(C.mul(z, clog(z, P), P), z, P),
+    },
+    sqrt: {
+      f: csqrt,
+      // (2/3) z √z
+      primitive: (z: Complex): Complex =>
+        C.mulReal(C.mul(z, csqrt(z, P), P), R.fromRational(Rational.of(2n, 3n), P), P),
+    },
+    power: {
+      f: (z: Complex, p: number): Complex => cpow(z, n(-0.5, 0), p),
+      // 2 √z
+      primitive: (z: Complex): Complex => C.mul2exp(csqrt(z, P), 1),
+    },
+  };
+
+  it.each(Object.entries(cases))('%s', (_name, { f, primitive }) => {
+    // the value at −1 from below is the conjugate of the one from above
+    const truth = C.add(
+      C.sub(C.conj(primitive(above)), primitive(from), P),
+      C.sub(primitive(to), primitive(above), P),
+      P,
+    );
+    const { value } = integrateAnalytic(f, from, to, 60, { mostPieces: 60 });
+    expect(C.overlaps(value, truth)).toBe(true);
+    expect(C.accuracyBits(value)).toBeLessThan(20);
+    // a path beside the cut keeps its certificate, without help from the caller
+    const beside = integrateAnalytic(f, n(-1, 0.01), to, 60).value;
+    expect(C.overlaps(beside, C.sub(primitive(to), primitive(n(-1, 0.01)), P))).toBe(true);
+    expect(C.accuracyBits(beside)).toBeGreaterThan(54);
+  });
+
+  it('a cut on which the path ends, and one that it only touches, are met by no rectangle in use', () => {
+    // ∫ √z from 0 to 1 = 2/3: the branch point is enclosed as it stands
+    const { value } = integrateAnalytic(csqrt, C.ZERO, C.ONE, 60, { mostPieces: 60 });
+    expect(R.containsRational(value.re, Rational.of(2n, 3n))).toBe(true);
+    // constants on the cut are constants
+    const constant = integrateAnalytic((_z, p) => clog(n(-2, 0), p), C.ZERO, C.ONE, 60).value;
+    expect(C.overlaps(constant, clog(n(-2, 0), P))).toBe(true);
+    expect(C.accuracyBits(constant)).toBeGreaterThan(55);
+  });
+
+  it('the other functions with a cut have no value on a rectangle across it', () => {
+    const across: Complex = { re: R.ball(-3n, 0, 0.25), im: R.ball(0n, 0, 0.25) };
+    const [third, other] = [Rational.of(1n, 3n), Rational.of(2n, 5n)];
+    for (const y of [
+      scaledE1(across, 60),
+      branchCut(third, across, 60),
+      upperGammaComplex(third, across, 60),
+      kummerU(third, other, across, 60),
+      gauss(third, third, other, C.neg(across), 60),
+    ])
+      expect(C.upperBits(y)).toBe(Infinity);
   });
 });
 

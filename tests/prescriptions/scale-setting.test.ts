@@ -118,6 +118,31 @@ describe('effective charge', () => {
   });
 });
 
+describe('an effective charge with few loops of the beta function', () => {
+  const charge = (terms: number, loops: number): Sum =>
+    member(fac, adler(terms, loops), `effective charge, ${terms} terms`);
+  // c_k enters through B_k, for which β_k must be known; c_1 through Λ, always.
+  it.each([
+    [1, 2],
+    [2, 2],
+    [3, 3],
+    [4, 4],
+  ])('%i loops: %i coefficients enter, and the error is the step from one fewer', (loops, used) => {
+    const full = charge(4, loops);
+    const enough = charge(used, loops);
+    expect(R.toNumber(full.value)).toBeCloseTo(R.toNumber(enough.value), 15);
+    expect(full.termsUsed).toBe(used);
+    expect(full.trust).toBe('indicative');
+    if (used > 2)
+      expect(full.truncation).toBeCloseTo(
+        Math.abs(R.toNumber(full.value) - R.toNumber(charge(used - 1, loops).value)),
+        12,
+      );
+    // Two coefficients: the step from the coupling itself.
+    else expect(full.truncation).toBeCloseTo(R.toNumber(full.value) - 0.32 / Math.PI, 12);
+  });
+});
+
 describe('FAC scale', () => {
   it('of the Adler function', () => {
     const two = member(fac, adler(2), 'scale of vanishing c₁, 2 terms');

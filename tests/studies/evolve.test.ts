@@ -82,19 +82,6 @@ describe('evolve', () => {
     expect(Number(result.value)).toBeCloseTo(1 / (1 / 0.3 + (9 / (4 * Math.PI)) * Math.log(100)), 11);
   });
 
-  it('an error that cannot be carried is named, never dropped: half of it is none', () => {
-    // 0.118 − 0.2 is no coupling; 0.118 + 0.02 has its Landau pole above 1 GeV while 0.118 − 0.02 would do.
-    for (const [value, to] of [
-      ['0.118(200)', 10],
-      ['0.118(20)', 1],
-    ] as const) {
-      const result = granted({ quantity: 'alpha_s', value: uncertain(value), from: { scale: MZ }, to: { scale: to } });
-      expect(result.errors.map((e) => e.label)).not.toContain('α_s');
-      expect(result.notCarried?.map((e) => e.label)).toEqual(['α_s']);
-      expect(result.printed).toContain('error of α_s not carried');
-    }
-  });
-
   it('refuses with reason and remedy', () => {
     const base: EvolveRequest = {
       quantity: 'alpha_s',
@@ -127,5 +114,31 @@ describe('evolve', () => {
       to: { scale: 2 },
     });
     expect(JSON.parse(JSON.stringify(result))).toEqual(result);
+  });
+});
+
+describe('errors that leave the range of the evolution', () => {
+  const request = (text: string, to: number): EvolveRequest => ({
+    quantity: 'alpha_s',
+    value: uncertain(text),
+    from: { scale: MZ },
+    to: { scale: to },
+  });
+  // 0.118 − 0.200 is below 0; 0.118 + 0.060 has its Landau pole above 1 GeV. Neither may pass for no error at all.
+  it.each([
+    ['0.118(200)', 10],
+    ['0.118(60)', 1],
+  ])('%s to %d GeV is refused with a remedy', (text, to) => {
+    const result = evolveStudy(request(text, to));
+    expect('reason' in result && result.reason).toMatch(/^the error of α_s reaches values that cannot be evolved: /);
+    expect('remedy' in result && result.remedy).toContain('a smaller error');
+  });
+
+  it('an end that still stands gives its error, on its own side', () => {
+    const result = granted(request('0.118(60)', 10));
+    const alpha = result.errors.find((e) => e.label === 'α_s')!;
+    const at = (text: string): number => Number(granted(request(text, 10)).value);
+    expect(Number(alpha.plus)).toBeCloseTo(at('0.178') - at('0.118'), 3);
+    expect(Number(alpha.minus)).toBeCloseTo(at('0.118') - at('0.058'), 3);
   });
 });

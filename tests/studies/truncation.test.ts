@@ -37,7 +37,10 @@ describe('the Adler function order by order', () => {
       } else expect(entry.refused.remedy).not.toBe('');
       if (entry.nature === 'credible') expect(entry.priors.length, entry.model).toBeGreaterThan(0);
     }
-    expect(result.estimates.filter((e) => e.refused !== undefined).map((e) => e.model)).toEqual(['least-term']);
+    expect(result.estimates.filter((e) => e.refused !== undefined).map((e) => e.model)).toEqual([
+      'least-term',
+      'remainder',
+    ]);
   });
 
   test('bands are decimal strings about the sum with the additive part', () => {

@@ -26,7 +26,8 @@ const given: Given = {
   stated: [{ t: exact(-1), corrections: [], kind: 'ultraviolet', origin: 'file' }],
 };
 const names = TRUNCATION_MODELS.map((m) => m.name);
-const answering = names.filter((name) => name !== 'least-term');
+/** The others need terms that have passed their least one: competing.test.ts. */
+const answering = names.filter((name) => name !== 'least-term' && name !== 'remainder');
 
 test('names are unique, and every prior of a model exists', () => {
   expect(new Set(names).size).toBe(names.length);

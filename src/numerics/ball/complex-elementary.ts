@@ -3,7 +3,8 @@
  *
  * Purpose    enclosures on the complex plane; principal branches, cut along the negative real axis.
  * Method     from the real functions of the two parts.
- * Bound      inherited. A rectangle that reaches across the cut gets the whole range of the argument.
+ * Bound      inherited. A rectangle that reaches across the cut gets the whole range of the argument, and is counted: who needs an
+ *            analytic function looks whether the count has changed.
  */
 import * as C from './complex.js';
 import type { Complex } from './complex.js';
@@ -41,13 +42,29 @@ function logAbs(z: Complex, prec: number): Ball {
   return R.mul2exp(log1p(d, prec), -1);
 }
 
+let crossings = 0;
+
+/** How often clog, csqrt and cpow have so far met a rectangle on their cut (−∞, 0], where what they enclose is not one analytic function. */
+export function cutCrossings(): number {
+  return crossings;
+}
+
+/** Counts a rectangle that the cut meets; points and intervals on the cut itself have their values from above, and do not count. */
+function noteCut(z: Complex): void {
+  if (R.isPositive(z.re) || !R.containsZero(z.im)) return;
+  if (R.isExactZero(z.im) && (R.isNegative(z.re) || R.isExactZero(z.re))) return;
+  crossings++;
+}
+
 /** Principal logarithm log|z| + i arg z. INDETERMINATE parts where z may be zero. */
 export function clog(z: Complex, prec: number): Complex {
+  noteCut(z);
   return { re: logAbs(z, prec), im: arg(z, prec) };
 }
 
 /** Principal square root. On a rectangle across the cut, and where z may be zero, only the modulus is bounded. */
 export function csqrt(z: Complex, prec: number): Complex {
+  noteCut(z);
   if (R.isExactZero(z.im)) {
     if (R.isExactZero(z.re)) return C.ZERO;
     if (R.isPositive(z.re)) return C.fromReal(R.sqrt(z.re, prec));

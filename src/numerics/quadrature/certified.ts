@@ -8,12 +8,14 @@
  * Bound      f = Σ a_k T_k with |a_k| <= 2Mρ^−k. The rule is exact below degree 2n, odd k drop out, and the integral and the sum of
  *            weights contribute at most 2/(k²−1) and 2 for the others: |E| <= |h| (64/15) M ρ^(−2n)/(1 − ρ^−2) for n >= 2.
  *            Pieces that cannot be halved further contribute |b−a|·f(piece), if that is finite.
- *            The integrand must be analytic wherever its enclosure is finite. Functions with a cut enclose their values on both sides of
- *            it, finitely: their arguments have to go through awayFromCut, or the bound is not one.
+ *            The integrand must be made of analytic functions (no modulus, conjugate, real part). Logarithms, roots and powers enclose
+ *            their values on both sides of their cut, finitely: a rectangle on which they have met it proves nothing and is not used. The other
+ *            functions with cuts have no value there.
  * Reference  L. N. Trefethen, SIAM Rev. 50 (2008) 67, theorem 4.5 (constant re-derived); K. Petras, J. Comput. Appl. Math. 145 (2002) 345.
  */
 import * as C from '../ball/complex.js';
 import type { Complex } from '../ball/complex.js';
+import { cutCrossings } from '../ball/complex-elementary.js';
 import { magBits, widenMag } from '../ball/mag.js';
 import type { Mag } from '../ball/mag.js';
 import * as R from '../ball/real.js';
@@ -36,12 +38,12 @@ export interface CertifiedOptions {
   readonly mostPieces?: number;
 }
 
-/** z itself where the rectangle certainly avoids (−∞, 0], INDETERMINATE elsewhere: for arguments of logarithms, roots and powers. */
+/** z itself where the rectangle certainly avoids (−∞, 0], INDETERMINATE elsewhere: for branches of one's own making. */
 export function awayFromCut(z: Complex): Complex {
   return R.isPositive(z.re) || !R.containsZero(z.im) ? z : C.INDETERMINATE;
 }
 
-/** ∫_a^b f, enclosed. f must be analytic wherever its enclosure is finite (awayFromCut). The radius is near 2^-prec of the integral's size where the integrand allows it. */
+/** ∫_a^b f, enclosed. f must be made of analytic functions; cuts of logarithms, roots and powers are noticed. The radius is near 2^-prec of the integral's size where the integrand allows it. */
 export function integrateAnalytic(
   f: Integrand,
   a: Complex,
@@ -108,8 +110,9 @@ function choose(
     const wide = (rho + 1 / rho) / 2;
     const high = (rho - 1 / rho) / 2;
     const ellipse: Complex = { re: R.ball(0n, 0, wide * (1 + 1e-12)), im: R.ball(0n, 0, high * (1 + 1e-12)) };
+    const before = cutCrossings();
     const bound = modulusUpper(f(C.add(centre, C.mul(half, ellipse, ROUGH), ROUGH), ROUGH));
-    if (!(bound.m < Infinity)) continue;
+    if (cutCrossings() !== before || !(bound.m < Infinity)) continue;
     // log2 of |h| (64/15) M/(1 − ρ^−2), rounded up
     const fixed = bound.m === 0 ? -Infinity : length + magBits(bound) + 2.0932 - Math.log2(1 - rho ** -2) + 1e-6;
     const n = NODES.find((k) => fixed - 2 * k * Math.log2(rho) < goal);

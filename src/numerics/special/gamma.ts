@@ -14,14 +14,14 @@ import { wordPrec } from '../ball/fixed.js';
 import { magBits, magRadius, magToNumber, magUpper, mulMag, widenMag } from '../ball/mag.js';
 import * as R from '../ball/real.js';
 import type { Ball } from '../ball/real.js';
-import { reciprocalGamma, taylorServes } from './gamma-taylor.js';
+import { reciprocalGamma, TAYLOR_LIMIT } from './gamma-taylor.js';
 import { psiBound, shiftedLogGamma } from './log-gamma.js';
 import { risingProduct } from './stirling.js';
 
 /** Heuristic: exact integers up to this are done by multiplication. */
 const FACTORIAL_LIMIT = 256n;
-/** Guard bits of the Taylor polynomials: their error stays below 2^10 units. */
-const TAYLOR_GUARD = 14;
+/** Guard bits of the Taylor polynomials: their error stays below 2^11 units. */
+const TAYLOR_GUARD = 16;
 /** Heuristic: Taylor polynomials with a rising product serve up to this x. */
 const TAYLOR_STEPS = { least: 16, slope: 0.1 } as const;
 /** Γ of arguments beyond 2^HUGE_BITS is not followed. */
@@ -73,28 +73,36 @@ function exactPositive(x: Ball, prec: number): Ball {
   if (x.exp >= 0 && x.mid << BigInt(x.exp) <= FACTORIAL_LIMIT)
     return R.round(R.fromNumber(factorial(Number(x.mid << BigInt(x.exp)) - 1)), prec);
   const wp = wordPrec(prec + TAYLOR_GUARD);
-  const near = R.toNumber(x) < TAYLOR_STEPS.least + TAYLOR_STEPS.slope * wp;
-  if (near && taylorServes(wp)) return byTaylor(x, wp, prec);
+  if (wp <= TAYLOR_LIMIT && R.toNumber(x) < TAYLOR_STEPS.least + TAYLOR_STEPS.slope * wp) {
+    const fixed = shift(x.mid, x.exp + wp);
+    const w = BigInt(wp);
+    const m = (fixed + (1n << (w - 1n))) >> w;
+    const u = fixed - (m << w);
+    const reciprocal = reciprocalGamma(u, wp);
+    if (reciprocal !== undefined) return byTaylor(x, Number(m), u, reciprocal, wp, prec);
+  }
   const g = shiftedLogGamma(x, prec + 14);
   // The logarithm's absolute error is the relative error of Γ.
   return R.div(exp(g.log, prec + 8), g.product, prec);
 }
 
-/** x = m + u: Γ(x) = (u+1)…(u+m−1)/(1/Γ(1+u)) for m >= 1, and 1/(x·1/Γ(1+x)) for m = 0. */
-function byTaylor(x: Ball, wp: number, prec: number): Ball {
-  const fixed = shift(x.mid, x.exp + wp);
-  const w = BigInt(wp);
-  const m = Number((fixed + (1n << (w - 1n))) >> w);
-  const u = fixed - (BigInt(m) << w);
-  const { value, ulps } = reciprocalGamma(u, wp);
+/** x = m + u: Γ(x) = (u+1)…(u+m−1)/(1/Γ(1+u)) for m >= 1, and 1/(x·1/Γ(1+x)) for m = 0; u in units of 2^-wp. */
+function byTaylor(
+  x: Ball,
+  m: number,
+  u: bigint,
+  { value, ulps }: { value: bigint; ulps: number },
+  wp: number,
+  prec: number,
+): Ball {
   // u is off by less than a unit, and |d/du 1/Γ(1+u)| <= 1.2 on [−1/2, 1/2]
   const f = R.ball(value, -wp, ulps + 2);
   if (m === 0) return R.div(R.ONE, R.mul(x, f, prec + 8), prec);
   if (m === 1) return R.div(R.ONE, f, prec);
-  if (m === 2) return R.div(R.ball(u + (1n << w), -wp, 1), f, prec);
   // u may be negative: start from u + 1
-  const v = u + (1n << w);
-  const p = risingProduct(v, wp, 1, m - 1);
+  const v = u + (1n << BigInt(wp));
+  if (m === 2) return R.div(R.ball(v, -wp, 1), f, prec);
+  const p = risingProduct(v, wp, m - 2);
   const product = R.mul(R.ball(p.mid, p.exp, m * 2 ** 6), R.ball(v, -wp, 1), wp);
   return R.div(product, f, prec);
 }

@@ -55,7 +55,7 @@ export function shiftedLogGamma(x: Ball, wp: number): ShiftedLogGamma {
   if (n === 0) return { log: sum, product: R.ONE };
   if (n === 1) return { log: sum, product: x };
   const fixed = shift(x.mid, x.exp + wp + 8);
-  const p = risingProduct(fixed, wp + 8, 1, n);
+  const p = risingProduct(fixed, wp + 8, n - 1);
   // x itself enters exactly, so that a tiny x keeps its relative accuracy.
   const product = R.mul(R.ball(p.mid, p.exp, n * 2 ** 6, wp + 8), x, wp + 8);
   return { log: sum, product };

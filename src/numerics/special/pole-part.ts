@@ -55,7 +55,7 @@ function computeLog(eps: Rational, m: number, prec: number): Ball {
   let u: Ball;
   if (e < CLOSE * prec) {
     const ball = R.fromRational(eps, work + 8);
-    const p = risingProduct(shift(ball.mid, ball.exp + work), work, 1, m + 1);
+    const p = risingProduct(shift(ball.mid, ball.exp + work), work, m);
     const product = R.ball(p.mid, p.exp, (m + 1) * 2 ** 6, work + 16);
     return R.sub(g, log(R.div(product, factorial(m, work + 8), work + 8), prec + 8), prec);
   }

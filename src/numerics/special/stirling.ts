@@ -3,13 +3,14 @@
  *
  * Purpose    log Γ(X) and ψ(X) for X large enough, and the product (x+1)…(x+n−1) that brings x there.
  * Method     Σ c_k y^k, y = 1/X², by Horner's rule where step k keeps only the wp − k·log2(1/y) fraction bits that still
- *            count; rising factorials four factors at a time, as a quartic in x with integer coefficients.
+ *            count; rising factorials in rows of four to sixteen factors, as polynomials in x with integer coefficients.
  * Bound      for X > 0 the remainder after N terms is below the first term left out, |B_2N|/(2N(2N−1) X^(2N−1)) for
  *            log Γ, |B_2N|/(2N X^2N) for ψ (DLMF 5.11(ii)). Step k of Horner's rule loses 3 units of 2^-f_k and is multiplied by
  *            y^k <= 2^(f_k − wp): 3N + 3 ulp in all.
  * Reference  DLMF 5.11.1, 5.11.2; F. Johansson, "Arbitrary-precision computation of the gamma function", arXiv:2109.08392.
  */
 import { bitLength } from '../bits.js';
+import { int } from '../ball/fixed.js';
 import { bernoulli } from './bernoulli.js';
 
 /** Heuristic balance between shifting and summing: X is brought above this fraction of the working precision. */
@@ -42,26 +43,30 @@ export function stirlingTerms(log2x: number, wp: number, forLog: boolean): { ter
  * y given to wp relative bits. Off by at most 3N + 3.
  */
 export function bernoulliSum(yMid: bigint, yExp: number, terms: number, wp: number, forLog: boolean): bigint {
-  const l = yExp - bitLength(yMid); // y < 2^-l
+  const yBits = bitLength(yMid);
+  const l = yExp - yBits; // y < 2^-l
   let s = 0n;
   for (let k = terms - 1; k >= 1; k--) {
     const f = wp - (k - 1) * l; // fraction bits of this step
     // s has f − l fraction bits; s·y needs only as many bits of y as s has, and a few.
     if (s !== 0n) {
-      const cut = Math.max(0, bitLength(yMid) - bitLength(s) - 8);
+      const cut = Math.max(0, yBits - bitLength(s) - 8);
       const y = cut > 0 ? yMid >> BigInt(cut) : yMid;
       const drop = BigInt(yExp - cut - l);
       s = (s * y) >> drop;
     }
     const b = bernoulli(2 * k);
     const den = b.den * BigInt(forLog ? 2 * k * (2 * k - 1) : 2 * k);
-    s += f >= 0 ? (b.num << BigInt(f)) / den : b.num / (den << BigInt(-f));
+    s += (f >= 0 ? b.num << BigInt(f) : b.num >> BigInt(-f)) / den;
   }
   return s;
 }
 
-/** Rising product (x+a)(x+a+1)…(x+b−1), a >= 1, as mid·2^exp; x >= 0 in fixed point. Relative error below 2^(5−wp)·(b−a+1). */
-export function risingProduct(x: bigint, wp: number, a: number, b: number): { mid: bigint; exp: number } {
+/**
+ * Rising product (x+1)(x+2)…(x+n) as mid·2^exp; x >= 0 in fixed point. Relative error below 2^(5−wp)·(n+1): x^i is off by i·max(1, x)^(i−1)
+ * units, so a row V of m factors from x + a on by V′(max(1, x)) <= V(x)·(m/2)·(a+m)/a units, and a row costs one more rounding.
+ */
+export function risingProduct(x: bigint, wp: number, n: number): { mid: bigint; exp: number } {
   const w = BigInt(wp);
   const keep = wp + 8;
   let mid = 1n << w;
@@ -72,15 +77,41 @@ export function risingProduct(x: bigint, wp: number, a: number, b: number): { mi
     if (cut > 0) mid >>= BigInt(cut);
     exp += Math.max(0, cut) - wp;
   };
-  let j = a;
-  if (b - a >= 4) {
-    const x2 = (x * x) >> w;
-    const x3 = (x2 * x) >> w;
-    const x4 = (x2 * x2) >> w;
-    for (; j + 4 <= b; j += 4) times(quartic(x, x2, x3, x4, j, w));
+  const m = n < LEAST_ROW ? 1 : Math.max(LEAST_ROW, Math.min(MOST_IN_ROW, Math.round(0.6 * Math.sqrt(n))));
+  const full = m === 1 ? 0 : Math.floor(n / m);
+  if (full > 0) {
+    const powers = [1n << w, x];
+    for (let i = 2; i <= m; i++) powers.push((powers[i >> 1]! * powers[i - (i >> 1)]!) >> w);
+    for (const c of risingRows(m, full)) {
+      let row = (c[0]! << w) + powers[m]!;
+      for (let i = 1; i < m; i++) row += c[i]! * powers[i]!;
+      times(row);
+    }
   }
-  for (; j < b; j++) times(x + (BigInt(j) << w));
+  for (let j = full * m + 1; j <= n; j++) times(x + (BigInt(j) << w));
   return { mid, exp };
+}
+
+/** Heuristic, from timings: factors of a rising product that are multiplied out in whole numbers. */
+const LEAST_ROW = 4;
+const MOST_IN_ROW = 16;
+
+const rows: bigint[][][] = [];
+
+/** Coefficients of (x+mj+1)…(x+mj+m) for j < count, lowest first; made once. */
+function risingRows(m: number, count: number): readonly (readonly bigint[])[] {
+  const table = (rows[m] ??= []);
+  for (let j = table.length; j < count; j++) {
+    const c = [1n];
+    for (let i = 1; i <= m; i++) {
+      const k = int(m * j + i);
+      c.push(1n);
+      for (let l = i - 1; l > 0; l--) c[l] = c[l]! * k + c[l - 1]!;
+      c[0]! *= k;
+    }
+    table.push(c);
+  }
+  return count === table.length ? table : table.slice(0, count);
 }
 
 /** (x+j)(x+j+1)(x+j+2)(x+j+3) from the powers of x. */

@@ -1,5 +1,11 @@
 /** @module Section 3: how the coefficients grow, on what evidence, and where the nearest Borel singularity sits. */
-import type { ExpectedSingularity, GrowthReport, SingularityReport, StrengthReport } from '../../studies/index.js';
+import type {
+  ExpectedSingularity,
+  GrowthReport,
+  SingularityReport,
+  StrengthReport,
+  UltravioletReport,
+} from '../../studies/index.js';
 import { shorten } from '../../numerics/index.js';
 import { percent, plusMinus, withError } from '../layout/figures.js';
 import type { Fact, Page } from '../layout/page.js';
@@ -76,8 +82,25 @@ function singularities(page: Page, growth: GrowthReport): void {
     );
     page.facts(forms);
   }
+  if (growth.ultraviolet !== undefined) ultravioletBlock(page, growth.ultraviolet);
   if (growth.strength !== undefined) strengthBlock(page, growth.strength);
 }
+
+function ultravioletBlock(page: Page, uv: UltravioletReport): void {
+  page.blank();
+  page.say(`Ultraviolet, u = ${uv.u}, beyond large β₀ (${uv.reference}; ${uv.standing}):`);
+  page.facts([
+    { label: 'four-quark operators', text: `shift the exponent by λ = ${uv.shifts.join(', ')}` },
+    {
+      label: 'exponent',
+      text: `${uv.exponent === undefined ? 'not known' : shorten(uv.exponent, DIGITS)}; ${uv.inFile === undefined ? 'the file states none' : `from the file ${shorten(uv.inFile, DIGITS)}`}`,
+    },
+  ]);
+  page.say(sentence(greek(uv.statement)), 'faint');
+}
+
+const greek = (text: string): string =>
+  text.replaceAll('beta_0^2', 'β₀²').replaceAll('beta_0', 'β₀').replaceAll('beta_1', 'β₁').replaceAll('lambda_1', 'λ₁');
 
 const PLAIN_ORDER = 1e-9;
 

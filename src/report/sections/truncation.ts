@@ -4,6 +4,7 @@ import { shorten } from '../../numerics/index.js';
 import { plusMinus, rough } from '../layout/figures.js';
 import type { Fact, Page } from '../layout/page.js';
 import { sentence } from '../words.js';
+import { competingFacts } from './competing.js';
 
 function seen({ observed, status }: OptimalTruncationReport, digits: number): string {
   if (observed === undefined) return status;
@@ -54,6 +55,7 @@ export function truncationSection(page: Page, report: OptimalTruncationReport, c
       text: `x − b = ${shorten(predicted.leastTermAt, 4)} terms to the least one; ${predicted.principalValueAt === undefined ? '' : `x − b − 1/3 = ${shorten(predicted.principalValueAt, 4)} terms to the principal value `}(x = ${shorten(predicted.x, 5)}, b = ${shorten(predicted.b, 5)}; ${predicted.origin})`,
     });
   }
+  if (report.competing !== undefined) facts.push(...competingFacts(report.competing, page.digits));
   if (report.errorOfStopping !== undefined) {
     facts.push({ label: 'error of stopping', text: plusMinus(report.errorOfStopping) });
   }
