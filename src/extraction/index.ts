@@ -1,6 +1,7 @@
 /** @module From measured numbers to couplings, masses and condensates: values by prescription, with their budgets. */
 export { extract } from './extract.js';
 export { fit } from './fit/study.js';
+export { inUnitOfSeries } from './unit-of-series.js';
 export { USUAL } from './setting.js';
 export { AMBIGUITY_NAMES, UNKNOWNS } from './problem.js';
 export type {

@@ -79,6 +79,16 @@ describe('leastterm extract', () => {
     expect(a?.stdout).toMatch(/^fixed-order\t4\.16656156841\t/);
   });
 
+  test('a series in units of its hard scale takes a measurement in GeV', async () => {
+    const file = write('in-q.yaml', `${COUPLED}hard scale: 2 GeV\nunit: Q\nadditive: 1\n`);
+    const energy = await run(`extract ${file} --measured '2.4(1) GeV' --for alpha_s --only fixed-order --to none -q`);
+    const ratio = await run(`extract ${file} --measured '1.20(5)' --for alpha_s --only fixed-order --to none -q`);
+    expect([energy.status, energy.stderr]).toEqual([0, '']);
+    expect(energy.stdout).toBe(ratio.stdout);
+    const squared = await run(`extract ${file} --measured '2.4(1) GeV^2' --for alpha_s --to none`);
+    expect(squared.stderr).toContain('is in GeV^2, but R is a pure number');
+  });
+
   test('exit code 1 when every prescription fails to reach the measurement, with the range that it reaches', async () => {
     const hill = write('hill.yaml', 'first power: 1\ncoefficients: [1, -1]\n');
     const { status, stdout } = await run(`extract ${hill} --measured 0.3 --for alpha_s --only fixed-order`);

@@ -73,7 +73,15 @@ async function run(call: Call): Promise<number> {
   if (mass === undefined) for (const row of rows) series.push(await readSeries(row.series, call));
   const { extraction, sheets } = await import('../rooms-more.js');
   const { report } = await import('../rooms.js');
-  const stated = await problemOf(given, rows, series);
+  const asked = await problemOf(given, rows, series);
+  // A mass is the scale of its series itself: only other unknowns have a Q to divide by.
+  const stated: Problem =
+    asked.for === 'mass' || asked.for === 'pole-mass'
+      ? asked
+      : {
+          ...asked,
+          data: asked.data.map((d, i) => (series[i] === undefined ? d : extraction.inUnitOfSeries(d, series[i]))),
+        };
   const problem: Problem = {
     ...stated,
     ...(correlation === undefined ? {} : { correlation }),
