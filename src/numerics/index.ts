@@ -36,6 +36,7 @@ export { digamma } from './special/digamma.js';
 export { digammaComplex } from './special/digamma-complex.js';
 export { kummerM, kummerU } from './special/confluent.js';
 export { gauss } from './special/gauss.js';
+export type { ComplexRational } from './special/parameter.js';
 export * from './polynomial/index.js';
 export * from './linear/index.js';
 export * from './quadrature/index.js';

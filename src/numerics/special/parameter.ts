@@ -10,40 +10,67 @@ import * as R from '../ball/real.js';
 import type { Exact } from '../exact.js';
 import { Rational } from '../rational.js';
 
+/** A complex number with rational parts, exactly. */
+export interface ComplexRational {
+  readonly re: Rational;
+  readonly im: Rational;
+}
+
 /** What callers may give: exact values, enclosure procedures, or enclosures. */
-export type Given = Rational | Exact | Ball | Complex | number;
+export type Given = Rational | ComplexRational | Exact | Ball | Complex | number;
 
 export interface Parameter {
   /** Present when the value is known to be this rational. */
   readonly rational?: Rational;
+  /** Present when the value is known exactly, rational included. */
+  readonly exact?: ComplexRational;
   at(bits: number): Complex;
 }
 
 export function parameter(x: Given): Parameter {
   if (typeof x === 'number') return fromRational(Rational.fromNumber(x));
   if (x instanceof Rational) return fromRational(x);
-  if ('re' in x) return R.isExactZero(x.im) ? fromBall(x.re) : { at: () => x };
+  if ('re' in x) return fromComplex(x);
   if ('mid' in x) return fromBall(x);
   if (x.rational !== undefined) return fromRational(x.rational);
   return { at: (bits) => C.fromReal(x.ball(bits)) };
 }
 
 function fromRational(q: Rational): Parameter {
-  return { rational: q, at: (bits) => C.fromReal(R.fromRational(q, bits)) };
+  return { rational: q, exact: { re: q, im: Rational.ZERO }, at: (bits) => C.fromReal(R.fromRational(q, bits)) };
 }
 
+function fromExact(x: ComplexRational): Parameter {
+  if (x.im.isZero()) return fromRational(x.re);
+  return { exact: x, at: (bits) => ({ re: R.fromRational(x.re, bits), im: R.fromRational(x.im, bits) }) };
+}
+
+function fromComplex(x: Complex | ComplexRational): Parameter {
+  if (isComplexRational(x)) return fromExact(x);
+  if (R.isExactZero(x.im)) return fromBall(x.re);
+  if (isPoint(x.re) && isPoint(x.im)) return fromExact({ re: R.midpoint(x.re), im: R.midpoint(x.im) });
+  return { at: () => x };
+}
+
+const isComplexRational = (x: Complex | ComplexRational): x is ComplexRational => x.re instanceof Rational;
+/** An exact ball whose rational is of moderate length. */
+const isPoint = (x: Ball): boolean => x.rad === 0 && Math.abs(x.exp) < 1 << 14;
+
 function fromBall(x: Ball): Parameter {
-  return x.rad === 0 && Math.abs(x.exp) < 1 << 14 ? fromRational(R.midpoint(x)) : { at: () => C.fromReal(x) };
+  return isPoint(x) ? fromRational(R.midpoint(x)) : { at: () => C.fromReal(x) };
 }
 
 export function plus(p: Parameter, q: Parameter | number): Parameter {
   if (typeof q === 'number') return plus(p, fromRational(Rational.of(q)));
-  if (p.rational !== undefined && q.rational !== undefined) return fromRational(p.rational.add(q.rational));
+  if (p.exact !== undefined && q.exact !== undefined) {
+    return fromExact({ re: p.exact.re.add(q.exact.re), im: p.exact.im.add(q.exact.im) });
+  }
   return { at: (bits) => C.add(p.at(bits + 4), q.at(bits + 4), bits + 4) };
 }
 
 export function minus(p: Parameter): Parameter {
-  return p.rational !== undefined ? fromRational(p.rational.neg()) : { at: (bits) => C.neg(p.at(bits)) };
+  if (p.exact !== undefined) return fromExact({ re: p.exact.re.neg(), im: p.exact.im.neg() });
+  return { at: (bits) => C.neg(p.at(bits)) };
 }
 
 export const difference = (p: Parameter, q: Parameter): Parameter => plus(p, minus(q));

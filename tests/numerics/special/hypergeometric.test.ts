@@ -226,6 +226,72 @@ describe('Gauss function', () => {
   });
 });
 
+describe('Gauss function, complex parameters with integer differences', () => {
+  const cq = (re: string, im: string): { re: Rational; im: Rational } => ({ re: q(re), im: q(im) });
+  const [a, conjugate] = [cq('1/3', '1/5'), cq('1/3', '-1/5')];
+  // 62 digits by mpmath 1.2.1; PARI/GP 2.15.2 agrees but for c = −4/3, where the power series (|z| < 1) does
+  it.each([
+    [a, conjugate, q('2/3'), cq('0.95', '0'), '1.7433427174065506579589996205738321127755314754856876359638728', '0'],
+    [a, conjugate, q('5/3'), cq('0.95', '0'), '1.1538031588105985866240868865027710020839552251360708177142105', '0'],
+    [
+      a,
+      conjugate,
+      q('11/3'),
+      cq('0.97', '0.2'),
+      '1.0502337712328948209784541470284744915947468346642160920229781',
+      '0.014640915068153327982232814879741768448309581725172146086548435',
+    ],
+    [
+      a,
+      conjugate,
+      q('-4/3'),
+      cq('0.9', '-0.3'),
+      '-3.9877613865471655026362447139716379809418130763516717700652380',
+      '0.98287938760941132996363279398910606151928890195946042242708556',
+    ],
+    [
+      a,
+      cq('4/3', '1/5'),
+      q('1/7'),
+      cq('3', '4'),
+      '-0.42777689385104470506428348149888170465907471374056840324600599',
+      '-0.60606441610222921985631591661989059363052719106576140151813444',
+    ],
+    [
+      a,
+      a,
+      cq('1/7', '1'),
+      cq('-0.3', '1.4'),
+      '0.91189045368997996662921288007276788350991213293890957781075630',
+      '0.15531137919031402789434940000495229716235766555434084924806079',
+    ],
+  ])('F(%o, %o; %o; %o)', (A, B, D, w, re, im) => {
+    const value = gauss(A, B, D, w, 200);
+    const near = (text: string): Ball => R.addError(R.fromRational(q(text), 260), 1, -200);
+    expect(R.overlaps(value.re, near(re))).toBe(true);
+    expect(R.overlaps(value.im, near(im))).toBe(true);
+    expect(C.accuracyBits(value)).toBeGreaterThan(198);
+  });
+
+  it('Euler’s transformation (DLMF 15.8.1) for exact balls, c − a − b = 2, and for c next to it', () => {
+    const [A, B] = [C.fromNumbers(0.375, 1.25), C.fromNumbers(0.625, -1.25)];
+    for (const w of [z('0.97', '0'), z('0.8', '0.7'), z('1.3', '-0.4')]) {
+      for (const shift of ['0', '1e-12', '-1e-25']) {
+        const D = q('3').add(q(shift));
+        const excess = C.fromReal(R.fromRational(D.sub(Rational.ONE), W));
+        const [cA, cB] = [A, B].map((x) => C.sub(C.fromReal(R.fromRational(D, 3 * W)), x, 3 * W)) as [Complex, Complex];
+        const power = cpow(C.sub(C.ONE, w, W), excess, W);
+        same(gauss(A, B, D, w, P), mul(power, gauss(cA, cB, D, w, W)), [C.toNumbers(w), shift], P - 60);
+      }
+    }
+  });
+
+  it('an enclosure that may meet an integer difference still has no value there', () => {
+    const wide = C.fromReal(R.ball(1n, 0, 2 ** -60));
+    expect(C.upperBits(gauss(C.fromNumbers(0.5, 1), C.fromNumbers(0.5, -1), wide, q('0.97'), P))).toBe(Infinity);
+  });
+});
+
 describe('ζ on the line, ψ in the plane, Li, tanh', () => {
   it('ζ agrees with the integers, with its reflection, and next to the pole', () => {
     for (const n of [2, 3, 7, 40])
