@@ -69,6 +69,7 @@ describe('order', () => {
         const d = a.num * b.den - b.num * a.den;
         expect(a.cmp(b)).toBe(d > 0n ? 1 : d < 0n ? -1 : 0);
         expect(a.equals(b)).toBe(d === 0n);
+        expect(a.cmp(a.add(b).sub(b))).toBe(0);
         expect(a.sign()).toBe(a.num > 0n ? 1 : a.num < 0n ? -1 : 0);
         expect(a.isZero()).toBe(a.num === 0n);
         expect(a.abs().sign()).toBe(a.isZero() ? 0 : 1);
