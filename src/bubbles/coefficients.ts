@@ -7,9 +7,9 @@
  */
 import { R, Rational, ballField, exact, exactReal, log } from '../numerics/index.js';
 import type { Ball, Exact } from '../numerics/index.js';
-import { formalRational, monomialsOf, mulSeries, rationalOfFormal, scaleFormal } from '../qcd/index.js';
+import { formalRational, monomialsOf, mulSeries, rationalOfFormal } from '../qcd/index.js';
 import type { Formal } from '../qcd/index.js';
-import { FORMAL_CONSTANTS, ballConstants, exponential, sinc, symbolBall } from './gamma-series.js';
+import { FORMAL_CONSTANTS, ballConstants, exponential, sinc, symbolBall, timesFactorials } from './gamma-series.js';
 import type { ConstantRing } from './gamma-series.js';
 import { InversePowers, taylorAt } from './pole-values.js';
 import type { Quantity } from './quantity.js';
@@ -105,14 +105,11 @@ const valueOf = (form: Formal): Exact => {
   });
 };
 
-/** Exact forms of c_0 … c_(length−1) in π, γ (gE), ζ(3) (z3), …; undefined where no closed form is used, or μ ≠ Q. */
-export function exactForms(quantity: Quantity, ratio: Exact, length: number): Formal[] | undefined {
-  if (quantity.series === undefined || ratio.rational?.equals(Rational.ONE) !== true) return undefined;
-  let factorial = Rational.ONE;
-  return quantity.series(FORMAL_CONSTANTS, formalRational(FIVE_THIRDS), length).map((c, n) => {
-    if (n > 1) factorial = factorial.mul(Rational.of(n));
-    return scaleFormal(c, factorial);
-  });
+/** Exact forms of c_0 … c_(length−1) in π, γ (gE), ζ(3) (z3), …; fewer where only the first are known, undefined where no closed form is used, or μ ≠ Q. */
+export function exactForms(quantity: Quantity, ratio: Exact, length: number): readonly Formal[] | undefined {
+  if (ratio.rational?.equals(Rational.ONE) !== true) return undefined;
+  if (quantity.series === undefined) return quantity.matched?.(length);
+  return timesFactorials(quantity.series(FORMAL_CONSTANTS, formalRational(FIVE_THIRDS), length));
 }
 
 /** Lists kept, since studies ask for the same ones again and again. */

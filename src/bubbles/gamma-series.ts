@@ -98,3 +98,12 @@ export function sinc<T>(ring: ConstantRing<T>, length: number): T[] {
   }
   return list;
 }
+
+/** n! times each. */
+export function timesFactorials(list: readonly Formal[]): Formal[] {
+  let factorial = Rational.ONE;
+  return list.map((c, n) => {
+    if (n > 1) factorial = factorial.mul(Rational.of(n));
+    return scaleFormal(c, factorial);
+  });
+}

@@ -7,6 +7,7 @@
  * non-abelianisation: the leading powers of n_f with n_f → −6πβ0).
  */
 import type { Rational } from '../numerics/index.js';
+import type { Formal } from '../qcd/index.js';
 import type { ConstantRing } from './gamma-series.js';
 import type { Component, Factor } from './tower.js';
 
@@ -42,6 +43,8 @@ export interface Quantity {
   readonly subtraction?: Rational;
   /** The first `length` Taylor coefficients of B with e^(exponent·u); absent where only the poles give them. */
   series?<T>(ring: ConstantRing<T>, exponent: T, length: number): T[];
+  /** c_0, c_1, … in closed form at μ = Q where they were matched to enclosures, not derived. */
+  matched?(length: number): readonly Formal[];
   /** All coefficients are rational. */
   readonly rational?: boolean;
   /** b is an integral over the Euclidean virtuality of the gluon, times this kernel for contours. */

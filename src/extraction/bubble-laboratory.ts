@@ -26,6 +26,8 @@ import type { BubbleQuestion } from './bubble-words.js';
 /** Orders whose closed forms are short enough to read. */
 const EXACT_ORDERS = 8;
 const EXACT_LENGTH = 70;
+/** Order from which matched forms were not known before. */
+const MATCHED_FROM = 2;
 /** Poles that are listed, and those that enter the table of ambiguities. */
 const REACH = 4;
 /** Shares of the ambiguity below this part of the largest are left out of the table. */
@@ -48,7 +50,12 @@ function terms(question: BubbleQuestion): BubbleTerm[] {
     return {
       n,
       coefficient: exactText(c, digits),
-      ...(text === undefined || text.length > EXACT_LENGTH ? {} : { exact: text }),
+      ...(text === undefined || text.length > EXACT_LENGTH
+        ? {}
+        : {
+            exact: text,
+            ...(quantity.matched !== undefined && n >= MATCHED_FROM ? { exactBy: 'integer relation' as const } : {}),
+          }),
       term: row.term,
       partialSum: row.partialSum,
       ...(row.least === true ? { least: true } : {}),

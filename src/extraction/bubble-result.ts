@@ -41,6 +41,8 @@ export interface BubbleTerm {
   readonly coefficient: string;
   /** c_n in closed form, where it is short. */
   readonly exact?: string;
+  /** The form was matched to the enclosure, not derived. */
+  readonly exactBy?: 'integer relation';
   readonly term: string;
   readonly partialSum: string;
   readonly least?: boolean;

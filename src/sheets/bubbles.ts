@@ -55,7 +55,12 @@ function termsSection(page: Page, { terms, quantity }: BubbleResult): void {
   const exact = terms.filter((t) => t.exact !== undefined);
   if (exact.length > 0) {
     page.blank();
-    page.facts(exact.map((t) => ({ label: `c_${t.n}`, text: t.exact ?? '' })));
+    page.facts(
+      exact.map((t) => ({
+        label: `c_${t.n}`,
+        text: `${t.exact ?? ''}${t.exactBy === undefined ? '' : ` (matched by ${t.exactBy})`}`,
+      })),
+    );
   }
 }
 
