@@ -76,9 +76,12 @@ export async function bundle(outdir) {
   });
   await build({
     absWorkingDir: root,
-    // What a worker thread runs, whole in one file: sharing chunks with the program would cut those into more pieces, which every
+    // What worker threads run, each whole in one file: sharing chunks with the program would cut those into more pieces, which every
     // command would pay for.
-    entryPoints: { 'replica-worker': 'src/extraction/replicas/worker.ts' },
+    entryPoints: {
+      'replica-worker': 'src/extraction/replicas/worker.ts',
+      'progress-worker': 'src/cli/progress-worker.ts',
+    },
     outdir,
     bundle: true,
     format: 'esm',

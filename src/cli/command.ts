@@ -85,6 +85,8 @@ export interface Command {
   readonly words?: Partial<Record<OptionName, OptionWords>>;
   /** Those of the options that the command cannot do without. */
   readonly needs?: readonly OptionName[];
+  /** It asks questions on the terminal: no clock beside them. */
+  readonly asks?: true;
   /** Command lines with what they do. */
   readonly examples: readonly (readonly [command: string, meaning: string])[];
   /** Carries the command out; the exit code comes back. */

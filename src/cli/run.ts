@@ -5,7 +5,8 @@ import { commandHelp, generalHelp } from './help.js';
 import { plainText } from './letters.js';
 import { OPTION_NAMES, OPTIONS } from './options.js';
 import { parse } from './parse.js';
-import type { Surroundings } from './surroundings.js';
+import type { Progress } from './progress.js';
+import type { Sink, Surroundings } from './surroundings.js';
 import { unknownCommand } from './unknown.js';
 import { VERSION } from './version.js';
 
@@ -69,7 +70,27 @@ async function dispatch(argv: readonly string[], surroundings: Surroundings): Pr
     return EXIT.done;
   }
   const { operands, given } = await parse(rest, command);
-  return command.run({ operands, given, surroundings });
+  if (given.quiet || command.asks === true) return command.run({ operands, given, surroundings });
+  const progress = await surroundings.startProgress?.(command.name);
+  if (progress === undefined) return command.run({ operands, given, surroundings });
+  try {
+    return await command.run({ operands, given, surroundings: watched(surroundings, progress) });
+  } finally {
+    progress.end();
+  }
+}
+
+/** The surroundings with a clock, whose line goes before anything is written. */
+function watched(surroundings: Surroundings, progress: Progress): Surroundings {
+  const { stdout, stderr } = surroundings;
+  const after = (sink: Sink): Sink => ({
+    ...sink,
+    write: (text) => {
+      progress.end();
+      sink.write(text);
+    },
+  });
+  return { ...surroundings, stdout: after(stdout), stderr: after(stderr), progress };
 }
 
 /** Runs the command line `argv` (without program and script). Never throws; the exit code comes back. */

@@ -1,4 +1,5 @@
 /** @module What a command sees of the outside world: streams, environment, terminal. Tests put their own in its place. */
+import type { Progress } from './progress.js';
 
 export interface Sink {
   /** Text, or the bytes of a picture. */
@@ -14,8 +15,21 @@ export interface Surroundings {
   /** Standard input, when it is not the process's own. */
   readonly stdin?: AsyncIterable<Uint8Array | string>;
   readonly environment: Readonly<Record<string, string | undefined>>;
+  /** Starts the clock of a command on standard error; absent where that is no terminal. */
+  readonly startProgress?: (command: string) => Promise<Progress>;
+  /** The clock of the command at work. */
+  readonly progress?: Progress;
   /** Calls the handler at the first Ctrl-C in place of ending; the second one ends at once. The way back comes back. */
   readonly onInterrupt?: (handler: () => void) => () => void;
+}
+
+const USUAL_COLUMNS = 80;
+
+async function progressOnTerminal(command: string): Promise<Progress> {
+  // Loaded where somebody looks: pipes and scripts do not pay for it.
+  const { startProgress } = await import('./progress.js');
+  // Some terminals do not know their width, or say 0.
+  return startProgress(command, process.stderr.fd, process.stderr.columns || USUAL_COLUMNS);
 }
 
 /** The process's own. */
@@ -32,6 +46,7 @@ export function processSurroundings(): Surroundings {
     stderr: sink(process.stderr),
     stdinIsTerminal: process.stdin.isTTY === true,
     environment: process.env,
+    ...(process.stderr.isTTY === true ? { startProgress: progressOnTerminal } : {}),
     onInterrupt: (handler) => {
       process.once('SIGINT', handler);
       return () => {

@@ -101,7 +101,8 @@ async function run(call: Call): Promise<number> {
     request: requestFor(name),
   });
   const results: BacktestResult[] = [];
-  for (const { name, series } of list) {
+  for (const [i, { name, series }] of list.entries()) {
+    if (list.length > 1) call.surroundings.progress?.step(i, list.length);
     try {
       const { at, path } = await couplingOf(wanted, series, backtest.name);
       const extras = await contourExtras(series, by, backtest.name);

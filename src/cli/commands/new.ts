@@ -85,6 +85,7 @@ async function run(call: Call): Promise<number> {
 
 export const create: Command = {
   name: 'new',
+  asks: true,
   summary: 'a commented series file, from answers or options',
   about: [
     'Asks for what a series file says, where options do not, and writes the file with comments on everything that may be added. In a script give at least --coefficients; nothing is asked then. An existing file is never replaced.',

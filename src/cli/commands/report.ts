@@ -26,14 +26,18 @@ async function studied(name: string, call: Call): Promise<SavedResult[]> {
     digits: given.digits ?? USUAL_DIGITS,
     request: { ...requestOf(command, name, call), command },
   });
-  const results = [
-    studies.assess(series, at, options('assess')),
-    studies.compare(series, [at], options('compare')),
-    studies.truncationStudy(series, at, options('truncation')),
-    studies.scaleDependence(series, at, options('scale')),
-    studies.laplaceIntegrand(series, at, options('integrand')),
-    studies.backtest(series, at, { ...options('backtest'), hide: HIDDEN }),
+  const makers: readonly (() => object)[] = [
+    () => studies.assess(series, at, options('assess')),
+    () => studies.compare(series, [at], options('compare')),
+    () => studies.truncationStudy(series, at, options('truncation')),
+    () => studies.scaleDependence(series, at, options('scale')),
+    () => studies.laplaceIntegrand(series, at, options('integrand')),
+    () => studies.backtest(series, at, { ...options('backtest'), hide: HIDDEN }),
   ];
+  const results = makers.map((make, i) => {
+    call.surroundings.progress?.step(i, makers.length);
+    return make();
+  });
   const { pictures } = await import('../rooms-pictures.js');
   // What went through JSON is what a saved file would hold.
   return results.map((result): unknown => JSON.parse(JSON.stringify(result))).filter(pictures.isSavedResult);

@@ -3,6 +3,7 @@ import type { GrowthResult, PlaneResult } from '../../studies/index.js';
 import { measured, number, size, symmetric, text } from '../table.js';
 import type { PaperTable } from '../table.js';
 
+type Pole = PlaneResult['borelPlane']['entries'][number]['poles'][number];
 type Growth = GrowthResult['growth'];
 
 function ratioTable(title: string, { evidence, statement, agreement }: Growth): PaperTable {
@@ -64,6 +65,9 @@ export function planeTables({ series, borelPlane }: PlaneResult): PaperTable[] {
   // Columns that would hold nothing but zeros are left out.
   const inU = entries.some(({ pole }) => pole.u !== undefined);
   const complex = entries.some(({ pole }) => pole.im !== undefined || pole.amplitude?.im !== undefined);
+  // Errors are known in t; u is a multiple of it.
+  const inUnitsOfU = ({ re, u }: Pole, error: string | undefined): string | undefined =>
+    error === undefined || u === undefined ? undefined : String(Math.abs((Number(u.re) / Number(re)) * Number(error)));
   const whenComplex = <T>(...list: T[]): T[] => (complex ? list : []);
   return [
     {
@@ -83,7 +87,12 @@ export function planeTables({ series, borelPlane }: PlaneResult): PaperTable[] {
       rows: entries.map(({ label, leroy, pole }) => [
         label,
         leroy,
-        ...(inU ? [measured(pole.u?.re), ...whenComplex(measured(pole.u?.im ?? '0'))] : []),
+        ...(inU
+          ? [
+              measured(pole.u?.re, symmetric('coefficients', inUnitsOfU(pole, pole.error?.re))),
+              ...whenComplex(measured(pole.u?.im ?? '0', symmetric('coefficients', inUnitsOfU(pole, pole.error?.im)))),
+            ]
+          : []),
         measured(pole.re, symmetric('coefficients', pole.error?.re)),
         ...whenComplex(measured(pole.im ?? '0', symmetric('coefficients', pole.error?.im))),
         String(pole.multiplicity),
