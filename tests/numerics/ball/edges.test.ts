@@ -70,6 +70,65 @@ describe('questions at the ends', () => {
   });
 });
 
+describe('arithmetic', () => {
+  it('what may be anything stays so, but for a factor that is exactly zero', () => {
+    for (const a of [R.ONE, R.ball(3n, 0, 1), R.ball(0n, 0, 1)]) {
+      for (const op of [R.add, R.sub, R.mul]) {
+        expect(op(R.INDETERMINATE, a, 53)).toBe(R.INDETERMINATE);
+        expect(op(a, R.INDETERMINATE, 53)).toBe(R.INDETERMINATE);
+      }
+      expect(R.div(R.INDETERMINATE, a, 53)).toBe(R.INDETERMINATE);
+      expect(R.div(a, R.INDETERMINATE, 53)).toBe(R.INDETERMINATE);
+    }
+    expect(R.mul(R.INDETERMINATE, R.ZERO, 53)).toEqual(R.ZERO);
+    expect(R.sqrt(R.INDETERMINATE, 53)).toBe(R.INDETERMINATE);
+    expect(R.sqrt(R.ZERO, 53)).toEqual(R.ZERO);
+  });
+
+  it('zero added changes nothing but the rounding', () => {
+    const a = R.ball(3n, -7, 0.25);
+    for (const s of [R.add(a, R.ZERO, 53), R.add(R.ZERO, a, 53)]) expect(s).toEqual(R.round(a, 53));
+  });
+
+  it('cancellation loses nothing that was there', () => {
+    for (const n of [20, 70, 100, 500, 3000]) {
+      const large = { mid: 1n, exp: n, rad: 0 };
+      const near = { mid: 1n - (1n << BigInt(n)), exp: 0, rad: 0 };
+      for (const s of [R.add(large, near, 53), R.add(near, large, 53)]) expect(R.midpoint(s).equals(q(1))).toBe(true);
+      const wide = R.add({ ...large, rad: 2 ** -40 }, near, 53);
+      expect(R.radiusBits(wide)).toBeLessThan(n - 39);
+    }
+  });
+
+  it('a quotient whose lowest word fits by chance is not taken for exact', () => {
+    // divisor and shifted dividend both end in 64 zero bits
+    const third = R.div(R.ONE, { mid: 3n << 64n, exp: -64, rad: 0 }, 53);
+    expect(third.rad).toBe(1);
+    mustContain(third, q(1, 3), 'third');
+    const half = R.div({ mid: 3n << 64n, exp: 0, rad: 0 }, { mid: 3n << 65n, exp: 0, rad: 0 }, 53);
+    expect([half.rad, R.toNumber(half)]).toEqual([0, 0.5]);
+  });
+
+  it('a divisor that misses zero by a part in 2^45 is given up, never divided by', () => {
+    for (const n of [60, 1100, 2000]) {
+      const mid = 1n << BigInt(n);
+      const b = R.mul2exp({ mid, exp: 0, rad: Number(mid >> BigInt(Math.max(0, n - 1000))) * (1 - 2 ** -45) }, 0);
+      if (n <= 1000) expect(R.containsZero(b)).toBe(false);
+      const value = R.div(R.ONE, b, 53);
+      expect(value.rad === Infinity || (value.rad > 0 && R.containsRational(value, R.midpoint(b).inv()))).toBe(true);
+    }
+  });
+
+  it('integer powers lose at most a bit, negative ones too', () => {
+    for (const n of [-40, -5, -1, 1, 2, 3, 20, 333])
+      for (const prec of [24, 100, 500]) {
+        const v = R.powInt(R.fromRational(q(7, 3), prec + 60), n, prec);
+        expect(R.accuracyBits(v), `${n}, ${prec} bits`).toBeGreaterThan(prec - 1.5);
+        mustContain(v, q(7, 3).pow(n), { n, prec });
+      }
+  });
+});
+
 describe('powers', () => {
   const LIMIT = 1 << 14;
   const around = (centre: bigint, exp: number, rad: number): Ball => ({ mid: centre, exp, rad });

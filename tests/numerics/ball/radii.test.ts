@@ -18,6 +18,19 @@ const balls = fc
   .tuple(mantissas, exponents, fc.integer({ min: 2 ** 52, max: 2 ** 53 - 1 }), fc.integer({ min: -120, max: 120 }))
   .map(([mid, exp, digits, k]): Ball => ({ mid, exp, rad: digits * 2 ** (k - 52) }));
 const points = fc.tuple(mantissas, exponents).map(([mid, exp]): Ball => ({ mid, exp, rad: 0 }));
+/** Balls about as wide as their midpoint is large, on both sides of touching zero. */
+const wide = fc
+  .tuple(
+    fc.constantFrom(3, 53, 64, 400, 505),
+    fc.bigInt({ min: 0n, max: (1n << 505n) - 1n }),
+    exponents,
+    fc.boolean(),
+    fc.integer({ min: 1, max: 2 ** 52 }),
+  )
+  .map(([n, m, exp, negative, part]): Ball => {
+    const mid = (m >> BigInt(505 - n)) | (1n << BigInt(n - 1));
+    return { mid: negative ? -mid : mid, exp, rad: Number(mid) * (part / 2 ** 51) };
+  });
 const either = fc.oneof({ weight: 4, arbitrary: balls }, { weight: 1, arbitrary: points });
 
 const radius = (a: Ball): Rational => Rational.fromNumber(a.rad).mul(power2(a.exp));
@@ -109,6 +122,46 @@ describe('no radius is too small at a corner, none is much too large', () => {
         }
       }),
       cases(300),
+    );
+  });
+
+  it('the same for balls about as wide as their midpoint is large', () => {
+    fc.assert(
+      fc.property(wide, wide, precision, (a, b, prec) => {
+        const pairs = ends(a).flatMap((x) => ends(b).map((y): [Rational, Rational] => [x, y]));
+        for (const [, op, exact] of OPERATIONS) {
+          sharp(
+            op(a, b, prec),
+            pairs.map(([x, y]) => exact(x, y)),
+            prec,
+            Rational.of(1),
+            { a, b, prec },
+          );
+        }
+        const quotient = R.div(a, b, prec);
+        if (quotient.rad < Infinity) for (const [x, y] of pairs) mustContain(quotient, x.div(y), { a, b, prec });
+        else expect(R.accuracyBits(b)).toBeLessThan(1);
+        const root = R.sqrt(a, prec);
+        if (root.rad === Infinity) expect(R.isPositive(a) && R.accuracyBits(a) > 1).toBe(false);
+        else {
+          const [low, high] = ends(a) as [Rational, Rational];
+          const [from, to] = ends(root) as [Rational, Rational];
+          expect(from.sign() <= 0 || from.mul(from).cmp(low) <= 0).toBe(true);
+          expect(to.mul(to).cmp(high)).toBeGreaterThanOrEqual(0);
+        }
+      }),
+      cases(300),
+    );
+  });
+
+  it('balls of one unit: radii add', () => {
+    fc.assert(
+      fc.property(balls, balls, precision, (a, b, prec) => {
+        const c: Ball = { ...b, exp: a.exp };
+        const corners = ends(a).flatMap((x) => ends(c).map((y) => x.add(y)));
+        sharp(R.add(a, c, prec), corners, prec, Rational.of(1), { a, c, prec });
+      }),
+      cases(100),
     );
   });
 
