@@ -18,13 +18,17 @@ const MOST_DIGITS = 500;
 const COUPLING_DIGITS = 15;
 const COUPLING_BITS = 64;
 
-async function quantityOf(name: string, command: string): Promise<Quantity> {
+async function quantityOf(name: string, { cut }: Given, command: string): Promise<Quantity> {
   const { bubbles } = await import('./rooms-more.js');
   const found = bubbles.quantityNamed(name);
   if (found !== undefined) return found;
   const { series } = await import('./rooms.js');
+  const own =
+    cut === undefined && !/[./]/.test(name)
+      ? ''
+      : `; a series file or catalogue id is diagnosed, and cut at mu_f, by leastterm growth ${name}${cut === undefined ? '' : ` --cut ${cut}`}`;
   throw new UsageError(
-    `no quantity "${name}" with an exact large-beta_0 limit${series.suggestion(name, bubbles.QUANTITY_NAMES)}; known: ${bubbles.QUANTITY_NAMES.join(', ')}`,
+    `no quantity "${name}" with an exact large-beta_0 limit${series.suggestion(name, bubbles.QUANTITY_NAMES)}; known: ${bubbles.QUANTITY_NAMES.join(', ')}${own}`,
     command,
   );
 }
@@ -89,7 +93,7 @@ function checkSizes({ order, digits }: Given, command: string): void {
 export async function bubbleQuestion(name: string, call: Call, command: string): Promise<BubbleQuestion> {
   const { given } = call;
   checkSizes(given, command);
-  const quantity = await quantityOf(name, command);
+  const quantity = await quantityOf(name, given, command);
   const { numerics } = await import('./rooms.js');
   const ratio = numerics.exact(given.mu === undefined ? numerics.Rational.ONE : await ratioOf('mu', given.mu, command));
   const flavours = given.flavours ?? quantity.flavours;

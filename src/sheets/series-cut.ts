@@ -70,11 +70,12 @@ function sums(page: Page, values: SeriesCutValues): void {
     { label: 'sum at this cut', text: values.sum ?? '' },
     ...(values.spread === undefined
       ? []
-      : [{ label: 'moves with μ_f', text: `by ${rough(values.spread)} over the cuts of the table` }]),
+      : [{ label: 'moves with μ_f', text: `by no more than ${rough(values.spread)} over the cuts of the table` }]),
     { label: 'last term, k > μ_f', text: plusMinus(values.truncation) },
     ...(values.strengthError === undefined
       ? []
       : [{ label: 'from the error of λ', text: plusMinus(values.strengthError) }]),
+    ...(values.inputError === undefined ? [] : [{ label: 'from the coupling', text: plusMinus(values.inputError) }]),
     ...(values.ambiguity === undefined
       ? []
       : [

@@ -201,6 +201,17 @@ test('an ultraviolet singularity that is nearer is named, and the strength is no
   expect(Number(first!.error)).toBeGreaterThanOrEqual(0.98 * Math.abs(Number(first!.value) - Number(other!.value)));
 });
 
+test('an error of the coupling goes through both parts', async () => {
+  const series = await loadSeries('pole-msbar', { flavours: 4 });
+  const value = (alpha: string): number => Number(granted(ask(series, alpha, '0.5')).cut.values!.sum);
+  const error = { plus: q('0.002'), minus: q('0.002') };
+  const { values } = granted(
+    seriesCut({ series, at: { ...at('0.22'), error }, cut: q('0.5'), digits: 12, request: {} }),
+  ).cut;
+  expect(Number(values!.inputError) / ((value('0.222') - value('0.218')) / 2)).toBeCloseTo(1, 1);
+  expect(granted(ask(series, '0.22', '0.5')).cut.values!.inputError).toBeUndefined();
+});
+
 test('without a coupling: coefficients and verdicts, no sums', async () => {
   const result = granted(seriesCut({ series: await pure(6), cut: q('0.5'), digits: 12, request: {} }));
   expect(result.cut.terms).toHaveLength(6);

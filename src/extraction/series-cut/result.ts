@@ -28,8 +28,10 @@ export interface SeriesCutValues {
   /** Distance of the largest from the smallest sum among the cuts, and the largest last term of k > mu_f. */
   readonly spread?: string;
   readonly truncation: string;
-  /** How the sum moves with the strength within its error. */
+  /** How the sum moves with the strength within its error; absent where the file states it. */
   readonly strengthError?: string;
+  /** From the error of the coupling. */
+  readonly inputError?: string;
   /** Why there is no part k < mu_f as a number. */
   readonly refused?: { readonly reason: string; readonly remedy: string };
   readonly rows: readonly SeriesCutRow[];

@@ -1,5 +1,5 @@
 /** @module The sums of a cut series: k > μ_f in fixed order, k < μ_f by its principal value, and how little both together move with μ_f. */
-import { Rational, mulExact, subExact, toNumberExact } from '../../numerics/index.js';
+import { Rational, exact, mulExact, subExact, toNumberExact } from '../../numerics/index.js';
 import type { Exact } from '../../numerics/index.js';
 import { divisorSize, evolveAlpha, isRefusal, refuse } from '../../qcd/index.js';
 import type { Refusal } from '../../qcd/index.js';
@@ -39,6 +39,13 @@ function sumBelow(series: Series, setting: Setting, alpha: number, cut: number):
   return { pv: front * sum.pv, im: Math.abs(front) * sum.im };
 }
 
+/** Doubles tell sums apart no better. */
+const ROUNDING = 1e-15;
+
+/** Distance of the largest from the smallest, not below their rounding. */
+const spreadOf = (sums: readonly number[]): number =>
+  Math.max(Math.max(...sums) - Math.min(...sums), ROUNDING * Math.max(...sums.map(Math.abs)));
+
 interface Row {
   readonly cut: Rational;
   readonly high: number;
@@ -73,6 +80,19 @@ function rowText({ cut, high, lastTerm, low }: Row): SeriesCutRow {
   };
 }
 
+/** Half the difference of the sums at both ends of the coupling's error; undefined where it has none, or one end does not reach μ_f. */
+function inputError(question: SeriesCutQuestion, setting: Setting, lambda: Exact, at: Uncertain): number | undefined {
+  if (at.error === undefined) return undefined;
+  const { plus, minus } = at.error;
+  const centre = toNumberExact(at.value);
+  const [up, down] = [centre + plus.toNumber(), centre - minus.toNumber()].map((alpha) => {
+    const x = exact(Rational.fromNumber((toNumberExact(setting.e.x) * alpha) / centre));
+    const { high, low } = rowAt(question, { ...setting, e: { ...setting.e, x } }, lambda, alpha, question.cut);
+    return isRefusal(low) ? undefined : high + low.pv;
+  });
+  return up === undefined || down === undefined ? undefined : Math.abs(up - down) / 2;
+}
+
 export function valuesOf(
   question: SeriesCutQuestion,
   setting: Setting,
@@ -100,6 +120,7 @@ export function valuesOf(
   // The sum moves with λ by the part that the known terms have not taken out.
   const [size, whole] = [toNumberExact(strength.value), toNumberExact(e.additive) + sumOf(e, e.coefficients)];
   const perLambda = (own.high + low.pv - whole) / size;
+  const input = inputError(question, setting, strength.value, at);
   return {
     ...shared,
     low: indicative(low.pv, SHOWN),
@@ -108,7 +129,8 @@ export function valuesOf(
     ...(isRefusal(Q)
       ? {}
       : { inGeV: { value: indicative(low.pv * toNumberExact(Q) ** d, 4), unit: d === 1 ? 'GeV' : `GeV^${d}` } }),
-    ...(sums.length < 2 ? {} : { spread: indicative(Math.max(...sums) - Math.min(...sums), 2) }),
-    strengthError: indicative(Math.abs(perLambda) * strength.error, 2),
+    ...(sums.length < 2 ? {} : { spread: indicative(spreadOf(sums), 2) }),
+    ...(input === undefined ? {} : { inputError: indicative(input, 2) }),
+    ...(strength.error > 0 ? { strengthError: indicative(Math.abs(perLambda) * strength.error, 2) } : {}),
   };
 }
