@@ -30,18 +30,22 @@ export function mag(m: number, e = 0): Mag {
   return { m: m * 2 ** -half * 2 ** (half - k) * UP, e: e + k };
 }
 
+/**
+ * |mid| without its `cut` lowest bits; cut > 0 leaves 60 or 61, so that what is lost is below a relative 2^-58. UP and DOWN cover it, and a
+ * radius that underflows beside it.
+ */
+const leading = (mid: bigint, cut: number): number => Math.abs(Number(cut > 0 ? mid >> BigInt(cut) : mid));
+
 /** Upper bound of |x| over the ball. */
 export function magUpper(x: Ball): Mag {
   const cut = Math.max(0, bitLength(x.mid) - 60);
-  const top = Math.abs(Number(cut > 0 ? x.mid >> BigInt(cut) : x.mid)) + (cut > 0 ? 1 : 0);
-  return mag((top + x.rad * 2 ** -cut + (cut > 0 && x.rad > 0 ? 2 ** -500 : 0)) * UP, x.exp + cut);
+  return mag((leading(x.mid, cut) + x.rad * 2 ** -cut) * UP, x.exp + cut);
 }
 
 /** Lower bound of |x| over the ball, 0 when it may hold zero. */
 export function magLower(x: Ball): Mag {
   const cut = Math.max(0, bitLength(x.mid) - 60);
-  const top = Math.abs(Number(cut > 0 ? x.mid >> BigInt(cut) : x.mid)) - (cut > 0 ? 1 : 0);
-  const low = top * DOWN - x.rad * 2 ** -cut * UP - (cut > 0 && x.rad > 0 ? 2 ** -500 : 0);
+  const low = leading(x.mid, cut) * DOWN - x.rad * 2 ** -cut * UP;
   return low > 0 ? mag(low * DOWN, x.exp + cut) : NONE;
 }
 
