@@ -58,6 +58,23 @@ describe('leastterm truncation', () => {
     expect(stderr).toMatch(message);
   });
 
+  test('competing growth has a section of its own, and assess says the same', async () => {
+    const text =
+      'first power: 0\nsingularities: [{ t: -1, exponent: 1 }, { t: 2, exponent: 1 }]\ncoefficients: [4, 1/2, 7/2, -15/4, 57/2, -435/4, 3015/4, -39375/8, 81585/2]\n';
+    const { stdout } = await run('truncation - --at 0.2', text);
+    expect(stdout).toMatch(/Competing growth: where to stop/);
+    expect(stdout).toMatch(/bracket +orders 4 to 10: sums from 4\.\d+ to 4\.\d+ through order 8/);
+    expect(stdout).toMatch(/smallest \|term\| alone is not trusted/);
+    const { competing } = JSON.parse((await run('truncation - --at 0.2 --json', text)).stdout) as {
+      competing: { orders: number[]; sums: { low: string; high: string } };
+    };
+    expect(competing.orders).toEqual([4, 10]);
+    const assessed = (await run('assess - --at 0.2', text)).stdout;
+    expect(assessed).toMatch(/bracket +orders 4 to 10/);
+    const stop = Math.abs(Number(/error of stopping +± ([\d.]+)/.exec(assessed)![1]));
+    expect(stop).toBeGreaterThan((Number(competing.sums.high) - Number(competing.sums.low)) / 2);
+  });
+
   test('without a coupling it asks for one; with one coefficient it says what is missing', async () => {
     expect((await run('truncation adler')).status).toBe(2);
     const { status, stdout } = await run('truncation - --at 0.3', '1\n');
