@@ -161,7 +161,7 @@ function toSum(e: Expansion, entry: Entry, b: Rational, digits: number, termsUse
     );
   }
   if (entry.approximant.deficiency > 0)
-    notes.push('degenerate block: the transform is rational as far as the coefficients show');
+    notes.push(`degenerate block: the transform is rational as far as the ${termsUsed} coefficients used show`);
   if (entry.approximant.poles.some((p) => p.role === 'noise doublet'))
     notes.push('pole–zero doublets at the level of the coefficient noise are left out');
   if (entry.suspicion !== undefined) notes.push(entry.suspicion);

@@ -16,6 +16,9 @@ export function cleanPart(e: Expansion, growth: Growth, most: number): Expansion
   return { ...e, coefficients: e.coefficients.slice(0, usable), relativeErrors: e.relativeErrors.slice(0, usable) };
 }
 
+/** Do singularities compete in the terms? One may then be small because they cancel in it, and says little about the next. */
+export const mayCancel = (growth: Growth): boolean => growth.flags.some((f) => f.code === 'competing-singularities');
+
 /** Refusals that any method shares: errors larger than values, too few coefficients, x not positive. */
 export function inputObjection(e: Expansion, growth: Growth, variant: string, fewest: number): Refusal | undefined {
   if (growth.flags.some((f) => f.code === 'errors-exceed-values'))

@@ -1,9 +1,12 @@
 /**
  * @module Fixed order: the plain partial sum of all known terms.
  * Truncation error: the last non-zero term; where the growth is geometric or convergent, not less than the tail that
- * the last ratio ρ < 1 implies, |T| ρ/(1−ρ). Reference: common practice, no source.
+ * the last ratio ρ < 1 implies, |T| ρ/(1−ρ); where singularities compete, not less than the term before. Reference: common
+ * practice, no source.
  */
 import { R } from '../numerics/index.js';
+import type { Growth } from '../growth/index.js';
+import { mayCancel } from './eligibility.js';
 import type { Prescription } from './prescription.js';
 import { partialSums, refusal, terms, toDigits } from './prescription.js';
 
@@ -35,7 +38,7 @@ export const fixedOrder: Prescription = {
           ? 0
           : lastStep(
               t.map((b) => Math.abs(R.toNumber(b))),
-              growth.verdict === 'geometric' || growth.verdict === 'convergent',
+              growth,
             ),
         termsUsed: N,
         trust: exactSum ? 'converged' : 'indicative',
@@ -46,12 +49,15 @@ export const fixedOrder: Prescription = {
   },
 };
 
-/** Last non-zero term (an exact zero at the end of a lacunary series says nothing), or the geometric tail if that is larger. */
-function lastStep(sizes: readonly number[], converging: boolean): number {
+/** Last non-zero term (an exact zero at the end of a lacunary series says nothing), or what is larger: see above. */
+function lastStep(sizes: readonly number[], growth: Growth): number {
   const standing = sizes.filter((size) => size > 0);
   const last = standing[standing.length - 1] ?? 0;
   const before = standing[standing.length - 2];
-  if (!converging || before === undefined || !(last < before)) return last;
+  if (before === undefined) return last;
+  if (mayCancel(growth)) return Math.max(last, before);
+  const converging = growth.verdict === 'geometric' || growth.verdict === 'convergent';
+  if (!converging || !(last < before)) return last;
   const ratio = last / before;
   return Math.max(last, (last * ratio) / (1 - ratio));
 }

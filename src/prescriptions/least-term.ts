@@ -4,13 +4,13 @@
  * Cut at the smallest term T_k. Alternating: S_< + T_k/2. Same sign: the same half-term rule, unless the position t* and
  * exponent γ of the leading singularity are known: then the partial sum with the number of terms nearest to
  * x − b − 1/3, x = t* / α, b = γ − 1, where the principal-value remainder vanishes.
- * Truncation error: |T_k|.
+ * Truncation error: |T_k|; where singularities compete, not less than its neighbours.
  * Reference: F. W. J. Olver, Asymptotics and Special Functions (1974) ch. 14; R. B. Dingle, Asymptotic Expansions (1973)
  * (both from memory); the constant 1/3 follows from the terminant expansion, checked numerically.
  */
 import { R, toNumberExact } from '../numerics/index.js';
 import type { Expansion } from '../series/index.js';
-import { inputObjection } from './eligibility.js';
+import { mayCancel, inputObjection } from './eligibility.js';
 import type { Prescription } from './prescription.js';
 import { leastTerm, partialSums, refusal, terms, toDigits } from './prescription.js';
 
@@ -77,13 +77,13 @@ export const leastTermSum: Prescription = {
       },
       (v) => v,
     );
-    const size = Math.abs(R.toNumber(t[k]!));
+    const size = (n: number): number => (t[n] === undefined ? 0 : Math.abs(R.toNumber(t[n])));
     return [
       {
         kind: 'sum',
         variant: useCount ? `${count} terms` : `half of the term of order ${k + e.power}`,
         value: half,
-        truncation: size,
+        truncation: mayCancel(growth) ? Math.max(size(k - 1), size(k), size(k + 1)) : size(k),
         termsUsed: useCount ? count : k + 1,
         trust: 'indicative',
         notes: useCount ? ['number of terms nearest to x − b − 1/3, where the principal-value remainder vanishes'] : [],

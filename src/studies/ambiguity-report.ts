@@ -10,6 +10,7 @@ import type { AmbiguityReport, PowerCorrectionReport } from './assessment.js';
 import type { Expanded } from './expand.js';
 import { estimateText, exactText, indicative } from './figures.js';
 import { LAMBDA_LOOPS } from './lambda.js';
+import { outclassed } from './outclassed.js';
 import { ambiguityOverPower } from './strength-report.js';
 import type { LeadingStrength } from './strength-report.js';
 import { hardScaleGeV, lambdaOverQ } from './summary.js';
@@ -20,9 +21,16 @@ import type { Evaluated } from './values.js';
 const LATERAL_ORDER = ['singularity-model', 'borel-leroy-pade', 'borel-pade', 'borel-pade-2', 'terminant'];
 
 /** The lateral sums that the ambiguity is read from: those of the preferred value, a converged sum, then the order above. */
-export function lateralSource(values: readonly Evaluated[], preferred?: Evaluated): LateralSource | undefined {
+export function lateralSource(
+  values: readonly Evaluated[],
+  count: number,
+  preferred?: Evaluated,
+): LateralSource | undefined {
   const candidates = values.flatMap((v) =>
-    v.outcome.kind === 'sum' && v.outcome.central === true && v.outcome.imaginary !== undefined
+    v.outcome.kind === 'sum' &&
+    v.outcome.central === true &&
+    v.outcome.imaginary !== undefined &&
+    (v === preferred || !outclassed(v, values, count))
       ? [{ v, im: v.outcome.imaginary, trust: v.outcome.trust }]
       : [],
   );
@@ -70,7 +78,7 @@ export function ambiguityReport(
     return none('the coefficient errors exceed the coefficients: no ambiguity can be stated');
   if (growth.verdict === 'superfactorial' && growth.order !== 2)
     return none('the coefficients grow faster than any (kn)!: no ambiguity can be stated');
-  const found = lateralSource(values, more.preferred);
+  const found = lateralSource(values, expanded.expansion.coefficients.length, more.preferred);
   // An approximant without a positive pole proves nothing where neither the terms nor the file tell of a singularity.
   const lateral =
     found?.im === 0 && growth.verdict === 'undecided' && expanded.expansion.stated.length === 0 ? undefined : found;

@@ -6,10 +6,13 @@
  *   1. growth terminating, convergent or geometric: the fixed-order sum;
  *   2. fewer than four coefficients, or growth undecided with no singularity stated: the fixed-order sum (nothing
  *      pretends to resum);
- *   3. a converged Borel–Padé sum (two orders agree to 1e−6), Leroy before plain, order 2 where the growth is (2n)!;
+ *   3. a converged Borel–Padé sum (two orders agree to 1e−6), Leroy before plain, order 2 where the growth is (2n)!, unless a
+ *      known coefficient is an outlier;
  *   4. the singularity model, where positions and exponents are stated and its strengths do not cancel;
- *   5. Borel–Leroy–Padé, then Borel–Padé (central entry);
+ *   5. Borel–Leroy–Padé, then Borel–Padé (central entry), unless it is outclassed (below);
  *   6. least term with terminant; 7. least term; 8. fixed order.
+ * Outclassed is a sum from fewer than half of the coefficients (noise in them leaves no more to rational approximants) whose
+ * error is larger than that of the least term or of fixed order.
  * Truncation error: the prescription's own, never below the half-spread of rungs 4 and 5 where both stand.
  * Ambiguity: |Im|/π of the value's own lateral sums; of another prescription's, or the least term, where it has none. Input: propagated. Nothing is averaged.
  * Other rules, chosen by name (verdict-rule.ts): fixed-order, least-term, prescription:NAME.
@@ -20,6 +23,7 @@ import type { Growth } from '../growth/index.js';
 import type { Sum } from '../prescriptions/index.js';
 import type { Standing, VerdictReport } from './assessment.js';
 import { ballText, indicative } from './figures.js';
+import { central, outclassed } from './outclassed.js';
 import { writeVerdict } from './rounding.js';
 import { restsOnPattern } from './values.js';
 import type { Evaluated } from './values.js';
@@ -46,10 +50,6 @@ const DIGITS = 15;
 interface Choice {
   readonly v: Evaluated;
   readonly rung: string;
-}
-
-function central(values: readonly Evaluated[], name: string): Evaluated | undefined {
-  return values.find((v) => v.prescription.name === name && v.outcome.kind === 'sum' && v.outcome.central === true);
 }
 
 /** The value that a rule picks, for the ambiguity to be read from its own lateral sums; undefined when there is none. */
@@ -82,7 +82,7 @@ function choose(values: readonly Evaluated[], growth: Growth, count: number): Ch
     return fixed === undefined
       ? 'there are no terms'
       : { v: fixed, rung: 'growth undecided and no singularity stated' };
-  for (const name of BOREL) {
+  for (const name of hasOutlier(growth) ? [] : BOREL) {
     const v = central(values, name);
     if (v?.outcome.kind === 'sum' && v.outcome.trust === 'converged') return { v, rung: 'converged Borel sum' };
   }
@@ -93,6 +93,7 @@ function choose(values: readonly Evaluated[], growth: Growth, count: number): Ch
       continue;
     // A value below its own errors is no value while another rung stands.
     if (name !== 'fixed-order' && exceeds(v, v.outcome)) continue;
+    if (outclassed(v, values, count)) continue;
     return { v, rung: v.prescription.title };
   }
   return 'every prescription refused';
@@ -133,18 +134,23 @@ function pick(values: readonly Evaluated[], growth: Growth, count: number, rule:
 }
 
 /** Half-spread of the model and the Borel–Padé sums that stand. */
-function spread(values: readonly Evaluated[], chosen: Evaluated): number {
+function spread(values: readonly Evaluated[], chosen: Evaluated, count: number): number {
   const family = ['singularity-model', 'borel-leroy-pade', 'borel-pade'];
   if (!family.includes(chosen.prescription.name)) return 0;
   const numbers = family.flatMap((name) => {
     const v = central(values, name);
-    return v?.outcome.kind === 'sum' ? [R.toNumber(v.outcome.value)] : [];
+    return v?.outcome.kind === 'sum' && !outclassed(v, values, count) ? [R.toNumber(v.outcome.value)] : [];
   });
   return numbers.length < 2 ? 0 : (Math.max(...numbers) - Math.min(...numbers)) / 2;
 }
 
 const ENDS = 'all further coefficients are zero, as the last known ones are';
 const PATTERN = 'all further coefficients follow the rational Borel transform of the known ones';
+/** The same where a known coefficient breaks the law of the others, and the sum stops before it. */
+const patternBefore = (used: number): string =>
+  `the outlier is an error and all further coefficients follow the rational Borel transform of the first ${used}`;
+
+const hasOutlier = (growth: Growth): boolean => growth.flags.some((f) => f.code === 'outlier');
 
 /** |Im|/π of the value's own lateral sums; where it has none, the number from elsewhere with its origin. */
 function ownAmbiguity(v: Evaluated, elsewhere: Convention): { readonly value: number; readonly origin: string } {
@@ -169,7 +175,10 @@ export function verdict(
   const truncation =
     outcome.truncation === undefined
       ? undefined
-      : Math.max(outcome.truncation, by.kind !== 'ladder' || outcome.trust === 'converged' ? 0 : spread(values, v));
+      : Math.max(
+          outcome.truncation,
+          by.kind !== 'ladder' || outcome.trust === 'converged' ? 0 : spread(values, v, count),
+        );
   const stated =
     ambiguity === undefined || v.prescription.name === 'fixed-order' ? undefined : ownAmbiguity(v, ambiguity);
   const amount = stated !== undefined && stated.value > 0 ? stated.value : undefined;
@@ -179,8 +188,11 @@ export function verdict(
     { label: 'input', error: v.input },
   ].flatMap((p) => (p.error !== undefined && p.error > 0 ? [{ label: p.label, error: p.error }] : []));
   const exactSum = truncation === 0 && parts.length === 0 && growth.verdict === 'terminating';
-  const standing: Standing = exactSum ? 'certified' : outcome.trust;
-  const assumption = exactSum ? ENDS : restsOnPattern(outcome) ? PATTERN : undefined;
+  // A value that leaves out a known coefficient has not converged to the sum of the series as given.
+  const apart = hasOutlier(growth) && outcome.termsUsed < count;
+  const standing: Standing = exactSum ? 'certified' : apart ? 'indicative' : outcome.trust;
+  const rational = apart ? patternBefore(outcome.termsUsed) : PATTERN;
+  const assumption = exactSum ? ENDS : restsOnPattern(outcome) ? rational : undefined;
   const value = ballText(outcome.value, DIGITS);
   const unknown = v.inputUnknown === true ? '; input error not known' : '';
   const printed = `${writeVerdict(value, parts)}${unknown}${assumption === undefined ? '' : `, if ${assumption}`}`;

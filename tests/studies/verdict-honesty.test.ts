@@ -1,0 +1,74 @@
+/** Verdicts of noisy, broken and competing series against exact sums (sources: see tests/outside/bench-assess.test.ts). */
+import { describe, expect, test } from 'vitest';
+import { exact, Rational } from '../../src/numerics/index.js';
+import { parseSeries } from '../../src/series/index.js';
+import type { Series, Uncertain } from '../../src/series/index.js';
+import { assess } from '../../src/studies/index.js';
+import type { Assessment } from '../../src/studies/index.js';
+import { benchFile, benchSeries } from '../support/bench.js';
+
+const at = (x: string): Uncertain => ({ value: exact(Rational.parse(x)!), text: x });
+const run = (series: Series, x: string): Assessment => assess(series, at(x), { digits: 15, request: {} });
+const sizes = (v: Assessment['verdict']): number =>
+  [v.truncation, v.ambiguity, v.input].reduce((sum, text) => sum + Number(text ?? 0), 0);
+
+describe('a long series with errors of per cent', () => {
+  // Σ n! x^n, the third and later coefficients off by their own errors of 1 %, up and down in turn.
+  const factorials = Array.from({ length: 30 }, (_, n) =>
+    Array.from({ length: n }, (_none, k) => k + 1).reduce((a, b) => a * b, 1),
+  );
+  const rows = factorials.map((c, n) => (n < 2 ? `${n},${c},` : `${n},${c * (n % 2 === 0 ? 1.01 : 0.99)},${c * 0.01}`));
+  const x = '1/20';
+  const pv = Number(benchFile('s02_euler_nonalternating').references.find((r) => r.x === x)!.pv);
+
+  test.each([
+    ['without a singularity', ''],
+    ['with the singularity stated', 'singularities:\n  - { t: 1, exponent: 1, kind: other }\n'],
+  ])('%s: approximants that noise confines to the first few are passed over', async (_name, more) => {
+    const values = rows.map((row) => {
+      const [, value, error] = row.split(',');
+      return `  - { value: ${value}${error === '' ? '' : `, error: ${error}`} }\n`;
+    });
+    const {
+      verdict,
+      values: table,
+      ambiguity,
+    } = run(await parseSeries(`variable: x\n${more}coefficients:\n${values.join('')}`, { name: 'noisy' }), x);
+    const pade = table.find((v) => v.prescription === 'borel-pade' && v.central === true);
+    expect(2 * (pade?.termsUsed ?? 0)).toBeLessThan(30);
+    expect(verdict.prescription).not.toContain('pade');
+    expect(Math.abs(Number(verdict.value) - pv)).toBeLessThan(2 * sizes(verdict));
+    // The noise of 1 % in 2 x² sets the scale; an approximant from three coefficients is off by more than it.
+    expect(sizes(verdict)).toBeLessThan(0.01 * 2 * 0.05 ** 2 * 3);
+    for (const c of ambiguity.conventions) expect(c.origin).not.toContain('pade');
+  });
+});
+
+describe('an outlier', () => {
+  test('makes the verdict conditional and never converged', () => {
+    const { verdict } = run(benchSeries(benchFile('s138_sign_typo')), '1/10');
+    expect(verdict.standing).toBe('indicative');
+    expect(verdict.rule).not.toContain('converged');
+    expect(verdict.assumption).toMatch(/^the outlier is an error and all further coefficients follow .* first 7$/);
+  });
+  test('is not seen in the series without it', () => {
+    const { verdict } = run(benchSeries(benchFile('s02_euler_nonalternating'), 20), '1/10');
+    expect(verdict.standing).toBe('converged');
+    expect(verdict.assumption).not.toContain('outlier');
+  });
+});
+
+describe('competing singularities', () => {
+  const file = benchFile('s151_demo_vellum_adler');
+  // Eight terms of the same sign; the next ones alternate. The eighth is small since the two singularities cancel in it.
+  test.each(file.references.map((r) => [r.x, Number(r.pv)] as const))(
+    'at x = %s the error does not rest on one small term',
+    (x, pv) => {
+      const { verdict, values, cautions } = run(benchSeries(file, 8), x);
+      expect(cautions.map((c) => c.code)).toContain('competing-singularities');
+      expect(verdict.prescription).toContain('fixed-order');
+      const fixed = values.find((v) => v.prescription === 'fixed-order')!;
+      expect(Math.abs(Number(fixed.value) - pv)).toBeLessThan(1.5 * Number(fixed.truncationError));
+    },
+  );
+});
