@@ -186,6 +186,19 @@ describe('beside the exact cut of the same bubble chain', () => {
   });
 });
 
+// Invented series with known Borel transforms at α_s/π = 1/20; principal values by mpmath and PARI/GP, 50 digits.
+test.each([
+  ['marrowgate-mass', 0.0869870374025461, 0.0082736962],
+  ['vellum', 0.0620419394982386, 4.27e-6],
+])('%s: the sum of eight terms is the principal value to the last term above the cut', async (id, pv, im) => {
+  const series = await loadSeries(id);
+  const question = { at: at('0.15707963267948966'), cut: q('0.7'), order: 8, digits: 12, request: {} };
+  const { values } = granted(seriesCut({ series, ...question })).cut;
+  expect(Math.abs(Number(values!.sum) - pv)).toBeLessThan(Number(values!.truncation));
+  expect(Math.abs(Number(values!.whole) - pv)).toBeGreaterThan(Math.abs(Number(values!.sum) - pv));
+  expect((Number(values!.ambiguity) * Math.PI) / im).toBeCloseTo(1, 2);
+});
+
 test('the pole mass loses its leading renormalon', async () => {
   const { cut } = granted(ask(await loadSeries('pole-msbar', { flavours: 4 }), '0.22', '0.4'));
   expect(cut.singularity.dimension).toBe('1');
