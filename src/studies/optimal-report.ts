@@ -50,7 +50,7 @@ export function optimalReport(
     statement:
       (observed === undefined
         ? 'the terms still fall at the last known order: the series has not begun to diverge at this coupling'
-        : `the term of order ${observed.power} is the smallest; stopping there leaves an error of its size`) +
+        : `the term of order ${observed.power} is the smallest${lines.competing === undefined ? '; stopping there leaves an error of its size' : ''}`) +
       (lines.competing !== undefined
         ? `. ${capital(lines.competing.statement)}`
         : competing

@@ -10,8 +10,8 @@ import {
   seriesCut,
 } from '../../src/extraction/index.js';
 import type { BubbleCutResult, LowMomentumSum, SeriesCutResult } from '../../src/extraction/index.js';
-import { Rational, exact, gammaDouble, mulExact, toNumberExact } from '../../src/numerics/index.js';
-import { betaCoefficients, evolveAlpha, isRefusal } from '../../src/qcd/index.js';
+import { R, Rational, exact, exactReal, gammaDouble, log, mulExact, toNumberExact } from '../../src/numerics/index.js';
+import { betaCoefficients, changeScale, evolveAlpha, isRefusal } from '../../src/qcd/index.js';
 import type { Refusal } from '../../src/qcd/index.js';
 import { loadSeries, parseSeries } from '../../src/series/index.js';
 import type { Series } from '../../src/series/index.js';
@@ -145,6 +145,23 @@ describe('a pure series', () => {
     for (const { sum } of values!.rows) expect(Number(sum) / all).toBeCloseTo(1, 5);
     expect(Number(values!.spread)).toBeLessThan(1e-5 * all);
   });
+});
+
+test('coefficients at another scale are cut at the same place', async () => {
+  const series = await pure(10);
+  const beta = betaCoefficients(4, 'pi');
+  const twice = exactReal((prec) => R.mul2exp(log(R.fromNumber(2), prec), 1));
+  const moved = changeScale({ coefficients: series.coefficients.map((c) => c.value), firstPower: 1 }, beta, twice);
+  const other: Series = {
+    ...series,
+    scaleRatio: exact(2),
+    coefficients: moved.map((value) => ({ value, text: '', status: 'computed' as const })),
+  };
+  const alpha = granted({ a: evolveAlpha({ alpha: 0.15, from: 1, to: 2, flavours: 4, loops: 5 }) }).a as number;
+  const [here, there] = [granted(ask(series, '0.15', '0.6')).cut, granted(ask(other, String(alpha), '0.6')).cut];
+  expect(Number(there.strengths[0]!.value)).toBeCloseTo(7, 3);
+  expect(Number(there.values!.low) / Number(here.values!.low)).toBeCloseTo(1, 4);
+  expect(Number(there.values!.sum) / Number(here.values!.sum)).toBeCloseTo(1, 4);
 });
 
 describe('beside the exact cut of the same bubble chain', () => {
