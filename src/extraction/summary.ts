@@ -42,7 +42,7 @@ export function quotedRow<T extends Quotable>(
   const report = verdict(values, stage.growth, stage.expanded.expansion.coefficients.length, undefined);
   const name = report.prescription?.split(':')[0];
   const row = candidates.find((r) => r.prescription.name === name);
-  const among = candidates.length === rows.length ? '' : ', among the rows without a caution';
+  const among = candidates.length === rows.length ? '' : ', among the rows whose sum bears no caution';
   return row === undefined
     ? { row: candidates[0] ?? first, rule: `the first that stands${among}` }
     : { row, rule: `${report.rule}${among}` };

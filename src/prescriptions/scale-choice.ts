@@ -25,8 +25,8 @@ export function runningObjection(e: Expansion, variant: string): Refusal | undef
   if (e.running !== undefined) return undefined;
   return refusal(
     variant,
-    'the expansion variable does not run',
-    'state a coupling and a number of flavours in the series file',
+    'the expansion variable does not run, or its beta function is not known',
+    'state a coupling, its scheme (MSbar, or another known one) and a number of flavours in the series file',
   );
 }
 

@@ -239,7 +239,7 @@ export function powerReport(
   });
   const missing = [
     ...(Q === undefined ? ['the hard scale Q'] : []),
-    ...(lambda === undefined ? ['Lambda (needs alpha_s and n_f)'] : []),
+    ...(lambda === undefined ? ['Lambda (needs an MSbar coupling and n_f)'] : []),
   ];
   return {
     dimension: String(d),

@@ -128,7 +128,7 @@ export function hardScaleOf(series: Series): Exact | Refusal {
   if (hardScale === undefined) {
     return refuse(
       `${series.id} has no hard scale: it does not say at which Q it stands`,
-      'write "hard scale: 1.777 GeV" into its file',
+      `write "hard scale: 1.777 GeV" into its file; of a catalogue series into a copy, made by: leastterm catalogue show ${series.id} -q -o copy.yaml`,
     );
   }
   return hardScale.unit === 'GeV' ? hardScale.value : divExact(hardScale.value, exact(1000));

@@ -70,7 +70,12 @@ describe('refused, with the remedy', () => {
     ['flavours: 3\n', '', /number of flavours/, /flavours: 3/],
     ['flavours: 3', 'flavours: 2', /no threshold is known between 2 and 3/, /fixed n_f/],
     ['scale ratio: 1\n', '', /renormalisation scale/, /scale ratio: 1/],
-    ['hard scale: 2 GeV\n', '', /no hard scale/, /hard scale: 1.777 GeV/],
+    [
+      'hard scale: 2 GeV\n',
+      '',
+      /no hard scale/,
+      /hard scale: 1.777 GeV" into its file; of a catalogue series .* show test -q/,
+    ],
     ['hard scale: 2 GeV', 'hard scale: 200 MeV', /Landau pole/, /higher scale/],
   ])('%s becomes "%s"', async (from, to, reason, remedy) => {
     const series = await parseSeries(file.replace(from, to), { name: 'test', form: 'yaml' });

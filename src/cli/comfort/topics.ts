@@ -43,7 +43,7 @@ export const TOPICS: readonly Topic[] = [
     name: 'verdict',
     summary: 'which number the verdict takes, and how to change it',
     paragraphs: [
-      'The verdict goes down a ladder: the sum of the most structured prescription that accepts the series and whose record is not refuted, then Borel sums, then the least term with its terminant, then the fixed-order sum. The rung is printed with the value, the rule stands in docs/verdict.md, and --verdict-rule changes it. Nothing is averaged.',
+      'The verdict goes down a ladder: a Borel-Pade sum that has converged, then the singularity model where positions and exponents are known, then Borel sums, then the least term with its terminant, then the fixed-order sum. Convergent and very short series get the fixed-order sum at once. The record of a prescription is shown but changes nothing. The rung is printed with the value, the rule stands in docs/verdict.md, and --verdict-rule changes it. Nothing is averaged.',
     ],
   },
   {
