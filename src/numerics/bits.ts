@@ -38,9 +38,9 @@ export function doubleBits(x: number): number {
   return ((u32[HIGH]! >>> 20) & 0x7ff) - 1022;
 }
 
-/** n·2^k rounded toward minus infinity. */
+/** n·2^k rounded toward minus infinity (a shift by a negative count goes to the right). */
 export function shift(n: bigint, k: number): bigint {
-  return k >= 0 ? n << BigInt(k) : n >> BigInt(-k);
+  return n << BigInt(k);
 }
 
 /** Floor of the square root of n >= 0 (Newton from a double start). */
