@@ -10,9 +10,15 @@ const INDICATIVE_DIGITS = 4;
 /** Rounding of estimates that were computed in doubles. */
 const DOUBLE_ROUNDING = 1e-14;
 
-/** Certain digits of an enclosure, at most `digits`. */
+/** A number enclosed so closely about zero is written 0. */
+const ZERO_PLACES = 30;
+const ABOUT_ZERO = /^±1e-(\d+)$/;
+
+/** Certain digits of an enclosure, at most `digits`; a wide one about zero is written `±1e5`, a bound on its size. */
 export function ballText(b: Ball, digits: number): string {
-  return toDecimal(b, digits).text;
+  const { text } = toDecimal(b, digits);
+  const bound = ABOUT_ZERO.exec(text);
+  return bound !== null && Number(bound[1]) >= ZERO_PLACES ? '0' : text;
 }
 
 /** Digits of an exactly known number, at most `digits`; an exact rational that is short is written in full. */
