@@ -84,6 +84,13 @@ function writerFor(values: readonly number[]): (value: number) => string {
   return (value) => minus(value.toFixed(decimals));
 }
 
+/** From one numbered decade to the next, and the longest step between whose numbers every decade has a tick. */
+const STEPS = [1, 2, 5, 10, 20, 50, 100];
+const BARE = 5;
+
+/** First digits in the order in which they earn a number on a short logarithmic axis. */
+const ROUND = [1, 2, 5, 3, 4, 7, 6, 8, 9];
+
 /** A logarithmic axis over [low, high], both positive. */
 export function logAxis(low: number, high: number, label: string, place: AxisPlace): Axis {
   const pad = Math.max(1.12, (high / low) ** 0.05);
@@ -92,24 +99,25 @@ export function logAxis(low: number, high: number, label: string, place: AxisPla
   const first = Math.ceil(Math.log10(from) - 1e-9);
   const last = Math.floor(Math.log10(to) + 1e-9);
   const room = count(Math.abs(place.end - place.start), place.text, place.direction);
-  const every = Math.max(1, Math.ceil((last - first + 1) / room));
+  const every = STEPS.find((step) => (last - first + 1) / step <= room) ?? last - first;
   const decades: Tick[] = [];
   for (let n = first; n <= last; n++) {
-    const shown = (n - first) % every === 0;
-    decades.push({ value: 10 ** n, label: shown ? `10^{${String(n).replace('-', '\u2212')}}` : '' });
+    const shown = n % every === 0;
+    // Many decades: a tick for each would be a grey bar.
+    if (shown || every <= BARE)
+      decades.push({ value: 10 ** n, label: shown ? `10^{${String(n).replace('-', '\u2212')}}` : '' });
   }
   if (decades.length >= 2) return { from, to, label, at: (value) => scale(value), ticks: decades };
   // Less than a decade or two: the numbers between say more than the decades.
   const values = scale.ticks(room).filter((value) => value >= from && value <= to);
   const digits = (value: number): string => String(Number(value.toPrecision(2)));
-  // Equal steps crowd towards the upper end: a number stands only where the one before it leaves room.
-  let lastAt = -Infinity;
-  const write = (value: number): string => {
-    const at = scale(value);
-    if (Math.abs(at - lastAt) < place.text * (place.direction === 'along' ? 2.6 : 1.6)) return '';
-    lastAt = at;
-    return digits(value);
-  };
+  // Equal steps crowd towards the upper end: a number stands where those that matter more leave room, 1 before 2 and 5.
+  const apart = place.text * (place.direction === 'along' ? 2.6 : 1.6);
+  const placed: number[] = [];
+  const rank = (value: number): number => ROUND.indexOf(Number(value.toExponential().slice(0, 1)));
+  for (const value of values.toSorted((a, b) => rank(a) - rank(b)))
+    if (placed.every((other) => Math.abs(scale(other) - scale(value)) >= apart)) placed.push(value);
+  const write = (value: number): string => (placed.includes(value) ? digits(value) : '');
   return {
     from,
     to,

@@ -5,7 +5,10 @@ import type {
   BacktestSummary,
   CompareResult,
   LaplaceIntegrand,
+  GrowthResult,
+  PlaneResult,
   ScaleDependence,
+  SumResult,
 } from '../studies/index.js';
 import type { ExtractResult, FitResult } from '../extraction/index.js';
 import type { Chart } from './chart.js';
@@ -44,20 +47,20 @@ export const CHART_KINDS: readonly ChartKind[] = [
   {
     name: 'ratios',
     summary: 'ratios of coefficients against 1/n, with extrapolants',
-    from: ['assess'],
-    draw: (result) => ratiosChart(result as SavedResult & Assessment),
+    from: ['assess', 'growth'],
+    draw: (result) => ratiosChart(result as SavedResult & GrowthResult),
   },
   {
     name: 'plane',
     summary: 'the Borel plane: poles, expected singularities',
-    from: ['assess'],
-    draw: (result) => planeChart(result as SavedResult & Assessment),
+    from: ['assess', 'plane'],
+    draw: (result) => planeChart(result as SavedResult & PlaneResult),
   },
   {
     name: 'values',
     summary: 'values by prescription with their errors',
-    from: ['compare', 'assess'],
-    draw: (result) => valuesChart(result as SavedResult & (Assessment | CompareResult)),
+    from: ['compare', 'assess', 'sum'],
+    draw: (result) => valuesChart(result as SavedResult & (Assessment | SumResult | CompareResult)),
   },
   {
     name: 'scale',

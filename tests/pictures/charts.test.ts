@@ -10,9 +10,18 @@ import {
   svgOf,
   terminalChart,
 } from '../../src/pictures/index.js';
+import { axisOf } from '../../src/pictures/axis.js';
 import type { Chart, SavedResult } from '../../src/pictures/index.js';
 import { loadSeries, parseUncertain, isNumberProblem } from '../../src/series/index.js';
-import { assess, backtest, compare, laplaceIntegrand, scaleDependence } from '../../src/studies/index.js';
+import {
+  assess,
+  backtest,
+  compare,
+  growthStudy,
+  laplaceIntegrand,
+  planeStudy,
+  scaleDependence,
+} from '../../src/studies/index.js';
 
 const at = (() => {
   const value = parseUncertain('0.3156(30)');
@@ -117,4 +126,81 @@ test('the integral along the ray has the imaginary part of the lateral sum', () 
   // R = 1 + x F, F = (1/x) ∫: the integral of the samples is F.
   expect(1 + x * sum.re * step).toBeCloseTo(Number(entry.value), 3);
   expect(Math.abs(x * sum.im * step)).toBeCloseTo(Math.abs(Number(entry.imaginary)), 3);
+});
+
+describe('what a picture must not lose', () => {
+  const kindOf = (name: string) => CHART_KINDS.find((entry) => entry.name === name)!;
+  const plain = (result: object): SavedResult => JSON.parse(JSON.stringify(result)) as SavedResult;
+
+  test('a legend that would stand on a curve stands below the panel', () => {
+    const chart = (points: (readonly [number, number])[]): Chart => ({
+      title: 't',
+      description: 'd',
+      panels: [
+        {
+          x: { kind: 'linear', low: 0, high: 1, label: 'x' },
+          y: { kind: 'linear', low: 0, high: 1, label: 'y' },
+          layers: [{ kind: 'curve', points, ink: 0, line: 'full', name: 'a curve with a name' }],
+          legend: 'inside',
+        },
+      ],
+      data: [],
+    });
+    const lowest = (drawing: Chart): number =>
+      Math.max(...pictureOf(drawing, column).marks.flatMap((mark) => (mark.kind === 'text' ? [mark.y] : [])));
+    const free = chart([[0, 0], [1, 1]]); // prettier-ignore
+    const everywhere = chart([...Array(41).keys()].map((i) => [i / 40, i % 2] as const));
+    expect(lowest(everywhere)).toBeGreaterThan(lowest(free));
+  });
+
+  test('a value outside the frame has an arrow at its edge', () => {
+    // The Padé approximant of this series lies far from the others.
+    const values = kindOf('values').draw(plain(RESULTS['compare']!));
+    const [panel] = values.panels;
+    const high = panel!.x.high;
+    const outside = panel!.layers.flatMap((layer) =>
+      layer.kind === 'curve' ? layer.points.filter(([x]) => x > high) : [],
+    );
+    expect(outside.length).toBeGreaterThan(0);
+    // Nothing else in this picture is an open line of three points.
+    const arrows = pictureOf(values, column).marks.filter(
+      (mark) => mark.kind === 'path' && mark.fill === undefined && /^M[^LZ]*L[^LZ]*L[^LZ]*$/.test(mark.d),
+    );
+    expect(arrows.length).toBe(outside.length);
+  });
+
+  test('a degenerate Borel transform still shows its poles', async () => {
+    const series = await loadSeries('marrowgate-mass');
+    const result = assess(series, at, { digits: 12, request: { command: 'assess', series: 'marrowgate-mass' } });
+    const poles = kindOf('plane')
+      .draw(plain(result))
+      .panels[0]!.layers.flatMap((layer) =>
+        layer.kind === 'curve' && layer.marker === 'cross' ? layer.points.map(([x]) => x) : [],
+      );
+    // The file's own singularities: u = 1/2, -1 and 3/2.
+    expect(poles.toSorted((a, b) => a - b).map((x) => Number(x.toFixed(4)))).toEqual([-1, 0.5, 1.5]);
+  });
+
+  test('growth and plane results are drawn as an assessment is', () => {
+    const request = (command: string) => ({ digits: 12, request: { command, series: 'adler' } });
+    const growth = growthStudy(adler, request('growth'));
+    const plane = planeStudy(adler, request('plane'));
+    const whole = plain(RESULTS['assess']!);
+    expect(kindOf('ratios').draw(plain(growth)).data).toEqual(kindOf('ratios').draw(whole).data);
+    expect(kindOf('plane').draw(plain(plane)).data[0]).toEqual(kindOf('plane').draw(whole).data[0]);
+  });
+
+  test('the integrand is not drawn across its poles', () => {
+    const pieces = drawn('integrand').panels[0]!.layers.filter((layer) => layer.kind === 'curve' && layer.ink === 1);
+    expect(pieces.length).toBe(2);
+  });
+
+  test('a short logarithmic axis numbers 1 before 0.9, a long one round decades', () => {
+    const labels = (low: number, high: number): string[] =>
+      axisOf({ kind: 'log', low, high, label: '' }, { start: 0, end: 180, text: 7.5, direction: 'along' })
+        .ticks.map(({ label }) => label)
+        .filter((label) => label !== '');
+    expect(labels(0.4, 2.5)).toEqual(expect.arrayContaining(['0.5', '1', '2']));
+    expect(labels(1e-4, 1e45)).toEqual(['10^{0}', '10^{20}', '10^{40}']);
+  });
 });

@@ -1,6 +1,7 @@
 /** @module The error budget of an extraction: a bar for each component, and the three totals, upwards and downwards. */
 import type { BudgetEntry, ExtractResult, FitResult } from '../../extraction/index.js';
 import type { Chart } from '../chart.js';
+import { symbolLabel } from './words.js';
 
 interface Budget {
   readonly title: string;
@@ -27,13 +28,15 @@ function budgetOf(result: ExtractResult | FitResult): Budget | undefined {
   };
 }
 
-const labelOf = ({ unit }: { readonly unit?: string }): string => `shift${unit === undefined ? '' : ` [${unit}]`}`;
+const labelOf = ({ symbol, unit }: { readonly symbol: string; readonly unit?: string }): string =>
+  `shift of ${symbolLabel(symbol)}${unit === undefined ? '' : ` [${unit}]`}`;
 
 export function budgetChart(result: ExtractResult | FitResult): Chart {
   const budget = budgetOf(result);
   const size = (text: string | undefined): number => Math.abs(Number(text ?? 0));
   const parts = (budget?.entry.components ?? [])
-    .filter(({ plus, minus }) => plus !== undefined || minus !== undefined)
+    // What contributes nothing is a row of the table, and would be an empty one here.
+    .filter(({ plus, minus }) => size(plus) !== 0 || size(minus) !== 0)
     .map((component) => ({
       name: component.counted ? component.name : `${component.name} (not counted)`,
       plus: size(component.plus),
@@ -61,7 +64,16 @@ export function budgetChart(result: ExtractResult | FitResult): Chart {
         layers: [
           { kind: 'rule', along: 'x', at: 0, line: 'full', ink: 'faint' },
           { kind: 'bars', items: bars(parts.filter(({ counted }) => counted)), ink: 0, name: 'counted' },
-          { kind: 'bars', items: bars(parts.filter(({ counted }) => !counted)), ink: 4, name: 'overlaps, not counted' },
+          ...(parts.every(({ counted }) => counted)
+            ? []
+            : [
+                {
+                  kind: 'bars',
+                  items: bars(parts.filter(({ counted }) => !counted)),
+                  ink: 4,
+                  name: 'overlaps, not counted',
+                } as const,
+              ]),
           { kind: 'bars', items: bars(totals), ink: 1, name: 'totals' },
         ],
         legend: 'below',

@@ -4,6 +4,7 @@
  */
 import type { BacktestResult, BacktestSummary } from '../../studies/index.js';
 import type { Chart, Plotted } from '../chart.js';
+import { labelName } from './words.js';
 
 interface Share {
   readonly method: string;
@@ -52,7 +53,7 @@ export function coverageChart(result: BacktestResult | BacktestSummary): Chart {
     panels: [
       {
         x: { kind: 'linear', low: 0, high: 1, label: 'share inside', margin: 0.03 },
-        y: { kind: 'names', names: shares.map(({ method }) => method), label: '' },
+        y: { kind: 'names', names: shares.map(({ method }) => labelName(method)), label: '' },
         layers: [
           { kind: 'rule', along: 'x', at: CLAIM, line: 'dashed', ink: 1, name: 'claimed, 68 %' },
           { kind: 'intervals', along: 'x', items, ink: 0, weight: 'thin', name: 'one standard error' },

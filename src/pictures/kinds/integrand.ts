@@ -6,6 +6,18 @@ import { atCoupling, nameOf } from './words.js';
 /** Near a pole the integrand leaves the picture, which shows so many times the range on the ray. */
 const VIEW = 1.8;
 
+/** The curve in pieces between poles: where it leaves the picture at one side and comes back from the other. */
+function atPoles(points: readonly Point[], low: number, high: number): Point[][] {
+  const pieces: Point[][] = [[]];
+  for (const [i, point] of points.entries()) {
+    const before = points[i - 1];
+    if (before !== undefined && ((before[1] > high && point[1] < low) || (before[1] < low && point[1] > high)))
+      pieces.push([]);
+    pieces.at(-1)!.push(point);
+  }
+  return pieces;
+}
+
 export function integrandChart(result: LaplaceIntegrand): Chart {
   const { samples } = result;
   const of = (value: (sample: (typeof samples)[number]) => string): Point[] =>
@@ -15,12 +27,12 @@ export function integrandChart(result: LaplaceIntegrand): Chart {
   const im = of((sample) => sample.ray.im);
   const rays = [...re, ...im].map(([, y]) => y);
   const [low, high] = [Math.min(0, ...rays) * VIEW, Math.max(...rays, Number(samples[0]?.axis ?? 1)) * 1.15];
-  const curve = (points: readonly Point[], ink: number, line: 'full' | 'dashed' | 'dotted', name: string): Layer => ({
+  const curve = (points: readonly Point[], ink: number, line: 'full' | 'dashed' | 'dotted', name?: string): Layer => ({
     kind: 'curve',
     points,
     ink,
     line,
-    name,
+    ...(name === undefined ? {} : { name }),
   });
   const jumps = axis.filter(([, y]) => Math.abs(y) > Math.max(Math.abs(low), high)).length;
   return {
@@ -37,7 +49,7 @@ export function integrandChart(result: LaplaceIntegrand): Chart {
         y: { kind: 'linear', low, high, label: 'integrand', margin: 0.03 },
         layers: [
           { kind: 'rule', along: 'y', at: 0, line: 'dotted', ink: 'faint' },
-          curve(axis, 1, 'full', 'on the axis'),
+          ...atPoles(axis, low, high).map((piece, i) => curve(piece, 1, 'full', i === 0 ? 'on the axis' : undefined)),
           curve(re, 0, 'dashed', `real part, ${result.angle}° above`),
           curve(im, 2, 'dotted', 'imaginary part there'),
         ],

@@ -6,7 +6,8 @@ import type { Assessment } from '../../studies/index.js';
 import type { Chart, Layer, MarkerShape, Point } from '../chart.js';
 import { nameOf } from './words.js';
 
-type Plane = Pick<Assessment, 'series' | 'borelPlane' | 'growth' | 'coupling'>;
+/** Of an assessment, or of the plane alone, which does not know what is expected. */
+type Plane = Pick<Assessment, 'series' | 'borelPlane'> & Partial<Pick<Assessment, 'growth'>>;
 type PoleRow = Assessment['borelPlane']['entries'][number]['poles'][number];
 
 /** Poles further out than this many radii of convergence say little, and would make the rest small. */
@@ -31,16 +32,22 @@ const circlePoints = (radius: number): Point[] =>
     return [radius * Math.cos(angle), radius * Math.sin(angle)];
   });
 
+/** An entry of a degenerate block repeats a smaller one: it is drawn where there is no other. */
+function distinct(entries: Plane['borelPlane']['entries']): Plane['borelPlane']['entries'] {
+  const own = entries.filter(({ deficiency }) => deficiency === undefined);
+  return own.length > 0 ? own : entries.slice(0, 1);
+}
+
 export function planeChart(result: Plane): Chart {
   const { entries } = result.borelPlane;
-  const inU = result.coupling.uPerT !== undefined;
+  const inU = entries.some((entry) => entry.poles.some((pole) => pole.u !== undefined));
   const variable = inU ? 'u' : 't';
-  const plain = entries.filter((entry) => entry.leroy === '0' && entry.exists && entry.deficiency === undefined);
-  const others = entries.filter((entry) => entry.leroy !== '0' && entry.exists);
+  const plain = distinct(entries.filter((entry) => entry.leroy === '0' && entry.exists));
+  const others = distinct(entries.filter((entry) => entry.leroy !== '0' && entry.exists));
   const genuine = (list: typeof entries): PoleRow[] =>
     list.flatMap((entry) => entry.poles.filter((pole) => pole.note !== 'doublet'));
   const doublets = entries.flatMap((entry) => entry.poles.filter((pole) => pole.note === 'doublet'));
-  const { expected, nearest } = result.growth;
+  const { expected = [], nearest } = result.growth ?? {};
   const expectedAt = expected.map((s) => Number((inU ? s.u : undefined) ?? s.t)).filter(Number.isFinite);
   const found = Math.abs(Number((inU ? nearest?.u : undefined) ?? nearest?.t ?? Number.NaN));
   const radius = Number.isFinite(found) ? found : Math.min(...expectedAt.map(Math.abs), Infinity);

@@ -4,10 +4,10 @@
  */
 import type { Assessment } from '../../studies/index.js';
 import type { Chart, Layer, Point } from '../chart.js';
-import { nameOf } from './words.js';
+import { nameOf, printedNumber } from './words.js';
 
 /** The coefficients of the Borel transform grow by c_n/(n c_(n−1)) → 1/t*. */
-export function ratiosChart(result: Assessment): Chart {
+export function ratiosChart(result: Pick<Assessment, 'series' | 'growth'>): Chart {
   const { ratios } = result.growth.evidence;
   const points = ratios.map(({ n, ratio }): Point => [1 / n, Number(ratio)]);
   const linear = ratios.filter((row) => row.linear !== undefined);
@@ -19,9 +19,9 @@ export function ratiosChart(result: Assessment): Chart {
       at: 1 / Number(t),
       line: i === 0 ? 'dashed' : 'dotted',
       ink: 'faint',
-      name: `expected, ${u === undefined ? `t = ${t}` : `u = ${u}`}`,
+      name: `expected, ${u === undefined ? `*t* = ${printedNumber(t)}` : `*u* = ${printedNumber(u)}`}`,
     })),
-    { kind: 'curve', points, ink: 0, line: 'full', marker: 'disc', name: '*c*_{n} / (*n c*_{n−1})' },
+    { kind: 'curve', points, ink: 0, line: 'full', marker: 'disc', name: '*c*_{*n*} / (*n c*_{*n*−1})' },
     {
       kind: 'intervals',
       along: 'y',

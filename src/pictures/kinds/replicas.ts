@@ -1,5 +1,6 @@
 /** @module The histogram of replicas: the mixture of prescriptions, or the first one, with its median and its central 68 %. */
 import type { Chart } from '../chart.js';
+import { symbolLabel } from './words.js';
 
 interface Number68 {
   readonly value: string;
@@ -51,7 +52,7 @@ export function replicasChart({ replicas }: { readonly replicas?: DrawnReplicas 
         : `${shown.replicas} replicas, seed ${replicas?.seed ?? ''}: median ${shown.median.value}, 68 per cent from ${shown.low68.value} to ${shown.high68.value}, 95 per cent from ${shown.low95.value} to ${shown.high95.value}.`,
     panels: [
       {
-        x: { kind: 'linear', low: from, high: to, label: `${quantity?.symbol ?? ''}${unit}`, margin: 0 },
+        x: { kind: 'linear', low: from, high: to, label: `${symbolLabel(quantity?.symbol ?? '')}${unit}`, margin: 0 },
         y: { kind: 'linear', low: 0, high: most, label: 'replicas', margin: 0.05 },
         layers: [
           ...(shown === undefined

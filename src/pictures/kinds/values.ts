@@ -3,10 +3,9 @@
  * thick one behind it, since the two are not the same kind of error. A ring is a value with a caution, or with a refuted
  * record. The band is the verdict with its ambiguity or truncation error, or the spread of the values without a caution.
  */
-import { PRESCRIPTIONS } from '../../prescriptions/index.js';
-import type { Assessment, CompareResult } from '../../studies/index.js';
+import type { Assessment, CompareResult, SumResult } from '../../studies/index.js';
 import type { Chart, Layer } from '../chart.js';
-import { atCoupling, nameOf } from './words.js';
+import { atCoupling, labelName, nameOf } from './words.js';
 
 interface Row {
   readonly prescription: string;
@@ -25,17 +24,20 @@ interface Values {
   readonly band?: { readonly from: number; readonly to: number; readonly at?: number; readonly name: string };
 }
 
-export const isAssessment = (result: Assessment | CompareResult): result is Assessment => 'verdict' in result;
+type Drawn = Assessment | SumResult | CompareResult;
 
-function ofAssessment(result: Assessment): Values {
+const isComparison = (result: Drawn): result is CompareResult => 'rows' in result;
+
+/** Of an assessment, or of one prescription: that has no verdict, and all its members are shown. */
+function ofEntries(result: SumResult & Partial<Assessment>): Values {
   const { verdict } = result;
-  const half = Math.abs(Number(verdict.ambiguity ?? verdict.truncation ?? Number.NaN));
-  const at = Number(verdict.value ?? Number.NaN);
+  const half = Math.abs(Number(verdict?.ambiguity ?? verdict?.truncation ?? Number.NaN));
+  const at = Number(verdict?.value ?? Number.NaN);
   return {
     title: nameOf(result),
     coupling: atCoupling(result),
     rows: result.values
-      .filter((entry) => entry.value !== undefined && entry.central === true)
+      .filter((entry) => entry.value !== undefined && (verdict === undefined || entry.central === true))
       .map((entry) => ({
         prescription: entry.prescription,
         variant: entry.variant,
@@ -51,7 +53,7 @@ function ofAssessment(result: Assessment): Values {
             from: at - half,
             to: at + half,
             at,
-            name: verdict.ambiguity === undefined ? 'verdict ± truncation' : 'verdict ± ambiguity',
+            name: verdict?.ambiguity === undefined ? 'verdict ± truncation' : 'verdict ± ambiguity',
           },
         }
       : {}),
@@ -82,8 +84,6 @@ function ofComparison(result: CompareResult): Values {
   };
 }
 
-const titleOf = (name: string): string => PRESCRIPTIONS.find((p) => p.name === name)?.title ?? name;
-
 /** The middle of the values; half of them lie within `spread` of it. Wild values do not move it. */
 function middle(values: readonly number[]): { readonly at: number; readonly spread: number } {
   const median = (list: readonly number[]): number => {
@@ -97,8 +97,11 @@ function middle(values: readonly number[]): { readonly at: number; readonly spre
 /** Values and errors further from the middle than this many spreads are cut off by the frame. */
 const VIEW = 10;
 
-export function valuesChart(result: Assessment | CompareResult): Chart {
-  const { title, coupling, rows, band } = isAssessment(result) ? ofAssessment(result) : ofComparison(result);
+export function valuesChart(result: Drawn): Chart {
+  const { title, coupling, rows, band } = isComparison(result) ? ofComparison(result) : ofEntries(result);
+  // Rows of one prescription differ by their variant.
+  const one = new Set(rows.map((row) => row.prescription)).size === 1 && rows.length > 1;
+  const nameIn = (row: Row): string => (one ? row.variant : labelName(row.prescription));
   const size = (text: string | undefined): number => Math.abs(Number(text ?? 0));
   const { at, spread } = middle(rows.map((row) => Number(row.value)));
   const reach = Math.max(VIEW * spread, ...(band === undefined ? [] : [at - band.from, band.to - at]));
@@ -119,23 +122,25 @@ export function valuesChart(result: Assessment | CompareResult): Chart {
     weight,
     name,
   });
+  const [left, right] = [Math.min(...view), Math.max(...view)];
+  const inView = ({ value }: Row): boolean => Number(value) >= left && Number(value) <= right;
   const points = (flagged: boolean): Layer => ({
     kind: 'curve',
     points: rows.flatMap((row, y) => (row.flagged === flagged ? [[Number(row.value), y] as const] : [])),
     ink: 0,
     marker: flagged ? 'ring' : 'disc',
-    ...(flagged && rows.some((row) => row.flagged) ? { name: 'with caution' } : {}),
+    ...(flagged && rows.some((row) => row.flagged && inView(row)) ? { name: 'with caution' } : {}),
   });
   return {
     title: `Values by prescription of ${title}, ${coupling}`,
     description:
       `${rows.length} values; truncation errors are thin intervals, ambiguities thick ones. ` +
-      rows.map((row) => `${titleOf(row.prescription)} ${row.value}`).join('; ') +
+      rows.map((row) => `${labelName(row.prescription)} ${row.value}`).join('; ') +
       '.',
     panels: [
       {
-        x: { kind: 'linear', low: Math.min(...view), high: Math.max(...view), label: 'value', margin: 0.05 },
-        y: { kind: 'names', names: rows.map((row) => row.prescription), label: '' },
+        x: { kind: 'linear', low: left, high: right, label: 'value', margin: 0.05 },
+        y: { kind: 'names', names: rows.map(nameIn), label: '' },
         layers: [
           ...(band === undefined
             ? []

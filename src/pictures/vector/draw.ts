@@ -114,6 +114,31 @@ function heightFor({ panels }: Chart, { height, text }: Format): number {
   return Math.max(height, Math.max(...needed) * panels.length);
 }
 
+const layersIn = (panel: Panel, frame: Frame, format: Format): Mark[] => [
+  ...panel.layers.flatMap((layer) => layerMarks(layer, frame, format)),
+  ...frame.marks,
+  ...(panel.y.kind === 'names' ? panel.layers.flatMap((layer) => beyond(layer, frame, format)) : []),
+];
+
+/** A value outside a panel of names still has its row: an arrow at the edge says where it is. */
+function beyond(layer: Layer, { box, x, y }: Frame, format: Format): Mark[] {
+  if (layer.kind !== 'curve' || layer.marker === undefined) return [];
+  const size = format.marker * 1.3;
+  const right = box.x + box.width;
+  return layer.points.flatMap(([value, row]) => {
+    const at = x.at(value);
+    if (at >= box.x - 0.01 && at <= right + 0.01) return [];
+    const [tip, back] = at > right ? [right - size * 0.4, -size] : [box.x + size * 0.4, size];
+    const middle = y.at(row);
+    const points: Point[] = [
+      [tip + back, middle - size],
+      [tip, middle],
+      [tip + back, middle + size],
+    ];
+    return [line(points, { colour: ink(layer.ink), width: format.line * 1.2 })];
+  });
+}
+
 /** Panels share the height evenly; what stands below the axes of the upper ones is taken from all. */
 export function pictureOf(chart: Chart, format: Format): Picture {
   const { width } = format;
@@ -121,15 +146,16 @@ export function pictureOf(chart: Chart, format: Format): Picture {
   const share = height / chart.panels.length;
   const left = Math.max(...chart.panels.map((panel) => gutter(format, panel, share)));
   const panelMarks = (panel: Panel, i: number): Mark[] => {
-    const below = panel.legend === 'below' ? rowsBelow(panel.layers, format) : [];
+    const outer = { x: 0, y: i * share, width, height: share };
+    if (panel.legend !== 'below') {
+      const frame = frameOf(format, panel, outer, left);
+      const legend = panel.legend === undefined ? [] : legendInside(panel.layers, frame, format);
+      if (legend !== undefined) return [...layersIn(panel, frame, format), ...legend];
+    }
+    const below = rowsBelow(panel.layers, format);
     const legendHeight = below.length * format.text * LEGEND_STEP;
-    const frame = frameOf(format, panel, { x: 0, y: i * share, width, height: share - legendHeight }, left);
-    return [
-      ...panel.layers.flatMap((layer) => layerMarks(layer, frame, format)),
-      ...frame.marks,
-      ...(panel.legend === 'inside' ? legendInside(panel.layers, frame, format) : []),
-      ...legendBelow(below, (i + 1) * share - legendHeight, format),
-    ];
+    const frame = frameOf(format, panel, { ...outer, height: share - legendHeight }, left);
+    return [...layersIn(panel, frame, format), ...legendBelow(below, (i + 1) * share - legendHeight, format)];
   };
   return {
     width,

@@ -32,8 +32,23 @@ function sample(layer: NamedLayer, x: number, y: number, length: number, format:
       return [patch(layer.tone === 'first' ? BAND : BAND_SECOND, 1)];
     case 'rule':
       return [line(across, strokeOf(layer.ink === 'faint' ? FAINT : ink(layer.ink), format.line * 0.8, layer.line))];
-    case 'intervals':
-      return [line(across, { colour: ink(layer.ink), width: format.line * (layer.weight === 'thick' ? 2.6 : 1) })];
+    case 'intervals': {
+      const thick = layer.weight === 'thick';
+      const stroke = { colour: ink(layer.ink), width: format.line * (thick ? 2.6 : 1) };
+      const end = format.marker * 0.9;
+      const ends = thick
+        ? []
+        : across.map(([at]) =>
+            line(
+              [
+                [at, y - end],
+                [at, y + end],
+              ],
+              stroke,
+            ),
+          );
+      return [line(across, stroke), ...ends];
+    }
     case 'columns':
       return [patch(ink(layer.ink), 0.55)];
     case 'bars':
@@ -67,31 +82,54 @@ function occupied(layers: readonly Layer[], { box, x, y }: Frame): Point[] {
         return layer.items.flatMap((item) => along(place([item.from, item.y]), place([item.to, item.y])));
       case 'note':
         return [place(layer.at)];
-      case 'band':
       case 'rule':
+      case 'band':
         return [];
     }
   });
 }
 
+/** Lines right across, and the edges of bands: a legend on one is no loss, but elsewhere it is better. */
+const crossed = (layers: readonly Layer[], { box, x, y }: Frame): Point[] =>
+  layers.flatMap((layer): Point[] => {
+    if (layer.kind !== 'rule' && layer.kind !== 'band') return [];
+    const places = layer.kind === 'rule' ? [layer.at] : [layer.from, layer.to];
+    const [dx, dy] = layer.along === 'y' ? [box.width, 0] : [0, box.height];
+    return places.flatMap((at) => {
+      const start: Point = layer.along === 'y' ? [box.x, y.at(at)] : [x.at(at), box.y];
+      return along(start, [start[0] + dx, start[1] + dy]);
+    });
+  });
+
 const STEPS = 24;
 const along = ([x0, y0]: Point, [x1, y1]: Point): Point[] =>
   Array.from({ length: STEPS + 1 }, (_, i) => [x0 + ((x1 - x0) * i) / STEPS, y0 + ((y1 - y0) * i) / STEPS]);
 
+interface Place {
+  readonly box: Box;
+  /** Points of curves below it. */
+  readonly covers: number;
+}
+
 /** The place of a box of this size, in a corner or in the middle above or below, where it covers least. */
-function bestPlace(box: Box, width: number, height: number, text: number, taken: readonly Point[]): Box {
+function bestPlace(layers: readonly Layer[], frame: Frame, width: number, height: number, text: number): Place {
+  const { box } = frame;
   const across = [box.x + box.width - width - text * 0.7, box.x + text * 0.7, box.x + (box.width - width) / 2];
   const up = [box.y + text * 0.7, box.y + box.height - height - text * 0.7];
-  const places = up.flatMap((y) => across.map((x): Box => ({ x, y, width, height })));
-  const covers = (place: Box): number =>
-    taken.filter(
+  const within = (points: readonly Point[], place: Box): number =>
+    points.filter(
       ([x, y]) =>
         x > place.x - text / 2 &&
         x < place.x + width + text / 2 &&
         y > place.y - text / 2 &&
         y < place.y + height + text / 2,
     ).length;
-  return places.reduce((best, place) => (covers(place) < covers(best) ? place : best));
+  const [taken, lines] = [occupied(layers, frame), crossed(layers, frame)];
+  const places = up.flatMap((y) => across.map((x): Box => ({ x, y, width, height })));
+  const judged = places.map((place) => ({ box: place, covers: within(taken, place), lines: within(lines, place) }));
+  return judged.reduce((best, place) =>
+    place.covers < best.covers || (place.covers === best.covers && place.lines < best.lines) ? place : best,
+  );
 }
 
 /** From one entry to the next, and the length of a sample, in sizes of the text. */
@@ -118,15 +156,16 @@ function entryMarks(layer: NamedLayer, x: number, base: number, format: Format):
   ];
 }
 
-/** The legend inside a panel, on a ground of its own. */
-export function legendInside(layers: readonly Layer[], frame: Frame, format: Format): Mark[] {
+/** The legend inside a panel, on a ground of its own; undefined where it would stand on a curve wherever it stood. */
+export function legendInside(layers: readonly Layer[], frame: Frame, format: Format): Mark[] | undefined {
   const named = layers.filter(isNamed);
   if (named.length === 0) return [];
   const { text } = format;
   const step = text * LEGEND_STEP;
   const width = text * 0.6 + Math.max(...named.map((layer) => entryWidth(layer, format)));
   const height = step * named.length + text * 0.3;
-  const ground = bestPlace(frame.box, width, height, text, occupied(layers, frame));
+  const { box: ground, covers } = bestPlace(layers, frame, width, height, text);
+  if (covers > 0) return undefined;
   return [
     rectangle(ground, { fill: PAPER, opacity: 0.85 }),
     ...named.flatMap((layer, i) => entryMarks(layer, ground.x + text * 0.3, ground.y + step * i + text * 1.15, format)),
