@@ -49,7 +49,9 @@ export function optimalReport(
     ...lines,
     statement:
       (observed === undefined
-        ? 'the terms still fall at the last known order: the series has not begun to diverge at this coupling'
+        ? table.terms.length < 2
+          ? 'one term alone neither falls nor grows'
+          : 'the terms still fall at the last known order: the series has not begun to diverge at this coupling'
         : `the term of order ${observed.power} is the smallest${lines.competing === undefined ? '; stopping there leaves an error of its size' : ''}`) +
       (lines.competing !== undefined
         ? `. ${capital(lines.competing.statement)}`

@@ -5,6 +5,7 @@ import { parseSeries } from '../../src/series/index.js';
 import type { Series, Uncertain } from '../../src/series/index.js';
 import { assess } from '../../src/studies/index.js';
 import type { Assessment } from '../../src/studies/index.js';
+import { assessmentText } from '../../src/report/index.js';
 import { benchFile, benchSeries } from '../support/bench.js';
 
 const at = (x: string): Uncertain => ({ value: exact(Rational.parse(x)!), text: x });
@@ -71,4 +72,12 @@ describe('competing singularities', () => {
       expect(Math.abs(Number(fixed.value) - pv)).toBeLessThan(1.5 * Number(fixed.truncationError));
     },
   );
+});
+
+test('one coefficient: nothing is said of terms that fall', async () => {
+  const result = run(await parseSeries('1\n', { name: 'one' }), '3/10');
+  expect(result.optimalTruncation.statement).toBe('one term alone neither falls nor grows');
+  const page = assessmentText(result, { columns: 100 });
+  expect(page).not.toMatch(/still fall/);
+  expect(page).toContain('one term alone has none to compare with');
 });

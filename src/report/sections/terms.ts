@@ -41,7 +41,10 @@ function setRow(row: TermRow, page: Page, reached: boolean): TableRow {
 function closing(rows: readonly TermRow[], status: Assessment['optimalTruncation']['status']): string {
   const least = rows.find((row) => row.least === true);
   if (status === 'reached' && least !== undefined) return `Least term: order ${least.order}.`;
-  if (status === 'not reached') return 'Least term: not reached. The terms still fall at the last known order.';
+  if (status === 'not reached')
+    return rows.length < 2
+      ? 'Least term: one term alone has none to compare with.'
+      : 'Least term: not reached. The terms still fall at the last known order.';
   return 'Least term: there is none to look for in this series.';
 }
 
