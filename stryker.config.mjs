@@ -9,7 +9,16 @@ export default {
   vitest: { configFile: 'vitest.mutation.config.ts', related: false },
   checkers: ['sample'],
   mutate: ['src/numerics/**/*.ts'],
-  ignorePatterns: ['/dist', '/docs', '/series', '/src/**', '!/src/numerics/**', '/tests/**', '!/tests/numerics/**'],
+  ignorePatterns: [
+    '/dist',
+    '/docs',
+    '/series',
+    '/src/**',
+    '!/src/numerics/**',
+    '/tests/**',
+    '!/tests/{numerics,support}/**',
+    '!/tests/truncation/random.ts',
+  ],
   // Texts are for people: tests that fix the wording of every refusal would only repeat the source.
   mutator: { excludedMutations: ['StringLiteral'] },
   coverageAnalysis: 'perTest',
