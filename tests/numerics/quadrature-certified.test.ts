@@ -1,6 +1,6 @@
 /** Certified integrals at every goal: the exact value inside, the radius as small as asked, the cost as low as it should be. */
 import { describe, expect, it } from 'vitest';
-import { C, cexp, integrateAnalytic, log, pi, R, Rational } from '../../src/numerics/index.js';
+import { awayFromCut, C, cexp, integrateAnalytic, log, pi, R, Rational } from '../../src/numerics/index.js';
 import type { Ball, Complex } from '../../src/numerics/index.js';
 import { mustContain } from './ball/generate.js';
 
@@ -35,6 +35,18 @@ describe('goals', () => {
       // a rule is chosen for its goal, not for much more
       if (goal < 100) expect(bits(value.re)).toBeGreaterThan(-goal * 2 - 40);
     }
+  });
+
+  it('an integrand that falls by e^40 along the segment, from either side', () => {
+    for (const sign of [-1, 1])
+      for (const goal of [5, 20, 60]) {
+        const f = (z: Complex, p: number): Complex => cexp(C.mul(n(40 * sign, 0), z, p), p);
+        const { value } = integrateAnalytic(f, n(1, 0), n(2, 0), P, { goal });
+        const at = (x: number): Ball => cexp(n(40 * sign * x, 0), P + 80).re;
+        const exact = R.div(R.sub(at(2), at(1), P + 60), R.fromNumber(40 * sign), P + 60);
+        expect(R.containsRational(value.re, R.midpoint(exact))).toBe(true);
+        expect(R.accuracyBits(value.re)).toBeGreaterThan(goal - 3);
+      }
   });
 
   it('powers: exact where the rule is, enclosed where it is not', () => {
@@ -100,6 +112,20 @@ describe('what is left when nothing more may be halved', () => {
     const { value } = integrateAnalytic(() => C.ZERO, n(0, 0), n(5, 0), P);
     expect(R.isExactZero(value.re)).toBe(true);
     expect(R.isExactZero(value.im)).toBe(true);
+  });
+});
+
+describe('rectangles and the negative axis', () => {
+  it('one that may touch (−∞, 0] has no value, any other one keeps its own', () => {
+    const box = (re: number, im: number, half: number): Complex => ({
+      re: R.ball(BigInt(re), 0, half),
+      im: R.ball(BigInt(im), 0, half),
+    });
+    for (const free of [box(2, 0, 1), box(-5, 2, 1), box(-5, -2, 1), box(0, 3, 1)])
+      expect(awayFromCut(free)).toBe(free);
+    for (const on of [box(-5, 0, 1), box(-5, 1, 2), box(0, 0, 1), box(1, 0, 2), C.ZERO]) {
+      expect(awayFromCut(on)).toBe(C.INDETERMINATE);
+    }
   });
 });
 
