@@ -49,7 +49,7 @@ describe('questions at the ends', () => {
     expect(R.upperBits(R.ZERO)).toBe(-Infinity);
     expect(R.upperBits({ mid: 0n, exp: 9, rad: 0 })).toBe(-Infinity);
     expect(R.upperBits(R.ball(5n, 0, 0.5))).toBe(3);
-    expect(R.upperBits(R.ball(7n, 0, 1))).toBe(4);
+    expect(R.upperBits({ mid: 7n, exp: 0, rad: 1 })).toBe(4);
     expect(R.upperBits(R.ball(-8n, 10))).toBe(14);
   });
 
