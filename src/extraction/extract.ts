@@ -11,7 +11,7 @@ import { checkEvolution, isMSbar } from './check.js';
 import { errorText } from './entries.js';
 import { evolver } from './evolved.js';
 import type { Evolver } from './evolved.js';
-import { hardScale, variableOf } from './place.js';
+import { hardScale, powerOfGeV, variableOf } from './place.js';
 import { definitionWords, powerFactor } from './power-terms.js';
 import type { Problem } from './problem.js';
 import type { DatumSummary, ExtractResult, PowerTermEntry, UnknownSummary } from './result.js';
@@ -37,7 +37,7 @@ export function datumSummary(setting: Setting): DatumSummary {
             minus: errorText(measured.minus),
             ...(measured.dimension === undefined || measured.dimension === 0
               ? {}
-              : { unit: measured.dimension === 1 ? 'GeV' : `GeV^${measured.dimension}` }),
+              : { unit: powerOfGeV(measured.dimension) }),
           },
         }),
     ...(Q === undefined || setting.problem.for === 'mass' ? {} : { scale: indicative(Q, 8) }),
@@ -66,7 +66,7 @@ function unknownSummary(setting: Setting): UnknownSummary {
       return {
         name: 'condensate',
         symbol: extracted?.name ?? 'condensate',
-        ...(hardScale(series, datum) === undefined ? {} : { unit: `GeV^${extracted?.dimension ?? 4}` }),
+        ...(hardScale(series, datum) === undefined ? {} : { unit: powerOfGeV(extracted?.dimension ?? 4) }),
       };
   }
 }

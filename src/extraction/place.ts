@@ -204,3 +204,6 @@ function massPlace(problem: Problem, series: Series, datum: Datum): PlaceOf | Re
 
 /** x = α/divisor as a double. */
 export const variableOf = (alpha: Exact, divisor: Exact): number => toNumberExact(alpha) / toNumberExact(divisor);
+
+/** "GeV", "GeV^4". */
+export const powerOfGeV = (dimension: number): string => (dimension === 1 ? 'GeV' : `GeV^${dimension}`);

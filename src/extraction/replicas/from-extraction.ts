@@ -10,7 +10,7 @@ import { firstFit, fitSetting, wholeFit } from '../fit/fit.js';
 import type { FitSetting } from '../fit/fit.js';
 import { cholesky, forward } from '../fit/matrix.js';
 import type { Matrix } from '../fit/matrix.js';
-import { hardScale, MZ } from '../place.js';
+import { hardScale, MZ, powerOfGeV } from '../place.js';
 import type { Problem } from '../problem.js';
 import { evaluated } from '../rows.js';
 import type { Setting } from '../rows.js';
@@ -43,7 +43,7 @@ function parameterOf({ problem, stages, extracted, datum }: Setting): Parameter 
     case 'pole-mass':
       return { symbol: 'M', unit: 'GeV' };
     case 'condensate': {
-      const unit = hardScale(stages.series, datum) === undefined ? {} : { unit: `GeV^${extracted?.dimension ?? 4}` };
+      const unit = hardScale(stages.series, datum) === undefined ? {} : { unit: powerOfGeV(extracted?.dimension ?? 4) };
       return { symbol: extracted?.name ?? 'condensate', ...unit };
     }
   }

@@ -44,9 +44,10 @@ function powerFacts(power: PowerCorrectionReport): Fact[] {
   const d = power.dimension ?? 'd';
   const facts: Fact[] = [];
   if (power.lambdaOverQ !== undefined) facts.push({ label: 'Λ/Q', text: few(power.lambdaOverQ) });
-  if (power.power !== undefined) facts.push({ label: `(Λ/Q)^${d}`, text: few(power.power) });
+  const ratio = d === '1' ? 'Λ/Q' : `(Λ/Q)^${d}`;
+  if (power.power !== undefined && d !== '1') facts.push({ label: ratio, text: few(power.power) });
   if (power.inPowerUnits !== undefined) {
-    facts.push({ label: 'ambiguity', text: `${few(power.inPowerUnits)} times (Λ/Q)^${d}` });
+    facts.push({ label: 'ambiguity', text: `${few(power.inPowerUnits)} times ${ratio}` });
   }
   if (power.GeV !== undefined) {
     facts.push({ label: 'as energy', text: `${few(power.GeV.value)} ${unitOf(power)}` });
