@@ -21,6 +21,8 @@ export interface StatedSingularity {
   /** C_1, C_2, … of the operator's coefficient function 1 + C_1 x + C_2 x² + …, where the file has them. */
   readonly wilson?: readonly Exact[];
   readonly dimension?: Exact;
+  /** The exponent follows from the dimension alone, and the operators may well have an anomalous dimension. */
+  readonly dimensionAlone?: true;
   readonly kind: 'infrared' | 'ultraviolet' | 'other';
   /** The series file, the operator product expansion, or the terms themselves. */
   readonly origin: 'file' | 'operator product expansion' | 'terms';

@@ -22,6 +22,8 @@ export interface ExpectedSingularity {
   readonly dimension?: string;
   readonly exponent?: string;
   readonly strength?: string;
+  /** The exponent is that of the dimension: an anomalous dimension of the operators is not in it. */
+  readonly dimensionAlone?: boolean;
   /** c_1, c_2, … of N (1 − t/t*)^(−γ) [1 + c_1 (1 − t/t*) + …]: as many as the beta function fixes. */
   readonly corrections?: readonly string[];
   /** e_1, e_2, … of c(n) ∝ t*^(−n) Γ(n+γ) [1 + e_1/(n+p) + e_2/((n+p)(n+p−1)) + …], p = γ − 1. */

@@ -204,6 +204,12 @@ function growthTerm(c: Exact, relativeErrorOf: number, estimated: boolean): Grow
   return { logAbs: logAbsOf(c), sign: signExact(c), relativeError: relativeErrorOf, estimated };
 }
 
+/** No anomalous dimension stands behind Λ/Q (a self-energy) and behind the gluon condensate α_s G², to leading order. */
+const WITHOUT_ANOMALOUS: readonly number[] = [1, 4];
+
+const dimensionAlone = (dimension: Exact | undefined): Pick<StatedSingularity, 'dimensionAlone'> =>
+  dimension === undefined || WITHOUT_ANOMALOUS.includes(toNumberExact(dimension)) ? {} : { dimensionAlone: true };
+
 /** File statements first; a condensate or an operator dimension alone brings the expectation of the OPE and the β function. */
 function statedSingularities(series: Series, leadingZeros: number, scale: Exact | undefined): StatedSingularity[] {
   const shift = series.firstPower - 1 + leadingZeros;
@@ -228,6 +234,7 @@ function statedSingularities(series: Series, leadingZeros: number, scale: Exact 
       ...(s.strength === undefined ? {} : { strength: s.strength.value }),
       ...(s.wilsonCorrections === undefined ? {} : { wilson: s.wilsonCorrections }),
       ...(dimension === undefined ? {} : { dimension }),
+      ...(expected !== undefined && s.anomalousDimension === undefined ? dimensionAlone(dimension) : {}),
       kind: s.kind,
       origin: expected === undefined ? 'file' : 'operator product expansion',
     });
@@ -246,6 +253,7 @@ function statedSingularities(series: Series, leadingZeros: number, scale: Exact 
       exponent: addExact(expected.exponent, exact(shift)),
       corrections: shift === 0 ? expected.corrections : [],
       dimension: exact(c.dimension),
+      ...dimensionAlone(exact(c.dimension)),
       kind: 'infrared',
       origin: 'operator product expansion',
     });

@@ -127,6 +127,7 @@ function expectedReport(s: StatedSingularity): ExpectedSingularity {
     ...(s.dimension === undefined ? {} : { dimension: exactText(s.dimension, EXPECTED_DIGITS) }),
     ...(s.exponent === undefined ? {} : { exponent: exactText(s.exponent, EXPECTED_DIGITS) }),
     ...(s.strength === undefined ? {} : { strength: exactText(s.strength, EXPECTED_DIGITS) }),
+    ...(s.dimensionAlone === true ? { dimensionAlone: true } : {}),
     ...(exponent === undefined || corrections.length === 0
       ? {}
       : {

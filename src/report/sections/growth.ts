@@ -82,6 +82,13 @@ function singularities(page: Page, growth: GrowthReport): void {
     );
     page.facts(forms);
   }
+  const alone = growth.expected.filter((s) => s.dimensionAlone === true && s.u !== undefined);
+  if (alone.length > 0) {
+    page.say(
+      `u = ${alone.map((s) => shorten(s.u ?? '', DIGITS)).join(', ')}: the exponent of the dimension alone; an anomalous dimension of the operators is not in it.`,
+      'faint',
+    );
+  }
   if (growth.ultraviolet !== undefined) ultravioletBlock(page, growth.ultraviolet);
   if (growth.strength !== undefined) strengthBlock(page, growth.strength);
 }
