@@ -6,6 +6,7 @@ const MOCKING = ['tests/numerics/polynomial/pade-work.test.ts'];
 export default defineConfig({
   test: {
     testTimeout: 60_000,
+    hookTimeout: 60_000,
     maxWorkers: 2,
     reporters: ['default', './tests/tally.reporter.ts'],
     projects: [
