@@ -7,9 +7,10 @@
  *            Where balls decide nothing (a singular block, a multiple pole) one prime is asked: it proves that an exact
  *            series has the entry and simple poles, and more bits will do; or the series goes to padeExact.
  * Bound      enclosures. Poles have relative accuracy 2^-prec, amplitudes 2^-prec of the strongest amplitude and 64 bits of
- *            their own (doublets may be as weak as 2^-200).
+ *            their own (doublets may be as weak as 2^-1500).
  * Reference  see pade-exact.ts, pade-ball.ts, roots.ts, partial-fractions.ts.
  */
+import * as C from '../ball/complex.js';
 import * as R from '../ball/real.js';
 import type { Ball } from '../ball/real.js';
 import type { Exact } from '../exact.js';
@@ -33,12 +34,22 @@ export interface PadePoles extends PartialFractions {
   readonly entry: PadeFraction<Rational> | PadeFraction<Ball>;
 }
 
-/** Heuristics: highest order L+M done exactly from the start, bits lost per order M at first guess, guard, most bits. */
+/**
+ * Heuristics: highest order L+M done exactly from the start, bits lost per order M at first guess (more beyond HIGH_ORDER), guard,
+ * most bits.
+ */
 const EXACT_ORDER = 16;
 const LOSS_PER_ORDER = 14;
+const HIGH_ORDER = 100;
+const HIGH_LOSS = 2;
 const GUARD_BITS = 16;
 const MAX_BITS = 50_000;
 const ATTEMPTS = 10;
+/**
+ * Heuristic: where added bits leave half of the want or more (a doublet weaker than what is known), the next addition is so many
+ * times longer.
+ */
+const STRIDE = 4;
 /** Heuristic: a series that is not exact is given up when this multiple of the first guess decides nothing. */
 const PATIENCE = 8;
 
@@ -58,19 +69,22 @@ export function padePoles(
   const rational = b.every((c) => c.rational !== undefined) ? b.map((c) => c.rational!) : undefined;
   if (rational !== undefined && L + M <= EXACT_ORDER) return exactPoles(rational, L, M, prec);
   const used = b.slice(0, L + M + 1);
-  const guess = prec + LOSS_PER_ORDER * M + 2 * GUARD_BITS;
+  const guess = prec + LOSS_PER_ORDER * M + HIGH_LOSS * Math.max(0, M - HIGH_ORDER) + 2 * GUARD_BITS;
   let proved = false;
   let reason = '';
   let work = guess;
   let rootBits = prec + GUARD_BITS;
+  let last = Infinity;
+  let stride = 1;
   for (let attempt = 0; attempt < ATTEMPTS && work <= MAX_BITS; attempt++) {
     const balls = used.map((c) => c.ball(work));
     const found = ballPoles(balls, L, M, prec, work, rootBits);
     if ('exists' in found) return found;
     reason = found.reason;
     if (found.missing !== undefined) {
-      const more = Math.ceil(found.missing) + GUARD_BITS;
-      work += more;
+      stride = found.missing > last / 2 ? STRIDE * stride : 1;
+      last = found.missing;
+      work += Math.ceil(found.missing) * stride + GUARD_BITS;
       rootBits = Math.max(rootBits, Math.ceil(found.poleBits ?? 0) + GUARD_BITS);
       continue;
     }
@@ -99,15 +113,20 @@ function ballPoles(
   const missing = prec + GUARD_BITS + M - usefulBits(entry.denominator, meanSize(entry.denominator));
   if (missing > 0) return { reason: `the coefficients of [${L}/${M}] need more bits`, missing };
   const rootsTo = refinableRoots(entry.denominator, jacobi === undefined ? undefined : recurrenceRatio(jacobi));
-  for (let bits = rootBits, last = Infinity; ;) {
+  let shortage: Shortage | undefined;
+  for (let bits = rootBits, stride = 1, reached = -Infinity; ;) {
     const result = rootsTo(bits);
     if ('failed' in result) return { reason: `poles of [${L}/${M}]: ${result.failed}` };
+    const accuracy = Math.min(...result.roots.map((root) => C.accuracyBits(root.value)));
+    // Poles that more bits do not sharpen: the coefficients hold them up.
+    if (shortage !== undefined && accuracy < reached + 1) return shortage;
     const sharp = sharpFractions(entry.numerator, entry.denominator, result.roots, prec, work);
     if (!('reason' in sharp)) return { exists: true, entry, ...sharp };
-    // Sharper poles that leave half of the want or more: the coefficients hold it up.
-    if (sharp.missing === undefined || sharp.poleBits === undefined || sharp.missing > last / 2) return sharp;
-    last = sharp.missing;
-    bits = Math.max(bits, Math.ceil(sharp.poleBits) + GUARD_BITS);
+    if (sharp.missing === undefined || sharp.poleBits === undefined) return sharp;
+    if (shortage?.missing !== undefined) stride = sharp.missing > shortage.missing / 2 ? STRIDE * stride : 1;
+    bits = Math.max(bits, Math.ceil(sharp.poleBits + (stride - 1) * sharp.missing)) + GUARD_BITS;
+    if (bits > 2 * work) return sharp;
+    [shortage, reached] = [sharp, accuracy];
   }
 }
 

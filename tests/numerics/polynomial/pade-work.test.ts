@@ -113,6 +113,18 @@ describe('poles that nearly coincide', () => {
     }
   });
 
+  test('a doublet hundreds of bits below the other poles: bits are added in growing strides', () => {
+    for (const n of [45, 96]) {
+      const { series, asked } = recorded(borelSeries(2 * n + 1));
+      const result = padePoles(series, n, n, 60);
+      if (!result.exists) throw new Error(result.reason);
+      const weakest = result.poles.reduce((a, b) => (C.upperBits(a.amplitude) < C.upperBits(b.amplitude) ? a : b));
+      expect(C.upperBits(weakest.amplitude)).toBeLessThan(-400);
+      expect(C.accuracyBits(weakest.amplitude)).toBeGreaterThanOrEqual(60);
+      expect(asked.size).toBeLessThanOrEqual(3);
+    }
+  });
+
   test('roots that coincide within the error of the coefficients: given up at the bits these have', () => {
     // (x − 1)²(x − 2)²(x + 3) with 200 bits
     const square = poly(12, -32, 27, -5, -3, 1).map((c) => R.addRelativeError(R.fromRational(c, 400), 2 ** -200));
