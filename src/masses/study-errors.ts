@@ -92,7 +92,7 @@ export function inputErrors(
       : undefined,
     thresholdShift(request, central),
   ];
-  return shifts.find(isRefusal) ?? shifts.filter((s) => s !== undefined && !isRefusal(s));
+  return shifts.find(isRefusal) ?? shifts.filter((s): s is Shift => s !== undefined && !isRefusal(s));
 }
 
 /** Scales looked at, in units of the one used. */
