@@ -106,7 +106,7 @@ describe('magnitudes', () => {
         expect(x).toBeGreaterThan(0);
         if (x < Infinity) expect(Rational.fromNumber(x).cmp(exactly(a))).toBeGreaterThanOrEqual(0);
         expect(magBits(a)).toBeCloseTo(Math.log2(a.m) + a.e, 9);
-        if (magBits(a) > -1000 && magBits(a) < 1023) expect(Math.log2(x)).toBeCloseTo(magBits(a), 9);
+        if (magBits(a) > -1000 && magBits(a) < 1023 && a.e <= 1200) expect(Math.log2(x)).toBeCloseTo(magBits(a), 9);
         if (magBits(a) > 1025) expect(x).toBe(Infinity);
         if (magBits(a) < -1075) expect(x).toBe(Number.MIN_VALUE);
       }),
