@@ -70,7 +70,9 @@ export function parametricShifts(
   shifts.push(shiftBetween('α_s', central, varied));
   shifts.push(thresholdMasses(setting, central));
   const lost = shifts.find((s) => s !== undefined && isRefusal(s));
-  return lost !== undefined && isRefusal(lost) ? lost : shifts.filter((s): s is Shift => s !== undefined && !isRefusal(s));
+  return lost !== undefined && isRefusal(lost)
+    ? lost
+    : shifts.filter((s): s is Shift => s !== undefined && !isRefusal(s));
 }
 
 /** Errors of the threshold masses, in quadrature; the crossing scale moves along with its mass. */
