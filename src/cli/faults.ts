@@ -9,8 +9,8 @@ export class UsageError extends Error {
   /** Command whose help is pointed to; none for an unknown command. */
   readonly command: string | undefined;
 
-  constructor(message: string, command?: string) {
-    super(message);
+  constructor(message: string, command?: string, options?: ErrorOptions) {
+    super(message, options);
     this.command = command;
   }
 }

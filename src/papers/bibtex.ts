@@ -43,7 +43,7 @@ function sourceText(source: string, i: number, id: string): string {
 }
 
 /** Names of prescriptions and models anywhere in a result. */
-function methodsIn(value: unknown, found: Set<string>): Set<string> {
+export function methodsIn(value: unknown, found = new Set<string>()): Set<string> {
   if (Array.isArray(value)) for (const entry of value) methodsIn(entry, found);
   else if (typeof value === 'object' && value !== null) {
     const refused = 'refused' in value && value.refused !== undefined;
@@ -82,7 +82,7 @@ export function bibtexOf(result: object, command: string): string {
   const id = [of.id, of.name].find((name) => typeof name === 'string') ?? 'series';
   return `${[
     own,
-    ...referencesFor(command, [...methodsIn(result, new Set())]).map(referenceText),
+    ...referencesFor(command, [...methodsIn(result)]).map(referenceText),
     ...sources.map((source, i) => sourceText(source, i, id)),
   ].join('\n\n')}\n`;
 }

@@ -33,6 +33,8 @@ export interface ChartKind {
   readonly summary: string;
   /** Commands whose results it draws, the one that is run for a series first. */
   readonly from: readonly string[];
+  /** What the result must hold, where not every result of these commands does. */
+  readonly wants?: string;
   draw(result: SavedResult): Chart;
 }
 
@@ -84,12 +86,14 @@ export const CHART_KINDS: readonly ChartKind[] = [
     name: 'budget',
     summary: 'the error budget of an extraction',
     from: ['extract'],
+    wants: 'an extraction in which a prescription has a value',
     draw: (result) => budgetChart(result as SavedResult & (ExtractResult | FitResult)),
   },
   {
     name: 'replicas',
     summary: 'the histogram of an extraction with replicas',
     from: ['extract'],
+    wants: 'the result of extract with --replicas 10000 --json',
     draw: (result) => replicasChart(result as SavedResult & { readonly replicas?: DrawnReplicas }),
   },
 ];

@@ -80,6 +80,12 @@ export function cautions(
       code: 'wide-coupling',
       text: `the error of the coupling is ${Math.round(100 * wide)} % of it: errors carried linearly are no more than orders of magnitude`,
     });
+  const drowned = values.filter(drownedInAmbiguity).map((v) => v.prescription.name);
+  if (drowned.length > 0)
+    list.push({
+      code: 'ambiguity-above-value',
+      text: `the ambiguity |Im|/pi exceeds the value itself (${drowned.join(', ')}): at this coupling the series says nothing`,
+    });
   const spread = centralSpread(values);
   if (spread !== undefined) list.push(spread);
   if (expanded.expansion.stated.length > 0 && growth.nearest !== undefined) {
@@ -95,6 +101,11 @@ export function cautions(
       });
   }
   return dedupe(list);
+}
+
+function drownedInAmbiguity({ outcome }: Evaluated): boolean {
+  if (outcome.kind !== 'sum' || outcome.central !== true || outcome.imaginary === undefined) return false;
+  return Math.abs(R.toNumber(outcome.imaginary)) / Math.PI > Math.abs(R.toNumber(outcome.value));
 }
 
 /** Central values of the resumming prescriptions that differ far beyond their stated errors. */

@@ -81,3 +81,11 @@ test('one coefficient: nothing is said of terms that fall', async () => {
   expect(page).not.toMatch(/still fall/);
   expect(page).toContain('one term alone has none to compare with');
 });
+
+test('an ambiguity above the value is said to drown it', () => {
+  // Σ n! x^n at x = 2: Im = π e^(−1/2)/2 exactly, |Im|/π = 0.303 above PV = e^(−1/2) Ei(1/2)/2 = 0.138 (mpmath 1.2.1).
+  const codes = (x: string): string[] =>
+    run(benchSeries(benchFile('s02_euler_nonalternating'), 12), x).cautions.map((c) => c.code);
+  expect(codes('2')).toContain('ambiguity-above-value');
+  expect(codes('1/10')).not.toContain('ambiguity-above-value');
+});

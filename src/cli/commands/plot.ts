@@ -4,7 +4,7 @@ import { EXIT, UsageError } from '../faults.js';
 import { couplingOf, readSeries, requestOf, USUAL_DIGITS, wantedCoupling } from '../input.js';
 import { deliver } from '../output.js';
 import { presentation } from '../present.js';
-import { savedResult } from '../saved.js';
+import { drawnFrom, savedResult } from '../saved.js';
 import type { Chart, ChartKind, Format, SavedResult } from '../../pictures/index.js';
 
 const FORMS = ['svg', 'pdf', 'png'] as const;
@@ -95,7 +95,8 @@ function checkDrawn(kind: ChartKind, chart: Chart, result: SavedResult): void {
   const refused = 'refused' in result ? result['refused'] : 'stopped' in result ? result['stopped'] : undefined;
   const reason =
     typeof refused === 'object' && refused !== null && 'reason' in refused ? `: ${String(refused.reason)}` : '';
-  throw new UsageError(`plot ${kind.name}: there is nothing to draw${reason}`, plot.name);
+  const remedy = kind.wants === undefined ? '' : `; wanted ${kind.wants}`;
+  throw new UsageError(`plot ${kind.name}: there is nothing to draw${reason}${remedy}`, plot.name);
 }
 
 async function draw(chart: Chart, call: Call, form: Form | 'terminal'): Promise<string | Uint8Array> {
@@ -126,14 +127,14 @@ async function run(call: Call): Promise<number> {
   const kind = await kindOf(kindName);
   const form = formOf(call);
   await sizeOf(given.size);
-  const saved = await savedResult(name);
+  const saved = await savedResult(name, plot.name);
   if (saved !== undefined && !kind.from.includes(saved.request.command))
     throw new UsageError(
       `${name} holds a result of ${saved.request.command}; plot ${kind.name} draws one of ${kind.from.join(' or ')}`,
       plot.name,
     );
   const result = saved ?? (await resultFor(kind, name, call));
-  const chart = kind.draw(result);
+  const chart = drawnFrom(saved === undefined ? [] : [name], plot.name, () => kind.draw(result));
   checkDrawn(kind, chart, result);
   const { pictures } = await import('../rooms-pictures.js');
   deliver(given.csv === true ? pictures.chartCsv(chart) : await draw(chart, call, form), call);
@@ -145,7 +146,7 @@ export const plot: Command = {
   summary: 'a chart as SVG, PDF or PNG, or drawn in the terminal',
   about: [
     'Kinds: terms (terms and partial sums), ratios, plane (the Borel plane), values (by prescription), scale (dependence on the renormalisation scale), integrand (of the Borel integral), coverage (of stated errors in back-tests), budget and replicas (of a saved extraction).',
-    'SERIES may also be the file of a result written with --json by the command that the chart is drawn from: assess for terms, ratios, plane and values, compare for values, backtest for coverage, extract for budget and replicas. With --csv the plotted numbers.',
+    'SERIES may also be the file of a result written with --json by the command that the chart is drawn from: assess for terms, ratios, plane and values, growth for ratios, plane for plane, compare and sum for values, backtest for coverage, extract for budget and replicas. With --csv the plotted numbers.',
   ],
   operands: [
     { name: 'KIND', help: 'terms, ratios, plane, values, scale, integrand, coverage, budget or replicas' },

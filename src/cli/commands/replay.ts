@@ -50,7 +50,7 @@ function textOf(name: string, { differences, sameDigits, reasons }: Replay): str
 export function replayCommand(others: readonly Command[]): Command {
   async function run(call: Call): Promise<number> {
     const [name = ''] = call.operands;
-    const saved = await savedResult(name);
+    const saved = await savedResult(name, 'replay');
     if (saved === undefined)
       throw new UsageError(
         `${name} holds no result with the request behind it: wanted a file that ends in .json, written with --json by another command`,

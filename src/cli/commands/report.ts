@@ -5,7 +5,7 @@ import type { Call, Command } from '../command.js';
 import { EXIT, UsageError } from '../faults.js';
 import { couplingOf, readSeries, requestOf, USUAL_DIGITS, wantedCoupling } from '../input.js';
 import { deliver } from '../output.js';
-import { savedResult } from '../saved.js';
+import { drawnFrom, savedResult } from '../saved.js';
 import type { SavedResult } from '../../pictures/index.js';
 
 type Provenance = (readonly [name: string, value: string])[];
@@ -58,19 +58,22 @@ async function run(call: Call): Promise<number> {
   const { operands } = call;
   const results: SavedResult[] = [];
   const provenance: Provenance = [];
+  const files: string[] = [];
   for (const name of operands) {
-    const saved = await savedResult(name);
+    const saved = await savedResult(name, report.name);
     if (saved === undefined && operands.length > 1)
       throw new UsageError(
         `${name} is no saved result; several operands must all be files written with --json`,
         report.name,
       );
+    if (saved !== undefined) files.push(name);
     results.push(...(saved === undefined ? await studied(name, call) : [saved]));
     provenance.push(...(await fileHash(name)));
   }
   provenance.push(['sha256 of the results', sha256(JSON.stringify(results))]);
   const { papers } = await import('../rooms-pictures.js');
-  deliver(papers.reportPage({ results, provenance }), call);
+  const page = drawnFrom(files, report.name, () => papers.reportPage({ results, provenance }));
+  deliver(page, call);
   return EXIT.done;
 }
 

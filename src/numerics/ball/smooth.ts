@@ -15,9 +15,9 @@ import { PRIMES, RELATIONS } from './relations.js';
 /** Heuristic: from this working precision on the reduction by primes is cheaper than tables. */
 export const SMOOTH_FROM = 900;
 
-/** Heuristic: rows of the table that pay at wp bits; the rest is then below 2^-29 at least. */
+/** Heuristic: rows of the table that pay at wp bits; the rest is then below 2^-43 at least. */
 export function rowsFor(wp: number): number {
-  return Math.min(RELATIONS.length, 1 + Math.ceil(Math.sqrt(wp) / 2));
+  return Math.min(RELATIONS.length, 8 + Math.ceil(Math.sqrt(wp) / 2));
 }
 
 /** t = high·2^-45 + low·2^-90 with integers high and low; |t| < 2^REACH keeps all products of words exact in doubles. */

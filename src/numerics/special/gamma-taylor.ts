@@ -7,7 +7,7 @@
  * Bound      units of 2^-base, base = wp + GUARD; the centre is c, y = 2c, |y| <= 1 − 2^(1−b). An error e in every coefficient of the series
  *            changes coefficient k at c by e (1−|y|)^(−k−1), which the scale 2^((1−b)k) of w^k brings back to e·2^(b−1). The same holds for an
  *            error of a unit made in round i of the synthetic division, where coefficients have lost (b−1)i bits at most: n·2^b
- *            from floors, twice that with those of the cuts. All below (2^11 + 2 n)·2^b <= 2^20 units, so an E_k is right to 0.51 units of 2^-wp.
+ *            from floors, twice that with those of the cuts. All below (2^11 + 2 n)·2^b <= 2^21 units, so an E_k is right to 0.51 units of 2^-wp.
  *            Horner: 3 units a step, 0.51 for each coefficient that rounds to 0, one for the tail.
  * Reference  DLMF 5.7.1; W. G. Horner, Phil. Trans. 109 (1819) 308 (shifts by synthetic division).
  */
@@ -18,7 +18,7 @@ import { reciprocalGammaSeries, seriesLength } from './reciprocal-gamma-series.j
 /** Heuristic: beyond it the coefficients cost more than they save. Working bits. */
 export const TAYLOR_LIMIT = 4096;
 const GUARD = 28;
-/** Heuristic: from here on four times as many centres. */
+/** Heuristic: from here on sixteen times as many centres. */
 const MANY_FROM = 1500;
 /** Low bits are dropped in steps of this size while a polynomial is moved. */
 const DROP = 60;
@@ -26,13 +26,13 @@ const DROP = 60;
 interface Centre {
   /** E_k in units of 2^-wp. */
   readonly e: readonly bigint[];
-  /** Words that the running value of step k has, and one. */
+  /** Words that hold the running value of step k: as many of w are needed, and cost it less than a unit. */
   readonly words: readonly number[];
   readonly ulps: number;
 }
 
 /** b of the centres (2i+1)/2^b. */
-const centreBits = (wp: number): number => (wp < MANY_FROM ? 5 : 7);
+const centreBits = (wp: number): number => (wp < MANY_FROM ? 5 : 9);
 
 /** Taylor coefficients at t/2^b, t odd, scaled to w = 2^b v. */
 function move(t: number, b: number, wp: number): Centre {
@@ -57,7 +57,7 @@ function move(t: number, b: number, wp: number): Centre {
   let reach = 0n;
   for (let k = e.length - 1; k >= 0; k--) {
     reach += e[k]! < 0n ? -e[k]! : e[k]!;
-    words[k] = Math.min(wp >> 6, Math.ceil(bitLength(reach) / 64) + 1);
+    words[k] = Math.min(wp >> 6, Math.ceil(bitLength(reach) / 64));
   }
   return { e, words, ulps: 3 * e.length + seriesLength(base) + 8 };
 }
@@ -116,7 +116,7 @@ export function reciprocalGamma(u: bigint, wp: number): { value: bigint; ulps: n
   const { e, words, ulps } = centre;
   const t = 2 * i + 1 - (1 << (b - 1));
   const w = (u << BigInt(b)) - (BigInt(t) << BigInt(wp));
-  // w cut to whole words, as many as the running value has bits, and one.
+  // w cut to whole words, as many as the running value has.
   const cuts: bigint[] = [0n];
   for (let n = 1; n <= words[0]!; n++) cuts.push(w >> BigInt(wp - 64 * n));
   let s = e[e.length - 1]!;

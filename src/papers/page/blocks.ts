@@ -28,10 +28,10 @@ export function tableHtml(table: PaperTable): string {
 }
 
 /** A chart inline; its title and description stand in the SVG for those who do not see it. */
-export function figureHtml(chart: Chart): string {
+export function figureHtml(chart: Chart, mark = ''): string {
   const format = formatNamed('page');
   if (format === undefined) return '';
-  return `<figure>${svgOf(pictureOf(chart, format))}<figcaption>${html(chart.title)}. ${html(chart.description)}</figcaption></figure>`;
+  return `<figure>${svgOf(pictureOf(chart, format), mark)}<figcaption>${html(chart.title)}. ${html(chart.description)}</figcaption></figure>`;
 }
 
 export const factsHtml = (facts: readonly (readonly [name: string, value: string | undefined])[]): string =>

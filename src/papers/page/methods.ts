@@ -73,5 +73,7 @@ const methodHtml = ({ title, formula, words }: Method): string =>
   `<h3>${html(title)}</h3>\n<div class="formula" tabindex="0" role="group" aria-label="${html(`Formula: ${title}`)}">${mathML(formula)}</div>\n<p>${html(words)}</p>`;
 
 /** The methods named, with their formulas; those without a formula here are left to the manual. */
-export const methodsHtml = (names: readonly string[]): string =>
-  [...names.flatMap((name) => METHODS[name] ?? []), AMBIGUITY].map(methodHtml).join('\n');
+export function methodsHtml(names: readonly string[]): string {
+  const known = names.flatMap((name) => METHODS[name] ?? []);
+  return known.length === 0 ? '' : [...known, AMBIGUITY].map(methodHtml).join('\n');
+}

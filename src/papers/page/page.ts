@@ -7,7 +7,9 @@ import type { SavedResult } from '../../pictures/index.js';
 import type { Assessment } from '../../studies/index.js';
 import { tablesOf } from '../of-result.js';
 import { plainNumber } from '../markdown.js';
+import { methodsIn } from '../bibtex.js';
 import { referencesFor } from '../references.js';
+import type { Reference } from '../references.js';
 import { symmetric } from '../table.js';
 import { figureHtml, factsHtml, listHtml, tableHtml } from './blocks.js';
 import { html, scriptJson } from './escape.js';
@@ -42,18 +44,23 @@ const TITLES: Readonly<Record<string, string>> = {
   sum: 'Sums',
   evolve: 'Evolution',
   extract: 'Extraction',
+  mass: 'Masses by definition',
+  contour: 'Integral over a circle',
+  bubbles: 'Exact large-β₀ limit',
+  rewrite: 'Series rewritten',
+  combine: 'Series combined',
 };
 
 const isAssessment = (result: SavedResult): result is SavedResult & Assessment => result.request.command === 'assess';
 
-function assessmentSections(result: SavedResult & Assessment): Section[] {
+function assessmentSections(result: SavedResult & Assessment, mark = ''): Section[] {
   const { verdict, series, coupling, growth, cautions } = result;
   const tables = new Map(tablesOf(result).map((table) => [table.name, table]));
   const table = (name: string): string => {
     const found = tables.get(name);
     return found === undefined ? '' : tableHtml(found);
   };
-  const figure = (name: string): string => chartOf(result, name);
+  const figure = (name: string): string => chartOf(result, name, mark);
   return [
     {
       id: 'verdict',
@@ -121,11 +128,18 @@ function assessmentSections(result: SavedResult & Assessment): Section[] {
 }
 
 /** The chart of a kind, where the result has something to draw. */
-function chartOf(result: SavedResult, name: string): string {
+function chartOf(result: SavedResult, name: string, mark = ''): string {
   const kind = CHART_KINDS.find((entry) => entry.name === name);
   if (kind === undefined || !kind.from.includes(result.request.command)) return '';
   const chart = kind.draw(result);
-  return chart.data.some(({ rows }) => rows.length > 0) ? figureHtml(chart) : '';
+  return chart.data.some(({ rows }) => rows.length > 0) ? figureHtml(chart, mark) : '';
+}
+
+/** What results of other commands say in words, where they do. */
+interface Spoken {
+  readonly summary?: { readonly printed?: string; readonly values?: readonly { readonly printed: string }[] };
+  readonly difference?: { readonly statement: string };
+  readonly cautions?: readonly (string | { readonly text: string })[];
 }
 
 function otherSection(result: SavedResult, i: number): Section {
@@ -134,33 +148,73 @@ function otherSection(result: SavedResult, i: number): Section {
     ({ name }) => name,
   );
   const title = TITLES[command] ?? TITLES[charts[0] ?? ''] ?? command;
-  const body = charts.map((name) => chartOf(result, name)).join('') + tablesOf(result).map(tableHtml).join('\n');
+  const { summary, difference, cautions = [] } = result as Spoken & SavedResult;
+  // A back-test over several series has a summary of another kind: a list.
+  const quoted = Array.isArray(summary) ? [] : [summary?.printed, ...(summary?.values ?? []).map((v) => v.printed)];
+  const lines = [...quoted, difference?.statement];
+  const words = lines.flatMap((line) => (line === undefined ? [] : [`<p class="verdict">${html(line)}</p>`])).join('');
+  const warned = cautions.map((caution) => (typeof caution === 'string' ? caution : caution.text));
+  const body =
+    words +
+    charts.map((name) => chartOf(result, name, String(i))).join('') +
+    tablesOf(result).map(tableHtml).join('\n') +
+    (warned.length === 0 ? '' : `<h3>Cautions</h3>${listHtml(warned, 'cautions')}`);
   return { id: `${command}-${i}`, title, body };
 }
 
-function methodSection(results: readonly SavedResult[]): Section {
-  const names = new Set<string>();
-  for (const result of results)
-    if (isAssessment(result)) for (const { prescription } of result.values) names.add(prescription);
-  const references = referencesFor('assess', [...names]).map(
-    ({ authors, book, journal, volume, year, pages, eprint }) =>
-      `${authors.join(', ')}${book === undefined ? '' : `, ${book}`}${journal === undefined ? '' : `, ${journal} ${volume ?? ''}`} (${year})${pages === undefined ? '' : ` ${pages}`}${eprint === undefined ? '' : `, arXiv:${eprint}`}`,
+function referenceText({ authors, book, journal, volume, year, pages, eprint }: Reference): string {
+  const where = journal === undefined ? '' : `, ${journal}${volume === undefined ? '' : ` ${volume}`}`;
+  return (
+    // Braces keep the name of a group whole in BibTeX.
+    `${authors.join(', ').replace(/[{}]/g, '')}${book === undefined ? '' : `, ${book}`}${where} (${year})` +
+    `${pages === undefined ? '' : ` ${pages}`}${eprint === undefined ? '' : `, arXiv:${eprint}`}`
   );
+}
+
+/** Formulas and literature of the methods whose numbers stand in the results. */
+function methodSection(results: readonly SavedResult[]): Section {
+  const names = [...methodsIn(results)];
+  const references = results.flatMap(({ request }) => referencesFor(request.command, names)).map(referenceText);
+  const formulas = methodsHtml(names);
   return {
     id: 'methods',
-    title: 'Methods and references',
-    body: `${methodsHtml([...names])}<h3>References</h3>${listHtml(references)}`,
+    title: formulas === '' ? 'References' : 'Methods and references',
+    body:
+      formulas +
+      (references.length === 0
+        ? ''
+        : `${formulas === '' ? '' : '<h3>References</h3>'}${listHtml([...new Set(references)])}`),
   };
+}
+
+/** Several assessments on one page: the names of the later ones' sections get a number. */
+const numbered = (sections: readonly Section[], i: number, title: string): Section[] =>
+  sections.map((section) => ({ ...section, id: `${section.id}-${i}`, title: `${section.title}: ${title}` }));
+
+/** The name of a page without an assessment: that of its first table. */
+function pageTitle(results: readonly SavedResult[]): string {
+  const main = results.find(isAssessment);
+  if (main !== undefined) return `${main.series.title} at ${main.coupling.name} = ${main.coupling.value}`;
+  return results.flatMap(tablesOf)[0]?.title ?? 'Leastterm report';
+}
+
+function resultSections(results: readonly SavedResult[]): Section[] {
+  const first = results.find(isAssessment);
+  return results.flatMap((result, i) => {
+    if (!isAssessment(result)) return [otherSection(result, i)];
+    const sections = assessmentSections(result, String(i));
+    return result === first
+      ? sections
+      : numbered(sections, i, `${result.series.title} at ${result.coupling.name} = ${result.coupling.value}`);
+  });
 }
 
 /** The page. Every picture and table is drawn from the results alone. */
 export function reportPage({ results, provenance }: ReportInput): string {
-  const main = results.find(isAssessment);
-  const title =
-    main === undefined ? 'Leastterm report' : `${main.series.title} at ${main.coupling.name} = ${main.coupling.value}`;
+  const title = pageTitle(results);
   const version = results[0] !== undefined && 'leastterm' in results[0] ? String(results[0].leastterm) : '';
   const sections: Section[] = [
-    ...results.flatMap((result, i) => (isAssessment(result) ? assessmentSections(result) : [otherSection(result, i)])),
+    ...resultSections(results),
     methodSection(results),
     {
       id: 'provenance',

@@ -15,7 +15,7 @@ a { color: var(--link); }
 a:focus-visible, [tabindex]:focus-visible, summary:focus-visible { outline: 3px solid var(--link); outline-offset: 2px; }
 .skip { position: absolute; left: -999rem; }
 .skip:focus { left: 1rem; top: 1rem; background: var(--paper); padding: 0.4rem; }
-nav ol { columns: 2; padding-left: 1.4rem; font-size: 0.9rem; }
+nav ol { columns: 16rem 2; padding-left: 1.4rem; font-size: 0.9rem; }
 nav a { display: inline-block; min-height: 1.6rem; line-height: 1.6rem; }
 .verdict { background: var(--tint); border-left: 4px solid var(--link); padding: 0.8rem 1rem; font-size: 1.15rem; }
 .facts { display: grid; grid-template-columns: max-content 1fr; gap: 0.15rem 1rem; font-size: 0.9rem; margin: 0.6rem 0; }

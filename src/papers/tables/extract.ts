@@ -1,7 +1,8 @@
 /** @module The tables of an extraction, of one measurement or of several fitted together: values and their budgets. */
-import type { BudgetEntry, ExtractResult, FitResult } from '../../extraction/index.js';
+import type { BudgetEntry, ExtractResult, FitResult, ReplicaResult } from '../../extraction/index.js';
 import { measured, number, size, text } from '../table.js';
 import type { NamedError, PaperTable } from '../table.js';
+import { replicaTables } from './replicas.js';
 
 const bare = (value: string): string => value.replace(/^[-+]/, '');
 
@@ -105,5 +106,9 @@ function fit(result: FitResult): PaperTable[] {
   ];
 }
 
-export const extractTables = (result: ExtractResult | FitResult): PaperTable[] =>
-  result.kind === 'fit' ? fit(result) : single(result);
+type WithReplicas = (ExtractResult | FitResult) & { readonly replicas?: ReplicaResult };
+
+export const extractTables = (result: WithReplicas): PaperTable[] => [
+  ...(result.kind === 'fit' ? fit(result) : single(result)),
+  ...replicaTables(result.replicas),
+];

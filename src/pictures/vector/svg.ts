@@ -41,9 +41,9 @@ function textElement(mark: TextMark): string {
   return `<path d="${d}" fill="${mark.colour}"${turn}/>`;
 }
 
-/** The picture as a complete SVG document. */
-export function svgOf(picture: Picture): string {
-  const id = idOf(picture.title + picture.description + String(picture.marks.length));
+/** The picture as a complete SVG document; `place` tells its ids from those of the same picture elsewhere on a page. */
+export function svgOf(picture: Picture, place = ''): string {
+  const id = idOf(picture.title + picture.description + String(picture.marks.length) + place);
   const boxes = new Map<string, string>();
   const clipId = (box: Box): string => {
     const key = boxKey(box);

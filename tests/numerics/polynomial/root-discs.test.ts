@@ -151,15 +151,19 @@ describe('boxes', () => {
     }
   });
 
-  test('only those that meet', () => {
-    const p = withRoots([q(1), q(9, 8), q(64)], q(1));
-    const at: Point[] = [
-      [1.0625, 0],
-      [1.09375, 0],
-      [64, 0],
-    ];
+  test.each([0, 40, -40])('only those that meet, at the scale 2^%i', (k) => {
+    const unit = Rational.fromNumber(2 ** k);
+    const p = withRoots([q(1).mul(unit), q(9, 8).mul(unit), q(64).mul(unit)], q(1));
+    const at = [1.0625, 1.09375, 64].map((x): Point => [x * 2 ** k, 0]);
     const { crowded, disjoint } = smithDiscs(cloud(exactBalls(p), at));
     expect([Array.from(crowded), disjoint]).toEqual([[1, 1, 0], false]);
+    const good = smithDiscs(
+      cloud(
+        exactBalls(p),
+        [1.0001, 1.1249, 64].map((x): Point => [x * 2 ** k, 0]),
+      ),
+    );
+    expect([Array.from(good.crowded), good.disjoint]).toEqual([[0, 0, 0], true]);
   });
 });
 
@@ -200,6 +204,22 @@ describe('symmetry', () => {
     ] as const) {
       expect([c.re[j], c.im[j], c.exp[j]]).toEqual([c.re[i], -c.im[i]!, c.exp[i]]);
     }
+  });
+
+  test('mirror images find each other across a change of unit', () => {
+    // moduli 1.410 and 1.421: units 1 and 2
+    const [done, c] = pairUp(
+      [
+        [1.3, 0.546],
+        [0.7, -0.27],
+        [1.31, -0.55],
+        [0.7, 0.271],
+      ],
+      -20,
+    );
+    expect(c.exp[0]).toBe(0);
+    expect(done).toBe(true);
+    expect(Array.from(c.partner)).toEqual([2, 3, 0, 1]);
   });
 
   test('a disc that reaches the axis makes a real root, one that stops short of it does not', () => {
