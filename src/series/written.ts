@@ -64,9 +64,9 @@ export function decimalText(q: Rational): string | undefined {
   const digits = all.replace(/0+$/, '');
   if (digits.length > SHORT) return undefined;
   const exponent = all.length - digits.length - places;
-  const decimal = { coefficient: BigInt(digits) * BigInt(q.sign()), exponent };
+  const short = { coefficient: BigInt(digits) * BigInt(q.sign()), exponent };
   const leading = all.length - places;
   return Math.abs(leading) > LONGEST || digits.length - exponent > SHORT
-    ? writeScientific(decimal)
-    : writePlain(decimal);
+    ? writeScientific(short)
+    : writePlain(short);
 }
