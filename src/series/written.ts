@@ -66,7 +66,5 @@ export function decimalText(q: Rational): string | undefined {
   const exponent = all.length - digits.length - places;
   const short = { coefficient: BigInt(digits) * BigInt(q.sign()), exponent };
   const leading = all.length - places;
-  return Math.abs(leading) > LONGEST || digits.length - exponent > SHORT
-    ? writeScientific(short)
-    : writePlain(short);
+  return Math.abs(leading) > LONGEST || digits.length - exponent > SHORT ? writeScientific(short) : writePlain(short);
 }
