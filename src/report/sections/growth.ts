@@ -227,10 +227,14 @@ function ratioTable(page: Page, growth: GrowthReport): void {
   page.say('Both columns tend to 1/t* when one singularity leads. Indicative.', 'faint');
 }
 
+/** The fits are made in doubles: a miss of the size of their rounding is none. */
+const ROUNDING = 1e-10;
+const missText = (miss: string): string => (Math.abs(Number(miss)) < ROUNDING ? '0 %' : percent(miss));
+
 function predictionFacts(growth: GrowthReport): Fact[] {
   return growth.evidence.predictions.map((p) => ({
     label: 'prediction',
-    text: `coefficient ${p.n} hidden, then predicted by ${p.method}: off by ${percent(p.relativeMiss)}`,
+    text: `coefficient ${p.n} hidden, then predicted by ${p.method}: off by ${missText(p.relativeMiss)}`,
   }));
 }
 
