@@ -25,14 +25,20 @@ const LOG2_10 = Math.log2(10);
 
 const outfile = join(ROOT, 'node_modules', '.cache', 'leastterm', 'bench-numerics', 'numerics.mjs');
 await build({
-  stdin: { contents: "export * from './src/numerics/index.ts'; export { laplace } from './src/borel/index.ts';", resolveDir: ROOT, loader: 'ts' },
+  stdin: {
+    contents: "export * from './src/numerics/index.ts'; export { laplace } from './src/borel/index.ts';",
+    resolveDir: ROOT,
+    loader: 'ts',
+  },
   bundle: true,
   platform: 'node',
   format: 'esm',
   outfile,
   logLevel: 'warning',
 });
-const { atan, exact, exp, expintE1, gamma, laplace, log, padePoles, R, Rational, toDecimal, upperGamma } = await import(outfile);
+const { atan, exact, exp, expintE1, gamma, laplace, log, padePoles, R, Rational, toDecimal, upperGamma } = await import(
+  outfile
+);
 
 const bits = (digits) => Math.ceil(digits * LOG2_10) + 1;
 const OPERATIONS = {
@@ -85,6 +91,15 @@ function ourOperations() {
     }
   }
   return out;
+}
+
+/** Least microseconds of the bare product and quotient of two BigInts of these digits: no arrangement of such products can be faster. */
+function bare(digits) {
+  const p = bits(digits);
+  const integers = (n) => Array.from({ length: 8 }, (_, i) => R.mul(root(n, p), R.fromNumber(21 + i), p).mid);
+  const [xs, ys] = [integers(2), integers(3)];
+  const wide = xs.map((x) => x << BigInt(p));
+  return { product: least((i) => xs[i & 7] * ys[i & 7]), quotient: least((i) => wide[i & 7] / ys[i & 7]) };
 }
 
 /** b_n = (1.3696)_n/n!·2^n + 0.3·(1.2)_n/n!·(−1)^n, exactly: two branch points, at 1/2 and −1. */
@@ -140,7 +155,11 @@ function pythonRun(orders) {
     pipelineDigits: PIPELINE_DIGITS,
   };
   const program = existsSync(DEBIAN_PYTHON) ? DEBIAN_PYTHON : 'python3';
-  const run = spawnSync(program, [join(ROOT, 'tests/bench/numerics-reference.py')], { input: JSON.stringify(task), encoding: 'utf8', maxBuffer: 1 << 28 });
+  const run = spawnSync(program, [join(ROOT, 'tests/bench/numerics-reference.py')], {
+    input: JSON.stringify(task),
+    encoding: 'utf8',
+    maxBuffer: 1 << 28,
+  });
   if (run.status !== 0) throw new Error(`python3 with mpmath is needed: ${run.stderr}`);
   return JSON.parse(run.stdout);
 }
@@ -154,12 +173,17 @@ function pariRun() {
     `PIPELINE_DIGITS=${PIPELINE_DIGITS}`,
     `read("${join(ROOT, 'tests/bench/numerics-reference.gp')}")`,
   ];
-  const run = spawnSync('gp', ['-q', '-f', '-s', '1G'], { input: head.join('\n') + '\n', encoding: 'utf8', maxBuffer: 1 << 28 });
+  const run = spawnSync('gp', ['-q', '-f', '-s', '1G'], {
+    input: head.join('\n') + '\n',
+    encoding: 'utf8',
+    maxBuffer: 1 << 28,
+  });
   if (run.status !== 0) throw new Error(`PARI/GP is needed: ${run.stderr}`);
   const out = { operations: {}, pipeline: {} };
   for (const line of run.stdout.replaceAll(' E', 'e').split('\n')) {
     const [kind, key, ...rest] = line.trim().split(/ +/);
-    if (kind === 'operation') (out.operations[key] ??= {})[rest[0].replace('-', ' ')] = { us: Number(rest[1]), value: rest[2] };
+    if (kind === 'operation')
+      (out.operations[key] ??= {})[rest[0].replace('-', ' ')] = { us: Number(rest[1]), value: rest[2] };
     if (kind === 'pipeline') out.pipeline[key] = { s: Number(rest[0]) / 1000, re: rest[1], im: rest[2] };
   }
   return out;
@@ -204,10 +228,17 @@ function check(what, a, b, digits) {
 function sameDigits(a, b, digits) {
   if (digits <= 15) return true;
   const [p, q] = [Rational.parse(a), Rational.parse(b)];
-  return p.isZero() ? Number(b) === 0 : p.sub(q).abs().cmp(p.abs().mul(Rational.parse(`1e-${digits}`))) <= 0;
+  return p.isZero()
+    ? Number(b) === 0
+    : p
+        .sub(q)
+        .abs()
+        .cmp(p.abs().mul(Rational.parse(`1e-${digits}`))) <= 0;
 }
 
-console.log(`mpmath ${about.version} (backend ${about.backend}), Node ${process.version}; microseconds, and times as long`);
+console.log(
+  `mpmath ${about.version} (backend ${about.backend}), Node ${process.version}; microseconds, and times as long`,
+);
 console.log(['digits', ...Object.keys(OPERATIONS)].map((t) => t.padEnd(22)).join(''));
 for (const digits of DIGITS) {
   const cells = Object.keys(OPERATIONS).map((name) => {
@@ -219,6 +250,14 @@ for (const digits of DIGITS) {
   });
   console.log(String(digits).padEnd(22) + cells.join(''));
 }
+const last = DIGITS[DIGITS.length - 1];
+const limit = bare(last);
+console.log(
+  `\nBigInts of ${last} digits alone: product ${limit.product.toPrecision(3)}, quotient ${limit.quotient.toPrecision(3)} microseconds; the whole`,
+);
+console.log(
+  `operations of mpmath: ${mpmath.operations[last].multiply.us.toPrecision(3)} and ${mpmath.operations[last].divide.us.toPrecision(3)}`,
+);
 console.log('\npipeline at 110 digits: milliseconds, mpmath and PARI/GP over ours');
 for (const n of ORDERS) {
   const o = ours.pipeline[n];
@@ -239,7 +278,10 @@ for (let i = 1; i < ORDERS.length; i++) {
   bar(`growth from N = ${low} to ${high}: N^${growth.toFixed(2)} (bar ${BARS.growth})`, growth <= BARS.growth);
 }
 if (!QUICK) {
-  bar(`N = 50: at least ${BARS.mpmath} times as fast as mpmath`, mpmath.pipeline[50].s >= BARS.mpmath * ours.pipeline[50].s);
+  bar(
+    `N = 50: at least ${BARS.mpmath} times as fast as mpmath`,
+    mpmath.pipeline[50].s >= BARS.mpmath * ours.pipeline[50].s,
+  );
   bar(`N = 50: no slower than PARI/GP`, pari.pipeline[50].s >= BARS.pari * ours.pipeline[50].s);
 }
 process.exitCode = failures > 0 ? 1 : 0;
