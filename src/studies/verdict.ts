@@ -4,8 +4,8 @@
  * House rule "ladder": the first rung that stands gives the value,
  *   0. coefficient errors above the coefficients, fewer than three above the noise, or growth beyond every (kn)!: no value;
  *   1. growth terminating, convergent or geometric: the fixed-order sum;
- *   2. fewer than four coefficients, or growth undecided with no singularity stated: the fixed-order sum (nothing
- *      pretends to resum);
+ *   2. fewer than four coefficients, or growth undecided with no singularity stated: the fixed-order sum, or the least-term sum
+ *      where the terms rise again (nothing pretends to resum);
  *   3. a converged Borel–Padé sum (two orders agree to 1e−6), Leroy before plain, order 2 where the growth is (2n)!, unless a
  *      known coefficient is an outlier;
  *   4. the singularity model, where positions and exponents are stated and its strengths do not cancel;
@@ -47,9 +47,14 @@ const RUNGS = [
 const BOREL = ['borel-leroy-pade', 'borel-pade', 'borel-pade-2'];
 const DIGITS = 15;
 
+/** Terms that end above so many times the least one are past it, whatever the growth is. Heuristic. */
+const PAST_LEAST = 3;
+
 interface Choice {
   readonly v: Evaluated;
   readonly rung: string;
+  /** Nothing is known of the growth: no ambiguity is ascribed to the value. */
+  readonly plain?: true;
 }
 
 /** The value that a rule picks, for the ambiguity to be read from its own lateral sums; undefined when there is none. */
@@ -75,13 +80,10 @@ function choose(values: readonly Evaluated[], growth: Growth, count: number): Ch
   const fixed = central(values, 'fixed-order');
   if (['terminating', 'convergent', 'geometric'].includes(growth.verdict))
     return fixed === undefined ? 'there are no terms' : { v: fixed, rung: `growth ${growth.verdict}` };
-  if (count < SHORT)
-    return fixed === undefined ? 'there are no terms' : { v: fixed, rung: `fewer than ${SHORT} coefficients` };
+  if (count < SHORT) return plainSum(values, growth, `fewer than ${SHORT} coefficients`);
   const structured = central(values, 'singularity-model') ?? central(values, 'terminant');
   if (growth.verdict === 'undecided' && structured === undefined)
-    return fixed === undefined
-      ? 'there are no terms'
-      : { v: fixed, rung: 'growth undecided and no singularity stated' };
+    return plainSum(values, growth, 'growth undecided and no singularity stated');
   for (const name of hasOutlier(growth) ? [] : BOREL) {
     const v = central(values, name);
     if (v?.outcome.kind === 'sum' && v.outcome.trust === 'converged') return { v, rung: 'converged Borel sum' };
@@ -97,6 +99,21 @@ function choose(values: readonly Evaluated[], growth: Growth, count: number): Ch
     return { v, rung: v.prescription.title };
   }
   return 'every prescription refused';
+}
+
+/** Of other terms the smallest may be small by accident. */
+const REGULAR: readonly Growth['signPattern'][] = ['same', 'alternating'];
+
+/** The fixed-order sum, or the one that ends at the least term where terms of regular signs rise well above it again. */
+function plainSum(values: readonly Evaluated[], { signPattern }: Growth, rung: string): Choice | string {
+  const fixed = central(values, 'fixed-order');
+  const least = central(values, 'least-term');
+  if (fixed === undefined) return 'there are no terms';
+  const [all, some] = [fixed, least].map((v) => (v?.outcome.kind === 'sum' ? v.outcome.truncation : undefined));
+  const known = least !== undefined && all !== undefined && some !== undefined;
+  if (known && REGULAR.includes(signPattern) && all > PAST_LEAST * some)
+    return { v: least, rung: `${rung}; the terms rise again`, plain: true };
+  return { v: fixed, rung, plain: true };
 }
 
 /** Do truncation or input error exceed the value? */
@@ -169,7 +186,7 @@ export function verdict(
   const rule = `${ruleName(by)} (docs/verdict.md)`;
   const choice = pick(values, growth, count, by);
   if (typeof choice === 'string') return { printed: `no value: ${choice}`, rule, standing: 'indicative' };
-  const { v, rung } = choice;
+  const { v, rung, plain = false } = choice;
   const outcome = v.outcome;
   if (outcome.kind !== 'sum') return { printed: 'no value', rule, standing: 'indicative' };
   const truncation =
@@ -180,7 +197,7 @@ export function verdict(
           by.kind !== 'ladder' || outcome.trust === 'converged' ? 0 : spread(values, v, count),
         );
   const stated =
-    ambiguity === undefined || v.prescription.name === 'fixed-order' ? undefined : ownAmbiguity(v, ambiguity);
+    ambiguity === undefined || plain || v.prescription.name === 'fixed-order' ? undefined : ownAmbiguity(v, ambiguity);
   const amount = stated !== undefined && stated.value > 0 ? stated.value : undefined;
   const parts = [
     { label: 'truncation', error: truncation },

@@ -89,3 +89,21 @@ test('an ambiguity above the value is said to drown it', () => {
   expect(codes('2')).toContain('ambiguity-above-value');
   expect(codes('1/10')).not.toContain('ambiguity-above-value');
 });
+
+describe('growth undecided from six terms of regular signs that rise', () => {
+  // Σ (−1)^n (2n)! (3/2)^n x^n at x = 3/10 is ∫ e^(−t)/(1 + 0.45 t²) dt = 0.72831170 (mpmath 1.2.1, quad).
+  const rising = '1\n-3\n54\n-2430\n204120\n-27556200\n';
+
+  test('stops at the least term', async () => {
+    const { verdict, growth } = run(await parseSeries(rising, { name: 'rising' }), '3/10');
+    expect(growth.verdict).toBe('undecided');
+    expect(verdict.prescription).toContain('least-term');
+    expect(Math.abs(Number(verdict.value) - 0.7283117)).toBeLessThan(Number(verdict.truncation));
+    expect(verdict.ambiguity).toBeUndefined();
+  });
+
+  test('and takes all terms where they fall', async () => {
+    const { verdict } = run(await parseSeries(rising, { name: 'rising' }), '1/1000');
+    expect(verdict.prescription).toContain('fixed-order');
+  });
+});
