@@ -1,5 +1,5 @@
 /** Completion, topics, the manual page, new series files. */
-import { execFileSync } from 'node:child_process';
+import { execFileSync, spawnSync } from 'node:child_process';
 import { existsSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
@@ -36,6 +36,36 @@ describe('completion', () => {
     expect(complete('leastterm', 'assess', 'bjork')).toEqual(['bjorken']);
     expect(complete('leastterm', 'assess', 'adler', '--alpha')).toContain('--alpha-s-mz');
     expect(complete('leastterm', 'sum', 'adler', '--by', 'borel-ler')).toEqual(['borel-leroy-pade']);
+    expect(complete('leastterm', 'bubbles', 'pole-m')).toEqual(['pole-mass']);
+    expect(complete('leastterm', 'help', TOPICS[0]!.name.slice(0, -1))).toContain(TOPICS[0]!.name);
+    expect(complete('leastterm', 'extract', 'adler', '--for', 'al')).toEqual(['alpha_s']);
+    expect(complete('leastterm', 'extract', 'adler', '--ambiguity-by', 'im')).toEqual(['im/pi', 'im']);
+  });
+
+  const installed = (shell: string): boolean => spawnSync(shell, ['-c', 'true']).status === 0;
+
+  test.skipIf(!installed('fish'))('fish completes the same', async () => {
+    const script = join(folder, 'script.fish');
+    writeFileSync(script, (await leastterm(['completion', 'fish'])).stdout);
+    const complete = (line: string): string[] =>
+      execFileSync('fish', ['--no-config', '-c', `source ${script}; complete -C '${line}'`], { cwd: folder })
+        .toString()
+        .split('\n')
+        .map((found) => found.split('\t')[0]!);
+    expect(complete('leastterm ass')).toContain('assess');
+    expect(complete('leastterm assess bjork')).toContain('bjorken');
+    expect(complete('leastterm sum adler --by borel-ler')).toContain('borel-leroy-pade');
+  });
+
+  test.skipIf(!installed('zsh'))('zsh reads its script without a complaint', async () => {
+    const script = join(folder, '_leastterm');
+    writeFileSync(script, (await leastterm(['completion', 'zsh'])).stdout);
+    const { status, stderr } = spawnSync('zsh', [
+      '-f',
+      '-c',
+      `autoload -Uz compinit; compinit -u -D; source ${script}`,
+    ]);
+    expect([status, stderr.toString()]).toEqual([0, '']);
   });
 
   test('every script names every command and every option', async () => {

@@ -2,6 +2,7 @@
 import type { Command } from '../command.js';
 import { OPTIONS } from '../options.js';
 import type { OptionName } from '../options.js';
+import { TOPICS } from './topics.js';
 
 export interface CommandWords {
   readonly name: string;
@@ -21,13 +22,20 @@ const SHELLS = ['bash', 'zsh', 'fish'];
 
 /** Everything that completes, for a program with these commands. */
 export async function vocabulary(commands: readonly Command[]): Promise<Vocabulary> {
-  const { prescriptions, series, studies } = await import('../rooms.js');
+  const { prescriptions, series, studies, truncation } = await import('../rooms.js');
+  const { bubbles, extraction } = await import('../rooms-more.js');
   const { pictures } = await import('../rooms-pictures.js');
   const ids = await series.catalogueIds();
-  const names = prescriptions.PRESCRIPTIONS.map(({ name }) => name);
+  const all = [
+    ...prescriptions.PRESCRIPTIONS,
+    ...Object.values(prescriptions.CONTOUR_NAMES),
+    prescriptions.BUBBLE_CHAIN,
+  ];
+  const names = all.map(({ name }) => name);
   const operandsOf = (command: Command): readonly string[] => {
     const [first] = command.operands;
-    if (command.name === 'help') return commands.map(({ name }) => name);
+    if (command.name === 'help') return [...commands, ...TOPICS].map(({ name }) => name);
+    if (command.name === 'bubbles') return bubbles.QUANTITY_NAMES;
     if (command.name === 'completion') return SHELLS;
     if (command.name === 'plot') return [...pictures.CHART_KINDS.map(({ name }) => name), ...ids];
     if (command.name === 'catalogue') return ['list', 'show', 'check', ...ids];
@@ -48,6 +56,12 @@ export async function vocabulary(commands: readonly Command[]): Promise<Vocabula
       by: names,
       only: names,
       except: names,
+      central: names,
+      for: extraction.UNKNOWNS,
+      'ambiguity-by': extraction.AMBIGUITY_NAMES,
+      'truncation-by': ['own', ...truncation.TRUNCATION_MODELS.map(({ name }) => name)],
+      weights: ['measurement', 'theory'],
+      view: extraction.BUBBLE_VIEWS,
       family: [...new Set(prescriptions.PRESCRIPTIONS.map(({ family }) => family))],
       sort: studies.SORTS,
       'verdict-rule': studies.verdictRules(),

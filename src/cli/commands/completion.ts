@@ -4,6 +4,7 @@ import { vocabulary } from '../comfort/vocabulary.js';
 import type { Command } from '../command.js';
 import { EXIT, UsageError } from '../faults.js';
 import { deliver } from '../output.js';
+import { helpCommand } from './help.js';
 
 /** The command for a program with these other commands. */
 export function completionCommand(others: readonly Command[]): Command {
@@ -30,7 +31,8 @@ export function completionCommand(others: readonly Command[]): Command {
           'completion',
         );
       }
-      deliver(write(await vocabulary([...others, completion])), call);
+      const all = [...others, completion];
+      deliver(write(await vocabulary([...all, helpCommand(all)])), call);
       return EXIT.done;
     },
   };
