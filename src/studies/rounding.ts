@@ -11,6 +11,9 @@ export interface Component {
  * larger one makes meaningless. Heuristic. */
 const NEGLIGIBLE = 0.1;
 
+/** Said in a verdict where an input has an error whose share could not be computed. */
+export const INPUT_NOT_KNOWN = 'input error not known';
+
 /** "0.1384 ± 0.0013 (truncation) ± 0.0031 (ambiguity)"; negligible components are named, not printed. Digits of `value` stay when there is no error. */
 export function writeVerdict(value: string, components: readonly Component[]): string {
   const largest = Math.max(0, ...components.map((c) => c.error));

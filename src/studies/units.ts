@@ -3,7 +3,7 @@ import { Rational } from '../numerics/index.js';
 import type { Series } from '../series/index.js';
 import type { VerdictReport } from './assessment.js';
 import { indicative } from './figures.js';
-import { writeVerdict } from './rounding.js';
+import { INPUT_NOT_KNOWN, writeVerdict } from './rounding.js';
 import { hardScaleGeV } from './summary.js';
 
 /** "Q", "Q^2", "Q^1/2". */
@@ -40,7 +40,8 @@ export function inUnit(verdict: VerdictReport, series: Series): VerdictReport {
     text === undefined || !(Number(text) > 0) ? [] : [{ label, error: Math.abs(scaled(text)) }],
   );
   const [head = '', ...rest] = writeVerdict(value, parts).split('; ');
-  const printed = [`${bracketed(head)} ${unit}`, ...rest].join('; ');
+  const unknown = verdict.printed.includes(INPUT_NOT_KNOWN) ? [INPUT_NOT_KNOWN] : [];
+  const printed = [`${bracketed(head)} ${unit}`, ...rest, ...unknown].join('; ');
   return { ...verdict, inUnit: { unit, value: indicative(Number(value), DIGITS), printed } };
 }
 

@@ -24,7 +24,7 @@ import type { Sum } from '../prescriptions/index.js';
 import type { Standing, VerdictReport } from './assessment.js';
 import { ballText, indicative } from './figures.js';
 import { central, outclassed } from './outclassed.js';
-import { writeVerdict } from './rounding.js';
+import { INPUT_NOT_KNOWN, writeVerdict } from './rounding.js';
 import { restsOnPattern } from './values.js';
 import type { Evaluated } from './values.js';
 import { LADDER, ruleName } from './verdict-rule.js';
@@ -211,7 +211,7 @@ export function verdict(
   const rational = apart ? patternBefore(outcome.termsUsed) : PATTERN;
   const assumption = exactSum ? ENDS : restsOnPattern(outcome) ? rational : undefined;
   const value = ballText(outcome.value, DIGITS);
-  const unknown = v.inputUnknown === true ? '; input error not known' : '';
+  const unknown = v.inputUnknown === true ? `; ${INPUT_NOT_KNOWN}` : '';
   const printed = `${writeVerdict(value, parts)}${unknown}${assumption === undefined ? '' : `, if ${assumption}`}`;
   return {
     value,
