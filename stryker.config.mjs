@@ -11,7 +11,8 @@ export default {
   mutate: ['src/numerics/**/*.ts'],
   ignorePatterns: [
     '/dist',
-    '/docs',
+    '/docs/**',
+    '!/docs/numerics.md',
     '/series',
     '/src/**',
     '!/src/numerics/**',
