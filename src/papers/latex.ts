@@ -2,7 +2,7 @@
  * @module Tables in LaTeX: booktabs rules, numbers as \num{0.1180(9)} of siunitx, so that the document decides how
  * uncertainties look. Compiles with \usepackage{booktabs,siunitx}.
  */
-import { roundPdg, shorten, writeParentheses } from '../numerics/index.js';
+import { roundPdg, shorten, writeParentheses, writePlusMinus } from '../numerics/index.js';
 import { texHead, texText } from './notation.js';
 import { isMeasured, knownErrors } from './table.js';
 import type { Cell, Column, Measured, PaperTable } from './table.js';
@@ -30,10 +30,11 @@ export function texNumber(cell: Measured): string {
     const power = /e(-?\d+)$/.exec(short)?.[1];
     return `$\\num{${head}}${tail}${power === undefined ? '' : `\\times 10^{${power}}`}$`;
   }
-  const shown = known.map(({ plus, minus }) =>
-    plus === minus ? `\\pm ${shorten(plus, 2)}` : `\\,^{+${shorten(plus, 2)}}_{-${shorten(minus, 2)}}`,
-  );
-  return `$${shorten(value, DIGITS)}${shown.join('')}$`;
+  const tex = writePlusMinus(rounded)
+    .replace(/ ± /g, '\\pm ')
+    .replace(/ \+(\S+) −([^\s)]+)/g, '\\,^{+$1}_{-$2}')
+    .replace(/^\((.*)\)e(-?\d+)$/, '($1)\\times 10^{$2}');
+  return `$${tex}$`;
 }
 
 const NUMBER = /^[-+]?\d+(\.\d+)?(e[-+]?\d+)?$/;

@@ -95,6 +95,11 @@ test('uncertainties as the Particle Data Group rounds them: its own examples', (
   // Below the last digit that was worked out: rounding, and no reason to make up digits between.
   expect(one('0.29517124682594', '2.8e-30')).toBe('\\num{0.29517125}');
   expect(one('1', '0.1')).toBe('\\num{1.00(10)}');
+  // Two-sided errors end where the value does.
+  const sided = (value: string, plus: string, minus: string): string =>
+    texNumber({ value, errors: [{ label: 'total', plus, minus }] });
+  expect(sided('0.32028898', '0.028', '0.0093')).toBe('$0.320\\,^{+0.028}_{-0.009}$');
+  expect(sided('3.2028898e-9', '2.8e-10', '9.3e-11')).toBe('$(3.20\\,^{+0.28}_{-0.09})\\times 10^{-9}$');
 });
 
 test('the submission YAML: documents with variables of equal length, symmetric and asymmetric errors, no zero error', async () => {

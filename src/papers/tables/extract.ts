@@ -6,9 +6,9 @@ import { replicaTables } from './replicas.js';
 
 const bare = (value: string): string => value.replace(/^[-+]/, '');
 
-/** The mixed total, which takes stochastic parts in quadrature and ranges linearly. */
-const total = ({ totals }: BudgetEntry): NamedError[] => [
-  { label: 'total', plus: bare(totals.mixed.plus), minus: bare(totals.mixed.minus) },
+/** The total in quadrature, as the page shows it beside a value; the budget has the others by name. */
+const total = ({ quadrature }: BudgetEntry['totals']): NamedError[] => [
+  { label: 'total', plus: bare(quadrature.plus), minus: bare(quadrature.minus) },
 ];
 
 function budgetTable(name: string, title: string, unit: string | undefined, entry: BudgetEntry): PaperTable {
@@ -59,20 +59,16 @@ function single(result: ExtractResult): PaperTable[] {
     rows: solved.map((row) => [
       row.prescription,
       row.variant,
-      measured(row.value, row.totals === undefined ? [] : total({ components: [], totals: row.totals })),
+      measured(row.value, row.totals === undefined ? [] : total(row.totals)),
       row.ambiguity?.value ?? '',
       ...(solved.some((other) => other.evolved !== undefined)
-        ? [
-            row.evolved === undefined
-              ? ''
-              : measured(row.evolved.value, total({ components: [], totals: row.evolved.totals })),
-          ]
+        ? [row.evolved === undefined ? '' : measured(row.evolved.value, total(row.evolved.totals))]
         : []),
       row.trust ?? '',
       row.cautions.map(({ code }) => code).join(', '),
     ]),
     notes: [
-      'errors are the mixed total: stochastic parts in quadrature, ranges added linearly',
+      'errors are the total in quadrature; the budget has the other totals by name',
       ...result.rows.flatMap(({ prescription, refused }) =>
         refused === undefined ? [] : [`${prescription} refused: ${refused.reason}`],
       ),
