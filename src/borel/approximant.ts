@@ -30,6 +30,11 @@ export interface RatedPole extends PolePart {
   readonly role?: 'doublet' | 'noise doublet';
 }
 
+export interface Zero {
+  readonly z: Complex;
+  readonly real: boolean;
+}
+
 export interface Approximant {
   readonly label: string;
   readonly exists: boolean | undefined;
@@ -39,6 +44,8 @@ export interface Approximant {
   readonly polynomialPart: readonly Ball[];
   /** Real poles once, of each conjugate pair the member with Im z > 0. */
   readonly poles: readonly RatedPole[];
+  /** Zeros of the numerator, in the same way; empty where they cannot be enclosed. */
+  readonly zeros: readonly Zero[];
   /** Exact number of distinct positive real poles. */
   readonly positiveRealPoles: number;
 }
@@ -90,6 +97,7 @@ export function approximateTransformed(
       deficiency: 0,
       polynomialPart: [],
       poles: [],
+      zeros: [],
       positiveRealPoles: 0,
     };
   const poles = found.poles
@@ -100,13 +108,20 @@ export function approximateTransformed(
       multiplicity: p.multiplicity,
       amplitudes: amplitudes(p.position, p.principal, prec),
     }));
+  const zeros = zerosOf(found.entry.numerator);
   const largest = Math.max(...b.slice(0, L + M + 1).map((e) => Math.abs(R.toNumber(e.ball(64)))));
   return {
     label,
     exists: true,
     deficiency: found.entry.deficiency,
     polynomialPart: found.polynomial,
-    poles: rate(poles, zerosOf(found.entry.numerator), noise, largest),
+    poles: rate(
+      poles,
+      zeros.map(({ z }) => C.toNumbers(z)),
+      noise,
+      largest,
+    ),
+    zeros: zeros.filter(({ z, real }) => real || !R.isNegative(z.im)),
     positiveRealPoles: poles.filter((p) => p.real && R.isPositive(p.z.re)).length,
   };
 }
@@ -126,11 +141,11 @@ interface Point {
   readonly im: number;
 }
 
-/** Zeros of the approximant as doubles, for the doublet test only. */
-function zerosOf(numerator: readonly Rational[] | readonly Ball[]): Point[] {
+/** Zeros of the approximant, both of each pair. */
+function zerosOf(numerator: readonly Rational[] | readonly Ball[]): Zero[] {
   if (numerator.length < 2) return [];
   const found = certifiedRoots(numerator, ZERO_BITS);
-  return 'failed' in found ? [] : found.roots.map((r) => C.toNumbers(r.value));
+  return 'failed' in found ? [] : found.roots.map(({ value, real }) => ({ z: value, real }));
 }
 
 type Unrated = Omit<RatedPole, 'role' | 'modulus'>;

@@ -1,6 +1,6 @@
 /** @module Borel transforms, Padé tables of them, Laplace sums in closed form, singularity models. */
 export { approximate, approximateTransformed, DOUBLET_DISTANCE, NOISE_FACTOR } from './approximant.js';
-export type { Approximant, RatedPole } from './approximant.js';
+export type { Approximant, RatedPole, Zero } from './approximant.js';
 export { branchCoefficients, branchImaginary, branchSum } from './branch.js';
 export type { Branch } from './branch.js';
 export { inverseMapSeries, mapTo, remap, remappedQuick, remappedValues } from './conformal.js';

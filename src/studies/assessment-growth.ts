@@ -145,6 +145,13 @@ export interface PoleReport {
   readonly note?: 'doublet' | 'near-axis';
 }
 
+/** A place in the Borel plane, in t and, where a u plane exists, in u. */
+export interface PlaceReport {
+  readonly re: string;
+  readonly im?: string;
+  readonly u?: { readonly re: string; readonly im?: string };
+}
+
 export interface PadeEntry {
   readonly label: string;
   /** Leroy parameter of the transform, 0 for the plain one. */
@@ -155,6 +162,8 @@ export interface PadeEntry {
   readonly reason?: string;
   readonly positiveRealPoles?: number;
   readonly poles: readonly PoleReport[];
+  /** Zeros of the numerator: real ones once, of each conjugate pair the member with Im > 0. */
+  readonly zeros?: readonly PlaceReport[];
 }
 
 export interface BorelPlaneReport {

@@ -1,11 +1,11 @@
 /** @module The Borel plane as the result states it: Padé entries with their poles, doublets, non-existing entries. */
 import { approximate, nearAxisPoles, nearDiagonal } from '../borel/index.js';
-import type { Approximant, RatedPole } from '../borel/index.js';
+import type { Approximant, RatedPole, Zero } from '../borel/index.js';
 import { C, R, Rational, toNumberExact } from '../numerics/index.js';
 import type { Complex } from '../numerics/index.js';
 import type { Growth } from '../growth/index.js';
 import { leroyParameter } from '../prescriptions/index.js';
-import type { BorelPlaneReport, PadeEntry, PoleReport } from './assessment.js';
+import type { BorelPlaneReport, PadeEntry, PlaceReport, PoleReport } from './assessment.js';
 import type { Expanded } from './expand.js';
 import { ballText, indicative } from './figures.js';
 import { poleErrors } from './pole-errors.js';
@@ -109,11 +109,17 @@ function entryReport(
     ...(a.deficiency > 0 ? { deficiency: a.deficiency } : {}),
     positiveRealPoles: a.positiveRealPoles,
     poles: a.poles.map((p, i) => poleReport(p, errors[i], near.has(p), digits, scale)),
+    ...(a.zeros.length === 0 ? {} : { zeros: a.zeros.map((zero) => placeReport(zero, digits, scale)) }),
   };
 }
 
 function complexText(z: Complex, digits: number, real: boolean): { re: string; im?: string } {
   return real ? { re: ballText(z.re, digits) } : { re: ballText(z.re, digits), im: ballText(z.im, digits) };
+}
+
+function placeReport({ z, real }: Zero, digits: number, scale: number | undefined): PlaceReport {
+  const u = scale === undefined ? undefined : C.mulReal(z, R.fromNumber(scale), POLE_BITS);
+  return { ...complexText(z, digits, real), ...(u === undefined ? {} : { u: complexText(u, digits, real) }) };
 }
 
 function poleReport(
@@ -125,10 +131,8 @@ function poleReport(
 ): PoleReport {
   const amplitude = p.amplitudes[p.amplitudes.length - 1];
   const role = p.role !== undefined ? 'doublet' : near ? 'near-axis' : undefined;
-  const u = scale === undefined ? undefined : C.mulReal(p.z, R.fromNumber(scale), POLE_BITS);
   return {
-    ...complexText(p.z, digits, p.real),
-    ...(u === undefined ? {} : { u: complexText(u, digits, p.real) }),
+    ...placeReport(p, digits, scale),
     ...(error === undefined
       ? {}
       : { error: { re: indicative(error.re, 2), ...(p.real ? {} : { im: indicative(error.im, 2) }) } }),

@@ -12,6 +12,7 @@ import {
 } from '../../src/pictures/index.js';
 import { axisOf } from '../../src/pictures/axis.js';
 import type { Chart, SavedResult } from '../../src/pictures/index.js';
+import { toNumberExact } from '../../src/numerics/index.js';
 import { loadSeries, parseUncertain, isNumberProblem } from '../../src/series/index.js';
 import {
   assess,
@@ -203,4 +204,13 @@ describe('what a picture must not lose', () => {
     expect(labels(0.4, 2.5)).toEqual(expect.arrayContaining(['0.5', '1', '2']));
     expect(labels(1e-4, 1e45)).toEqual(['10^{0}', '10^{20}', '10^{40}']);
   });
+});
+
+test('zeros of the Borel plane: that of [1/1] by hand', () => {
+  // P/Q = (1 + (b_1 + q_1) t)/(1 + q_1 t), q_1 = −b_2/b_1, b_n = d_(n+1)/n! of the Adler function; u = 9/4 t for three flavours.
+  const [, b1 = NaN, b2 = NaN] = adler.coefficients.map(({ value }, n) => toNumberExact(value) / (n === 2 ? 2 : 1));
+  const zero = (-1 / (b1 - b2 / b1)) * 2.25;
+  const rows = drawn('plane').data.find(({ name }) => name === 'zeros')?.rows ?? [];
+  const found = rows.find(([entry, leroy]) => entry === '[1/1]' && leroy === '0');
+  expect(Number(found?.[2]) / zero).toBeCloseTo(1, 7);
 });

@@ -1,5 +1,5 @@
 /**
- * @module The Borel plane: poles of the Padé approximants of the Borel transform, doublets set aside, expected singularities,
+ * @module The Borel plane: poles and zeros of the Padé approximants of the Borel transform, doublets set aside, expected singularities,
  * the circle of convergence, and the path of the Laplace integral.
  */
 import type { Assessment } from '../../studies/index.js';
@@ -9,12 +9,14 @@ import { nameOf } from './words.js';
 /** Of an assessment, or of the plane alone, which does not know what is expected. */
 type Plane = Pick<Assessment, 'series' | 'borelPlane'> & Partial<Pick<Assessment, 'growth'>>;
 type PoleRow = Assessment['borelPlane']['entries'][number]['poles'][number];
+/** A pole or a zero: where it is. */
+type Place = Pick<PoleRow, 're' | 'im' | 'u'>;
 
 /** Poles further out than this many radii of convergence say little, and would make the rest small. */
 const VIEW = 4;
 
 /** In u where the series has it, in t elsewhere. Both members of a pair. */
-function placesOf(pole: PoleRow, inU: boolean): Point[] {
+function placesOf(pole: Place, inU: boolean): Point[] {
   const at = inU && pole.u !== undefined ? pole.u : pole;
   const re = Number(at.re);
   const im = Number(at.im ?? 0);
@@ -62,7 +64,7 @@ export function planeChart(result: Plane): Chart {
 
   const marked = (points: readonly Point[], ink: number, marker: MarkerShape, name: string): Layer[] =>
     points.length === 0 ? [] : [{ kind: 'curve', points, ink, marker, name }];
-  const placed = (poles: readonly PoleRow[]): Point[] => poles.flatMap((pole) => placesOf(pole, inU));
+  const placed = (poles: readonly Place[]): Point[] => poles.flatMap((pole) => placesOf(pole, inU));
   const ray: Point[] = [
     [0, 0],
     [high * 2, 0],
@@ -80,6 +82,7 @@ export function planeChart(result: Plane): Chart {
       'ring',
       'expected',
     ),
+    ...marked(placed(plain.flatMap(({ zeros = [] }) => zeros)), 'faint', 'diamond', 'zeros, Borel'),
     ...marked(placed(genuine(others)), 3, 'triangle', 'poles, Borel–Leroy'),
     ...marked(placed(genuine(plain)), 0, 'cross', 'poles, Borel'),
     ...marked(placed(doublets), 2, 'square', 'doublets'),
@@ -87,7 +90,7 @@ export function planeChart(result: Plane): Chart {
   return {
     title: `Borel plane of ${nameOf(result)}`,
     description:
-      `Poles of the Padé approximants of the Borel transform in ${variable}: ${seen.length} shown` +
+      `Poles and zeros of the Padé approximants of the Borel transform in ${variable}: ${seen.length} poles shown` +
       `${hidden === 0 ? '' : `, ${hidden} outside the picture`}; ${result.borelPlane.doublets} doublets. ` +
       `Expected singularities at ${variable} = ${expectedAt.join(', ') || 'none'}. ` +
       (Number.isFinite(radius) ? `Radius of convergence ${radius.toPrecision(3)}.` : ''),
@@ -108,6 +111,16 @@ export function planeChart(result: Plane): Chart {
           entry.poles.map((pole) => {
             const at = inU && pole.u !== undefined ? pole.u : pole;
             return [entry.label, entry.leroy, at.re, at.im ?? '0', pole.note ?? ''];
+          }),
+        ),
+      },
+      {
+        name: 'zeros',
+        columns: ['entry', 'leroy', `re_${variable}`, `im_${variable}`],
+        rows: entries.flatMap((entry) =>
+          (entry.zeros ?? []).map((zero) => {
+            const at = inU && zero.u !== undefined ? zero.u : zero;
+            return [entry.label, entry.leroy, at.re, at.im ?? '0'];
           }),
         ),
       },
