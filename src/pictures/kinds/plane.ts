@@ -82,7 +82,7 @@ export function planeChart(result: Plane): Chart {
       'ring',
       'expected',
     ),
-    ...marked(placed(plain.flatMap(({ zeros = [] }) => zeros)), 'faint', 'diamond', 'zeros, Borel'),
+    ...marked(placed(plain.flatMap(({ zeros = [] }) => zeros)), 0, 'diamond', 'zeros, Borel'),
     ...marked(placed(genuine(others)), 3, 'triangle', 'poles, Borel–Leroy'),
     ...marked(placed(genuine(plain)), 0, 'cross', 'poles, Borel'),
     ...marked(placed(doublets), 2, 'square', 'doublets'),
